@@ -1,0 +1,73 @@
+// @ts-check
+// Builds dist: the library and command with tsc, then the page client as one script with esbuild.
+// With --if-stale it returns at once when nothing it builds from is newer than the last build.
+import { spawnSync } from 'node:child_process';
+import { chmodSync, existsSync, readdirSync, rmSync, statSync, utimesSync, writeFileSync } from 'node:fs';
+import { createRequire } from 'node:module';
+import { dirname, join } from 'node:path';
+import { fileURLToPath } from 'node:url';
+import { build } from 'esbuild';
+
+const root = dirname(dirname(fileURLToPath(import.meta.url)));
+const src = join(root, 'src');
+const dist = join(root, 'dist');
+const stamp = join(dist, '.stamp');
+
+/** @param {string} folder */
+function everythingUnder(folder) {
+  return readdirSync(folder, { recursive: true, encoding: 'utf8' });
+}
+
+function isStale() {
+  if (!existsSync(stamp)) return true;
+  const built = statSync(stamp).mtimeMs;
+  const settings = ['tsconfig.json', 'tsconfig.build.json', 'package-lock.json', 'scripts/build.mjs'];
+  // Folders are looked at too: removing a file touches only its folder.
+  const inputs = [src, ...everythingUnder(src).map((name) => join(src, name)), ...settings.map((n) => join(root, n))];
+  return inputs.some((path) => existsSync(path) && statSync(path).mtimeMs > built);
+}
+
+// Files whose source has gone are removed one by one, so that a command running from dist is not pulled from under.
+function removeOrphans() {
+  for (const name of everythingUnder(dist)) {
+    const source = name.replace(/(\.d\.ts|\.js)$/, '.ts');
+    if (source === name || name === join('browser', 'page.js')) continue;
+    if (!existsSync(join(src, source))) rmSync(join(dist, name));
+  }
+}
+
+async function main() {
+  if (process.argv.includes('--if-stale') && !isStale()) return;
+  const started = new Date();
+
+  const tsc = createRequire(import.meta.url).resolve('typescript/bin/tsc');
+  const compiled = spawnSync(process.execPath, [tsc, '-p', join(root, 'tsconfig.build.json')], { stdio: 'inherit' });
+  if (compiled.status !== 0) {
+    process.exitCode = 1;
+    return;
+  }
+
+  const page = join(src, 'browser', 'main.ts');
+  if (existsSync(page)) {
+    await build({
+      entryPoints: [page],
+      outfile: join(dist, 'browser', 'page.js'),
+      bundle: true,
+      minify: true,
+      format: 'iife',
+      target: 'es2022',
+      charset: 'utf8',
+      legalComments: 'none',
+      logLevel: 'warning',
+    });
+  }
+
+  removeOrphans();
+  const command = join(dist, 'cli', 'main.js');
+  if (existsSync(command)) chmodSync(command, 0o755);
+  // The stamp carries the time the build began: a file saved while it ran is built next time.
+  writeFileSync(stamp, `${started.toISOString()}\n`);
+  utimesSync(stamp, started, started);
+}
+
+await main();

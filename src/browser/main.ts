@@ -1,0 +1,24 @@
+/** The dashboard's client: charts, table of all buildings, building sheet. */
+import { formatCount, formatQuantity, formatShare } from '../engineering/format.js';
+import { startCharts } from './charts.js';
+import { byId } from './dom.js';
+import { portfolioOf } from './portfolio.js';
+import type { Portfolio } from './portfolio.js';
+import { startSheet } from './sheet/sheet.js';
+import { startTable } from './table/table.js';
+import { unpackPage } from './unpack.js';
+
+function tipOf(p: Portfolio, i: number): string {
+  if (p.text('not_ranked', i) !== '') return `${p.label(i)}\nnot ranked: ${p.text('not_ranked', i)}`;
+  const quantity = (value: number, unit: string): string => formatQuantity(value, unit, p.page.display, 3);
+  return [
+    p.label(i),
+    `rank ${formatCount(p.number('rank', i))}, chance of belonging ${formatShare(p.number('chance', i))}`,
+    `T ${quantity(p.period_s(i), 's')}, Sₐ ${quantity(p.number('sa_g', i), 'g')}, height ${quantity(p.input('height_m', i), 'm')}`,
+  ].join('\n');
+}
+
+const portfolio = portfolioOf(unpackPage(byId('page-data').textContent));
+startTable(portfolio);
+const open = startSheet(portfolio);
+startCharts(byId('page-charts').textContent, { tip: (i) => tipOf(portfolio, i), open });

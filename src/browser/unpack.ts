@@ -1,0 +1,72 @@
+/** The other half of the report's pack.ts: columns as they were, unknown numbers NaN again. */
+import type { BuildingColumns } from '../engineering/building-columns.js';
+import type { PageBuildings, PageData } from '../engineering/page-contract.js';
+
+type Cell = number | string | null;
+export type Packed =
+  readonly [0, number, Cell] | readonly [1, readonly Cell[], readonly number[]] | readonly [2, readonly Cell[]];
+
+/** The values of a packed column. */
+export function unpackColumn(packed: Packed): readonly Cell[] {
+  switch (packed[0]) {
+    case 0:
+      return Array.from({ length: packed[1] }, () => packed[2]);
+    case 1: {
+      const values = packed[1];
+      return packed[2].map((place) => values[place] ?? null);
+    }
+    case 2:
+      return packed[1];
+  }
+}
+
+const numbers = (packed: Packed): Float64Array =>
+  Float64Array.from(unpackColumn(packed), (cell) => (typeof cell === 'number' ? cell : NaN));
+
+interface PackedBuildings extends Pick<PageBuildings, 'shown' | 'all' | 'pools'> {
+  readonly inputs: {
+    readonly id: Packed;
+    readonly numbers: Readonly<Record<string, Packed>>;
+    readonly words: Readonly<Record<string, Packed>>;
+  };
+  readonly name: Packed;
+  readonly group: Packed;
+  readonly part_of: Packed;
+  readonly heritage: Packed;
+  readonly first_row: Packed;
+  readonly results: Readonly<Record<string, Packed>>;
+}
+
+/** What the page knows of its data: all but the coordinates, which the map alone carries. */
+export type LoadedPage = Omit<PageData, 'buildings'> & { readonly buildings: Omit<PageBuildings, 'lon' | 'lat'> };
+
+const mapped = <T>(columns: Readonly<Record<string, Packed>>, unpack: (packed: Packed) => T): Record<string, T> =>
+  Object.fromEntries(Object.entries(columns).map(([name, packed]) => [name, unpack(packed)]));
+
+/** Page data from the text of its data block. */
+export function unpackPage(json: string): LoadedPage {
+  const packed = JSON.parse(json) as Omit<PageData, 'buildings'> & { readonly buildings: PackedBuildings };
+  const { inputs, ...rest } = packed.buildings;
+  const words = (column: Packed): readonly (string | null)[] => unpackColumn(column) as readonly (string | null)[];
+  return {
+    summary: packed.summary,
+    settings: packed.settings,
+    display: packed.display,
+    buildings: {
+      shown: rest.shown,
+      all: rest.all,
+      pools: rest.pools,
+      inputs: {
+        id: unpackColumn(inputs.id) as readonly string[],
+        numbers: mapped(inputs.numbers, numbers) as unknown as BuildingColumns['numbers'],
+        words: mapped(inputs.words, words) as unknown as BuildingColumns['words'],
+      },
+      name: words(rest.name),
+      group: words(rest.group),
+      part_of: words(rest.part_of),
+      heritage: words(rest.heritage),
+      first_row: unpackColumn(rest.first_row) as readonly number[],
+      results: mapped(rest.results, unpackColumn),
+    },
+  };
+}

@@ -1,0 +1,248 @@
+/** The commands, their options and their help. Each loads its own code when it runs, so that `--help` loads none. */
+import { Command, CommanderError, InvalidArgumentError, Option } from 'commander';
+import type { Argument } from 'commander';
+import { EXIT } from '../errors.js';
+import { printError, terminalColumns } from './output/print.js';
+import { styled } from './output/style.js';
+import { VERSION } from '../screening/version.js';
+
+const CAUTION =
+  'Swaymark orders buildings for further assessment; it makes no statement on the\nsafety of any of them. Local codes govern, and a licensed engineer decides.';
+
+function wholeNumber(text: string): number {
+  const value = Number(text);
+  if (!/^\d+$/.test(text) || value < 1 || value > Number.MAX_SAFE_INTEGER)
+    throw new InvalidArgumentError('Expected a whole number from 1.');
+  return value;
+}
+
+function periods(text: string): number[] {
+  return text.split(/[,;]/).map((part) => {
+    const value = Number(part);
+    if (part.trim() === '' || !(value >= 0 && value < Infinity))
+      throw new InvalidArgumentError('Expected periods in seconds, for instance 0.2,1.');
+    return value;
+  });
+}
+
+const units = (): Option => new Option('--units <system>', 'units of the output').choices(['si', 'us']).default('si');
+const json = (): Option => new Option('--json', 'print JSON');
+const study = (): Option =>
+  new Option('--study <file>', 'the study file (default: study.yaml, or the only .yaml file here)');
+const run = (): Option => new Option('--run <number>', 'the run (default: the newest)').argParser(wholeNumber);
+
+function examples(...lines: readonly string[]): string {
+  return `\n${styled('bold', lines.length > 1 ? 'Examples:' : 'Example:')}\n${lines.map((line) => `  ${line}`).join('\n')}`;
+}
+
+/** Runs the command line. @returns the exit code. @throws whatever a command throws. */
+export async function runProgram(argv: readonly string[]): Promise<number> {
+  if (argv.includes('--no-color')) process.env['NO_COLOR'] = '1';
+  const program = build();
+  let code: number = EXIT.clean;
+  const keep = (value: number | undefined): void => {
+    code = value ?? EXIT.clean;
+  };
+  addStudyCommands(program, keep);
+  addRunCommands(program, keep);
+  addMethodCommands(program, keep);
+  try {
+    await program.parseAsync([...argv]);
+    return code;
+  } catch (error) {
+    if (!(error instanceof CommanderError)) throw error;
+    return error.exitCode === 0 ? EXIT.clean : EXIT.user;
+  }
+}
+
+function build(): Command {
+  const program = new Command('swaymark');
+  program
+    .description(
+      'Ranks existing buildings for detailed seismic assessment by the spectral demand their own periods draw.',
+    )
+    .version(VERSION, '--version', 'print the version')
+    .option('--no-color', 'plain output, as with NO_COLOR')
+    .helpOption('--help', 'print help')
+    .helpCommand('help [command]', 'print help for a command')
+    .exitOverride()
+    .configureOutput({
+      writeErr: (text) => {
+        printError(text.trimEnd());
+      },
+      getOutHelpWidth: terminalColumns,
+      getErrHelpWidth: terminalColumns,
+      getOutHasColors: () => true,
+      outputError: (text, write) => {
+        write(text.replace(/^error: /, ''));
+      },
+    })
+    .configureHelp({
+      styleTitle: (title) => styled('bold', title),
+      subcommandTerm: (command) => [command.name(), ...command.registeredArguments.map(argumentTerm)].join(' '),
+    })
+    .showHelpAfterError('(swaymark --help lists the commands; swaymark <command> --help explains one)')
+    .addHelpText(
+      'after',
+      `${examples(
+        'swaymark init buildings.csv            # propose a study for a table',
+        'swaymark check study.yaml              # what the inventory holds and lacks',
+        'swaymark screen study.yaml             # rank, and write the dashboard',
+        'swaymark explain BH-012                # one building by hand',
+        'swaymark calc asce7-22/period/other height_ft=93',
+      )}\n\n${CAUTION}`,
+    );
+  return program;
+}
+
+function argumentTerm(argument: Argument): string {
+  const name = `${argument.name()}${argument.variadic ? '...' : ''}`;
+  return argument.required ? `<${name}>` : `[${name}]`;
+}
+
+type Keep = (code: number | undefined) => void;
+
+function addStudyCommands(program: Command, keep: Keep): void {
+  program
+    .command('init')
+    .summary('propose a study file for a table of buildings')
+    .description(
+      'Reads a table and proposes a study file: which column is what, in which unit, with the open questions marked. Applies nothing.',
+    )
+    .argument('<table>', 'CSV file of the inventory')
+    .option('--output <file>', 'the study file to write; it must not exist (default: study.yaml beside the table)')
+    .addHelpText(
+      'after',
+      examples('swaymark init town.csv', 'swaymark init exports/assets.csv --output assets/study.yaml'),
+    )
+    .action(async (table: string, options: { output?: string }) => {
+      keep((await import('./commands/init.js')).init(table, options));
+    });
+  program
+    .command('check')
+    .summary('take in the inventory and report its quality')
+    .description(
+      'Takes in the inventory and says what became of every row, what is given, inferred, defaulted or unknown, and what was found. Keeps nothing.',
+    )
+    .argument('<study>', 'the study file')
+    .option('--output <folder>', 'write rejects.csv there')
+    .addOption(json())
+    .addHelpText(
+      'after',
+      `${examples('swaymark check study.yaml', 'swaymark check study.yaml --output checked')}\n\nExit code 1 when more rows are rejected than inventory.rejects_limit allows.`,
+    )
+    .action(async (file: string, options: { output?: string; json?: true }) => {
+      keep(await (await import('./commands/check.js')).check(file, options));
+    });
+  program
+    .command('screen')
+    .summary('rank the buildings, keep the run, write the reports')
+    .description(
+      'Takes in the inventory, assesses and ranks every building, keeps the run in study.duckdb and writes dashboard.html, ranking.csv, ranking.parquet, rejects.csv and summary.md.',
+    )
+    .argument('<study>', 'the study file')
+    .option('--note <text>', 'a note kept with the run', '')
+    .option('--output <folder>', "folder of the reports (default: the study's)")
+    .addOption(units())
+    .addOption(json())
+    .addHelpText(
+      'after',
+      `${examples('swaymark screen study.yaml', 'swaymark screen study.yaml --note "after the survey of block 4" --units us')}\n\nExit code 1 when more rows are rejected than inventory.rejects_limit allows; 130 when interrupted.`,
+    )
+    .action(async (file: string, options: { note: string; output?: string; units: 'si' | 'us'; json?: true }) => {
+      keep(await (await import('./commands/screen.js')).screen(file, options));
+    });
+}
+
+function addRunCommands(program: Command, keep: Keep): void {
+  program
+    .command('explain')
+    .summary('the hand calculation of one building')
+    .description(
+      'Prints how a building came to its place: every value with its origin, every choice, every formula with its numbers and clause.',
+    )
+    .argument('<building>', 'identifier of the building')
+    .addOption(study())
+    .addOption(run())
+    .addOption(units())
+    .addOption(json())
+    .addHelpText(
+      'after',
+      examples('swaymark explain BH-012', 'swaymark explain BH-012 --study town/study.yaml --run 3 --units us'),
+    )
+    .action(async (id: string, options: { study?: string; run?: number; units: 'si' | 'us'; json?: true }) => {
+      keep(await (await import('./commands/explain.js')).explain(id, options));
+    });
+  program
+    .command('runs')
+    .summary('the runs kept for a study')
+    .addOption(study())
+    .addOption(json())
+    .addHelpText('after', examples('swaymark runs --study town/study.yaml'))
+    .action(async (options: { study?: string; json?: true }) => {
+      keep(await (await import('./commands/runs.js')).runs(options));
+    });
+  program
+    .command('review')
+    .summary('a sheet for checking some buildings by hand')
+    .description(
+      'Draws ranked buildings by lot and writes review.csv: every formula step with its clause and inputs, and blank cells for an independent value.',
+    )
+    .requiredOption('--sample <number>', 'how many buildings', wholeNumber)
+    .option('--output <folder>', "folder of review.csv (default: the study's)")
+    .addOption(study())
+    .addOption(run())
+    .addHelpText('after', examples('swaymark review --sample 10'))
+    .action(async (options: { sample: number; output?: string; study?: string; run?: number }) => {
+      keep(await (await import('./commands/review.js')).review(options));
+    });
+}
+
+function addMethodCommands(program: Command, keep: Keep): void {
+  program
+    .command('methods')
+    .summary('the register of published methods')
+    .description(
+      'Lists every method the program can apply, or one of them in full: formula, inputs, units, limits, clause, and how its numbers were come by.',
+    )
+    .argument('[id]', 'one method in full')
+    .addOption(json())
+    .addHelpText('after', examples('swaymark methods', 'swaymark methods asce7-22/period/other'))
+    .action(async (id: string | undefined, options: { json?: true }) => {
+      keep((await import('./commands/methods.js')).methods(id, options));
+    });
+  program
+    .command('calc')
+    .summary('one method by itself')
+    .description(
+      'Evaluates one method. Quantities may be given in any unit the program knows, named at the end of the input: height_m=28.3 or height_ft=93.',
+    )
+    .argument('<method-id>', 'id of the method (swaymark methods lists them)')
+    .argument('[inputs...]', 'name=value; lists as 200,200,180; without inputs it says what it needs')
+    .addOption(units())
+    .addOption(json())
+    .addHelpText(
+      'after',
+      examples(
+        'swaymark calc asce7-22/period/other height_ft=93',
+        'swaymark calc mechanics/period/general-chain masses_t=200,200,180 \\\n    storey_stiffness_MN_per_m=90,80,80',
+      ),
+    )
+    .action(async (id: string, inputs: string[], options: { units: 'si' | 'us'; json?: true }) => {
+      keep((await import('./commands/calc.js')).calc(id, inputs, options));
+    });
+  program
+    .command('spectrum')
+    .summary("the study's spectra and their ordinates")
+    .argument('[name]', 'one spectrum: parameters, corners, ordinates')
+    .addOption(study())
+    .option('--at <periods>', 'periods in seconds, for instance 0.2,1', periods)
+    .addOption(units())
+    .addOption(json())
+    .addHelpText('after', examples('swaymark spectrum', 'swaymark spectrum design-c --at 0.2,1'))
+    .action(
+      async (name: string | undefined, options: { study?: string; at?: number[]; units: 'si' | 'us'; json?: true }) => {
+        keep(await (await import('./commands/spectrum.js')).spectrum(name, options));
+      },
+    );
+}

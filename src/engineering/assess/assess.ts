@@ -1,0 +1,136 @@
+/**
+ * One building -> one result: the only place that composes the methods.
+ *
+ * ln S is a mixture: over the cases (system, era) with their chances, over nodes of the height where it is inferred, over nodes of
+ * the period's error (one draw for both directions: same material, same mass, same storeys), each node a normal with the spread of
+ * strength, era and people. At every node the worse direction counts.
+ */
+import type { Building, PerDirection } from '../building.js';
+import { mixtureMoments, mixtureQuantile } from '../priority/mixture.js';
+import type { Mixture } from '../priority/mixture.js';
+import type { Trace } from '../trace.js';
+import type { Cases } from './case-memory.js';
+import { casesOf } from './cases.js';
+import { chooseSpectrum, readAt, slopeFor } from './context.js';
+import type { AssessContext } from './context.js';
+import { flagsOf } from './flags.js';
+import { integrate } from './integrate.js';
+import type { PeriodBand } from './integrate.js';
+import { leadingCase } from './leading.js';
+import type { LeadingCase } from './leading.js';
+import { peopleOf } from './people.js';
+import { newScratch } from './scratch.js';
+import type { Scratch } from './scratch.js';
+import { weakOf } from './weak.js';
+
+export type { PeriodBand };
+
+export interface Assessment {
+  readonly id: string;
+  /** Distribution of ln S; median, mean and standard deviation beside it. */
+  readonly mixture: Mixture;
+  readonly lnPriority: number;
+  readonly lnPriorityMean: number;
+  readonly lnPrioritySd: number;
+  readonly period: PerDirection<PeriodBand>;
+  /** The larger S_a (g) of the two directions at their median periods: the plain demand ranking. */
+  readonly demand_g: number;
+  readonly leading: LeadingCase;
+  readonly people_exposed: number;
+  readonly slope_k: number;
+  readonly spectrum: string;
+  readonly weakType: string | null;
+  readonly weakChance: number;
+  readonly flags: readonly string[];
+}
+
+/** Why a building is not ranked. */
+export interface NotRanked {
+  readonly id: string;
+  readonly reason: string;
+}
+
+export function isRanked(result: Assessment | NotRanked): result is Assessment {
+  return !('reason' in result);
+}
+
+const shared = newScratch();
+/** The result of one building; with a trace the leading case is written out as a hand calculation. */
+export function assess(
+  building: Building,
+  context: AssessContext,
+  trace?: Trace,
+  scratch: Scratch = shared,
+): Assessment | NotRanked {
+  const { id } = building;
+  if (building.status === 'assessed') return { id, reason: 'already assessed' };
+  if (building.status === 'to-be-demolished') return { id, reason: 'to be demolished' };
+  if (!(building.height_m.value > 0) || !(building.storeys.value > 0))
+    return { id, reason: 'neither height nor storeys are known' };
+  const choice = chooseSpectrum(context, building, 0);
+  if (typeof choice === 'string') return { id, reason: choice };
+  const cases = casesOf(building, context);
+  if (typeof cases === 'string') return { id, reason: cases };
+  const byPeople = context.settings.rankBy === 'people';
+  const people = byPeople ? peopleOf(building, context) : { people_exposed: 1, sigma: 0 };
+  if (typeof people === 'string') return { id, reason: people };
+  const { spectrum } = choice;
+  const slope_k = slopeFor(context, spectrum.name);
+  scratch.score.clear();
+  const pass = integrate(building, cases, people, spectrum, slope_k, context, scratch);
+  if (typeof pass === 'string') return { id, reason: pass };
+  const mixture = scratch.score.gather(scratch.pool);
+  const moments = mixtureMoments(mixture);
+  const demand_g = Math.max(
+    readAt(spectrum, pass.period.longitudinal.p50_s),
+    readAt(spectrum, pass.period.transverse.p50_s),
+  );
+  const lnPriority = mixtureQuantile(mixture, 0.5, 0);
+  const leading = leadingCase(building, cases, choice, slope_k, context, trace);
+  if (typeof leading === 'string') return { id, reason: leading };
+  const weak = weakOf(building, cases, context.settings.codeHistory);
+  if (trace !== undefined) closeTrace(trace, cases, mixture, lnPriority, moments.sd);
+  return {
+    id,
+    mixture,
+    lnPriority,
+    lnPriorityMean: moments.mean,
+    lnPrioritySd: moments.sd,
+    period: pass.period,
+    demand_g,
+    leading,
+    people_exposed: byPeople ? people.people_exposed : NaN,
+    slope_k,
+    spectrum: spectrum.name,
+    weakType: weak.name,
+    weakChance: weak.chance,
+    flags: flagsOf(building, cases, choice.byDefault, leading, pass.disagreement, spectrum, context),
+  };
+}
+
+function closeTrace(trace: Trace, cases: Cases, mixture: Mixture, lnPriority: number, sd: number): void {
+  trace.heading('From the leading case to the priority');
+  trace.value(
+    'cases',
+    cases.list
+      .map(
+        (which) =>
+          `${which.system}, ${which.edition ?? 'no seismic design'}: ${String(Math.round(which.chance * 1000) / 10)} %`,
+      )
+      .join('; '),
+    cases.systemKnown ? 'given' : 'prior',
+    cases.prior === null ? 'era by year of construction, lag and enforcement' : `system chances: ${cases.prior}`,
+  );
+  trace.value(
+    'ln_priority_sd',
+    sd,
+    'computed',
+    'standard deviation over the nodes of period and height, strength, era, people and cases',
+  );
+  trace.value(
+    'ln_priority',
+    lnPriority,
+    'computed',
+    `median of ln S: the distribution is a mixture of ${String(mixture.to - mixture.from)} normals gathered from all cases and nodes`,
+  );
+}

@@ -1,0 +1,139 @@
+/** The study's settings made ready for a pass over the buildings. */
+import type { Building } from '../building.js';
+import type { AnyRecord, Inputs } from '../formula.js';
+import { heightFormula } from '../period/choose.js';
+import type { System } from '../building.js';
+import { SYSTEMS } from '../building.js';
+import type { CompiledSpectrum } from '../spectrum/compiled.js';
+import { ordinate } from '../spectrum/compiled.js';
+import { compileSpectrum } from '../spectrum/definition.js';
+import { eras } from './code-history.js';
+import type { Era } from './code-history.js';
+import { newCaseMemory } from './case-memory.js';
+import type { CaseMemory } from './case-memory.js';
+import type { AssessSettings } from './settings.js';
+
+export interface ContextSpectrum {
+  readonly name: string;
+  readonly record: AnyRecord;
+  readonly inputs: Inputs;
+  readonly compiled: CompiledSpectrum;
+  readonly return_period_years: number | null;
+  /** Periods below this are read at it (0 when the ramp is used). */
+  readonly hold_from_s: number;
+}
+
+export interface AssessContext {
+  readonly settings: AssessSettings;
+  readonly spectra: Readonly<Record<string, ContextSpectrum>>;
+  readonly formulas: Readonly<Record<System, AnyRecord>>;
+  readonly eras: readonly Era[];
+  /** ln λ0 + k² 0.4²/2 by spectrum of the ranking level, relative; 0 for all where k and the rate are the same everywhere. */
+  readonly zoneTerms: Readonly<Record<string, number>>;
+  /** Factor on every capacity: 1, but for a draw of the overstrength in a simulation. */
+  readonly capacityFactor: number;
+  /** Cases found so far; speeds up, changes nothing. */
+  readonly caseMemory: CaseMemory;
+}
+
+/** Median record-to-record dispersion in the closed form of the mean annual rate [from memory]. */
+const RECORD_TO_RECORD = 0.4;
+
+function slopeOf(settings: AssessSettings, spectrum: string): number {
+  return typeof settings.slope === 'number' ? settings.slope : (settings.slope[spectrum] ?? 2.5);
+}
+
+/** Compiles spectra, picks formulas and lays out eras. @throws RangeError for spectrum parameters out of range. */
+export function compileContext(settings: AssessSettings): AssessContext {
+  const spectra: Record<string, ContextSpectrum> = {};
+  for (const [name, { return_period_years, ...definition }] of Object.entries(settings.spectra)) {
+    const reading = compileSpectrum(definition);
+    spectra[name] = {
+      name,
+      ...reading,
+      return_period_years: return_period_years ?? null,
+      hold_from_s: settings.holdPlateau ? reading.compiled.plateau_from_s : 0,
+    };
+  }
+  const formulas = Object.fromEntries(
+    SYSTEMS.map((system) => [system, heightFormula(system, settings.period.standard, settings.period.basis)]),
+  ) as Record<System, AnyRecord>;
+  return {
+    settings,
+    spectra,
+    formulas,
+    eras: settings.codeHistory === null ? [] : eras(settings.codeHistory),
+    zoneTerms: zoneTerms(settings, spectra),
+    capacityFactor: 1,
+    caseMemory: newCaseMemory(),
+  };
+}
+
+function zoneTerms(
+  settings: AssessSettings,
+  spectra: Readonly<Record<string, ContextSpectrum>>,
+): Readonly<Record<string, number>> {
+  const level = settings.levels[0];
+  if (level === undefined) return {};
+  const names = [...new Set([...Object.values(level.spectra), ...(level.otherwise === null ? [] : [level.otherwise])])];
+  const raw = names.map((name) => {
+    const k = slopeOf(settings, name);
+    const years = spectra[name]?.return_period_years ?? null;
+    return {
+      name,
+      k,
+      years,
+      term: (years === null ? 0 : -Math.log(years)) + 0.5 * k * k * RECORD_TO_RECORD * RECORD_TO_RECORD,
+    };
+  });
+  const same = raw.every(({ k, years }) => k === raw[0]!.k && years === raw[0]!.years);
+  const first = raw[0]?.term ?? 0;
+  return Object.fromEntries(raw.map(({ name, term }) => [name, same ? 0 : term - first]));
+}
+
+/** Slope of the hazard curve where the ranking spectrum is `name`. */
+export function slopeFor(context: AssessContext, name: string): number {
+  return context.settings.rankBy === 'demand' ? 1 : slopeOf(context.settings, name);
+}
+
+export interface SpectrumChoice {
+  readonly spectrum: ContextSpectrum;
+  /** Why this one. */
+  readonly because: string;
+  /** True when the building's class was blank or not named and the default was taken. */
+  readonly byDefault: boolean;
+}
+
+/** The spectrum `building` reads at level `levelIndex`, or a reason why there is none. */
+export function chooseSpectrum(
+  context: AssessContext,
+  building: Building,
+  levelIndex: number,
+): SpectrumChoice | string {
+  const level = context.settings.levels[levelIndex];
+  if (level === undefined) return 'no such level';
+  const key = level.by === null ? 'all' : building[level.by];
+  // own keys only: a cell may hold any text, `constructor` too
+  const named = key !== null && Object.hasOwn(level.spectra, key) ? level.spectra[key] : undefined;
+  const name = named ?? level.otherwise;
+  if (name === null) {
+    return key === null
+      ? `${level.by === 'site_class' ? 'site class' : 'hazard zone'} not known and the study names no spectrum for that`
+      : `no spectrum for ${level.by === 'site_class' ? 'site class' : 'hazard zone'} "${key}"`;
+  }
+  const spectrum = context.spectra[name];
+  if (spectrum === undefined) return `spectrum "${name}" is not defined`;
+  const byDefault = named === undefined;
+  const because =
+    level.by === null
+      ? 'one spectrum for all buildings'
+      : byDefault
+        ? `${level.by === 'site_class' ? 'site class' : 'hazard zone'} ${key === null ? 'not known' : `"${key}" not named`}: the study's default`
+        : `${level.by === 'site_class' ? 'site class' : 'hazard zone'} ${String(key)}`;
+  return { spectrum, because, byDefault };
+}
+
+/** S_a at a period, the plateau held below its start. */
+export function readAt(spectrum: ContextSpectrum, period_s: number): number {
+  return ordinate(spectrum.compiled, Math.max(period_s, spectrum.hold_from_s));
+}

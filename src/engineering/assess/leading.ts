@@ -1,0 +1,210 @@
+/** The most likely case worked out at its central values: what the hand calculation shows. */
+import type { Building, DirectionName, PerDirection, System } from '../building.js';
+import { ELASTIC_EQUIVALENT, REDUCTION } from '../capacity/records.js';
+import { DIRECTIONS } from '../direction.js';
+import { apply } from '../formula.js';
+import { LOG_SCORE } from '../priority/records.js';
+import { ordinate } from '../spectrum/compiled.js';
+import type { Trace } from '../trace.js';
+import { directionsAlike, drawingsLevels, importanceOf } from './terms.js';
+import { capacityAtHeight, irregularityFactor, massShare } from './capacity.js';
+import type { Case, Cases } from './case-memory.js';
+import type { EditionId } from './code-history.js';
+import { chooseSpectrum } from './context.js';
+import type { AssessContext, ContextSpectrum, SpectrumChoice } from './context.js';
+import { peopleOf } from './people.js';
+import { periodAt, periodModel } from './period.js';
+import type { Evidence } from './period.js';
+
+export interface LeadingDirection {
+  readonly period_s: number;
+  readonly sa_g: number;
+  readonly capacity_g: number;
+}
+
+export interface LeadingCase {
+  readonly system: System;
+  readonly edition: EditionId | null;
+  readonly chance: number;
+  readonly governing: DirectionName;
+  readonly directions: PerDirection<LeadingDirection>;
+  readonly evidence: Evidence;
+  readonly sa_g: number;
+  readonly capacity_g: number;
+  readonly demand_over_capacity: number;
+  /** S_a of the second level at the governing period; NaN with one level. */
+  readonly sa_level_2_g: number;
+}
+
+/** The leading case of `building`. */
+export function leadingCase(
+  building: Building,
+  cases: Cases,
+  choice: SpectrumChoice,
+  slope_k: number,
+  context: AssessContext,
+  trace?: Trace,
+): LeadingCase | string {
+  const which = cases.list[0]!;
+  if (trace !== undefined) openTrace(building, which, choice, trace);
+  const worked = {} as Record<DirectionName, LeadingDirection>;
+  let evidence: Evidence = 'formula';
+  for (const direction of DIRECTIONS) {
+    if (direction === 'transverse' && directionsAlike(building, which)) {
+      worked.transverse = worked.longitudinal;
+      trace?.heading('Transverse direction');
+      trace?.choice({
+        question: 'Transverse direction',
+        taken: 'as the longitudinal',
+        because: 'nothing on record tells the two apart',
+        others: [],
+      });
+      continue;
+    }
+    trace?.heading(direction === 'longitudinal' ? 'Longitudinal direction' : 'Transverse direction');
+    const system = direction === 'longitudinal' ? which.system : which.system_transverse;
+    const model = periodModel(building, direction, system, context, trace);
+    if (model === null) return 'every method for the period is switched off';
+    if (direction === 'longitudinal') evidence = model.evidence;
+    const { period_s } = periodAt(model, building.height_m.value, context, trace);
+    const sa_g = readOrdinate(choice.spectrum, period_s, trace);
+    const capacity_g =
+      context.settings.rankBy === 'demand'
+        ? NaN
+        : capacityOf(building, which, direction, period_s, choice.spectrum, context, trace);
+    worked[direction] = { period_s, sa_g, capacity_g };
+  }
+  const load = (d: LeadingDirection): number => (Number.isNaN(d.capacity_g) ? d.sa_g : d.sa_g / d.capacity_g);
+  const governing = load(worked.transverse) > load(worked.longitudinal) ? 'transverse' : 'longitudinal';
+  const { sa_g, capacity_g, period_s } = worked[governing];
+  trace?.heading('Priority of the leading case');
+  trace?.choice({
+    question: 'Governing direction',
+    taken: governing,
+    because: 'the larger demand over capacity',
+    others: [],
+  });
+  if (trace !== undefined) scoreOf(building, sa_g, capacity_g, slope_k, choice.spectrum, context, trace);
+  return {
+    system: which.system,
+    edition: which.edition,
+    chance: which.chance,
+    governing,
+    directions: worked,
+    evidence,
+    sa_g,
+    capacity_g,
+    demand_over_capacity: sa_g / capacity_g,
+    sa_level_2_g: secondLevel(building, period_s, context),
+  };
+}
+
+function openTrace(building: Building, which: Case, choice: SpectrumChoice, trace: Trace): void {
+  trace.heading('What is known');
+  const { height_m, storeys } = building;
+  trace.value('storeys', storeys.value, storeys.origin, storeys.rule === '' ? 'from the inventory' : storeys.rule);
+  trace.value('height_m', height_m.value, height_m.origin, height_m.rule === '' ? 'from the inventory' : height_m.rule);
+  trace.value(
+    'system',
+    which.system,
+    building.system === null ? 'prior' : 'given',
+    building.system === null
+      ? `most likely case, chance ${String(Math.round(which.chance * 100))} %`
+      : 'from the inventory',
+  );
+  trace.value('code edition', which.edition ?? 'no seismic design', 'inferred', eraWords(building, which));
+  trace.choice({ question: 'Spectrum', taken: choice.spectrum.name, because: choice.because, others: [] });
+}
+
+function eraWords(building: Building, which: Case): string {
+  if (which.strengthened)
+    return `seismic retrofit of ${String(building.year_retrofitted)}, level ${String(which.retrofit_level)} of that code`;
+  return building.years.length === 1 ? `year ${String(building.years[0])}` : 'year not known, from like buildings';
+}
+
+/** S_a with the plateau held; the trace shows the branch read. */
+function readOrdinate(spectrum: ContextSpectrum, period_s: number, trace?: Trace): number {
+  const read_s = Math.max(period_s, spectrum.hold_from_s);
+  if (read_s > period_s) {
+    trace?.choice({
+      question: 'Below the start of the plateau',
+      taken: `S_a held at the plateau (read at ${String(spectrum.hold_from_s)} s)`,
+      because:
+        'the ramp would demote the stiffest and most brittle buildings; several codes bar it for the fundamental mode',
+      others: [],
+    });
+  }
+  const sa_g = ordinate(spectrum.compiled, read_s);
+  trace?.formula(spectrum.record, { ...spectrum.inputs, period_s: read_s }, sa_g);
+  return sa_g;
+}
+
+/** Capacity of the case at a period; the likelier level where the drawings do not say (working stress). */
+function capacityOf(
+  building: Building,
+  which: Case,
+  direction: DirectionName,
+  period_s: number,
+  spectrum: ContextSpectrum,
+  context: AssessContext,
+  trace?: Trace,
+): number {
+  if (building.capacity_sa_g > 0) {
+    trace?.value('capacity_sa_g', building.capacity_sa_g, 'given', 'capacity from a finished assessment');
+    return building.capacity_sa_g * context.capacityFactor;
+  }
+  const { level } = drawingsLevels(building)[0]!;
+  const at = capacityAtHeight(building, which, direction, building.height_m.value, level, context, trace);
+  const reduction = apply(
+    REDUCTION,
+    { ductility: at.ductility, period_s, corner_period_s: spectrum.compiled.plateau_to_s },
+    trace,
+  );
+  return (
+    apply(
+      ELASTIC_EQUIVALENT,
+      {
+        strength_coefficient: at.strength_coefficient,
+        overstrength: at.overstrength,
+        reduction,
+        irregularity: irregularityFactor(building),
+        mass_share: massShare(building),
+      },
+      trace,
+    ) * context.capacityFactor
+  );
+}
+
+function scoreOf(
+  building: Building,
+  sa_g: number,
+  capacity_g: number,
+  slope_k: number,
+  spectrum: ContextSpectrum,
+  context: AssessContext,
+  trace: Trace,
+): void {
+  const { rankBy } = context.settings;
+  if (rankBy === 'demand') return;
+  const people = rankBy === 'people' ? peopleOf(building, context, trace) : { people_exposed: 1 };
+  apply(
+    LOG_SCORE,
+    {
+      slope_k,
+      sa_g,
+      capacity_sa_g: capacity_g,
+      people_exposed: typeof people === 'string' ? 1 : people.people_exposed,
+      importance_factor: rankBy === 'people' ? importanceOf(building) : 1,
+      zone_term: context.zoneTerms[spectrum.name] ?? 0,
+    },
+    trace,
+  );
+}
+
+function secondLevel(building: Building, period_s: number, context: AssessContext): number {
+  if (context.settings.levels.length < 2) return NaN;
+  const choice = chooseSpectrum(context, building, 1);
+  return typeof choice === 'string'
+    ? NaN
+    : ordinate(choice.spectrum.compiled, Math.max(period_s, choice.spectrum.hold_from_s));
+}

@@ -1,0 +1,46 @@
+/** Terms of a building that do not depend on its period. */
+import type { Building } from '../building.js';
+import { WORKING_TO_STRENGTH } from '../capacity/records.js';
+import { SYSTEM_FACTORS } from '../capacity/systems.js';
+import { irregularityFactor, massShare } from './capacity.js';
+import type { Case } from './case-memory.js';
+import type { AssessContext } from './context.js';
+
+/** Importance factor, 1 where the row gives none. */
+export function importanceOf(building: Building): number {
+  return building.importance_factor > 0 ? building.importance_factor : 1;
+}
+
+/** Irregularities and mass share: what multiplies strength, overstrength and ductility alike in every case. */
+export function massFactor(building: Building, context: AssessContext): number {
+  return (irregularityFactor(building) * context.capacityFactor) / massShare(building);
+}
+
+/** Level of the drawings' coefficient: as stated, both alike when not stated; null when there is none. */
+export function drawingsLevels(
+  building: Building,
+): readonly { readonly level: number | null; readonly chance: number }[] {
+  if (!(building.design_base_shear_coefficient > 0)) return [{ level: null, chance: 1 }];
+  if (building.design_level === 'working') return [{ level: WORKING_TO_STRENGTH, chance: 1 }];
+  if (building.design_level === 'strength') return [{ level: 1, chance: 1 }];
+  return [
+    { level: WORKING_TO_STRENGTH, chance: 0.5 },
+    { level: 1, chance: 0.5 },
+  ];
+}
+
+/** True where nothing tells the two directions apart: one system, nothing measured or given per direction, no plan dimension in the era's formula. */
+export function directionsAlike(building: Building, which: Case): boolean {
+  if (which.system !== which.system_transverse) return false;
+  const { measured_period_s: measured, storey_stiffness_kN_per_m: stiffness } = building;
+  if (
+    measured.longitudinal > 0 ||
+    measured.transverse > 0 ||
+    stiffness.longitudinal !== null ||
+    stiffness.transverse !== null
+  )
+    return false;
+  if (which.edition !== 'ubc-1961' && which.edition !== 'ubc-1976') return true;
+  const { periodClass } = SYSTEM_FACTORS[which.system];
+  return periodClass === 'steel-moment-frame' || periodClass === 'concrete-moment-frame';
+}

@@ -1,0 +1,76 @@
+/** Display: rounding and units happen here and nowhere else, for terminal, page and browser alike. */
+import { convert, findUnit } from './units.js';
+
+export type Display = 'si' | 'us';
+
+/** Unit shown for a stored unit in US display. */
+const US: Readonly<Record<string, string>> = {
+  m: 'ft',
+  m2: 'ft2',
+  kN: 'kip',
+  kN_per_m: 'kip_per_in',
+  kN_per_m2: 'psf',
+  mps: 'ftps',
+};
+
+/** `value` to `digits` significant digits, plain notation, thousands apart by a thin space from 10,000 on. NaN prints as "not known". */
+export function formatNumber(value: number, digits = 3): string {
+  if (Number.isNaN(value)) return 'not known';
+  if (!Number.isFinite(value)) return value > 0 ? '∞' : '−∞';
+  if (value === 0) return '0';
+  const size = Math.abs(value);
+  if (size >= 1e9 || size < 1e-4) return value.toPrecision(digits).replace('-', '−');
+  const decimals = Math.max(0, digits - 1 - Math.floor(Math.log10(size)));
+  const text = value.toFixed(Math.min(decimals, 12));
+  const [whole = '', part] = text.replace('-', '').split('.');
+  const grouped = whole.length > 4 ? whole.replaceAll(/\B(?=(\d{3})+$)/g, '\u202f') : whole;
+  return `${value < 0 ? '−' : ''}${grouped}${part === undefined ? '' : `.${part}`}`;
+}
+
+/** A whole number, thousands apart. */
+export function formatCount(value: number): string {
+  return String(Math.round(value)).replaceAll(/\B(?=(\d{3})+$)/g, '\u202f');
+}
+
+/** A share as a percentage: "63 %", and "under 1 %", "over 99 %" rather than a false 0 or 100. */
+export function formatShare(value: number): string {
+  if (Number.isNaN(value)) return 'not known';
+  if (value > 0 && value < 0.01) return 'under 1 %';
+  if (value < 1 && value > 0.99) return 'over 99 %';
+  return `${String(Math.round(value * 100))} %`;
+}
+
+/** The unit in which a stored unit is shown. */
+export function shownUnit(unitId: string, display: Display): string {
+  return display === 'us' ? (US[unitId] ?? unitId) : unitId;
+}
+
+/** `value`, stored in `unitId`, in the display unit. */
+export function shownValue(value: number, unitId: string, display: Display): number {
+  const from = findUnit(unitId);
+  const to = findUnit(shownUnit(unitId, display));
+  return from === undefined || to === undefined ? value : convert(value, from, to);
+}
+
+/** Printed label of the display unit: "m", "ft", "kN/m". */
+export function unitLabel(unitId: string, display: Display): string {
+  return findUnit(shownUnit(unitId, display))?.label ?? unitId;
+}
+
+/** "12.5 m", "41.0 ft", "not known". */
+export function formatQuantity(value: number, unitId: string | null | undefined, display: Display, digits = 3): string {
+  if (unitId === null || unitId === undefined) return formatNumber(value, digits);
+  if (Number.isNaN(value)) return 'not known';
+  return `${formatNumber(shownValue(value, unitId, display), digits)} ${unitLabel(unitId, display)}`;
+}
+
+/** A code of ours in plain words: "concrete-moment-frame" -> "concrete moment frame". */
+export function plainWords(code: string): string {
+  return code.replaceAll('-', ' ');
+}
+
+/** An edition in words: "ubc-1976" -> "UBC 1976"; other words as they are. */
+export function editionWords(code: string): string {
+  const found = /^(ubc|asce7)-(\d{4})$/.exec(code);
+  return found === null ? code : `${found[1] === 'ubc' ? 'UBC' : 'ASCE 7 of'} ${found[2] ?? ''}`;
+}

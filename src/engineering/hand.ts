@@ -1,0 +1,199 @@
+/** A trace as text: symbols, numbers put in, result with unit, clause. Shared by terminal, page and review sheet. */
+import { evaluateExpression, parseExpression, writeExpression } from './expression.js';
+import { formatNumber, formatQuantity } from './format.js';
+import type { Display } from './format.js';
+import type { InputValue } from './formula.js';
+import { cite } from './source.js';
+import { segmentAt } from './spectrum/compiled.js';
+import type { SpectrumFamily } from './spectrum/family.js';
+import type { Inputs } from './formula.js';
+import type { FormulaStep, Trace } from './trace.js';
+import { findUnit } from './units.js';
+
+export interface HandStep {
+  readonly kind: 'heading' | 'value' | 'formula' | 'choice';
+  readonly title: string;
+  /** Formula in symbols, or the statement of a choice. */
+  readonly symbolic: string;
+  /** The same with its numbers. */
+  readonly substituted: string;
+  readonly result: string;
+  readonly source: string;
+  readonly mark: string;
+  readonly details: readonly string[];
+  /** The record behind a formula step. */
+  readonly method: string | null;
+  /** The value to full precision, formula steps only. */
+  readonly value: number | null;
+}
+
+const SYMBOLS: Readonly<Record<string, string>> = {
+  height_m: 'h',
+  period_s: 'T',
+  sa_g: 'S_a',
+  sds_g: 'S_DS',
+  sd1_g: 'S_D1',
+  tl_s: 'T_L',
+  ag_g: 'a_g',
+  mass_t: 'm',
+  stiffness_kN_per_m: 'k',
+  storeys: 'N',
+  weight_kN: 'W',
+  floor_area_m2: 'A',
+  unit_weight_kN_per_m2: 'w',
+  capacity_sa_g: 'C',
+  people_exposed: 'E',
+  importance_factor: 'I',
+  slope_k: 'k',
+  zone_term: 'Z₀',
+  ductility: 'μ',
+  overstrength: 'Ω',
+  reduction: 'R_μ',
+  corner_period_s: 'T_c',
+  level_factor: 'f_level',
+  strength_coefficient: 'C_s',
+  design_base_shear_coefficient: 'C_d',
+  mass_share: 'α₁',
+  code_reduction: 'R_code',
+  retrofit_level: 'r',
+  irregularity: 'ι',
+  zone_factor: 'Z',
+  structure_factor: 'K',
+  site_factor: 'S',
+  reduction_r: 'R',
+  coefficient: 'C_t',
+  exponent: 'x',
+  unit_m: 'unit',
+  occupants_peak: 'P',
+  occupied_hours_per_week: 'hours',
+  people_per_m2: 'p',
+  gravity_mps2: 'g',
+  storey_height_m: 'h_s',
+  first_storey_height_m: 'h₁',
+  period_1_s: 'T₁',
+  sigma_1: 'σ₁',
+  period_2_s: 'T₂',
+  sigma_2: 'σ₂',
+  zone_share: 'z',
+  zone_floor: '0.8 Z N_v',
+  near_fault_s1_g: 'S₁',
+  ca_g: 'C_a',
+  cv_g: 'C_v',
+  plan_dimension_m: 'D',
+  floor_g: 'least',
+  top_displacement_m: 'd',
+  sa_1_g: 'S_a1',
+  sa_2_g: 'S_a2',
+  return_period_1_years: 'TR₁',
+  return_period_2_years: 'TR₂',
+  occupied_share: 'q',
+};
+
+const symbol = (name: string): string => SYMBOLS[name] ?? name;
+
+function showInput(value: InputValue): string {
+  if (typeof value === 'number') return formatNumber(value, 4);
+  if (typeof value === 'string') return value;
+  return `[${value.map((entry) => formatNumber(entry, 4)).join('; ')}]`;
+}
+
+/** The display formula of a step: the family's own, or the branch of the spectrum that was read. */
+export function expressionOf(step: Pick<FormulaStep, 'record' | 'inputs'>): {
+  readonly text: string | null;
+  readonly branch: string;
+} {
+  const family = step.record.family as { readonly expression: string | null } & Partial<
+    Pick<SpectrumFamily<Inputs>, 'compile'>
+  >;
+  if (family.compile !== undefined && typeof step.inputs['period_s'] === 'number') {
+    const segment = segmentAt(family.compile(step.inputs), step.inputs['period_s']);
+    return { text: segment.expression, branch: segment.clause };
+  }
+  return { text: family.expression, branch: '' };
+}
+
+function formulaStep(step: FormulaStep, display: Display): HandStep {
+  const { record, inputs, value } = step;
+  const { text, branch } = expressionOf(step);
+  const constants = record.constants as Readonly<Record<string, number>>;
+  let symbolic = record.family.procedure ?? '';
+  let substituted = Object.entries(inputs)
+    .map(([name, input]) => `${symbol(name)} = ${showInput(input)}`)
+    .join(', ');
+  if (text !== null) {
+    const node = parseExpression(text);
+    symbolic = writeExpression(node, symbol);
+    substituted = writeExpression(node, (name) => showInput(inputs[name] ?? constants[name] ?? name));
+  }
+  return {
+    kind: 'formula',
+    title: record.title,
+    symbolic: text === null ? symbolic : `${record.family.symbol} = ${symbolic}`,
+    substituted: text === null ? substituted : `= ${substituted}`,
+    result: `= ${formatQuantity(value, record.family.unit, display, 4)}`,
+    source: branch === '' ? cite(record.source) : `${cite(record.source)}, ${branch}`,
+    mark: record.verified,
+    details: record.note === undefined ? [] : [record.note],
+    method: record.id,
+    value,
+  };
+}
+
+/** The steps of a trace as text. */
+export function handSteps(trace: Trace, display: Display): readonly HandStep[] {
+  return trace.steps.map((step): HandStep => {
+    const blank = {
+      symbolic: '',
+      substituted: '',
+      result: '',
+      source: '',
+      mark: '',
+      details: [],
+      method: null,
+      value: null,
+    };
+    switch (step.kind) {
+      case 'heading':
+        return { ...blank, kind: 'heading', title: step.text };
+      case 'value': {
+        const unit = unitOfName(step.name);
+        const shown = typeof step.value === 'number' ? formatQuantity(step.value, unit, display, 4) : step.value;
+        return { ...blank, kind: 'value', title: step.name, result: shown, source: step.why, mark: step.origin };
+      }
+      case 'choice':
+        return {
+          ...blank,
+          kind: 'choice',
+          title: step.question,
+          symbolic: step.taken,
+          source: step.because,
+          details: step.others.map(({ what, why }) => `not ${what}: ${why}`),
+        };
+      case 'formula':
+        return formulaStep(step, display);
+    }
+  });
+}
+
+/** Unit id at the end of a quantity's name: `height_m` -> m, `storey_stiffness_kN_per_m` -> kN_per_m; null for pure numbers. */
+export function unitOfName(name: string): string | null {
+  if (name.startsWith('people_per_')) return null;
+  const parts = name.split('_');
+  for (let from = 1; from < parts.length; from += 1) {
+    const tail = parts.slice(from).join('_');
+    const unit = findUnit(tail);
+    if (unit !== undefined && unit.id === tail) return unit.id;
+  }
+  return null;
+}
+
+/** The display formula evaluated on its own: what the tests hold against the code. Null when the method is a procedure. */
+export function evaluateDisplayed(step: Pick<FormulaStep, 'record' | 'inputs'>): number | null {
+  const { text } = expressionOf(step);
+  if (text === null) return null;
+  const constants = step.record.constants as Readonly<Record<string, number>>;
+  return evaluateExpression(parseExpression(text), {
+    ...constants,
+    ...(step.inputs as Readonly<Record<string, number>>),
+  });
+}

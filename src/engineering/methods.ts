@@ -1,0 +1,65 @@
+/** The register of methods: every record, one array. Ids never change meaning. */
+import { EDITION_YEARS } from './assess/code-history.js';
+import { SPREADS } from './assess/settings.js';
+import { MIN_COEFFICIENT_G, OVERSTRENGTH, WORKING_TO_STRENGTH } from './capacity/records.js';
+import { SYSTEM_FACTORS } from './capacity/systems.js';
+import { STOREY_HEIGHTS } from './prior/storey-height.js';
+import { UNIT_WEIGHT_KN_PER_M2 } from './prior/unit-weight.js';
+import { USE_VALUES } from './prior/use.js';
+import { TYPE_1, TYPE_2 } from './spectrum/en1998.js';
+import { COMBINED_PERIOD } from './assess/combine.js';
+import { EDITION_RECORDS } from './capacity/editions.js';
+import { CAPACITY_RECORDS } from './capacity/records.js';
+import { DEMAND_RECORDS } from './demand/records.js';
+import type { AnyRecord } from './formula.js';
+import { ASCE41_17_PERIODS, ASCE7_22_PERIODS, EN1998_PERIODS, UBC_HEIGHT_PERIODS } from './period/height-records.js';
+import { MEASURED_PERIODS } from './period/measured-records.js';
+import { UBC_1961_MOMENT_FRAME, UBC_1961_OTHER } from './period/past-records.js';
+import { PRIORITY_RECORDS } from './priority/records.js';
+import { SPECTRUM_RECORDS } from './spectrum/definition.js';
+import { STIFFNESS_RECORDS } from './stiffness/records.js';
+
+export const METHODS: readonly AnyRecord[] = [
+  ...ASCE7_22_PERIODS,
+  ...ASCE41_17_PERIODS,
+  ...EN1998_PERIODS,
+  ...UBC_HEIGHT_PERIODS,
+  UBC_1961_MOMENT_FRAME,
+  UBC_1961_OTHER,
+  ...MEASURED_PERIODS,
+  COMBINED_PERIOD,
+  ...STIFFNESS_RECORDS,
+  ...SPECTRUM_RECORDS,
+  ...DEMAND_RECORDS,
+  ...EDITION_RECORDS,
+  ...CAPACITY_RECORDS,
+  ...PRIORITY_RECORDS,
+];
+
+const BY_ID: ReadonlyMap<string, AnyRecord> = new Map(METHODS.map((method) => [method.id, method]));
+
+/** The record called `id`, or undefined. */
+export function findMethod(id: string): AnyRecord | undefined {
+  return BY_ID.get(id);
+}
+
+/** Tables that records read besides their own constants. */
+const TABLES = {
+  TYPE_1,
+  TYPE_2,
+  SYSTEM_FACTORS,
+  EDITION_YEARS,
+  UNIT_WEIGHT_KN_PER_M2,
+  USE_VALUES,
+  STOREY_HEIGHTS,
+  SPREADS,
+  factors: [MIN_COEFFICIENT_G, WORKING_TO_STRENGTH, OVERSTRENGTH],
+};
+
+/** What the numbers of the catalogue are, for a fingerprint: the records (id, constants, limits, expression) and the tables. */
+export function catalogueText(): string {
+  const records = METHODS.map(({ id, constants, limits, family, source, verified }) =>
+    JSON.stringify([id, constants as unknown, limits, family.expression ?? family.procedure, source, verified]),
+  );
+  return [...records, JSON.stringify(TABLES)].join('\n');
+}

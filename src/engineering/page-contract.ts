@@ -1,0 +1,89 @@
+/** What the dashboard page carries: filled by screening, drawn by reports, read by the page's script. */
+import type { AssessSettings } from './assess/settings.js';
+import type { BuildingColumns, YearPools } from './building-columns.js';
+
+/** Where a portfolio's values come from, counted per attribute. */
+export interface AttributeCount {
+  readonly attribute: string;
+  readonly title: string;
+  readonly given: number;
+  readonly inferred: number;
+  readonly default: number;
+  readonly unknown: number;
+}
+
+export interface AccountLine {
+  readonly kind: string;
+  readonly title: string;
+  readonly rows: number;
+}
+
+export interface FindingCount {
+  readonly code: string;
+  readonly kind: string;
+  readonly count: number;
+  /** One message as an example, with its row. */
+  readonly example: string;
+}
+
+export interface Assumption {
+  readonly id: string;
+  readonly statement: string;
+  readonly value: string;
+  readonly source: string;
+}
+
+export interface PageSummary {
+  readonly title: string;
+  readonly run: string;
+  /** When the run was made, ISO 8601, from the run's record. */
+  readonly made: string;
+  readonly program: string;
+  readonly rows_in: number;
+  readonly buildings: number;
+  readonly ranked: number;
+  readonly list_size: number;
+  readonly expected_wrong_places: number;
+  readonly sure_places: number;
+  readonly largest_equal_block: number;
+  readonly tie_group_at_edge: { readonly from: number; readonly to: number };
+  readonly weak_in_list: number;
+  readonly weak_outside: number;
+  readonly rank_by: string;
+  readonly fingerprints: { readonly study: string; readonly inventory: string; readonly methods: string };
+  readonly account: readonly AccountLine[];
+  readonly attributes: readonly AttributeCount[];
+  readonly findings: readonly FindingCount[];
+  readonly assumptions: readonly Assumption[];
+  readonly cautions: readonly string[];
+  /** Slope of the hazard curve per spectrum of the ranking level. */
+  readonly slopes: readonly { readonly spectrum: string; readonly k: number; readonly how: string }[];
+}
+
+/**
+ * Buildings in rank order, those not ranked last. `shown` may be fewer than all (the largest ranks first); then the page says
+ * so and names ranking.csv.
+ */
+export interface PageBuildings {
+  readonly shown: number;
+  readonly all: number;
+  /** Inputs, for the hand calculation made in the page. */
+  readonly inputs: BuildingColumns;
+  readonly pools: YearPools;
+  readonly name: readonly (string | null)[];
+  readonly group: readonly (string | null)[];
+  readonly part_of: readonly (string | null)[];
+  readonly lon: readonly (number | null)[];
+  readonly lat: readonly (number | null)[];
+  readonly heritage: readonly (string | null)[];
+  readonly first_row: readonly number[];
+  /** Every column of results.ts by its name. */
+  readonly results: Readonly<Record<string, readonly (number | string | null)[]>>;
+}
+
+export interface PageData {
+  readonly summary: PageSummary;
+  readonly settings: AssessSettings;
+  readonly buildings: PageBuildings;
+  readonly display: 'si' | 'us';
+}

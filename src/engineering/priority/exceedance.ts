@@ -1,0 +1,180 @@
+/**
+ * The expected number of buildings above x, F(x) = Σ P(ln S > x): tabulated once for rank bands, and solved exactly for the
+ * threshold at which it equals the size of the list.
+ */
+import { INVERSE_ROOT_TWO_PI, cdfFrom, normalCdf } from '../numeric/normal.js';
+import type { Mixture } from './mixture.js';
+
+export interface Exceedance {
+  /** F(x), from the table. */
+  readonly count: (x: number) => number;
+  /** x with F(x) = n, to 1e-9 buildings, or the place where F steps over n. */
+  readonly threshold: (n: number) => number;
+  /** Chance of each building above the threshold; point masses at the threshold share the places left over equally. */
+  readonly chances: (threshold: number, n: number) => Float64Array;
+}
+
+const POINTS = 2048;
+const SD_CLASSES = 24;
+/** Point masses closer to the threshold than this are at it. */
+const AT = 1e-9;
+
+export function exceedance(mixtures: readonly Mixture[]): Exceedance {
+  const table = tabulate(mixtures);
+  const count = (x: number): number => {
+    const at = (x - table.low) / table.step;
+    if (at <= 0) return mixtures.length;
+    const i = Math.floor(at);
+    if (i >= POINTS - 1) return 0;
+    const f = at - i;
+    return table.value[i]! * (1 - f) + table.value[i + 1]! * f;
+  };
+  return {
+    count,
+    threshold: (n) => solve(mixtures, n, table),
+    chances: (threshold, n) => chancesAt(mixtures, threshold, n),
+  };
+}
+
+interface Table {
+  readonly low: number;
+  readonly step: number;
+  readonly value: Float64Array;
+}
+
+/**
+ * F on a grid. Parts are first shared out over neighbouring grid points and neighbouring classes of spread (keeping their mean
+ * and variance), so that the cost does not grow with buildings times points.
+ */
+function tabulate(mixtures: readonly Mixture[]): Table {
+  let low = Infinity;
+  let high = -Infinity;
+  let least = Infinity;
+  let most = 0;
+  for (const { mean, sd, from, to } of mixtures) {
+    for (let i = from; i < to; i += 1) {
+      low = Math.min(low, mean[i]! - 5 * sd[i]!);
+      high = Math.max(high, mean[i]! + 5 * sd[i]!);
+      least = Math.min(least, sd[i]!);
+      most = Math.max(most, sd[i]!);
+    }
+  }
+  if (!(high > low)) {
+    low -= 1;
+    high += 1;
+  }
+  low -= 1e-6;
+  const step = (high - low) / (POINTS - 2);
+  const variances = Array.from(
+    { length: SD_CLASSES },
+    (_, c) => least * least + ((most * most - least * least) * c) / (SD_CLASSES - 1),
+  );
+  const grid = variances.map(() => new Float64Array(POINTS + 1));
+  for (const { weight, mean, sd, from, to } of mixtures) {
+    for (let i = from; i < to; i += 1) {
+      const at = (mean[i]! - low) / step;
+      const g = Math.min(POINTS - 1, Math.floor(at));
+      const f = at - g;
+      const v =
+        most > least ? ((sd[i]! * sd[i]! - least * least) / (most * most - least * least)) * (SD_CLASSES - 1) : 0;
+      const c = Math.min(SD_CLASSES - 2, Math.floor(v));
+      const r = v - c;
+      const w = weight[i]!;
+      grid[c]![g]! += w * (1 - r) * (1 - f);
+      grid[c]![g + 1]! += w * (1 - r) * f;
+      grid[c + 1]![g]! += w * r * (1 - f);
+      grid[c + 1]![g + 1]! += w * r * f;
+    }
+  }
+  const value = new Float64Array(POINTS);
+  grid.forEach((counts, c) => spreadOut(counts, Math.sqrt(variances[c]!) / step, value));
+  return { low, step, value };
+}
+
+/** Adds to `value` the exceedance of the counts, each spread normally with `sd` in grid steps. */
+function spreadOut(counts: Float64Array, sd: number, value: Float64Array): void {
+  const reach = Math.ceil(6 * sd);
+  const kernel = new Float64Array(2 * reach + 1);
+  for (let k = -reach; k <= reach; k += 1) kernel[k + reach] = sd > 0 ? normalCdf(k / sd) : k > 0 ? 1 : k < 0 ? 0 : 0.5;
+  let beyond = 0;
+  for (let j = 0; j < counts.length; j += 1) if (counts[j]! > 0) beyond += counts[j]!;
+  if (beyond === 0) return;
+  // counts far above x count fully: a running sum; near ones through the kernel
+  const above = new Float64Array(counts.length + 1);
+  for (let j = counts.length - 1; j >= 0; j -= 1) above[j] = above[j + 1]! + counts[j]!;
+  for (let i = 0; i < value.length; i += 1) {
+    let sum = above[Math.min(counts.length, i + reach + 1)]!;
+    const from = Math.max(0, i - reach);
+    const to = Math.min(counts.length - 1, i + reach);
+    for (let j = from; j <= to; j += 1) sum += counts[j]! * kernel[j - i + reach]!;
+    value[i]! += sum;
+  }
+}
+
+function exact(mixtures: readonly Mixture[], x: number): { readonly count: number; readonly density: number } {
+  let count = 0;
+  let density = 0;
+  for (const { weight, mean, sd, from, to } of mixtures) {
+    for (let i = from; i < to; i += 1) {
+      const s = sd[i]!;
+      const gap = mean[i]! - x;
+      if (s > 0) {
+        const z = gap / s;
+        if (z > 9) count += weight[i]!;
+        else if (z > -9) {
+          const e = Math.exp(-0.5 * z * z);
+          count += weight[i]! * cdfFrom(z, e);
+          density += (weight[i]! * e) / s;
+        }
+      } else if (gap > 0) count += weight[i]!;
+    }
+  }
+  return { count, density: density * INVERSE_ROOT_TWO_PI };
+}
+
+/** Newton on the exact F from the table's answer, inside a bracket. */
+function solve(mixtures: readonly Mixture[], n: number, table: Table): number {
+  let i = 0;
+  while (i < POINTS - 1 && table.value[i + 1]! > n) i += 1;
+  let low = table.low - 1;
+  let high = table.low + table.step * POINTS + 1;
+  let x = table.low + table.step * (i + 0.5);
+  for (let pass = 0; pass < 100; pass += 1) {
+    const { count, density } = exact(mixtures, x);
+    const error = count - n;
+    if (Math.abs(error) < 1e-9) return x;
+    if (error > 0) low = x;
+    else high = x;
+    let next = density > 0 ? x + error / density : NaN;
+    if (!(next > low && next < high)) next = 0.5 * (low + high);
+    if (high - low < 1e-12 * (1 + Math.abs(x))) return next;
+    x = next;
+  }
+  return x;
+}
+
+function chancesAt(mixtures: readonly Mixture[], threshold: number, n: number): Float64Array {
+  const chance = new Float64Array(mixtures.length);
+  const tied = new Float64Array(mixtures.length);
+  let sum = 0;
+  let ties = 0;
+  mixtures.forEach((m, b) => {
+    let above = 0;
+    for (let i = m.from; i < m.to; i += 1) {
+      const s = m.sd[i]!;
+      const gap = m.mean[i]! - threshold;
+      if (s > 0) above += m.weight[i]! * normalCdf(gap / s);
+      else if (gap > AT) above += m.weight[i]!;
+      else if (gap > -AT) tied[b]! += m.weight[i]!;
+    }
+    // weights sum to 1 but for the last bit
+    chance[b] = Math.min(1, above);
+    sum += chance[b];
+    ties += tied[b]!;
+  });
+  if (ties > 0) {
+    const share = Math.min(1, Math.max(0, (n - sum) / ties));
+    for (let b = 0; b < chance.length; b += 1) chance[b]! += share * tied[b]!;
+  }
+  return chance;
+}

@@ -1,0 +1,75 @@
+/**
+ * Chances and rank bands by simulation, for portfolios too small for the closed form's fixed threshold. Draws are keyed by the
+ * building's id, so the order of rows changes nothing.
+ */
+import { normalQuantile } from '../numeric/normal.js';
+import { hashText, philox } from '../numeric/philox.js';
+import type { Mixture } from './mixture.js';
+
+export const SIMULATED_UNDER = 200;
+export const DRAWS = 20_000;
+
+export interface Simulated {
+  readonly chance: Float64Array;
+  readonly rankBest: Int32Array;
+  readonly rankWorst: Int32Array;
+}
+
+/** One draw of ln S from a mixture: one word picks the part, one the place in it. */
+function draw(m: Mixture, pick: number, place: number): number {
+  let left = (pick + 0.5) / 4294967296;
+  let i = m.from;
+  while (i < m.to - 1 && left > m.weight[i]!) {
+    left -= m.weight[i]!;
+    i += 1;
+  }
+  const s = m.sd[i]!;
+  return s > 0 ? m.mean[i]! + s * normalQuantile((place + 0.5) / 4294967296) : m.mean[i]!;
+}
+
+/** Simulates `DRAWS` rankings of a list of `listSize`. Ties within a draw are shared equally by mid-ranks. */
+export function simulate(
+  id: readonly string[],
+  mixtures: readonly Mixture[],
+  listSize: number,
+  seed: number,
+): Simulated {
+  const n = id.length;
+  const keys = id.map(hashText);
+  const chance = new Float64Array(n);
+  const ranks = Array.from({ length: n }, () => new Uint16Array(n + 1));
+  const words = new Uint32Array(4);
+  const score = new Float64Array(n);
+  const order = Array.from(id.keys());
+  for (let d = 0; d < DRAWS; d += 1) {
+    for (let i = 0; i < n; i += 1) {
+      philox(d, 0, keys[i]!, 0, seed, 0x5eed, words);
+      score[i] = draw(mixtures[i]!, words[0]!, words[1]!);
+    }
+    order.sort((a, b) => score[b]! - score[a]!);
+    for (let place = 0; place < n;) {
+      let end = place + 1;
+      while (end < n && score[order[end]!] === score[order[place]!]) end += 1;
+      const inside = Math.max(0, Math.min(end, listSize) - place) / (end - place);
+      const middle = Math.round((place + end + 1) / 2);
+      for (let k = place; k < end; k += 1) {
+        chance[order[k]!]! += inside;
+        ranks[order[k]!]![middle]! += 1;
+      }
+      place = end;
+    }
+  }
+  const quantile = (counts: Uint16Array, q: number): number => {
+    let seen = 0;
+    for (let r = 1; r <= n; r += 1) {
+      seen += counts[r]!;
+      if (seen >= q * DRAWS) return r;
+    }
+    return n;
+  };
+  return {
+    chance: chance.map((count) => count / DRAWS),
+    rankBest: Int32Array.from(ranks, (counts) => quantile(counts, 0.05)),
+    rankWorst: Int32Array.from(ranks, (counts) => quantile(counts, 0.95)),
+  };
+}

@@ -1,0 +1,71 @@
+/**
+ * The compiled form of every spectrum: contiguous half-open segments, each a short sum of powers of the period (over another such
+ * sum for the ratio shapes). S_a in g. What is compiled is data: it can be stored, drawn, integrated.
+ */
+import { power } from '../numeric/power.js';
+
+export interface Term {
+  readonly coefficient: number;
+  readonly exponent: number;
+}
+
+export interface Segment {
+  readonly from_s: number;
+  /** Infinity in the last segment. */
+  readonly to_s: number;
+  readonly terms: readonly Term[];
+  readonly over?: readonly Term[];
+  /** Which branch of the publication this is. */
+  readonly clause: string;
+  /** The branch as a display formula over the record's inputs (expression.ts). */
+  readonly expression: string;
+}
+
+export interface CompiledSpectrum {
+  readonly segments: readonly Segment[];
+  /** Start of the plateau: below it the ranking holds the plateau. */
+  readonly plateau_from_s: number;
+  /** End of the plateau (corner period T_c). */
+  readonly plateau_to_s: number;
+  /** Longest period the publication covers; beyond it the last branch is continued and flagged. */
+  readonly valid_to_s: number;
+}
+
+function sum(terms: readonly Term[], period_s: number): number {
+  let value = 0;
+  for (const { coefficient, exponent } of terms) {
+    if (exponent === 0) value += coefficient;
+    else if (exponent === -1) value += coefficient / period_s;
+    else if (exponent === 1) value += coefficient * period_s;
+    else if (exponent === -2) value += coefficient / (period_s * period_s);
+    else value += coefficient * power(period_s, exponent);
+  }
+  return value;
+}
+
+/** The segment that holds `period_s` (half-open: a corner belongs to the segment that starts there). @throws RangeError below 0. */
+export function segmentAt(spectrum: CompiledSpectrum, period_s: number): Segment {
+  if (!(period_s >= 0)) throw new RangeError(`a period of at least 0 s is needed, got ${String(period_s)}`);
+  const { segments } = spectrum;
+  let low = 0;
+  let high = segments.length - 1;
+  while (low < high) {
+    const middle = (low + high + 1) >> 1;
+    if (segments[middle]!.from_s <= period_s) low = middle;
+    else high = middle - 1;
+  }
+  return segments[low]!;
+}
+
+/** S_a (g) at `period_s`. @throws RangeError below 0. */
+export function ordinate(spectrum: CompiledSpectrum, period_s: number): number {
+  const segment = segmentAt(spectrum, period_s);
+  const top = sum(segment.terms, period_s);
+  return segment.over === undefined ? top : top / sum(segment.over, period_s);
+}
+
+/** Spectral displacement (m): S_d = S_a g (T/2π)². */
+export function displacement_m(spectrum: CompiledSpectrum, period_s: number): number {
+  const t = period_s / (2 * Math.PI);
+  return ordinate(spectrum, period_s) * 9.80665 * t * t;
+}

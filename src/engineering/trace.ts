@@ -1,0 +1,54 @@
+/** The steps of a hand calculation, noted by the code that computes. */
+import type { AnyRecord, Inputs } from './formula.js';
+
+export interface FormulaStep {
+  readonly kind: 'formula';
+  readonly record: AnyRecord;
+  readonly inputs: Inputs;
+  readonly value: number;
+}
+
+/** A choice between methods: what was taken, why, and what was turned down. */
+export interface ChoiceStep {
+  readonly kind: 'choice';
+  readonly question: string;
+  readonly taken: string;
+  readonly because: string;
+  readonly others: readonly { readonly what: string; readonly why: string }[];
+}
+
+/** A value that enters the calculation: given by the inventory, inferred, a default, a setting of the study. */
+export interface ValueStep {
+  readonly kind: 'value';
+  readonly name: string;
+  readonly value: number | string;
+  readonly origin: string;
+  readonly why: string;
+}
+
+export interface HeadingStep {
+  readonly kind: 'heading';
+  readonly text: string;
+}
+
+export type TraceStep = FormulaStep | ChoiceStep | ValueStep | HeadingStep;
+
+export class Trace {
+  readonly steps: TraceStep[] = [];
+
+  formula(record: AnyRecord, inputs: Inputs, value: number): void {
+    this.steps.push({ kind: 'formula', record, inputs, value });
+  }
+
+  choice(step: Omit<ChoiceStep, 'kind'>): void {
+    this.steps.push({ kind: 'choice', ...step });
+  }
+
+  value(name: string, value: number | string, origin: string, why: string): void {
+    this.steps.push({ kind: 'value', name, value, origin, why });
+  }
+
+  heading(text: string): void {
+    this.steps.push({ kind: 'heading', text });
+  }
+}

@@ -1,0 +1,97 @@
+/** Intake and data quality of a study's inventory, without keeping anything. */
+import type { AccountLine, AttributeCount, FindingCount } from '../engineering/page-contract.js';
+import { takeIn } from '../inventory/take-in.js';
+import type { TakenIn } from '../inventory/take-in.js';
+import { accountLines, attributeCounts, findingCounts } from '../screening/summarise.js';
+import { openDatabase } from '../store/database.js';
+import type { Database } from '../store/database.js';
+import { prepareSchema } from '../store/schema.js';
+import { loadStudy } from '../study/load.js';
+import type { LoadedStudy } from '../study/load.js';
+import { writeRejectsCsv } from './rejects.js';
+import { prepareFolder, writeSet } from './write-set.js';
+
+export interface CheckOptions {
+  /** Folder for rejects.csv; not written when left out. */
+  readonly output?: string | undefined;
+  readonly onProgress?: (progress: { readonly step: string; readonly share: number }) => void;
+  readonly onOpen?: (db: Database) => void;
+}
+
+export interface CheckedStudy {
+  readonly title: string;
+  readonly file: string;
+  readonly encoding: string;
+  readonly delimiter: string;
+  readonly rows_in: number;
+  readonly buildings: number;
+  readonly account: readonly AccountLine[];
+  readonly attributes: readonly AttributeCount[];
+  readonly findings: readonly FindingCount[];
+  readonly rejected: { readonly share: number; readonly limit: number; readonly over: boolean };
+  readonly files: readonly string[];
+}
+
+/** Nothing is ranked here: these two kinds only say what the intake found. */
+const TITLES: Readonly<Record<string, string>> = {
+  'merged-into-ranked': 'rows of buildings that can be assessed',
+  'merged-into-not-ranked': 'rows of buildings that lack what an assessment needs',
+};
+
+/** Share of rejected rows against the study's limit. */
+export function rejectedShare(
+  { study }: LoadedStudy,
+  { account, rowsIn }: Pick<TakenIn, 'account' | 'rowsIn'>,
+): CheckedStudy['rejected'] {
+  const share = rowsIn === 0 ? 0 : account.rejected / rowsIn;
+  const limit = study.inventory.rejects_limit;
+  return { share, limit, over: share > limit };
+}
+
+/**
+ * Takes the inventory of the study at `path` into memory and says what became of its rows and values; nothing is kept.
+ * @throws UserError for a fault in the study, the file, its header or the mapping.
+ * @example
+ * const { account, findings, rejected } = await checkStudy('study.yaml');
+ */
+export async function checkStudy(path: string, options: CheckOptions = {}): Promise<CheckedStudy> {
+  const loaded = await loadStudy(path);
+  const folder = options.output === undefined ? undefined : prepareFolder(options.output);
+  const db = await openDatabase({
+    path: ':memory:',
+    folders: [loaded.folder, ...(folder === undefined ? [] : [folder])],
+  });
+  try {
+    options.onOpen?.(db);
+    await prepareSchema(db);
+    const taken = await db.transaction(() =>
+      takeIn(db, loaded.study, loaded.folder, (step) => {
+        options.onProgress?.({ step, share: NaN });
+      }),
+    );
+    const { inventoryId } = taken;
+    const [source] = await db.rows<{ encoding: string; delimiter: string }>(
+      'SELECT encoding, delimiter FROM inventory WHERE inventory_id = ?',
+      [inventoryId],
+    );
+    const files =
+      folder === undefined
+        ? []
+        : await writeSet(folder, { 'rejects.csv': (to) => writeRejectsCsv(db, inventoryId, to) });
+    return {
+      title: loaded.study.title,
+      file: loaded.study.inventory.file,
+      encoding: source?.encoding ?? '',
+      delimiter: source?.delimiter ?? '',
+      rows_in: taken.rowsIn,
+      buildings: taken.buildings,
+      account: accountLines(taken.account).map((line) => ({ ...line, title: TITLES[line.kind] ?? line.title })),
+      attributes: attributeCounts(taken.attributes),
+      findings: await findingCounts(db, inventoryId),
+      rejected: rejectedShare(loaded, taken),
+      files,
+    };
+  } finally {
+    db.close();
+  }
+}

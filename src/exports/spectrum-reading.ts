@@ -1,0 +1,111 @@
+/** The spectra of a study, read at periods. */
+import { apply } from '../engineering/formula.js';
+import type { MethodRecord } from '../engineering/formula.js';
+import { SPECTRAL_DISPLACEMENT } from '../engineering/demand/records.js';
+import { segmentAt } from '../engineering/spectrum/compiled.js';
+import { compileSpectrum } from '../engineering/spectrum/definition.js';
+import { cite } from '../engineering/source.js';
+import { UserError, showValue } from '../errors.js';
+import type { LoadedStudy } from '../study/load.js';
+import { nearest } from '../study/nearest.js';
+
+export interface Ordinate {
+  readonly period_s: number;
+  readonly sa_g: number;
+  readonly sd_m: number;
+  /** The branch of the publication that was read. */
+  readonly clause: string;
+  /** True where the period is longer than the publication covers. */
+  readonly beyond: boolean;
+}
+
+export interface SpectrumSheet {
+  readonly name: string;
+  readonly code: string;
+  readonly method: string;
+  readonly title: string;
+  readonly source: string;
+  readonly verified: string;
+  /** As the study states them. */
+  readonly parameters: Readonly<Record<string, string | number | readonly number[]>>;
+  /** Where one branch ends and the next begins, s. */
+  readonly corners_s: readonly number[];
+  readonly plateau: { readonly from_s: number; readonly to_s: number; readonly sa_g: number };
+  /** Longest period the publication covers, s; null without a limit. */
+  readonly valid_to_s: number | null;
+  /** Titles of the levels that read it, with the site class or zone. */
+  readonly read_by: readonly string[];
+  readonly ordinates: readonly Ordinate[];
+}
+
+/** Periods read when none are asked for, s. */
+export const DEFAULT_PERIODS_S: readonly number[] = [0, 0.1, 0.2, 0.3, 0.5, 0.75, 1, 1.5, 2, 3, 4];
+
+/** Names of a study's spectra, in the order of the file. */
+export function spectrumNames({ study }: LoadedStudy): readonly string[] {
+  return Object.keys(study.hazard.spectra);
+}
+
+/**
+ * Spectrum `name` of a loaded study with its ordinates at `periods_s`.
+ * @throws UserError for an unknown name or a negative period.
+ * @example
+ * const { ordinates } = readSpectrum(await loadStudy('study.yaml'), 'design-c', [0.2, 1]);
+ */
+export function readSpectrum(
+  loaded: LoadedStudy,
+  name: string,
+  periods_s: readonly number[] = DEFAULT_PERIODS_S,
+): SpectrumSheet {
+  const entry = Object.hasOwn(loaded.study.hazard.spectra, name) ? loaded.study.hazard.spectra[name] : undefined;
+  if (entry === undefined) {
+    const names = spectrumNames(loaded);
+    const guess = nearest(name, names);
+    throw new UserError(
+      `unknown spectrum ${showValue(name)}${guess === undefined ? '' : ` (did you mean "${guess}"?)`}; in this study: ${names.join(', ')}`,
+      {
+        file: loaded.file,
+      },
+    );
+  }
+  const { record, inputs, compiled } = compileSpectrum(entry);
+  const read = (period_s: number): number => apply(record as MethodRecord, { ...inputs, period_s });
+  const ordinates = periods_s.map((period_s) => {
+    if (!(period_s >= 0 && period_s < Infinity))
+      throw new UserError(`a period of at least 0 s is needed, got ${String(period_s)}`);
+    const sa_g = read(period_s);
+    return {
+      period_s,
+      sa_g,
+      sd_m: apply(SPECTRAL_DISPLACEMENT, { sa_g, period_s }),
+      clause: segmentAt(compiled, period_s).clause,
+      beyond: period_s > compiled.valid_to_s,
+    };
+  });
+  const { code, ...parameters } = entry;
+  return {
+    name,
+    code,
+    method: record.id,
+    title: record.title,
+    source: cite(record.source),
+    verified: record.verified,
+    parameters,
+    corners_s: compiled.segments.slice(1).map(({ from_s }) => from_s),
+    plateau: { from_s: compiled.plateau_from_s, to_s: compiled.plateau_to_s, sa_g: read(compiled.plateau_from_s) },
+    valid_to_s: Number.isFinite(compiled.valid_to_s) ? compiled.valid_to_s : null,
+    read_by: readBy(loaded, name),
+    ordinates,
+  };
+}
+
+function readBy({ study }: LoadedStudy, name: string): readonly string[] {
+  return study.hazard.levels.flatMap((level) => {
+    if ('spectrum' in level) return level.spectrum === name ? [level.title] : [];
+    const keys = Object.entries(level.spectra)
+      .filter(([, spectrum]) => spectrum === name)
+      .map(([key]) => key);
+    const which = level.otherwise === name ? [...keys, 'otherwise'] : keys;
+    return which.length === 0 ? [] : [`${level.title}: ${level.by.replace('_', ' ')} ${which.join(', ')}`];
+  });
+}

@@ -1,0 +1,112 @@
+/** The checks over single buildings, as one pass over the columns. */
+import { CHECKS, HEIGHT_PER_STOREY, SMALLEST_PLATE_M2 } from './checks.js';
+import type { Check } from './checks.js';
+import type { BuildingNotes } from './findings.js';
+import type { Doubts } from './infer.js';
+import { medianOf } from './median.js';
+import type { Plans } from './plans.js';
+import type { Sizes } from './sizes.js';
+
+export interface Contradictions extends Doubts {
+  /** 1 where the year of retrofit cannot be. */
+  readonly retrofitDoubted: Uint8Array;
+  readonly column?: { readonly check: Check; readonly ratio: number };
+}
+
+/** Notes every contradiction, and blanks in `plans` the coordinates that cannot be. */
+export function findContradictions(sizes: Sizes, plans: Plans, notes: BuildingNotes): Contradictions {
+  const rows = sizes.rowCount;
+  const storeysDoubted = new Uint8Array(rows);
+  const heightContradicted = new Uint8Array(rows);
+  const retrofitDoubted = new Uint8Array(rows);
+  const { storeys_above: storeys, height_m: height, floor_area_m2: area } = sizes;
+  const number = (values: Float64Array | undefined, at: number): number => values?.[at] ?? NaN;
+
+  const ratio = new Float64Array(storeys === undefined || height === undefined ? 0 : rows);
+  for (let at = 0; at < ratio.length; at += 1) ratio[at] = number(height, at) / number(storeys, at);
+  const median = medianOf(ratio);
+  const usual = median >= 2.5 && median <= 5;
+
+  for (let at = 0; at < rows; at += 1) {
+    const row = sizes.first_row[at] ?? 0;
+    const n = number(storeys, at);
+    const perStorey = ratio[at] ?? NaN;
+    if (n >= 2 && (perStorey < HEIGHT_PER_STOREY.low || perStorey > HEIGHT_PER_STOREY.high)) {
+      heightContradicted[at] = 1;
+      const h = number(height, at);
+      const check = usual && perStorey >= 9 && perStorey <= 14 ? CHECKS.looksLikeFeet : CHECKS.heightStoreys;
+      notes.add(check, row, h, `${short(h)} m over ${short(n)} storeys is ${short(perStorey)} m per storey`);
+    }
+    const plate = number(area, at) / n;
+    if (n >= 2 && plate < SMALLEST_PLATE_M2) {
+      storeysDoubted[at] = 1;
+      notes.add(
+        CHECKS.plateSmall,
+        row,
+        n,
+        `${short(number(area, at))} m² over ${short(n)} storeys is ${short(plate)} m² per storey`,
+      );
+    } else if (plate > 1.3 * (plans.area_m2[at] ?? NaN)) {
+      const message = `${short(plate)} m² per storey over a plan of ${short(plans.area_m2[at] ?? NaN)} m²`;
+      notes.add(CHECKS.plateLarge, row, number(area, at), message);
+    }
+    const total = number(sizes.storeys_total, at);
+    const below = number(sizes.storeys_below, at);
+    if (Math.abs(n + below - total) > 1e-9) {
+      notes.add(
+        CHECKS.storeySum,
+        row,
+        total,
+        `${short(n)} above and ${short(below)} below, but ${short(total)} in all`,
+      );
+    }
+    const built = number(sizes.year_built, at);
+    const retrofitted = number(sizes.year_retrofitted, at);
+    if (retrofitted < built) {
+      retrofitDoubted[at] = 1;
+      notes.add(CHECKS.retrofitFirst, row, retrofitted, `retrofitted ${retrofitted}, built ${built}`);
+    }
+    const count = number(sizes.count, at);
+    if (count > 1) notes.add(CHECKS.campusRow, row, count, `the row stands for ${count} buildings`);
+  }
+  checkPlaces(sizes, plans, notes);
+  const check =
+    median >= 10 && median <= 13
+      ? CHECKS.columnInFeet
+      : median >= 0.7 && median <= 1.4
+        ? CHECKS.columnInMetres
+        : undefined;
+  return {
+    storeysDoubted,
+    heightContradicted,
+    retrofitDoubted,
+    ...(check === undefined ? {} : { column: { check, ratio: median } }),
+  };
+}
+
+function checkPlaces(sizes: Sizes, plans: Plans, notes: BuildingNotes): void {
+  const { lon, lat } = plans;
+  const middleLon = medianOf(lon);
+  const middleLat = medianOf(lat);
+  for (let at = 0; at < sizes.rowCount; at += 1) {
+    const x = lon[at] ?? NaN;
+    const y = lat[at] ?? NaN;
+    if (Number.isNaN(x) && Number.isNaN(y)) continue;
+    const near = Math.abs(x - middleLon) <= 2 && Math.abs(y - middleLat) <= 2;
+    if (near) continue;
+    // A swapped latitude may lie beyond 90 degrees: its cell is rejected, and only the longitude is left to tell.
+    const swapped = Math.abs(x - middleLat) <= 1 && !(Math.abs(y - middleLon) > 1);
+    const check = x === 0 && y === 0 ? CHECKS.zeroPlace : swapped ? CHECKS.swappedPlace : CHECKS.farPlace;
+    if (!Number.isNaN(y) || swapped) {
+      const message = `(${x}, ${y}) where the inventory lies about (${short(middleLon)}, ${short(middleLat)})`;
+      notes.add(check, sizes.first_row[at] ?? 0, x, message);
+    }
+    lon[at] = NaN;
+    lat[at] = NaN;
+  }
+}
+
+// Enough digits to see the contradiction.
+function short(value: number): string {
+  return String(Number(value.toPrecision(4)));
+}

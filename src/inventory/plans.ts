@@ -1,0 +1,51 @@
+import { readFootprint } from './footprint.js';
+import { TREATED_AS_UNKNOWN } from './cell.js';
+import type { BuildingNotes } from './findings.js';
+import type { Sizes } from './sizes.js';
+
+export interface Plans {
+  readonly length_m: Float64Array;
+  readonly width_m: Float64Array;
+  /** Of the footprint where there is one, else of the two sides. */
+  readonly area_m2: Float64Array;
+  readonly lon: Float64Array;
+  readonly lat: Float64Array;
+}
+
+const UNREADABLE = {
+  code: 'not-a-polygon',
+  column: 'footprint',
+  test: 'not a WKT POLYGON in degrees',
+  action: TREATED_AS_UNKNOWN,
+};
+
+/** Plan sides, plan area and place: as given, else from the footprint. */
+export function readPlans(sizes: Sizes, notes: BuildingNotes): Plans {
+  const rows = sizes.rowCount;
+  const take = (given: Float64Array | undefined): Float64Array => given?.slice() ?? new Float64Array(rows).fill(NaN);
+  const plans: Plans = {
+    length_m: take(sizes.plan_length_m),
+    width_m: take(sizes.plan_width_m),
+    area_m2: new Float64Array(rows),
+    lon: take(sizes.lon),
+    lat: take(sizes.lat),
+  };
+  const fill = (array: Float64Array, at: number, value: number): void => {
+    if (Number.isNaN(array[at])) array[at] = value;
+  };
+  for (let at = 0; at < rows; at += 1) {
+    const text = sizes.footprint?.[at] ?? null;
+    const found = text === null ? undefined : readFootprint(text);
+    if (found !== undefined) {
+      fill(plans.length_m, at, found.length_m);
+      fill(plans.width_m, at, found.width_m);
+      fill(plans.lon, at, found.lon);
+      fill(plans.lat, at, found.lat);
+    } else if (text !== null) {
+      const message = 'the footprint is not a polygon of longitudes and latitudes: POLYGON ((lon lat, lon lat, …))';
+      notes.add(UNREADABLE, sizes.first_row[at] ?? 0, text.slice(0, 200), message);
+    }
+    plans.area_m2[at] = found?.area_m2 ?? (plans.length_m[at] ?? NaN) * (plans.width_m[at] ?? NaN);
+  }
+  return plans;
+}

@@ -1,0 +1,161 @@
+/** Which of their columns is likely which of ours: by the words of the header, then by what the cells hold. */
+import { COLUMNS } from '../engineering/columns.js';
+import type { InventoryColumn } from '../engineering/columns.js';
+import { findUnit } from '../engineering/units.js';
+import type { Unit } from '../engineering/units.js';
+import { foldWord, readNumberCell } from './cell.js';
+import { medianOf } from './median.js';
+
+export interface ProposedColumn {
+  readonly ours: string;
+  readonly theirs: string;
+  readonly unit?: string;
+  /** What only the owner of the table can answer. */
+  readonly question?: string;
+}
+
+export interface Proposal {
+  readonly columns: readonly ProposedColumn[];
+  /** Questions about the table as a whole. */
+  readonly questions: readonly string[];
+  /** Their columns that found no place. */
+  readonly unused: readonly string[];
+}
+
+interface HeaderWords {
+  readonly words: string;
+  readonly unit: Unit | undefined;
+}
+
+/** `Height (ft)`, `height_ft`, `BldgHeight` → words and unit. */
+function readHeaderName(name: string): HeaderWords {
+  const bracket = /[([]([^)\]]+)[)\]]/.exec(name);
+  const spaced = name
+    .replace(/[([][^)\]]*[)\]]/, ' ')
+    .replaceAll(/(\p{Ll})(\p{Lu})/gu, '$1 $2')
+    .replaceAll(/[_./-]+/g, ' ');
+  const words = foldWord(spaced);
+  const inBracket = bracket?.[1] === undefined ? undefined : findUnit(bracket[1]);
+  const last = /^(.+) (ft2|ft|feet|sq ?ft|sqft|sf|m2|sqm|sq m|m|metres?|meters?|kn|kip|s|g)$/.exec(words);
+  if (inBracket !== undefined || last === null) return { words, unit: inBracket };
+  return { words: last[1] ?? words, unit: findUnit(last[2] ?? '') };
+}
+
+function score(column: InventoryColumn, { words, unit }: HeaderWords): number {
+  if (unit !== undefined && unit.dimension !== column.dimension) return 0;
+  const joined = words.replaceAll(' ', '');
+  let best = 0;
+  for (const hint of [...column.hints, column.title.toLowerCase(), foldWord(column.name.replaceAll('_', ' '))]) {
+    if (words === hint || joined === hint.replaceAll(' ', '')) best = Math.max(best, 100 + hint.length);
+    else if (hint.length > 2 && ` ${words} `.includes(` ${hint} `)) best = Math.max(best, 40 + hint.length);
+    else if (hint.length > 4 && joined.includes(hint.replaceAll(' ', ''))) best = Math.max(best, 20 + hint.length);
+  }
+  return best;
+}
+
+/** Pairs columns by the best score, each used once; `rows` are sample rows in the order of the header. */
+export function proposeMapping(header: readonly string[], rows: readonly (readonly string[])[]): Proposal {
+  const names = header.map(readHeaderName);
+  const pairs = COLUMNS.flatMap((column) =>
+    names.map((name, position) => ({ column, position, score: header[position] === '' ? 0 : score(column, name) })),
+  ).filter((pair) => pair.score > 0);
+  pairs.sort((a, b) => b.score - a.score || a.position - b.position);
+  const chosen = new Map<InventoryColumn, number>();
+  const taken = new Set<number>();
+  for (const { column, position } of pairs) {
+    if (chosen.has(column) || taken.has(position)) continue;
+    const fits = isNumber(column) ? shareOfNumbers(rows, position, column) >= 0.5 : true;
+    if (!fits) continue;
+    chosen.set(column, position);
+    taken.add(position);
+  }
+  const numbersOf = (name: string): Float64Array | undefined => {
+    const column = COLUMNS.find((one) => one.name === name);
+    const position = column === undefined ? undefined : chosen.get(column);
+    return column === undefined || position === undefined
+      ? undefined
+      : Float64Array.from(rows, (row) => bareNumber(row[position] ?? '', column));
+  };
+  const columns = COLUMNS.flatMap((column): ProposedColumn[] => {
+    const position = chosen.get(column);
+    const theirs = position === undefined ? undefined : header[position];
+    if (position === undefined || theirs === undefined) return [];
+    return [{ ours: column.name, theirs, ...unitOf(column, names[position]?.unit, numbersOf) }];
+  });
+  return {
+    columns,
+    questions: questionsOf(columns, rows, header),
+    unused: header.filter((name, at) => name !== '' && !taken.has(at)),
+  };
+}
+
+function isNumber({ kind }: InventoryColumn): boolean {
+  return kind === 'number' || kind === 'whole' || kind === 'year';
+}
+
+function bareNumber(text: string, column: InventoryColumn): number {
+  return readNumberCell(text, { ...column, kind: 'number', limits: [-Infinity, Infinity] }, { decimal: '.' }).value;
+}
+
+function shareOfNumbers(rows: readonly (readonly string[])[], position: number, column: InventoryColumn): number {
+  const filled = rows.map((row) => row[position]?.trim() ?? '').filter((cell) => cell !== '');
+  if (filled.length === 0) return 1;
+  const unit = column.unit === undefined ? undefined : findUnit(column.unit);
+  const format = { decimal: '.', unit, stored: unit };
+  const open = { ...column, limits: [-Infinity, Infinity] as const };
+  return (
+    filled.filter((cell) => readNumberCell(cell, open, format).note?.kind !== 'rejected-cell').length / filled.length
+  );
+}
+
+function unitOf(
+  column: InventoryColumn,
+  inHeader: Unit | undefined,
+  numbersOf: (name: string) => Float64Array | undefined,
+): { unit?: string; question?: string } {
+  if (column.unit === undefined) return {};
+  if (inHeader !== undefined) return { unit: inHeader.id };
+  if (column.name === 'height_m') {
+    const height = numbersOf('height_m');
+    const storeys = numbersOf('storeys_above');
+    const ratio =
+      height === undefined || storeys === undefined ? NaN : medianOf(height.map((h, at) => h / (storeys[at] ?? NaN)));
+    const shown = Number(ratio.toPrecision(3));
+    if (ratio >= 9 && ratio <= 14)
+      return { unit: 'ft', question: `feet, by the data: the median height per storey is ${shown}. Is it?` };
+    if (ratio >= 2.3 && ratio <= 5)
+      return { unit: 'm', question: `metres, by the data: the median height per storey is ${shown}. Is it?` };
+  }
+  const others = column.dimension === 'area' ? 'm2 or ft2' : column.dimension === 'length' ? 'm or ft' : 'another';
+  return { unit: column.unit, question: `the header names no unit; ${others}?` };
+}
+
+function questionsOf(
+  columns: readonly ProposedColumn[],
+  rows: readonly (readonly string[])[],
+  header: readonly string[],
+): string[] {
+  const questions: string[] = [];
+  const id = columns.find(({ ours }) => ours === 'id');
+  if (id === undefined) questions.push('no column looks like an identifier; which one names a building?');
+  else {
+    const position = header.indexOf(id.theirs);
+    const ids = rows.map((row) => row[position]?.trim() ?? '').filter((cell) => cell !== '');
+    const repeated = ids.length - new Set(ids).size;
+    if (repeated > 0.01 * ids.length) {
+      questions.push(
+        `${repeated} of ${ids.length} sampled rows repeat an earlier ${id.theirs}; are they parts of one building? Then set merge_rows_by`,
+      );
+    }
+  }
+  for (const [ours, what] of [
+    ['storeys_above', 'storeys'],
+    ['year_built', 'year of construction'],
+    ['use', 'use'],
+    ['system', 'lateral system'],
+  ] as const) {
+    if (!columns.some((column) => column.ours === ours))
+      questions.push(`no column looks like the ${what}; is there one?`);
+  }
+  return questions;
+}

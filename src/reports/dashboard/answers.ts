@@ -1,0 +1,114 @@
+/** Sentences computed from the data, shared by page and summary. */
+import { formatCount, formatShare } from '../../engineering/format.js';
+import type { AttributeCount, PageData } from '../../engineering/page-contract.js';
+import { SURE } from '../../screening/summarise.js';
+import { counted, listLength } from './reading.js';
+
+export const LEVEL_OF_WORK = 'Desk screening: no building was visited, no drawings were read.';
+
+const ORDER_OF: Readonly<Record<string, string>> = {
+  people: 'how often shaking is expected to exceed what the building can take, times the people inside',
+  ratio: 'how often shaking is expected to exceed what the building can take',
+  demand: 'the acceleration that the building’s own period draws from the design spectrum',
+};
+
+/** What the order means, in words. */
+export function orderSentence({ summary }: PageData): string {
+  return `Buildings are ordered by ${ORDER_OF[summary.rank_by] ?? summary.rank_by}.`;
+}
+
+/** What the run says, in one or two sentences a council understands. */
+export function answerSentence(data: PageData): string {
+  const { summary } = data;
+  const places = listLength(data);
+  if (places === 0) return 'No building could be ranked, so there is no list; the reasons stand with each building.';
+  if (summary.ranked <= summary.list_size) {
+    return `All ${formatCount(summary.ranked)} ranked buildings fit the list of ${formatCount(summary.list_size)}, so the list decides nothing yet; the order within it still tells where to begin.`;
+  }
+  const wrong = Math.round(summary.expected_wrong_places);
+  const wrongly =
+    summary.expected_wrong_places < 0.5
+      ? 'fewer than one is expected to be wrong'
+      : `about ${formatCount(wrong)} ${wrong === 1 ? 'is' : 'are'} expected to be wrong`;
+  const sure = summary.sure_places === 0 ? 'none is sure' : `${formatCount(summary.sure_places)} ${summary.sure_places === 1 ? 'is' : 'are'} sure`;
+  return `Of the ${formatCount(places)} buildings listed, out of ${formatCount(summary.ranked)} ranked, ${sure} and ${wrongly}${unknownClause(summary.attributes)}.`;
+}
+
+function unknownClause(attributes: readonly AttributeCount[]): string {
+  const system = attributes.find(({ attribute }) => attribute === 'system');
+  if (system === undefined) return '';
+  const share = shareNotGiven(system);
+  if (share === 0) return '; the lateral system of every building is on record';
+  return `; for ${formatShare(share)} of the buildings the lateral system is not on record`;
+}
+
+/** What every building needs before it can be placed well. */
+const NEEDED: ReadonlySet<string> = new Set([
+  'storeys_above',
+  'height_m',
+  'floor_area_m2',
+  'year_built',
+  'system',
+  'use',
+  'occupants_peak',
+  'occupied_hours_per_week',
+  'site_class',
+  'hazard_zone',
+]);
+
+/** Evidence that sharpens a place where it exists. */
+const EVIDENCE: ReadonlySet<string> = new Set([
+  'soft_storey',
+  'torsion',
+  'measured_period_longitudinal_s',
+  'storey_stiffness_longitudinal_kN_per_m',
+  'design_base_shear_coefficient',
+  'capacity_sa_g',
+]);
+
+/** The attributes worth a bar, those that every building needs first; all when the inventory has none of them. */
+export function decisiveAttributes({ attributes }: PageData['summary']): readonly AttributeCount[] {
+  const known = attributes.filter((attribute) => attributeTotal(attribute) > attribute.unknown || attribute.attribute === 'system');
+  const of = (names: ReadonlySet<string>): readonly AttributeCount[] => known.filter(({ attribute }) => names.has(attribute));
+  const needed = of(NEEDED);
+  return needed.length === 0 ? known : [...needed, ...of(EVIDENCE)];
+}
+
+/** True for what every building needs. */
+export function isNeeded({ attribute }: AttributeCount): boolean {
+  return NEEDED.has(attribute);
+}
+
+/** Buildings counted for an attribute. */
+export function attributeTotal({ given, inferred, unknown, ...rest }: AttributeCount): number {
+  return given + inferred + rest.default + unknown;
+}
+
+/** Share of the buildings whose value does not come from the inventory; 0 when there are none. */
+export function shareNotGiven(attribute: AttributeCount): number {
+  const total = attributeTotal(attribute);
+  return total === 0 ? 0 : 1 - attribute.given / total;
+}
+
+/** What "sure" and "wrong" mean, the edge of the list and the weak types, one sentence each. */
+export function answerNotes({ summary }: PageData): readonly string[] {
+  const { tie_group_at_edge: edge } = summary;
+  const notes = [
+    `“Sure” is a chance of at least ${formatShare(SURE)} that the building truly belongs to the list; “wrong” is a place that better knowledge would give to another building.`,
+  ];
+  if (edge.to > edge.from) {
+    notes.push(`Ranks ${formatCount(edge.from)} to ${formatCount(edge.to)} lie across the edge of the list and cannot be told apart.`);
+  }
+  const weak = summary.weak_in_list + summary.weak_outside;
+  if (weak > 0) {
+    notes.push(
+      `${counted(weak, 'building is', 'buildings are')} of a structural type known to be weak, for certain or as likely as not: ${formatCount(summary.weak_in_list)} in the list and ${formatCount(summary.weak_outside)} outside it.`,
+    );
+  }
+  if (summary.largest_equal_block > 1) {
+    notes.push(
+      `The largest block of equal priorities holds ${formatCount(summary.largest_equal_block)} buildings: what is on record does not distinguish them.`,
+    );
+  }
+  return notes;
+}

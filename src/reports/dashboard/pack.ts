@@ -1,0 +1,60 @@
+/**
+ * Columns made small for the page: a constant once, repeated values as a dictionary with places, the rest as they are.
+ * Unknown numbers travel as null. The page's unpack.ts is the other half; a test sends data through both.
+ */
+import { BUILDING_NUMBERS, BUILDING_WORDS } from '../../engineering/building-columns.js';
+import type { PageData } from '../../engineering/page-contract.js';
+import { RESULT_COLUMNS } from '../../engineering/results.js';
+
+type Cell = number | string | null;
+
+/** `[0, n, value]`: one value n times; `[1, values, places]`: a dictionary; `[2, values]`: as they are. */
+export type Packed = readonly [0, number, Cell] | readonly [1, readonly Cell[], readonly number[]] | readonly [2, readonly Cell[]];
+
+/** Numbers the page recomputes or compares travel to the last bit; the rest to six significant digits. */
+const EXACT: ReadonlySet<string> = new Set(['ln_priority', 'ln_priority_sd']);
+
+/** `values` in the shortest of the three forms. */
+export function packColumn(values: ArrayLike<Cell>, digits?: number): Packed {
+  const cells = Array.from(values, (value) => {
+    if (typeof value !== 'number') return value;
+    if (!Number.isFinite(value)) return null;
+    return digits === undefined ? value : Number(value.toPrecision(digits));
+  });
+  const distinct = [...new Set(cells)];
+  const [only] = distinct;
+  if (distinct.length === 1 && only !== undefined) return [0, cells.length, only];
+  if (distinct.length > cells.length / 3 || distinct.length > 5000) return [2, cells];
+  const place = new Map(distinct.map((value, i) => [value, i]));
+  return [1, distinct, cells.map((value) => place.get(value) ?? 0)];
+}
+
+/** Page data with every column packed. */
+export function packPage(data: PageData): unknown {
+  const { buildings } = data;
+  const { inputs } = buildings;
+  return {
+    ...data,
+    buildings: {
+      shown: buildings.shown,
+      all: buildings.all,
+      pools: buildings.pools,
+      inputs: {
+        id: packColumn(inputs.id),
+        numbers: Object.fromEntries(BUILDING_NUMBERS.map((name) => [name, packColumn(inputs.numbers[name])])),
+        words: Object.fromEntries(BUILDING_WORDS.map((name) => [name, packColumn(inputs.words[name])])),
+      },
+      name: packColumn(buildings.name),
+      group: packColumn(buildings.group),
+      part_of: packColumn(buildings.part_of),
+      heritage: packColumn(buildings.heritage),
+      first_row: packColumn(buildings.first_row),
+      results: Object.fromEntries(
+        RESULT_COLUMNS.map(({ name, kind }) => [
+          name,
+          packColumn(buildings.results[name] ?? [], kind === 'number' && !EXACT.has(name) ? 6 : undefined),
+        ]),
+      ),
+    },
+  };
+}

@@ -1,0 +1,47 @@
+/** The head of the page: what this is, the answer, the cautions, the contents. */
+import { h } from 'preact';
+import type { ComponentChild } from 'preact';
+import { formatCount } from '../../../engineering/format.js';
+import type { PageData } from '../../../engineering/page-contract.js';
+import { madeAt } from '../../made-at.js';
+import { answerNotes, answerSentence, LEVEL_OF_WORK, orderSentence } from '../answers.js';
+
+const CONTENTS: readonly (readonly [string, string])[] = [
+  ['list', 'The list'],
+  ['periods', 'Spectrum and periods'],
+  ['places', 'Map'],
+  ['origins', 'Where the numbers came from'],
+  ['all', 'All buildings'],
+  ['inventory', 'State of the inventory'],
+  ['assumptions', 'Assumptions'],
+  ['cautions', 'Cautions'],
+];
+
+export function Top({ data }: { readonly data: PageData }): ComponentChild {
+  const { summary } = data;
+  return h(
+    'header',
+    { class: 'top' },
+    h('p', { class: 'kicker' }, 'Which buildings should be assessed in detail first'),
+    h('h1', null, summary.title),
+    h(
+      'p',
+      { class: 'quiet' },
+      `${LEVEL_OF_WORK} Run ${summary.run}, made ${madeAt(summary.made)}; ${formatCount(summary.buildings)} buildings from ${formatCount(summary.rows_in)} rows.`,
+    ),
+    h('p', { class: 'answer' }, answerSentence(data)),
+    h(
+      'div',
+      { class: 'two' },
+      h('div', null, [orderSentence(data), ...answerNotes(data)].map((note) => h('p', null, note))),
+      h(
+        'aside',
+        { class: 'careful', 'aria-labelledby': 'careful-title' },
+        h('h2', { id: 'careful-title' }, 'Before you use this'),
+        h('ul', null, summary.cautions.slice(0, 4).map((caution) => h('li', null, caution))),
+        h('p', { class: 'quiet' }, h('a', { href: '#cautions' }, 'All cautions')),
+      ),
+    ),
+    h('nav', { class: 'contents', 'aria-label': 'Contents' }, h('ul', null, CONTENTS.map(([id, title]) => h('li', null, h('a', { href: `#${id}` }, title))))),
+  );
+}

@@ -1,0 +1,89 @@
+/** The summary: one page of Markdown that a council can read. */
+import { formatCount, formatNumber, formatShare } from '../engineering/format.js';
+import type { PageData } from '../engineering/page-contract.js';
+import { answerNotes, answerSentence, attributeTotal, decisiveAttributes, LEVEL_OF_WORK, orderSentence } from './dashboard/answers.js';
+import { governingPeriod, listLength, numberAt } from './dashboard/reading.js';
+import { middleSentence, reasonTeller } from './dashboard/reasons.js';
+import { madeAt } from './made-at.js';
+import { markdownTable, markdownText } from './markdown.js';
+
+/** Longest list printed in full; the rest stands in ranking.csv. */
+const MOST_PLACES = 60;
+
+/** The summary of a run as Markdown; every text of the inventory is made harmless. */
+export function renderSummary(data: PageData): string {
+  const { summary } = data;
+  const parts = [
+    `# ${markdownText(summary.title)}: which buildings should be assessed in detail first`,
+    `${LEVEL_OF_WORK} Run ${markdownText(summary.run)}, made ${markdownText(madeAt(summary.made))} with ${markdownText(summary.program)}.`,
+    `**${answerSentence(data)}**`,
+    orderSentence(data),
+    ...answerNotes(data),
+    '## The list',
+    listPart(data),
+    '## Where the rows went',
+    markdownTable(['Rows', 'Number'], [...summary.account.map(({ title, rows }) => [markdownText(title), formatCount(rows)]), ['All rows read', formatCount(summary.rows_in)]], [1]),
+    '## Where the numbers came from',
+    markdownTable(
+      ['Attribute', 'Given', 'Inferred', 'Default', 'Unknown', 'Given, share'],
+      decisiveAttributes(summary).map((attribute) => [
+        markdownText(attribute.title),
+        formatCount(attribute.given),
+        formatCount(attribute.inferred),
+        formatCount(attribute.default),
+        formatCount(attribute.unknown),
+        formatShare(attribute.given / attributeTotal(attribute)),
+      ]),
+      [1, 2, 3, 4, 5],
+    ),
+    `Largest block of equal priorities: ${formatCount(summary.largest_equal_block)} ${summary.largest_equal_block === 1 ? 'building, so no two share one' : 'buildings'}.`,
+    ...slopesPart(data),
+    '## Assumptions',
+    markdownTable(
+      ['Assumption', 'Value', 'Rests on'],
+      summary.assumptions.map(({ statement, value, source }) => [statement, value, source].map(markdownText)),
+    ),
+    '## Cautions',
+    [LEVEL_OF_WORK, ...summary.cautions].map((caution) => `- ${markdownText(caution)}`).join('\n'),
+    `Fingerprints: study ${markdownText(summary.fingerprints.study)}, inventory ${markdownText(summary.fingerprints.inventory)}, methods ${markdownText(summary.fingerprints.methods)}.`,
+  ];
+  return `${parts.join('\n\n')}\n`;
+}
+
+function listPart(data: PageData): string {
+  const places = listLength(data);
+  if (places === 0) return 'No building could be ranked.';
+  const shown = Math.min(places, MOST_PLACES);
+  const reason = reasonTeller(data);
+  const { buildings } = data;
+  const rows = Array.from({ length: shown }, (_, i) => {
+    const whole = (column: string): string => formatCount(numberAt(data, column, i));
+    return [
+      whole('rank'),
+      markdownText(buildings.inputs.id[i] ?? ''),
+      markdownText(buildings.name[i] ?? ''),
+      markdownText(buildings.group[i] ?? ''),
+      formatShare(numberAt(data, 'chance', i)),
+      `${whole('rank_best')} to ${whole('rank_worst')}`,
+      whole('tie_group'),
+      whole('demand_rank'),
+      formatNumber(governingPeriod(data, i), 3),
+      formatNumber(numberAt(data, 'sa_g', i), 3),
+      formatNumber(numberAt(data, 'capacity_g', i), 2),
+      reason(i),
+    ];
+  });
+  const head = ['Rank', 'Id', 'Name', 'Block', 'Chance', 'Band of rank', 'Tie group', 'Rank by demand', 'T (s)', 'S_a (g)', 'Capacity (g)', 'Main reason'];
+  const notes = [
+    'Chance: that the building truly belongs to the list. Band: where its true rank lies, 5 to 95 %. T: median period in the governing direction. S_a and capacity: of the most likely case.',
+    middleSentence(data),
+    ...(shown < places ? [`The first ${formatCount(shown)} of ${formatCount(places)} places; all of them stand in ranking.csv.`] : []),
+  ];
+  return [markdownTable(head.map(markdownText), rows, [0, 4, 5, 6, 7, 8, 9, 10]), ...notes.map((note) => note.replaceAll('_', '\\_'))].join('\n\n');
+}
+
+function slopesPart({ summary }: PageData): readonly string[] {
+  if (summary.slopes.length === 0) return [];
+  const slopes = summary.slopes.map(({ spectrum, k, how }) => `${markdownText(spectrum)} ${formatNumber(k, 3)} (${markdownText(how)})`);
+  return [`Slope k of the hazard curve: ${slopes.join('; ')}.`];
+}

@@ -1,0 +1,83 @@
+/** A study's kept runs, opened for reading. */
+import { existsSync } from 'node:fs';
+import type { Display } from '../engineering/format.js';
+import type { PageData } from '../engineering/page-contract.js';
+import { UserError } from '../errors.js';
+import { explainBuilding } from '../screening/explain.js';
+import type { Explanation } from '../screening/explain.js';
+import { pageDataOf } from '../screening/page-data.js';
+import { databasePath, openStudyDatabase } from '../screening/screen.js';
+import type { Database } from '../store/database.js';
+import { loadStudy } from '../study/load.js';
+import type { LoadedStudy } from '../study/load.js';
+import { latestRun, listRuns, runById } from './history.js';
+import type { RunEntry } from './history.js';
+
+/** Which run is meant; the newest when left out. Units of what is shown; SI when left out. */
+export interface RunChoice {
+  readonly run?: number | undefined;
+  readonly units?: Display;
+}
+
+/**
+ * Opens the database of the study at `path` for reading while `work` runs.
+ * @throws UserError when there is none yet.
+ * @example
+ * const count = await withStudyDatabase('study.yaml', async (db) => (await listRuns(db)).length);
+ */
+export async function withStudyDatabase<T>(
+  path: string,
+  work: (db: Database, loaded: LoadedStudy) => Promise<T>,
+  folders: readonly string[] = [],
+): Promise<T> {
+  const loaded = await loadStudy(path);
+  const file = databasePath(loaded);
+  if (!existsSync(file)) throw new UserError('this study has no run yet; run `swaymark screen` first', { file });
+  const db = await openStudyDatabase(loaded, true, folders);
+  try {
+    return await work(db, loaded);
+  } finally {
+    db.close();
+  }
+}
+
+/** The chosen run of an open database. @throws UserError when there is none. */
+export async function chosenRun(db: Database, { run }: RunChoice): Promise<RunEntry> {
+  return run === undefined ? latestRun(db) : runById(db, run);
+}
+
+/**
+ * The runs of the study at `path`, oldest first.
+ * @throws UserError when the study cannot be read or has no database yet.
+ * @example
+ * for (const { run, made, note } of await listStudyRuns('study.yaml')) report(run, made, note);
+ */
+export async function listStudyRuns(path: string): Promise<readonly RunEntry[]> {
+  return withStudyDatabase(path, listRuns);
+}
+
+/**
+ * The hand calculation of building `id` in a run of the study at `path`: stored inputs through the same code, equal to the stored result to the last bit.
+ * @throws UserError for a study without runs, an unknown run or building.
+ * @example
+ * const { steps, stored } = await explain('study.yaml', 'BH-012', { units: 'us' });
+ */
+export async function explain(path: string, id: string, options: RunChoice = {}): Promise<Explanation> {
+  return withStudyDatabase(path, async (db) => {
+    const { run } = await chosenRun(db, options);
+    return explainBuilding(db, run, id, options.units ?? 'si');
+  });
+}
+
+/**
+ * What the reports of a run of the study at `path` show: summary, settings, and the buildings in rank order by column.
+ * @throws UserError for a study without runs or an unknown run.
+ * @example
+ * const html = renderDashboard(await pageDataOfStudy('study.yaml'), readPageScript());
+ */
+export async function pageDataOfStudy(path: string, options: RunChoice = {}): Promise<PageData> {
+  return withStudyDatabase(path, async (db) => {
+    const { run } = await chosenRun(db, options);
+    return pageDataOf(db, run, options.units ?? 'si');
+  });
+}

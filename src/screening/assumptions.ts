@@ -1,0 +1,150 @@
+/** The assumptions register and the cautions that every report carries. */
+import type { AssessSettings } from '../engineering/assess/settings.js';
+import { standardRead } from '../engineering/period/choose.js';
+import type { Assumption } from '../engineering/page-contract.js';
+import type { SlopeFound } from './slopes.js';
+
+const JUDGEMENT = 'judgement';
+
+/** What a run assumed, each with its value and source. */
+export function assumptionsOf(settings: AssessSettings, slopes: readonly SlopeFound[]): readonly Assumption[] {
+  const { spreads, period, codeHistory } = settings;
+  const read = standardRead(period.standard, period.basis);
+  const list: Assumption[] = [
+    {
+      id: 'period-standard',
+      statement: 'Height formulas read',
+      value: `${read} (asked: ${period.standard}, ${period.basis})`,
+      source: 'study',
+    },
+    {
+      id: 'period-bias',
+      statement: 'Known bias: walls by code formula run long, essential buildings short; not corrected',
+      value: 'none',
+      source: 'published comparisons, restated',
+    },
+    {
+      id: 'period-spread',
+      statement: 'Method error of a height formula, σ of ln T',
+      value: String(spreads.heightFormula),
+      source: JUDGEMENT,
+    },
+    {
+      id: 'period-one-error',
+      statement: 'One error of the period for both directions of a building',
+      value: 'shared',
+      source: JUDGEMENT,
+    },
+    {
+      id: 'stiffness-spread',
+      statement: 'Method error of a period from given storey stiffness, σ of ln T',
+      value: String(spreads.storeyStiffness),
+      source: JUDGEMENT,
+    },
+    {
+      id: 'amplitude',
+      statement: 'Ambient and forced periods lengthened before they read the spectrum',
+      value: '× 1.3; infilled frames and unreinforced masonry × 1.5',
+      source: 'judgement within published ratios',
+    },
+    {
+      id: 'hold-plateau',
+      statement: 'Below the start of the plateau S_a is held at the plateau',
+      value: settings.holdPlateau ? 'yes' : 'no',
+      source: settings.holdPlateau ? 'several codes; judgement' : 'study',
+    },
+    {
+      id: 'slope',
+      statement: 'Slope k of the hazard curve',
+      value: slopes.map(({ spectrum, k }) => `${spectrum} ${k.toFixed(2)}`).join(', '),
+      source: settings.slopeSource,
+    },
+    {
+      id: 'code-history',
+      statement: 'Code history of the place',
+      value:
+        codeHistory === null
+          ? 'none: no seismic design assumed'
+          : `${codeHistory.place}, enforced from ${String(codeHistory.seismic_design_enforced_from)}`,
+      source: 'study',
+    },
+    {
+      id: 'adoption-lag',
+      statement: 'Years from an edition to the buildings designed to it',
+      value: codeHistory === null ? 'none' : String(codeHistory.adoption_lag_years),
+      source: 'study, default 2 [judgement]',
+    },
+    {
+      id: 'edition-change',
+      statement: 'Within this many years of a change both editions count',
+      value: String(spreads.editionChange_years),
+      source: JUDGEMENT,
+    },
+    {
+      id: 'reductions',
+      statement: 'K, R_w and R of the editions by system',
+      value: 'register capacity/systems',
+      source: 'from memory of the editions',
+    },
+    { id: 'floor', statement: 'Least strength coefficient', value: '0.04', source: JUDGEMENT },
+    {
+      id: 'overstrength',
+      statement: 'Overstrength Ω, and σ of its logarithm',
+      value: `2.0; ${String(spreads.overstrength)}`,
+      source: JUDGEMENT,
+    },
+    {
+      id: 'ductility',
+      statement: 'Ductility by detailing class: none, before, after, special',
+      value: '1.5 or 2.0; 2.0; 3.0; 4.0',
+      source: JUDGEMENT,
+    },
+    {
+      id: 'era-spread',
+      statement: 'Spread of the era table and of the building within its era, σ',
+      value: `${String(spreads.eraTable)} and ${String(spreads.era)}`,
+      source: JUDGEMENT,
+    },
+    {
+      id: 'shared-spread',
+      statement: "Errors shared by a class or zone are counted as each building's own",
+      value: 'yes',
+      source: 'simplification: chances of single buildings are hardly affected',
+    },
+    {
+      id: 'irregularity',
+      statement: 'Irregularities given as yes multiply capacity',
+      value: 'soft or weak storey 0.7, torsion 0.8, others 0.9 each; blank counts as none',
+      source: JUDGEMENT,
+    },
+    {
+      id: 'system-prior',
+      statement: 'Chances of the lateral system where it is not known',
+      value:
+        settings.systemPrior === null
+          ? 'none named'
+          : `${String(settings.systemPrior.length)} groups by use, storeys and year`,
+      source: 'study',
+    },
+    {
+      id: 'people',
+      statement: 'People from floor area, density and hours of use; σ of ln E',
+      value: `${String(spreads.peopleKnownUse)}, ${String(spreads.peopleUnknownUse)} with the use unknown, ${String(spreads.peopleCounted)} when counted`,
+      source: 'densities from memory, hours and spreads judgement',
+    },
+    { id: 'rank-by', statement: 'What is ranked', value: settings.rankBy, source: 'study' },
+  ];
+  return list;
+}
+
+export const CAUTIONS: readonly string[] = [
+  'Desk screening: no visit was made and no drawings were read.',
+  'This is an order for further assessment, not a statement on the safety of any building.',
+  'A low rank is not clearance.',
+  'Ranks inside a tie group are not distinguishable.',
+  'Shaking only: liquefaction, landslide, fault rupture, tsunami, fire and non-structural damage are not considered.',
+  'Periods come from simplified formulas and may be off by a third or more; capacity is inferred mostly from the code of the era, not from the structure.',
+  'Results hold for the inventory as supplied; inferred and defaulted values are marked.',
+  'Not for decisions on occupancy, insurance, lending or valuation.',
+  'Local codes govern, and a licensed engineer must review before anything is acted on.',
+];

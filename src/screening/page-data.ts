@@ -1,0 +1,111 @@
+/** What the reports draw: a run out of the database as PageData. */
+import { BUILDING_NUMBERS, BUILDING_WORDS } from '../engineering/building-columns.js';
+import type { BuildingColumns } from '../engineering/building-columns.js';
+import type { Display } from '../engineering/format.js';
+import type { AssessSettings } from '../engineering/assess/settings.js';
+import type { PageData } from '../engineering/page-contract.js';
+import { RESULT_COLUMNS } from '../engineering/results.js';
+import { UserError } from '../errors.js';
+import type { Database } from '../store/database.js';
+import { quoteName } from '../store/sql.js';
+import type { ColumnKind } from '../store/vectors.js';
+import { CAUTIONS } from './assumptions.js';
+import { readPools } from './read-buildings.js';
+import { findingCounts } from './summarise.js';
+import type { StoredSummary } from './summarise.js';
+
+/** Buildings a page carries at most: beyond it the first ranks, and ranking.csv holds all. */
+export const SHOWN_AT_MOST = 20_000;
+
+export interface StoredRun {
+  readonly run_id: number;
+  readonly made: string;
+  readonly program: string;
+  readonly note: string;
+  readonly title: string;
+  readonly inventory_id: string;
+  readonly study_fingerprint: string;
+  readonly methods_fingerprint: string;
+  readonly settings: AssessSettings;
+  readonly summary: StoredSummary;
+  readonly rank_by: string;
+}
+
+/** A run's record. @throws UserError when there is none of that number. */
+export async function readRun(db: Database, runId: number): Promise<StoredRun> {
+  const [row] = await db.rows<Omit<StoredRun, 'settings' | 'summary'> & { settings: string; summary: string }>(
+    `SELECT run_id, made, program, note, title, inventory_id, study_fingerprint, methods_fingerprint, settings, summary, rank_by
+     FROM run WHERE run_id = ?`,
+    [runId],
+  );
+  if (row === undefined) throw new UserError(`there is no run ${String(runId)}; swaymark runs lists them`);
+  return {
+    ...row,
+    settings: JSON.parse(row.settings) as AssessSettings,
+    summary: JSON.parse(row.summary) as StoredSummary,
+  };
+}
+
+const KIND: Readonly<Record<string, ColumnKind>> = { number: 'f64', whole: 'i32', text: 'text' };
+
+/** Everything the reports of run `runId` need. */
+export async function pageDataOf(db: Database, runId: number, display: Display): Promise<PageData> {
+  const run = await readRun(db, runId);
+  const others = ['name', 'group', 'part_of', 'heritage'] as const;
+  const spec: Record<string, ColumnKind> = { id: 'text', first_row: 'f64', lon: 'f64', lat: 'f64' };
+  for (const name of others) spec[name] = 'text';
+  for (const name of BUILDING_NUMBERS) spec[name] = 'f64';
+  for (const name of BUILDING_WORDS) spec[name] = 'text';
+  const mine = Object.keys(spec).map((name) => `b.${quoteName(name)}`);
+  const theirs = RESULT_COLUMNS.map(({ name, kind }) => {
+    spec[`r_${name}`] = KIND[kind] === 'i32' ? 'f64' : KIND[kind]!;
+    return `r.${quoteName(name)} AS ${quoteName(`r_${name}`)}`;
+  });
+  const read = (await db.columns(
+    `SELECT ${[...mine, ...theirs].join(', ')} FROM result r JOIN building b ON b.inventory_id = ? AND b.building_index = r.building_index
+     WHERE r.run_id = ? ORDER BY r.rank NULLS LAST, b.id LIMIT ${String(SHOWN_AT_MOST)}`,
+    spec,
+    [run.inventory_id, runId],
+  )) as unknown as Readonly<Record<string, readonly (string | null)[] | Float64Array>> & { readonly rowCount: number };
+  const pick = (names: readonly string[]): Readonly<Record<string, unknown>> =>
+    Object.fromEntries(names.map((name) => [name, Array.from<string | number | null>(read[name]!)]));
+  const numbers = (name: string): (number | null)[] =>
+    Array.from(read[name] as Float64Array, (value) => (Number.isNaN(value) ? null : value));
+  const texts = (name: string): (string | null)[] => [...(read[name] as readonly (string | null)[])];
+  const { made, program, title, rank_by, inventory_id, study_fingerprint, methods_fingerprint } = run;
+  return {
+    summary: {
+      ...run.summary,
+      title,
+      run: String(runId),
+      made,
+      program,
+      rank_by,
+      fingerprints: { study: study_fingerprint, inventory: inventory_id, methods: methods_fingerprint },
+      findings: await findingCounts(db, inventory_id),
+      cautions: CAUTIONS,
+    },
+    settings: run.settings,
+    buildings: {
+      shown: read.rowCount,
+      all: run.summary.buildings,
+      inputs: {
+        id: texts('id') as string[],
+        numbers: pick(BUILDING_NUMBERS) as unknown as BuildingColumns['numbers'],
+        words: pick(BUILDING_WORDS) as unknown as BuildingColumns['words'],
+      },
+      pools: await readPools(db, inventory_id),
+      name: texts('name'),
+      group: texts('group'),
+      part_of: texts('part_of'),
+      lon: numbers('lon'),
+      lat: numbers('lat'),
+      heritage: texts('heritage'),
+      first_row: Array.from(read['first_row'] as Float64Array),
+      results: Object.fromEntries(
+        RESULT_COLUMNS.map(({ name, kind }) => [name, kind === 'text' ? texts(`r_${name}`) : numbers(`r_${name}`)]),
+      ),
+    },
+    display,
+  };
+}

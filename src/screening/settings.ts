@@ -1,0 +1,53 @@
+/** From the study file to the settings an assessment runs on. */
+import { resolve } from 'node:path';
+import { SPREADS } from '../engineering/assess/settings.js';
+import type { AssessSettings, LevelSettings } from '../engineering/assess/settings.js';
+import { METHODS } from '../engineering/methods.js';
+import { UserError } from '../errors.js';
+import { loadPrior } from '../study/prior.js';
+import type { LoadedStudy } from '../study/load.js';
+import type { Level } from '../study/schema.js';
+
+/** Slope of the hazard curve where the study names one level only [judgement]. */
+const ASSUMED_SLOPE = 2.5;
+
+function levelOf(level: Level): LevelSettings {
+  if ('spectrum' in level) return { title: level.title, by: null, spectra: { all: level.spectrum }, otherwise: null };
+  return { title: level.title, by: level.by, spectra: level.spectra, otherwise: level.otherwise ?? null };
+}
+
+/**
+ * Settings of a loaded study; the slope is the stated one, or 2.5 until two levels have given it (slopes.ts).
+ * @throws UserError for a system prior that cannot be read or a method switched off that does not exist.
+ */
+export async function settingsOf(loaded: LoadedStudy): Promise<AssessSettings> {
+  const { study, folder } = loaded;
+  study.period.switched_off.forEach((id, i) => {
+    if (!METHODS.some((method) => method.id === id)) {
+      throw new UserError(
+        `unknown method "${id}"; swaymark methods lists them`,
+        loaded.placeOf(['period', 'switched_off', i]),
+      );
+    }
+  });
+  const prior = study.system_prior === undefined ? null : await loadPrior(resolve(folder, study.system_prior));
+  const { place, seismic_design_enforced_from, adoption_lag_years, editions, detailing_from } = study.code_history;
+  return {
+    spectra: study.hazard.spectra,
+    levels: study.hazard.levels.map(levelOf),
+    holdPlateau: study.hazard.hold_plateau,
+    period: { standard: study.period.standard, basis: study.period.basis, switchedOff: study.period.switched_off },
+    codeHistory: {
+      place,
+      seismic_design_enforced_from,
+      adoption_lag_years,
+      editions,
+      ...(detailing_from === undefined ? {} : { detailing_from }),
+    },
+    systemPrior: prior,
+    rankBy: study.ranking.rank_by,
+    slope: typeof study.ranking.k === 'number' ? study.ranking.k : ASSUMED_SLOPE,
+    slopeSource: typeof study.ranking.k === 'number' ? 'stated' : 'assumed',
+    spreads: SPREADS,
+  };
+}

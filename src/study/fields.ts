@@ -1,0 +1,92 @@
+/** The building blocks of the study's schema: each says in its own words what it expects, so that messages read alike. */
+import { z } from 'zod';
+import { showValue } from '../errors.js';
+import { suggest } from './nearest.js';
+
+type Complaint = (issue: z.core.$ZodRawIssue) => string;
+
+/** The message of a field that wants `what`; a key that is absent or empty is told apart from a wrong value. */
+export function expected(what: string): Complaint {
+  return ({ input }) => {
+    if (input === undefined) return `missing; expected ${what}`;
+    return `expected ${what}, got ${input === null ? 'nothing' : showValue(input)}`;
+  };
+}
+
+/** A mapping that refuses keys it does not know, naming the nearest one. Several unknown keys give one line each. */
+export function strict<T extends z.core.$ZodLooseShape>(shape: T): z.ZodObject<T, z.core.$strict> {
+  const known = Object.keys(shape);
+  const wrong = expected('keys and values below it');
+  return z.strictObject(shape, {
+    error: (issue) =>
+      issue.code === 'unrecognized_keys'
+        ? issue.keys.map((key) => `unknown key${suggest(key, known)}`).join('\n')
+        : wrong(issue),
+  });
+}
+
+/** Text that is not blank. Numbers are refused, since `007` would already have become 7. */
+export function text(what = 'text') {
+  const error: Complaint = (issue) =>
+    typeof issue.input === 'number' || typeof issue.input === 'boolean'
+      ? `${expected(what)(issue)}; put it in quotes`
+      : expected(what)(issue);
+  return z.string({ error }).regex(/\S/u, { error });
+}
+
+/** One of `words`. */
+export function word<const T extends readonly string[]>(words: T) {
+  const list = words.join(', ');
+  return z.enum(words, {
+    error: (issue) =>
+      typeof issue.input === 'string'
+        ? `unknown word ${showValue(issue.input)}; known: ${list}`
+        : expected(`one of ${list}`)(issue),
+  });
+}
+
+interface Range {
+  /** Smallest value allowed. */
+  readonly from?: number;
+  /** Value it must exceed. */
+  readonly above?: number;
+  /** Largest value allowed. */
+  readonly to?: number;
+  readonly unit?: string;
+}
+
+/** A finite number within a range. */
+export function number(range: Range) {
+  const error = expected(describeRange('a number', range));
+  let schema = z.number({ error });
+  if (range.from !== undefined) schema = schema.gte(range.from, { error });
+  if (range.above !== undefined) schema = schema.gt(range.above, { error });
+  if (range.to !== undefined) schema = schema.lte(range.to, { error });
+  return schema;
+}
+
+/** A whole number within a range. */
+export function whole(range: { readonly from: number; readonly to: number; readonly what?: string }) {
+  const error = expected(describeRange(range.what ?? 'a whole number', range));
+  return z.int({ error }).gte(range.from, { error }).lte(range.to, { error });
+}
+
+/** A list of at least `least` items. */
+export function list<T extends z.ZodType>(item: T, what: string, least = 0) {
+  const error = expected(what);
+  return z.array(item, { error }).min(least, { error });
+}
+
+/** A mapping from free names to values, with at least `least` entries. */
+export function mapping<T extends z.ZodType>(key: z.ZodString, value: T, what: string, least = 0) {
+  const error = expected(what);
+  return z.record(key, value, { error }).refine((entries) => Object.keys(entries).length >= least, { error });
+}
+
+function describeRange(kind: string, { from, above, to, unit }: Range): string {
+  const of = unit === undefined ? kind : `${kind} in ${unit}`;
+  if (from !== undefined && to !== undefined)
+    return to >= Number.MAX_SAFE_INTEGER ? `${of} >= ${from}` : `${of} ${from} to ${to}`;
+  if (above !== undefined) return to === undefined ? `${of} > ${above}` : `${of} > ${above} and <= ${to}`;
+  return from === undefined ? of : `${of} >= ${from}`;
+}

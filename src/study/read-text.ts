@@ -1,0 +1,26 @@
+import { readFile } from 'node:fs/promises';
+import { UserError } from '../errors.js';
+
+const REASONS: Readonly<Record<string, string>> = {
+  ENOENT: 'no such file',
+  ENOTDIR: 'no such file',
+  EISDIR: 'this is a folder',
+  EACCES: 'this file may not be read',
+};
+
+/** The text of a small UTF-8 file without its byte order mark; `what` names it in messages. @throws UserError when it cannot be read. */
+export async function readText(path: string, what: string): Promise<string> {
+  let bytes: Buffer;
+  try {
+    bytes = await readFile(path);
+  } catch (cause) {
+    const reason = REASONS[(cause as NodeJS.ErrnoException).code ?? ''];
+    if (reason === undefined) throw cause;
+    throw new UserError(`${reason}; give the path of ${what}`, { file: path }, { cause });
+  }
+  try {
+    return new TextDecoder('utf-8', { fatal: true }).decode(bytes);
+  } catch (cause) {
+    throw new UserError('not UTF-8 text; save it as UTF-8', { file: path }, { cause });
+  }
+}

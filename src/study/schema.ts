@@ -1,0 +1,101 @@
+/** The study file: one schema gives the type, the validation and the JSON Schema for editors. */
+import { z } from 'zod';
+import { CodeHistorySchema } from './code-editions.js';
+import { expected, list, mapping, strict, text, whole, word } from './fields.js';
+import { InventorySchema, NeighboursSchema, WordsSchema } from './inventory-schema.js';
+import { SpectrumSchema } from './spectrum-codes.js';
+
+const levelTitle = text().describe('Name of the level in reports; no two alike.');
+const spectrumName = text('the name of a spectrum of hazard.spectra');
+
+const LevelSchema = z.union(
+  [
+    strict({ title: levelTitle, spectrum: spectrumName.describe('The spectrum every building reads.') }),
+    strict({
+      title: levelTitle,
+      by: word(['site_class', 'hazard_zone']).describe('The column that says which spectrum a building reads.'),
+      spectra: mapping(z.string(), spectrumName, 'site classes or zones, each with the name of a spectrum', 1).describe(
+        'Its values, each with the name of a spectrum.',
+      ),
+      otherwise: spectrumName
+        .exactOptional()
+        .describe('The spectrum of buildings whose value is blank or not listed; without it they are not ranked.'),
+    }),
+  ],
+  { error: expected('{title, spectrum} or {title, by, spectra, otherwise}') },
+);
+
+const entryName = z.string().regex(/^[^\s./\\]+$/, {
+  error: ({ input }) =>
+    `the name ${JSON.stringify(input)} of a spectrum may not be empty or hold blanks, dots or slashes`,
+});
+
+const HazardSchema = strict({
+  spectra: mapping(entryName, SpectrumSchema, 'at least one spectrum with a name', 1).describe(
+    'Spectra by name: the 5 % elastic spectral acceleration in g.',
+  ),
+  levels: list(LevelSchema, 'a list of at least one level', 1).describe(
+    'Levels of shaking; the first ranks, all are reported.',
+  ),
+  hold_plateau: z
+    .boolean({ error: expected('true or false') })
+    .default(true)
+    .describe('true: below the plateau the ranking holds its value; false: the ramp is used.'),
+});
+
+const PeriodSchema = strict({
+  standard: word(['asce7-22', 'asce41-17', 'en1998-1-2004'])
+    .default('asce41-17')
+    .describe('Whose height formulas are used.'),
+  basis: word(['best-fit', 'design']).default('best-fit').describe('Best estimate, or the short side used for design.'),
+  switched_off: list(text('the id of a method'), 'a list of method ids')
+    .default([])
+    .describe('Ids of methods not to be used.'),
+});
+
+const slope = expected('from-levels or a number 1 to 5');
+
+const RankingSchema = strict({
+  rank_by: word(['people', 'ratio', 'demand'])
+    .default('people')
+    .describe('people: demand over capacity times people; ratio: without people; demand: spectral demand alone.'),
+  list_size: whole({ from: 1, to: Number.MAX_SAFE_INTEGER }).default(20).describe('How many buildings the list holds.'),
+  k: z
+    .union([z.literal('from-levels'), z.number({ error: slope }).gte(1, { error: slope }).lte(5, { error: slope })], {
+      error: slope,
+    })
+    .default('from-levels')
+    .describe(
+      'Slope of the hazard curve in logarithms: from two levels, or a number 1 to 5. Left out with one level it is 2.5, reported as assumed.',
+    ),
+});
+
+/** The shape of study.yaml. What one key says about another is checked in checks.ts. */
+export const StudySchema = strict({
+  title: text().describe('Title of the study, printed on every report.'),
+  inventory: InventorySchema.describe('The table of buildings.'),
+  neighbours: NeighboursSchema.exactOptional(),
+  words: WordsSchema.prefault({}).describe("The study's own words and ours; case and outer blanks do not matter."),
+  hazard: HazardSchema.describe('Spectra, and who reads which.'),
+  period: PeriodSchema.prefault({}).describe('How periods are estimated.'),
+  code_history: CodeHistorySchema.describe('What the place required of new buildings, and when.'),
+  system_prior: text('the path of a file')
+    .exactOptional()
+    .describe('Table of chances of the lateral system by use, storeys and year; needed where systems are unknown.'),
+  ranking: RankingSchema.prefault({}).describe('What the list is ordered by, and how long it is.'),
+  seed: whole({ from: 0, to: 2 ** 32 - 1 })
+    .default(1)
+    .describe('Seed of every random draw.'),
+  output: text('the path of a folder').default('reports').describe('Folder for reports, relative to this file.'),
+});
+
+/** A study with every default filled in. */
+export type Study = z.output<typeof StudySchema>;
+/** One entry of `hazard.levels`. */
+export type Level = Study['hazard']['levels'][number];
+
+/** The JSON Schema (draft 7) of study.yaml, for editors; defaults and descriptions included. */
+export function studyJsonSchema(): Record<string, unknown> {
+  const { $schema, ...rest } = z.toJSONSchema(StudySchema, { io: 'input', target: 'draft-7' });
+  return { $schema, title: 'swaymark study', ...rest };
+}

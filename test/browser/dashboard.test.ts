@@ -1,0 +1,212 @@
+/** The dashboard as its reader opens it: from disk, in Chromium, with the built page script. */
+import { mkdtempSync, readFileSync, rmSync, writeFileSync } from 'node:fs';
+import { createRequire } from 'node:module';
+import { tmpdir } from 'node:os';
+import { join } from 'node:path';
+import { pathToFileURL } from 'node:url';
+import { chromium } from 'playwright-core';
+import type { Browser, Page } from 'playwright-core';
+import { afterAll, afterEach, beforeAll, describe, expect, inject, it } from 'vitest';
+import { readPageScript, renderDashboard } from '../../src/reports/dashboard.js';
+import { HOSTILE_NAME, pageData } from '../support/page-data.js';
+
+const axeSource = readFileSync(createRequire(import.meta.url).resolve('axe-core/axe.min.js'), 'utf8');
+
+interface Scheme {
+  readonly width?: number;
+  readonly colorScheme?: 'light' | 'dark';
+}
+
+describe('renderDashboard', () => {
+  const folder = mkdtempSync(join(tmpdir(), 'swaymark-page-'));
+  const data = pageData({ listSize: 20 });
+  let browser: Browser;
+  /** Console messages, errors and requests other than the page itself: all of them unwanted. */
+  const noise: string[] = [];
+  const opened: Page[] = [];
+
+  const write = (name: string, options: Parameters<typeof pageData>[0]): string => {
+    const file = join(folder, name);
+    writeFileSync(file, renderDashboard(pageData(options), readPageScript()));
+    return pathToFileURL(file).href;
+  };
+  let address = '';
+
+  beforeAll(async () => {
+    address = write('dashboard.html', { listSize: 20 });
+    browser = await chromium.launch({
+      executablePath: inject('chromiumPath'),
+      args: [
+        '--no-sandbox',
+        '--disable-gpu',
+        '--disable-quic',
+        '--no-first-run',
+        '--disable-background-networking',
+        '--disable-component-update',
+        '--disable-sync',
+      ],
+    });
+  });
+
+  afterAll(async () => {
+    await browser.close();
+    rmSync(folder, { recursive: true, force: true });
+  });
+
+  afterEach(async () => {
+    await Promise.all(opened.splice(0).map((page) => page.close()));
+    expect(noise.splice(0)).toEqual([]);
+  });
+
+  async function open(url = address, { width = 1280, colorScheme = 'light' }: Scheme = {}): Promise<Page> {
+    const page = await browser.newPage({ viewport: { width, height: 900 }, colorScheme });
+    opened.push(page);
+    page.on('console', (message) => noise.push(`console: ${message.text()}`));
+    page.on('pageerror', (error) => noise.push(`error: ${error.message}`));
+    page.on('dialog', (dialog) => {
+      noise.push(`dialog: ${dialog.message()}`);
+      void dialog.dismiss();
+    });
+    page.on('request', (request) => {
+      if (!request.isNavigationRequest()) noise.push(`request: ${request.url()}`);
+    });
+    await page.goto(url);
+    // The policy of the page forbids waiting by a script of ours, so the waiting is done from here.
+    await expect.poll(() => page.locator('.chart:not([data-drawn])').count(), { timeout: 15_000 }).toBe(0);
+    return page;
+  }
+
+  const cells = (page: Page, column: number): Promise<string[]> =>
+    page.locator(`#all-table tbody tr:not(.spacer) > :nth-child(${String(column)})`).allTextContents();
+
+  it('draws every chart without a message, a request or sideways scrolling', async () => {
+    for (const width of [1280, 390]) {
+      const page = await open(address, { width });
+      expect(await page.locator('.chart svg').count()).toBe(5);
+      expect(await page.evaluate('document.documentElement.scrollWidth')).toBe(width);
+    }
+  });
+
+  it('draws large portfolios on a canvas', async () => {
+    const page = await open(write('large.html', { count: 3200, listSize: 100 }));
+    expect(await page.locator('.chart canvas').count()).toBe(2);
+    await page.emulateMedia({ colorScheme: 'dark' });
+    await expect.poll(() => page.locator('.chart canvas').count()).toBe(2);
+  });
+
+  it('sorts by a heading, either way, blanks last', async () => {
+    const page = await open();
+    const head = page.locator('#all-table th', { hasText: 'People on average' });
+    await head.getByRole('button').click();
+    expect(await head.getAttribute('aria-sort')).toBe('ascending');
+    const column = 1 + (await page.locator('#all-table thead th').allTextContents()).indexOf('People on average');
+    const up = (await cells(page, column)).map(Number);
+    expect(up.slice(0, 10)).toEqual([...up.slice(0, 10)].sort((a, b) => a - b));
+    await head.getByRole('button').press('Enter');
+    expect(await head.getAttribute('aria-sort')).toBe('descending');
+    const down = (await cells(page, column)).map((text) => Number(text.replaceAll('\u202f', '')));
+    expect(down[0]).toBe(Math.max(...down.filter((value) => !Number.isNaN(value))));
+    await page.evaluate('document.getElementById("all-region").scrollTo(0, 1e6)');
+    await page.locator('#all-table td', { hasText: 'already assessed' }).waitFor();
+    expect((await cells(page, column)).at(-1)).toBe('–');
+  });
+
+  it('searches, filters, and marks inferred values in words', async () => {
+    const page = await open();
+    expect(
+      (await page.locator('#all-table td.guess').allTextContents()).some((text) => /^≈ [\d.]+ inferred$/.test(text)),
+    ).toBe(true);
+    await page.getByLabel('Search identifier').fill('ex-013');
+    expect(await cells(page, 2)).toEqual(['EX-013']);
+    expect(await page.locator('#all-status').textContent()).toContain('1 of 60 buildings');
+    await page.getByLabel('Search identifier').fill('');
+    await page.getByLabel('Show').selectOption('In the list');
+    expect(await page.locator('#all-table').getAttribute('aria-rowcount')).toBe('21');
+    await page.getByLabel('Show').selectOption('Weak types');
+    const weak = data.buildings.results['weak_type']?.filter((type) => type !== null).length ?? 0;
+    expect(await page.locator('#all-table').getAttribute('aria-rowcount')).toBe(String(weak + 1));
+  });
+
+  it('opens a sheet by keyboard, works the priority out again, and gives the focus back', async () => {
+    const page = await open();
+    const link = page.locator('#all-table tbody a').nth(2);
+    const id = (await link.textContent()) ?? '';
+    await link.focus();
+    await page.keyboard.press('Enter');
+    const sheet = page.locator('dialog[open]');
+    await sheet.waitFor();
+    expect(await sheet.locator('h2').textContent()).toContain(id);
+    expect(page.url()).toContain(`#building=${id}`);
+    await sheet.getByRole('button', { name: 'Work it out by hand' }).press('Enter');
+    expect(await sheet.locator('.agrees').getAttribute('data-agrees')).toMatch(/^(exactly|closely)$/);
+    expect(await sheet.locator('ol.hand > li').count()).toBeGreaterThan(10);
+    await page.keyboard.press('Escape');
+    await sheet.waitFor({ state: 'detached' });
+    await expect.poll(() => page.url()).not.toContain('building=');
+    expect(await page.evaluate('document.activeElement.textContent')).toBe(id);
+  });
+
+  it('works out what the run stored', async () => {
+    const page = await open();
+    for (const id of data.buildings.inputs.id.filter((_, i) => i % 6 === 0)) {
+      await page.goto(`${address}#building=${id}`);
+      await page.locator('#sheet-title', { hasText: id }).waitFor();
+      await page.locator('#make-hand').click();
+      expect(await page.locator('.agrees').textContent()).toMatch(
+        /The two are identical|agree to twelve digits|not ranked/,
+      );
+    }
+  });
+
+  it('opens a sheet from the list and from a mark of a chart', async () => {
+    const page = await open();
+    await page.locator('#list-table a').first().click();
+    await page.locator('dialog[open]').waitFor();
+    await page.keyboard.press('Escape');
+    await page.locator('#chart-map').scrollIntoViewIfNeeded();
+    await page.locator('#chart-map svg .mark-symbol.role-mark path').last().hover({ force: true });
+    await page.locator('.tip').waitFor();
+    await page.mouse.down();
+    await page.mouse.up();
+    await page.locator('dialog[open]').waitFor();
+  });
+
+  it('shows a hostile name as text and runs nothing of it', async () => {
+    const page = await open();
+    await page.getByLabel('Search identifier').fill('onerror');
+    const name = page.locator('#all-table tbody td', { hasText: 'onerror' });
+    expect(await name.textContent()).toBe(HOSTILE_NAME);
+    await page.locator('#all-table tbody a').click();
+    expect(await page.locator('#sheet-title').textContent()).toContain(HOSTILE_NAME);
+    expect(await page.locator('img').count()).toBe(0);
+  });
+
+  it.each(['light', 'dark'] as const)(
+    'gives axe nothing to report in the %s scheme, wide or narrow',
+    async (colorScheme) => {
+      const page = await open(address, { colorScheme });
+      await page.evaluate(axeSource);
+      const problems = (): Promise<string[]> =>
+        page.evaluate(`axe.run({ resultTypes: ['violations'] }).then(({ violations }) =>
+          violations.map(({ id, nodes }) => id + ': ' + nodes.slice(0, 3).map(({ target }) => target.join(' ')).join(', ')))`);
+      await page.evaluate('document.querySelectorAll("details").forEach((details) => { details.open = true; })');
+      for (const width of [1280, 390]) {
+        await page.setViewportSize({ width, height: 900 });
+        expect(await problems()).toEqual([]);
+        await page.locator('#list-table a').first().click();
+        await page.locator('#make-hand').click();
+        expect(await problems()).toEqual([]);
+        await page.keyboard.press('Escape');
+      }
+    },
+    60_000,
+  );
+
+  it('prints in light colours with the list and without the table of all buildings', async () => {
+    const page = await open(address, { colorScheme: 'dark' });
+    await page.emulateMedia({ media: 'print', colorScheme: 'dark' });
+    expect(await page.evaluate('getComputedStyle(document.body).backgroundColor')).toBe('rgb(255, 255, 255)');
+    expect(await page.locator('#all-region').isVisible()).toBe(false);
+    expect(await page.locator('#list-table').isVisible()).toBe(true);
+  });
+});

@@ -1,0 +1,53 @@
+import { describe, expect, it } from 'vitest';
+import {
+  formatCount,
+  formatNumber,
+  formatQuantity,
+  formatShare,
+  shownUnit,
+  shownValue,
+  unitLabel,
+} from '../../src/engineering/format.js';
+
+// Contracts of the display.
+describe('formatNumber', () => {
+  it.each([
+    [1.0518, 4, '1.052'],
+    [0.04, 3, '0.0400'],
+    [12345.6, 3, '12\u202f346'],
+    [1234.5, 3, '1235'],
+    [-2.5, 3, '−2.50'],
+    [0, 3, '0'],
+    [NaN, 3, 'not known'],
+    [Infinity, 3, '∞'],
+    [-Infinity, 3, '−∞'],
+    [0.00002, 2, '0.000020'],
+  ])('%d with %i digits', (value, digits, text) => {
+    expect(formatNumber(value, digits)).toBe(text);
+  });
+});
+
+describe('formatShare', () => {
+  it('never prints a false 0 or 100 %', () => {
+    expect(formatShare(0)).toBe('0 %');
+    expect(formatShare(1)).toBe('100 %');
+    expect(formatShare(0.001)).toBe('under 1 %');
+    expect(formatShare(0.9999)).toBe('over 99 %');
+    expect(formatShare(0.626)).toBe('63 %');
+    expect(formatShare(NaN)).toBe('not known');
+  });
+});
+
+describe('formatQuantity', () => {
+  it('shows the unit of the display', () => {
+    expect(formatQuantity(12.5, 'm', 'si')).toBe('12.5 m');
+    expect(formatQuantity(12.5, 'm', 'us')).toBe('41.0 ft');
+    expect(formatQuantity(1.05, 's', 'us')).toBe('1.05 s');
+    expect(formatQuantity(NaN, 'm', 'si')).toBe('not known');
+    expect(formatQuantity(2, null, 'si')).toBe('2.00');
+    expect(formatCount(27528)).toBe('27\u202f528');
+    expect(shownUnit('kN_per_m', 'us')).toBe('kip_per_in');
+    expect(shownValue(0.3048, 'm', 'us')).toBe(1);
+    expect(unitLabel('m2', 'us')).toBe('ft²');
+  });
+});

@@ -1,0 +1,74 @@
+import { fileURLToPath } from 'node:url';
+import { describe, expect, it } from 'vitest';
+import { proposeMapping } from '../../src/inventory/propose-mapping.js';
+import { proposeStudy } from '../../src/inventory/propose-study.js';
+import type { UserError } from '../../src/errors.js';
+import { studyFromText } from '../../src/study/load.js';
+
+const mapped = (header: readonly string[], rows: readonly (readonly string[])[] = []): Record<string, string> =>
+  Object.fromEntries(
+    proposeMapping(header, rows).columns.map(({ ours, theirs, unit }) => [
+      ours,
+      unit === undefined ? theirs : `${theirs} in ${unit}`,
+    ]),
+  );
+
+describe('proposeMapping', () => {
+  it('recognises columns by their names and units by brackets and endings', () => {
+    expect(
+      mapped(['Asset no.', 'Height (ft)', 'floor_area_sqft', 'YearBuilt', 'NumFloors', 'Lon', 'Lat', 'Structure']),
+    ).toMatchObject({
+      id: 'Asset no.',
+      height_m: 'Height (ft) in ft',
+      floor_area_m2: 'floor_area_sqft in ft2',
+      year_built: 'YearBuilt',
+      storeys_above: 'NumFloors',
+      lon: 'Lon',
+      lat: 'Lat',
+      system: 'Structure',
+    });
+  });
+
+  it('finds feet by the data, as a question', () => {
+    const rows = Array.from({ length: 9 }, (_, i) => [`A${i}`, String(1 + i), String((1 + i) * 11)]);
+    const proposal = proposeMapping(['id', 'Storeys', 'Height'], rows);
+    const height = proposal.columns.find(({ ours }) => ours === 'height_m');
+    expect(height?.unit).toBe('ft');
+    expect(height?.question).toMatch(/feet, by the data.*11/);
+  });
+
+  it('asks whether repeated ids are parts of one building, and does not take words for numbers', () => {
+    const proposal = proposeMapping(
+      ['id', 'Height'],
+      [
+        ['A', 'tall'],
+        ['A', 'low'],
+        ['B', 'tall'],
+      ],
+    );
+    expect(proposal.questions[0]).toMatch(/parts of one building/);
+    expect(proposal.unused).toEqual(['Height']);
+  });
+});
+
+describe('proposeStudy', () => {
+  it('writes a study that cannot run before its questions are answered', () => {
+    const path = fileURLToPath(new URL('../fixtures/assessor-excerpt.csv', import.meta.url));
+    const { text, questions } = proposeStudy(path);
+    expect(text).toMatch(/^ {4}id: "ML"$/m);
+    expect(text).toMatch(/^ {4}year_built: "AYBYrBuilt"$/m);
+    expect(text).toMatch(/# merge_rows_by: "ML"/);
+    expect(text).toMatch(/# no_building: \{column: "UseDescription", values: \[.*"PARKING-LOT"/);
+    expect(text).toMatch(/^# {5}"CONDOMINIUM": residential {2}# QUESTION: /m);
+    expect(questions.length).toBe(text.split('# QUESTION:').length - 1);
+    let problems: readonly string[] = [];
+    try {
+      studyFromText(text);
+    } catch (error) {
+      problems = (error as UserError).problems.map(({ place }) => place.key ?? '');
+    }
+    // All that is wrong with it is what the owner has to say.
+    expect(problems.length).toBeGreaterThan(0);
+    expect(problems.filter((key) => !/^(hazard|code_history)/.test(key))).toEqual([]);
+  });
+});

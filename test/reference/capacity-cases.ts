@@ -1,0 +1,172 @@
+/** From strength to capacity, and from capacity to priority. */
+import { exactly, half } from './case.js';
+import type { ReferenceCase } from './case.js';
+
+const CAPACITY: readonly ReferenceCase[] = [
+  {
+    id: 'strength-working',
+    method: 'swaymark/capacity/strength-coefficient',
+    inputs: { design_base_shear_coefficient: 0.1, level_factor: 1.4, retrofit_level: 1 },
+    ...exactly(0.14),
+    source: '0.1 × 1.4',
+    mark: 'own arithmetic',
+  },
+  {
+    id: 'strength-retrofit',
+    method: 'swaymark/capacity/strength-coefficient',
+    inputs: { design_base_shear_coefficient: 0.1, level_factor: 1.4, retrofit_level: 0.75 },
+    ...exactly(0.105),
+    source: '0.1 × 1.4 × 0.75',
+    mark: 'own arithmetic',
+  },
+  {
+    id: 'strength-floor',
+    method: 'swaymark/capacity/strength-coefficient',
+    inputs: { design_base_shear_coefficient: 0, level_factor: 1.4, retrofit_level: 0.75 },
+    ...exactly(0.04),
+    source: 'the floor of 0.04 W takes no level factor and no retrofit level',
+    mark: 'own arithmetic',
+  },
+  {
+    id: 'overstrength-bounded',
+    method: 'swaymark/capacity/overstrength-kept',
+    inputs: { overstrength: 2, code_reduction: 2.1, level_factor: 1.4 },
+    ...exactly(1.5),
+    source: '2.1 / 1.4 is less than 2',
+    mark: 'own arithmetic',
+  },
+  {
+    id: 'overstrength-free',
+    method: 'swaymark/capacity/overstrength-kept',
+    inputs: { overstrength: 2, code_reduction: 8, level_factor: 1.4 },
+    ...exactly(2),
+    source: '8 / 1.4 is more than 2',
+    mark: 'own arithmetic',
+  },
+  {
+    id: 'ductility-wall',
+    method: 'swaymark/capacity/ductility-kept',
+    inputs: { ductility: 3, code_reduction: 6, level_factor: 1.4, overstrength: 2 },
+    expected: 2.142857,
+    tolerance: half(6),
+    source: '6/(1.4 × 2)',
+    mark: 'own arithmetic',
+  },
+  {
+    id: 'ductility-frame',
+    method: 'swaymark/capacity/ductility-kept',
+    inputs: { ductility: 4, code_reduction: 12, level_factor: 1.4, overstrength: 2 },
+    ...exactly(4),
+    source: '12/2.8 = 4.29 leaves 4 as it is',
+    mark: 'own arithmetic',
+  },
+  {
+    id: 'ductility-least',
+    method: 'swaymark/capacity/ductility-kept',
+    inputs: { ductility: 1.5, code_reduction: 1.5, level_factor: 1.4, overstrength: 2 },
+    ...exactly(1),
+    source: 'never under 1',
+    mark: 'own arithmetic',
+  },
+  {
+    id: 'SP-53-form',
+    method: 'n2/capacity/reduction',
+    inputs: { ductility: 2, period_s: 0.4, corner_period_s: 0.7 },
+    expected: 1.571429,
+    tolerance: half(6),
+    source: 'NZS 1170.5 k_μ = (μ - 1) T/0.7 + 1 below 0.7 s has the same form',
+    mark: 'own arithmetic',
+  },
+  {
+    id: 'reduction-long',
+    method: 'n2/capacity/reduction',
+    inputs: { ductility: 3, period_s: 1.2, corner_period_s: 0.6 },
+    ...exactly(3),
+    source: 'equal displacement beyond the corner',
+    mark: 'own arithmetic',
+  },
+  {
+    id: 'reduction-zero',
+    method: 'n2/capacity/reduction',
+    inputs: { ductility: 4, period_s: 0, corner_period_s: 0.6 },
+    ...exactly(1),
+    source: 'a rigid building keeps no ductility',
+    mark: 'own arithmetic',
+  },
+  {
+    id: 'elastic',
+    method: 'swaymark/capacity/elastic-equivalent',
+    inputs: {
+      strength_coefficient: 0.14,
+      overstrength: 2,
+      reduction: 2,
+      irregularity: 0.7,
+      mass_share: 0.85,
+    },
+    expected: 0.461176,
+    tolerance: half(6),
+    source: '0.14 × 2 × 2 × 0.7 / 0.85',
+    mark: 'own arithmetic',
+  },
+];
+
+const PRIORITY: readonly ReferenceCase[] = [
+  ...(
+    [
+      [1.5, 4.1],
+      [2, 2.4],
+      [3, 1.5],
+    ] as const
+  ).map(([ratio, expected]): ReferenceCase => ({
+    id: `slope-${String(ratio)}`,
+    method: 'swaymark/priority/hazard-slope',
+    inputs: { sa_1_g: 0.4, sa_2_g: 0.4 * ratio, return_period_1_years: 475, return_period_2_years: 2475 },
+    expected,
+    tolerance: half(1),
+    source: 'slope of the hazard between 475 and 2,475 years by the ratio of the ordinates, worked elsewhere',
+    mark: 'own arithmetic',
+  })),
+  {
+    id: 'slope-kept',
+    method: 'swaymark/priority/hazard-slope',
+    inputs: { sa_1_g: 0.4, sa_2_g: 0.44, return_period_1_years: 475, return_period_2_years: 2475 },
+    ...exactly(5),
+    source: 'ln 5.21 / ln 1.1 = 17 is kept to 5',
+    mark: 'own arithmetic',
+  },
+  {
+    id: 'peak-office',
+    method: 'swaymark/priority/people-at-peak',
+    inputs: { floor_area_m2: 1000, people_per_m2: 0.043 },
+    ...exactly(43),
+    source: '1000 × 0.043',
+    mark: 'own arithmetic',
+  },
+  {
+    id: 'exposed-office',
+    method: 'swaymark/priority/people-exposed',
+    inputs: { occupants_peak: 84, occupied_hours_per_week: 50 },
+    ...exactly(25),
+    source: '84 × 50/168',
+    mark: 'own arithmetic',
+  },
+  {
+    id: 'exposed-least',
+    method: 'swaymark/priority/people-exposed',
+    inputs: { occupants_peak: 0, occupied_hours_per_week: 50 },
+    ...exactly(0.1),
+    source: 'at least 0.1',
+    mark: 'own arithmetic',
+  },
+  {
+    id: 'score',
+    method: 'swaymark/priority/log-score',
+    inputs: { slope_k: 2, sa_g: 0.9, capacity_sa_g: 0.3, people_exposed: 10, importance_factor: 1.5, zone_term: 0 },
+    expected: 4.905275,
+    tolerance: half(6),
+    source: '2 ln 3 + ln 15 = ln 135',
+    mark: 'own arithmetic',
+  },
+];
+
+export const CAPACITY_CASES: readonly ReferenceCase[] = [...CAPACITY, ...PRIORITY];
