@@ -77,62 +77,112 @@ function systemOf(word: string | null): System | null {
   return word === null || word === 'unknown' ? null : (word as System);
 }
 
+/** Reads rows of the columns as Buildings; the arrays are looked up once, because a million rows pay for every look-up. */
+export function buildingReader(columns: BuildingColumns, pools: YearPools): (i: number) => Building {
+  const {
+    year_built,
+    year_pool,
+    storeys_above,
+    storeys_above_sigma,
+    height_m,
+    height_m_sigma,
+    first_storey_height_m,
+    plan_length_m,
+    plan_width_m,
+    floor_area_m2,
+    floor_area_m2_sigma,
+    year_retrofitted,
+    retrofit_level,
+    occupants_peak,
+    occupied_hours_per_week,
+    importance_factor,
+    seismic_weight_kN,
+    unit_weight_kN_per_m2,
+    measured_period_longitudinal_s,
+    measured_period_transverse_s,
+    design_base_shear_coefficient,
+    capacity_sa_g,
+  } = columns.numbers;
+  const {
+    status,
+    storeys_above_origin,
+    storeys_above_rule,
+    height_m_origin,
+    height_m_rule,
+    floor_area_m2_origin,
+    floor_area_m2_rule,
+    year_built_origin,
+    system,
+    system_transverse,
+    use,
+    storey_stiffness_longitudinal_kN_per_m,
+    storey_stiffness_transverse_kN_per_m,
+    measured_amplitude,
+    soft_storey,
+    weak_storey,
+    torsion,
+    reentrant_corner,
+    setback,
+    mass_irregularity,
+    site_class,
+    hazard_zone,
+    design_level,
+  } = columns.words;
+  return (i) => {
+    const year = year_built[i]!;
+    const pool = year_pool[i]!;
+    const years = year > 0 ? [year] : pool >= 0 ? (pools[pool] ?? []) : [];
+    return {
+      id: columns.id[i]!,
+      status: (status[i] ?? 'in-use') as Building['status'],
+      storeys: filled(storeys_above[i]!, storeys_above_sigma[i]!, storeys_above_origin[i]!, storeys_above_rule[i]!),
+      height_m: filled(height_m[i]!, height_m_sigma[i]!, height_m_origin[i]!, height_m_rule[i]!),
+      first_storey_height_m: first_storey_height_m[i]!,
+      plan_length_m: plan_length_m[i]!,
+      plan_width_m: plan_width_m[i]!,
+      floor_area_m2: filled(
+        floor_area_m2[i]!,
+        floor_area_m2_sigma[i]!,
+        floor_area_m2_origin[i]!,
+        floor_area_m2_rule[i]!,
+      ),
+      years,
+      yearOrigin: (year_built_origin[i] ?? 'unknown') as Origin,
+      year_retrofitted: year_retrofitted[i]!,
+      retrofit_level: retrofit_level[i]!,
+      system: systemOf(system[i]!),
+      system_transverse: systemOf(system_transverse[i]!),
+      use: (use[i] ?? 'unknown') as Use,
+      occupants_peak: occupants_peak[i]!,
+      occupied_hours_per_week: occupied_hours_per_week[i]!,
+      importance_factor: importance_factor[i]!,
+      seismic_weight_kN: seismic_weight_kN[i]!,
+      unit_weight_kN_per_m2: unit_weight_kN_per_m2[i]!,
+      storey_stiffness_kN_per_m: {
+        longitudinal: stiffness(storey_stiffness_longitudinal_kN_per_m[i]!),
+        transverse: stiffness(storey_stiffness_transverse_kN_per_m[i]!),
+      },
+      measured_period_s: {
+        longitudinal: measured_period_longitudinal_s[i]!,
+        transverse: measured_period_transverse_s[i]!,
+      },
+      measured_amplitude: measured_amplitude[i] as Building['measured_amplitude'],
+      soft_storey: soft_storey[i] as YesNo | null,
+      weak_storey: weak_storey[i] as YesNo | null,
+      torsion: torsion[i] as YesNo | null,
+      reentrant_corner: reentrant_corner[i] as YesNo | null,
+      setback: setback[i] as YesNo | null,
+      mass_irregularity: mass_irregularity[i] as YesNo | null,
+      site_class: site_class[i]!,
+      hazard_zone: hazard_zone[i]!,
+      design_base_shear_coefficient: design_base_shear_coefficient[i]!,
+      design_level: design_level[i] as Building['design_level'],
+      capacity_sa_g: capacity_sa_g[i]!,
+    };
+  };
+}
+
 /** Row `i` of the columns as a Building. */
 export function buildingAt(columns: BuildingColumns, i: number, pools: YearPools): Building {
-  const { numbers: n, words: w } = columns;
-  const year = n.year_built[i]!;
-  const pool = n.year_pool[i]!;
-  const years = year > 0 ? [year] : pool >= 0 ? (pools[pool] ?? []) : [];
-  return {
-    id: columns.id[i]!,
-    status: (w.status[i] ?? 'in-use') as Building['status'],
-    storeys: filled(
-      n.storeys_above[i]!,
-      n.storeys_above_sigma[i]!,
-      w.storeys_above_origin[i]!,
-      w.storeys_above_rule[i]!,
-    ),
-    height_m: filled(n.height_m[i]!, n.height_m_sigma[i]!, w.height_m_origin[i]!, w.height_m_rule[i]!),
-    first_storey_height_m: n.first_storey_height_m[i]!,
-    plan_length_m: n.plan_length_m[i]!,
-    plan_width_m: n.plan_width_m[i]!,
-    floor_area_m2: filled(
-      n.floor_area_m2[i]!,
-      n.floor_area_m2_sigma[i]!,
-      w.floor_area_m2_origin[i]!,
-      w.floor_area_m2_rule[i]!,
-    ),
-    years,
-    yearOrigin: (w.year_built_origin[i] ?? 'unknown') as Origin,
-    year_retrofitted: n.year_retrofitted[i]!,
-    retrofit_level: n.retrofit_level[i]!,
-    system: systemOf(w.system[i]!),
-    system_transverse: systemOf(w.system_transverse[i]!),
-    use: (w.use[i] ?? 'unknown') as Use,
-    occupants_peak: n.occupants_peak[i]!,
-    occupied_hours_per_week: n.occupied_hours_per_week[i]!,
-    importance_factor: n.importance_factor[i]!,
-    seismic_weight_kN: n.seismic_weight_kN[i]!,
-    unit_weight_kN_per_m2: n.unit_weight_kN_per_m2[i]!,
-    storey_stiffness_kN_per_m: {
-      longitudinal: stiffness(w.storey_stiffness_longitudinal_kN_per_m[i]!),
-      transverse: stiffness(w.storey_stiffness_transverse_kN_per_m[i]!),
-    },
-    measured_period_s: {
-      longitudinal: n.measured_period_longitudinal_s[i]!,
-      transverse: n.measured_period_transverse_s[i]!,
-    },
-    measured_amplitude: w.measured_amplitude[i] as Building['measured_amplitude'],
-    soft_storey: w.soft_storey[i] as YesNo | null,
-    weak_storey: w.weak_storey[i] as YesNo | null,
-    torsion: w.torsion[i] as YesNo | null,
-    reentrant_corner: w.reentrant_corner[i] as YesNo | null,
-    setback: w.setback[i] as YesNo | null,
-    mass_irregularity: w.mass_irregularity[i] as YesNo | null,
-    site_class: w.site_class[i]!,
-    hazard_zone: w.hazard_zone[i]!,
-    design_base_shear_coefficient: n.design_base_shear_coefficient[i]!,
-    design_level: w.design_level[i] as Building['design_level'],
-    capacity_sa_g: n.capacity_sa_g[i]!,
-  };
+  return buildingReader(columns, pools)(i);
 }

@@ -3,7 +3,7 @@ import { assess, isRanked } from '../engineering/assess/assess.js';
 import type { Assessment } from '../engineering/assess/assess.js';
 import type { AssessContext } from '../engineering/assess/context.js';
 import { newScratch } from '../engineering/assess/scratch.js';
-import { buildingAt } from '../engineering/building-columns.js';
+import { buildingReader } from '../engineering/building-columns.js';
 import type { YearPools } from '../engineering/building-columns.js';
 import type { Mixture } from '../engineering/priority/mixture.js';
 import { RESULT_COLUMNS } from '../engineering/results.js';
@@ -59,10 +59,11 @@ export async function assessAll(
   let ranked = 0;
   for (const range of indexRanges(count)) {
     const { columns, notRanked, rows } = await readBuildings(db, inventoryId, range);
+    const read = buildingReader(columns, pools);
     for (let i = 0; i < rows; i += 1) {
       const at = range.from + i;
       const early = notRanked[i]!;
-      const building = buildingAt(columns, i, pools);
+      const building = read(i);
       const result =
         early === null ? assess(building, context, undefined, scratch) : { id: building.id, reason: early };
       if (!isRanked(result)) {

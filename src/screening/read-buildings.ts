@@ -20,17 +20,19 @@ export interface BuildingBlock {
   readonly rows: number;
 }
 
-/** The buildings of one range of indices. */
+/** The buildings of one range of indices; with `every` above 1 only those whose index it divides. */
 export async function readBuildings(
   db: Database,
   inventoryId: string,
   { from, to }: IndexRange,
+  every = 1,
 ): Promise<BuildingBlock> {
   const names = Object.keys(SPEC).map(quoteName).join(', ');
   const read = await db.columns(
-    `SELECT ${names} FROM building WHERE inventory_id = ? AND building_index >= ? AND building_index < ? ORDER BY building_index`,
+    `SELECT ${names} FROM building WHERE inventory_id = ? AND building_index >= ? AND building_index < ?
+     AND building_index % ? = 0 ORDER BY building_index`,
     SPEC,
-    [inventoryId, from, to],
+    [inventoryId, from, to, every],
   );
   const arrays = read as unknown as Readonly<Record<string, unknown>>;
   const pick = (list: readonly string[]): Readonly<Record<string, unknown>> =>
