@@ -43,6 +43,46 @@ export default tseslint.config(
     rules: { 'no-restricted-syntax': 'off' },
   },
   {
+    // A value stored by one engine must equal the one another computes: numeric/elementary.ts has exp, ln and sin, numeric/power.ts powers.
+    files: ['src/engineering/**'],
+    ignores: ['src/engineering/format.ts'],
+    rules: {
+      'no-restricted-properties': [
+        'error',
+        ...[
+          'exp',
+          'log',
+          'log2',
+          'log10',
+          'log1p',
+          'expm1',
+          'pow',
+          'sin',
+          'cos',
+          'tan',
+          'asin',
+          'acos',
+          'atan',
+          'atan2',
+          'sinh',
+          'cosh',
+          'tanh',
+          'cbrt',
+          'hypot',
+        ].map((property) => ({
+          object: 'Math',
+          property,
+          message: 'differs between engines: see numeric/elementary.ts',
+        })),
+      ],
+      'no-restricted-syntax': [
+        'error',
+        namedExportsOnly,
+        { selector: "BinaryExpression[operator='**']", message: 'differs between engines: see numeric/power.ts' },
+      ],
+    },
+  },
+  {
     // Plain JavaScript carries no types for the unsafe-use rules to judge; promises are still watched.
     files: ['**/*.mjs'],
     rules: {

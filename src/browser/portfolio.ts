@@ -1,5 +1,6 @@
 /** The loaded page, read building by building. */
 import type { BuildingColumns } from '../engineering/building-columns.js';
+import { formatPlaces } from '../engineering/format.js';
 import type { LoadedPage } from './unpack.js';
 
 type NumberName = keyof BuildingColumns['numbers'];
@@ -22,6 +23,8 @@ export interface Portfolio {
   readonly input: (column: NumberName, i: number) => number;
   /** An input as words; empty when unknown. */
   readonly word: (column: WordName, i: number) => string;
+  /** Rank by demand: one place, or the places that equal demands share. */
+  readonly demandPlaces: (i: number) => string;
   readonly group: (i: number) => string;
   readonly period_s: (i: number) => number;
 }
@@ -52,6 +55,7 @@ export function portfolioOf(page: LoadedPage): Portfolio {
     text,
     input: (column, i) => inputs.numbers[column][i] ?? NaN,
     word: (column, i) => inputs.words[column][i] ?? '',
+    demandPlaces: (i) => formatPlaces(number('demand_rank', i), number('demand_rank_last', i)),
     group: (i) => buildings.group[i] ?? '',
     period_s: (i) => number(text('governing', i) === 'transverse' ? 'period_transverse_s' : 'period_longitudinal_s', i),
   };

@@ -126,12 +126,13 @@ function addStudyCommands(program: Command, keep: Keep): void {
     )
     .argument('<study>', 'the study file')
     .option('--output <folder>', 'write rejects.csv there')
+    .addOption(units())
     .addOption(json())
     .addHelpText(
       'after',
-      `${examples('swaymark check study.yaml', 'swaymark check study.yaml --output checked')}\n\nExit code 1 when more rows are rejected than inventory.rejects_limit allows.`,
+      `${examples('swaymark check study.yaml', 'swaymark check study.yaml --output checked')}\n\nFindings quote the values of the inventory in metric units, whatever --units says. Exit code 1 when more rows are rejected than inventory.rejects_limit allows.`,
     )
-    .action(async (file: string, options: { output?: string; json?: true }) => {
+    .action(async (file: string, options: { output?: string; units: 'si' | 'us'; json?: true }) => {
       keep(await (await import('./commands/check.js')).check(file, options));
     });
   program
@@ -192,8 +193,9 @@ function addRunCommands(program: Command, keep: Keep): void {
     .option('--output <folder>', "folder of review.csv (default: the study's)")
     .addOption(study())
     .addOption(run())
+    .addOption(units())
     .addHelpText('after', examples('swaymark review --sample 10'))
-    .action(async (options: { sample: number; output?: string; study?: string; run?: number }) => {
+    .action(async (options: { sample: number; output?: string; study?: string; run?: number; units: 'si' | 'us' }) => {
       keep(await (await import('./commands/review.js')).review(options));
     });
 }

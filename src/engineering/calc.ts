@@ -52,7 +52,7 @@ export function nearestMethods(id: string): readonly string[] {
  */
 export function calculate(method: AnyRecord, assignments: readonly string[]): Calculation {
   const specs = method.family.inputs;
-  const extra = limitsWithoutInput(method);
+  const extra = checkedInputs(method);
   const given = readAssignments(method.id, [...specs, ...extra], assignments);
   const missing = specs.filter((spec) => !given.has(spec.name) && spec.fallback === undefined);
   if (missing.length > 0) throw new UserError(`${method.id}: missing ${missing.map(describeInput).join('; ')}`);
@@ -101,8 +101,8 @@ export function describeInput(spec: InputSpec): string {
   return `${spec.name} (${spec.meaning}${words}${list}${fallback})`;
 }
 
-/** Limits on quantities the formula itself does not take, such as the mean storey height: they may be given to be checked. */
-function limitsWithoutInput(method: AnyRecord): readonly InputSpec[] {
+/** Quantities that a limit is on and the formula itself does not take, such as the mean storey height: they may be given to be checked. */
+export function checkedInputs(method: AnyRecord): readonly InputSpec[] {
   const names = new Set(method.family.inputs.map(({ name }) => name));
   return method.limits
     .filter(({ input }) => !names.has(input))

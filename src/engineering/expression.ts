@@ -2,6 +2,7 @@
  * Display formulas: parsed by jsep, evaluated in tests against the code, and written out symbolically and with numbers put in.
  * Grammar: + - * / ^ ( ), names, numbers, pi, and the functions sqrt, sin, ln, exp, min, max.
  */
+import { exp, ln, sinOfAcute } from './numeric/elementary.js';
 import jsep from 'jsep';
 import { power } from './numeric/power.js';
 
@@ -10,9 +11,9 @@ jsep.addBinaryOp('^', 11, true);
 
 const FUNCTIONS: Readonly<Record<string, (...values: number[]) => number>> = {
   sqrt: Math.sqrt,
-  sin: Math.sin,
-  ln: Math.log,
-  exp: Math.exp,
+  sin: sinOfAcute,
+  ln,
+  exp,
   min: Math.min,
   max: Math.max,
 };

@@ -20,7 +20,9 @@ export function formatNumber(value: number, digits = 3): string {
   if (value === 0) return '0';
   const size = Math.abs(value);
   if (size >= 1e9 || size < 1e-4) return value.toPrecision(digits).replace('-', '−');
-  const decimals = Math.max(0, digits - 1 - Math.floor(Math.log10(size)));
+  // The power of ten of the rounded value: 0.0999 to two digits is 0.10, not 0.100.
+  const power = Number(size.toExponential(digits - 1).split('e')[1]);
+  const decimals = Math.max(0, digits - 1 - power);
   const text = value.toFixed(Math.min(decimals, 12));
   const [whole = '', part] = text.replace('-', '').split('.');
   const grouped = whole.length > 4 ? whole.replaceAll(/\B(?=(\d{3})+$)/g, '\u202f') : whole;
@@ -32,12 +34,22 @@ export function formatCount(value: number): string {
   return String(Math.round(value)).replaceAll(/\B(?=(\d{3})+$)/g, '\u202f');
 }
 
-/** A share as a percentage: "63 %", and "under 1 %", "over 99 %" rather than a false 0 or 100. */
+/**
+ * A share as a percentage: "63 %", and "under 1 %", "over 99 %" rather than a false 0 or 100. Cut, not rounded, so that a share below a
+ * threshold never prints as the threshold: 0.796 is "79 %" where sure means at least 80 %.
+ */
 export function formatShare(value: number): string {
   if (Number.isNaN(value)) return 'not known';
   if (value > 0 && value < 0.01) return 'under 1 %';
   if (value < 1 && value > 0.99) return 'over 99 %';
-  return `${String(Math.round(value * 100))} %`;
+  // 0.29 × 100 is 28.999… in binary.
+  return `${String(Math.floor(value * 100 + 1e-9))} %`;
+}
+
+/** A place, or the places that equals share: "5", "1 to 73"; `last` may be unknown. */
+export function formatPlaces(first: number, last: number): string {
+  if (Number.isNaN(first)) return 'not known';
+  return last > first ? `${formatCount(first)} to ${formatCount(last)}` : formatCount(first);
 }
 
 /** The unit in which a stored unit is shown. */

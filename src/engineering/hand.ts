@@ -1,13 +1,13 @@
 /** A trace as text: symbols, numbers put in, result with unit, clause. Shared by terminal, page and review sheet. */
 import { evaluateExpression, parseExpression, writeExpression } from './expression.js';
-import { formatNumber, formatQuantity } from './format.js';
+import { formatCount, formatNumber, formatQuantity, shownUnit, unitLabel } from './format.js';
 import type { Display } from './format.js';
 import type { InputValue } from './formula.js';
 import { cite } from './source.js';
 import { segmentAt } from './spectrum/compiled.js';
 import type { SpectrumFamily } from './spectrum/family.js';
 import type { Inputs } from './formula.js';
-import type { FormulaStep, Trace } from './trace.js';
+import type { FormulaStep, Trace, ValueStep } from './trace.js';
 import { findUnit } from './units.js';
 
 export interface HandStep {
@@ -91,10 +91,42 @@ const SYMBOLS: Readonly<Record<string, string>> = {
 
 const symbol = (name: string): string => SYMBOLS[name] ?? name;
 
-function showInput(value: InputValue): string {
-  if (typeof value === 'number') return formatNumber(value, 4);
+/** Quantities that count things: whole ones print without decimals. */
+const COUNTS: ReadonlySet<string> = new Set(['storeys', 'occupants_peak', 'occupied_hours_per_week']);
+
+function showNumber(name: string, value: number): string {
+  return COUNTS.has(name) && Number.isInteger(value) ? formatCount(value) : formatNumber(value, 4);
+}
+
+/** A number as the formula takes it, in the unit of its record; the unit is named where the display shows the quantity in another. */
+function showInput(name: string, value: InputValue, display: Display): string {
   if (typeof value === 'string') return value;
-  return `[${value.map((entry) => formatNumber(entry, 4)).join('; ')}]`;
+  const unit = unitOfName(name);
+  const named = unit === null || shownUnit(unit, display) === unit ? '' : ` ${unitLabel(unit, 'si')}`;
+  if (typeof value === 'number') return `${showNumber(name, value)}${named}`;
+  return `[${value.map((entry) => formatNumber(entry, 4)).join('; ')}]${named}`;
+}
+
+/** The result in the unit that its formula yields, since the numbers put in are in such units; then in the display's unit. */
+function showResult(value: number, unit: string | null, display: Display): string {
+  const own = formatQuantity(value, unit, 'si', 4);
+  if (unit === null || Number.isNaN(value) || shownUnit(unit, display) === unit) return own;
+  return `${own} (${formatQuantity(value, unit, display, 4)})`;
+}
+
+/** "height_m" -> "height": the unit stands with the value. */
+export function nameWithoutUnit(name: string, unit: string | null = unitOfName(name)): string {
+  return (unit === null ? name : name.slice(0, -unit.length - 1)).replaceAll('_', ' ');
+}
+
+function showValueStep({ name, value, origin }: ValueStep, display: Display): Pick<HandStep, 'title' | 'result'> {
+  const unit = unitOfName(name);
+  const title = nameWithoutUnit(name, unit);
+  // Lists come as text, in the unit of their name.
+  if (typeof value === 'string') return { title, result: unit === null ? value : `${value} ${unitLabel(unit, 'si')}` };
+  if (unit === null) return { title, result: showNumber(name, value) };
+  // The conversion that stands beside it yields the unit of the record, whatever is displayed.
+  return { title, result: formatQuantity(value, unit, origin === 'converted' ? 'si' : display, 4) };
 }
 
 /** The display formula of a step: the family's own, or the branch of the spectrum that was read. */
@@ -118,19 +150,19 @@ function formulaStep(step: FormulaStep, display: Display): HandStep {
   const constants = record.constants as Readonly<Record<string, number>>;
   let symbolic = record.family.procedure ?? '';
   let substituted = Object.entries(inputs)
-    .map(([name, input]) => `${symbol(name)} = ${showInput(input)}`)
+    .map(([name, input]) => `${symbol(name)} = ${showInput(name, input, display)}`)
     .join(', ');
   if (text !== null) {
     const node = parseExpression(text);
     symbolic = writeExpression(node, symbol);
-    substituted = writeExpression(node, (name) => showInput(inputs[name] ?? constants[name] ?? name));
+    substituted = writeExpression(node, (name) => showInput(name, inputs[name] ?? constants[name] ?? name, display));
   }
   return {
     kind: 'formula',
     title: record.title,
     symbolic: text === null ? symbolic : `${record.family.symbol} = ${symbolic}`,
     substituted: text === null ? substituted : `= ${substituted}`,
-    result: `= ${formatQuantity(value, record.family.unit, display, 4)}`,
+    result: `= ${showResult(value, record.family.unit, display)}`,
     source: branch === '' ? cite(record.source) : `${cite(record.source)}, ${branch}`,
     mark: record.verified,
     details: record.note === undefined ? [] : [record.note],
@@ -155,11 +187,8 @@ export function handSteps(trace: Trace, display: Display): readonly HandStep[] {
     switch (step.kind) {
       case 'heading':
         return { ...blank, kind: 'heading', title: step.text };
-      case 'value': {
-        const unit = unitOfName(step.name);
-        const shown = typeof step.value === 'number' ? formatQuantity(step.value, unit, display, 4) : step.value;
-        return { ...blank, kind: 'value', title: step.name, result: shown, source: step.why, mark: step.origin };
-      }
+      case 'value':
+        return { ...blank, kind: 'value', ...showValueStep(step, display), source: step.why, mark: step.origin };
       case 'choice':
         return {
           ...blank,

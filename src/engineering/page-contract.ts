@@ -26,6 +26,11 @@ export interface FindingCount {
   readonly example: string;
 }
 
+export interface ReasonCount {
+  readonly reason: string;
+  readonly count: number;
+}
+
 export interface Assumption {
   readonly id: string;
   readonly statement: string;
@@ -49,6 +54,8 @@ export interface PageSummary {
   readonly tie_group_at_edge: { readonly from: number; readonly to: number };
   readonly weak_in_list: number;
   readonly weak_outside: number;
+  /** Why buildings are not ranked, the commonest reason first. */
+  readonly not_ranked: readonly ReasonCount[];
   readonly rank_by: string;
   readonly fingerprints: { readonly study: string; readonly inventory: string; readonly methods: string };
   readonly account: readonly AccountLine[];

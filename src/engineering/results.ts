@@ -30,8 +30,9 @@ export const RESULT_COLUMNS: readonly ResultColumn[] = [
     'demand_rank',
     'whole',
     'Demand rank',
-    'place by spectral demand alone: the larger S_a of the two directions at their median periods',
+    'place by spectral demand alone (the larger S_a of the two directions at their median periods); the first place of those with equal demand',
   ),
+  column('demand_rank_last', 'whole', 'Demand rank, last', 'last place of those with equal demand'),
   column('governing', 'text', 'Governing direction', 'the direction with the larger priority in the leading case'),
   column('period_longitudinal_s', 'number', 'Period, longitudinal', 'median', 's'),
   column('period_longitudinal_16_s', 'number', 'Period, longitudinal, 16 %', '16th percentile', 's'),
@@ -61,3 +62,6 @@ export const RESULT_COLUMNS: readonly ResultColumn[] = [
   column('flags', 'text', 'Flags', 'codes, separated by blanks'),
   column('not_ranked', 'text', 'Not ranked because', 'reason; blank when ranked'),
 ];
+
+/** A building counts as of a weak type when that is at least as likely as not. */
+export const LIKELY_WEAK = 0.5;

@@ -28,15 +28,23 @@ export interface CheckedStudy {
   readonly account: readonly AccountLine[];
   readonly attributes: readonly AttributeCount[];
   readonly findings: readonly FindingCount[];
+  /** How many buildings `screen` will not rank for want of a lateral system; empty when none. */
+  readonly not_rankable: string;
   readonly rejected: { readonly share: number; readonly limit: number; readonly over: boolean };
   readonly files: readonly string[];
 }
 
 /** Nothing is ranked here: these two kinds only say what the intake found. */
 const TITLES: Readonly<Record<string, string>> = {
-  'merged-into-ranked': 'rows of buildings that can be assessed',
+  'merged-into-ranked': 'rows of buildings with a height or storeys, not yet assessed',
   'merged-into-not-ranked': 'rows of buildings that lack what an assessment needs',
 };
+
+function notRankable({ study }: LoadedStudy, { attributes }: Pick<TakenIn, 'attributes'>): string {
+  const unknown = Object.entries(attributes).find(([name]) => name === 'system')?.[1].unknown ?? 0;
+  if (unknown === 0 || study.system_prior !== undefined) return '';
+  return `${unknown === 1 ? '1 building' : `${String(unknown)} buildings`} cannot be ranked as the study stands: the lateral system is not known and no system_prior names a table of chances.`;
+}
 
 /** Share of rejected rows against the study's limit. */
 export function rejectedShare(
@@ -88,6 +96,7 @@ export async function checkStudy(path: string, options: CheckOptions = {}): Prom
       account: accountLines(taken.account).map((line) => ({ ...line, title: TITLES[line.kind] ?? line.title })),
       attributes: attributeCounts(taken.attributes),
       findings: await findingCounts(db, inventoryId),
+      not_rankable: notRankable(loaded, taken),
       rejected: rejectedShare(loaded, taken),
       files,
     };

@@ -5,6 +5,7 @@ import { RESULT_COLUMNS } from '../engineering/results.js';
 import { findUnit } from '../engineering/units.js';
 import { UserError } from '../errors.js';
 import type { Database } from '../store/database.js';
+import { FILLED_ATTRIBUTES } from '../store/schema.js';
 import { quoteName, quoteText } from '../store/sql.js';
 import { CSV_OPTIONS, firstColumn, guardedText } from './spreadsheet.js';
 
@@ -40,18 +41,17 @@ function inUnit(name: string, unit: string, shown: string): string {
 
 /** The select list of ranking.csv. Numbers go out in single precision: some seven digits; the Parquet file holds them whole. */
 function csvColumns(display: Display): string[] {
-  const result = (name: string): string => `r.${quoteName(name)}`;
   const results = RESULT_COLUMNS.filter(({ name }) => name !== 'rank').map(({ name, kind }) => {
     const value =
       kind === 'number'
-        ? `CAST(${result(name)} AS FLOAT)`
+        ? `CAST(${quoteName(name)} AS FLOAT)`
         : FREE_WORDS.has(name)
-          ? guardedText(result(name))
-          : result(name);
+          ? guardedText(quoteName(name))
+          : quoteName(name);
     return `${value} AS ${quoteName(name)}`;
   });
   const taken = TAKEN.map(({ name, kind, unit }) => {
-    const column = `b.${quoteName(name)}`;
+    const column = quoteName(name);
     const owner = TAKEN.find((other) => other.unit !== undefined && name === `${other.name}_origin`)?.unit ?? unit;
     const from = findUnit(owner ?? '');
     const to = findUnit(owner === undefined ? '' : shownUnit(owner, display));
@@ -65,29 +65,52 @@ function csvColumns(display: Display): string[] {
     return `CAST(${value} AS FLOAT) AS ${quoteName(shownName)}`;
   });
   return [
-    `r."rank" AS ${firstColumn('rank')}`,
-    ...['id', 'name', 'group'].map((name) => `${guardedText(`b.${quoteName(name)}`)} AS ${quoteName(name)}`),
+    `"rank" AS ${firstColumn('rank')}`,
+    ...['id', 'name', 'group'].map((name) => `${guardedText(quoteName(name))} AS ${quoteName(name)}`),
     ...results,
     ...taken,
   ];
 }
 
 function parquetColumns(): string[] {
-  return [
-    'r."rank"',
-    ...['id', 'name', 'group'].map((name) => `b.${quoteName(name)}`),
-    ...RESULT_COLUMNS.filter(({ name }) => name !== 'rank').map(({ name }) => `r.${quoteName(name)}`),
-    ...TAKEN.map(({ name }) => `b.${quoteName(name)}`),
-  ];
+  const results = RESULT_COLUMNS.map(({ name }) => name).filter((name) => name !== 'rank');
+  return ['rank', 'id', 'name', 'group', ...results, ...TAKEN.map(({ name }) => name)].map(quoteName);
 }
 
-async function select(db: Database, runId: number, columns: readonly string[]): Promise<string> {
-  const inventoryId = await db.value('SELECT inventory_id FROM run WHERE run_id = ?', [runId]);
-  if (typeof inventoryId !== 'string')
-    throw new UserError(`there is no run ${String(runId)}; \`swaymark runs\` lists them`);
-  return `SELECT ${columns.join(', ')} FROM result r
-    JOIN building b ON b.inventory_id = ${quoteText(inventoryId)} AND b.building_index = r.building_index
-    WHERE r.run_id = ${String(Math.trunc(runId))} ORDER BY r."rank" NULLS LAST, b.id`;
+/** Name of the temporary table that holds run `runId` in rank order, made when missing: a kept run never changes. */
+async function rankedTable(db: Database, runId: number): Promise<string> {
+  const run = String(Math.trunc(runId));
+  const inventory = await db.value(
+    'SELECT inventory_number FROM run JOIN inventory USING (inventory_id) WHERE run_id = ?',
+    [runId],
+  );
+  if (typeof inventory !== 'number') throw new UserError(`there is no run ${run}; \`swaymark runs\` lists them`);
+  const table = tableName(runId);
+  const results = RESULT_COLUMNS.map(({ name }) => `r.${quoteName(name)}`);
+  const taken = TAKEN.map(({ name }) => {
+    const filled = FILLED_ATTRIBUTES.find((attribute) => name === `${attribute}_origin`);
+    return filled === undefined ? `c.${quoteName(name)}` : `${filled}_of.origin AS ${quoteName(name)}`;
+  });
+  const fills = FILLED_ATTRIBUTES.map(
+    (name) =>
+      `JOIN fill ${name}_of ON ${name}_of.inventory_number = ${String(inventory)} AND ${name}_of.fill = c.${name}_fill`,
+  );
+  // Sorted once for both files, and past the view of buildings, whose other columns cost as much again. The index is in
+  // the order of ids.
+  await db.run(`CREATE TEMP TABLE IF NOT EXISTS ${table} AS
+    SELECT ${[...results, 'c.id', 'c.name', 'c."group"', ...taken].join(', ')} FROM result r
+    JOIN building_core c ON c.inventory_number = ${String(inventory)} AND c.building_index = r.building_index ${fills.join(' ')}
+    WHERE r.run_id = ${run} ORDER BY r."rank" NULLS LAST, r.building_index`);
+  return table;
+}
+
+function tableName(runId: number): string {
+  return `export_ranking_${String(Math.trunc(runId))}`;
+}
+
+/** Frees what the writers of run `runId` share. */
+export async function endRanking(db: Database, runId: number): Promise<void> {
+  await db.run(`DROP TABLE IF EXISTS temp.${tableName(runId)}`);
 }
 
 /** Writes run `runId` to `path` as CSV for spreadsheets: UTF-8 with byte order mark, CRLF, formulas made harmless. The folder must be open to `db`. */
@@ -97,12 +120,14 @@ export async function writeRankingCsv(
   path: string,
   display: Display = 'si',
 ): Promise<void> {
-  await db.run(`COPY (${await select(db, runId, csvColumns(display))}) TO ${quoteText(path)} ${CSV_OPTIONS}`);
+  const table = await rankedTable(db, runId);
+  await db.run(`COPY (SELECT ${csvColumns(display).join(', ')} FROM ${table}) TO ${quoteText(path)} ${CSV_OPTIONS}`);
 }
 
 /** Writes run `runId` to `path` as Parquet: the same rows and columns in SI units, numbers in full. The folder must be open to `db`. */
 export async function writeRankingParquet(db: Database, runId: number, path: string): Promise<void> {
+  const table = await rankedTable(db, runId);
   await db.run(
-    `COPY (${await select(db, runId, parquetColumns())}) TO ${quoteText(path)} (FORMAT parquet, COMPRESSION zstd)`,
+    `COPY (SELECT ${parquetColumns().join(', ')} FROM ${table}) TO ${quoteText(path)} (FORMAT parquet, COMPRESSION zstd, COMPRESSION_LEVEL 1, PRESERVE_ORDER true)`,
   );
 }

@@ -6,7 +6,7 @@ import { readPageScript } from '../reports/page-script.js';
 import { renderSummary } from '../reports/summary.js';
 import { pageDataOf } from '../screening/page-data.js';
 import type { Database } from '../store/database.js';
-import { writeRankingCsv, writeRankingParquet } from './ranking.js';
+import { endRanking, writeRankingCsv, writeRankingParquet } from './ranking.js';
 import { writeRejectsCsv } from './rejects.js';
 import { writeSet } from './write-set.js';
 
@@ -28,12 +28,16 @@ export async function writeReports(
   display: Display = 'si',
 ): Promise<Written> {
   const data = await pageDataOf(db, runId, display);
-  const files = await writeSet(folder, {
-    'dashboard.html': renderDashboard(data, readPageScript()),
-    'summary.md': renderSummary(data),
-    'ranking.csv': (path) => writeRankingCsv(db, runId, path, display),
-    'ranking.parquet': (path) => writeRankingParquet(db, runId, path),
-    'rejects.csv': (path) => writeRejectsCsv(db, data.summary.fingerprints.inventory, path),
-  });
-  return { files, data };
+  try {
+    const files = await writeSet(folder, {
+      'dashboard.html': renderDashboard(data, readPageScript()),
+      'summary.md': renderSummary(data),
+      'ranking.csv': (path) => writeRankingCsv(db, runId, path, display),
+      'ranking.parquet': (path) => writeRankingParquet(db, runId, path),
+      'rejects.csv': (path) => writeRejectsCsv(db, data.summary.fingerprints.inventory, path),
+    });
+    return { files, data };
+  } finally {
+    await endRanking(db, runId);
+  }
 }

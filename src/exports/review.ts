@@ -1,6 +1,7 @@
 /** The review sheet: every formula step of a few buildings drawn by lot, with blank cells for an independent check. */
 import { isRanked, assess } from '../engineering/assess/assess.js';
 import { compileContext } from '../engineering/assess/context.js';
+import { formatQuantity, shownUnit } from '../engineering/format.js';
 import type { Display } from '../engineering/format.js';
 import type { Inputs, InputValue } from '../engineering/formula.js';
 import { handSteps, unitOfName } from '../engineering/hand.js';
@@ -51,7 +52,12 @@ const STREAM = 0x52455657;
  * A sheet for `size` ranked buildings of a run, drawn without replacement with the study's seed: the same run and size give the same buildings.
  * @throws UserError when the run ranks no building.
  */
-export async function reviewSheet(db: Database, runId: number, size: number): Promise<ReviewSheet> {
+export async function reviewSheet(
+  db: Database,
+  runId: number,
+  size: number,
+  display: Display = 'si',
+): Promise<ReviewSheet> {
   const run = await readRun(db, runId);
   const seed = Number(await db.value('SELECT seed FROM run WHERE run_id = ?', [runId]));
   const ranked = await db.rows<{ id: string; name: string | null; rank: number }>(
@@ -67,10 +73,10 @@ export async function reviewSheet(db: Database, runId: number, size: number): Pr
   const rows: (string | number | null)[][] = [];
   for (const { id, name, rank } of chosen) {
     // Explaining first proves that the value recomputed here is the stored one.
-    const { building } = await explainBuilding(db, runId, id, 'si');
+    const { building } = await explainBuilding(db, runId, id, display);
     const trace = new Trace();
     if (!isRanked(assess(building, context, trace))) continue;
-    rows.push(...stepRows(trace, drawn).map((cells, step) => [id, name, rank, step + 1, ...cells]));
+    rows.push(...stepRows(trace, drawn, display).map((cells, step) => [id, name, rank, step + 1, ...cells]));
   }
   return { csv: csvText(HEAD, rows), buildings: chosen.map(({ id }) => id), drawn, steps: rows.length };
 }
@@ -93,7 +99,7 @@ export function drawSample<T extends { readonly id: string }>(
     .map(({ entry }) => entry);
 }
 
-function stepRows(trace: Trace, drawn: string, display: Display = 'si'): (string | number | null)[][] {
+function stepRows(trace: Trace, drawn: string, display: Display): (string | number | null)[][] {
   const shown = handSteps(trace, display);
   let heading = '';
   return trace.steps.flatMap((step, i) => {
@@ -111,7 +117,7 @@ function stepRows(trace: Trace, drawn: string, display: Display = 'si'): (string
         words.source,
         verified,
         words.symbolic,
-        showInputs(inputs, record.constants as Inputs),
+        showInputs(inputs, record.constants as Inputs, display),
         '',
         unit,
         '',
@@ -124,12 +130,19 @@ function stepRows(trace: Trace, drawn: string, display: Display = 'si'): (string
   });
 }
 
-/** Inputs and constants to full precision, so that a check by hand starts from the very same numbers. */
-function showInputs(inputs: Inputs, constants: Inputs): string {
+/**
+ * Inputs and constants to full precision and in the units of the formula, so that a check by hand starts from the very same numbers;
+ * a quantity shown in another unit follows in brackets.
+ */
+function showInputs(inputs: Inputs, constants: Inputs, display: Display): string {
   const show = ([name, value]: [string, InputValue]): string => {
     const unit = unitOfName(name);
     const text = typeof value === 'object' ? value.join(' / ') : String(value);
-    return `${name} = ${text}${unit === null ? '' : ` ${findUnit(unit)?.label ?? unit}`}`;
+    const other =
+      typeof value === 'number' && unit !== null && shownUnit(unit, display) !== unit
+        ? ` (${formatQuantity(value, unit, display, 4)})`
+        : '';
+    return `${name} = ${text}${unit === null ? '' : ` ${findUnit(unit)?.label ?? unit}`}${other}`;
   };
   return [...Object.entries(inputs), ...Object.entries(constants)].map(show).join('; ');
 }

@@ -10,7 +10,9 @@ import { writeReports } from './reports.js';
 import { rejectedShare } from './check-study.js';
 import { prepareFolder } from './write-set.js';
 
-export interface ScreenStudyOptions extends ScreenOptions {
+export interface ScreenStudyOptions extends Omit<ScreenOptions, 'made'> {
+  /** When the run is made; now when left out. */
+  readonly made?: Date;
   /** Units of the reports; SI when left out. */
   readonly units?: Display;
   /** Folder of the reports; the study's own, beside the study file, when left out. */
@@ -32,15 +34,15 @@ export interface ScreenedStudy extends ScreenOutcome {
  * Screens the study at `path`, keeps the run in study.duckdb beside it and writes the reports once the run is kept.
  * @throws UserError for a fault in study or inventory; then nothing is kept and no report is touched.
  * @example
- * const { runId, data, files } = await screenStudy('study.yaml', { made: new Date() });
+ * const { runId, data, files } = await screenStudy('study.yaml');
  */
-export async function screenStudy(path: string, options: ScreenStudyOptions): Promise<ScreenedStudy> {
+export async function screenStudy(path: string, options: ScreenStudyOptions = {}): Promise<ScreenedStudy> {
   const loaded = await loadStudy(path);
   const folder = prepareFolder(options.output ?? resolve(loaded.folder, loaded.study.output));
   const db = await openStudyDatabase(loaded, false, [folder]);
   try {
     options.onOpen?.(db);
-    const outcome = await screen(db, loaded, options);
+    const outcome = await screen(db, loaded, { ...options, made: options.made ?? new Date() });
     options.onProgress?.({ step: 'writing reports', share: NaN });
     const { files, data } = await writeReports(db, outcome.runId, folder, options.units ?? 'si');
     return { ...outcome, data, files, rejected: rejectedShare(loaded, outcome.taken) };

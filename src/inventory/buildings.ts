@@ -8,7 +8,7 @@ import type { Mapping } from './header.js';
 import { mergeRows } from './merge.js';
 
 /**
- * Makes `intake_building`: first_row (its key), id, rows, every mapped column, the decade and `partial area`.
+ * Makes `intake_building`: first_row (its key), id, rows, every mapped column, the decade, `partial area` and `merged storeys`.
  * @throws UserError when no row is a building.
  */
 export async function makeBuildings(db: Database, mapping: Mapping, readings: Readings, file: string): Promise<void> {
@@ -19,7 +19,7 @@ export async function makeBuildings(db: Database, mapping: Mapping, readings: Re
       .map(({ column }) => `r.${quoteName(column.name)}`);
     const hasFates = (await db.value('SELECT count(*) FROM intake_fate')) !== 0;
     await db.run(`CREATE OR REPLACE TEMP VIEW intake_building AS
-      SELECT r."row" AS first_row, r.key AS id, 1 AS rows, ${[...columns, ''].join(', ')} r.${DECADE}, r."use number", 0 AS "partial area"
+      SELECT r."row" AS first_row, r.key AS id, 1 AS rows, ${[...columns, ''].join(', ')} r.${DECADE}, r."use number", 0 AS "partial area", 0 AS "merged storeys"
       FROM (${readings.rowsSql}) r ${hasFates ? 'ANTI JOIN intake_fate f ON f."row" = r."row"' : ''}`);
   }
   if ((await db.value('SELECT count(*) FROM (SELECT 1 FROM intake_building LIMIT 1)')) === 0) {

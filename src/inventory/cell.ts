@@ -3,6 +3,7 @@ import type { InventoryColumn } from '../engineering/columns.js';
 import { findUnit } from '../engineering/units.js';
 import type { Unit } from '../engineering/units.js';
 import { showValue } from '../errors.js';
+import { nearestFew } from '../study/nearest.js';
 
 export interface CellNote {
   readonly code: string;
@@ -222,8 +223,10 @@ export function readWordCell(
   const word = own ?? foldWord(text).replaceAll(/[\s_]+/g, '-');
   if (column.words === undefined) return { word: own ?? text.trim() };
   if (column.words.includes(word)) return { word };
-  const allowed = column.words.length > 20 ? `${column.words.slice(0, 20).join(', ')}, …` : column.words.join(', ');
-  const entry = column.vocabulary === undefined ? '' : ` or a word listed under words.${column.vocabulary}`;
-  const message = `${showValue(text)} is not a word of ${column.name}; allowed: ${allowed}${entry}`;
+  // Not all of ours: the message stands in every row with the word.
+  const close = nearestFew(word, column.words, 3);
+  const hint = close.length === 0 ? '' : ` (nearest: ${close.join(', ')})`;
+  const list = column.vocabulary === undefined ? '' : `; list it under words.${column.vocabulary} of the study`;
+  const message = `${showValue(text)} is not a word of ${column.name}${hint}${list}; the study's JSON Schema has all words`;
   return { word: null, note: { code: 'unknown-word', message, action: TREATED_AS_UNKNOWN, kind: 'rejected-cell' } };
 }

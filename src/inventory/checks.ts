@@ -23,17 +23,12 @@ export const CHECKS = {
     'height per storey of 9 to 14 m where the median of the column is 2.5 to 5 m',
     'not converted; the spread of the height is widened to 0.35',
   ),
-  columnInFeet: check(
-    'column-looks-like-feet',
-    'height_m',
-    'median height per storey of 10 to 13 m',
-    'not converted; set the unit of the column to ft if it is in feet',
-  ),
+  columnInFeet: check('column-looks-like-feet', 'height_m', 'median height per storey of 10 to 13 m', 'not converted'),
   columnInMetres: check(
     'column-looks-like-metres',
     'height_m',
     'median height per storey of 0.7 to 1.4 m',
-    'not converted; set the unit of the column to m if it is in metres',
+    'not converted',
   ),
   plateSmall: check(
     'floor-plate-small',
@@ -91,6 +86,12 @@ export const CHECKS = {
     'rows of one building give different storeys',
     'the largest is taken',
   ),
+  storeysOfUnits: check(
+    'storeys-of-units',
+    'storeys_above',
+    'rows merged into one building, and more than 5000 m² of floor area per storey, or 8 units or more that alone give storeys, 2 at most',
+    'the storeys are kept with spread 0.40, because they may be those of a unit; give the storeys of the building',
+  ),
   yearsDisagree: check(
     'years-disagree',
     'year_built',
@@ -119,3 +120,5 @@ export const CHECKS = {
 
 export const HEIGHT_PER_STOREY = { low: 2.3, high: 6.5 } as const;
 export const SMALLEST_PLATE_M2 = 25;
+/** Where the storeys of merged rows may be those of units [judgement]. */
+export const STOREYS_OF_UNITS = { plate_m2: 5000, units: 8, storeys: 2 } as const;

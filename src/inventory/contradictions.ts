@@ -1,5 +1,5 @@
 /** The checks over single buildings, as one pass over the columns. */
-import { CHECKS, HEIGHT_PER_STOREY, SMALLEST_PLATE_M2 } from './checks.js';
+import { CHECKS, HEIGHT_PER_STOREY, SMALLEST_PLATE_M2, STOREYS_OF_UNITS } from './checks.js';
 import type { Check } from './checks.js';
 import type { BuildingNotes } from './findings.js';
 import type { Doubts } from './infer.js';
@@ -17,6 +17,7 @@ export interface Contradictions extends Doubts {
 export function findContradictions(sizes: Sizes, plans: Plans, notes: BuildingNotes): Contradictions {
   const rows = sizes.rowCount;
   const storeysDoubted = new Uint8Array(rows);
+  const storeysOfUnits = new Uint8Array(rows);
   const heightContradicted = new Uint8Array(rows);
   const retrofitDoubted = new Uint8Array(rows);
   const { storeys_above: storeys, height_m: height, floor_area_m2: area } = sizes;
@@ -50,6 +51,15 @@ export function findContradictions(sizes: Sizes, plans: Plans, notes: BuildingNo
       const message = `${short(plate)} m² per storey over a plan of ${short(plans.area_m2[at] ?? NaN)} m²`;
       notes.add(CHECKS.plateLarge, row, number(area, at), message);
     }
+    const merged = sizes.merged_storeys[at] ?? 0;
+    if (merged === 2 || (merged === 1 && plate > STOREYS_OF_UNITS.plate_m2)) {
+      storeysOfUnits[at] = 1;
+      const message =
+        merged === 2
+          ? `only units give storeys, ${short(n)} at most`
+          : `${short(number(area, at))} m² over ${short(n)} ${n === 1 ? 'storey' : 'storeys'} is ${short(plate)} m² per storey`;
+      notes.add(CHECKS.storeysOfUnits, row, n, message);
+    }
     const total = number(sizes.storeys_total, at);
     const below = number(sizes.storeys_below, at);
     if (Math.abs(n + below - total) > 1e-9) {
@@ -78,6 +88,7 @@ export function findContradictions(sizes: Sizes, plans: Plans, notes: BuildingNo
         : undefined;
   return {
     storeysDoubted,
+    storeysOfUnits,
     heightContradicted,
     retrofitDoubted,
     ...(check === undefined ? {} : { column: { check, ratio: median } }),

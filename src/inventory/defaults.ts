@@ -32,6 +32,8 @@ export const SPREAD = {
   fromPlan: 0.2,
   /** Storeys from the total, basements not known. */
   fromTotal: 0.15,
+  /** Storeys that may be those of a unit of the building. */
+  ofUnits: 0.4,
   /** A height that the storeys contradict. */
   contradicted: 0.35,
   /** Floor area by use alone. */

@@ -34,6 +34,8 @@ export interface Inferred {
 /** What the checks found that inference must know; arrays over the buildings, 1 where it holds. */
 export interface Doubts {
   readonly storeysDoubted: Uint8Array;
+  /** The storeys given may be those of a unit. */
+  readonly storeysOfUnits: Uint8Array;
   readonly heightContradicted: Uint8Array;
 }
 
@@ -67,8 +69,8 @@ function rulesOf(use: Use) {
     firstStorey: `first storey as given, the others × ${many.height_m} m (${use}) [judgement]`,
     fromHeight: `height ÷ ${many.height_m} m per storey (${use}), rounded [judgement]`,
     fromHall: `one storey: a hall (${use}) up to ${1.5 * single.height_m} m high [judgement]`,
-    defaultStoreys: `default: ${storeys} storeys (${use}) [judgement]`,
-    defaultArea: `default: ${plate_m2} m² per storey (${use}) × storeys [judgement]`,
+    defaultStoreys: `${storeys} ${storeys === 1 ? 'storey' : 'storeys'} by use (${use}) [judgement]`,
+    defaultArea: `${plate_m2} m² per storey by use (${use}) × storeys [judgement]`,
   };
 }
 
@@ -79,13 +81,17 @@ const RULE = {
   fromPlan: 'floor area ÷ plan area, rounded',
   area: 'plan area × storeys',
   contradicted: `given; the storeys contradict it, so its spread is widened to ${SPREAD.contradicted}`,
+  ofUnits: 'storeys of units, perhaps not of the building [judgement]',
   countedTwice: 'sum of the parts; one of them may be the whole building',
   someParts: 'sum of the parts that give an area; some give none',
 };
 
+const OF_UNITS: Fill = { origin: 'given', sigma: SPREAD.ofUnits, rule: RULE.ofUnits };
+
 interface Known {
   readonly use: number;
   readonly above: number;
+  readonly ofUnits: boolean;
   readonly below: number;
   readonly total: number;
   readonly height_m: number;
@@ -102,7 +108,7 @@ function inferStoreys(known: Known): Value {
   const use = USES[known.use] ?? 'unknown';
   const rules = RULES[known.use];
   const { above, below, total, height_m, area_m2, plan_m2 } = known;
-  if (above > 0) return { value: above, ...GIVEN };
+  if (above > 0) return { value: above, ...(known.ofUnits ? OF_UNITS : GIVEN) };
   if (total - below >= 1) return { value: total - below, sigma: 0, origin: 'inferred', rule: RULE.totalLessBelow };
   if (height_m > 0) {
     const { storeys, sigma } = storeysFromHeight(use, height_m);
@@ -165,6 +171,7 @@ export function inferSizes(sizes: Sizes, plans: { readonly area_m2: Float64Array
   const rows = sizes.rowCount;
   const fills = new Fills();
   const given = fills.number(GIVEN);
+  const ofUnits = fills.number(OF_UNITS);
   const contradicted = fills.number({ origin: 'given', sigma: SPREAD.contradicted, rule: RULE.contradicted });
   const someParts = fills.number({ origin: 'inferred', sigma: SPREAD.partialArea, rule: RULE.someParts });
   const countedTwice = fills.number({ origin: 'inferred', sigma: SPREAD.countedTwice, rule: RULE.countedTwice });
@@ -177,14 +184,16 @@ export function inferSizes(sizes: Sizes, plans: { readonly area_m2: Float64Array
     values === undefined ? NaN : (values[at] as number);
   const put = ({ value, fill }: FilledColumn, at: number, found: Value): void => {
     value[at] = found.value;
-    fill[at] = found.origin === 'given' ? given : fills.number(found);
+    fill[at] = found.sigma === 0 && found.origin === 'given' ? given : fills.number(found);
   };
 
   for (let at = 0; at < rows; at += 1) {
     const above = doubts.storeysDoubted[at] === 1 ? NaN : number(sizes.storeys_above, at);
     const height_m = number(sizes.height_m, at);
     const area_m2 = number(sizes.floor_area_m2, at);
+    const isOfUnits = above > 0 && doubts.storeysOfUnits[at] === 1;
     if (above > 0) storeys.value[at] = above;
+    if (isOfUnits) storeys.fill[at] = ofUnits;
     if (height_m > 0) {
       height.value[at] = height_m;
       if (doubts.heightContradicted[at] === 1) height.fill[at] = contradicted;
@@ -199,6 +208,7 @@ export function inferSizes(sizes: Sizes, plans: { readonly area_m2: Float64Array
     const known: Known = {
       use: sizes.use[at] as number,
       above,
+      ofUnits: isOfUnits,
       below: number(sizes.storeys_below, at),
       total: number(sizes.storeys_total, at),
       height_m,

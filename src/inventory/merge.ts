@@ -4,15 +4,17 @@
  *
  * Storeys: the largest, because a row of an upper unit or a garage may count only its own. Year: the earliest known.
  * Floor area, people, weight and cost: the sum. Words: the one with the largest floor area, ties by alphabet; yes wins over no.
+ * The name: see merge-names.ts.
  */
 import { USES } from '../engineering/building.js';
 import type { InventoryColumn } from '../engineering/columns.js';
 import type { Database } from '../store/database.js';
 import { quoteList, quoteName } from '../store/sql.js';
-import { CHECKS } from './checks.js';
+import { CHECKS, STOREYS_OF_UNITS } from './checks.js';
 import type { Check } from './checks.js';
 import { DECADE } from './cells.js';
 import type { Mapping } from './header.js';
+import { isUnitSql, nameBuildings } from './merge-names.js';
 
 const SUMMED = new Set(['floor_area_m2', 'occupants_peak', 'seismic_weight_kN', 'assessment_cost']);
 const SMALLEST = new Set([
@@ -57,11 +59,17 @@ export async function mergeRows(db: Database, mapping: Mapping, rowsSql: string)
   const parts = mapping.noBuilding === undefined ? 'intake_row' : '(SELECT * FROM intake_row WHERE NOT "site only")';
   const columns = mapping.columns.map(({ column }) => column).filter(({ name }) => name !== 'id');
   const hasArea = columns.some(({ name }) => name === 'floor_area_m2');
+  const hasName = columns.some(({ name }) => name === 'name');
+  if (hasName) await nameBuildings(db, parts, hasArea);
   const weight = hasArea ? 'coalesce(sum(floor_area_m2 ORDER BY floor_area_m2), 0)' : 'count(*)';
   const selected: string[] = [];
   const joins: string[] = [];
   for (const column of columns) {
     const name = quoteName(column.name);
+    if (column.name === 'name') {
+      selected.push('m.name');
+      continue;
+    }
     if (!isLargestWord(column)) {
       selected.push(`b.${name}`);
       continue;
@@ -78,16 +86,17 @@ export async function mergeRows(db: Database, mapping: Mapping, rowsSql: string)
       ? 'CAST(NULL AS INTEGER)'
       : `CAST(list_position(${quoteList(USES)}, ${(selected[use] ?? '').replace(' AS "use"', '')}) - 1 AS INTEGER)`;
   const grouped = columns
-    .filter((column) => !isLargestWord(column))
+    .filter((column) => !isLargestWord(column) && column.name !== 'name')
     .map((column) => `${mergedSql(column)} AS ${quoteName(column.name)}`);
   const partial = hasArea ? 'count(floor_area_m2) > 0 AND count(floor_area_m2) < count(*)' : 'false';
   const whole = hasArea ? LOOKS_WHOLE : 'false';
   await db.run(`CREATE OR REPLACE TEMP TABLE intake_building AS
     SELECT n.first_row, b.key AS id, n.rows, ${[...selected, ''].join(', ')}
-      b.${DECADE}, ${useNumber} AS "use number", b."partial area"
-    FROM (SELECT key, ${[...grouped, ''].join(', ')} min(${DECADE}) AS ${DECADE}, CASE WHEN ${whole} THEN 2 WHEN ${partial} THEN 1 ELSE 0 END AS "partial area" FROM ${parts} GROUP BY key) b
+      b.${DECADE}, ${useNumber} AS "use number", b."partial area", b."merged storeys"
+    FROM (SELECT key, ${[...grouped, ''].join(', ')} min(${DECADE}) AS ${DECADE}, CASE WHEN ${whole} THEN 2 WHEN ${partial} THEN 1 ELSE 0 END AS "partial area",
+      ${mergedStoreys(columns, hasName)} AS "merged storeys" FROM ${parts} GROUP BY key) b
     JOIN (SELECT key, CAST(count(*) AS INTEGER) AS rows, min("row") AS first_row FROM intake_row GROUP BY key) n ON n.key = b.key
-    ${joins.join(' ')}`);
+    ${hasName ? 'LEFT JOIN intake_name m ON m.key = b.key' : ''} ${joins.join(' ')}`);
   for (const column of columns) {
     const name = quoteName(column.name);
     if (column.name === 'storeys_above') await noteSpread(db, CHECKS.storeysDisagree, name, parts);
@@ -110,6 +119,15 @@ export async function mergeRows(db: Database, mapping: Mapping, rowsSql: string)
      FROM ${parts} GROUP BY key HAVING ${partial}`,
     [check.column, check.code, check.action],
   );
+}
+
+// 1: of several rows; 2: of a building of many units, all of whose storeys are given by units and are few.
+function mergedStoreys(columns: readonly InventoryColumn[], hasName: boolean): string {
+  if (!columns.some(({ name }) => name === 'storeys_above')) return '0';
+  const isUnit = hasName ? `coalesce(${isUnitSql('name')}, true)` : 'true';
+  const { units, storeys } = STOREYS_OF_UNITS;
+  return `CASE WHEN count(*) FILTER (WHERE ${isUnit}) >= ${units} AND max(storeys_above) <= ${storeys}
+      AND count(storeys_above) FILTER (WHERE NOT ${isUnit}) = 0 THEN 2 WHEN count(*) > 1 THEN 1 ELSE 0 END`;
 }
 
 // A double as text without the idle decimal: 2, not 2.0.

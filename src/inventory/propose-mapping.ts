@@ -3,6 +3,8 @@ import { COLUMNS } from '../engineering/columns.js';
 import type { InventoryColumn } from '../engineering/columns.js';
 import { findUnit } from '../engineering/units.js';
 import type { Unit } from '../engineering/units.js';
+import { showValue } from '../errors.js';
+import { BLANK } from '../study/inventory-schema.js';
 import { foldWord, readNumberCell } from './cell.js';
 import { medianOf } from './median.js';
 
@@ -53,8 +55,15 @@ function score(column: InventoryColumn, { words, unit }: HeaderWords): number {
   return best;
 }
 
-/** Pairs columns by the best score, each used once; `rows` are sample rows in the order of the header. */
-export function proposeMapping(header: readonly string[], rows: readonly (readonly string[])[]): Proposal {
+/**
+ * Pairs columns by the best score, each used once; `rows` are sample rows in the order of the header, `decimal` the
+ * sign their numbers are written with.
+ */
+export function proposeMapping(
+  header: readonly string[],
+  rows: readonly (readonly string[])[],
+  decimal = '.',
+): Proposal {
   const names = header.map(readHeaderName);
   const pairs = COLUMNS.flatMap((column) =>
     names.map((name, position) => ({ column, position, score: header[position] === '' ? 0 : score(column, name) })),
@@ -62,10 +71,13 @@ export function proposeMapping(header: readonly string[], rows: readonly (readon
   pairs.sort((a, b) => b.score - a.score || a.position - b.position);
   const chosen = new Map<InventoryColumn, number>();
   const taken = new Set<number>();
+  const unread: { readonly column: InventoryColumn; readonly position: number }[] = [];
   for (const { column, position } of pairs) {
     if (chosen.has(column) || taken.has(position)) continue;
-    const fits = isNumber(column) ? shareOfNumbers(rows, position, column) >= 0.5 : true;
-    if (!fits) continue;
+    if (isNumber(column) && shareOfNumbers(filledOf(rows, position), column, decimal) < 0.5) {
+      unread.push({ column, position });
+      continue;
+    }
     chosen.set(column, position);
     taken.add(position);
   }
@@ -74,7 +86,7 @@ export function proposeMapping(header: readonly string[], rows: readonly (readon
     const position = column === undefined ? undefined : chosen.get(column);
     return column === undefined || position === undefined
       ? undefined
-      : Float64Array.from(rows, (row) => bareNumber(row[position] ?? '', column));
+      : Float64Array.from(rows, (row) => bareNumber(row[position] ?? '', column, decimal));
   };
   const columns = COLUMNS.flatMap((column): ProposedColumn[] => {
     const position = chosen.get(column);
@@ -82,10 +94,20 @@ export function proposeMapping(header: readonly string[], rows: readonly (readon
     if (position === undefined || theirs === undefined) return [];
     return [{ ours: column.name, theirs, ...unitOf(column, names[position]?.unit, numbersOf) }];
   });
+  // Each column once, as the best of ours it resembles; not where another column holds that already.
+  const asked = new Map<number, InventoryColumn>();
+  for (const { column, position } of unread) {
+    if (!taken.has(position) && !asked.has(position) && !chosen.has(column)) asked.set(position, column);
+  }
   return {
     columns,
-    questions: questionsOf(columns, rows, header),
-    unused: header.filter((name, at) => name !== '' && !taken.has(at)),
+    questions: [
+      ...[...asked].map(([position, column]) =>
+        unreadQuestion(header[position] ?? '', filledOf(rows, position), column),
+      ),
+      ...questionsOf(columns, rows, header),
+    ],
+    unused: header.filter((name, at) => name !== '' && !taken.has(at) && !asked.has(at)),
   };
 }
 
@@ -93,15 +115,30 @@ function isNumber({ kind }: InventoryColumn): boolean {
   return kind === 'number' || kind === 'whole' || kind === 'year';
 }
 
-function bareNumber(text: string, column: InventoryColumn): number {
-  return readNumberCell(text, { ...column, kind: 'number', limits: [-Infinity, Infinity] }, { decimal: '.' }).value;
+const BLANKS = new Set(BLANK.map(foldWord));
+
+/** True for a cell that says that nothing is known. */
+export function isBlank(cell: string): boolean {
+  return BLANKS.has(foldWord(cell));
 }
 
-function shareOfNumbers(rows: readonly (readonly string[])[], position: number, column: InventoryColumn): number {
-  const filled = rows.map((row) => row[position]?.trim() ?? '').filter((cell) => cell !== '');
+function filledOf(rows: readonly (readonly string[])[], position: number): string[] {
+  return rows.map((row) => row[position]?.trim() ?? '').filter((cell) => !isBlank(cell));
+}
+
+function unreadQuestion(theirs: string, cells: readonly string[], { name, title }: InventoryColumn): string {
+  const shown = [...new Set(cells)].slice(0, 3).map(showValue).join(', ');
+  return `${showValue(theirs)} looks like ${name} (${title.toLowerCase()}), but its cells cannot be read as such: ${shown}; how are they written?`;
+}
+
+function bareNumber(text: string, column: InventoryColumn, decimal: string): number {
+  return readNumberCell(text, { ...column, kind: 'number', limits: [-Infinity, Infinity] }, { decimal }).value;
+}
+
+function shareOfNumbers(filled: readonly string[], column: InventoryColumn, decimal: string): number {
   if (filled.length === 0) return 1;
   const unit = column.unit === undefined ? undefined : findUnit(column.unit);
-  const format = { decimal: '.', unit, stored: unit };
+  const format = { decimal, unit, stored: unit };
   const open = { ...column, limits: [-Infinity, Infinity] as const };
   return (
     filled.filter((cell) => readNumberCell(cell, open, format).note?.kind !== 'rejected-cell').length / filled.length
@@ -140,7 +177,7 @@ function questionsOf(
   if (id === undefined) questions.push('no column looks like an identifier; which one names a building?');
   else {
     const position = header.indexOf(id.theirs);
-    const ids = rows.map((row) => row[position]?.trim() ?? '').filter((cell) => cell !== '');
+    const ids = filledOf(rows, position);
     const repeated = ids.length - new Set(ids).size;
     if (repeated > 0.01 * ids.length) {
       questions.push(

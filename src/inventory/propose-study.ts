@@ -1,9 +1,11 @@
 /** The study file that `init` proposes for a table: what is known is filled in, what only its owner knows is a question. */
 import { basename } from 'node:path';
 import { findColumn } from '../engineering/columns.js';
+import { BLANK } from '../study/inventory-schema.js';
 import { foldWord } from './cell.js';
+import { detectDecimal } from './decimal-mark.js';
 import { guessUse } from './guess-words.js';
-import { proposeMapping } from './propose-mapping.js';
+import { isBlank, proposeMapping } from './propose-mapping.js';
 import type { Proposal } from './propose-mapping.js';
 import { readSample } from './sample.js';
 import type { Sample } from './sample.js';
@@ -21,7 +23,8 @@ const MOST_WORDS = 60;
 /** Reads the table at `path` and proposes a study for it. @throws UserError when the table cannot be read. */
 export function proposeStudy(path: string): ProposedStudy {
   const sample = readSample(path);
-  const proposal = proposeMapping(sample.header, sample.rows);
+  const decimal = detectDecimal(sample.rows, sample.delimiter, BLANK);
+  const proposal = proposeMapping(sample.header, sample.rows, decimal.mark);
   const words = unknownWords(sample, proposal, 'use');
   const lines = [
     `title: ${quote(basename(path).replace(/\.[^.]*$/, ''))}  ${MARK} what is the study called?`,
@@ -30,8 +33,8 @@ export function proposeStudy(path: string): ProposedStudy {
     `  file: ${quote(basename(path))}`,
     `  encoding: ${sample.encoding}`,
     `  delimiter: ${sample.delimiter === '\t' ? 'tab' : quote(sample.delimiter)}`,
-    '  decimal: "."',
-    '  blank: ["", "-", "n/a", "NULL", "?"]',
+    `  decimal: ${quote(decimal.mark)}${decimal.question === undefined ? '' : `  ${MARK} ${decimal.question}`}`,
+    `  blank: [${BLANK.map(quote).join(', ')}]`,
     '  columns:',
     ...columnLines(proposal),
     ...proposal.questions.map((question) => `  ${MARK} ${question}`),
@@ -99,7 +102,7 @@ function unknownWords(sample: Sample, proposal: Proposal, column: 'use' | 'syste
   const counts = new Map<string, number>();
   for (const row of sample.rows) {
     const cell = row[position]?.trim() ?? '';
-    if (cell !== '') counts.set(cell, (counts.get(cell) ?? 0) + 1);
+    if (!isBlank(cell)) counts.set(cell, (counts.get(cell) ?? 0) + 1);
   }
   const ours = findColumn(column)?.words ?? [];
   return [...counts]

@@ -29,6 +29,8 @@ export interface Sizes extends Readonly<Partial<Record<NumberName, Float64Array>
   readonly use: Int32Array;
   /** 1 where the floor area is a sum of some of the parts, 2 where one part may be the whole. */
   readonly partial: Int32Array;
+  /** 1 where the storeys are those of several rows, 2 where they come from the units of a building alone. */
+  readonly merged_storeys: Int32Array;
   readonly footprint?: (string | null)[];
 }
 
@@ -41,10 +43,16 @@ export async function readSizes(db: Database, mapping: Mapping): Promise<Sizes> 
     'first_row',
     '"use number" AS use',
     '"partial area" AS partial',
+    '"merged storeys" AS merged_storeys',
     ...numbers.map(quoteName),
     ...(has.has('footprint') ? ['footprint'] : []),
   ];
-  const spec: Record<string, 'f64' | 'i32' | 'text'> = { first_row: 'i32', use: 'i32', partial: 'i32' };
+  const spec: Record<string, 'f64' | 'i32' | 'text'> = {
+    first_row: 'i32',
+    use: 'i32',
+    partial: 'i32',
+    merged_storeys: 'i32',
+  };
   for (const name of numbers) spec[name] = 'f64';
   if (has.has('footprint')) spec['footprint'] = 'text';
   const sizes = (await db.columns(`SELECT ${selected.join(', ')} FROM intake_building`, spec)) as unknown as Sizes;

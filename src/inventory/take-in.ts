@@ -1,6 +1,6 @@
 /** The whole intake: from a file to the tables `inventory`, `building`, `finding`, `row_account`, `year_pool` and `neighbour`. */
 import { isAbsolute, join } from 'node:path';
-import { Bug } from '../errors.js';
+import { Bug, UserError } from '../errors.js';
 import type { Database } from '../store/database.js';
 import { canonicalJson } from '../study/fingerprint.js';
 import { readAccount, storeAccount } from './account.js';
@@ -29,7 +29,7 @@ import type { Source } from './source.js';
 import { storeBuildings } from './store-buildings.js';
 
 /** Goes into the fingerprint: an intake that reads differently is another inventory. */
-const INTAKE_VERSION = 1;
+const INTAKE_VERSION = 3;
 
 export interface TakenIn {
   readonly inventoryId: string;
@@ -88,6 +88,10 @@ async function takeTable(
   progress: (step: IntakeStep) => void,
 ): Promise<TakenIn> {
   const { source, pairs, table, mapping, inventoryId } = parts;
+  if (table.written + table.rejects.length === 0) {
+    const message = `the table has a header (${table.header.length} columns) and no rows; add a row for each building below it`;
+    throw new UserError(message, { file: source.path });
+  }
   await startFindings(db);
   await readCells(db, table, mapping, study.inventory);
   await noteTable(db, table);
@@ -106,7 +110,12 @@ async function takeTable(
   await notes.write(db);
   if (doubts.column !== undefined) {
     const { check, ratio } = doubts.column;
-    await noteColumn(db, check, String(ratio), `the median height per storey is ${Number(ratio.toPrecision(3))} m`);
+    const shown = String(Number(ratio.toPrecision(3)));
+    const [unit, name] = check === CHECKS.columnInFeet ? ['ft', 'feet'] : ['m', 'metres'];
+    const theirs = mapping.columns.find(({ column }) => column.name === check.column)?.theirs ?? '';
+    const entry = `${check.column}: {column: ${JSON.stringify(theirs)}, unit: ${unit}}`;
+    const action = `${check.action}; if ${JSON.stringify(theirs)} is in ${name}, write under inventory.columns of the study: ${entry}`;
+    await noteColumn(db, { ...check, action }, shown, `the median height per storey is ${shown} m`);
   }
   await noteNearTwins(db, mapping);
   await makeYearPools(db, mapping, inventoryId);

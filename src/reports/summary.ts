@@ -1,8 +1,8 @@
 /** The summary: one page of Markdown that a council can read. */
 import { formatCount, formatNumber, formatShare } from '../engineering/format.js';
 import type { PageData } from '../engineering/page-contract.js';
-import { answerNotes, answerSentence, attributeTotal, decisiveAttributes, LEVEL_OF_WORK, orderSentence } from './dashboard/answers.js';
-import { governingPeriod, listLength, numberAt } from './dashboard/reading.js';
+import { answerNotes, answerSentence, attributeTotal, decisiveAttributes, LEVEL_OF_WORK, orderSentence, slopeSentence } from './dashboard/answers.js';
+import { capacityWords, demandPlaces, governingPeriod, listLength, numberAt } from './dashboard/reading.js';
 import { middleSentence, reasonTeller } from './dashboard/reasons.js';
 import { madeAt } from './made-at.js';
 import { markdownTable, markdownText } from './markdown.js';
@@ -18,7 +18,7 @@ export function renderSummary(data: PageData): string {
     `${LEVEL_OF_WORK} Run ${markdownText(summary.run)}, made ${markdownText(madeAt(summary.made))} with ${markdownText(summary.program)}.`,
     `**${answerSentence(data)}**`,
     orderSentence(data),
-    ...answerNotes(data),
+    ...answerNotes(data).map((note) => markdownText(note)),
     '## The list',
     listPart(data),
     '## Where the rows went',
@@ -44,7 +44,7 @@ export function renderSummary(data: PageData): string {
       summary.assumptions.map(({ statement, value, source }) => [statement, value, source].map(markdownText)),
     ),
     '## Cautions',
-    [LEVEL_OF_WORK, ...summary.cautions].map((caution) => `- ${markdownText(caution)}`).join('\n'),
+    summary.cautions.map((caution) => `- ${markdownText(caution)}`).join('\n'),
     `Fingerprints: study ${markdownText(summary.fingerprints.study)}, inventory ${markdownText(summary.fingerprints.inventory)}, methods ${markdownText(summary.fingerprints.methods)}.`,
   ];
   return `${parts.join('\n\n')}\n`;
@@ -66,10 +66,10 @@ function listPart(data: PageData): string {
       formatShare(numberAt(data, 'chance', i)),
       `${whole('rank_best')} to ${whole('rank_worst')}`,
       whole('tie_group'),
-      whole('demand_rank'),
+      demandPlaces(data, i),
       formatNumber(governingPeriod(data, i), 3),
       formatNumber(numberAt(data, 'sa_g', i), 3),
-      formatNumber(numberAt(data, 'capacity_g', i), 2),
+      capacityWords(data, i),
       reason(i),
     ];
   });
@@ -83,7 +83,6 @@ function listPart(data: PageData): string {
 }
 
 function slopesPart({ summary }: PageData): readonly string[] {
-  if (summary.slopes.length === 0) return [];
-  const slopes = summary.slopes.map(({ spectrum, k, how }) => `${markdownText(spectrum)} ${formatNumber(k, 3)} (${markdownText(how)})`);
-  return [`Slope k of the hazard curve: ${slopes.join('; ')}.`];
+  const sentence = slopeSentence(summary);
+  return sentence === '' ? [] : [markdownText(sentence)];
 }

@@ -56,7 +56,7 @@ export function assumptionsOf(settings: AssessSettings, slopes: readonly SlopeFo
     {
       id: 'slope',
       statement: 'Slope k of the hazard curve',
-      value: slopes.map(({ spectrum, k }) => `${spectrum} ${k.toFixed(2)}`).join(', '),
+      value: slopes.map(({ spectrum, k }) => `${k.toFixed(2)} for ${spectrum}`).join(', '),
       source: settings.slopeSource,
     },
     {

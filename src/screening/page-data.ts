@@ -56,17 +56,32 @@ export async function pageDataOf(db: Database, runId: number, display: Display):
   for (const name of others) spec[name] = 'text';
   for (const name of BUILDING_NUMBERS) spec[name] = 'f64';
   for (const name of BUILDING_WORDS) spec[name] = 'text';
-  const mine = Object.keys(spec).map((name) => `b.${quoteName(name)}`);
-  const theirs = RESULT_COLUMNS.map(({ name, kind }) => {
-    spec[`r_${name}`] = KIND[kind] === 'i32' ? 'f64' : KIND[kind]!;
+  const resultSpec: Record<string, ColumnKind> = {};
+  const results = RESULT_COLUMNS.map(({ name, kind }) => {
+    resultSpec[`r_${name}`] = KIND[kind] === 'i32' ? 'f64' : KIND[kind]!;
     return `r.${quoteName(name)} AS ${quoteName(`r_${name}`)}`;
   });
-  const read = (await db.columns(
-    `SELECT ${[...mine, ...theirs].join(', ')} FROM result r JOIN building b ON b.inventory_id = ? AND b.building_index = r.building_index
-     WHERE r.run_id = ? ORDER BY r.rank NULLS LAST, b.id LIMIT ${String(SHOWN_AT_MOST)}`,
+  const buildings = Object.keys(spec).map((name) => `b.${quoteName(name)}`);
+  // The places first: joining and sorting a million rows of all columns to show some thousands takes seconds.
+  await db.run(
+    `CREATE OR REPLACE TEMP TABLE page_place AS SELECT building_index, row_number() OVER (ORDER BY "rank" NULLS LAST, building_index) AS place
+     FROM (SELECT building_index, "rank" FROM result WHERE run_id = ? ORDER BY "rank" NULLS LAST, building_index LIMIT ${String(SHOWN_AT_MOST)})`,
+    [runId],
+  );
+  const ofBuildings = await db.columns(
+    `SELECT ${buildings.join(', ')} FROM building b JOIN page_place p USING (building_index) WHERE b.inventory_id = ? ORDER BY p.place`,
     spec,
-    [run.inventory_id, runId],
-  )) as unknown as Readonly<Record<string, readonly (string | null)[] | Float64Array>> & { readonly rowCount: number };
+    [run.inventory_id],
+  );
+  const ofResults = await db.columns(
+    `SELECT ${results.join(', ')} FROM result r JOIN page_place p USING (building_index) WHERE r.run_id = ? ORDER BY p.place`,
+    resultSpec,
+    [runId],
+  );
+  await db.run('DROP TABLE page_place');
+  const read = { ...ofBuildings, ...ofResults } as unknown as Readonly<
+    Record<string, readonly (string | null)[] | Float64Array>
+  > & { readonly rowCount: number };
   const pick = (names: readonly string[]): Readonly<Record<string, unknown>> =>
     Object.fromEntries(names.map((name) => [name, Array.from<string | number | null>(read[name]!)]));
   const numbers = (name: string): (number | null)[] =>
@@ -83,6 +98,10 @@ export async function pageDataOf(db: Database, runId: number, display: Display):
       rank_by,
       fingerprints: { study: study_fingerprint, inventory: inventory_id, methods: methods_fingerprint },
       findings: await findingCounts(db, inventory_id),
+      not_ranked: await db.rows<{ reason: string; count: number }>(
+        'SELECT not_ranked AS reason, count(*) AS count FROM result WHERE run_id = ? AND not_ranked IS NOT NULL GROUP BY 1 ORDER BY 2 DESC, 1',
+        [runId],
+      ),
       cautions: CAUTIONS,
     },
     settings: run.settings,

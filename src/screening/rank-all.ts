@@ -1,5 +1,6 @@
 /** Ranks the assessed buildings and writes rank, chance, band and tie group into their result columns. */
-import { rankAll } from '../engineering/priority/rank.js';
+import { exp } from '../engineering/numeric/elementary.js';
+import { rankAll, roundedMedian } from '../engineering/priority/rank.js';
 import type { Ranking } from '../engineering/priority/rank.js';
 import type { Assessed } from './assess-all.js';
 
@@ -23,14 +24,21 @@ export function rankInto(assessed: Assessed, listSize: number, seed: number): Ra
     wholes['rank_worst']![at] = ranking.rankWorst[i]!;
     wholes['tie_group']![at] = ranking.tieGroup[i]!;
     numbers['chance']![at] = ranking.chance[i]!;
-    numbers['priority']![at] = Math.exp(median[i]! - medianOfPortfolio);
+    numbers['priority']![at] = exp(median[i]! - medianOfPortfolio);
     texts['in_list']![at] = ranking.rank[i]! <= listSize ? 'yes' : 'no';
   }
-  const byDemand = Int32Array.from(id.keys()).sort(
-    (a, b) => demand[b]! - demand[a]! || people[b]! - people[a]! || (id[a]! < id[b]! ? -1 : 1),
-  );
-  byDemand.forEach((building, place) => {
-    wholes['demand_rank']![index[building]!] = place + 1;
-  });
+  // equal demands share their places: on a plateau there is no order by demand
+  const key = Float64Array.from(demand, roundedMedian);
+  const byDemand = Int32Array.from(id.keys()).sort((a, b) => key[b]! - key[a]!);
+  for (let from = 0; from < n;) {
+    let to = from + 1;
+    while (to < n && key[byDemand[to]!] === key[byDemand[from]!]) to += 1;
+    for (let place = from; place < to; place += 1) {
+      const at = index[byDemand[place]!]!;
+      wholes['demand_rank']![at] = from + 1;
+      wholes['demand_rank_last']![at] = to;
+    }
+    from = to;
+  }
   return { ranking, medianOfPortfolio };
 }

@@ -2,11 +2,13 @@
 import { join } from 'node:path';
 import { compileContext } from '../engineering/assess/context.js';
 import { RESULT_COLUMNS } from '../engineering/results.js';
+import { UserError } from '../errors.js';
 import { takeIn } from '../inventory/take-in.js';
 import type { TakenIn } from '../inventory/take-in.js';
 import { openDatabase } from '../store/database.js';
 import type { Database } from '../store/database.js';
-import { prepareSchema } from '../store/schema.js';
+import { RESULT_WORDS, prepareSchema } from '../store/schema.js';
+import { enumerate } from '../store/vectors.js';
 import { studyFingerprint } from '../study/fingerprint.js';
 import type { LoadedStudy } from '../study/load.js';
 import { assessAll } from './assess-all.js';
@@ -87,8 +89,9 @@ export async function screen(db: Database, loaded: LoadedStudy, options: ScreenO
     report('ranking');
     const listSize = study.ranking.list_size;
     const ranked = rankInto(assessed, listSize, study.seed);
+    if (assessed.id.length === 0) throw nothingRanked(assessed, count);
     report('keeping');
-    const account = { ...taken.account, ...(await rankedRows(db, taken.inventoryId, assessed)) };
+    const account = { ...taken.account, ...(await rankedRows(db, taken.inventoryId, count, assessed)) };
     const summary: StoredSummary = {
       rows_in: taken.rowsIn,
       buildings: count,
@@ -122,31 +125,61 @@ export async function screen(db: Database, loaded: LoadedStudy, options: ScreenO
   });
 }
 
+/** What to do about a reason that keeps buildings out of the ranking. */
+const REMEDIES: readonly (readonly [RegExp, string])[] = [
+  [/^system not known/, 'give their systems, or name in system_prior a table of chances that covers them'],
+  [/height/, 'map a column of heights or of storeys'],
+  [/people/, 'map a column of people or of floor areas, or rank by ratio or by demand'],
+  [/spectrum/, 'name a spectrum for them in the study'],
+  [/^every method/, 'leave a method for the period switched on'],
+  [/already assessed|demolished/, 'check the column of the status and the words it is read by'],
+];
+
+function nothingRanked({ results }: Assessed, count: number): UserError {
+  const counts = new Map<string, number>();
+  for (const reason of results.texts['not_ranked']!) {
+    if (reason !== null) counts.set(reason, (counts.get(reason) ?? 0) + 1);
+  }
+  const [reason, times] = [...counts].sort((a, b) => b[1] - a[1])[0] ?? ['the inventory holds none', 0];
+  const remedy = REMEDIES.find(([pattern]) => pattern.test(reason))?.[1] ?? '`swaymark check` says what is missing';
+  const of = count === 1 ? 'the only building cannot' : `none of ${String(count)} buildings can`;
+  return new UserError(`${of} be ranked: ${reason}${count > 1 ? ` (${String(times)})` : ''}; ${remedy}`);
+}
+
 /** Rows of ranked and of not ranked buildings, counted from the results: status and missing values are known only now. */
 async function rankedRows(
   db: Database,
   inventoryId: string,
+  count: number,
   assessed: Assessed,
 ): Promise<Readonly<Record<string, number>>> {
-  const read = await db.columns(
-    'SELECT rows FROM building WHERE inventory_id = ? ORDER BY building_index',
-    { rows: 'i32' },
+  // Nearly every building is one row: only the others are read.
+  const merged = await db.columns(
+    `SELECT building_index AS at, rows FROM building_core
+     WHERE rows <> 1 AND inventory_number = (SELECT inventory_number FROM inventory WHERE inventory_id = ?)`,
+    { at: 'i32', rows: 'i32' },
     [inventoryId],
   );
-  let ranked = 0;
-  let all = 0;
-  for (const rows of read.rows) all += rows;
-  for (const at of assessed.index) ranked += read.rows[at]!;
-  return { 'merged-into-ranked': ranked, 'merged-into-not-ranked': all - ranked };
+  const isRanked = new Uint8Array(count);
+  for (const at of assessed.index) isRanked[at] = 1;
+  let ranked = assessed.index.length;
+  let not = count - ranked;
+  merged.at.forEach((at, i) => {
+    if (isRanked[at] === 1) ranked += merged.rows[i]! - 1;
+    else not += merged.rows[i]! - 1;
+  });
+  return { 'merged-into-ranked': ranked, 'merged-into-not-ranked': not };
 }
 
 async function appendResults(db: Database, runId: number, count: number, { results }: Assessed): Promise<void> {
-  const index = Int32Array.from({ length: count }, (_, i) => i);
   await db.append('result', [
     new Int32Array(count).fill(runId),
-    index,
-    ...RESULT_COLUMNS.map(({ name, kind }) =>
-      kind === 'number' ? results.numbers[name]! : kind === 'whole' ? results.wholes[name]! : results.texts[name]!,
-    ),
+    Int32Array.from({ length: count }, (_, i) => i),
+    ...RESULT_COLUMNS.map(({ name, kind }) => {
+      if (kind === 'number') return results.numbers[name]!;
+      if (kind === 'whole') return results.wholes[name]!;
+      const words = RESULT_WORDS[name];
+      return words === undefined ? results.texts[name]! : enumerate(words, results.texts[name]!);
+    }),
   ]);
 }

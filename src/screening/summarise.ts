@@ -1,6 +1,7 @@
 /** The run in figures: counts, certainty of the list, provenance; stored with the run and shown by every report. */
 import { findColumn } from '../engineering/columns.js';
 import type { AccountLine, AttributeCount, FindingCount, PageSummary } from '../engineering/page-contract.js';
+import { LIKELY_WEAK } from '../engineering/results.js';
 import type { Attributes } from '../inventory/attributes.js';
 import type { RowAccount } from '../inventory/account.js';
 import type { Database } from '../store/database.js';
@@ -17,9 +18,6 @@ const ACCOUNT_TITLES: Readonly<Record<string, string>> = {
 
 /** A place is called sure from this chance of belonging on. */
 export const SURE = 0.8;
-
-/** A building counts as of a weak type when that is at least as likely as not. */
-const LIKELY = 0.5;
 
 export type StoredSummary = Pick<
   PageSummary,
@@ -77,22 +75,19 @@ export function rankingFigures(
   let weakOut = 0;
   ranking.order.forEach((building, place) => {
     if (place < places && ranking.chance[building]! >= SURE) sure += 1;
-    if (!(assessed.results.numbers['weak_chance']![assessed.index[building]!]! >= LIKELY)) return;
+    if (!(assessed.results.numbers['weak_chance']![assessed.index[building]!]! >= LIKELY_WEAK)) return;
     if (place < places) weakIn += 1;
     else weakOut += 1;
   });
   const edge = n === 0 ? 0 : ranking.tieGroup[ranking.order[places - 1]!]!;
-  const ofEdge = ranking.order.reduce<number[]>(
-    (list, building, place) => (ranking.tieGroup[building] === edge ? [...list, place + 1] : list),
-    [],
-  );
+  const isOfEdge = (building: number): boolean => ranking.tieGroup[building] === edge;
   return {
     ranked: n,
     list_size: listSize,
     expected_wrong_places: ranking.expectedWrong,
     sure_places: sure,
     largest_equal_block: ranking.largestEqualBlock,
-    tie_group_at_edge: { from: ofEdge[0] ?? 0, to: ofEdge.at(-1) ?? 0 },
+    tie_group_at_edge: { from: ranking.order.findIndex(isOfEdge) + 1, to: ranking.order.findLastIndex(isOfEdge) + 1 },
     weak_in_list: weakIn,
     weak_outside: weakOut,
   };

@@ -1,3 +1,4 @@
+import { statSync } from 'node:fs';
 import { resolve } from 'node:path';
 import {
   DOUBLE,
@@ -5,11 +6,12 @@ import {
   DuckDBEnumType,
   DuckDBInstance,
   DuckDBTypeId,
+  ENUM,
   INTEGER,
   VARCHAR,
 } from '@duckdb/node-api';
 import type { DuckDBConnection, DuckDBMaterializedResult } from '@duckdb/node-api';
-import { Bug } from '../errors.js';
+import { Bug, UserError } from '../errors.js';
 import { translateError } from './messages.js';
 import { scratchFolder } from './scratch.js';
 import { quoteText } from './sql.js';
@@ -26,6 +28,9 @@ export interface OpenOptions {
   /** Folders besides the scratch folder that statements may read from and write to. */
   readonly folders?: readonly string[];
 }
+
+/** Beyond it the engine spills to the scratch folder; its own default is most of the machine, beside our heap. [judgement] */
+const MEMORY_LIMIT = '1GB';
 
 interface Shared {
   readonly instance: DuckDBInstance;
@@ -70,9 +75,12 @@ export async function openDatabase(options: OpenOptions): Promise<Database> {
 async function start(path: string, readOnly: boolean, folders: readonly string[]): Promise<DuckDBInstance> {
   const allowed = [scratchFolder(), ...folders.map((folder) => resolve(folder))];
   const file = path === ':memory:' ? undefined : path;
+  if (file !== undefined && statSync(file, { throwIfNoEntry: false })?.isDirectory() === true)
+    throw new UserError('a folder stands where the database belongs; move it away or rename it', { file });
   try {
     const instance = await DuckDBInstance.create(path, {
       temp_directory: scratchFolder(),
+      memory_limit: MEMORY_LIMIT,
       access_mode: readOnly ? 'READ_ONLY' : 'AUTOMATIC',
       autoinstall_known_extensions: 'false',
       autoload_known_extensions: 'false',
@@ -172,9 +180,11 @@ export class Database {
   async append(table: string, columns: readonly WritableColumn[]): Promise<void> {
     const rows = columns[0]?.length ?? 0;
     if (columns.some((column) => column.length !== rows)) throw new Bug(`append to ${table}: columns differ in length`);
-    const types = columns.map((column) =>
-      column instanceof Float64Array ? DOUBLE : column instanceof Int32Array ? INTEGER : VARCHAR,
-    );
+    const types = columns.map((column) => {
+      if (column instanceof Float64Array) return DOUBLE;
+      if (column instanceof Int32Array) return INTEGER;
+      return 'codes' in column ? ENUM(column.words) : VARCHAR;
+    });
     try {
       const appender = await this.#connection.createAppender(table);
       for (let from = 0; from < rows; from += 2048) {

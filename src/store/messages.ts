@@ -20,12 +20,13 @@ const KNOWN: readonly Known[] = [
   },
   {
     pattern: /not a valid DuckDB database file|Could not read enough bytes|serialization version|Corrupt database/,
-    say: () => 'this is not a database swaymark can read; move it away or name another output',
+    say: () => 'this is not a database swaymark can read; move it away or rename it, and a new one is made',
   },
   { pattern: /database does not exist/, say: () => 'there is no database here yet; run `swaymark screen` first' },
   {
     pattern: /version number (\d+)|created with a newer version|newer version of DuckDB/,
-    say: () => 'the database was written by a newer program; update swaymark or name another output',
+    say: () =>
+      'the database was written by a newer program; update swaymark, or move the file away and a new one is made',
   },
   {
     pattern: /attached in read-only mode/,

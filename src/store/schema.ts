@@ -1,4 +1,6 @@
-import { ORIGINS } from '../engineering/building.js';
+import { EDITION_YEARS } from '../engineering/assess/code-history.js';
+import { WEAK_TYPES } from '../engineering/assess/weak.js';
+import { ORIGINS, SYSTEMS } from '../engineering/building.js';
 import { COLUMNS } from '../engineering/columns.js';
 import type { InventoryColumn } from '../engineering/columns.js';
 import { RESULT_COLUMNS } from '../engineering/results.js';
@@ -93,13 +95,24 @@ const INTAKE_TABLES: readonly string[] = [
 
 const RESULT_TYPES = { number: 'DOUBLE', whole: 'INTEGER', text: 'VARCHAR' } as const;
 
+/** Results that are one of a few words of ours, by column: enumerated, as text costs more than all the numbers. A new word needs a migration. */
+export const RESULT_WORDS: Readonly<Record<string, readonly string[]>> = {
+  in_list: ['yes', 'no'],
+  governing: ['longitudinal', 'transverse'],
+  period_evidence: ['measured', 'formula', 'stiffness', 'formula and stiffness'],
+  case_system: SYSTEMS,
+  case_edition: ['no seismic design', ...Object.keys(EDITION_YEARS)],
+  weak_type: WEAK_TYPES.map(({ name }) => name),
+};
+
 const RUN_TABLES: readonly string[] = [
   `CREATE TABLE run (run_id INTEGER PRIMARY KEY, made VARCHAR NOT NULL, program VARCHAR NOT NULL, note VARCHAR NOT NULL,
      title VARCHAR NOT NULL, inventory_id VARCHAR NOT NULL, study_fingerprint VARCHAR NOT NULL, methods_fingerprint VARCHAR NOT NULL,
      settings VARCHAR NOT NULL, study_text VARCHAR NOT NULL, summary VARCHAR NOT NULL, buildings INTEGER NOT NULL,
      ranked INTEGER NOT NULL, list_size INTEGER NOT NULL, rank_by VARCHAR NOT NULL, seed BIGINT NOT NULL)`,
   `CREATE TABLE result (run_id INTEGER NOT NULL, building_index INTEGER NOT NULL, ${RESULT_COLUMNS.map(
-    ({ name, kind }) => `${quoteName(name)} ${RESULT_TYPES[kind]}`,
+    ({ name, kind }) =>
+      `${quoteName(name)} ${RESULT_WORDS[name] === undefined ? RESULT_TYPES[kind] : enumType(RESULT_WORDS[name])}`,
   ).join(', ')})`,
 ];
 

@@ -3,7 +3,7 @@
  * a call per value. `vector_get_data` returns a copy, so arrays stay valid after the result is gone.
  */
 import bindings from '@duckdb/node-bindings';
-import type { DataChunk } from '@duckdb/node-bindings';
+import type { DataChunk, Vector } from '@duckdb/node-bindings';
 import { DuckDBTypeId } from '@duckdb/node-api';
 import type { DuckDBDataChunk } from '@duckdb/node-api';
 import { Bug } from '../errors.js';
@@ -22,8 +22,15 @@ export interface ColumnArrays {
 
 export type ColumnsOf<S extends Readonly<Record<string, ColumnKind>>> = { readonly [K in keyof S]: ColumnArrays[S[K]] };
 
-/** A column to write: NaN in a Float64Array becomes NULL, null in a list of strings too; Int32Array has no NULL. */
-export type WritableColumn = Float64Array | Int32Array | readonly (string | null)[];
+/** A column of enumerated words by code, a byte each; made by `enumerate`. */
+export interface EnumCodes {
+  readonly words: readonly string[];
+  readonly codes: Uint8Array;
+  readonly length: number;
+}
+
+/** A column to write: NaN in a Float64Array becomes NULL, NULL_I32 in an Int32Array, null in a list of strings. */
+export type WritableColumn = Float64Array | Int32Array | readonly (string | null)[] | EnumCodes;
 
 type NumberArray =
   | Float64Array
@@ -62,6 +69,14 @@ function validityOf(chunk: DataChunk, column: number, rows: number): Uint8Array 
   return bindings.vector_get_validity(vector, Math.ceil(rows / 64) * 8);
 }
 
+/** Columns that an inventory does not have are the common case: nothing of them needs reading. */
+function allNull(valid: Uint8Array | null, rows: number): boolean {
+  if (valid === null) return false;
+  const whole = rows >> 3;
+  for (let i = 0; i < whole; i += 1) if (valid[i] !== 0) return false;
+  return (rows & 7) === 0 || (valid[whole]! & ((1 << (rows & 7)) - 1)) === 0;
+}
+
 /** The type whose bytes hold the codes of an enumeration of this many words. */
 export function enumCodeType(words: number): DuckDBTypeId {
   if (words <= 0xff) return DuckDBTypeId.UTINYINT;
@@ -76,6 +91,10 @@ export function readWords(
   out: (string | null)[],
   offset: number,
 ): void {
+  if (allNull(validityOf(chunk.chunk, column, chunk.rowCount), chunk.rowCount)) {
+    out.fill(null, offset, offset + chunk.rowCount);
+    return;
+  }
   const codes = new Int32Array(chunk.rowCount);
   readNumbers(chunk, column, enumCodeType(words.length), codes, 0, -1);
   for (let i = 0; i < codes.length; i += 1) out[offset + i] = words[codes[i]!] ?? null;
@@ -113,10 +132,14 @@ const STRING_BYTES = 16;
 /** Reads one text column of a chunk into `out` from `offset` on. */
 export function readTexts(chunk: DuckDBDataChunk, column: number, out: (string | null)[], offset: number): void {
   const rows = chunk.rowCount;
+  const valid = validityOf(chunk.chunk, column, rows);
+  if (allNull(valid, rows)) {
+    out.fill(null, offset, offset + rows);
+    return;
+  }
   const vector = chunk.getColumnVector(column);
   const raw = bindings.vector_get_data(bindings.data_chunk_get_vector(chunk.chunk, column), rows * STRING_BYTES);
   const bytes = Buffer.from(raw.buffer, raw.byteOffset, raw.byteLength);
-  const valid = validityOf(chunk.chunk, column, rows);
   for (let i = 0; i < rows; i += 1) {
     if (valid !== null && ((valid[i >> 3]! >> (i & 7)) & 1) === 0) {
       out[offset + i] = null;
@@ -133,18 +156,66 @@ export function readTexts(chunk: DuckDBDataChunk, column: number, out: (string |
 /** Writes rows `from` to `from + rows` of `values` into a column of a chunk of that many rows. */
 export function writeColumn(chunk: DuckDBDataChunk, column: number, values: WritableColumn, from: number): void {
   const rows = chunk.rowCount;
-  if (!(values instanceof Float64Array) && !(values instanceof Int32Array)) {
-    chunk.setColumnValues(column, values.slice(from, from + rows));
-    return;
-  }
   const vector = bindings.data_chunk_get_vector(chunk.chunk, column);
   // A slice is a plain buffer: views on shared memory are refused.
-  const part = values.slice(from, from + rows);
-  bindings.copy_data_to_vector(vector, 0, part.buffer, 0, part.byteLength);
-  const whole = part instanceof Int32Array;
+  if (values instanceof Float64Array) {
+    const part = values.slice(from, from + rows);
+    bindings.copy_data_to_vector(vector, 0, part.buffer, 0, part.byteLength);
+    writeValidity(vector, rows, (i) => !Number.isNaN(part[i]!));
+  } else if (values instanceof Int32Array) {
+    const part = values.slice(from, from + rows);
+    bindings.copy_data_to_vector(vector, 0, part.buffer, 0, part.byteLength);
+    writeValidity(vector, rows, (i) => part[i] !== NULL_I32);
+  } else if ('codes' in values) {
+    const part = values.codes.slice(from, from + rows);
+    bindings.copy_data_to_vector(vector, 0, part.buffer, 0, part.byteLength);
+    writeValidity(vector, rows, (i) => part[i] !== NULL_CODE);
+  } else {
+    writeTexts(vector, values, from, rows);
+  }
+}
+
+// A list of 255 words has codes up to 254.
+const NULL_CODE = 255;
+
+/** `texts` as codes in the list `words` of an enumeration. @throws Bug for a text that is not in the list. */
+export function enumerate(words: readonly string[], texts: readonly (string | null)[]): EnumCodes {
+  if (words.length > 0xff) throw new Bug(`an enumeration of ${words.length} words does not fit in bytes`);
+  const codeOf = new Map<string | null, number>(words.map((word, code) => [word, code]));
+  codeOf.set(null, NULL_CODE);
+  const codes = new Uint8Array(texts.length);
+  for (let i = 0; i < codes.length; i += 1) {
+    const code = codeOf.get(texts[i]!);
+    if (code === undefined) throw new Bug(`${String(texts[i])} is none of the words ${words.join(', ')}`);
+    codes[i] = code;
+  }
+  return { words, codes, length: codes.length };
+}
+
+function writeTexts(vector: Vector, values: readonly (string | null)[], from: number, rows: number): void {
+  const bytes = Buffer.alloc(rows * STRING_BYTES);
+  const long: number[] = [];
+  for (let i = 0; i < rows; i += 1) {
+    const text = values[from + i]!;
+    if (text === null || text === '') continue;
+    const start = i * STRING_BYTES;
+    // UTF-8 has at least a byte per unit: what is longer than the vector holds inline need not be tried.
+    const length = text.length > INLINE_BYTES ? INLINE_BYTES + 1 : Buffer.byteLength(text);
+    if (length > INLINE_BYTES) long.push(i);
+    else {
+      bytes.writeUInt32LE(length, start);
+      bytes.write(text, start + 4, 'utf8');
+    }
+  }
+  bindings.copy_data_to_vector(vector, 0, bytes.buffer, bytes.byteOffset, bytes.byteLength);
+  for (const i of long) bindings.vector_assign_string_element(vector, i, values[from + i]!);
+  writeValidity(vector, rows, (i) => values[from + i] !== null);
+}
+
+function writeValidity(vector: Vector, rows: number, isValid: (row: number) => boolean): void {
   let valid: Uint8Array<ArrayBuffer> | undefined;
   for (let i = 0; i < rows; i += 1) {
-    if (whole ? part[i] !== NULL_I32 : !Number.isNaN(part[i]!)) continue;
+    if (isValid(i)) continue;
     valid ??= new Uint8Array(Math.ceil(rows / 64) * 8).fill(255);
     valid[i >> 3]! &= ~(1 << (i & 7));
   }

@@ -1,5 +1,5 @@
 /** A study's YAML: its plain value, what is wrong with it as YAML, and where each key stands. The only reader of the yaml library besides edit.ts. */
-import { LineCounter, isAlias, isMap, isScalar, isSeq, parseDocument } from 'yaml';
+import { LineCounter, isAlias, isMap, isScalar, isSeq, parseDocument, visit } from 'yaml';
 import type { Document, Node, YAMLError } from 'yaml';
 import { showValue } from '../errors.js';
 
@@ -27,7 +27,6 @@ const MOST_ALIASES = 50;
 const MESSAGES: Partial<Record<YAMLError['code'], string>> = {
   TAB_AS_INDENT: 'a tab cannot indent; use spaces',
   MULTIPLE_DOCS: 'a second document begins here; a study is one document: remove the line ---',
-  DUPLICATE_KEY: 'this key stands twice; keep one',
 };
 
 /** Reads `text` (without byte order mark) as YAML 1.2; never throws. */
@@ -46,7 +45,7 @@ export function readDocument(text: string): StudyDocument {
     if (doc.errors.some(({ message }) => message.includes('call stack'))) return broken('nested too deeply to be read');
     const errors = [...doc.errors, ...doc.warnings].map((error) => ({
       offset: error.pos[0],
-      message: MESSAGES[error.code] ?? `not valid YAML: ${error.message}`,
+      message: messageOf(error, doc),
     }));
     if (doc.directives?.yaml.version === '1.1')
       errors.push({ offset: 0, message: 'YAML 1.1 is not read; remove the %YAML line' });
@@ -65,6 +64,19 @@ export function readDocument(text: string): StudyDocument {
     if (error instanceof ReferenceError) return broken(`aliases (*name) cannot be followed: ${error.message}`);
     throw error;
   }
+}
+
+function messageOf(error: YAMLError, doc: Document.Parsed): string {
+  if (error.code !== 'DUPLICATE_KEY') return MESSAGES[error.code] ?? `not valid YAML: ${error.message}`;
+  let key = 'this key';
+  visit(doc, {
+    Pair: (_, pair) => {
+      if (!isScalar(pair.key) || startOf(pair.key) !== error.pos[0]) return undefined;
+      key = `the key ${showValue(pair.key.value)}`;
+      return visit.BREAK;
+    },
+  });
+  return `${key} stands twice; keep one`;
 }
 
 function offsetOf(doc: Document.Parsed, path: KeyPath, which: 'value' | 'key' = 'value'): number {

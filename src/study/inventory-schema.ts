@@ -58,6 +58,9 @@ const columns: z.ZodType<ColumnSources> = strict(
   ),
 ) as unknown as z.ZodType<ColumnSources>;
 
+/** What a blank cell holds where the study does not say. */
+export const BLANK: readonly string[] = ['', '-', 'n/a', 'NULL', '?'];
+
 export const InventorySchema = strict({
   file: text('the path of a file').describe('The inventory, relative to this file.'),
   encoding: word(['auto', 'utf-8', 'windows-1252', 'latin-1', 'utf-16le', 'utf-16be'])
@@ -66,7 +69,7 @@ export const InventorySchema = strict({
   delimiter: word(['auto', ',', ';', 'tab', '|']).default('auto').describe('What stands between cells.'),
   decimal: word(['.', ',']).default('.').describe('Decimal sign of the numbers.'),
   blank: list(z.string({ error: expected('text in quotes') }), 'a list of texts')
-    .default(['', '-', 'n/a', 'NULL', '?'])
+    .default([...BLANK])
     .describe('Cells that mean that nothing is known.'),
   columns: columns.describe('Our columns and theirs: name, or {column: name, unit: unit}.'),
   merge_rows_by: text('the name of a column of the inventory')

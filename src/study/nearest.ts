@@ -2,17 +2,19 @@ const FARTHEST_SHARE = 0.4;
 
 /** The one of `known` that `word` was most likely meant to be, or undefined when none is close (at most 40 % of its letters differ). */
 export function nearest(word: string, known: readonly string[]): string | undefined {
+  return nearestFew(word, known, 1)[0];
+}
+
+/** The ones of `known` close to `word` as for `nearest`, the closest first, at most `most`. */
+export function nearestFew(word: string, known: readonly string[], most: number): readonly string[] {
   const folded = word.toLowerCase();
-  let best: string | undefined;
-  let bestDistance = Math.max(1, Math.floor(FARTHEST_SHARE * word.length)) + 1;
-  for (const candidate of known) {
-    const distance = editDistance(folded, candidate.toLowerCase(), bestDistance);
-    if (distance < bestDistance) {
-      best = candidate;
-      bestDistance = distance;
-    }
-  }
-  return best;
+  const limit = Math.max(1, Math.floor(FARTHEST_SHARE * word.length)) + 1;
+  return known
+    .map((candidate) => ({ candidate, distance: editDistance(folded, candidate.toLowerCase(), limit) }))
+    .filter(({ distance }) => distance < limit)
+    .sort((a, b) => a.distance - b.distance)
+    .slice(0, most)
+    .map(({ candidate }) => candidate);
 }
 
 /** How many single letters must be put in, left out, replaced or swapped with a neighbour; `limit` or more once it is that far. */

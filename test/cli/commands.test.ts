@@ -298,13 +298,23 @@ describe('swaymark calc', () => {
     const { code, out } = swaymark(['calc', 'asce7-22/period/other', 'height_ft=93']);
     expect(code).toBe(0);
     expect(out).toContain('93 ft × 0.3048');
-    expect(out).toContain('period_s: 0.5990 s');
+    expect(out).toContain('period: 0.5990 s');
     expect(json(['calc', 'asce7-22/period/other', 'height_ft=93', '--json'])).toMatchObject({
       id: 'asce7-22/period/other',
       value: expect.closeTo(0.598952, 6) as number,
       unit: 's',
       trace: expect.arrayContaining([expect.objectContaining({ kind: 'formula' })]) as unknown[],
     });
+  });
+
+  it('prints no false equation with US units: converted values and numbers put in keep the unit of the record', () => {
+    const feet = swaymark(['calc', 'asce7-22/period/other', 'height_ft=93', '--units', 'us']).out;
+    // 93 × 0.3048 = 28.3464.
+    expect(feet).toContain('height = 28.35 m [converted: 93 ft × 0.3048]');
+    const metres = swaymark(['calc', 'asce7-22/period/other', 'height_m=33', '--units', 'us']).out;
+    // 33 / 0.3048 = 108.27.
+    expect(metres).toContain('height = 108.3 ft [given');
+    expect(metres).toContain('= 0.02000 × (33.00 m / 0.3048 m)^0.7500');
   });
 
   it('says what a method needs when no input is given', () => {

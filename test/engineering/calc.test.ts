@@ -44,7 +44,7 @@ describe('calculate', () => {
     expect(inputs['height_m']).toBeCloseTo(28.3464, 12);
     expect(handSteps(trace, 'si')[1]).toMatchObject({
       kind: 'value',
-      title: 'height_m',
+      title: 'height',
       result: '28.35 m',
       mark: 'converted',
       source: '93 ft × 0.3048',

@@ -2,6 +2,7 @@ import { describe, expect, it } from 'vitest';
 import {
   formatCount,
   formatNumber,
+  formatPlaces,
   formatQuantity,
   formatShare,
   shownUnit,
@@ -22,6 +23,9 @@ describe('formatNumber', () => {
     [Infinity, 3, '∞'],
     [-Infinity, 3, '−∞'],
     [0.00002, 2, '0.000020'],
+    // Rounded first: as many digits as 0.10 has.
+    [0.0999, 2, '0.10'],
+    [99.96, 3, '100'],
   ])('%d with %i digits', (value, digits, text) => {
     expect(formatNumber(value, digits)).toBe(text);
   });
@@ -33,8 +37,21 @@ describe('formatShare', () => {
     expect(formatShare(1)).toBe('100 %');
     expect(formatShare(0.001)).toBe('under 1 %');
     expect(formatShare(0.9999)).toBe('over 99 %');
-    expect(formatShare(0.626)).toBe('63 %');
+    expect(formatShare(0.626)).toBe('62 %');
+    expect(formatShare(0.29)).toBe('29 %');
+    // Below a threshold of 80 % it does not print as 80 %.
+    expect(formatShare(0.7999)).toBe('79 %');
+    expect(formatShare(0.8)).toBe('80 %');
     expect(formatShare(NaN)).toBe('not known');
+  });
+});
+
+describe('formatPlaces', () => {
+  it('names one place, or the first and the last of a shared block', () => {
+    expect(formatPlaces(5, 5)).toBe('5');
+    expect(formatPlaces(1, 73)).toBe('1 to 73');
+    expect(formatPlaces(5, NaN)).toBe('5');
+    expect(formatPlaces(NaN, NaN)).toBe('not known');
   });
 });
 

@@ -89,6 +89,13 @@ describe('readWordCell', () => {
       word: null,
       note: { code: 'unknown-word', kind: 'rejected-cell' },
     });
+    // A new word of the owner's: a short message, because it stands in every row with the word.
+    expect(readWordCell('lift slab', findColumn('system')!, words).note?.message).toBe(
+      '"lift slab" is not a word of system; list it under words.system of the study; the study\'s JSON Schema has all words',
+    );
+    expect(readWordCell('steel moment fram', findColumn('system')!, words).note?.message).toMatch(
+      /^"steel moment fram" is not a word of system \(nearest: [a-z-]+(, [a-z-]+){0,2}\); list/,
+    );
     expect(readWordCell('Steel moment frame', findColumn('system')!, words).word).toBe('steel-moment-frame');
     expect(readWordCell('C, dense', findColumn('site_class')!, new Map([['c, dense', 'C']])).word).toBe('C');
   });

@@ -4,6 +4,7 @@ import { proposeMapping } from '../../src/inventory/propose-mapping.js';
 import { proposeStudy } from '../../src/inventory/propose-study.js';
 import type { UserError } from '../../src/errors.js';
 import { studyFromText } from '../../src/study/load.js';
+import { writeTable } from '../support/inventory-intake.js';
 
 const mapped = (header: readonly string[], rows: readonly (readonly string[])[] = []): Record<string, string> =>
   Object.fromEntries(
@@ -46,12 +47,28 @@ describe('proposeMapping', () => {
         ['B', 'tall'],
       ],
     );
-    expect(proposal.questions[0]).toMatch(/parts of one building/);
-    expect(proposal.unused).toEqual(['Height']);
+    expect(proposal.questions[0]).toMatch(/^"Height" looks like height_m .*cannot be read as such: "tall", "low"; how/);
+    expect(proposal.questions[1]).toMatch(/parts of one building/);
+    expect(proposal.unused).toEqual([]);
   });
 });
 
 describe('proposeStudy', () => {
+  it('reads a decimal comma, uses it to tell feet, and offers no blank word as a word', () => {
+    const path = writeTable(
+      'Ref;Storeys;Height;Area;Lat;Lon;Use\n' +
+        'A;4;45,0;3.937,5;48,00123;7,85123;office\nB;2;23,5;812,25;48,00241;7,85;Wohnhaus\nC;3;n/a;1.250;48,003;7,8;?\n',
+    );
+    const { text, proposal } = proposeStudy(path);
+    expect(text).toMatch(/^ {2}decimal: ","$/m);
+    expect(proposal.unused).toEqual([]);
+    expect(text).toMatch(/^ {4}height_m: \{column: "Height", unit: ft\} {2}# QUESTION: feet, by the data: .* 11\.3/m);
+    expect(text).toMatch(/^ {4}lat: "Lat"$/m);
+    expect(text).toMatch(/^ {4}floor_area_m2: \{column: "Area"/m);
+    expect(text).toMatch(/"Wohnhaus": /);
+    expect(text).not.toMatch(/"\?": /);
+  });
+
   it('writes a study that cannot run before its questions are answered', () => {
     const path = fileURLToPath(new URL('../fixtures/assessor-excerpt.csv', import.meta.url));
     const { text, questions } = proposeStudy(path);

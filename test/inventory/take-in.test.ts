@@ -203,7 +203,11 @@ describe('takeIn', () => {
   it('proposes feet for a column whose median says so, and does not convert it', async () => {
     const rows = Array.from({ length: 7 }, (_, i) => `U${i},3,${33 + i},600,1950,office`).join('\n');
     const intake = await intakeOfText(HEADER + rows, { columns: COLUMNS });
-    expect(codes(intake)).toContain('column-looks-like-feet');
+    expect(intake.findings.find(({ code }) => code === 'column-looks-like-feet')).toMatchObject({
+      message: 'the median height per storey is 12 m',
+      action:
+        'not converted; if "h" is in feet, write under inventory.columns of the study: height_m: {column: "h", unit: ft}',
+    });
     expect(building(intake, 'U0')['height_m']).toBe(33);
   });
 
@@ -239,6 +243,32 @@ describe('takeIn', () => {
     expect(building(intake, 'S')).toMatchObject({ lon: null, lat: null });
     expect(building(intake, 'Z')).toMatchObject({ lon: null, year_retrofitted: null });
     expect(building(intake, 'K')).toMatchObject({ lon: -122.1, year_retrofitted: 1990, count: 12 });
+  });
+
+  it('doubts storeys that only units give, or that are too few for the area', async () => {
+    const columns = { id: 'id', name: 'name', storeys_above: 'n', floor_area_m2: 'a', use: 'u' };
+    const units = (id: string, count: number, area: number, storeys: number): string =>
+      Array.from({ length: count }, (_, i) => `${id},5 Elm St #${i},${storeys},${area},residential\n`).join('');
+    const intake = await intakeOfText(
+      `id,name,n,a,u\n${units('A', 8, 90, 2)}A,5 Elm St,,,residential\n${units('B', 7, 90, 2)}${units('C', 8, 90, 3)}` +
+        `${units('D', 8, 90, 2)}D,5 Elm St,2,,residential\n${units('E', 2, 5100, 1)}F,Hall,1,10200,residential\n`,
+      { columns, merge_rows_by: 'id' },
+    );
+    const doubted = intake.findings.filter(({ code }) => code === 'storeys-of-units');
+    expect(doubted.map(({ id, message }) => [id, message])).toEqual([
+      ['A', 'only units give storeys, 2 at most'],
+      ['E', '10200 m² over 1 storey is 10200 m² per storey'],
+    ]);
+    expect(building(intake, 'A')).toMatchObject({
+      name: '5 Elm St',
+      storeys_above: 2,
+      storeys_above_origin: 'given',
+      storeys_above_sigma: 0.4,
+      storeys_above_rule: 'storeys of units, perhaps not of the building [judgement]',
+    });
+    // Root of 0.4 and 0.1 squared: the spread of a residential storey height is 0.1 [judgement].
+    expect(building(intake, 'A')['height_m_sigma']).toBeCloseTo(Math.sqrt(0.17), 12);
+    expect(building(intake, 'F')).toMatchObject({ storeys_above_sigma: 0 });
   });
 
   it('lends ten years of like buildings where the year is not known', async () => {
@@ -320,6 +350,7 @@ describe('takeIn', () => {
     await expect(intakeOfText(`${HEADER},1,,,,\n`, { columns: COLUMNS })).rejects.toThrow(
       /no row is a building.*row 2: the row has no id/,
     );
+    await expect(intakeOfText(HEADER, { columns: COLUMNS })).rejects.toThrow(/has a header \(6 columns\) and no rows/);
     await expect(intakeOfText('\n\n', { columns: COLUMNS })).rejects.toThrow(/no header/);
   });
 });
@@ -390,6 +421,12 @@ describe('the assessor excerpt', () => {
         .map(({ code }) => code)
         .sort(),
     ).toEqual(['part-looks-like-whole', 'storeys-disagree', 'years-disagree']);
+    // The name is that of the row without a unit mark, not the first by alphabet.
+    expect([building(intake, '25-99'), building(intake, '17-3'), condominium].map(({ name }) => name)).toEqual([
+      '121 SPRING ST',
+      '226 HURLEY ST',
+      '83 THIRD ST',
+    ]);
     expect(building(intake, '25-99')).toMatchObject({ storeys_above: 3, year_built: 1865, rows: 5 });
     expect(building(intake, '14-1038')).toMatchObject({ storeys_above: 22, rows: 4 });
     expect(building(intake, '17-8')).toMatchObject({ storeys_above: 2.5, storeys_above_origin: 'given' });

@@ -112,16 +112,70 @@ describe('screen', () => {
     db.close();
   });
 
-  it('ranks by demand alone when asked, and then rank and demand rank are one', async () => {
+  it('keeps nothing when no building can be ranked, and says why and what to do', async () => {
+    const path = demoCopy();
+    const inventory = join(dirname(path), 'inventory.csv');
+    const [head = '', ...rows] = readFileSync(inventory, 'utf8').split('\n');
+    // Two buildings without a system (column 7 of the header) in a study without a table of chances.
+    const kept = rows.filter((row) => row.split(',')[6] === '').slice(0, 2);
+    writeFileSync(inventory, [head, ...kept, ''].join('\n'));
+    writeFileSync(path, readFileSync(path, 'utf8').replace(/^system_prior:.*$/m, ''));
+    const loaded = await loadStudy(path);
+    const db = await openStudyDatabase(loaded);
+    await expect(screen(db, loaded, { made: MADE })).rejects.toThrow(
+      'none of 2 buildings can be ranked: system not known and the study names no table of system chances (2); give their systems',
+    );
+    expect(await db.value('SELECT count(*) FROM run')).toBe(0);
+    db.close();
+  });
+
+  it('gives buildings of equal demand one demand rank, from the first of their places to the last', async () => {
+    await screened(demoCopy(), async (db, { runId, summary }) => {
+      const blocks = await db.rows<{
+        demand_rank: number;
+        demand_rank_last: number;
+        n: number;
+        least: number;
+        most: number;
+      }>(
+        `SELECT demand_rank, demand_rank_last, count(*) AS n, min(sa_g) AS least, max(sa_g) AS most FROM result
+         WHERE run_id = ? AND rank IS NOT NULL GROUP BY demand_rank, demand_rank_last ORDER BY demand_rank`,
+        [runId],
+      );
+      let next = 1;
+      for (const { demand_rank, demand_rank_last, n } of blocks) {
+        expect(demand_rank).toBe(next);
+        expect(demand_rank_last).toBe(demand_rank + n - 1);
+        next = demand_rank_last + 1;
+      }
+      expect(next).toBe(summary.ranked + 1);
+      expect(blocks[0]!.n).toBeGreaterThan(50);
+    });
+  });
+
+  it('ranks by demand alone when asked, and then a rank lies among the places of its demand', async () => {
     const path = demoCopy({ study: (text) => text.replace('rank_by: people', 'rank_by: demand') });
     await screened(path, async (db, { runId, summary }) => {
-      const rows = await db.rows<{ rank: number; demand_rank: number; chance: number; sa_g: number }>(
-        'SELECT rank, demand_rank, chance, sa_g FROM result WHERE run_id = ? AND rank IS NOT NULL ORDER BY rank',
+      const rows = await db.rows<{
+        rank: number;
+        demand_rank: number;
+        demand_rank_last: number;
+        chance: number;
+        rank_best: number;
+        rank_worst: number;
+      }>(
+        `SELECT rank, demand_rank, demand_rank_last, chance, rank_best, rank_worst FROM result
+         WHERE run_id = ? AND rank IS NOT NULL ORDER BY rank`,
         [runId],
       );
       expect(rows.reduce((sum, { chance }) => sum + chance, 0)).toBeCloseTo(20, 6);
-      expect(summary.largest_equal_block).toBeGreaterThan(10);
-      for (let i = 1; i < rows.length; i += 1) expect(rows[i]!.chance).toBeLessThanOrEqual(1);
+      expect(summary.largest_equal_block).toBeGreaterThan(50);
+      for (const { rank, demand_rank, demand_rank_last, rank_best, rank_worst } of rows) {
+        expect(rank).toBeGreaterThanOrEqual(demand_rank);
+        expect(rank).toBeLessThanOrEqual(demand_rank_last);
+        expect(rank_best).toBeLessThanOrEqual(rank);
+        expect(rank_worst).toBeGreaterThanOrEqual(rank);
+      }
     });
   });
 });

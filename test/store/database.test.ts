@@ -1,4 +1,4 @@
-import { existsSync, mkdtempSync, rmSync, writeFileSync } from 'node:fs';
+import { existsSync, mkdirSync, mkdtempSync, rmSync, writeFileSync } from 'node:fs';
 import { tmpdir } from 'node:os';
 import { join } from 'node:path';
 import { spawnSync } from 'node:child_process';
@@ -51,6 +51,13 @@ describe('openDatabase', () => {
     await expect(openDatabase({ path: join(folder, 'missing.duckdb'), readOnly: true })).rejects.toThrow(
       /no database here/,
     );
+  });
+
+  it('says that a folder stands in its place', async () => {
+    const path = join(folder, 'folder.duckdb');
+    mkdirSync(path);
+    await expect(openDatabase({ path })).rejects.toThrow(/^a folder stands where the database belongs/);
+    await expect(openDatabase({ path, readOnly: true })).rejects.toBeInstanceOf(UserError);
   });
 
   it('says that another process holds the file', async () => {

@@ -175,7 +175,14 @@ seed: -1
     expect(complaints(`${SAMPLE}---\n${SAMPLE}`)).toEqual([
       'study.yaml:27:1: a second document begins here; a study is one document: remove the line ---',
     ]);
-    expect(complaints(`${SAMPLE}title: again\n`)).toEqual(['study.yaml:27:1: this key stands twice; keep one']);
+    expect(complaints(`${SAMPLE}title: again\n`)).toEqual(['study.yaml:27:1: the key "title" stands twice; keep one']);
+    // The rest of the file is checked all the same.
+    expect(complaints(`${SAMPLE}title: again\nranking: {k: 9, "k": 8}\nseed: -1\n`)).toEqual([
+      'study.yaml:27:1: the key "title" stands twice; keep one',
+      'study.yaml:28:17: the key "k" stands twice; keep one',
+      'study.yaml:28:22 ranking.k: expected from-levels or a number 1 to 5, got 8',
+      'study.yaml:29:7 seed: expected a whole number 0 to 4294967295, got -1',
+    ]);
     expect(changed('title: Two', 'title: !code Two')).toEqual([
       'study.yaml:2:8: not valid YAML: Unresolved tag: !code',
     ]);

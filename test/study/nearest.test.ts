@@ -1,5 +1,5 @@
 import { describe, expect, it } from 'vitest';
-import { nearest, suggest } from '../../src/study/nearest.js';
+import { nearest, nearestFew, suggest } from '../../src/study/nearest.js';
 
 describe('nearest', () => {
   it('finds the word meant: a letter missing, too many, wrong or swapped, any case', () => {
@@ -15,6 +15,13 @@ describe('nearest', () => {
   it('finds nothing where nothing is close', () => {
     expect(nearest('spectrum', ['file', 'columns'])).toBeUndefined();
     expect(nearest('', [])).toBeUndefined();
+  });
+});
+
+describe('nearestFew', () => {
+  it('gives the closest first, no more than asked for', () => {
+    expect(nearestFew('hote', ['office', 'note', 'hotel', 'motel'], 2)).toEqual(['note', 'hotel']);
+    expect(nearestFew('castle', ['hotel', 'parking'], 3)).toEqual([]);
   });
 });
 

@@ -290,6 +290,11 @@ function summaryOf(rows: readonly Row[], results: readonly Row[], ranked: number
       { attribute: 'system', title: 'Lateral system', given: all - unknown, inferred: 0, default: 0, unknown },
       { attribute: 'site_class', title: 'Site class', given: all - 15, inferred: 0, default: 15, unknown: 0 },
     ],
+    not_ranked: [...new Set(results.map((row) => row['not_ranked']))].flatMap((reason) =>
+      typeof reason === 'string'
+        ? [{ reason, count: results.filter((row) => row['not_ranked'] === reason).length }]
+        : [],
+    ),
     findings: [
       {
         code: 'height-per-storey',

@@ -30,8 +30,15 @@ export function placeSentences(p: Portfolio, i: number): readonly string[] {
     fellows.length > 1
       ? `It belongs to tie group ${formatCount(group)}, ranks ${formatCount(first)} to ${formatCount(last)}, whose order cannot be told apart.`
       : 'No neighbour in rank is tied with it.',
-    `By spectral demand alone it would stand at rank ${whole('demand_rank')}.`,
+    demandSentence(p, i),
   ];
+}
+
+function demandSentence(p: Portfolio, i: number): string {
+  const shared = p.number('demand_rank_last', i) > p.number('demand_rank', i);
+  return shared
+    ? `By spectral demand alone it would share ranks ${p.demandPlaces(i)} with buildings of the same demand.`
+    : `By spectral demand alone it would stand at rank ${p.demandPlaces(i)}.`;
 }
 
 /** Periods, demand, capacity, priority. */
@@ -57,8 +64,12 @@ export function resultFacts(p: Portfolio, i: number): readonly Fact[] {
       'Most likely case',
       `${plainWords(p.text('case_system', i))}, ${editionWords(p.text('case_edition', i))} (chance ${formatShare(p.number('case_chance', i))})`,
     ],
-    ['Capacity of that case', quantity('capacity_g', 'g')],
-    ['Demand over capacity', quantity('demand_over_capacity', null)],
+    ...(p.page.summary.rank_by === 'demand' && Number.isNaN(p.number('capacity_g', i))
+      ? [['Capacity', 'not used: ranked by demand alone'] as const]
+      : [
+          ['Capacity of that case', quantity('capacity_g', 'g')] as const,
+          ['Demand over capacity', quantity('demand_over_capacity', null)] as const,
+        ]),
   );
   if (!Number.isNaN(p.number('people_exposed', i)))
     facts.push(['People present on average', quantity('people_exposed', null)]);
@@ -84,7 +95,12 @@ export function inputFacts(p: Portfolio, i: number): readonly Fact[] {
     if (COMPANION.test(name)) continue;
     const value = p.input(name, i);
     if (Number.isNaN(value)) continue;
-    const shown = name.startsWith('year') ? String(value) : formatQuantity(value, findColumn(name)?.unit, display, 4);
+    const unit = findColumn(name)?.unit;
+    const shown = name.startsWith('year')
+      ? String(value)
+      : unit === undefined && Number.isInteger(value)
+        ? formatCount(value)
+        : formatQuantity(value, unit, display, 4);
     facts.push([title(name), `${shown}${origin(p, name, i)}`]);
   }
   if (!(p.input('year_built', i) > 0)) {

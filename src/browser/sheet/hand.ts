@@ -13,8 +13,6 @@ import type { Portfolio } from '../portfolio.js';
  * Browsers do not share the program's exponential and logarithm: Chromium 156 and Node 20 differ in the last bit of a tenth of the
  * exponentials (measured), which moves ln S by a few units in the sixteenth digit.
  */
-const LAST_DIGITS = 1e-12;
-
 /** A maker of hand calculations; the study's settings are compiled once. */
 export function handMaker(p: Portfolio): (i: number) => readonly HTMLElement[] {
   let context: AssessContext | null = null;
@@ -31,16 +29,13 @@ export function handMaker(p: Portfolio): (i: number) => readonly HTMLElement[] {
 function agreement(made: number, stored: number): HTMLElement {
   if (Number.isNaN(made) && Number.isNaN(stored))
     return el('p', { class: 'agrees' }, 'This building is not ranked, so there is no priority to work out.');
-  const close = Math.abs(made - stored) <= LAST_DIGITS * Math.max(1, Math.abs(stored));
   const verdict =
     made === stored
       ? 'The two are identical.'
-      : close
-        ? 'The two agree to twelve digits; the exponential and the logarithm of this browser differ from those of the program in the last digit.'
-        : 'The two differ: do not use this page until the difference is explained.';
+      : 'The two differ: do not use this page until the difference is explained.';
   return el(
     'p',
-    { class: 'agrees', 'data-agrees': made === stored ? 'exactly' : close ? 'closely' : 'no' },
+    { class: 'agrees', 'data-agrees': made === stored ? 'exactly' : 'no' },
     `Worked out now: ln S = ${String(made)}. Stored by the run: ln S = ${String(stored)}. ${verdict}`,
   );
 }

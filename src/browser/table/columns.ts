@@ -1,5 +1,6 @@
 /** Columns of the table of all buildings: what sorts and what is shown. */
 import { formatCount, formatNumber, formatShare, plainWords, shownValue, unitLabel } from '../../engineering/format.js';
+import { LIKELY_WEAK } from '../../engineering/results.js';
 import type { Portfolio } from '../portfolio.js';
 import { weakWords } from '../words.js';
 
@@ -33,6 +34,7 @@ export function tableColumns(p: Portfolio): readonly TableColumn[] {
     show: (i) => text(i) || '–',
   });
   const three = (value: number): string => formatNumber(value, 3);
+  const counts = (value: number): string => (Number.isInteger(value) ? formatCount(value) : three(value));
   const two = (value: number): string => formatNumber(value, 2);
   const height = (i: number): number => shownValue(p.input('height_m', i), 'm', display);
   const notGiven =
@@ -60,7 +62,10 @@ export function tableColumns(p: Portfolio): readonly TableColumn[] {
         ),
     },
     result('Tie group', 'tie_group', formatCount),
-    result('Rank by demand', 'demand_rank', formatCount),
+    {
+      ...result('Rank by demand', 'demand_rank', formatCount),
+      show: (i) => blankNaN(p.number('demand_rank', i), () => p.demandPlaces(i)),
+    },
     { title: 'Period T (s)', kind: 'number', key: p.period_s, show: (i) => blankNaN(p.period_s(i), three) },
     result('Demand Sₐ (g)', 'sa_g', three),
     result('Capacity (g)', 'capacity_g', two),
@@ -85,7 +90,7 @@ export function tableColumns(p: Portfolio): readonly TableColumn[] {
       title: 'Storeys',
       kind: 'number',
       key: (i) => p.input('storeys_above', i),
-      show: (i) => blankNaN(p.input('storeys_above', i), three),
+      show: (i) => blankNaN(p.input('storeys_above', i), counts),
       guessed: notGiven('storeys_above_origin'),
     },
     {
@@ -95,9 +100,16 @@ export function tableColumns(p: Portfolio): readonly TableColumn[] {
       show: (i) => (year(i) > 0 ? String(year(i)) : 'not known'),
       guessed: (i) => year(i) > 0 && notGiven('year_built_origin')(i),
     },
-    words('Weak type', (i) => (p.text('weak_type', i) === '' ? '' : weakWords(p.text('weak_type', i)))),
+    words('Weak type', (i) => weakCell(p, i)),
     words('Not ranked because', (i) => p.text('not_ranked', i)),
   ];
+}
+
+/** The weak type, with its chance where it is less likely than not: the counts leave such a building out. */
+function weakCell(p: Portfolio, i: number): string {
+  if (p.text('weak_type', i) === '') return '';
+  const chance = p.number('weak_chance', i);
+  return `${weakWords(p.text('weak_type', i))}${chance < LIKELY_WEAK ? ` (chance ${formatShare(chance)})` : ''}`;
 }
 
 /** The cell's text, with its mark where the value is not from the inventory. */

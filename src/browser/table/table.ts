@@ -1,5 +1,6 @@
 /** The table of all buildings: a real table whose rows exist only where they can be seen. */
 import { formatCount, plainWords } from '../../engineering/format.js';
+import { LIKELY_WEAK } from '../../engineering/results.js';
 import { sheetAddress } from '../address.js';
 import { byId, el } from '../dom.js';
 import type { Portfolio } from '../portfolio.js';
@@ -14,7 +15,7 @@ const SPARE_ROWS = 12;
 const FILTERS: readonly (readonly [string, string])[] = [
   ['', 'All buildings'],
   ['list', 'In the list'],
-  ['weak', 'Weak types'],
+  ['weak', 'Ranked, of a weak type'],
   ['not-ranked', 'Not ranked'],
 ];
 
@@ -131,7 +132,8 @@ function passes(p: Portfolio, filter: string, i: number): boolean {
     case 'list':
       return p.text('in_list', i) === 'yes';
     case 'weak':
-      return p.text('weak_type', i) !== '';
+      // As the sentence at the head of the page counts them.
+      return p.text('not_ranked', i) === '' && p.number('weak_chance', i) >= LIKELY_WEAK;
     case 'not-ranked':
       return p.text('not_ranked', i) !== '';
     default:

@@ -1,7 +1,8 @@
-import { calculate, methodCalled } from '../../engineering/calc.js';
+import { calculate, checkedInputs, methodCalled } from '../../engineering/calc.js';
 import type { Calculation } from '../../engineering/calc.js';
 import { formatQuantity } from '../../engineering/format.js';
-import { handSteps } from '../../engineering/hand.js';
+import type { InputSpec } from '../../engineering/formula.js';
+import { handSteps, nameWithoutUnit } from '../../engineering/hand.js';
 import { cite } from '../../engineering/source.js';
 import { EXIT } from '../../errors.js';
 import { printJson, printLines, terminalColumns } from '../output/print.js';
@@ -19,10 +20,13 @@ export function calc(
   const method = methodCalled(id);
   const columns = Math.min(terminalColumns(), 100);
   if (inputs.length === 0 && method.family.inputs.length > 0) {
-    const names = method.family.inputs
-      .map(({ name, kind, words }) => `${name}=${kind === 'list' ? '…,…' : (words?.[0] ?? '…')}`)
-      .join(' ');
-    if (options.json) printJson({ id, needs: method.family.inputs });
+    const written = ({ name, kind, words }: InputSpec): string =>
+      `${name}=${kind === 'list' ? '…,…' : (words?.[0] ?? '…')}`;
+    const names = [
+      ...method.family.inputs.map(written),
+      ...checkedInputs(method).map((spec) => `[${written(spec)}]`),
+    ].join(' ');
+    if (options.json) printJson({ id, needs: method.family.inputs, optional: checkedInputs(method) });
     else printLines([...methodLines(method, columns), '', `swaymark calc ${id} ${names}`]);
     return EXIT.clean;
   }
@@ -51,7 +55,7 @@ function lines({ method, value, unit, flags, trace }: Calculation, display: 'si'
   return [
     ...stepLines(handSteps(trace, display), columns),
     '',
-    styled('bold', `${method.family.yields}: ${formatQuantity(value, unit, display, 4)}`),
+    styled('bold', `${nameWithoutUnit(method.family.yields)}: ${formatQuantity(value, unit, display, 4)}`),
     ...flags.flatMap((flag) => wrap(`note: ${flag}`, columns, '', '  ')),
   ];
 }

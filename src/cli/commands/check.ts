@@ -1,6 +1,7 @@
 import { EXIT } from '../../errors.js';
 import { checkStudy } from '../../exports/check-study.js';
 import type { CheckedStudy } from '../../exports/check-study.js';
+import { heightUnitSentence } from '../../reports/dashboard/answers.js';
 import { interruptible } from '../interrupt.js';
 import { printError, printJson, printLines, terminalColumns } from '../output/print.js';
 import { progressLine } from '../output/progress.js';
@@ -13,7 +14,7 @@ const DELIMITERS: Readonly<Record<string, string>> = { ',': 'commas', ';': 'semi
 /** `swaymark check`: intake and data quality only. */
 export async function check(
   file: string,
-  options: { readonly output?: string; readonly json?: true },
+  options: { readonly output?: string; readonly units: 'si' | 'us'; readonly json?: true },
 ): Promise<number> {
   const progress = progressLine();
   return interruptible(
@@ -58,6 +59,9 @@ function lines(checked: CheckedStudy, file: string, columns: number): string[] {
       ? ['Nothing was found amiss.']
       : [styled('bold', 'Findings'), ...findingBlock(findings, columns)]),
     '',
+    ...[heightUnitSentence(checked), checked.not_rankable].flatMap((sentence) =>
+      sentence === '' ? [] : [...wrap(clean(sentence), columns), ''],
+    ),
     ...(rejected.over ? wrap(overLimit(rejected), columns) : []),
     ...files.map((path) => `written: ${clean(path)}`),
     ...(rejected.over ? [] : wrap(`Nothing is kept. Next: swaymark screen ${clean(file)}`, columns)),

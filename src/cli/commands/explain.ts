@@ -1,4 +1,4 @@
-import { formatCount, formatShare } from '../../engineering/format.js';
+import { formatCount, formatPlaces, formatShare } from '../../engineering/format.js';
 import { EXIT } from '../../errors.js';
 import { explain as explainInStudy } from '../../runs/open.js';
 import type { Explanation } from '../../screening/explain.js';
@@ -42,5 +42,5 @@ function placeSentence(runId: number, stored: Explanation['stored']): string {
   const reason = stored['not_ranked'];
   if (typeof reason === 'string') return `Not ranked in run ${String(runId)}: ${reason}.`;
   const inList = stored['in_list'] === 'yes' ? 'in the list' : 'outside the list';
-  return `Rank ${count('rank')} in run ${String(runId)}, ${inList}; chance of belonging ${formatShare(Number(stored['chance']))}; rank band ${count('rank_best')} to ${count('rank_worst')}; tie group ${count('tie_group')}; rank by spectral demand alone ${count('demand_rank')}.`;
+  return `Rank ${count('rank')} in run ${String(runId)}, ${inList}; chance of belonging ${formatShare(Number(stored['chance']))}; rank band ${count('rank_best')} to ${count('rank_worst')}; tie group ${count('tie_group')}; rank by spectral demand alone ${formatPlaces(Number(stored['demand_rank']), Number(stored['demand_rank_last'] ?? NaN))}.`;
 }

@@ -3,10 +3,14 @@ import { basename, dirname, join, relative, resolve } from 'node:path';
 import { EXIT, UserError } from '../../errors.js';
 import { proposeStudy } from '../../inventory/propose-study.js';
 import { setAtPath } from '../../study/edit.js';
+import { studyJsonSchema } from '../../study/schema.js';
 import { printLines, terminalColumns } from '../output/print.js';
 import { styled } from '../output/style.js';
 import { table as tableLines } from '../output/table.js';
 import { clean, wrap } from '../output/text.js';
+
+/** The JSON Schema of study files, for editors. */
+const SCHEMA_FILE = 'study.schema.json';
 
 /** `swaymark init`: a proposed study file for a table; it never replaces a file. */
 export function init(table: string, options: { readonly output?: string }): number {
@@ -21,7 +25,10 @@ export function init(table: string, options: { readonly output?: string }): numb
   const { text, questions, proposal } = proposeStudy(table);
   // The proposal names the table as its neighbour; a study elsewhere must find it too.
   const from = relative(dirname(resolve(target)), resolve(table));
-  write(target, from === basename(table) ? text : setAtPath(text, 'inventory.file', from.replaceAll('\\', '/')), taken);
+  const body = from === basename(table) ? text : setAtPath(text, 'inventory.file', from.replaceAll('\\', '/'));
+  write(target, `# yaml-language-server: $schema=./${SCHEMA_FILE}\n${body}`, taken);
+  // The schema is ours, not the user's: a fresh copy every time.
+  writeFileSync(join(dirname(target), SCHEMA_FILE), `${JSON.stringify(studyJsonSchema(), null, 2)}\n`);
 
   const columns = terminalColumns();
   const head = [
@@ -32,7 +39,7 @@ export function init(table: string, options: { readonly output?: string }): numb
   ];
   const rows = proposal.columns.map(({ ours, theirs, unit, question }) => [ours, theirs, unit ?? '', question ?? '']);
   printLines([
-    `Proposed: ${clean(target)}`,
+    `Proposed: ${clean(target)} (${SCHEMA_FILE} beside it lets an editor check it)`,
     '',
     ...tableLines(head, rows, columns),
     ...(proposal.unused.length === 0

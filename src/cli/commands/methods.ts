@@ -1,6 +1,6 @@
-import { describeInput, methodCalled } from '../../engineering/calc.js';
+import { checkedInputs, describeInput, methodCalled } from '../../engineering/calc.js';
 import { parseExpression, writeExpression } from '../../engineering/expression.js';
-import type { AnyRecord, Limit } from '../../engineering/formula.js';
+import type { AnyRecord, InputSpec, Limit } from '../../engineering/formula.js';
 import { METHODS } from '../../engineering/methods.js';
 import { cite } from '../../engineering/source.js';
 import { findUnit, unitsOf } from '../../engineering/units.js';
@@ -27,10 +27,10 @@ export function methods(id: string | undefined, options: { readonly json?: true 
 function asJson(method: AnyRecord): unknown {
   const { id, title, family, source, verified, limits, note, basis } = method;
   const constants = method.constants as Readonly<Record<string, number>>;
-  const inputs = family.inputs.map((spec) => ({
+  const withUnits = (spec: InputSpec): unknown => ({
     ...spec,
     ...(spec.unit === undefined ? {} : { units: unitsFor(spec.unit) }),
-  }));
+  });
   return {
     id,
     title,
@@ -40,7 +40,8 @@ function asJson(method: AnyRecord): unknown {
     ...(basis === undefined ? {} : { basis }),
     yields: family.yields,
     unit: family.unit,
-    inputs,
+    inputs: family.inputs.map(withUnits),
+    optional: checkedInputs(method).map(withUnits),
     constants,
     expression: family.expression,
     procedure: family.procedure ?? null,
@@ -74,6 +75,13 @@ function entryLines(method: AnyRecord, columns: number): string[] {
   ];
 }
 
+function inputLines(spec: InputSpec, columns: number): string[] {
+  return [
+    ...wrap(describeInput(spec), columns, '  ', '    '),
+    ...(spec.unit === undefined ? [] : wrap(`units: ${unitsFor(spec.unit).join(', ')}`, columns, '      ')),
+  ];
+}
+
 /** One record in full. */
 export function methodLines(method: AnyRecord, columns: number): string[] {
   const { id, title, family, source, verified, limits, note, basis } = method;
@@ -99,10 +107,11 @@ export function methodLines(method: AnyRecord, columns: number): string[] {
     ),
     ...section(
       'Inputs',
-      family.inputs.flatMap((spec) => [
-        ...wrap(describeInput(spec), columns, '  ', '    '),
-        ...(spec.unit === undefined ? [] : wrap(`units: ${unitsFor(spec.unit).join(', ')}`, columns, '      ')),
-      ]),
+      family.inputs.flatMap((spec) => inputLines(spec, columns)),
+    ),
+    ...section(
+      'Optional inputs, not in the formula',
+      checkedInputs(method).flatMap((spec) => inputLines(spec, columns)),
     ),
     ...section(
       'Constants',

@@ -11,9 +11,21 @@ export function accountBlock(rowsIn: number, buildings: number, account: readonl
   const columns = Math.max(...[rowsIn, ...shown.map(({ rows }) => rows)].map((rows) => formatCount(rows).length));
   const line = (count: number, words: string): string => `  ${pad(formatCount(count), columns, true)}  ${words}`;
   return [
-    line(rowsIn, `rows read, making ${formatCount(buildings)} ${buildings === 1 ? 'building' : 'buildings'}:`),
-    ...shown.map(({ rows, title }) => line(rows, title)),
+    line(
+      rowsIn,
+      `${rowsIn === 1 ? 'row' : 'rows'} read, making ${formatCount(buildings)} ${buildings === 1 ? 'building' : 'buildings'}:`,
+    ),
+    ...shown.map(({ rows, title }) => line(rows, rows === 1 ? singular(title) : title)),
   ];
+}
+
+function singular(title: string): string {
+  return title
+    .replace(/^rows of (ranked )?buildings/, (_, ranked: string | undefined) => `row of a ${ranked ?? ''}building`)
+    .replace(/^rows of sites/, 'row of a site')
+    .replace(/^rows/, 'row')
+    .replace(/^exact duplicates of other rows/, 'exact duplicate of another row')
+    .replace(/buildings? that lack\b/, 'building that lacks');
 }
 
 /** Per attribute how many buildings have it given, inferred, by default, or not at all. */

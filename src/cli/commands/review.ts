@@ -9,6 +9,7 @@ import { clean, wrap } from '../output/text.js';
 
 interface Options {
   readonly sample: number;
+  readonly units: 'si' | 'us';
   readonly output?: string;
   readonly study?: string;
   readonly run?: number;
@@ -19,7 +20,7 @@ export async function review(options: Options): Promise<number> {
   const columns = terminalColumns();
   await withStudyDatabase(findStudy(options.study), async (db, { folder, study }) => {
     const { run } = await chosenRun(db, options);
-    const sheet = await reviewSheet(db, run, options.sample);
+    const sheet = await reviewSheet(db, run, options.sample, options.units);
     const output = prepareFolder(options.output ?? resolve(folder, study.output));
     const [path = ''] = await writeSet(output, { 'review.csv': sheet.csv });
     printLines([

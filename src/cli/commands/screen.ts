@@ -1,10 +1,10 @@
 import { relative } from 'node:path';
-import { formatCount, formatShare } from '../../engineering/format.js';
+import { formatCount, formatPlaces, formatShare } from '../../engineering/format.js';
 import type { PageData } from '../../engineering/page-contract.js';
 import { EXIT } from '../../errors.js';
 import { screenStudy } from '../../exports/screen-study.js';
 import type { ScreenedStudy } from '../../exports/screen-study.js';
-import { answerSentence } from '../../reports/dashboard/answers.js';
+import { answerSentence, heightUnitSentence, notRankedSentence } from '../../reports/dashboard/answers.js';
 import { interruptible } from '../interrupt.js';
 import { printError, printJson, printLines, terminalColumns } from '../output/print.js';
 import { progressLine } from '../output/progress.js';
@@ -62,6 +62,8 @@ interface Place {
   readonly rank_worst: number;
   readonly tie_group: number;
   readonly demand_rank: number;
+  /** Last of the places that buildings of the same demand share; NaN where the run has none on record. */
+  readonly demand_rank_last: number;
 }
 
 /** The places of the list, as far as the page holds them. */
@@ -78,6 +80,7 @@ function places({ summary, buildings }: PageData): readonly Place[] {
       rank_worst: number('rank_worst'),
       tie_group: number('tie_group'),
       demand_rank: number('demand_rank'),
+      demand_rank_last: number('demand_rank_last'),
     };
   });
 }
@@ -98,7 +101,7 @@ function lines({ runId, data, files, rejected }: ScreenedStudy, columns: number)
       formatShare(place.chance),
       `${formatCount(place.rank_best)} to ${formatCount(place.rank_worst)}`,
       String(place.tie_group),
-      formatCount(place.demand_rank),
+      formatPlaces(place.demand_rank, place.demand_rank_last),
     ]);
   const head = [
     { title: 'Rank', right: true },
@@ -118,6 +121,9 @@ function lines({ runId, data, files, rejected }: ScreenedStudy, columns: number)
     '',
     ...wrap(clean(answerSentence(data)), columns),
     '',
+    ...[notRankedSentence(summary), heightUnitSentence(summary)].flatMap((sentence) =>
+      sentence === '' ? [] : [...wrap(clean(sentence), columns), ''],
+    ),
     ...(rows.length === 0
       ? []
       : [...table(head, rows, columns), ...(more > 0 ? [`and ${formatCount(more)} more on the list`] : []), '']),

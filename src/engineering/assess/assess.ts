@@ -6,16 +6,17 @@
  * strength, era and people. At every node the worse direction counts.
  */
 import type { Building, PerDirection } from '../building.js';
+import { ln } from '../numeric/elementary.js';
 import { mixtureMoments, mixtureQuantile } from '../priority/mixture.js';
 import type { Mixture } from '../priority/mixture.js';
 import type { Trace } from '../trace.js';
-import type { Cases } from './case-memory.js';
 import { casesOf } from './cases.js';
 import { chooseSpectrum, readAt, slopeFor } from './context.js';
 import type { AssessContext } from './context.js';
 import { flagsOf } from './flags.js';
 import { integrate } from './integrate.js';
 import type { PeriodBand } from './integrate.js';
+import { closeTrace } from './close-trace.js';
 import { leadingCase } from './leading.js';
 import type { LeadingCase } from './leading.js';
 import { peopleOf } from './people.js';
@@ -85,11 +86,12 @@ export function assess(
     readAt(spectrum, pass.period.longitudinal.p50_s),
     readAt(spectrum, pass.period.transverse.p50_s),
   );
-  const lnPriority = mixtureQuantile(mixture, 0.5, 0);
+  const lnPriority = context.settings.rankBy === 'demand' ? ln(demand_g) : mixtureQuantile(mixture, 0.5, 0);
   const leading = leadingCase(building, cases, choice, slope_k, context, trace);
   if (typeof leading === 'string') return { id, reason: leading };
   const weak = weakOf(building, cases, context.settings.codeHistory);
-  if (trace !== undefined) closeTrace(trace, cases, mixture, lnPriority, moments.sd);
+  if (trace !== undefined)
+    closeTrace(trace, { building, cases, choice, slope_k, context, mixture, lnPriority, sd: moments.sd });
   return {
     id,
     mixture,
@@ -106,31 +108,4 @@ export function assess(
     weakChance: weak.chance,
     flags: flagsOf(building, cases, choice.byDefault, leading, pass.disagreement, spectrum, context),
   };
-}
-
-function closeTrace(trace: Trace, cases: Cases, mixture: Mixture, lnPriority: number, sd: number): void {
-  trace.heading('From the leading case to the priority');
-  trace.value(
-    'cases',
-    cases.list
-      .map(
-        (which) =>
-          `${which.system}, ${which.edition ?? 'no seismic design'}: ${String(Math.round(which.chance * 1000) / 10)} %`,
-      )
-      .join('; '),
-    cases.systemKnown ? 'given' : 'prior',
-    cases.prior === null ? 'era by year of construction, lag and enforcement' : `system chances: ${cases.prior}`,
-  );
-  trace.value(
-    'ln_priority_sd',
-    sd,
-    'computed',
-    'standard deviation over the nodes of period and height, strength, era, people and cases',
-  );
-  trace.value(
-    'ln_priority',
-    lnPriority,
-    'computed',
-    `median of ln S: the distribution is a mixture of ${String(mixture.to - mixture.from)} normals gathered from all cases and nodes`,
-  );
 }

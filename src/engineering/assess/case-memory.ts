@@ -17,6 +17,8 @@ export interface Case {
 export interface Cases {
   /** By falling chance; equal chances in order of system and edition. */
   readonly list: readonly Case[];
+  /** The same by pair of systems, in order of first appearance: what depends on the system alone is worked once. */
+  readonly groups: readonly (readonly Case[])[];
   readonly systemKnown: boolean;
   /** Label of the prior group used, for the trace. */
   readonly prior: string | null;
@@ -24,13 +26,15 @@ export interface Cases {
 
 export interface CaseMemory {
   readonly cases: Map<string, Cases | string>;
+  /** By system and year, for the common building: both known, one system in both directions, no retrofit. */
+  readonly plain: Map<string, Map<number, Cases | string>>;
   /** Number of each pool of years: one array for all who share it. */
   readonly pools: WeakMap<readonly number[], number>;
   count: number;
 }
 
 export function newCaseMemory(): CaseMemory {
-  return { cases: new Map(), pools: new WeakMap(), count: 0 };
+  return { cases: new Map(), plain: new Map(), pools: new WeakMap(), count: 0 };
 }
 
 /** The pool's number in this memory. */

@@ -10,8 +10,18 @@ const DEFAULT_RETROFIT_LEVEL = 0.75;
 
 /** Lists the cases of `building`, or says why there are none. The same answer is kept for buildings alike in all it depends on. */
 export function casesOf(building: Building, context: AssessContext): Cases | string {
-  const { years } = building;
+  const { years, system } = building;
   const kept = context.caseMemory;
+  const common =
+    system !== null && years.length === 1 && building.system_transverse === null && !(building.year_retrofitted > 0);
+  if (common) {
+    let byYear = kept.plain.get(system);
+    if (byYear === undefined) kept.plain.set(system, (byYear = new Map<number, Cases | string>()));
+    const year = years[0]!;
+    let found = byYear.get(year);
+    if (found === undefined) byYear.set(year, (found = listCases(building, context)));
+    return found;
+  }
   // a pool of years is one array for all who share it
   const pool = years.length === 1 ? String(years[0]) : years.length === 0 ? '-' : `p${String(poolNumber(years, kept))}`;
   const strengthened =
@@ -79,5 +89,23 @@ function listCases(building: Building, context: AssessContext): Cases | string {
   const list = [...found.entries()]
     .sort(([ka, a], [kb, b]) => b.chance - a.chance || (ka < kb ? -1 : 1))
     .map(([, value]) => value);
-  return { list, systemKnown: known !== null, prior: priors.size === 0 ? null : [...priors].join('; ') };
+  return {
+    list,
+    groups: groupBySystem(list),
+    systemKnown: known !== null,
+    prior: priors.size === 0 ? null : [...priors].join('; '),
+  };
+}
+
+/** Cases of one pair of systems stand together, in order of first appearance. */
+function groupBySystem(list: readonly Case[]): readonly (readonly Case[])[] {
+  if (list.length === 1) return [list];
+  const groups = new Map<string, Case[]>();
+  for (const which of list) {
+    const key = `${which.system}|${which.system_transverse}`;
+    const group = groups.get(key);
+    if (group === undefined) groups.set(key, [which]);
+    else group.push(which);
+  }
+  return [...groups.values()];
 }

@@ -1,4 +1,5 @@
 /** Two estimates of one period made one. */
+import { exp, ln } from '../numeric/elementary.js';
 import { record } from '../formula.js';
 import type { Family } from '../formula.js';
 
@@ -25,7 +26,7 @@ const combined: Family<Two, Record<never, number>> = {
   evaluate: ({ period_1_s, sigma_1, period_2_s, sigma_2 }) => {
     const w1 = 1 / (sigma_1 * sigma_1);
     const w2 = 1 / (sigma_2 * sigma_2);
-    return Math.exp((w1 * Math.log(period_1_s) + w2 * Math.log(period_2_s)) / (w1 + w2));
+    return exp((w1 * ln(period_1_s) + w2 * ln(period_2_s)) / (w1 + w2));
   },
 };
 

@@ -1,4 +1,5 @@
 /** The study's settings made ready for a pass over the buildings. */
+import { ln } from '../numeric/elementary.js';
 import type { Building } from '../building.js';
 import type { AnyRecord, Inputs } from '../formula.js';
 import { heightFormula } from '../period/choose.js';
@@ -83,7 +84,7 @@ function zoneTerms(
       name,
       k,
       years,
-      term: (years === null ? 0 : -Math.log(years)) + 0.5 * k * k * RECORD_TO_RECORD * RECORD_TO_RECORD,
+      term: (years === null ? 0 : -ln(years)) + 0.5 * k * k * RECORD_TO_RECORD * RECORD_TO_RECORD,
     };
   });
   const same = raw.every(({ k, years }) => k === raw[0]!.k && years === raw[0]!.years);

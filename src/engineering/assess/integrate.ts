@@ -1,4 +1,5 @@
 /** The integration over the cases of a building, the nodes of its height and of its period's error. */
+import { exp, ln } from '../numeric/elementary.js';
 import type { Building, PerDirection } from '../building.js';
 import { reductionFactor } from '../capacity/records.js';
 import { HEIGHT_NODES, ONE_NODE, PERIOD_NODES } from '../numeric/nodes.js';
@@ -57,17 +58,16 @@ export function integrate(
   const offset = demandOnly ? 0 : constantTerm(building, people, spectrum, context);
   const levels = drawingsLevels(building);
   const fixed = massFactor(building, context);
-  const groups = groupBySystem(cases.list);
   const bands: { chance: number; longitudinal: PeriodEstimate; transverse: PeriodEstimate }[] = [];
   let disagreement = 1;
-  for (const group of groups) {
+  for (const group of cases.groups) {
     const models = modelsOf(building, group[0]!, context);
     if (models === null) return 'every method for the period is switched off';
     const groupChance = group.reduce((sum, { chance }) => sum + chance, 0);
     const heights = heightNodes(building, models, demandOnly || assessed);
     for (let h = 0; h < heights.z.length; h += 1) {
       const height_m =
-        building.height_m.value * (heights.z[h] === 0 ? 1 : Math.exp(building.height_m.sigma * heights.z[h]!));
+        building.height_m.value * (heights.z[h] === 0 ? 1 : exp(building.height_m.sigma * heights.z[h]!));
       const along = periodAt(models.longitudinal, height_m, context);
       const across = models.transverse === models.longitudinal ? along : periodAt(models.transverse, height_m, context);
       disagreement = Math.max(disagreement, along.disagreement, across.disagreement);
@@ -85,8 +85,8 @@ export function integrate(
             for (let j = 0; j < nodes.z.length; j += 1) {
               const sa = Math.max(scratch.sa_g[0][first + j]!, scratch.sa_g[across_i][first + j]!);
               const x = demandOnly
-                ? Math.log(sa)
-                : slope_k * Math.log(sa / (building.capacity_sa_g * context.capacityFactor)) + offset;
+                ? ln(sa)
+                : slope_k * ln(sa / (building.capacity_sa_g * context.capacityFactor)) + offset;
               scratch.score.add(weight * nodes.weight[j]!, x, sd);
             }
             continue;
@@ -137,7 +137,7 @@ function addNodes(
       const other = saB[first + j]! / (strengthB * reductionFactor(b.ductility, periodB[first + j]!, corner));
       if (other > ratio) ratio = other;
     }
-    scratch.score.add(weight * nodes.weight[j]!, slope_k * Math.log(ratio) + offset, sd);
+    scratch.score.add(weight * nodes.weight[j]!, slope_k * ln(ratio) + offset, sd);
   }
 }
 
@@ -145,7 +145,7 @@ function addNodes(
 function fillNodes(scratch: Scratch, d: 0 | 1, estimate: PeriodEstimate, spectrum: ContextSpectrum): void {
   const stretch = scratch.stretch[d];
   if (scratch.stretchSigma[d] !== estimate.sigma) {
-    for (let j = 0; j < stretch.length; j += 1) stretch[j] = Math.exp(estimate.sigma * PERIOD_NODES.z[j]!);
+    for (let j = 0; j < stretch.length; j += 1) stretch[j] = exp(estimate.sigma * PERIOD_NODES.z[j]!);
     scratch.stretchSigma[d] = estimate.sigma;
   }
   for (let j = 0; j < stretch.length; j += 1) {
@@ -158,23 +158,7 @@ function fillNodes(scratch: Scratch, d: 0 | 1, estimate: PeriodEstimate, spectru
 /** ln E + ln I + zone term. */
 function constantTerm(building: Building, people: People, spectrum: ContextSpectrum, context: AssessContext): number {
   const zone = context.zoneTerms[spectrum.name] ?? 0;
-  return (
-    zone +
-    (context.settings.rankBy === 'people' ? Math.log(people.people_exposed) + Math.log(importanceOf(building)) : 0)
-  );
-}
-
-/** Cases of one pair of systems stand together, in order of first appearance. */
-function groupBySystem(list: readonly Case[]): readonly (readonly Case[])[] {
-  if (list.length === 1) return [list];
-  const groups = new Map<string, Case[]>();
-  for (const which of list) {
-    const key = `${which.system}|${which.system_transverse}`;
-    const group = groups.get(key);
-    if (group === undefined) groups.set(key, [which]);
-    else group.push(which);
-  }
-  return [...groups.values()];
+  return zone + (context.settings.rankBy === 'people' ? ln(people.people_exposed) + ln(importanceOf(building)) : 0);
 }
 
 function modelsOf(building: Building, which: Case, context: AssessContext): SystemModels | null {
@@ -207,12 +191,12 @@ function percentiles(
 ): PeriodBand {
   if (bands.length === 1) {
     const { period_s, sigma } = bands[0]![direction];
-    const factor = Math.exp(Z84 * sigma);
+    const factor = exp(Z84 * sigma);
     return { p16_s: period_s / factor, p50_s: period_s, p84_s: period_s * factor };
   }
   scratch.period.clear();
-  for (const band of bands) scratch.period.add(band.chance, Math.log(band[direction].period_s), band[direction].sigma);
+  for (const band of bands) scratch.period.add(band.chance, ln(band[direction].period_s), band[direction].sigma);
   const mixture = scratch.period.gather(scratch.periodPool);
-  const at = (q: number, z: number): number => Math.exp(mixtureQuantile(mixture, q, z));
+  const at = (q: number, z: number): number => exp(mixtureQuantile(mixture, q, z));
   return { p16_s: at(0.16, -Z84), p50_s: at(0.5, 0), p84_s: at(0.84, Z84) };
 }

@@ -3,6 +3,7 @@ import type { Building, DirectionName, PerDirection, System } from '../building.
 import { ELASTIC_EQUIVALENT, REDUCTION } from '../capacity/records.js';
 import { DIRECTIONS } from '../direction.js';
 import { apply } from '../formula.js';
+import { ln } from '../numeric/elementary.js';
 import { LOG_SCORE } from '../priority/records.js';
 import { ordinate } from '../spectrum/compiled.js';
 import type { Trace } from '../trace.js';
@@ -81,7 +82,7 @@ export function leadingCase(
   trace?.choice({
     question: 'Governing direction',
     taken: governing,
-    because: 'the larger demand over capacity',
+    because: context.settings.rankBy === 'demand' ? 'the larger demand' : 'the larger demand over capacity',
     others: [],
   });
   if (trace !== undefined) scoreOf(building, sa_g, capacity_g, slope_k, choice.spectrum, context, trace);
@@ -112,7 +113,12 @@ function openTrace(building: Building, which: Case, choice: SpectrumChoice, trac
       ? `most likely case, chance ${String(Math.round(which.chance * 100))} %`
       : 'from the inventory',
   );
-  trace.value('code edition', which.edition ?? 'no seismic design', 'inferred', eraWords(building, which));
+  trace.value(
+    'code edition',
+    which.edition ?? 'no seismic design',
+    building.years.length === 1 ? building.yearOrigin : 'inferred',
+    eraWords(building, which),
+  );
   trace.choice({ question: 'Spectrum', taken: choice.spectrum.name, because: choice.because, others: [] });
 }
 
@@ -175,19 +181,32 @@ function capacityOf(
   );
 }
 
-function scoreOf(
+/** ln S at a demand and a capacity. */
+export function scoreOf(
   building: Building,
   sa_g: number,
   capacity_g: number,
   slope_k: number,
   spectrum: ContextSpectrum,
   context: AssessContext,
-  trace: Trace,
-): void {
+  trace?: Trace,
+): number {
   const { rankBy } = context.settings;
-  if (rankBy === 'demand') return;
+  if (rankBy === 'demand') {
+    trace?.value('ln_priority', ln(sa_g), 'computed', 'ranked by demand alone: ln S is ln S_a');
+    return ln(sa_g);
+  }
   const people = rankBy === 'people' ? peopleOf(building, context, trace) : { people_exposed: 1 };
-  apply(
+  const zone_term = context.zoneTerms[spectrum.name] ?? 0;
+  if (zone_term !== 0) {
+    trace?.value(
+      'zone_term',
+      zone_term,
+      'computed',
+      `-ln ${String(spectrum.return_period_years)} + k² 0.4²/2 for this spectrum, less the same for the first: return period and slope differ between zones`,
+    );
+  }
+  return apply(
     LOG_SCORE,
     {
       slope_k,
@@ -195,7 +214,7 @@ function scoreOf(
       capacity_sa_g: capacity_g,
       people_exposed: typeof people === 'string' ? 1 : people.people_exposed,
       importance_factor: rankBy === 'people' ? importanceOf(building) : 1,
-      zone_term: context.zoneTerms[spectrum.name] ?? 0,
+      zone_term,
     },
     trace,
   );

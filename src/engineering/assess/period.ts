@@ -1,4 +1,5 @@
 /** One period per direction: measured, or the height formula and the storey stiffness combined. */
+import { exp, ln } from '../numeric/elementary.js';
 import type { Building, DirectionName, System } from '../building.js';
 import { apply, applyAny } from '../formula.js';
 import type { AnyRecord } from '../formula.js';
@@ -209,7 +210,7 @@ export function periodAt(model: PeriodModel, height_m: number, context: AssessCo
   const period_s = apply(COMBINED_PERIOD, input, trace);
   const w1 = 1 / (input.sigma_1 * input.sigma_1);
   const w2 = 1 / (input.sigma_2 * input.sigma_2);
-  const gap = Math.log(byFormula / model.period_s);
+  const gap = ln(byFormula / model.period_s);
   // two estimates: chi-square with one degree of freedom, the squared Birge ratio
   const chiSquare = ((w1 * w2) / (w1 + w2)) * gap * gap;
   const variance = Math.max(1, chiSquare) / (w1 + w2);
@@ -218,6 +219,6 @@ export function periodAt(model: PeriodModel, height_m: number, context: AssessCo
   return {
     period_s,
     sigma: Math.sqrt(sigma * sigma + share * share * model.sharedSigma * model.sharedSigma),
-    disagreement: Math.exp(Math.abs(gap)),
+    disagreement: exp(Math.abs(gap)),
   };
 }

@@ -16,17 +16,22 @@ export function massFactor(building: Building, context: AssessContext): number {
   return (irregularityFactor(building) * context.capacityFactor) / massShare(building);
 }
 
+type Levels = readonly { readonly level: number | null; readonly chance: number }[];
+const NO_DRAWINGS: Levels = [{ level: null, chance: 1 }];
+const AT_WORKING: Levels = [{ level: WORKING_TO_STRENGTH, chance: 1 }];
+const AT_STRENGTH: Levels = [{ level: 1, chance: 1 }];
+const EITHER_LEVEL: Levels = [
+  { level: WORKING_TO_STRENGTH, chance: 0.5 },
+  { level: 1, chance: 0.5 },
+];
+
 /** Level of the drawings' coefficient: as stated, both alike when not stated; null when there is none. */
 export function drawingsLevels(
   building: Building,
 ): readonly { readonly level: number | null; readonly chance: number }[] {
-  if (!(building.design_base_shear_coefficient > 0)) return [{ level: null, chance: 1 }];
-  if (building.design_level === 'working') return [{ level: WORKING_TO_STRENGTH, chance: 1 }];
-  if (building.design_level === 'strength') return [{ level: 1, chance: 1 }];
-  return [
-    { level: WORKING_TO_STRENGTH, chance: 0.5 },
-    { level: 1, chance: 0.5 },
-  ];
+  if (!(building.design_base_shear_coefficient > 0)) return NO_DRAWINGS;
+  if (building.design_level === 'working') return AT_WORKING;
+  return building.design_level === 'strength' ? AT_STRENGTH : EITHER_LEVEL;
 }
 
 /** True where nothing tells the two directions apart: one system, nothing measured or given per direction, no plan dimension in the era's formula. */

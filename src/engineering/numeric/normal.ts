@@ -1,10 +1,11 @@
 /** The standard normal distribution: density, cumulative distribution, quantile. */
+import { exp, ln } from './elementary.js';
 
 export const INVERSE_ROOT_TWO_PI = 0.3989422804014327;
 
 /** Density of the standard normal at z. */
 export function normalDensity(z: number): number {
-  return INVERSE_ROOT_TWO_PI * Math.exp(-0.5 * z * z);
+  return INVERSE_ROOT_TWO_PI * exp(-0.5 * z * z);
 }
 
 /**
@@ -12,7 +13,7 @@ export function normalDensity(z: number): number {
  * West, "Better approximations to cumulative normal functions" (2005); coefficients from memory, guarded by table values in the tests.
  */
 export function normalCdf(z: number): number {
-  return cdfFrom(z, Math.exp(-0.5 * z * z));
+  return cdfFrom(z, exp(-0.5 * z * z));
 }
 
 /** Φ(z) where the caller has e = exp(-z²/2) already, for loops that need the density e/√(2π) too. */
@@ -51,7 +52,7 @@ export function cdfFrom(z: number, e: number): number {
 export function normalQuantile(p: number): number {
   if (!(p > 0 && p < 1)) throw new RangeError(`a chance between 0 and 1 is needed, got ${String(p)}`);
   const q = p < 0.5 ? p : 1 - p;
-  const t = Math.sqrt(-2 * Math.log(q));
+  const t = Math.sqrt(-2 * ln(q));
   let z = t - (2.515517 + t * (0.802853 + t * 0.010328)) / (1 + t * (1.432788 + t * (0.189269 + t * 0.001308)));
   // solve for the upper tail, where Φ(-z) keeps its relative accuracy
   for (let i = 0; i < 4; i += 1) z += (normalCdf(-z) - q) / normalDensity(z);

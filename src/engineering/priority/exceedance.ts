@@ -2,12 +2,15 @@
  * The expected number of buildings above x, F(x) = Σ P(ln S > x): tabulated once for rank bands, and solved exactly for the
  * threshold at which it equals the size of the list.
  */
+import { exp } from '../numeric/elementary.js';
 import { INVERSE_ROOT_TWO_PI, cdfFrom, normalCdf } from '../numeric/normal.js';
 import type { Mixture } from './mixture.js';
 
 export interface Exceedance {
-  /** F(x), from the table. */
+  /** F(x), from the table; where parts have no spread, those above x, exactly. */
   readonly count: (x: number) => number;
+  /** The same with those at x: differs from `count` only where parts have no spread. */
+  readonly countAt: (x: number) => number;
   /** x with F(x) = n, to 1e-9 buildings, or the place where F steps over n. */
   readonly threshold: (n: number) => number;
   /** Chance of each building above the threshold; point masses at the threshold share the places left over equally. */
@@ -29,14 +32,41 @@ export function exceedance(mixtures: readonly Mixture[]): Exceedance {
     const f = at - i;
     return table.value[i]! * (1 - f) + table.value[i + 1]! * f;
   };
+  const steps = table.least === 0 ? stepsOf(mixtures) : null;
   return {
-    count,
+    count: steps === null ? count : (x) => steps(x + AT),
+    countAt: steps === null ? count : (x) => steps(x - AT),
     threshold: (n) => solve(mixtures, n, table),
     chances: (threshold, n) => chancesAt(mixtures, threshold, n),
   };
 }
 
+/** Weight of all parts with a mean above x, each taken at its mean. */
+function stepsOf(mixtures: readonly Mixture[]): (x: number) => number {
+  const weightOf = new Map<number, number>();
+  for (const { mean, weight, from, to } of mixtures) {
+    for (let i = from; i < to; i += 1) {
+      weightOf.set(mean[i]!, (weightOf.get(mean[i]!) ?? 0) + weight[i]!);
+    }
+  }
+  const places = Float64Array.from(weightOf.keys()).sort();
+  const above = new Float64Array(places.length + 1);
+  for (let i = places.length - 1; i >= 0; i -= 1) above[i] = above[i + 1]! + weightOf.get(places[i]!)!;
+  return (x) => {
+    let low = 0;
+    let high = places.length;
+    while (low < high) {
+      const middle = (low + high) >> 1;
+      if (places[middle]! > x) high = middle;
+      else low = middle + 1;
+    }
+    return above[low]!;
+  };
+}
+
 interface Table {
+  /** Smallest spread of any part. */
+  readonly least: number;
   readonly low: number;
   readonly step: number;
   readonly value: Float64Array;
@@ -88,7 +118,7 @@ function tabulate(mixtures: readonly Mixture[]): Table {
   }
   const value = new Float64Array(POINTS);
   grid.forEach((counts, c) => spreadOut(counts, Math.sqrt(variances[c]!) / step, value));
-  return { low, step, value };
+  return { low, step, value, least };
 }
 
 /** Adds to `value` the exceedance of the counts, each spread normally with `sd` in grid steps. */
@@ -122,7 +152,7 @@ function exact(mixtures: readonly Mixture[], x: number): { readonly count: numbe
         const z = gap / s;
         if (z > 9) count += weight[i]!;
         else if (z > -9) {
-          const e = Math.exp(-0.5 * z * z);
+          const e = exp(-0.5 * z * z);
           count += weight[i]! * cdfFrom(z, e);
           density += (weight[i]! * e) / s;
         }

@@ -91,6 +91,11 @@ export function rankAll(input: RankInput, listSize: number, seed: number): Ranki
     n < SIMULATED_UNDER
       ? simulate(input.id, input.mixtures, listSize, seed)
       : closed(input.mixtures, curve, all ? null : threshold, listSize);
+  // the rank itself lies in its band, also where equal medians or few buildings would put it a place outside
+  for (let i = 0; i < n; i += 1) {
+    rankBest[i] = Math.min(rankBest[i]!, rank[i]!);
+    rankWorst[i] = Math.max(rankWorst[i]!, rank[i]!);
+  }
   let expectedWrong = 0;
   for (let place = 0; place < Math.min(listSize, n); place += 1) expectedWrong += 1 - chance[order[place]!]!;
   return {
@@ -116,8 +121,8 @@ function closed(
   const rankBest = new Int32Array(n);
   const rankWorst = new Int32Array(n);
   mixtures.forEach((m, i) => {
-    rankBest[i] = bandEnd(curve.count, m, mixtureQuantile(m, 0.95, Z95, 1e-2), n);
-    rankWorst[i] = bandEnd(curve.count, m, mixtureQuantile(m, 0.05, -Z95, 1e-2), n);
+    rankBest[i] = bandEnd(curve.count, m, mixtureQuantile(m, 0.95, Z95, 1e-2), n, AT);
+    rankWorst[i] = bandEnd(curve.countAt, m, mixtureQuantile(m, 0.05, -Z95, 1e-2), n, -AT);
   });
   return {
     chance: threshold === null ? new Float64Array(n).fill(1) : curve.chances(threshold, listSize),
@@ -126,9 +131,12 @@ function closed(
   };
 }
 
+/** Where parts have no spread the best rank counts only those above, the worst those at the same place too. */
+const AT = 1e-9;
+
 /** Expected rank of a building whose ln S is x: one more than the others expected above it. */
-function bandEnd(count: (x: number) => number, own: Mixture, x: number, n: number): number {
-  const others = count(x) - (1 - mixtureCdf(own, x));
+function bandEnd(count: (x: number) => number, own: Mixture, x: number, n: number, at: number): number {
+  const others = count(x) - (1 - mixtureCdf(own, x + at));
   return Math.min(n, Math.max(1, Math.round(1 + others)));
 }
 

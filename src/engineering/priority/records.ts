@@ -1,4 +1,5 @@
 /** Slope of the hazard curve, people exposed, and the priority itself. */
+import { ln } from '../numeric/elementary.js';
 import { record } from '../formula.js';
 import type { AnyRecord, Family } from '../formula.js';
 
@@ -25,7 +26,7 @@ const slope: Family<
   ],
   expression: 'max(from, min(to, ln(return_period_2_years / return_period_1_years) / ln(sa_2_g / sa_1_g)))',
   evaluate: ({ sa_1_g, sa_2_g, return_period_1_years, return_period_2_years }, { from, to }) =>
-    Math.max(from, Math.min(to, Math.log(return_period_2_years / return_period_1_years) / Math.log(sa_2_g / sa_1_g))),
+    Math.max(from, Math.min(to, ln(return_period_2_years / return_period_1_years) / ln(sa_2_g / sa_1_g))),
 };
 
 export const HAZARD_SLOPE = record({
@@ -117,7 +118,7 @@ const score: Family<
   ],
   expression: 'slope_k * ln(sa_g / capacity_sa_g) + ln(people_exposed) + ln(importance_factor) + zone_term',
   evaluate: ({ slope_k, sa_g, capacity_sa_g, people_exposed, importance_factor, zone_term }) =>
-    slope_k * Math.log(sa_g / capacity_sa_g) + Math.log(people_exposed) + Math.log(importance_factor) + zone_term,
+    slope_k * ln(sa_g / capacity_sa_g) + ln(people_exposed) + ln(importance_factor) + zone_term,
 };
 
 export const LOG_SCORE = record({

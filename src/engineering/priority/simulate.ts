@@ -37,7 +37,7 @@ export function simulate(
   const n = id.length;
   const keys = id.map(hashText);
   const chance = new Float64Array(n);
-  const ranks = Array.from({ length: n }, () => new Uint16Array(n + 1));
+  const ranks = Array.from({ length: n }, () => new Uint32Array(n + 1));
   const words = new Uint32Array(4);
   const score = new Float64Array(n);
   const order = Array.from(id.keys());
@@ -59,17 +59,37 @@ export function simulate(
       place = end;
     }
   }
-  const quantile = (counts: Uint16Array, q: number): number => {
+  const quantile = (counts: Uint32Array, q: number): number => {
+    const all = counts.reduce((sum, count) => sum + count, 0);
     let seen = 0;
     for (let r = 1; r <= n; r += 1) {
       seen += counts[r]!;
-      if (seen >= q * DRAWS) return r;
+      if (seen >= q * all) return r;
     }
     return n;
   };
+  for (const group of alike(mixtures)) {
+    const mean = group.reduce((sum, i) => sum + chance[i]!, 0) / group.length;
+    for (const i of group) chance[i] = mean;
+    const pooled = new Uint32Array(n + 1);
+    for (const i of group) ranks[i]!.forEach((count, r) => (pooled[r]! += count));
+    for (const i of group) ranks[i] = pooled;
+  }
   return {
     chance: chance.map((count) => count / DRAWS),
     rankBest: Int32Array.from(ranks, (counts) => quantile(counts, 0.05)),
     rankWorst: Int32Array.from(ranks, (counts) => quantile(counts, 0.95)),
   };
+}
+
+/** Buildings that nothing tells apart share what the draws gave them: groups of equal mixtures. */
+function alike(mixtures: readonly Mixture[]): readonly (readonly number[])[] {
+  const groups = new Map<string, number[]>();
+  mixtures.forEach((m, i) => {
+    const key = [m.weight, m.mean, m.sd].map((list) => list.subarray(m.from, m.to).join(' ')).join('|');
+    const group = groups.get(key);
+    if (group === undefined) groups.set(key, [i]);
+    else group.push(i);
+  });
+  return [...groups.values()].filter((group) => group.length > 1);
 }

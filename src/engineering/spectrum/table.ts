@@ -1,4 +1,5 @@
 /** A spectrum given by ordinates at periods, interpolated linearly or in log-log; flat outside the end periods. */
+import { ln } from '../numeric/elementary.js';
 import { record } from '../formula.js';
 import type { MethodRecord } from '../formula.js';
 import { power } from '../numeric/power.js';
@@ -49,7 +50,7 @@ function compileTable(input: Omit<TableInput, 'period_s'>, logarithmic: boolean)
     const [t1, t2, s1, s2] = [periods_s[i]!, periods_s[i + 1]!, ordinates_g[i]!, ordinates_g[i + 1]!];
     const clause = `between ${String(t1)} s and ${String(t2)} s`;
     if (logarithmic) {
-      const exponent = Math.log(s2 / s1) / Math.log(t2 / t1);
+      const exponent = ln(s2 / s1) / ln(t2 / t1);
       segments.push({
         from_s: t1,
         to_s: t2,

@@ -1,4 +1,5 @@
 /** Period from mass and storey stiffness. Masses in t and stiffness in kN/m give ω² in 1/s² without a factor. */
+import { sinOfAcute } from '../numeric/elementary.js';
 import { record } from '../formula.js';
 import type { AnyRecord, Family } from '../formula.js';
 import { chainMode, chainProperties } from '../numeric/chain.js';
@@ -40,7 +41,7 @@ const uniformChain: Family<SingleMassInput & { readonly storeys: number }, Recor
   inputs: [{ name: 'storeys', kind: 'number', meaning: 'number of equal storeys' }, MASS, STIFFNESS],
   expression: 'pi * sqrt(mass_t / stiffness_kN_per_m) / sin(pi / (2 * (2 * storeys + 1)))',
   evaluate: ({ storeys, mass_t, stiffness_kN_per_m }) =>
-    (Math.PI * Math.sqrt(mass_t / stiffness_kN_per_m)) / Math.sin(Math.PI / (2 * (2 * storeys + 1))),
+    (Math.PI * Math.sqrt(mass_t / stiffness_kN_per_m)) / sinOfAcute(Math.PI / (2 * (2 * storeys + 1))),
 };
 
 export interface ChainInput {

@@ -1,5 +1,5 @@
 /** Sentences computed from the data, shared by page and summary. */
-import { formatCount, formatShare } from '../../engineering/format.js';
+import { formatCount, formatNumber, formatShare } from '../../engineering/format.js';
 import type { AttributeCount, PageData } from '../../engineering/page-contract.js';
 import { SURE } from '../../screening/summarise.js';
 import { counted, listLength } from './reading.js';
@@ -23,7 +23,8 @@ export function answerSentence(data: PageData): string {
   const places = listLength(data);
   if (places === 0) return 'No building could be ranked, so there is no list; the reasons stand with each building.';
   if (summary.ranked <= summary.list_size) {
-    return `All ${formatCount(summary.ranked)} ranked buildings fit the list of ${formatCount(summary.list_size)}, so the list decides nothing yet; the order within it still tells where to begin.`;
+    const all = summary.ranked === 1 ? 'The only ranked building fits' : `All ${formatCount(summary.ranked)} ranked buildings fit`;
+    return `${all} the list of ${formatCount(summary.list_size)}, so the list decides nothing yet; the order within it still tells where to begin.`;
   }
   const wrong = Math.round(summary.expected_wrong_places);
   const wrongly =
@@ -31,7 +32,7 @@ export function answerSentence(data: PageData): string {
       ? 'fewer than one is expected to be wrong'
       : `about ${formatCount(wrong)} ${wrong === 1 ? 'is' : 'are'} expected to be wrong`;
   const sure = summary.sure_places === 0 ? 'none is sure' : `${formatCount(summary.sure_places)} ${summary.sure_places === 1 ? 'is' : 'are'} sure`;
-  return `Of the ${formatCount(places)} buildings listed, out of ${formatCount(summary.ranked)} ranked, ${sure} and ${wrongly}${unknownClause(summary.attributes)}.`;
+  return `${places === 1 ? 'Of the one building' : `Of the ${formatCount(places)} buildings`} listed, out of ${formatCount(summary.ranked)} ranked, ${sure} and ${wrongly}${unknownClause(summary.attributes)}.`;
 }
 
 function unknownClause(attributes: readonly AttributeCount[]): string {
@@ -90,19 +91,56 @@ export function shareNotGiven(attribute: AttributeCount): number {
   return total === 0 ? 0 : 1 - attribute.given / total;
 }
 
+/** The commonest reasons are named, the others counted together. */
+const REASONS_NAMED = 3;
+
+/** How many buildings are not ranked and why; empty when all are. */
+export function notRankedSentence({ not_ranked }: PageData['summary']): string {
+  const sum = (list: typeof not_ranked): number => list.reduce((total, { count }) => total + count, 0);
+  if (not_ranked.length === 0) return '';
+  const named = not_ranked.slice(0, REASONS_NAMED).map(({ reason, count }) => `${reason} (${formatCount(count)})`);
+  const others = sum(not_ranked.slice(REASONS_NAMED));
+  const rest = others === 0 ? '' : `; other reasons (${formatCount(others)})`;
+  return `${counted(sum(not_ranked), 'building is', 'buildings are')} not ranked, by reason: ${named.join('; ')}${rest}.`;
+}
+
+/** What to write in the study when the heights look as if their unit were another; empty when they do not. */
+export function heightUnitSentence({ findings }: Pick<PageData['summary'], 'findings'>): string {
+  const unit = findings.some(({ code }) => code === 'column-looks-like-feet')
+    ? (['feet', 'ft'] as const)
+    : findings.some(({ code }) => code === 'column-looks-like-metres')
+      ? (['metres', 'm'] as const)
+      : null;
+  if (unit === null) return '';
+  return `The column of heights looks like ${unit[0]} and was not converted: if it is, write height_m: {column: …, unit: ${unit[1]}} under inventory.columns in study.yaml and screen again.`;
+}
+
+/** The slope of each spectrum and how it was come by; said once when all share it, empty when there is none. */
+export function slopeSentence({ slopes }: Pick<PageData['summary'], 'slopes'>): string {
+  const [first] = slopes;
+  if (first === undefined) return '';
+  const told = ({ k, how }: (typeof slopes)[number]): string => `${formatNumber(k, 3)} (${how})`;
+  const words = slopes.every((slope) => told(slope) === told(first))
+    ? told(first)
+    : slopes.map((slope) => `${formatNumber(slope.k, 3)} for ${slope.spectrum} (${slope.how})`).join('; ');
+  return `Slope k of the hazard curve: ${words}.`;
+}
+
 /** What "sure" and "wrong" mean, the edge of the list and the weak types, one sentence each. */
 export function answerNotes({ summary }: PageData): readonly string[] {
   const { tie_group_at_edge: edge } = summary;
+  const before = [heightUnitSentence(summary), notRankedSentence(summary)].filter((note) => note !== '');
   const notes = [
+    ...before,
     `“Sure” is a chance of at least ${formatShare(SURE)} that the building truly belongs to the list; “wrong” is a place that better knowledge would give to another building.`,
   ];
-  if (edge.to > edge.from) {
+  if (edge.to > edge.from && edge.from <= summary.list_size && edge.to > summary.list_size) {
     notes.push(`Ranks ${formatCount(edge.from)} to ${formatCount(edge.to)} lie across the edge of the list and cannot be told apart.`);
   }
   const weak = summary.weak_in_list + summary.weak_outside;
   if (weak > 0) {
     notes.push(
-      `${counted(weak, 'building is', 'buildings are')} of a structural type known to be weak, for certain or as likely as not: ${formatCount(summary.weak_in_list)} in the list and ${formatCount(summary.weak_outside)} outside it.`,
+      `${counted(weak, 'ranked building is', 'ranked buildings are')} of a structural type known to be weak, for certain or as likely as not: ${formatCount(summary.weak_in_list)} in the list and ${formatCount(summary.weak_outside)} outside it.`,
     );
   }
   if (summary.largest_equal_block > 1) {

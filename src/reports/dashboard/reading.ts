@@ -1,4 +1,5 @@
 /** Reading one value of the page's columns. */
+import { formatNumber, formatPlaces } from '../../engineering/format.js';
 import type { PageData } from '../../engineering/page-contract.js';
 
 /** The number of result column `name` for building `i`; NaN when blank. */
@@ -41,6 +42,17 @@ export function middle(values: readonly number[]): number {
   const half = known.length >> 1;
   const upper = known[half] ?? NaN;
   return known.length % 2 === 1 ? upper : ((known[half - 1] ?? NaN) + upper) / 2;
+}
+
+/** Rank by demand: one place, or the places that equal demands share. */
+export function demandPlaces(data: PageData, i: number): string {
+  return formatPlaces(numberAt(data, 'demand_rank', i), numberAt(data, 'demand_rank_last', i));
+}
+
+/** Capacity in g without its unit; where the order uses none, that is said. */
+export function capacityWords(data: PageData, i: number): string {
+  const capacity_g = numberAt(data, 'capacity_g', i);
+  return Number.isNaN(capacity_g) && data.summary.rank_by === 'demand' ? 'not used' : formatNumber(capacity_g, 2);
 }
 
 /** "one building", "3 buildings". */

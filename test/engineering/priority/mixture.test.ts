@@ -50,13 +50,30 @@ describe('MixtureBuilder', () => {
     );
   });
 
+  it('does not move by more than a last bit when its parts do', () => {
+    // equally spaced parts on the edges of bins: where a whole part could jump from one bin to the next
+    for (const step of [0.2, 0.4, 0.8, 1]) {
+      const parts = Array.from({ length: 9 }, (_, i) => ({ weight: 1 / 9, mean: i * step, sd: 0.5 }));
+      const before = gathered(parts);
+      const after = gathered(
+        parts.map(({ weight, mean, sd }) => ({ weight, mean: mean * (1 + 4e-16), sd: sd * (1 - 4e-16) })),
+      );
+      for (const q of [0.05, 0.5, 0.95]) {
+        expect(mixtureQuantile(after, q, normalQuantile(q))).toBeCloseTo(
+          mixtureQuantile(before, q, normalQuantile(q)),
+          10,
+        );
+      }
+    }
+  });
+
   it('gathers parts without spread to within 0.05 of ln S', () => {
     const mixture = gathered([
       { weight: 0.5, mean: 0, sd: 0 },
       { weight: 0.25, mean: 0.01, sd: 0 },
       { weight: 0.25, mean: 1, sd: 0 },
     ]);
-    expect(mixture.to - mixture.from).toBe(2);
+    expect(mixture.to - mixture.from).toBeLessThanOrEqual(4);
     expect(mixtureMoments(mixture).mean).toBeCloseTo(0.2525, 12);
   });
 

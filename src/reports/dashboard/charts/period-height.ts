@@ -56,7 +56,7 @@ export function periodHeightChart(data: PageData): Chart {
       curves: columnsOf(curves),
     },
     renderer: rendererFor(points.length),
-    spec: spec(unitLabel('m', display), bounds, bounds_s, [...new Set(curves.map(({ formula }) => formula))], points.length),
+    spec: spec(unitLabel('m', display), bounds, bounds_s, [...new Set(curves.map(({ formula }) => formula))], points),
   };
 }
 
@@ -94,8 +94,11 @@ function spec(
   bounds: readonly [number, number],
   bounds_s: readonly [number, number],
   formulas: readonly string[],
-  count: number,
+  points: readonly Point[],
 ): Chart['spec'] {
+  const count = points.length;
+  // The legend names what is drawn; each kind keeps its shape.
+  const kinds = EVIDENCE.map((name, e) => ({ name, shape: SHAPES[e] ?? 'circle' })).filter(({ name }) => points.some(({ from }) => from === name));
   const x = {
     field: 'height',
     type: 'quantitative' as const,
@@ -136,7 +139,7 @@ function spec(
         encoding: {
           x,
           y,
-          shape: { field: 'from', type: 'nominal' as const, title: 'Period from', legend: { columns: 2 }, scale: { domain: [...EVIDENCE], range: [...SHAPES] } },
+          shape: { field: 'from', type: 'nominal' as const, title: 'Period from', legend: { columns: 2 }, scale: { domain: kinds.map(({ name }) => name), range: kinds.map(({ shape }) => shape) } },
           color: {
             field: 'place',
             type: 'nominal' as const,

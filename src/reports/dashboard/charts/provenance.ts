@@ -19,10 +19,10 @@ export function provenanceChart({ summary }: PageData): Chart {
       return { title: attribute.title, part, from, to: reached };
     });
   });
-  const labels = attributes.map((attribute) => ({ title: attribute.title, label: `${formatShare(1 - shareNotGiven(attribute))} given` }));
+  const labels = attributes.map((attribute) => ({ title: attribute.title, label: formatShare(1 - shareNotGiven(attribute)) }));
   return {
     id: 'provenance',
-    title: 'Values given, inferred, set by default or unknown, for the attributes that decide most',
+    title: 'Values given, inferred, set by default or unknown, for the attributes that decide most; figures at the right: share given',
     sentence: sentence(attributes.filter(isNeeded).map((attribute) => ({ title: attribute.title, share: shareNotGiven(attribute) }))),
     table: {
       caption: 'Buildings by the origin of each attribute, all attributes',
@@ -35,25 +35,29 @@ export function provenanceChart({ summary }: PageData): Chart {
   };
 }
 
+/** On a narrow page a long name takes two lines, cut at a blank. */
+const NARROW_LABEL =
+  "containerSize()[0] < 560 && length(datum.label) > 20 ? split(replace(datum.label, regexp('^(.{8,18}) '), '$1|'), '|') : datum.label";
+
 function spec(count: number): Chart['spec'] {
   const y = {
     field: 'title',
     type: 'ordinal' as const,
     sort: null,
     title: null,
-    axis: { domain: false, ticks: false, labelLimit: { expr: 'containerSize()[0] < 560 ? 120 : 240' }, labelPadding: 8 },
+    axis: { domain: false, ticks: false, labelExpr: NARROW_LABEL, labelLineHeight: 12, labelOffset: { expr: 'containerSize()[0] < 560 ? -4 : 0' }, labelLimit: 240, labelPadding: 8 },
   };
   const x = {
     field: 'from',
     type: 'quantitative' as const,
     title: 'Share of the buildings (%)',
     scale: { domain: [0, 1], nice: false },
-    axis: { format: '.0%', tickCount: 5, grid: false },
+    axis: { format: '.0%', values: [0, 0.25, 0.5, 0.75, 1], labelOverlap: true, labelFlush: true, grid: false },
   };
   return {
     width: 'container',
-    height: Math.max(count, 1) * 27,
-    padding: { left: 4, right: 84, top: 4, bottom: 4 },
+    height: Math.max(count, 1) * 29,
+    padding: { left: 4, right: 52, top: 4, bottom: 4 },
     layer: [
       {
         data: { name: 'parts' },

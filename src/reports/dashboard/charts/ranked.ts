@@ -67,7 +67,7 @@ function labelledSpec(shown: number, worst: number): Chart['spec'] {
   };
   return {
     width: 'container',
-    height: shown * 21,
+    height: Math.max(shown, 1) * 21,
     padding: { left: 4, right: 62, top: 4, bottom: 22 },
     layer: [
       {

@@ -1,17 +1,17 @@
 /** The sections that are mainly pictures. */
 import { h } from 'preact';
 import type { ComponentChild } from 'preact';
-import { formatNumber } from '../../../engineering/format.js';
 import type { PageData } from '../../../engineering/page-contract.js';
 import type { Chart } from '../charts/chart.js';
 import { NO_MAP } from '../charts/map.js';
+import { slopeSentence } from '../answers.js';
 import { Section } from '../elements.js';
 import { ChartFigure } from './chart-figure.js';
 
 const PICK = 'Point at a building for its name; choose it for its sheet.';
 
 export function PeriodsSection({ data, spectrum, heights }: { data: PageData; spectrum: Chart; heights: Chart }): ComponentChild {
-  const { slopes } = data.summary;
+  const slope = slopeSentence(data.summary);
   const held = data.settings.holdPlateau
     ? 'Below the start of the plateau the ranking keeps the plateau’s value; the ramp to its left is drawn but not used.'
     : 'Below the start of the plateau the ranking follows the ramp, as the study asks.';
@@ -19,9 +19,7 @@ export function PeriodsSection({ data, spectrum, heights }: { data: PageData; sp
     Section,
     { id: 'periods', title: 'Spectrum and periods' },
     h(ChartFigure, { chart: spectrum, hint: held }),
-    slopes.length === 0
-      ? null
-      : h('p', { class: 'quiet' }, `Slope k of the hazard curve: ${slopes.map(({ spectrum: name, k, how }) => `${name} ${formatNumber(k, 3)} (${how})`).join('; ')}.`),
+    slope === '' ? null : h('p', { class: 'quiet' }, slope),
     h(ChartFigure, { chart: heights, hint: PICK }),
   );
 }

@@ -5,7 +5,7 @@ import { formatCount, formatNumber, formatShare } from '../../../engineering/for
 import type { PageData } from '../../../engineering/page-contract.js';
 import type { Chart } from '../charts/chart.js';
 import { Section } from '../elements.js';
-import { governingPeriod, listLength, numberAt } from '../reading.js';
+import { capacityWords, demandPlaces, governingPeriod, listLength, numberAt } from '../reading.js';
 import { middleSentence, reasonTeller } from '../reasons.js';
 import { ChartFigure } from './chart-figure.js';
 
@@ -43,10 +43,10 @@ function Row({ data, i, reason, last }: { data: PageData; i: number; reason: str
     formatShare(numberAt(data, 'chance', i)),
     `${whole('rank_best')} to ${whole('rank_worst')}`,
     whole('tie_group'),
-    whole('demand_rank'),
+    demandPlaces(data, i),
     formatNumber(governingPeriod(data, i), 3),
     formatNumber(numberAt(data, 'sa_g', i), 3),
-    formatNumber(numberAt(data, 'capacity_g', i), 2),
+    capacityWords(data, i),
     reason,
   ];
   return h(
@@ -64,6 +64,7 @@ export function ListSection({ data, chart }: { readonly data: PageData; readonly
     Section,
     { id: 'list', title: `The list: the first ${formatCount(listed)} for detailed assessment` },
     h('p', { class: 'quiet' }, `${caption} ${middleSentence(data)}`),
+    h('p', { class: 'quiet narrow-only' }, 'The list is wider than this screen: it scrolls sideways.'),
     h(
       'div',
       { class: listed > LONG_LIST ? 'scroll long' : 'scroll', role: 'region', 'aria-label': 'The list', tabIndex: 0 },

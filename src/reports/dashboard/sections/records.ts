@@ -4,7 +4,6 @@ import type { ComponentChild } from 'preact';
 import { formatCount, plainWords } from '../../../engineering/format.js';
 import type { PageData } from '../../../engineering/page-contract.js';
 import { madeAt } from '../../made-at.js';
-import { LEVEL_OF_WORK } from '../answers.js';
 import { Section, TableRegion } from '../elements.js';
 
 /** The page's script fills the table; what it needs to be announced stands here. */
@@ -25,7 +24,7 @@ export function AllSection({ data }: { readonly data: PageData }): ComponentChil
 
 export function InventorySection({ data }: { readonly data: PageData }): ComponentChild {
   const { summary } = data;
-  const account = { caption: `What became of the ${formatCount(summary.rows_in)} rows read`, head: ['Rows', 'Number'], rows: summary.account.map(({ title, rows }) => [title, formatCount(rows)]) };
+  const account = { caption: summary.rows_in === 1 ? 'What became of the one row read' : `What became of the ${formatCount(summary.rows_in)} rows read`, head: ['Rows', 'Number'], rows: summary.account.map(({ title, rows }) => [title, formatCount(rows)]) };
   const findings = {
     caption: 'Findings of the checks; nothing was corrected silently',
     head: ['Finding', 'Kind', 'Number', 'Example'],
@@ -54,7 +53,7 @@ export function CautionsSection({ data }: { readonly data: PageData }): Componen
   return h(
     Section,
     { id: 'cautions', title: 'Cautions' },
-    h('ul', { class: 'plain' }, [LEVEL_OF_WORK, ...data.summary.cautions].map((caution) => h('li', null, caution))),
+    h('ul', { class: 'plain' }, data.summary.cautions.map((caution) => h('li', null, caution))),
   );
 }
 

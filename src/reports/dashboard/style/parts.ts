@@ -60,6 +60,8 @@ ol.hand .maths { font: .93em/1.6 ui-monospace, "SF Mono", Menlo, Consolas, "Deja
 ol.hand .result { font-weight: 600; }
 ol.hand .from { color: var(--ink-soft); font-size: .92em; margin-left: 1rem; }
 .agrees { border: 1px solid var(--ink-soft); border-radius: 4px; padding: .5rem .8rem; overflow-wrap: anywhere; }
+@media (min-width: 861px) { .narrow-only { display: none; } }
+@media print { .narrow-only { display: none; } }
 @media (max-width: 560px) { .facts { grid-template-columns: minmax(0, 1fr); gap: 0; } .facts dd { margin-bottom: .45rem; } th, td { padding-inline: .5rem; } }
 @media print {
   .scroll { overflow: visible; border: 0; max-height: none !important; } details:not([open]), summary { display: none; } table { font-size: 8.5pt; }

@@ -1,0 +1,71 @@
+/** The end of a hand calculation: every case at its central values, the mixture, its median. */
+import type { Building } from '../building.js';
+import { formatNumber, formatShare } from '../format.js';
+import type { Mixture } from '../priority/mixture.js';
+import type { Trace } from '../trace.js';
+import type { Case, Cases } from './case-memory.js';
+import type { AssessContext, SpectrumChoice } from './context.js';
+import { leadingCase, scoreOf } from './leading.js';
+
+interface Closing {
+  readonly building: Building;
+  readonly cases: Cases;
+  readonly choice: SpectrumChoice;
+  readonly slope_k: number;
+  readonly context: AssessContext;
+  readonly mixture: Mixture;
+  readonly lnPriority: number;
+  readonly sd: number;
+}
+
+/** Cases written out one by one; the rest are counted. */
+const SHOWN = 12;
+
+export function closeTrace(trace: Trace, closing: Closing): void {
+  const { cases, context, mixture, lnPriority, sd } = closing;
+  trace.heading('From the leading case to the priority');
+  const why =
+    cases.prior === null
+      ? 'system given; era by year of construction, lag and enforcement'
+      : `system chances: ${cases.prior}`;
+  cases.list.slice(0, SHOWN).forEach((which, i) => {
+    trace.value(
+      `case ${String(i + 1)} of ${String(cases.list.length)}`,
+      caseWords(which, closing),
+      cases.systemKnown ? 'given' : 'prior',
+      why,
+    );
+  });
+  if (cases.list.length > SHOWN) {
+    const rest = cases.list.slice(SHOWN).reduce((sum, { chance }) => sum + chance, 0);
+    trace.value('further cases', String(cases.list.length - SHOWN), 'prior', `together ${formatShare(rest)}`);
+  }
+  for (let i = mixture.from; i < mixture.to; i += 1) {
+    trace.value(
+      `part ${String(i - mixture.from + 1)} of the distribution of ln S`,
+      `weight ${formatNumber(mixture.weight[i]!, 4)}, mean ${formatNumber(mixture.mean[i]!, 5)}, standard deviation ${formatNumber(mixture.sd[i]!, 4)}`,
+      'computed',
+      'gathered from all cases and the nodes of period and height; strength, era and people make the standard deviation',
+    );
+  }
+  trace.value('ln_priority_sd', sd, 'computed', 'standard deviation of the whole distribution');
+  trace.value(
+    'ln_priority',
+    lnPriority,
+    'computed',
+    context.settings.rankBy === 'demand'
+      ? 'ln of the larger S_a of the two directions at their median periods'
+      : 'median: the ln S at which Σ weight × Φ((ln S - mean) / standard deviation) is one half',
+  );
+}
+
+/** One case at its central values. */
+function caseWords(which: Case, { building, cases, choice, slope_k, context }: Closing): string {
+  const name = `${which.system}${which.system_transverse === which.system ? '' : ` / ${which.system_transverse}`}, ${which.edition ?? 'no seismic design'}`;
+  const share = `chance ${formatShare(which.chance)}`;
+  const worked = leadingCase(building, { ...cases, list: [which] }, choice, slope_k, context);
+  if (typeof worked === 'string') return `${name}: ${share}`;
+  const score = scoreOf(building, worked.sa_g, worked.capacity_g, slope_k, choice.spectrum, context);
+  const capacity = Number.isNaN(worked.capacity_g) ? '' : `, C = ${formatNumber(worked.capacity_g, 4)} g`;
+  return `${name}: ${share}; S_a = ${formatNumber(worked.sa_g, 4)} g${capacity}, central ln S = ${formatNumber(score, 4)}`;
+}
