@@ -41,7 +41,11 @@ async function main() {
   const started = new Date();
 
   const tsc = createRequire(import.meta.url).resolve('typescript/bin/tsc');
-  const compiled = spawnSync(process.execPath, [tsc, '-p', join(root, 'tsconfig.build.json')], { stdio: 'inherit' });
+  // On the way to a run types are taken as checked (npm test checks them), which halves the wait; a build for its own sake checks.
+  const unchecked = process.argv.includes('--if-stale') ? ['--noCheck'] : [];
+  const compiled = spawnSync(process.execPath, [tsc, '-p', join(root, 'tsconfig.build.json'), ...unchecked], {
+    stdio: 'inherit',
+  });
   if (compiled.status !== 0) {
     process.exitCode = 1;
     return;
