@@ -130,7 +130,7 @@ function addStudyCommands(program: Command, keep: Keep): void {
     .addOption(json())
     .addHelpText(
       'after',
-      `${examples('swaymark check study.yaml', 'swaymark check study.yaml --output checked')}\n\nFindings quote the values of the inventory in metric units, whatever --units says. Exit code 1 when more rows are rejected than inventory.rejects_limit allows.`,
+      `${examples('swaymark check study.yaml', 'swaymark check study.yaml --output checked')}\n\nExit code 1 when more rows are rejected than inventory.rejects_limit allows.`,
     )
     .action(async (file: string, options: { output?: string; units: 'si' | 'us'; json?: true }) => {
       keep(await (await import('./commands/check.js')).check(file, options));

@@ -76,6 +76,24 @@ export function formatQuantity(value: number, unitId: string | null | undefined,
   return `${formatNumber(shownValue(value, unitId, display), digits)} ${unitLabel(unitId, display)}`;
 }
 
+/**
+ * A sentence with its metres and square metres in display units: findings and rules are kept in SI. What stands in quotation marks is
+ * the owner's and stays.
+ */
+export function textInDisplay(text: string, display: Display): string {
+  if (display === 'si') return text;
+  return text
+    .split(/("[^"]*")/u)
+    .map((part, i) =>
+      i % 2 === 1
+        ? part
+        : part.replaceAll(/(\d+(?:\.\d+)?) (m²|m)(?![\w²])/gu, (_all, number: string, unit: string) =>
+            formatQuantity(Number(number), unit === 'm' ? 'm' : 'm2', display),
+          ),
+    )
+    .join('');
+}
+
 /** A code of ours in plain words: "concrete-moment-frame" -> "concrete moment frame". */
 export function plainWords(code: string): string {
   return code.replaceAll('-', ' ');

@@ -1,6 +1,6 @@
 /** A trace as text: symbols, numbers put in, result with unit, clause. Shared by terminal, page and review sheet. */
 import { evaluateExpression, parseExpression, writeExpression } from './expression.js';
-import { formatCount, formatNumber, formatQuantity, shownUnit, unitLabel } from './format.js';
+import { formatCount, formatNumber, formatQuantity, shownUnit, unitLabel, textInDisplay } from './format.js';
 import type { Display } from './format.js';
 import type { InputValue } from './formula.js';
 import { cite } from './source.js';
@@ -188,7 +188,13 @@ export function handSteps(trace: Trace, display: Display): readonly HandStep[] {
       case 'heading':
         return { ...blank, kind: 'heading', title: step.text };
       case 'value':
-        return { ...blank, kind: 'value', ...showValueStep(step, display), source: step.why, mark: step.origin };
+        return {
+          ...blank,
+          kind: 'value',
+          ...showValueStep(step, display),
+          source: textInDisplay(step.why, display),
+          mark: step.origin,
+        };
       case 'choice':
         return {
           ...blank,

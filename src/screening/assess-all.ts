@@ -24,7 +24,8 @@ export interface Assessed {
   /** The ranked buildings: index, id, mixture, in index order. */
   readonly index: Int32Array;
   readonly id: readonly string[];
-  readonly mixtures: readonly Mixture[];
+  /** Emptied once the ranks are made: at a million buildings the largest thing in memory. */
+  readonly mixtures: Mixture[];
   readonly median: Float64Array;
   readonly people: Float64Array;
   readonly demand: Float64Array;

@@ -1,6 +1,7 @@
 /** What the reports draw: a run out of the database as PageData. */
 import { BUILDING_NUMBERS, BUILDING_WORDS } from '../engineering/building-columns.js';
 import type { BuildingColumns } from '../engineering/building-columns.js';
+import { textInDisplay } from '../engineering/format.js';
 import type { Display } from '../engineering/format.js';
 import type { AssessSettings } from '../engineering/assess/settings.js';
 import type { PageData } from '../engineering/page-contract.js';
@@ -97,7 +98,10 @@ export async function pageDataOf(db: Database, runId: number, display: Display):
       program,
       rank_by,
       fingerprints: { study: study_fingerprint, inventory: inventory_id, methods: methods_fingerprint },
-      findings: await findingCounts(db, inventory_id),
+      findings: (await findingCounts(db, inventory_id)).map((finding) => ({
+        ...finding,
+        example: textInDisplay(finding.example, display),
+      })),
       not_ranked: await db.rows<{ reason: string; count: number }>(
         'SELECT not_ranked AS reason, count(*) AS count FROM result WHERE run_id = ? AND not_ranked IS NOT NULL GROUP BY 1 ORDER BY 2 DESC, 1',
         [runId],

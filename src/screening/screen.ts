@@ -90,6 +90,7 @@ export async function screen(db: Database, loaded: LoadedStudy, options: ScreenO
     const listSize = study.ranking.list_size;
     const ranked = rankInto(assessed, listSize, study.seed);
     if (assessed.id.length === 0) throw nothingRanked(assessed, count);
+    assessed.mixtures.length = 0;
     report('keeping');
     const account = { ...taken.account, ...(await rankedRows(db, taken.inventoryId, count, assessed)) };
     const summary: StoredSummary = {

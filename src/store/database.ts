@@ -30,7 +30,7 @@ export interface OpenOptions {
 }
 
 /** Beyond it the engine spills to the scratch folder; its own default is most of the machine, beside our heap. [judgement] */
-const MEMORY_LIMIT = '1GB';
+const MEMORY_LIMIT = '700MB';
 
 interface Shared {
   readonly instance: DuckDBInstance;

@@ -8,6 +8,7 @@ import {
   shownUnit,
   shownValue,
   unitLabel,
+  textInDisplay,
 } from '../../src/engineering/format.js';
 
 // Contracts of the display.
@@ -66,5 +67,15 @@ describe('formatQuantity', () => {
     expect(shownUnit('kN_per_m', 'us')).toBe('kip_per_in');
     expect(shownValue(0.3048, 'm', 'us')).toBe(1);
     expect(unitLabel('m2', 'us')).toBe('ft²');
+  });
+});
+
+describe('textInDisplay', () => {
+  it('turns the metres of a sentence into feet, and leaves what the owner wrote', () => {
+    const text = '"46 m" read: 63.3 m over 6 storeys is 10.55 m per storey, 588.0 m² in all, 12 mm apart';
+    expect(textInDisplay(text, 'us')).toBe(
+      '"46 m" read: 208 ft over 6 storeys is 34.6 ft per storey, 6329 ft² in all, 12 mm apart',
+    );
+    expect(textInDisplay(text, 'si')).toBe(text);
   });
 });

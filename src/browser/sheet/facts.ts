@@ -6,6 +6,7 @@ import {
   formatQuantity,
   formatShare,
   plainWords,
+  textInDisplay,
 } from '../../engineering/format.js';
 import { BUILDING_NUMBERS, BUILDING_WORDS } from '../../engineering/building-columns.js';
 import { findColumn } from '../../engineering/columns.js';
@@ -129,7 +130,7 @@ function origin(p: Portfolio, name: string, i: number): string {
       const rule = p.word(`${name}_rule`, i);
       const sigma = p.input(`${name}_sigma`, i);
       if (from === '' || from === 'given') return ', given';
-      return `, ${from}${rule === '' ? '' : `: ${rule}`}${sigma > 0 ? ` (spread ${formatShare(sigma)})` : ''}`;
+      return `, ${from}${rule === '' ? '' : `: ${textInDisplay(rule, p.page.display)}`}${sigma > 0 ? ` (spread ${formatShare(sigma)})` : ''}`;
     }
     case 'year_built':
       return `, ${p.word('year_built_origin', i) || 'given'}`;

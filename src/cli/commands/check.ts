@@ -30,7 +30,7 @@ export async function check(
         });
         progress.end();
         if (options.json) printJson(checked);
-        else printLines(lines(checked, file, terminalColumns()));
+        else printLines(lines(checked, file, terminalColumns(), options.units));
         return checked.rejected.over ? EXIT.findings : EXIT.clean;
       } finally {
         progress.end();
@@ -42,7 +42,7 @@ export async function check(
   );
 }
 
-function lines(checked: CheckedStudy, file: string, columns: number): string[] {
+function lines(checked: CheckedStudy, file: string, columns: number, display: 'si' | 'us'): string[] {
   const { title, encoding, delimiter, rows_in, buildings, account, attributes, findings, rejected, files } = checked;
   return [
     styled('bold', clean(title)),
@@ -57,7 +57,7 @@ function lines(checked: CheckedStudy, file: string, columns: number): string[] {
     '',
     ...(findings.length === 0
       ? ['Nothing was found amiss.']
-      : [styled('bold', 'Findings'), ...findingBlock(findings, columns)]),
+      : [styled('bold', 'Findings'), ...findingBlock(findings, columns, display)]),
     '',
     ...[heightUnitSentence(checked), checked.not_rankable].flatMap((sentence) =>
       sentence === '' ? [] : [...wrap(clean(sentence), columns), ''],

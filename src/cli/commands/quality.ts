@@ -1,5 +1,6 @@
 /** What `check` and `screen` both say of an inventory. */
-import { formatCount, formatShare } from '../../engineering/format.js';
+import { formatCount, formatShare, textInDisplay } from '../../engineering/format.js';
+import type { Display } from '../../engineering/format.js';
 import type { AccountLine, AttributeCount, FindingCount } from '../../engineering/page-contract.js';
 import { styled } from '../output/style.js';
 import { table } from '../output/table.js';
@@ -48,14 +49,14 @@ const KINDS: Readonly<Record<string, string>> = {
 };
 
 /** Findings by code, each with its first example. */
-export function findingBlock(findings: readonly FindingCount[], columns: number): string[] {
+export function findingBlock(findings: readonly FindingCount[], columns: number, display: Display): string[] {
   return findings.flatMap(({ code, kind, count, example }) => [
     `  ${pad(formatCount(count), 6, true)}  ${styled('bold', clean(code))}  (${KINDS[kind] ?? kind})`,
-    ...wrap(clean(example), columns, '          ', '          '),
+    ...wrap(clean(textInDisplay(example, display)), columns, '          ', '          '),
   ]);
 }
 
 /** The sentence on rejected rows, when they are over the limit. */
 export function overLimit({ share, limit }: { readonly share: number; readonly limit: number }): string {
-  return `${formatShare(share)} of the rows were rejected, more than the ${formatShare(limit)} that inventory.rejects_limit allows.`;
+  return `${formatShare(share)} of the rows were rejected, more than the limit of ${formatShare(limit)} that inventory.rejects_limit allows.`;
 }
