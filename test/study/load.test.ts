@@ -6,7 +6,7 @@ import { UserError, formatError } from '../../src/errors.js';
 import { loadStudy, studyFromText } from '../../src/study/load.js';
 import { SAMPLE } from './sample.js';
 
-// No outside source for these checks: the messages are our own contract (DESIGN.md section 5).
+// No outside source for these checks: the messages are our own contract.
 function complaints(text: string): string[] {
   try {
     studyFromText(text);

@@ -58,5 +58,5 @@ export function findingBlock(findings: readonly FindingCount[], columns: number,
 
 /** The sentence on rejected rows, when they are over the limit. */
 export function overLimit({ share, limit }: { readonly share: number; readonly limit: number }): string {
-  return `${formatShare(share)} of the rows were rejected, more than the limit of ${formatShare(limit)} that inventory.rejects_limit allows.`;
+  return `${formatShare(share)} of the rows were rejected, more than the ${formatShare(limit)} that inventory.rejects_limit allows.`;
 }
