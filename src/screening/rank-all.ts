@@ -1,6 +1,5 @@
 /** Ranks the assessed buildings and writes rank, chance, band and tie group into their result columns. */
-import { exp } from '../engineering/numeric/elementary.js';
-import { rankAll, roundedMedian } from '../engineering/priority/rank.js';
+import { rankAll, relativePriority, roundedMedian } from '../engineering/priority/rank.js';
 import type { Ranking } from '../engineering/priority/rank.js';
 import type { Assessed } from './assess-all.js';
 
@@ -24,7 +23,7 @@ export function rankInto(assessed: Assessed, listSize: number, seed: number): Ra
     wholes['rank_worst']![at] = ranking.rankWorst[i]!;
     wholes['tie_group']![at] = ranking.tieGroup[i]!;
     numbers['chance']![at] = ranking.chance[i]!;
-    numbers['priority']![at] = exp(median[i]! - medianOfPortfolio);
+    numbers['priority']![at] = relativePriority(median[i]!, medianOfPortfolio);
     texts['in_list']![at] = ranking.rank[i]! <= listSize ? 'yes' : 'no';
   }
   // equal demands share their places: on a plateau there is no order by demand

@@ -2,6 +2,7 @@
  * Ranks with their certainty, in closed form, from the mixtures of ln S of all buildings.
  * Order by median; chance of belonging to the first n; rank band; tie groups; expected wrong places.
  */
+import { exp } from '../numeric/elementary.js';
 import { mixtureCdf, mixtureMoments, mixtureQuantile } from './mixture.js';
 import type { Mixture } from './mixture.js';
 import { exceedance } from './exceedance.js';
@@ -42,6 +43,11 @@ const Z95 = 1.6448536269514722;
 /** Medians equal to this many decimals are equal. */
 export function roundedMedian(value: number): number {
   return Math.round(value * 1e9) / 1e9;
+}
+
+/** Priority as it is shown: S over that of the portfolio's median building, from the two natural logarithms. */
+export function relativePriority(lnPriority: number, lnOfMedian: number): number {
+  return exp(lnPriority - lnOfMedian);
 }
 
 /**
