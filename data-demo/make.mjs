@@ -12,9 +12,12 @@ import { headers, ownerRow } from './making/owner.mjs';
 import { quarters } from './making/places.mjs';
 import { priorHeaders, priorRows } from './making/prior.mjs';
 import { makeRandom } from './making/random.mjs';
+import { addStructure, structureHeaders } from './making/structure.mjs';
 import { printSummary } from './making/summary.mjs';
 
 const seed = 20260611;
+// The structure columns came later: a stream of their own leaves every older cell as it was.
+const structureSeed = 20261201;
 const blankAfter = 118;
 const random = makeRandom(seed);
 
@@ -29,7 +32,8 @@ for (const lot of lots) {
 }
 addBehaviour(random, lots);
 const entries = lots.map((lot) => ({ lot, row: ownerRow(random, lot) }));
-const { rows, notes, loneLineFeeds } = addDirt(random, entries);
+const { rows, notes, touched, loneLineFeeds } = addDirt(random, entries);
+addStructure(makeRandom(structureSeed), rows, entries, (row) => touched.has(row), notes);
 
 const nameless = new Set(entries.filter((entry) => entry.row['Asset no.'] === '').map((entry) => entry.lot));
 const aligned = (a, b) => {
@@ -42,7 +46,7 @@ const words = process.argv.slice(2).filter((word) => word !== '--summary');
 const folder = words[0] ?? dirname(fileURLToPath(import.meta.url));
 mkdirSync(folder, { recursive: true });
 const lone = new Set(loneLineFeeds.map((row) => rows.indexOf(row)));
-writeFileSync(join(folder, 'inventory.csv'), inventoryCsv(headers, rows, blankAfter, lone));
+writeFileSync(join(folder, 'inventory.csv'), inventoryCsv([...headers, ...structureHeaders], rows, blankAfter, lone));
 writeFileSync(join(folder, 'neighbours.csv'), plainCsv(['id_a', 'id_b', 'gap_m', 'floors_aligned'], neighbours));
 writeFileSync(join(folder, 'system-prior.csv'), plainCsv(priorHeaders, priorRows()));
 if (process.argv.includes('--summary')) printSummary({ rows, notes, entries, lone, blankAfter, neighbours });

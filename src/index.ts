@@ -15,11 +15,14 @@ export type { CheckOptions, CheckedStudy } from './exports/check-study.js';
 export { screenStudy } from './exports/screen-study.js';
 export type { ScreenStudyOptions, ScreenedStudy } from './exports/screen-study.js';
 
-export { explain, listStudyRuns, pageDataOfStudy, withStudyDatabase } from './runs/open.js';
+export { explain, listStudyRuns, pageDataOfStudy, periods, periodsOfClass, withStudyDatabase } from './runs/open.js';
 export type { RunChoice } from './runs/open.js';
 export { latestRun, listRuns, runById } from './runs/history.js';
 export type { RunEntry } from './runs/history.js';
 export type { Explanation } from './screening/explain.js';
+export type { PeriodClass, PeriodSheet } from './screening/period-sheet.js';
+export type { Estimate, EstimateKind } from './engineering/assess/estimate.js';
+export type { ClassEstimate } from './engineering/assess/class-estimates.js';
 export type { HandStep } from './engineering/hand.js';
 export type { Display } from './engineering/format.js';
 

@@ -2,7 +2,7 @@
 
 const isPlain = (row) => row.Use !== 'open yard' && row['Stiffness along (kN/m)'] === '' && row.dirty !== true;
 
-/** Spoils rows in place. Returns notes [{row, column, what}]; rows are matched by identity, so later insertion moves no note. */
+/** Spoils rows in place. Returns notes [{row, column, what}], matched by identity, so later insertion moves no note, and the set of all rows it looked after. */
 export function addDirt(random, entries) {
   const notes = [];
   const rows = entries.map((entry) => entry.row);
@@ -78,5 +78,5 @@ export function addDirt(random, entries) {
   notes.push({ row: other, column: 'Asset no.', what: `id ${reused['Asset no.']} used a second time with other content` });
   const [nameless] = take(1, (_, lot) => lot.kind === 'works');
   spoil(nameless, 'Asset no.', '', 'no id');
-  return { rows, notes, loneLineFeeds: take(3, () => true) };
+  return { rows, notes, touched, loneLineFeeds: take(3, () => true) };
 }

@@ -2,6 +2,7 @@
 import { formatCount, formatQuantity, formatShare } from '../engineering/format.js';
 import { startCharts } from './charts.js';
 import { byId } from './dom.js';
+import { startClasses } from './estimates/classes.js';
 import { portfolioOf } from './portfolio.js';
 import type { Portfolio } from './portfolio.js';
 import { startSheet } from './sheet/sheet.js';
@@ -20,5 +21,6 @@ function tipOf(p: Portfolio, i: number): string {
 
 const portfolio = portfolioOf(unpackPage(byId('page-data').textContent));
 startTable(portfolio);
+startClasses(portfolio);
 const open = startSheet(portfolio);
 startCharts(byId('page-charts').textContent, { tip: (i) => tipOf(portfolio, i), open });

@@ -23,12 +23,13 @@ export function unpackColumn(packed: Packed): readonly Cell[] {
 const numbers = (packed: Packed): Float64Array =>
   Float64Array.from(unpackColumn(packed), (cell) => (typeof cell === 'number' ? cell : NaN));
 
+interface PackedColumns {
+  readonly numbers: Readonly<Record<string, Packed>>;
+  readonly words: Readonly<Record<string, Packed>>;
+}
+
 interface PackedBuildings extends Pick<PageBuildings, 'shown' | 'all' | 'pools'> {
-  readonly inputs: {
-    readonly id: Packed;
-    readonly numbers: Readonly<Record<string, Packed>>;
-    readonly words: Readonly<Record<string, Packed>>;
-  };
+  readonly inputs: PackedColumns & { readonly id: Packed; readonly structure?: PackedColumns };
   readonly name: Packed;
   readonly group: Packed;
   readonly part_of: Packed;
@@ -60,6 +61,13 @@ export function unpackPage(json: string): LoadedPage {
         id: unpackColumn(inputs.id) as readonly string[],
         numbers: mapped(inputs.numbers, numbers) as unknown as BuildingColumns['numbers'],
         words: mapped(inputs.words, words) as unknown as BuildingColumns['words'],
+        structure:
+          inputs.structure === undefined
+            ? undefined
+            : ({
+                numbers: mapped(inputs.structure.numbers, numbers),
+                words: mapped(inputs.structure.words, words),
+              } as unknown as BuildingColumns['structure']),
       },
       name: words(rest.name),
       group: words(rest.group),

@@ -4,6 +4,7 @@ import type { Argument } from 'commander';
 import { EXIT } from '../errors.js';
 import { printError, terminalColumns } from './output/print.js';
 import { styled } from './output/style.js';
+import type { MeasureCommandOptions } from './commands/measure.js';
 import { VERSION } from '../screening/version.js';
 
 const CAUTION =
@@ -23,6 +24,27 @@ function periods(text: string): number[] {
       throw new InvalidArgumentError('Expected periods in seconds, for instance 0.2,1.');
     return value;
   });
+}
+
+function positive(text: string): number {
+  const value = Number(text);
+  if (text.trim() === '' || !(value > 0 && value < Infinity))
+    throw new InvalidArgumentError('Expected a number over 0.');
+  return value;
+}
+
+function seconds(text: string): number {
+  const value = Number(text);
+  if (text.trim() === '' || !(value >= 0 && value < Infinity))
+    throw new InvalidArgumentError('Expected seconds, 0 or more.');
+  return value;
+}
+
+function band(text: string): [number, number] {
+  const [low = NaN, high = NaN, ...more] = text.split(':').map((part) => (part.trim() === '' ? NaN : Number(part)));
+  if (!(low > 0 && high > low && high < Infinity) || more.length > 0)
+    throw new InvalidArgumentError('Expected two frequencies, the lower first, for instance 0.5:3.');
+  return [low, high];
 }
 
 const units = (): Option => new Option('--units <system>', 'units of the output').choices(['si', 'us']).default('si');
@@ -46,6 +68,7 @@ export async function runProgram(argv: readonly string[]): Promise<number> {
   addStudyCommands(program, keep);
   addRunCommands(program, keep);
   addMethodCommands(program, keep);
+  addMeasureCommand(program, keep);
   try {
     await program.parseAsync([...argv]);
     return code;
@@ -175,6 +198,30 @@ function addRunCommands(program: Command, keep: Keep): void {
       keep(await (await import('./commands/explain.js')).explain(id, options));
     });
   program
+    .command('periods')
+    .summary('every estimate of a period side by side')
+    .description(
+      'Lists every applicable estimate of the period of one building, or of all buildings of one lateral system: measured, from stiffness, by the formulas of the chosen standard, of other standards and of research, with its range; which of them count and why, and why the others do not apply.',
+    )
+    .argument('[building]', 'identifier of the building')
+    .option(
+      '--system <system>',
+      'a class: the buildings of that lateral system; with a building: as if it were of that system',
+    )
+    .option('--block <name>', 'of a class, only the buildings of this block or zone')
+    .addOption(study())
+    .addOption(run())
+    .addOption(json())
+    .addHelpText('after', examples('swaymark periods BH-012', 'swaymark periods --system concrete-moment-frame'))
+    .action(
+      async (
+        id: string | undefined,
+        options: { system?: string; block?: string; study?: string; run?: number; json?: true },
+      ) => {
+        keep(await (await import('./commands/periods.js')).periods(id, options));
+      },
+    );
+  program
     .command('runs')
     .summary('the runs kept for a study')
     .addOption(study())
@@ -205,13 +252,17 @@ function addMethodCommands(program: Command, keep: Keep): void {
     .command('methods')
     .summary('the register of published methods')
     .description(
-      'Lists every method the program can apply, or one of them in full: formula, inputs, units, limits, clause, and how its numbers were come by.',
+      'Lists every method the program can apply, those that hold some words, or one of them in full: formula, inputs, units, limits, clause, and how its numbers were come by.',
     )
-    .argument('[id]', 'one method in full')
+    .argument('[words...]', 'an id: that method in full; other words: the methods that hold all of them')
+    .option('--left-out', 'published rows that are no method here, with the reason')
     .addOption(json())
-    .addHelpText('after', examples('swaymark methods', 'swaymark methods asce7-22/period/other'))
-    .action(async (id: string | undefined, options: { json?: true }) => {
-      keep((await import('./commands/methods.js')).methods(id, options));
+    .addHelpText(
+      'after',
+      examples('swaymark methods', 'swaymark methods period wall', 'swaymark methods asce7-22/period/other'),
+    )
+    .action(async (words: string[], options: { json?: true; leftOut?: true }) => {
+      keep((await import('./commands/methods.js')).methods(words, options));
     });
   program
     .command('calc')
@@ -247,4 +298,44 @@ function addMethodCommands(program: Command, keep: Keep): void {
         keep(await (await import('./commands/spectrum.js')).spectrum(name, options));
       },
     );
+}
+
+function addMeasureCommand(program: Command, keep: Keep): void {
+  program
+    .command('measure')
+    .summary('a vibration record to a period')
+    .description(
+      'Finds the fundamental period of a building in a record of its vibration, ambient or a free decay, with its damping and how sure both are, and prints the row for the inventory.',
+    )
+    .argument('<record>', 'CSV file: a line a sample, with a time column or --rate-hz')
+    .option('--channel <column>', 'column measured, by name or number (default: the first beside time)')
+    .option('--time <column>', 'column of time, in seconds or as clock times, by name or number')
+    .option('--rate-hz <number>', 'sampling rate, instead of a time column', positive)
+    .addOption(
+      new Option('--kind <kind>', 'what the record is (default: judged from the data)').choices(['ambient', 'decay']),
+    )
+    .option('--from-s <seconds>', 'leave out what is before, counted from the first sample', seconds)
+    .option('--to-s <seconds>', 'leave out what is after', positive)
+    .option('--band-hz <low:high>', 'where to look for the peak (default: 0.1 to 25 Hz, as the record allows)', band)
+    .option('--window-s <seconds>', 'length of a window (default: to suit the peak)', positive)
+    .addOption(
+      new Option('--direction <direction>', 'direction of the row for the inventory').choices([
+        'longitudinal',
+        'transverse',
+      ]),
+    )
+    .option('--id <building>', 'id of the building in that row')
+    .option('--svg <file>', 'draw the spectrum there')
+    .addOption(json())
+    .addHelpText(
+      'after',
+      examples(
+        'swaymark measure roof.csv',
+        'swaymark measure roof.csv --channel acc_y --id BH-012 --svg roof.svg',
+        'swaymark measure pull.csv --rate-hz 200 --kind decay',
+      ),
+    )
+    .action(async (file: string, options: MeasureCommandOptions) => {
+      keep(await (await import('./commands/measure.js')).measure(file, options));
+    });
 }

@@ -1,5 +1,7 @@
 /** Buildings by column: how the database hands them over, and how the page carries them. One reader turns a row into a Building. */
 import type { Building, Filled, Origin, System, Use, YesNo } from './building.js';
+import { numbersOf, structureReader } from './structure-columns.js';
+import type { StructureColumns } from './structure-columns.js';
 
 type Numbers = ArrayLike<number>;
 type Words = readonly (string | null)[];
@@ -60,14 +62,12 @@ export interface BuildingColumns {
   readonly id: readonly string[];
   readonly numbers: Readonly<Record<(typeof BUILDING_NUMBERS)[number], Numbers>>;
   readonly words: Readonly<Record<(typeof BUILDING_WORDS)[number], Words>>;
+  /** Handed over only where some building of the inventory knows any of it. */
+  readonly structure?: StructureColumns | undefined;
 }
 
 /** Equally likely years by pool number. */
 export type YearPools = Readonly<Record<number, readonly number[]>>;
-
-function stiffness(text: string | null): readonly number[] | null {
-  return text === null ? null : text.split(';').map(Number);
-}
 
 function filled(value: number, sigma: number, origin: string | null, rule: string | null): Filled {
   return { value, sigma: sigma > 0 ? sigma : 0, origin: (origin ?? 'unknown') as Origin, rule: rule ?? '' };
@@ -128,6 +128,7 @@ export function buildingReader(columns: BuildingColumns, pools: YearPools): (i: 
     hazard_zone,
     design_level,
   } = columns.words;
+  const structureAt = columns.structure === undefined ? null : structureReader(columns.structure);
   return (i) => {
     const year = year_built[i]!;
     const pool = year_pool[i]!;
@@ -159,8 +160,8 @@ export function buildingReader(columns: BuildingColumns, pools: YearPools): (i: 
       seismic_weight_kN: seismic_weight_kN[i]!,
       unit_weight_kN_per_m2: unit_weight_kN_per_m2[i]!,
       storey_stiffness_kN_per_m: {
-        longitudinal: stiffness(storey_stiffness_longitudinal_kN_per_m[i]!),
-        transverse: stiffness(storey_stiffness_transverse_kN_per_m[i]!),
+        longitudinal: numbersOf(storey_stiffness_longitudinal_kN_per_m[i]!),
+        transverse: numbersOf(storey_stiffness_transverse_kN_per_m[i]!),
       },
       measured_period_s: {
         longitudinal: measured_period_longitudinal_s[i]!,
@@ -178,6 +179,7 @@ export function buildingReader(columns: BuildingColumns, pools: YearPools): (i: 
       design_base_shear_coefficient: design_base_shear_coefficient[i]!,
       design_level: design_level[i] as Building['design_level'],
       capacity_sa_g: capacity_sa_g[i]!,
+      structure: structureAt === null ? null : structureAt(i),
     };
   };
 }

@@ -68,6 +68,37 @@ export interface PerDirection<T> {
   readonly transverse: T;
 }
 
+export const BASE_FIXITIES = ['fixed', 'pinned'] as const;
+export type BaseFixity = (typeof BASE_FIXITIES)[number];
+
+/** What drawings or a survey tell of the structure and its ground. Most rows know none of it, and then there is no such object. */
+export interface Structure {
+  readonly column_count: number;
+  /** Across the building. */
+  readonly column_width_m: number;
+  /** Along the building. */
+  readonly column_depth_m: number;
+  readonly beam_width_m: number;
+  readonly beam_depth_m: number;
+  readonly bay_length_m: number;
+  readonly base_fixity: BaseFixity | null;
+  /** Walls of the first storey that stand along the direction, one entry a wall; null: not known. */
+  readonly wall_areas_m2: PerDirection<readonly number[] | null>;
+  readonly wall_lengths_m: PerDirection<readonly number[] | null>;
+  /** Sway of the top under gravity applied sideways. */
+  readonly top_displacement_m: PerDirection<number>;
+  /** Active braces of a storey together. */
+  readonly brace_area_m2: PerDirection<number>;
+  readonly infill_thickness_m: number;
+  /** Solid panels of the first storey together. */
+  readonly infill_length_m: PerDirection<number>;
+  readonly concrete_strength_MPa: number;
+  /** Share of the height that is of steel or timber. */
+  readonly steel_height_share: number;
+  readonly vs30_mps: number;
+  readonly site_period_s: number;
+}
+
 export interface Building {
   readonly id: string;
   readonly status: Status;
@@ -106,6 +137,7 @@ export interface Building {
   readonly design_base_shear_coefficient: number;
   readonly design_level: DesignLevel | null;
   readonly capacity_sa_g: number;
+  readonly structure: Structure | null;
 }
 
 export type { DirectionName };

@@ -3,7 +3,7 @@
  * `limits` are the values taken at face value; outside them a cell is rejected (`outside-limits`), all of them ours [judgement].
  */
 import type { Dimension } from './units.js';
-import { AMPLITUDES, DESIGN_LEVELS, STATUSES, SYSTEMS, USES } from './building.js';
+import { AMPLITUDES, BASE_FIXITIES, DESIGN_LEVELS, STATUSES, SYSTEMS, USES } from './building.js';
 
 export interface InventoryColumn {
   readonly name: string;
@@ -16,7 +16,8 @@ export interface InventoryColumn {
   readonly limits?: readonly [number, number];
   readonly words?: readonly string[];
   /** Which entry of the study's `words` translates it. */
-  readonly vocabulary?: 'system' | 'use' | 'status' | 'site_class' | 'yes_no' | 'amplitude' | 'design_level';
+  readonly vocabulary?:
+    'system' | 'use' | 'status' | 'site_class' | 'yes_no' | 'amplitude' | 'design_level' | 'base_fixity';
   /** Header words by which `init` recognises it, lower case. */
   readonly hints: readonly string[];
 }
@@ -53,6 +54,17 @@ function plain(
   ...hints: string[]
 ): InventoryColumn {
   return { name, kind, title, limits, hints };
+}
+
+function list(
+  name: string,
+  title: string,
+  dimension: Dimension,
+  unit: string,
+  limits: readonly [number, number],
+  ...hints: string[]
+): InventoryColumn {
+  return { name, kind: 'list', title, dimension, unit, limits, hints };
 }
 
 export const COLUMNS: readonly InventoryColumn[] = [
@@ -176,6 +188,143 @@ export const COLUMNS: readonly InventoryColumn[] = [
     limits: [1e2, 1e9],
     hints: ['storey stiffness across', 'stiffness trans', 'stiffness y'],
   },
+  list(
+    'wall_areas_longitudinal_m2',
+    'Wall areas, longitudinal',
+    'area',
+    'm2',
+    [0.01, 500],
+    'wall areas',
+    'wall area',
+    'wall area along',
+    'wall area x',
+    'wall areas x',
+  ),
+  list(
+    'wall_areas_transverse_m2',
+    'Wall areas, transverse',
+    'area',
+    'm2',
+    [0.01, 500],
+    'wall areas across',
+    'wall area across',
+    'wall area y',
+    'wall areas y',
+  ),
+  list(
+    'wall_lengths_longitudinal_m',
+    'Wall lengths, longitudinal',
+    'length',
+    'm',
+    [0.2, 500],
+    'wall lengths',
+    'wall length',
+    'wall length along',
+    'wall length x',
+    'wall lengths x',
+  ),
+  list(
+    'wall_lengths_transverse_m',
+    'Wall lengths, transverse',
+    'length',
+    'm',
+    [0.2, 500],
+    'wall lengths across',
+    'wall length across',
+    'wall length y',
+    'wall lengths y',
+  ),
+  plain(
+    'column_count',
+    'whole',
+    'Columns of the first storey',
+    [1, 5000],
+    'number of columns',
+    'column count',
+    'pillars',
+  ),
+  measure('column_width_m', 'Column width, across', 'length', 'm', [0.1, 4], 'column width', 'column across'),
+  measure(
+    'column_depth_m',
+    'Column depth, along',
+    'length',
+    'm',
+    [0.1, 4],
+    'column depth',
+    'column along',
+    'column size',
+  ),
+  measure('beam_width_m', 'Beam width', 'length', 'm', [0.1, 4], 'beam width'),
+  measure('beam_depth_m', 'Beam depth', 'length', 'm', [0.1, 4], 'beam depth', 'girder depth'),
+  measure('bay_length_m', 'Bay length', 'length', 'm', [1.5, 30], 'bay length', 'bay', 'column spacing', 'beam span'),
+  word('base_fixity', 'Base of the columns', BASE_FIXITIES, 'base_fixity', 'column base', 'base fixity'),
+  measure(
+    'top_displacement_longitudinal_m',
+    'Sway under gravity sideways, longitudinal',
+    'length',
+    'm',
+    [0.0005, 20],
+    'top displacement',
+    'gravity sway',
+    'top displacement x',
+  ),
+  measure(
+    'top_displacement_transverse_m',
+    'Sway under gravity sideways, transverse',
+    'length',
+    'm',
+    [0.0005, 20],
+    'top displacement across',
+    'gravity sway across',
+    'top displacement y',
+  ),
+  measure(
+    'brace_area_longitudinal_m2',
+    'Active braces of a storey, longitudinal',
+    'area',
+    'm2',
+    [0.0001, 5],
+    'brace area',
+    'brace area x',
+  ),
+  measure(
+    'brace_area_transverse_m2',
+    'Active braces of a storey, transverse',
+    'area',
+    'm2',
+    [0.0001, 5],
+    'brace area across',
+    'brace area y',
+  ),
+  measure('infill_thickness_m', 'Infill thickness', 'length', 'm', [0.04, 1], 'infill thickness', 'panel thickness'),
+  measure(
+    'infill_length_longitudinal_m',
+    'Solid infill of the first storey, longitudinal',
+    'length',
+    'm',
+    [0.5, 2000],
+    'infill length',
+    'infill length x',
+  ),
+  measure(
+    'infill_length_transverse_m',
+    'Solid infill of the first storey, transverse',
+    'length',
+    'm',
+    [0.5, 2000],
+    'infill length across',
+    'infill length y',
+  ),
+  measure(
+    'concrete_strength_MPa',
+    'Concrete strength',
+    'pressure',
+    'MPa',
+    [3, 120],
+    'concrete strength',
+    'concrete grade',
+  ),
+  plain('steel_height_share', 'number', 'Share of the height in steel or timber', [0, 1], 'steel height share'),
   measure(
     'measured_period_longitudinal_s',
     'Measured period, longitudinal',

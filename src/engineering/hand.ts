@@ -87,9 +87,94 @@ const SYMBOLS: Readonly<Record<string, string>> = {
   return_period_1_years: 'TR₁',
   return_period_2_years: 'TR₂',
   occupied_share: 'q',
+  wall_areas_m2: 'A_i',
+  wall_lengths_m: 'D_i',
+  wall_heights_m: 'h_i',
+  base_area_m2: 'A_B',
+  diaphragm_length_m: 'L',
+  wall_displacement_m: 'd_w',
+  diaphragm_displacement_m: 'd_d',
+  steel_or_wood_height_m: 'h_sw',
+  wall_reduction: 'ψ_T',
+  base_s: 'T₀',
+  height_exponent: 'y',
+  plan_coefficient: 'c_p',
+  span_coefficient: 'c_L',
+  wall_coefficient: 'c_w',
+  diaphragm_coefficient: 'c_d',
+  added_coefficient: 'c_α',
+  masses_t: 'm_i',
+  storey_stiffness_kN_per_m: 'k_i',
+  modulus_MPa: 'E',
+  shear_modulus_MPa: 'G',
+  cracking_factor: 'c',
+  second_moment_m4: 'I',
+  width_m: 'b',
+  depth_m: 'd',
+  length_m: 'L',
+  beam_stiffness_kN_m: 'Σk_b',
+  column_stiffness_kN_m: 'k_c',
+  beam_column_ratio: 'k̄',
+  end_coefficient: 'a',
+  top_0: 'p₀',
+  top_1: 'p₁',
+  bottom_0: 'q₀',
+  bottom_1: 'q₁',
+  offset_MPa: 'E₀',
+  psi_MPa: 'psi',
+  end_columns: 'n_end',
+  end_stiffness_kN_per_m: 'D_end',
+  inner_columns: 'n_in',
+  inner_stiffness_kN_per_m: 'D_in',
+  end_factor: 'β',
+  shape_factor: 'κ',
+  slab_factor: 'φ',
+  thickness_m: 't',
+  pier_length_m: 'l',
+  pier_height_m: 'h',
+  wall_area_m2: 'A_w',
+  brace_area_m2: 'A_b',
+  bay_length_m: 'L',
+  infill_modulus_MPa: 'E_m',
+  infill_thickness_m: 't',
+  infill_height_m: 'h_inf',
+  infill_length_m: 'l_inf',
+  frame_modulus_MPa: 'E_f',
+  column_second_moment_m4: 'I_c',
+  beam_second_moment_m4: 'I_b',
+  strut_parameter_per_m: 'λ₁',
+  strut_width_m: 'a',
+  panel_stiffness_kN_per_m: 'k_p',
+  panels: 'n_p',
+  mass_per_height_t_per_m: 'μ',
+  flexural_rigidity_kN_m2: 'EI',
+  shear_rigidity_kN: 'GA',
+  stiffness_ratio: 'α',
+  concrete_strength_MPa: 'f_c',
+  masonry_strength_MPa: 'f_m',
+  axial_force_ratio: 'ν',
+  damping_ratio: 'ζ',
+  vs30_mps: 'V_s',
+  modulus_ratio: 'G/G₀',
+  density_t_per_m3: 'ρ',
+  poisson_ratio: 'ν',
+  half_width_m: 'B',
+  half_length_m: 'L',
+  soil_shear_modulus_kN_per_m2: 'G',
+  foundation_stiffness_kN_per_m: 'K',
+  rocking_stiffness_kN_m: 'K_θ',
+  effective_height_m: 'h̄',
+  height_share: 'η',
+  site_period_s: 'T_s',
 };
 
 const symbol = (name: string): string => SYMBOLS[name] ?? name;
+
+/** C_t is the trade's symbol for the coefficient of a period formula; any other coefficient is a plain c. */
+const symbolIn =
+  (familyId: string) =>
+  (name: string): string =>
+    name === 'coefficient' && !familyId.startsWith('period/') ? 'c' : symbol(name);
 
 /** Quantities that count things: whole ones print without decimals. */
 const COUNTS: ReadonlySet<string> = new Set(['storeys', 'occupants_peak', 'occupied_hours_per_week']);
@@ -154,7 +239,7 @@ function formulaStep(step: FormulaStep, display: Display): HandStep {
     .join(', ');
   if (text !== null) {
     const node = parseExpression(text);
-    symbolic = writeExpression(node, symbol);
+    symbolic = writeExpression(node, symbolIn(record.family.id));
     substituted = writeExpression(node, (name) => showInput(name, inputs[name] ?? constants[name] ?? name, display));
   }
   return {

@@ -7,28 +7,29 @@ import { STOREY_HEIGHTS } from './prior/storey-height.js';
 import { UNIT_WEIGHT_KN_PER_M2 } from './prior/unit-weight.js';
 import { USE_VALUES } from './prior/use.js';
 import { TYPE_1, TYPE_2 } from './spectrum/en1998.js';
-import { COMBINED_PERIOD } from './assess/combine.js';
+import { COMBINED_PERIOD, FLEXIBLE_BASE } from './assess/combine.js';
 import { EDITION_RECORDS } from './capacity/editions.js';
 import { CAPACITY_RECORDS } from './capacity/records.js';
 import { DEMAND_RECORDS } from './demand/records.js';
 import type { AnyRecord } from './formula.js';
-import { ASCE41_17_PERIODS, ASCE7_22_PERIODS, EN1998_PERIODS, UBC_HEIGHT_PERIODS } from './period/height-records.js';
 import { MEASURED_PERIODS } from './period/measured-records.js';
-import { UBC_1961_MOMENT_FRAME, UBC_1961_OTHER } from './period/past-records.js';
+import { PERIOD_RECORDS } from './period/periods.js';
 import { PRIORITY_RECORDS } from './priority/records.js';
 import { SPECTRUM_RECORDS } from './spectrum/definition.js';
+import { SITE_RECORDS } from './site/records.js';
+import { CRACKING } from './stiffness/cracking.js';
 import { STIFFNESS_RECORDS } from './stiffness/records.js';
+import { ASSUMED_MATERIALS } from './stiffness/route-materials.js';
+import { VIBRATION_RECORDS } from './vibration/records.js';
 
 export const METHODS: readonly AnyRecord[] = [
-  ...ASCE7_22_PERIODS,
-  ...ASCE41_17_PERIODS,
-  ...EN1998_PERIODS,
-  ...UBC_HEIGHT_PERIODS,
-  UBC_1961_MOMENT_FRAME,
-  UBC_1961_OTHER,
+  ...PERIOD_RECORDS,
   ...MEASURED_PERIODS,
+  ...VIBRATION_RECORDS,
   COMBINED_PERIOD,
+  FLEXIBLE_BASE,
   ...STIFFNESS_RECORDS,
+  ...SITE_RECORDS,
   ...SPECTRUM_RECORDS,
   ...DEMAND_RECORDS,
   ...EDITION_RECORDS,
@@ -53,6 +54,8 @@ const TABLES = {
   USE_VALUES,
   STOREY_HEIGHTS,
   SPREADS,
+  CRACKING,
+  ASSUMED_MATERIALS,
   factors: [MIN_COEFFICIENT_G, WORKING_TO_STRENGTH, OVERSTRENGTH],
 };
 

@@ -41,6 +41,12 @@ export const RESULT_COLUMNS: readonly ResultColumn[] = [
   column('period_transverse_16_s', 'number', 'Period, transverse, 16 %', '16th percentile', 's'),
   column('period_transverse_84_s', 'number', 'Period, transverse, 84 %', '84th percentile', 's'),
   column('period_evidence', 'text', 'Period from', 'measured, formula, stiffness, or formula and stiffness'),
+  column(
+    'period_basis',
+    'text',
+    'Basis of the period',
+    'what the formula that counts was fitted to: best-fit, design or ambient; else measured or mechanics',
+  ),
   column('sa_g', 'number', 'Spectral demand', 'S_a read by the leading case in the governing direction', 'g'),
   column(
     'sa_level_2_g',

@@ -36,7 +36,13 @@ export type TraceStep = FormulaStep | ChoiceStep | ValueStep | HeadingStep;
 export class Trace {
   readonly steps: TraceStep[] = [];
 
+  /** Formula steps since the last heading: the same record at the same inputs is written once. */
+  readonly #written = new Set<string>();
+
   formula(record: AnyRecord, inputs: Inputs, value: number): void {
+    const key = `${record.id} ${JSON.stringify(inputs)}`;
+    if (this.#written.has(key)) return;
+    this.#written.add(key);
     this.steps.push({ kind: 'formula', record, inputs, value });
   }
 
@@ -49,6 +55,7 @@ export class Trace {
   }
 
   heading(text: string): void {
+    this.#written.clear();
     this.steps.push({ kind: 'heading', text });
   }
 }

@@ -12,6 +12,11 @@ export type Dimension =
   | 'mass'
   | 'stiffness'
   | 'pressure'
+  | 'volume'
+  | 'second moment of area'
+  | 'mass per length'
+  | 'moment'
+  | 'flexural rigidity'
   | 'angle'
   | 'money'
   | 'count'
@@ -84,6 +89,26 @@ export const UNITS: readonly Unit[] = [
   },
   { id: 'kN_per_m2', dimension: 'pressure', factor: 1, label: 'kN/m²', also: ['kpa', 'kn/m2'] },
   { id: 'psf', dimension: 'pressure', factor: POUND_FORCE_KN / (FOOT_M * FOOT_M), label: 'psf' },
+  { id: 'MPa', dimension: 'pressure', factor: 1000, label: 'MPa', also: ['N/mm2', 'N/mm²'] },
+  { id: 'GPa', dimension: 'pressure', factor: 1e6, label: 'GPa' },
+  { id: 'psi', dimension: 'pressure', factor: POUND_FORCE_KN / ((FOOT_M / 12) * (FOOT_M / 12)), label: 'psi' },
+  { id: 'ksi', dimension: 'pressure', factor: (1000 * POUND_FORCE_KN) / ((FOOT_M / 12) * (FOOT_M / 12)), label: 'ksi' },
+  { id: 'm3', dimension: 'volume', factor: 1, label: 'm³' },
+  { id: 'mm3', dimension: 'volume', factor: 1e-9, label: 'mm³' },
+  { id: 'm4', dimension: 'second moment of area', factor: 1, label: 'm⁴' },
+  { id: 'mm4', dimension: 'second moment of area', factor: 1e-12, label: 'mm⁴' },
+  {
+    id: 'in4',
+    dimension: 'second moment of area',
+    factor: (FOOT_M / 12) * (FOOT_M / 12) * (FOOT_M / 12) * (FOOT_M / 12),
+    label: 'in⁴',
+  },
+  { id: 't_per_m', dimension: 'mass per length', factor: 1, label: 't/m' },
+  { id: 'kg_per_m', dimension: 'mass per length', factor: 0.001, label: 'kg/m' },
+  { id: 'kN_m', dimension: 'moment', factor: 1, label: 'kNm' },
+  { id: 'MN_m', dimension: 'moment', factor: 1000, label: 'MNm' },
+  { id: 'kN_m2', dimension: 'flexural rigidity', factor: 1, label: 'kNm²' },
+  { id: 'MN_m2', dimension: 'flexural rigidity', factor: 1000, label: 'MNm²' },
   { id: 'deg', dimension: 'angle', factor: 1, label: '°' },
 ];
 

@@ -72,10 +72,16 @@ export async function checkStudy(path: string, options: CheckOptions = {}): Prom
   try {
     options.onOpen?.(db);
     await prepareSchema(db);
-    const taken = await db.transaction(() =>
-      takeIn(db, loaded.study, loaded.folder, (step) => {
-        options.onProgress?.({ step, share: NaN });
-      }),
+    const taken = await db.lateTransaction((begin) =>
+      takeIn(
+        db,
+        loaded.study,
+        loaded.folder,
+        (step) => {
+          options.onProgress?.({ step, share: NaN });
+        },
+        begin,
+      ),
     );
     const { inventoryId } = taken;
     const [source] = await db.rows<{ encoding: string; delimiter: string }>(

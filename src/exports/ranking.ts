@@ -1,13 +1,16 @@
 /** The ranking as a table: every building in rank order, those not ranked last. */
+import { createReadStream, createWriteStream, rmSync } from 'node:fs';
+import { pipeline } from 'node:stream/promises';
 import type { Display } from '../engineering/format.js';
 import { shownUnit } from '../engineering/format.js';
 import { RESULT_COLUMNS } from '../engineering/results.js';
 import { findUnit } from '../engineering/units.js';
 import { UserError } from '../errors.js';
 import type { Database } from '../store/database.js';
-import { FILLED_ATTRIBUTES } from '../store/schema.js';
+import { FILLED_ATTRIBUTES, RANKED_COLUMNS } from '../store/schema.js';
 import { quoteName, quoteText } from '../store/sql.js';
-import { CSV_OPTIONS, firstColumn, guardedText } from './spreadsheet.js';
+import { allDone } from './all-done.js';
+import { CSV_OPTIONS, CSV_OPTIONS_BODY, firstColumn, guardedText } from './spreadsheet.js';
 
 interface Taken {
   readonly name: string;
@@ -77,57 +80,98 @@ function parquetColumns(): string[] {
   return ['rank', 'id', 'name', 'group', ...results, ...TAKEN.map(({ name }) => name)].map(quoteName);
 }
 
-/** Name of the temporary table that holds run `runId` in rank order, made when missing: a kept run never changes. */
-async function rankedTable(db: Database, runId: number): Promise<string> {
+/** Holds the sorted tables in memory, in sight of every connection: a temporary table is its own connection's alone. */
+const SHELF = 'export_shelf';
+
+/** Rows from which on the CSV is written in two parts at once: the engine writes one file with one thread. */
+const WORTH_PARTS = 50_000;
+
+interface RankedTable {
+  readonly name: string;
+  readonly rows: number;
+}
+
+/** The table that holds run `runId` in rank order, made when missing: a kept run never changes. */
+async function rankedTable(db: Database, runId: number): Promise<RankedTable> {
   const run = String(Math.trunc(runId));
   const inventory = await db.value(
     'SELECT inventory_number FROM run JOIN inventory USING (inventory_id) WHERE run_id = ?',
     [runId],
   );
   if (typeof inventory !== 'number') throw new UserError(`there is no run ${run}; \`swaymark runs\` lists them`);
-  const table = tableName(runId);
-  const results = RESULT_COLUMNS.map(({ name }) => `r.${quoteName(name)}`);
-  const taken = TAKEN.map(({ name }) => {
-    const filled = FILLED_ATTRIBUTES.find((attribute) => name === `${attribute}_origin`);
-    return filled === undefined ? `c.${quoteName(name)}` : `${filled}_of.origin AS ${quoteName(name)}`;
+  const name = tableName(runId);
+  const results = RESULT_COLUMNS.map(
+    (column) => `${RANKED_COLUMNS.includes(column) ? 'k' : 'a'}.${quoteName(column.name)}`,
+  );
+  const taken = TAKEN.map((column) => {
+    const filled = FILLED_ATTRIBUTES.find((attribute) => column.name === `${attribute}_origin`);
+    return filled === undefined ? `c.${quoteName(column.name)}` : `${filled}_of.origin AS ${quoteName(column.name)}`;
   });
   const fills = FILLED_ATTRIBUTES.map(
-    (name) =>
-      `JOIN fill ${name}_of ON ${name}_of.inventory_number = ${String(inventory)} AND ${name}_of.fill = c.${name}_fill`,
+    (attribute) =>
+      `JOIN fill ${attribute}_of ON ${attribute}_of.inventory_number = ${String(inventory)} AND ${attribute}_of.fill = c.${attribute}_fill`,
   );
-  // Sorted once for both files, and past the view of buildings, whose other columns cost as much again. The index is in
-  // the order of ids.
-  await db.run(`CREATE TEMP TABLE IF NOT EXISTS ${table} AS
-    SELECT ${[...results, 'c.id', 'c.name', 'c."group"', ...taken].join(', ')} FROM result r
-    JOIN building_core c ON c.inventory_number = ${String(inventory)} AND c.building_index = r.building_index ${fills.join(' ')}
-    WHERE r.run_id = ${run} ORDER BY r."rank" NULLS LAST, r.building_index`);
-  return table;
+  // Writable whatever the study's database is opened for; its own memory only.
+  await db.run(`ATTACH IF NOT EXISTS ':memory:' AS ${SHELF} (READ_WRITE)`);
+  // Sorted once for all files, and past the views, whose other columns cost as much again. The index is in the order of ids.
+  await db.run(`CREATE TABLE IF NOT EXISTS ${name} AS
+    SELECT ${[...results, 'c.id', 'c.name', 'c."group"', ...taken].join(', ')} FROM result_assessed a
+    JOIN result_ranked k ON k.run_id = ${run} AND k.building_index = a.building_index
+    JOIN building_core c ON c.inventory_number = ${String(inventory)} AND c.building_index = a.building_index ${fills.join(' ')}
+    WHERE a.run_id = ${run} ORDER BY k."rank" NULLS LAST, a.building_index`);
+  return { name, rows: Number(await db.value(`SELECT count(*) FROM ${name}`)) };
 }
 
 function tableName(runId: number): string {
-  return `export_ranking_${String(Math.trunc(runId))}`;
+  return `${SHELF}.main.ranking_${String(Math.trunc(runId))}`;
+}
+
+/** Lays out run `runId` for the writers, so that they may run beside each other; `endRanking` clears it away. */
+export async function prepareRanking(db: Database, runId: number): Promise<void> {
+  await rankedTable(db, runId);
 }
 
 /** Frees what the writers of run `runId` share. */
 export async function endRanking(db: Database, runId: number): Promise<void> {
-  await db.run(`DROP TABLE IF EXISTS temp.${tableName(runId)}`);
+  const attached = await db.value(`SELECT count(*) FROM duckdb_databases() WHERE database_name = ?`, [SHELF]);
+  if (attached === 1) await db.run(`DROP TABLE IF EXISTS ${tableName(runId)}`);
 }
 
-/** Writes run `runId` to `path` as CSV for spreadsheets: UTF-8 with byte order mark, CRLF, formulas made harmless. The folder must be open to `db`. */
+/**
+ * Writes run `runId` to `path` as CSV for spreadsheets: UTF-8 with byte order mark, CRLF, formulas made harmless. The folder must be
+ * open to `db`. From `worthParts` rows on two connections write half each, and the second half is put behind the first.
+ */
 export async function writeRankingCsv(
   db: Database,
   runId: number,
   path: string,
   display: Display = 'si',
+  worthParts = WORTH_PARTS,
 ): Promise<void> {
-  const table = await rankedTable(db, runId);
-  await db.run(`COPY (SELECT ${csvColumns(display).join(', ')} FROM ${table}) TO ${quoteText(path)} ${CSV_OPTIONS}`);
+  const { name, rows } = await rankedTable(db, runId);
+  const copy = (to: string, where: string, options: string): string =>
+    `COPY (SELECT ${csvColumns(display).join(', ')} FROM ${name} ${where}) TO ${quoteText(to)} ${options}`;
+  if (rows < worthParts) {
+    await db.run(copy(path, '', CSV_OPTIONS));
+    return;
+  }
+  const half = Math.floor(rows / 2);
+  const rest = `${path}.rest.part`;
+  try {
+    await allDone([
+      db.beside((other) => other.run(copy(path, `WHERE "rank" <= ${String(half)}`, CSV_OPTIONS))),
+      db.beside((other) => other.run(copy(rest, `WHERE "rank" > ${String(half)} OR "rank" IS NULL`, CSV_OPTIONS_BODY))),
+    ]);
+    await pipeline(createReadStream(rest, { highWaterMark: 1 << 22 }), createWriteStream(path, { flags: 'a' }));
+  } finally {
+    rmSync(rest, { force: true });
+  }
 }
 
 /** Writes run `runId` to `path` as Parquet: the same rows and columns in SI units, numbers in full. The folder must be open to `db`. */
 export async function writeRankingParquet(db: Database, runId: number, path: string): Promise<void> {
-  const table = await rankedTable(db, runId);
+  const { name } = await rankedTable(db, runId);
   await db.run(
-    `COPY (SELECT ${parquetColumns().join(', ')} FROM ${table}) TO ${quoteText(path)} (FORMAT parquet, COMPRESSION zstd, COMPRESSION_LEVEL 1, PRESERVE_ORDER true)`,
+    `COPY (SELECT ${parquetColumns().join(', ')} FROM ${name}) TO ${quoteText(path)} (FORMAT parquet, COMPRESSION zstd, COMPRESSION_LEVEL 1, PRESERVE_ORDER true)`,
   );
 }

@@ -1,4 +1,5 @@
 /** Everything a run writes into the study's output folder. */
+import { writeFile } from 'node:fs/promises';
 import type { Display } from '../engineering/format.js';
 import type { PageData } from '../engineering/page-contract.js';
 import { renderDashboard } from '../reports/dashboard.js';
@@ -6,7 +7,7 @@ import { readPageScript } from '../reports/page-script.js';
 import { renderSummary } from '../reports/summary.js';
 import { pageDataOf } from '../screening/page-data.js';
 import type { Database } from '../store/database.js';
-import { endRanking, writeRankingCsv, writeRankingParquet } from './ranking.js';
+import { endRanking, prepareRanking, writeRankingCsv, writeRankingParquet } from './ranking.js';
 import { writeRejectsCsv } from './rejects.js';
 import { writeSet } from './write-set.js';
 
@@ -27,17 +28,38 @@ export async function writeReports(
   folder: string,
   display: Display = 'si',
 ): Promise<Written> {
-  const data = await pageDataOf(db, runId, display);
   try {
+    // the table of the ranking is laid out while the page is drawn
+    const ranking = db.beside((other) => prepareRanking(other, runId));
+    ranking.catch(() => undefined);
+    const data = await pageDataOf(db, runId, display);
+    const { inventory } = data.summary.fingerprints;
     const files = await writeSet(folder, {
-      'dashboard.html': renderDashboard(data, readPageScript()),
+      'dashboard.html': async (path) => {
+        await ranking;
+        await writersUnderWay();
+        await writeFile(path, renderDashboard(data, readPageScript()));
+      },
       'summary.md': renderSummary(data),
-      'ranking.csv': (path) => writeRankingCsv(db, runId, path, display),
-      'ranking.parquet': (path) => writeRankingParquet(db, runId, path),
-      'rejects.csv': (path) => writeRejectsCsv(db, data.summary.fingerprints.inventory, path),
+      'ranking.csv': async (path) => {
+        await ranking;
+        await db.beside((other) => writeRankingCsv(other, runId, path, display));
+      },
+      'ranking.parquet': async (path) => {
+        await ranking;
+        await db.beside((other) => writeRankingParquet(other, runId, path));
+      },
+      'rejects.csv': (path) => db.beside((other) => writeRejectsCsv(other, inventory, path)),
     });
     return { files, data };
   } finally {
     await endRanking(db, runId);
   }
+}
+
+/** Gives the writers of the ranking time to hand their statements over, before drawing the page keeps this thread busy. */
+function writersUnderWay(): Promise<void> {
+  return new Promise((resolve) => {
+    setTimeout(resolve, 50);
+  });
 }

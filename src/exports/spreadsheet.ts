@@ -31,6 +31,8 @@ export function guardedText(column: string): string {
  * table without ORDER BY in the query is else written in blocks as the threads finish them.
  */
 export const CSV_OPTIONS = "(FORMAT csv, HEADER true, NEW_LINE '\\r\\n', PRESERVE_ORDER true)";
+/** The same for rows that follow those of another file. */
+export const CSV_OPTIONS_BODY = CSV_OPTIONS.replace('HEADER true', 'HEADER false');
 
 /** Name of the first column: the byte order mark before it makes spreadsheets read UTF-8. */
 export function firstColumn(name: string): string {

@@ -2,6 +2,7 @@
 import { accessSync, constants, mkdirSync, readdirSync, realpathSync, renameSync, rmSync } from 'node:fs';
 import { writeFile } from 'node:fs/promises';
 import { join } from 'node:path';
+import { allDone } from './all-done.js';
 import { Bug, UserError } from '../errors.js';
 
 /** Text to write, or a function that writes to the path it is given. */
@@ -55,7 +56,7 @@ function isRunning(pid: number): boolean {
   }
 }
 
-/** Writes `files` into `folder` (as `prepareFolder` returned it). @returns their paths. @throws UserError when the disk refuses; then none is replaced. */
+/** Writes `files` into `folder`, all at once, (as `prepareFolder` returned it). @returns their paths. @throws UserError when the disk refuses; then none is replaced. */
 export async function writeSet(
   folder: string,
   files: Readonly<Record<string, FileSource>>,
@@ -63,11 +64,13 @@ export async function writeSet(
   const names = Object.keys(files);
   const temporary = (name: string): string => join(folder, `.swaymark-${String(process.pid)}-${name}.part`);
   try {
-    for (const [name, source] of Object.entries(files)) {
+    for (const name of names)
       if (name.includes('/') || name.includes('\\')) throw new Bug(`writeSet: ${name} is not a file name`);
-      if (typeof source === 'string') await writeFile(temporary(name), source);
-      else await source(temporary(name));
-    }
+    await allDone(
+      Object.entries(files).map(([name, source]) =>
+        typeof source === 'string' ? writeFile(temporary(name), source) : source(temporary(name)),
+      ),
+    );
     for (const name of names) renameSync(temporary(name), join(folder, name));
     return names.map((name) => join(folder, name));
   } catch (error) {

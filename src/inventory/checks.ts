@@ -110,6 +110,12 @@ export const CHECKS = {
     'of three rows or more of one building one gives 0.75 to 1.5 times the area of the others together',
     'summed; the spread of the floor area is widened to 0.35, because it may be counted twice',
   ),
+  listsDiffer: check(
+    'lists-differ',
+    'wall_areas_longitudinal_m2',
+    'as many wall areas as wall lengths in a direction, and one storey stiffness or one a storey',
+    'kept; what needs the two together is not worked out',
+  ),
   partsWithoutArea: check(
     'parts-without-area',
     'floor_area_m2',

@@ -8,11 +8,11 @@ const FEWEST_KNOWN = 8;
 const MID_DECILES = '[0.05, 0.15, 0.25, 0.35, 0.45, 0.55, 0.65, 0.75, 0.85, 0.95]';
 
 /**
- * Makes `intake_year` (first_row, pool) for buildings without a year, and writes their pools to `year_pool`: the
+ * Makes `intake_year` (first_row, pool) for buildings without a year, and `intake_pool` with their pools: the
  * years of the decade where that is known; else of at least 8 buildings of the same group and use; else of the same
  * use; else of all.
  */
-export async function makeYearPools(db: Database, mapping: Mapping, inventoryId: string): Promise<void> {
+export async function makeYearPools(db: Database, mapping: Mapping): Promise<void> {
   const has = (name: string): boolean => mapping.columns.some(({ column }) => column.name === name);
   await db.run('CREATE OR REPLACE TEMP TABLE intake_year (first_row INTEGER, pool INTEGER)');
   if (!has('year_built')) return;
@@ -44,6 +44,11 @@ export async function makeYearPools(db: Database, mapping: Mapping, inventoryId:
     LEFT JOIN intake_pool us ON us.level = 2 AND us.u = b.u
     LEFT JOIN intake_pool al ON al.level = 3
     WHERE coalesce(d.pool, gu.pool, us.pool, al.pool) IS NOT NULL`);
+}
+
+/** Stores the pools that a building takes its year from. */
+export async function storeYearPools(db: Database, inventoryId: string): Promise<void> {
+  if ((await db.value('SELECT count(*) FROM intake_year')) === 0) return;
   await db.run(
     `INSERT INTO year_pool SELECT ?, pool, label, generate_subscripts(years, 1) - 1 AS position, unnest(years)
      FROM intake_pool WHERE pool IN (SELECT pool FROM intake_year) ORDER BY pool, position`,

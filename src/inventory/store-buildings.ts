@@ -25,23 +25,16 @@ export interface BuildingParts {
   readonly doubts: Contradictions;
 }
 
-/** Writes all buildings; `intake_building`, `intake_year` and `intake_finding` must be complete. */
+/** Writes all buildings, beginning the transaction as late as it can; `intake_building`, `intake_year` and `intake_finding` must be complete. */
 export async function storeBuildings(
   db: Database,
   number: number,
   mapping: Mapping,
   parts: BuildingParts,
+  begin: () => Promise<void>,
 ): Promise<void> {
   const planned = plannedColumns(mapping, parts);
   const inOrder = await appendFilled(db, parts, planned);
-  const { fills } = parts.inferred;
-  await db.append('fill', [
-    new Int32Array(fills.length).fill(number),
-    Int32Array.from(fills, (_, fill) => fill),
-    fills.map(({ origin }) => origin),
-    Float64Array.from(fills, ({ sigma }) => sigma),
-    fills.map(({ rule }) => rule),
-  ]);
   const { from, given, id, key, rows } = sourceOf(mapping, parts.readings);
   const orElse = (name: string, word: string): string =>
     `coalesce(${given(name)}, CAST(${quoteText(word)} AS ${typeOf(name)}))`;
@@ -78,6 +71,15 @@ export async function storeBuildings(
      LEFT JOIN intake_year y ON y.first_row = ${key} ${hasNotes ? notes : ''}
      ${inOrder ? '' : 'ORDER BY f.building_index'}`,
   );
+  await begin();
+  const { fills } = parts.inferred;
+  await db.append('fill', [
+    new Int32Array(fills.length).fill(number),
+    Int32Array.from(fills, (_, fill) => fill),
+    fills.map(({ origin }) => origin),
+    Float64Array.from(fills, ({ sigma }) => sigma),
+    fills.map(({ rule }) => rule),
+  ]);
   await db.run('INSERT INTO building_core SELECT * FROM intake_staged');
   await db.run('DROP TABLE intake_staged');
   const stored = await db.value('SELECT count(*) FROM building_core WHERE inventory_number = ?', [number]);

@@ -18,10 +18,11 @@ import type { Mapping } from './header.js';
 import { inferSizes } from './infer.js';
 import type { IntakeStudy } from './intake-study.js';
 import { inspectNeighbours, takeInNeighbours } from './neighbours.js';
+import { noteListLengths } from './list-lengths.js';
 import { normalise } from './normalise.js';
 import type { PlainTable } from './normalise.js';
 import { readPlans } from './plans.js';
-import { makeYearPools } from './pools.js';
+import { makeYearPools, storeYearPools } from './pools.js';
 import { readCells } from './read.js';
 import { readSizes } from './sizes.js';
 import { inspectSource } from './source.js';
@@ -29,7 +30,7 @@ import type { Source } from './source.js';
 import { storeBuildings } from './store-buildings.js';
 
 /** Goes into the fingerprint: an intake that reads differently is another inventory. */
-const INTAKE_VERSION = 3;
+const INTAKE_VERSION = 4;
 
 export interface TakenIn {
   readonly inventoryId: string;
@@ -45,7 +46,8 @@ export interface TakenIn {
 export type IntakeStep = 'opening' | 'reading' | 'casting' | 'checking' | 'storing';
 
 /**
- * Takes an inventory into the database, inside the caller's transaction; paths are relative to `folder`.
+ * Takes an inventory into the database, inside the caller's transaction, which `begin` begins where it has not yet; paths are
+ * relative to `folder`.
  * @throws UserError when the file, its header or the mapping is at fault, or no row is a building.
  */
 export async function takeIn(
@@ -53,6 +55,7 @@ export async function takeIn(
   study: IntakeStudy,
   folder: string,
   progress: (step: IntakeStep) => void = () => undefined,
+  begin: () => Promise<void> = () => Promise.resolve(),
 ): Promise<TakenIn> {
   progress('opening');
   const path = at(folder, study.inventory.file);
@@ -66,7 +69,7 @@ export async function takeIn(
   const table = normalise(source, study.inventory.delimiter);
   try {
     const mapping = mapHeader(table.header, { ...study.inventory, file: path });
-    return await takeTable(db, study, { source, pairs, table, mapping, inventoryId }, progress);
+    return await takeTable(db, study, { source, pairs, table, mapping, inventoryId }, progress, begin);
   } finally {
     table.remove();
     await dropScratch(db);
@@ -86,6 +89,7 @@ async function takeTable(
   study: IntakeStudy,
   parts: Parts,
   progress: (step: IntakeStep) => void,
+  begin: () => Promise<void>,
 ): Promise<TakenIn> {
   const { source, pairs, table, mapping, inventoryId } = parts;
   if (table.written + table.rejects.length === 0) {
@@ -107,6 +111,7 @@ async function takeTable(
   const plans = readPlans(sizes, notes);
   const doubts = findContradictions(sizes, plans, notes);
   const inferred = inferSizes(sizes, plans, doubts);
+  await noteListLengths(db, mapping, notes);
   await notes.write(db);
   if (doubts.column !== undefined) {
     const { check, ratio } = doubts.column;
@@ -118,12 +123,16 @@ async function takeTable(
     await noteColumn(db, { ...check, action }, shown, `the median height per storey is ${shown} m`);
   }
   await noteNearTwins(db, mapping);
-  await makeYearPools(db, mapping, inventoryId);
-  if (pairs !== undefined) await takeInNeighbours(db, pairs, inventoryId);
+  await makeYearPools(db, mapping);
+  if (pairs !== undefined) {
+    await begin();
+    await takeInNeighbours(db, pairs, inventoryId);
+  }
 
   progress('storing');
   const number = Number(await db.value('SELECT coalesce(max(inventory_number), 0) + 1 FROM inventory'));
-  await storeBuildings(db, number, mapping, { readings, sizes, plans, inferred, doubts });
+  await storeBuildings(db, number, mapping, { readings, sizes, plans, inferred, doubts }, begin);
+  await storeYearPools(db, inventoryId);
   await storeFindings(db, inventoryId, table.hasLineBreaks ? table.lineOf : undefined);
   const rowsIn = table.written + table.rejects.length;
   await db.run('INSERT INTO inventory VALUES (?, ?, ?, ?, ?, ?, ?, ?)', [

@@ -1,10 +1,13 @@
 /** A study's kept runs, opened for reading. */
 import { existsSync } from 'node:fs';
+import type { System } from '../engineering/building.js';
 import type { Display } from '../engineering/format.js';
 import type { PageData } from '../engineering/page-contract.js';
 import { UserError } from '../errors.js';
 import { explainBuilding } from '../screening/explain.js';
 import type { Explanation } from '../screening/explain.js';
+import { periodClass, periodSheet } from '../screening/period-sheet.js';
+import type { PeriodClass, PeriodSheet } from '../screening/period-sheet.js';
 import { pageDataOf } from '../screening/page-data.js';
 import { databasePath, openStudyDatabase } from '../screening/screen.js';
 import type { Database } from '../store/database.js';
@@ -79,5 +82,39 @@ export async function pageDataOfStudy(path: string, options: RunChoice = {}): Pr
   return withStudyDatabase(path, async (db) => {
     const { run } = await chosenRun(db, options);
     return pageDataOf(db, run, options.units ?? 'si');
+  });
+}
+
+/**
+ * Every estimate of the period of building `id` in a run of the study at `path`: which counts, and why the others do not.
+ * @throws UserError for a study without runs, an unknown run or building.
+ * @example
+ * const { directions } = await periods('study.yaml', 'BH-012');
+ */
+export async function periods(
+  path: string,
+  id: string,
+  options: RunChoice & { readonly system?: System } = {},
+): Promise<PeriodSheet> {
+  return withStudyDatabase(path, async (db) => {
+    const { run } = await chosenRun(db, options);
+    return periodSheet(db, run, id, options.system);
+  });
+}
+
+/**
+ * Every estimate over the buildings of one lateral system, in one block (`group`) or all.
+ * @throws UserError for a study without runs, an unknown run, or no such building.
+ * @example
+ * const { estimates } = await periodsOfClass('study.yaml', 'concrete-moment-frame');
+ */
+export async function periodsOfClass(
+  path: string,
+  system: System,
+  options: RunChoice & { readonly group?: string } = {},
+): Promise<PeriodClass> {
+  return withStudyDatabase(path, async (db) => {
+    const { run } = await chosenRun(db, options);
+    return periodClass(db, run, system, options.group);
   });
 }

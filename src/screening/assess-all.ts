@@ -1,124 +1,133 @@
-/** Every building of an inventory through `assess`, block by block, into columns of results. */
-import { assess, isRanked } from '../engineering/assess/assess.js';
-import type { Assessment } from '../engineering/assess/assess.js';
-import type { AssessContext } from '../engineering/assess/context.js';
-import { newScratch } from '../engineering/assess/scratch.js';
-import { buildingReader } from '../engineering/building-columns.js';
-import type { YearPools } from '../engineering/building-columns.js';
+/** Every building of an inventory through `assess`, block by block; what the ranking needs is gathered, the rest kept at once. */
 import type { Mixture } from '../engineering/priority/mixture.js';
-import { RESULT_COLUMNS } from '../engineering/results.js';
+import { SIMULATED_UNDER } from '../engineering/priority/simulate.js';
 import { indexRanges } from '../store/chunks.js';
 import type { Database } from '../store/database.js';
-import { NULL_I32 } from '../store/vectors.js';
-import { readBuildings } from './read-buildings.js';
+import type { Assessor } from './assess-threads.js';
+import { NONE } from './assess-block.js';
+import type { BlockResult } from './assess-block.js';
+import { mixturesOf } from './flat-mixtures.js';
+import type { FlatArrays } from './flat-mixtures.js';
+import { keepAssessed } from './keep-results.js';
+import { blocksOf, readBuildings, readIds } from './read-buildings.js';
 
-/** Result columns by name, one entry per building in index order; what the ranking fills is filled later. */
-export interface ResultArrays {
-  readonly numbers: Readonly<Record<string, Float64Array>>;
-  readonly wholes: Readonly<Record<string, Int32Array>>;
-  readonly texts: Readonly<Record<string, (string | null)[]>>;
-}
-
+/** The ranked buildings in the order of their indices, one entry each. */
 export interface Assessed {
-  readonly results: ResultArrays;
-  /** The ranked buildings: index, id, mixture, in index order. */
   readonly index: Int32Array;
-  readonly id: readonly string[];
+  /** Ids, or where there are many buildings their indices, which are in the order of the ids. */
+  readonly id: readonly string[] | Int32Array;
   /** Emptied once the ranks are made: at a million buildings the largest thing in memory. */
   readonly mixtures: Mixture[];
+  /** The same, some thousands to a set. */
+  readonly flat: FlatArrays[];
   readonly median: Float64Array;
   readonly people: Float64Array;
   readonly demand: Float64Array;
+  readonly weakChance: Float64Array;
+  /** How many buildings are not ranked, by reason. */
+  readonly reasons: ReadonlyMap<string, number>;
 }
 
-function emptyResults(count: number): ResultArrays {
-  const of = (kind: string) => RESULT_COLUMNS.filter((column) => column.kind === kind).map(({ name }) => name);
-  return {
-    numbers: Object.fromEntries(of('number').map((name) => [name, new Float64Array(count).fill(NaN)])),
-    wholes: Object.fromEntries(of('whole').map((name) => [name, new Int32Array(count).fill(NULL_I32)])),
-    texts: Object.fromEntries(of('text').map((name) => [name, new Array<string | null>(count).fill(null)])),
-  };
-}
+/** Buildings read at a time: a group of rows of the database, which it reads whole or not at all. */
+const READ = 122_880;
+/** Parts of it handed to threads. */
+const PARTS = 4;
 
-/** Assesses `count` buildings. `onProgress` hears how many are done. */
+/** Assesses `count` buildings and keeps the results as those of run `runId`. `onProgress` hears how many are done. */
 export async function assessAll(
   db: Database,
   inventoryId: string,
-  pools: YearPools,
+  runId: number,
   count: number,
-  context: AssessContext,
+  assessor: Assessor,
   onProgress?: (done: number) => void,
 ): Promise<Assessed> {
-  const results = emptyResults(count);
-  const scratch = newScratch();
-  const index = new Int32Array(count);
-  const id: string[] = [];
-  const mixtures: Mixture[] = [];
-  const median = new Float64Array(count);
-  const people = new Float64Array(count);
-  const demand = new Float64Array(count);
-  let ranked = 0;
-  for (const range of indexRanges(count)) {
-    const { columns, notRanked, rows } = await readBuildings(db, inventoryId, range);
-    const read = buildingReader(columns, pools);
-    for (let i = 0; i < rows; i += 1) {
-      const at = range.from + i;
-      const early = notRanked[i]!;
-      const building = read(i);
-      const result =
-        early === null ? assess(building, context, undefined, scratch) : { id: building.id, reason: early };
-      if (!isRanked(result)) {
-        results.texts['not_ranked']![at] = result.reason;
-        continue;
-      }
-      write(results, at, result);
-      index[ranked] = at;
-      id.push(result.id);
-      mixtures.push(result.mixture);
-      median[ranked] = result.lnPriority;
-      people[ranked] = Number.isNaN(result.people_exposed) ? 0 : result.people_exposed;
-      demand[ranked] = result.demand_g;
-      ranked += 1;
+  const gathering = new Gathering(count);
+  const running = new Set<Promise<void>>();
+  // kept in order, whichever thread is first
+  let kept: Promise<void> = Promise.resolve();
+  for (const range of indexRanges(count, READ)) {
+    const input = await readBuildings(db, inventoryId, range, { ids: false });
+    for (const { from, block } of blocksOf(input, range.from, Math.ceil(READ / PARTS))) {
+      const result = assessor.assess(block);
+      const before = kept;
+      const work = (async (): Promise<void> => {
+        const done = await result;
+        await before;
+        await keepAssessed(db, runId, from, done);
+        gathering.add(from, done);
+        onProgress?.(from + done.rows);
+      })();
+      kept = work;
+      running.add(work);
+      void work.then(
+        () => running.delete(work),
+        () => undefined,
+      );
+      // one block more than there are threads, so that none waits for the next to be read
+      while (running.size > 2 * assessor.threads) await Promise.race(running);
     }
-    onProgress?.(range.to);
   }
-  return {
-    results,
-    index: index.subarray(0, ranked),
-    id,
-    mixtures,
-    median: median.subarray(0, ranked),
-    people: people.subarray(0, ranked),
-    demand: demand.subarray(0, ranked),
-  };
+  await Promise.all(running);
+  return gathering.finish(db, inventoryId);
 }
 
-function write({ numbers, texts }: ResultArrays, at: number, result: Assessment): void {
-  const { leading, period } = result;
-  const set = (name: string, value: number): void => {
-    numbers[name]![at] = value;
-  };
-  set('ln_priority', result.lnPriority);
-  set('ln_priority_sd', result.lnPrioritySd);
-  set('period_longitudinal_s', period.longitudinal.p50_s);
-  set('period_longitudinal_16_s', period.longitudinal.p16_s);
-  set('period_longitudinal_84_s', period.longitudinal.p84_s);
-  set('period_transverse_s', period.transverse.p50_s);
-  set('period_transverse_16_s', period.transverse.p16_s);
-  set('period_transverse_84_s', period.transverse.p84_s);
-  set('sa_g', leading.sa_g);
-  set('sa_level_2_g', leading.sa_level_2_g);
-  set('capacity_g', leading.capacity_g);
-  set('demand_over_capacity', leading.demand_over_capacity);
-  set('people_exposed', result.people_exposed);
-  set('slope_k', result.slope_k);
-  set('case_chance', leading.chance);
-  set('weak_chance', result.weakChance);
-  texts['governing']![at] = leading.governing;
-  texts['period_evidence']![at] = leading.evidence;
-  texts['spectrum']![at] = result.spectrum;
-  texts['case_system']![at] = leading.system;
-  texts['case_edition']![at] = leading.edition ?? 'no seismic design';
-  texts['weak_type']![at] = result.weakType;
-  texts['flags']![at] = result.flags.join(' ');
+/** Collects what the ranking needs. */
+class Gathering {
+  readonly #index: Int32Array;
+  readonly #median: Float64Array;
+  readonly #people: Float64Array;
+  readonly #demand: Float64Array;
+  readonly #weakChance: Float64Array;
+  readonly #mixtures: Mixture[] = [];
+  readonly #flat: FlatArrays[] = [];
+  readonly #reasons = new Map<string, number>();
+  #count = 0;
+
+  constructor(count: number) {
+    this.#index = new Int32Array(count);
+    this.#median = new Float64Array(count);
+    this.#people = new Float64Array(count);
+    this.#demand = new Float64Array(count);
+    this.#weakChance = new Float64Array(count);
+  }
+
+  add(from: number, { ranked, numbers, demand_g, mixtures, texts }: BlockResult): void {
+    const lnPriority = numbers['ln_priority']!;
+    const exposed = numbers['people_exposed']!;
+    const weak = numbers['weak_chance']!;
+    for (let i = 0; i < ranked.length; i += 1) {
+      const row = ranked[i]!;
+      const at = this.#count + i;
+      this.#index[at] = from + row;
+      this.#median[at] = lnPriority[row]!;
+      this.#people[at] = Number.isNaN(exposed[row]!) ? 0 : exposed[row]!;
+      this.#demand[at] = demand_g[i]!;
+      this.#weakChance[at] = weak[row]!;
+    }
+    this.#count += ranked.length;
+    for (const mixture of mixturesOf(mixtures)) this.#mixtures.push(mixture);
+    this.#flat.push(mixtures);
+    const { words, codes } = texts['not_ranked']!;
+    for (const code of codes) {
+      if (code !== NONE) this.#reasons.set(words[code]!, (this.#reasons.get(words[code]!) ?? 0) + 1);
+    }
+  }
+
+  async finish(db: Database, inventoryId: string): Promise<Assessed> {
+    const count = this.#count;
+    const index = this.#index.subarray(0, count);
+    return {
+      index,
+      // few buildings are ranked by simulation, whose draws hang on the ids
+      id: count < SIMULATED_UNDER ? await readIds(db, inventoryId, index) : index,
+      mixtures: this.#mixtures,
+      flat: this.#flat,
+      median: this.#median.subarray(0, count),
+      people: this.#people.subarray(0, count),
+      demand: this.#demand.subarray(0, count),
+      weakChance: this.#weakChance.subarray(0, count),
+      reasons: this.#reasons,
+    };
+  }
 }

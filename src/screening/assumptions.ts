@@ -1,6 +1,6 @@
 /** The assumptions register and the cautions that every report carries. */
 import type { AssessSettings } from '../engineering/assess/settings.js';
-import { standardRead } from '../engineering/period/choose.js';
+import { standardNote, standardRead } from '../engineering/period/choose.js';
 import type { Assumption } from '../engineering/page-contract.js';
 import type { SlopeFound } from './slopes.js';
 
@@ -17,6 +17,25 @@ export function assumptionsOf(settings: AssessSettings, slopes: readonly SlopeFo
       value: `${read} (asked: ${period.standard}, ${period.basis})`,
       source: 'study',
     },
+    ...(standardNote(read) === ''
+      ? []
+      : [{ id: 'period-standard-note', statement: standardNote(read), value: read, source: 'register of methods' }]),
+    ...Object.entries(period.formulaFor).map(([system, id]) => ({
+      id: `period-formula-${system}`,
+      statement: `Formula tried first for ${system}`,
+      value: id,
+      source: 'study',
+    })),
+    ...(period.switchedOff.length === 0
+      ? []
+      : [
+          {
+            id: 'period-switched-off',
+            statement: 'Methods not used',
+            value: period.switchedOff.join(', '),
+            source: 'study',
+          },
+        ]),
     {
       id: 'period-bias',
       statement: 'Known bias: walls by code formula run long, essential buildings short; not corrected',
@@ -40,6 +59,31 @@ export function assumptionsOf(settings: AssessSettings, slopes: readonly SlopeFo
       statement: 'Method error of a period from given storey stiffness, σ of ln T',
       value: String(spreads.storeyStiffness),
       source: JUDGEMENT,
+    },
+    {
+      id: 'stiffness-models-spread',
+      statement: 'Method error of a period from sections or braces, from walls, from sway under gravity, σ of ln T',
+      value: `${String(spreads.storeySections)}, ${String(spreads.storeyWalls)}, ${String(spreads.storeySway)}`,
+      source: JUDGEMENT,
+    },
+    {
+      id: 'cracking',
+      statement: 'Stiffness of cracked concrete and masonry over uncracked, and its band',
+      value: '0.5; 0.3 to 0.7',
+      source: 'EN 1998-1 4.3.1(7); the band judgement',
+    },
+    {
+      id: 'stiffness-bias',
+      statement:
+        'Known bias: bare cracked frames from columns and beams run 1.2 to 1.8 times the height formula; not corrected',
+      value: 'none',
+      source: 'seen on the demo; infill and partitions are left out of such a model',
+    },
+    {
+      id: 'foundation',
+      statement: 'Flexible ground lengthens periods from stiffness only, where h/(Vs T) is above 0.1',
+      value: 'ν 0.35, G/G₀ 0.7, density 1.8 t/m³',
+      source: 'Veletsos and Meek, Pais and Kausel, from memory; the values judgement',
     },
     {
       id: 'amplitude',

@@ -13,6 +13,7 @@ import { Bug, UserError, showValue } from '../errors.js';
 import type { Database } from '../store/database.js';
 import { quoteName } from '../store/sql.js';
 import { readRun } from './page-data.js';
+import type { StoredRun } from './page-data.js';
 import { readBuildings, readPools } from './read-buildings.js';
 import { PROGRAM } from './version.js';
 
@@ -33,20 +34,8 @@ export interface Explanation {
  */
 export async function explainBuilding(db: Database, runId: number, id: string, display: Display): Promise<Explanation> {
   const run = await readRun(db, runId);
-  const [found] = await db.rows<{
-    building_index: number;
-    name: string | null;
-    group: string | null;
-    not_ranked: string | null;
-  }>('SELECT building_index, name, "group", not_ranked FROM building WHERE inventory_id = ? AND id = ?', [
-    run.inventory_id,
-    id,
-  ]);
-  if (found === undefined)
-    throw new UserError(
-      `there is no building ${showValue(id)} in run ${String(runId)}${await nearestId(db, run.inventory_id, id)}`,
-    );
-  const at = found.building_index;
+  const found = await findBuilding(db, run, id);
+  const at = found.index;
   const { columns } = await readBuildings(db, run.inventory_id, { from: at, to: at + 1 });
   const building = buildingAt(columns, 0, await readPools(db, run.inventory_id));
   const trace = new Trace();
@@ -72,6 +61,34 @@ export async function explainBuilding(db: Database, runId: number, id: string, d
     steps: handSteps(trace, display),
     stored: values,
   };
+}
+
+/** Where building `id` of a run stands in its inventory. @throws UserError naming the nearest ids when there is none. */
+export async function findBuilding(
+  db: Database,
+  { run_id, inventory_id }: StoredRun,
+  id: string,
+): Promise<{
+  readonly index: number;
+  readonly name: string | null;
+  readonly group: string | null;
+  readonly not_ranked: string | null;
+}> {
+  const [found] = await db.rows<{
+    building_index: number;
+    name: string | null;
+    group: string | null;
+    not_ranked: string | null;
+  }>('SELECT building_index, name, "group", not_ranked FROM building WHERE inventory_id = ? AND id = ?', [
+    inventory_id,
+    id,
+  ]);
+  if (found === undefined)
+    throw new UserError(
+      `there is no building ${showValue(id)} in run ${String(run_id)}${await nearestId(db, inventory_id, id)}`,
+    );
+  const { building_index: index, ...rest } = found;
+  return { index, ...rest };
 }
 
 async function nearestId(db: Database, inventoryId: string, id: string): Promise<string> {

@@ -6,12 +6,13 @@ import type { Display } from '../engineering/format.js';
 import type { AssessSettings } from '../engineering/assess/settings.js';
 import type { PageData } from '../engineering/page-contract.js';
 import { RESULT_COLUMNS } from '../engineering/results.js';
+import { STRUCTURE_NUMBERS, STRUCTURE_WORDS } from '../engineering/structure-columns.js';
 import { UserError } from '../errors.js';
 import type { Database } from '../store/database.js';
 import { quoteName } from '../store/sql.js';
 import type { ColumnKind } from '../store/vectors.js';
 import { CAUTIONS } from './assumptions.js';
-import { readPools } from './read-buildings.js';
+import { STRUCTURE_SPEC, knowsStructure, readPools } from './read-buildings.js';
 import { findingCounts } from './summarise.js';
 import type { StoredSummary } from './summarise.js';
 
@@ -57,6 +58,8 @@ export async function pageDataOf(db: Database, runId: number, display: Display):
   for (const name of others) spec[name] = 'text';
   for (const name of BUILDING_NUMBERS) spec[name] = 'f64';
   for (const name of BUILDING_WORDS) spec[name] = 'text';
+  const structured = await knowsStructure(db, run.inventory_id);
+  if (structured) Object.assign(spec, STRUCTURE_SPEC);
   const resultSpec: Record<string, ColumnKind> = {};
   const results = RESULT_COLUMNS.map(({ name, kind }) => {
     resultSpec[`r_${name}`] = KIND[kind] === 'i32' ? 'f64' : KIND[kind]!;
@@ -116,6 +119,12 @@ export async function pageDataOf(db: Database, runId: number, display: Display):
         id: texts('id') as string[],
         numbers: pick(BUILDING_NUMBERS) as unknown as BuildingColumns['numbers'],
         words: pick(BUILDING_WORDS) as unknown as BuildingColumns['words'],
+        structure: structured
+          ? ({
+              numbers: pick(STRUCTURE_NUMBERS),
+              words: pick(STRUCTURE_WORDS),
+            } as unknown as BuildingColumns['structure'])
+          : undefined,
       },
       pools: await readPools(db, inventory_id),
       name: texts('name'),

@@ -1,43 +1,95 @@
-/** Ranks the assessed buildings and writes rank, chance, band and tie group into their result columns. */
-import { rankAll, relativePriority, roundedMedian } from '../engineering/priority/rank.js';
-import type { Ranking } from '../engineering/priority/rank.js';
+/** Ranks the assessed buildings: rank, chance, band and tie group as columns over the whole inventory. */
+import { fallingOrder, rankAll, rankBasis, relativePriority, tieGroups } from '../engineering/priority/rank.js';
+import type { Bands, Ranking } from '../engineering/priority/rank.js';
+import { NULL_CODE } from '../store/codes.js';
+import { RANKED_COLUMNS, RESULT_WORDS } from '../store/schema.js';
+import { NULL_I32 } from '../store/vectors.js';
 import type { Assessed } from './assess-all.js';
+import type { Assessor } from './assess-threads.js';
+import type { RankedColumns } from './keep-results.js';
 
 export interface Ranked {
   readonly ranking: Ranking;
   /** Median ln S of the portfolio: priority 1. */
   readonly medianOfPortfolio: number;
+  readonly columns: RankedColumns;
 }
 
-/** Fills the ranking columns of `assessed.results`. */
-export function rankInto(assessed: Assessed, listSize: number, seed: number): Ranked {
-  const { results, index, id, mixtures, median, people, demand } = assessed;
-  const ranking = rankAll({ id, mixtures, median, people }, listSize, seed);
+const IN_LIST = RESULT_WORDS['in_list']!;
+
+/** Ranks an inventory of `count` buildings; `assessor` works out the chances and bands, in its threads if it has any. */
+export async function rankInventory(
+  assessed: Assessed,
+  count: number,
+  listSize: number,
+  seed: number,
+  assessor: Assessor,
+): Promise<Ranked> {
+  const { index, id, mixtures, median, people, demand } = assessed;
+  const input = { id, mixtures, median, people };
+  const basis = rankBasis(input, listSize);
+  const { curve, threshold } = basis;
+  const parts = Promise.all(assessed.flat.map((flat) => assessor.bands(flat, { curve, threshold })));
+  // meanwhile, in this thread
+  const groups = tieGroups(basis.order, mixtures);
+  const ranking = rankAll(input, listSize, seed, basis, groups, joined(await parts, id.length));
   const n = id.length;
-  const { wholes, numbers, texts } = results;
+  const columns = emptyColumns(count);
+  const { numbers, wholes, words } = columns;
   const medianOfPortfolio = n === 0 ? 0 : median[ranking.order[Math.floor((n - 1) / 2)]!]!;
-  for (let i = 0; i < n; i += 1) {
-    const at = index[i]!;
-    wholes['rank']![at] = ranking.rank[i]!;
-    wholes['rank_best']![at] = ranking.rankBest[i]!;
-    wholes['rank_worst']![at] = ranking.rankWorst[i]!;
-    wholes['tie_group']![at] = ranking.tieGroup[i]!;
-    numbers['chance']![at] = ranking.chance[i]!;
-    numbers['priority']![at] = relativePriority(median[i]!, medianOfPortfolio);
-    texts['in_list']![at] = ranking.rank[i]! <= listSize ? 'yes' : 'no';
-  }
+  const [inside, outside] = [IN_LIST.indexOf('yes'), IN_LIST.indexOf('no')];
+  const put = <A extends Float64Array | Int32Array | Uint8Array>(out: A | undefined, value: (i: number) => number) => {
+    for (let i = 0; i < n; i += 1) out![index[i]!] = value(i);
+  };
+  put(wholes['rank'], (i) => ranking.rank[i]!);
+  put(wholes['rank_best'], (i) => ranking.rankBest[i]!);
+  put(wholes['rank_worst'], (i) => ranking.rankWorst[i]!);
+  put(wholes['tie_group'], (i) => ranking.tieGroup[i]!);
+  put(numbers['chance'], (i) => ranking.chance[i]!);
+  put(numbers['priority'], (i) => relativePriority(median[i]!, medianOfPortfolio));
+  put(words['in_list'], (i) => (ranking.rank[i]! <= listSize ? inside : outside));
   // equal demands share their places: on a plateau there is no order by demand
-  const key = Float64Array.from(demand, roundedMedian);
-  const byDemand = Int32Array.from(id.keys()).sort((a, b) => key[b]! - key[a]!);
+  const { order: byDemand, steps } = fallingOrder(demand);
+  const firstPlace = wholes['demand_rank']!;
+  const lastPlace = wholes['demand_rank_last']!;
   for (let from = 0; from < n;) {
     let to = from + 1;
-    while (to < n && key[byDemand[to]!] === key[byDemand[from]!]) to += 1;
+    while (to < n && steps[byDemand[to]!] === steps[byDemand[from]!]) to += 1;
     for (let place = from; place < to; place += 1) {
       const at = index[byDemand[place]!]!;
-      wholes['demand_rank']![at] = from + 1;
-      wholes['demand_rank_last']![at] = to;
+      firstPlace[at] = from + 1;
+      lastPlace[at] = to;
     }
     from = to;
   }
-  return { ranking, medianOfPortfolio };
+  return { ranking, medianOfPortfolio, columns };
+}
+
+/** The bands of all buildings from those of one set after the other. */
+function joined(parts: readonly Bands[], n: number): Bands {
+  const all = {
+    above: new Float64Array(n),
+    tied: new Float64Array(n),
+    rankBest: new Int32Array(n),
+    rankWorst: new Int32Array(n),
+  };
+  let at = 0;
+  for (const { above, tied, rankBest, rankWorst } of parts) {
+    all.above.set(above, at);
+    all.tied.set(tied, at);
+    all.rankBest.set(rankBest, at);
+    all.rankWorst.set(rankWorst, at);
+    at += above.length;
+  }
+  return all;
+}
+
+function emptyColumns(count: number): RankedColumns {
+  const of = <A>(kind: string, make: () => A): Readonly<Record<string, A>> =>
+    Object.fromEntries(RANKED_COLUMNS.filter((column) => column.kind === kind).map(({ name }) => [name, make()]));
+  return {
+    numbers: of('number', () => new Float64Array(count).fill(NaN)),
+    wholes: of('whole', () => new Int32Array(count).fill(NULL_I32)),
+    words: of('text', () => new Uint8Array(count).fill(NULL_CODE)),
+  };
 }

@@ -1,21 +1,22 @@
 /** The main job: intake, assess, rank, keep; one transaction. */
 import { join } from 'node:path';
-import { compileContext } from '../engineering/assess/context.js';
-import { RESULT_COLUMNS } from '../engineering/results.js';
+import type { AssessSettings } from '../engineering/assess/settings.js';
 import { UserError } from '../errors.js';
 import { takeIn } from '../inventory/take-in.js';
 import type { TakenIn } from '../inventory/take-in.js';
 import { openDatabase } from '../store/database.js';
 import type { Database } from '../store/database.js';
-import { RESULT_WORDS, prepareSchema } from '../store/schema.js';
-import { enumerate } from '../store/vectors.js';
+import { prepareSchema } from '../store/schema.js';
 import { studyFingerprint } from '../study/fingerprint.js';
 import type { LoadedStudy } from '../study/load.js';
 import { assessAll } from './assess-all.js';
 import type { Assessed } from './assess-all.js';
+import { startAssessor, threadsFor } from './assess-threads.js';
 import { assumptionsOf } from './assumptions.js';
 import { methodsFingerprint } from './fingerprints.js';
-import { rankInto } from './rank-all.js';
+import { keepRanked } from './keep-results.js';
+import { rankInventory } from './rank-all.js';
+import type { Ranked } from './rank-all.js';
 import { readPools } from './read-buildings.js';
 import { settingsOf } from './settings.js';
 import { withSlopes } from './slopes.js';
@@ -68,29 +69,23 @@ export async function screen(db: Database, loaded: LoadedStudy, options: ScreenO
   const report = (step: string, share = NaN): void => options.onProgress?.({ step, share });
   const { study } = loaded;
   const first = await settingsOf(loaded);
-  return db.transaction(async () => {
-    const taken = await takeIn(db, study, loaded.folder, (step) => {
-      report(step);
-    });
-    const count = taken.buildings;
-    const pools = await readPools(db, taken.inventoryId);
-    report('hazard slope');
-    const { settings, slopes } = await withSlopes(
-      first,
-      study.ranking.k === 'from-levels',
+  return db.lateTransaction(async (begin) => {
+    const taken = await takeIn(
       db,
-      taken.inventoryId,
-      pools,
-      count,
+      study,
+      loaded.folder,
+      (step) => {
+        report(step);
+      },
+      begin,
     );
-    const assessed = await assessAll(db, taken.inventoryId, pools, count, compileContext(settings), (done) => {
-      report('assessing', done / count);
-    });
-    report('ranking');
+    await begin();
+    const count = taken.buildings;
+    const runId = Number((await db.value('SELECT coalesce(max(run_id), 0) + 1 FROM run')) ?? 1);
     const listSize = study.ranking.list_size;
-    const ranked = rankInto(assessed, listSize, study.seed);
-    if (assessed.id.length === 0) throw nothingRanked(assessed, count);
+    const { settings, slopes, assessed, ranked } = await assessInventory(db, loaded, first, taken, runId, report);
     assessed.mixtures.length = 0;
+    assessed.flat.length = 0;
     report('keeping');
     const account = { ...taken.account, ...(await rankedRows(db, taken.inventoryId, count, assessed)) };
     const summary: StoredSummary = {
@@ -102,7 +97,6 @@ export async function screen(db: Database, loaded: LoadedStudy, options: ScreenO
       assumptions: assumptionsOf(settings, slopes),
       slopes,
     };
-    const runId = Number((await db.value('SELECT coalesce(max(run_id), 0) + 1 FROM run')) ?? 1);
     await db.run('INSERT INTO run VALUES (?, ?, ?, ?, ?, ?, ?, ?, ?, ?, ?, ?, ?, ?, ?, ?)', [
       runId,
       options.made.toISOString(),
@@ -121,9 +115,41 @@ export async function screen(db: Database, loaded: LoadedStudy, options: ScreenO
       study.ranking.rank_by,
       study.seed,
     ]);
-    await appendResults(db, runId, count, assessed);
+    await keepRanked(db, runId, count, ranked.columns);
     return { runId, taken, summary };
   });
+}
+
+/** Slopes, results and ranks of all buildings, in as many threads as pay. @throws UserError when none can be ranked. */
+async function assessInventory(
+  db: Database,
+  { study }: LoadedStudy,
+  first: AssessSettings,
+  { inventoryId, buildings: count }: TakenIn,
+  runId: number,
+  report: (step: string, share?: number) => void,
+): Promise<Awaited<ReturnType<typeof withSlopes>> & { readonly assessed: Assessed; readonly ranked: Ranked }> {
+  // the threads start while the slopes are found
+  const assessor = startAssessor(threadsFor(count));
+  try {
+    const pools = await readPools(db, inventoryId);
+    report('hazard slope');
+    const found = await withSlopes(first, study.ranking.k === 'from-levels', db, inventoryId, pools, count);
+    assessor.begin(found.settings, pools);
+    report('assessing', 0);
+    const assessed = await assessAll(db, inventoryId, runId, count, assessor, (done) => {
+      report('assessing', done / count);
+    });
+    if (assessed.id.length === 0) throw nothingRanked(assessed, count);
+    report('ranking');
+    return {
+      ...found,
+      assessed,
+      ranked: await rankInventory(assessed, count, study.ranking.list_size, study.seed, assessor),
+    };
+  } finally {
+    await assessor.close();
+  }
 }
 
 /** What to do about a reason that keeps buildings out of the ranking. */
@@ -132,15 +158,14 @@ const REMEDIES: readonly (readonly [RegExp, string])[] = [
   [/height/, 'map a column of heights or of storeys'],
   [/people/, 'map a column of people or of floor areas, or rank by ratio or by demand'],
   [/spectrum/, 'name a spectrum for them in the study'],
-  [/^every method/, 'leave a method for the period switched on'],
+  [
+    /^no method gives a period/,
+    'leave a formula switched on that needs the height alone, or give what the formulas need',
+  ],
   [/already assessed|demolished/, 'check the column of the status and the words it is read by'],
 ];
 
-function nothingRanked({ results }: Assessed, count: number): UserError {
-  const counts = new Map<string, number>();
-  for (const reason of results.texts['not_ranked']!) {
-    if (reason !== null) counts.set(reason, (counts.get(reason) ?? 0) + 1);
-  }
+function nothingRanked({ reasons: counts }: Assessed, count: number): UserError {
   const [reason, times] = [...counts].sort((a, b) => b[1] - a[1])[0] ?? ['the inventory holds none', 0];
   const remedy = REMEDIES.find(([pattern]) => pattern.test(reason))?.[1] ?? '`swaymark check` says what is missing';
   const of = count === 1 ? 'the only building cannot' : `none of ${String(count)} buildings can`;
@@ -170,17 +195,4 @@ async function rankedRows(
     else not += merged.rows[i]! - 1;
   });
   return { 'merged-into-ranked': ranked, 'merged-into-not-ranked': not };
-}
-
-async function appendResults(db: Database, runId: number, count: number, { results }: Assessed): Promise<void> {
-  await db.append('result', [
-    new Int32Array(count).fill(runId),
-    Int32Array.from({ length: count }, (_, i) => i),
-    ...RESULT_COLUMNS.map(({ name, kind }) => {
-      if (kind === 'number') return results.numbers[name]!;
-      if (kind === 'whole') return results.wholes[name]!;
-      const words = RESULT_WORDS[name];
-      return words === undefined ? results.texts[name]! : enumerate(words, results.texts[name]!);
-    }),
-  ]);
 }

@@ -2,8 +2,9 @@
 import { resolve } from 'node:path';
 import { SPREADS } from '../engineering/assess/settings.js';
 import type { AssessSettings, LevelSettings } from '../engineering/assess/settings.js';
-import { METHODS } from '../engineering/methods.js';
-import { UserError } from '../errors.js';
+import { findMethod } from '../engineering/methods.js';
+import { STIFFNESS_ROUTES } from '../engineering/stiffness/routes.js';
+import { UserError, showValue } from '../errors.js';
 import { loadPrior } from '../study/prior.js';
 import type { LoadedStudy } from '../study/load.js';
 import type { Level } from '../study/schema.js';
@@ -23,20 +24,33 @@ function levelOf(level: Level): LevelSettings {
 export async function settingsOf(loaded: LoadedStudy): Promise<AssessSettings> {
   const { study, folder } = loaded;
   study.period.switched_off.forEach((id, i) => {
-    if (!METHODS.some((method) => method.id === id)) {
+    if (findMethod(id) === undefined && !STIFFNESS_ROUTES.some((route) => route.id === id)) {
       throw new UserError(
-        `unknown method "${id}"; swaymark methods lists them`,
+        `unknown method ${showValue(id)}; swaymark methods lists them, and the stiffness routes are ${STIFFNESS_ROUTES.map((route) => route.id).join(', ')}`,
         loaded.placeOf(['period', 'switched_off', i]),
       );
     }
   });
+  for (const [system, id] of Object.entries(study.period.formula_for)) {
+    if (findMethod(id)?.basis === undefined) {
+      throw new UserError(
+        `${showValue(id)} is not a period formula; \`swaymark methods period\` lists them`,
+        loaded.placeOf(['period', 'formula_for', system]),
+      );
+    }
+  }
   const prior = study.system_prior === undefined ? null : await loadPrior(resolve(folder, study.system_prior));
   const { place, seismic_design_enforced_from, adoption_lag_years, editions, detailing_from } = study.code_history;
   return {
     spectra: study.hazard.spectra,
     levels: study.hazard.levels.map(levelOf),
     holdPlateau: study.hazard.hold_plateau,
-    period: { standard: study.period.standard, basis: study.period.basis, switchedOff: study.period.switched_off },
+    period: {
+      standard: study.period.standard,
+      basis: study.period.basis,
+      formulaFor: study.period.formula_for,
+      switchedOff: study.period.switched_off,
+    },
     codeHistory: {
       place,
       seismic_design_enforced_from,

@@ -47,7 +47,7 @@ export async function withSlopes(
   const gathered = new Map<string, { readonly partner: string; readonly counts: Map<number, number> }>();
   const every = Math.ceil(count / ENOUGH);
   for (const range of indexRanges(count, 65_536 * every)) {
-    const { columns, rows } = await readBuildings(db, inventoryId, range, every);
+    const { columns, rows } = await readBuildings(db, inventoryId, range, { every, ids: false });
     const read = buildingReader(columns, pools);
     for (let i = 0; i < rows; i += 1) {
       const building = read(i);

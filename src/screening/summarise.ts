@@ -75,7 +75,7 @@ export function rankingFigures(
   let weakOut = 0;
   ranking.order.forEach((building, place) => {
     if (place < places && ranking.chance[building]! >= SURE) sure += 1;
-    if (!(assessed.results.numbers['weak_chance']![assessed.index[building]!]! >= LIKELY_WEAK)) return;
+    if (!(assessed.weakChance[building]! >= LIKELY_WEAK)) return;
     if (place < places) weakIn += 1;
     else weakOut += 1;
   });

@@ -50,9 +50,14 @@ export async function openDatabase(options: OpenOptions): Promise<Database> {
   const readOnly = options.readOnly ?? false;
   if (options.path === ':memory:') {
     const instance = await start(options.path, readOnly, options.folders ?? []);
-    return new Database(await instance.connect(), undefined, () => {
-      instance.closeSync();
-    });
+    return new Database(
+      await instance.connect(),
+      undefined,
+      () => instance.connect(),
+      () => {
+        instance.closeSync();
+      },
+    );
   }
   const path = resolve(options.path);
   let shared = OPEN.get(path);
@@ -64,12 +69,17 @@ export async function openDatabase(options: OpenOptions): Promise<Database> {
   }
   const held = shared;
   held.users += 1;
-  return new Database(await held.instance.connect(), path, () => {
-    held.users -= 1;
-    if (held.users > 0) return;
-    OPEN.delete(path);
-    held.instance.closeSync();
-  });
+  return new Database(
+    await held.instance.connect(),
+    path,
+    () => held.instance.connect(),
+    () => {
+      held.users -= 1;
+      if (held.users > 0) return;
+      OPEN.delete(path);
+      held.instance.closeSync();
+    },
+  );
 }
 
 async function start(path: string, readOnly: boolean, folders: readonly string[]): Promise<DuckDBInstance> {
@@ -104,12 +114,20 @@ async function start(path: string, readOnly: boolean, folders: readonly string[]
 export class Database {
   readonly file: string | undefined;
   readonly #connection: DuckDBConnection;
+  readonly #connect: () => Promise<DuckDBConnection>;
   readonly #release: () => void;
+  readonly #beside = new Set<Database>();
   #closed = false;
   #inTransaction = false;
 
-  constructor(connection: DuckDBConnection, file: string | undefined, release: () => void) {
+  constructor(
+    connection: DuckDBConnection,
+    file: string | undefined,
+    connect: () => Promise<DuckDBConnection>,
+    release: () => void,
+  ) {
     this.#connection = connection;
+    this.#connect = connect;
     this.file = file;
     this.#release = release;
   }
@@ -202,25 +220,57 @@ export class Database {
 
   /** Runs `work` in one transaction: committed when it returns, rolled back when it throws. Calls do not nest. */
   async transaction<T>(work: () => Promise<T>): Promise<T> {
+    return this.lateTransaction(async (begin) => {
+      await begin();
+      return work();
+    });
+  }
+
+  /**
+   * The same, but the transaction begins when `work` calls `begin` (once or more often), before the first statement that writes
+   * anything but temporary tables. What a transaction has written itself is read by one thread alone: work tables that stand
+   * before it are read by all.
+   */
+  async lateTransaction<T>(work: (begin: () => Promise<void>) => Promise<T>): Promise<T> {
     if (this.#inTransaction) throw new Bug('a transaction inside a transaction');
-    await this.run('BEGIN TRANSACTION');
     this.#inTransaction = true;
+    let begun = false;
     try {
-      const result = await work();
-      await this.run('COMMIT');
+      const result = await work(async () => {
+        if (begun) return;
+        begun = true;
+        await this.run('BEGIN TRANSACTION');
+      });
+      if (begun) await this.run('COMMIT');
       return result;
     } catch (error) {
       // After an error COMMIT would succeed and keep nothing; the rollback's own failure must not hide the cause.
-      await this.#connection.run('ROLLBACK').catch(() => undefined);
+      if (begun) await this.#connection.run('ROLLBACK').catch(() => undefined);
       throw error;
     } finally {
       this.#inTransaction = false;
     }
   }
 
+  /**
+   * Runs `work` on a connection of its own to the same database, so that its statements run beside those of this one. It sees what
+   * is committed, and no temporary tables.
+   */
+  async beside<T>(work: (db: Database) => Promise<T>): Promise<T> {
+    const other = new Database(await this.#connect(), this.file, this.#connect, () => undefined);
+    this.#beside.add(other);
+    try {
+      return await work(other);
+    } finally {
+      this.#beside.delete(other);
+      other.close();
+    }
+  }
+
   /** Stops the running statement, which then throws Interrupted; the connection stays usable. */
   interrupt(): void {
     this.#connection.interrupt();
+    for (const other of this.#beside) other.interrupt();
   }
 
   close(): void {
@@ -242,5 +292,5 @@ export class Database {
 
 function makeArray(kind: ColumnKind, rows: number): Float64Array | Int32Array | (string | null)[] {
   if (kind === 'f64') return new Float64Array(rows);
-  return kind === 'i32' ? new Int32Array(rows) : new Array<string | null>(rows).fill(null);
+  return kind === 'i32' ? new Int32Array(rows) : new Array<string | null>(rows);
 }

@@ -4,6 +4,7 @@ import { ORIGINS, SYSTEMS } from '../engineering/building.js';
 import { COLUMNS } from '../engineering/columns.js';
 import type { InventoryColumn } from '../engineering/columns.js';
 import { RESULT_COLUMNS } from '../engineering/results.js';
+import type { ResultColumn } from '../engineering/results.js';
 import { UserError } from '../errors.js';
 import type { Database } from './database.js';
 import { quoteName, quoteText } from './sql.js';
@@ -100,20 +101,39 @@ export const RESULT_WORDS: Readonly<Record<string, readonly string[]>> = {
   in_list: ['yes', 'no'],
   governing: ['longitudinal', 'transverse'],
   period_evidence: ['measured', 'formula', 'stiffness', 'formula and stiffness'],
+  period_basis: ['best-fit', 'design', 'ambient', 'measured', 'mechanics'],
   case_system: SYSTEMS,
   case_edition: ['no seismic design', ...Object.keys(EDITION_YEARS)],
   weak_type: WEAK_TYPES.map(({ name }) => name),
 };
+
+const RANKED = new Set(
+  'rank in_list chance rank_best rank_worst tie_group priority demand_rank demand_rank_last'.split(' '),
+);
+/** What the ranking says of a building, known when all are assessed; in `result_ranked`. */
+export const RANKED_COLUMNS = RESULT_COLUMNS.filter(({ name }) => RANKED.has(name));
+/** What is known of it alone, kept while the others are assessed; in `result_assessed`. The view `result` has both. */
+export const ASSESSED_COLUMNS = RESULT_COLUMNS.filter(({ name }) => !RANKED.has(name));
+
+function resultDefinition(columns: readonly ResultColumn[]): string {
+  const typed = columns.map(
+    ({ name, kind }) =>
+      `${quoteName(name)} ${RESULT_WORDS[name] === undefined ? RESULT_TYPES[kind] : enumType(RESULT_WORDS[name])}`,
+  );
+  return `run_id INTEGER NOT NULL, building_index INTEGER NOT NULL, ${typed.join(', ')}`;
+}
 
 const RUN_TABLES: readonly string[] = [
   `CREATE TABLE run (run_id INTEGER PRIMARY KEY, made VARCHAR NOT NULL, program VARCHAR NOT NULL, note VARCHAR NOT NULL,
      title VARCHAR NOT NULL, inventory_id VARCHAR NOT NULL, study_fingerprint VARCHAR NOT NULL, methods_fingerprint VARCHAR NOT NULL,
      settings VARCHAR NOT NULL, study_text VARCHAR NOT NULL, summary VARCHAR NOT NULL, buildings INTEGER NOT NULL,
      ranked INTEGER NOT NULL, list_size INTEGER NOT NULL, rank_by VARCHAR NOT NULL, seed BIGINT NOT NULL)`,
-  `CREATE TABLE result (run_id INTEGER NOT NULL, building_index INTEGER NOT NULL, ${RESULT_COLUMNS.map(
-    ({ name, kind }) =>
-      `${quoteName(name)} ${RESULT_WORDS[name] === undefined ? RESULT_TYPES[kind] : enumType(RESULT_WORDS[name])}`,
-  ).join(', ')})`,
+  `CREATE TABLE result_assessed (${resultDefinition(ASSESSED_COLUMNS)})`,
+  `CREATE TABLE result_ranked (${resultDefinition(RANKED_COLUMNS)})`,
+  `CREATE VIEW result AS SELECT a.run_id, a.building_index, ${RESULT_COLUMNS.map(
+    (column) => `${RANKED_COLUMNS.includes(column) ? 'k' : 'a'}.${quoteName(column.name)}`,
+  ).join(', ')}
+     FROM result_assessed a JOIN result_ranked k ON k.run_id = a.run_id AND k.building_index = a.building_index`,
 ];
 
 /** Every step from an empty database to today's tables, in order; a step once released is never edited. */

@@ -7,6 +7,7 @@ import type { DataChunk, Vector } from '@duckdb/node-bindings';
 import { DuckDBTypeId } from '@duckdb/node-api';
 import type { DuckDBDataChunk } from '@duckdb/node-api';
 import { Bug } from '../errors.js';
+import { NULL_CODE } from './codes.js';
 
 /** f64: Float64Array, NULL is NaN; i32: Int32Array, NULL is -1; text: strings, NULL is null. */
 export type ColumnKind = 'f64' | 'i32' | 'text';
@@ -22,7 +23,7 @@ export interface ColumnArrays {
 
 export type ColumnsOf<S extends Readonly<Record<string, ColumnKind>>> = { readonly [K in keyof S]: ColumnArrays[S[K]] };
 
-/** A column of enumerated words by code, a byte each; made by `enumerate`. */
+/** A column of enumerated words by code, a byte each, NULL_CODE for NULL. */
 export interface EnumCodes {
   readonly words: readonly string[];
   readonly codes: Uint8Array;
@@ -123,7 +124,13 @@ export function readNumbers(
   }
   const valid = validityOf(chunk.chunk, column, rows);
   if (valid === null) return;
-  for (let i = 0; i < rows; i += 1) if (((valid[i >> 3]! >> (i & 7)) & 1) === 0) out[offset + i] = missing;
+  for (let byte = 0; 8 * byte < rows; byte += 1) {
+    // eight values at a time: most are there
+    const bits = valid[byte]!;
+    if (bits === 0xff) continue;
+    const end = Math.min(rows, 8 * byte + 8);
+    for (let i = 8 * byte; i < end; i += 1) if (((bits >> (i & 7)) & 1) === 0) out[offset + i] = missing;
+  }
 }
 
 const INLINE_BYTES = 12;
@@ -173,23 +180,6 @@ export function writeColumn(chunk: DuckDBDataChunk, column: number, values: Writ
   } else {
     writeTexts(vector, values, from, rows);
   }
-}
-
-// A list of 255 words has codes up to 254.
-const NULL_CODE = 255;
-
-/** `texts` as codes in the list `words` of an enumeration. @throws Bug for a text that is not in the list. */
-export function enumerate(words: readonly string[], texts: readonly (string | null)[]): EnumCodes {
-  if (words.length > 0xff) throw new Bug(`an enumeration of ${words.length} words does not fit in bytes`);
-  const codeOf = new Map<string | null, number>(words.map((word, code) => [word, code]));
-  codeOf.set(null, NULL_CODE);
-  const codes = new Uint8Array(texts.length);
-  for (let i = 0; i < codes.length; i += 1) {
-    const code = codeOf.get(texts[i]!);
-    if (code === undefined) throw new Bug(`${String(texts[i])} is none of the words ${words.join(', ')}`);
-    codes[i] = code;
-  }
-  return { words, codes, length: codes.length };
 }
 
 function writeTexts(vector: Vector, values: readonly (string | null)[], from: number, rows: number): void {

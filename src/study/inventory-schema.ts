@@ -1,6 +1,6 @@
 /** `inventory`, `neighbours` and `words`: where the table is, how it is written, what its columns and words mean. */
 import { z } from 'zod';
-import { AMPLITUDES, DESIGN_LEVELS, STATUSES, SYSTEMS, USES } from '../engineering/building.js';
+import { AMPLITUDES, BASE_FIXITIES, DESIGN_LEVELS, STATUSES, SYSTEMS, USES } from '../engineering/building.js';
 import { COLUMNS } from '../engineering/columns.js';
 import type { InventoryColumn } from '../engineering/columns.js';
 import { findUnit, unitsOf } from '../engineering/units.js';
@@ -107,4 +107,5 @@ export const WordsSchema = strict({
   yes_no: dictionary('yes and no', ['yes', 'no']),
   amplitude: dictionary('the amplitude of a measurement', AMPLITUDES),
   design_level: dictionary('the level of a design coefficient', DESIGN_LEVELS),
+  base_fixity: dictionary('the base of the columns', BASE_FIXITIES),
 });

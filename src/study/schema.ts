@@ -1,5 +1,8 @@
 /** The study file: one schema gives the type, the validation and the JSON Schema for editors. */
 import { z } from 'zod';
+import { SYSTEMS } from '../engineering/building.js';
+import type { System } from '../engineering/building.js';
+import { BASES, PERIOD_STANDARDS } from '../engineering/period/choose.js';
 import { CodeHistorySchema } from './code-editions.js';
 import { expected, list, mapping, strict, text, whole, word } from './fields.js';
 import { InventorySchema, NeighboursSchema, WordsSchema } from './inventory-schema.js';
@@ -43,14 +46,28 @@ const HazardSchema = strict({
     .describe('true: below the plateau the ranking holds its value; false: the ramp is used.'),
 });
 
+const formulaFor = Object.fromEntries(
+  SYSTEMS.map((system) => [
+    system,
+    text('the id of a period formula').exactOptional().describe(`Id of the period formula tried first for ${system}.`),
+  ]),
+) as Readonly<Record<System, z.ZodExactOptional<z.ZodString>>>;
+
 const PeriodSchema = strict({
-  standard: word(['asce7-22', 'asce41-17', 'en1998-1-2004'])
-    .default('asce41-17')
-    .describe('Whose height formulas are used.'),
-  basis: word(['best-fit', 'design']).default('best-fit').describe('Best estimate, or the short side used for design.'),
+  standard: word(PERIOD_STANDARDS).default('asce41-17').describe('Whose period formulas are used.'),
+  basis: word(BASES)
+    .default('best-fit')
+    .describe(
+      'Best estimate, or the short side used for design. ASCE 7 has no best-fit set: ASCE 41-17 is read; the other standards have one set each.',
+    ),
+  formula_for: strict(formulaFor)
+    .prefault({})
+    .describe(
+      'Lateral systems, each with the id of a formula tried before those of the standard: a regression, or another standard.',
+    ),
   switched_off: list(text('the id of a method'), 'a list of method ids')
     .default([])
-    .describe('Ids of methods not to be used.'),
+    .describe('Ids of period formulas and stiffness routes not to be used.'),
 });
 
 const slope = expected('from-levels or a number 1 to 5');

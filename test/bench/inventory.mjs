@@ -23,22 +23,32 @@ function numbers(seed) {
   };
 }
 
+/** Ten storey stiffnesses, kN/m, falling towards the roof. */
+function chain(random) {
+  const first = 200000 + random() * 300000;
+  return Array.from({ length: 10 }, (_, s) => Math.round(first * (1 - 0.05 * s))).join(';');
+}
+
 /** Writes `rows` buildings: a fifth with the system unknown, a quarter without a height, a tenth without a year. */
-export async function writeInventory(path, rows, seed = 20260611) {
+export async function writeInventory(path, rows, { seed = 20260611, chains = false } = {}) {
   const random = numbers(seed);
   const pick = (list) => list[Math.floor(random() * list.length)];
   const out = createWriteStream(path);
-  out.write('id,name,block,lon,lat,storeys,height_m,length_m,width_m,area_m2,year,system,use,site,occupants\n');
+  out.write(
+    `id,name,block,lon,lat,storeys,height_m,length_m,width_m,area_m2,year,system,use,site,occupants${chains ? ',k_along,k_across' : ''}\n`,
+  );
   let text = '';
   for (let i = 0; i < rows; i += 1) {
-    const storeys = 1 + Math.floor(random() * random() * 14);
+    // every second building is of ten storeys where chains are asked for
+    const tall = chains && i % 2 === 0;
+    const storeys = tall ? 10 : 1 + Math.floor(random() * random() * 14);
     const height = (storeys * (2.9 + random() * 1.2)).toFixed(1);
     const length = (10 + random() * 50).toFixed(1);
     const width = (8 + random() * 18).toFixed(1);
     const area = Math.round(storeys * Number(length) * Number(width));
     const system = random() < 0.2 ? '' : pick(SYSTEMS);
     const year = random() < 0.1 ? '' : 1890 + Math.floor(random() * 133);
-    text += `B${String(i).padStart(7, '0')},Building ${i},block ${Math.floor(random() * 400)},${(-40 + random() * 0.3).toFixed(6)},${(35 + random() * 0.3).toFixed(6)},${storeys},${random() < 0.25 ? '' : height},${length},${width},${area},${year},${system},${pick(USES)},${pick(['B', 'C', 'D'])},${random() < 0.3 ? Math.round(area * 0.03) : ''}\n`;
+    text += `B${String(i).padStart(7, '0')},Building ${i},block ${Math.floor(random() * 400)},${(-40 + random() * 0.3).toFixed(6)},${(35 + random() * 0.3).toFixed(6)},${storeys},${random() < 0.25 ? '' : height},${length},${width},${area},${year},${system},${pick(USES)},${pick(['B', 'C', 'D'])},${random() < 0.3 ? Math.round(area * 0.03) : ''}${chains ? `,${tall ? chain(random) : ''},${tall ? chain(random) : ''}` : ''}\n`;
     if (text.length > 1 << 20) {
       if (!out.write(text)) await once(out, 'drain');
       text = '';

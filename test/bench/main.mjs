@@ -21,7 +21,7 @@ function child(script, folder) {
   return JSON.parse(stdout.trim().split('\n').at(-1));
 }
 
-console.log('rows        floor s  screening s  ratio  floor MB  screening MB');
+console.log('rows        floor s  screening s  ratio  CPU s  floor MB  screening MB  threads');
 for (const rows of sizes.length > 0 ? sizes : [10_000, 100_000, 1_000_000]) {
   const folder = mkdtempSync(join(tmpdir(), 'swaymark-bench-'));
   try {
@@ -32,7 +32,7 @@ for (const rows of sizes.length > 0 ? sizes : [10_000, 100_000, 1_000_000]) {
     const screening = child('screening.mjs', folder);
     const ratio = screening.seconds / floor.seconds;
     console.log(
-      `${String(rows).padEnd(10)}  ${floor.seconds.toFixed(2).padStart(7)}  ${screening.seconds.toFixed(2).padStart(11)}  ${ratio.toFixed(2).padStart(5)}  ${floor.peakMB.toFixed(0).padStart(8)}  ${screening.peakMB.toFixed(0).padStart(12)}`,
+      `${String(rows).padEnd(10)}  ${floor.seconds.toFixed(2).padStart(7)}  ${screening.seconds.toFixed(2).padStart(11)}  ${ratio.toFixed(2).padStart(5)}  ${screening.cpuSeconds.toFixed(1).padStart(5)}  ${floor.peakMB.toFixed(0).padStart(8)}  ${screening.peakMB.toFixed(0).padStart(12)}  ${String(screening.threads).padStart(7)}`,
     );
     console.log(
       `            ${screening.steps.map(({ step, seconds }) => `${step} ${seconds.toFixed(2)}`).join(', ')}`,

@@ -282,6 +282,15 @@ describe('swaymark methods', () => {
       expect(entry).toMatchObject({ clause: expect.any(String) as string, verified: expect.any(String) as string });
   });
 
+  it('lists the records that hold every word, and says of how many', () => {
+    const told = json(['methods', 'EN1998', 'period', '--json']) as { id: string }[];
+    expect(told.length).toBeGreaterThan(2);
+    for (const { id } of told) expect(id).toMatch(/en1998.*period/);
+    expect(swaymark(['methods', 'en1998', 'period']).out).toContain(
+      `${String(told.length)} methods of ${String(METHODS.length)}`,
+    );
+  });
+
   it('shows one in full', () => {
     const { out } = swaymark(['methods', 'asce7-22/period/other']);
     expect(out).toContain('period_s = coefficient × (height_m / unit_m)^exponent');

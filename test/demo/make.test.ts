@@ -21,6 +21,22 @@ describe('data-demo/make.mjs', () => {
     expect(readFileSync(join(folder, file)).equals(readFileSync(join(demo, file)))).toBe(true);
   });
 
+  it('fills the structure columns of the named assets and of no others', async () => {
+    const { showcase, structureHeaders } = (await import(join(demo, 'making/structure.mjs'))) as {
+      showcase: readonly { readonly id: string }[];
+      structureHeaders: readonly string[];
+    };
+    const [header = '', ...lines] = readFileSync(join(folder, 'inventory.csv'), 'utf8').split(/\r?\n/);
+    expect(header.endsWith(`,${structureHeaders.join(',')}`)).toBe(true);
+    // No structure column but the last, the period of the ground, is filled in any other row.
+    const known = lines.filter((line) => {
+      const cells = line.split(',');
+      // The first half of the name with a line break in it is shorter than a row.
+      return cells.length > structureHeaders.length && cells.slice(-structureHeaders.length, -1).join('') !== '';
+    });
+    expect(known.map((line) => line.slice(0, 6)).sort()).toEqual(showcase.map(({ id }) => id).sort());
+  });
+
   it('gives every group of the system prior chances that sum to one', () => {
     const sums = new Map<string, number>();
     const lines = readFileSync(join(folder, 'system-prior.csv'), 'utf8').trim().split('\n').slice(1);

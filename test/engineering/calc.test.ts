@@ -30,6 +30,7 @@ function sensible(method: AnyRecord, name: string): number {
 function assignment(method: AnyRecord, spec: InputSpec): string {
   if (spec.kind === 'word') return `${spec.name}=${spec.words?.[0] ?? 'x'}`;
   if (spec.kind === 'list') return `${spec.name}=0.5,1,2`;
+  if (spec.name === 'mode') return 'mode=1';
   return `${spec.name}=${String(sensible(method, spec.name) * (spec.name.includes('_2') ? 2 : 1))}`;
 }
 
@@ -174,7 +175,8 @@ describe('calculate', () => {
 describe('methodCalled', () => {
   it('names the nearest ids for an unknown one', () => {
     expect(failure(() => methodCalled('asce7-22/period/othr'))).toContain('nearest: asce7-22/period/other');
-    expect(nearestMethods('steel-moment-frame')).toContain('asce7-22/period/steel-moment-frame');
+    expect(nearestMethods('steel-moment-frame').every((id) => id.endsWith('/steel-moment-frame'))).toBe(true);
+    expect(nearestMethods('asce7-22/steel-moment-frame')).toContain('asce7-22/period/steel-moment-frame');
     expect(nearestMethods('zzzz')).toEqual([]);
   });
 });

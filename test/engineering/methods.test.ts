@@ -8,7 +8,9 @@ import { Trace } from '../../src/engineering/trace.js';
 import { findUnit } from '../../src/engineering/units.js';
 import { inputsOf } from '../support/engineering-inputs.js';
 
-const overLists = ({ family }: AnyRecord): boolean => family.inputs.some(({ name }) => name === 'masses_t');
+const overLists = ({ family }: AnyRecord): boolean =>
+  family.inputs.some(({ kind, name }) => kind === 'list' && name !== 'periods_s' && name !== 'ordinates_g');
+const isProcedure = ({ family }: AnyRecord): boolean => family.expression === null && !('compile' in family);
 
 // Contracts of the register: nothing outside the program to hold it against.
 describe('METHODS', () => {
@@ -49,18 +51,21 @@ describe('METHODS', () => {
     }
   });
 
-  it.each(METHODS.filter((method) => !overLists(method)))('show the formula they compute: $id', (method) => {
-    fc.assert(
-      fc.property(inputsOf(method), (inputs) => {
-        const value = applyAny(method, inputs);
-        const shown = evaluateDisplayed({ record: method, inputs });
-        expect(Math.abs(shown! - value), JSON.stringify(inputs)).toBeLessThanOrEqual(
-          1e-12 * Math.max(Math.abs(value), 1e-3),
-        );
-      }),
-      { numRuns: 200, seed: 2 },
-    );
-  });
+  it.each(METHODS.filter((method) => !overLists(method) && !isProcedure(method)))(
+    'show the formula they compute: $id',
+    (method) => {
+      fc.assert(
+        fc.property(inputsOf(method), (inputs) => {
+          const value = applyAny(method, inputs);
+          const shown = evaluateDisplayed({ record: method, inputs });
+          expect(Math.abs(shown! - value), JSON.stringify(inputs)).toBeLessThanOrEqual(
+            1e-12 * Math.max(Math.abs(value), 1e-3),
+          );
+        }),
+        { numRuns: 200, seed: 2 },
+      );
+    },
+  );
 
   it('write each step with its value, clause and mark', () => {
     for (const method of METHODS.filter((one) => !overLists(one))) {

@@ -23,6 +23,11 @@ describe('convert', () => {
     [100, 'psf', 'kN_per_m2', 0.44482216152605 / 0.09290304],
     [1, 't', 'kg', 1000],
     [1, 'MN_per_m', 'N_per_m', 1e6],
+    [1, 'GPa', 'MPa', 1000],
+    [1, 'MPa', 'kN_per_m2', 1000],
+    [1000, 'psi', 'ksi', 1],
+    [1, 'ksi', 'MPa', 4.4482216152605 / 0.0254 ** 2 / 1000],
+    [1, 'm4', 'in4', 1 / 0.0254 ** 4],
   ])('turns %d %s into %s', (value, from, to, expected) => {
     expect(Math.abs(convert(value, unit(from), unit(to)) - expected)).toBeLessThanOrEqual(4e-16 * expected * 2);
   });

@@ -27,6 +27,7 @@ beforeAll(async () => {
   inventoryId = (await screen(db, loaded, { made: new Date(0) })).taken.inventoryId;
   await writeRankingCsv(db, 1, at('si.csv'));
   await writeRankingCsv(db, 1, at('us.csv'), 'us');
+  await writeRankingCsv(db, 1, at('parts.csv'), 'si', 1);
   await writeRankingParquet(db, 1, at('ranking.parquet'));
   await writeRejectsCsv(db, inventoryId, at('rejects.csv'));
 });
@@ -42,6 +43,10 @@ describe('writeRankingCsv', () => {
     expect(bytes.toString('utf8').replaceAll('\r\n', '')).not.toMatch(/[\r\n]/);
     // Five can be ranked; the house of which nothing but its name is legible comes last.
     expect(read('si.csv').map((row) => row['rank'])).toEqual(['1', '2', '3', '4', '5', '']);
+  });
+
+  it('writes the same bytes in two parts', () => {
+    expect(readFileSync(at('parts.csv')).equals(readFileSync(at('si.csv')))).toBe(true);
   });
 
   it('makes cells that begin like a formula harmless and leaves the rest alone', () => {

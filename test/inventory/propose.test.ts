@@ -30,6 +30,35 @@ describe('proposeMapping', () => {
     });
   });
 
+  it('recognises what drawings tell of the structure', () => {
+    expect(
+      mapped([
+        'id',
+        'Floor area (m2)',
+        'Wall areas x (m2)',
+        'Wall lengths y (m)',
+        'Number of columns',
+        'Column size (m)',
+        'Beam depth (m)',
+        'Bay (m)',
+        'Column base',
+        'Top displacement x (m)',
+        'concrete_strength_MPa',
+      ]),
+    ).toMatchObject({
+      floor_area_m2: 'Floor area (m2) in m2',
+      wall_areas_longitudinal_m2: 'Wall areas x (m2) in m2',
+      wall_lengths_transverse_m: 'Wall lengths y (m) in m',
+      column_count: 'Number of columns',
+      column_depth_m: 'Column size (m) in m',
+      beam_depth_m: 'Beam depth (m) in m',
+      bay_length_m: 'Bay (m) in m',
+      base_fixity: 'Column base',
+      top_displacement_longitudinal_m: 'Top displacement x (m) in m',
+      concrete_strength_MPa: 'concrete_strength_MPa in MPa',
+    });
+  });
+
   it('finds feet by the data, as a question', () => {
     const rows = Array.from({ length: 9 }, (_, i) => [`A${i}`, String(1 + i), String((1 + i) * 11)]);
     const proposal = proposeMapping(['id', 'Storeys', 'Height'], rows);

@@ -3,15 +3,31 @@ import { BASE_SHEAR_CASES } from './base-shear-cases.js';
 import { CAPACITY_CASES } from './capacity-cases.js';
 import type { ReferenceCase } from './case.js';
 import { MEASURED_CASES } from './measured-cases.js';
+import { ANSWERED_CODE_CASES } from './period-cases-answers.js';
+import { CODE_PERIOD_CASES } from './period-cases-codes.js';
+import { EDITION_PERIOD_CASES } from './period-cases-editions.js';
+import { PERIOD_LIMIT_CASES } from './period-cases-limits.js';
+import { REGRESSION_PERIOD_CASES } from './period-cases-regressions.js';
+import { US_PERIOD_CASES } from './period-cases-us.js';
+import { WALL_PERIOD_CASES } from './period-cases-walls.js';
 import { PERIOD_CASES } from './period-cases.js';
 import { SPECTRUM_CASES } from './spectrum-cases.js';
 import { STIFFNESS_CASES } from './stiffness-cases.js';
+import { VIBRATION_CASES } from './vibration-cases.js';
 
 export const REFERENCE_CASES: readonly ReferenceCase[] = [
   ...PERIOD_CASES,
+  ...US_PERIOD_CASES,
+  ...ANSWERED_CODE_CASES,
+  ...REGRESSION_PERIOD_CASES,
+  ...EDITION_PERIOD_CASES,
+  ...CODE_PERIOD_CASES,
+  ...WALL_PERIOD_CASES,
+  ...PERIOD_LIMIT_CASES,
   ...MEASURED_CASES,
   ...STIFFNESS_CASES,
   ...SPECTRUM_CASES,
   ...BASE_SHEAR_CASES,
   ...CAPACITY_CASES,
+  ...VIBRATION_CASES,
 ];

@@ -1,6 +1,11 @@
 /** Periods from mass and stiffness, masses, and what a first storey's height does. */
 import { IN_M, LBF_KN, exactly, fromOmega, half } from './case.js';
 import type { ReferenceCase } from './case.js';
+import { CHAIN_CASES } from './stiffness-cases-chains.js';
+import { CONTINUUM_CASES } from './stiffness-cases-continuum.js';
+import { GROUND_CASES } from './stiffness-cases-ground.js';
+import { MATERIAL_CASES } from './stiffness-cases-materials.js';
+import { MEMBER_CASES } from './stiffness-cases-members.js';
 
 /** lbf/in in kN/m, and lbf s²/in in t. */
 const perInch = LBF_KN / IN_M;
@@ -230,4 +235,15 @@ const MASS: readonly ReferenceCase[] = [
   },
 ];
 
-export const STIFFNESS_CASES: readonly ReferenceCase[] = [...SINGLE, ...UNIFORM, ...GENERAL, ...SHARES, ...MASS];
+export const STIFFNESS_CASES: readonly ReferenceCase[] = [
+  ...SINGLE,
+  ...UNIFORM,
+  ...GENERAL,
+  ...SHARES,
+  ...MASS,
+  ...CHAIN_CASES,
+  ...MEMBER_CASES,
+  ...CONTINUUM_CASES,
+  ...MATERIAL_CASES,
+  ...GROUND_CASES,
+];

@@ -149,6 +149,38 @@ describe('Database', () => {
     await expect(db.run('SELECT 1')).rejects.toThrow(/closed/);
   });
 
+  it('begins a late transaction where it is told to, and keeps nothing of it when it fails', async () => {
+    const db = await openDatabase({ path: ':memory:' });
+    await db.run('CREATE TABLE t (a INTEGER)');
+    await expect(
+      db.lateTransaction(async (begin) => {
+        await db.run('CREATE TEMP TABLE work AS SELECT 1 AS a');
+        await begin();
+        await begin();
+        await db.run('INSERT INTO t SELECT a FROM work');
+        throw new Error('too late');
+      }),
+    ).rejects.toThrow('too late');
+    expect(await db.value('SELECT count(*) FROM t')).toBe(0);
+    await db.lateTransaction(() => Promise.resolve());
+    await db.lateTransaction(async (begin) => {
+      await begin();
+      await db.run('INSERT INTO t SELECT a FROM work');
+    });
+    expect(await db.value('SELECT count(*) FROM t')).toBe(1);
+    db.close();
+  });
+
+  it('runs work beside its own on a second connection, which sees what is committed', async () => {
+    const db = await openDatabase({ path: ':memory:' });
+    await db.run('CREATE TABLE t AS SELECT 7 AS a');
+    await db.run('CREATE TEMP TABLE mine AS SELECT 8 AS a');
+    expect(await db.beside((other) => other.value('SELECT a FROM t'))).toBe(7);
+    await expect(db.beside((other) => other.value('SELECT a FROM mine'))).rejects.toThrow(/mine/);
+    expect(await db.value('SELECT a FROM mine')).toBe(8);
+    db.close();
+  });
+
   it('stops a statement and stays usable', async () => {
     const db = await openDatabase({ path: ':memory:' });
     const long = db.value('SELECT sum(a.i * b.i) FROM range(200000) a(i), range(200000) b(i)');

@@ -29,7 +29,7 @@ describe('studyFromText', () => {
     expect(study.inventory.blank).toEqual(['', '-', 'n/a', 'NULL', '?']);
     expect(study.inventory.columns.id).toEqual({ column: 'Asset no.' });
     expect(study.inventory.columns['height_m']).toEqual({ column: 'Height', unit: 'ft' });
-    expect(study.period).toEqual({ standard: 'asce41-17', basis: 'best-fit', switched_off: [] });
+    expect(study.period).toEqual({ standard: 'asce41-17', basis: 'best-fit', formula_for: {}, switched_off: [] });
     expect(study.ranking).toEqual({ rank_by: 'people', list_size: 20, k: 'from-levels' });
     expect(study.code_history.adoption_lag_years).toBe(2);
     expect(study.words.yes_no).toEqual({});

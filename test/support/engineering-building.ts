@@ -1,5 +1,5 @@
 /** An invented building for tests of the engineering: everything not known but what the test states. */
-import type { Building, Filled } from '../../src/engineering/building.js';
+import type { Building, Filled, Structure } from '../../src/engineering/building.js';
 
 /** A given value. */
 export const given = (value: number): Filled => ({ value, sigma: 0, origin: 'given', rule: '' });
@@ -47,7 +47,30 @@ const BLANK: Building = {
   design_base_shear_coefficient: NaN,
   design_level: null,
   capacity_sa_g: NaN,
+  structure: null,
 };
 
 /** The invented building with `fields` changed. */
 export const building = (fields: Partial<Building> = {}): Building => ({ ...BLANK, ...fields });
+
+/** What is known of a structure: nothing but `fields`. */
+export const structure = (fields: Partial<Structure>): Structure => ({
+  column_count: NaN,
+  column_width_m: NaN,
+  column_depth_m: NaN,
+  beam_width_m: NaN,
+  beam_depth_m: NaN,
+  bay_length_m: NaN,
+  base_fixity: null,
+  wall_areas_m2: { longitudinal: null, transverse: null },
+  wall_lengths_m: { longitudinal: null, transverse: null },
+  top_displacement_m: { longitudinal: NaN, transverse: NaN },
+  brace_area_m2: { longitudinal: NaN, transverse: NaN },
+  infill_thickness_m: NaN,
+  infill_length_m: { longitudinal: NaN, transverse: NaN },
+  concrete_strength_MPa: NaN,
+  steel_height_share: NaN,
+  vs30_mps: NaN,
+  site_period_s: NaN,
+  ...fields,
+});

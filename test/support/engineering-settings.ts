@@ -51,7 +51,7 @@ export const SETTINGS: AssessSettings = {
   },
   levels: [{ title: '475 years', by: 'site_class', spectra: { B: 'rock', C: 'firm', D: 'soft' }, otherwise: 'firm' }],
   holdPlateau: true,
-  period: { standard: 'asce7-22', basis: 'best-fit', switchedOff: [] },
+  period: { standard: 'asce7-22', basis: 'best-fit', formulaFor: {}, switchedOff: [] },
   codeHistory: {
     place: 'invented',
     seismic_design_enforced_from: 1952,

@@ -30,7 +30,7 @@ export const SETTINGS: AssessSettings = {
     { title: 'rare level', by: 'site_class', spectra: { C: 'rare-c', D: 'rare-d' }, otherwise: 'rare-d' },
   ],
   holdPlateau: true,
-  period: { standard: 'asce41-17', basis: 'best-fit', switchedOff: [] },
+  period: { standard: 'asce41-17', basis: 'best-fit', formulaFor: {}, switchedOff: [] },
   codeHistory: {
     place: 'Example Bay (invented)',
     seismic_design_enforced_from: 1952,

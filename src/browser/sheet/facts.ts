@@ -10,6 +10,7 @@ import {
 } from '../../engineering/format.js';
 import { BUILDING_NUMBERS, BUILDING_WORDS } from '../../engineering/building-columns.js';
 import { findColumn } from '../../engineering/columns.js';
+import { STRUCTURE_NUMBERS, STRUCTURE_WORDS } from '../../engineering/structure-columns.js';
 import type { Portfolio } from '../portfolio.js';
 
 export type Fact = readonly [string, string];
@@ -118,6 +119,28 @@ export function inputFacts(p: Portfolio, i: number): readonly Fact[] {
     if (value !== '') facts.push([title(name), plainWords(value)]);
   }
   if (p.word('system', i) === '') facts.push([title('system'), 'not known; the study’s table of chances speaks']);
+  return [...facts, ...structureFacts(p, i)];
+}
+
+/** What is known of the structure and the ground under it. */
+function structureFacts(p: Portfolio, i: number): readonly Fact[] {
+  const { structure } = p.page.buildings.inputs;
+  if (structure === undefined) return [];
+  const facts: Fact[] = [];
+  for (const name of STRUCTURE_NUMBERS) {
+    const value = structure.numbers[name][i] ?? NaN;
+    const column = findColumn(name);
+    if (Number.isNaN(value) || column === undefined) continue;
+    const whole = column.unit === undefined && Number.isInteger(value);
+    facts.push([
+      column.title,
+      `${whole ? formatCount(value) : formatQuantity(value, column.unit, p.page.display, 4)}, given`,
+    ]);
+  }
+  for (const name of STRUCTURE_WORDS) {
+    const value = structure.words[name][i] ?? null;
+    if (value !== null) facts.push([findColumn(name)?.title ?? name, plainWords(value)]);
+  }
   return facts;
 }
 

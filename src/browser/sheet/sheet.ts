@@ -6,18 +6,20 @@ import { flagSentences, weakWords } from '../words.js';
 import { formatShare } from '../../engineering/format.js';
 import type { Fact } from './facts.js';
 import { inputFacts, placeSentences, resultFacts } from './facts.js';
+import { estimatesMaker } from '../estimates/building.js';
 import { handMaker } from './hand.js';
 
 /** Wires the dialog and returns the function that opens the sheet of building `i`. */
 export function startSheet(p: Portfolio): (i: number) => void {
   const dialog = byId('sheet') as HTMLDialogElement;
   const handOf = handMaker(p);
+  const estimatesOf = estimatesMaker(p);
   let shown: string | null = null;
 
   const show = (i: number): void => {
     shown = p.id(i);
     dialog.replaceChildren(
-      sheetOf(p, i, handOf, () => {
+      sheetOf(p, i, { hand: handOf, estimates: estimatesOf }, () => {
         dialog.close();
       }),
     );
@@ -48,6 +50,21 @@ export function startSheet(p: Portfolio): (i: number) => void {
   };
 }
 
+type Maker = (i: number) => readonly HTMLElement[];
+
+/** A button that gives way to what it makes, which takes the focus. */
+function onDemand(id: string, title: string, make: () => readonly HTMLElement[]): readonly HTMLElement[] {
+  const made = el('div', { id });
+  const button = el('button', { type: 'button', class: 'plain screen-only', id: `make-${id}` }, title);
+  button.addEventListener('click', () => {
+    made.replaceChildren(...make());
+    button.hidden = true;
+    made.tabIndex = -1;
+    made.focus();
+  });
+  return [button, made];
+}
+
 function facts(list: readonly Fact[]): HTMLElement {
   return el('dl', { class: 'facts' }, ...list.flatMap(([name, value]) => [el('dt', {}, name), el('dd', {}, value)]));
 }
@@ -55,7 +72,7 @@ function facts(list: readonly Fact[]): HTMLElement {
 function sheetOf(
   p: Portfolio,
   i: number,
-  handOf: (i: number) => readonly HTMLElement[],
+  makers: { readonly hand: Maker; readonly estimates: Maker },
   close: () => void,
 ): HTMLElement {
   const ranked = p.text('not_ranked', i) === '';
@@ -70,14 +87,8 @@ function sheetOf(
     ...(p.page.buildings.heritage[i] === 'yes' ? ['Protected as heritage.'] : []),
     ...flagSentences(p.text('flags', i)),
   ];
-  const hand = el('div', { id: 'hand' });
-  const make = el('button', { type: 'button', class: 'plain screen-only', id: 'make-hand' }, 'Work it out by hand');
-  make.addEventListener('click', () => {
-    hand.replaceChildren(...handOf(i));
-    make.hidden = true;
-    hand.tabIndex = -1;
-    hand.focus();
-  });
+  const hand = onDemand('hand', 'Work it out by hand', () => makers.hand(i));
+  const estimates = onDemand('estimates', 'Put all estimates side by side', () => makers.estimates(i));
   const partOf = p.page.buildings.part_of[i] ?? '';
   const identity: Fact[] = [
     ['Identifier', p.id(i)],
@@ -98,14 +109,15 @@ function sheetOf(
     ...(ranked ? [el('h3', {}, 'Period, demand, capacity'), facts(resultFacts(p, i))] : []),
     el('h3', {}, 'What it rests on'),
     facts(inputFacts(p, i)),
+    el('h3', {}, 'Estimates of the period'),
+    ...estimates,
     el('h3', {}, 'Hand calculation'),
     el(
       'p',
       { class: 'quiet' },
       'The most likely case step by step, made in this page from the values above by the same code that made the ranking.',
     ),
-    make,
-    hand,
+    ...hand,
     el(
       'p',
       { class: 'quiet' },

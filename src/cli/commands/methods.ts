@@ -1,8 +1,10 @@
 import { checkedInputs, describeInput, methodCalled } from '../../engineering/calc.js';
 import { parseExpression, writeExpression } from '../../engineering/expression.js';
 import type { AnyRecord, InputSpec, Limit } from '../../engineering/formula.js';
-import { METHODS } from '../../engineering/methods.js';
+import { METHODS, findMethod } from '../../engineering/methods.js';
+import { LEFT_OUT } from '../../engineering/period/left-out.js';
 import { cite } from '../../engineering/source.js';
+import { STIFFNESS_LEFT_OUT } from '../../engineering/stiffness/left-out.js';
 import { findUnit, unitsOf } from '../../engineering/units.js';
 import { EXIT } from '../../errors.js';
 import { printJson, printLines, terminalColumns } from '../output/print.js';
@@ -10,18 +12,41 @@ import { markWords } from '../output/steps.js';
 import { styled } from '../output/style.js';
 import { wrap } from '../output/text.js';
 
-/** `swaymark methods`: the register, or one record in full. */
-export function methods(id: string | undefined, options: { readonly json?: true }): number {
+/** `swaymark methods`: the register, the records that hold every word asked for, or one record in full by its id. */
+export function methods(words: readonly string[], options: { readonly json?: true; readonly leftOut?: true }): number {
   const columns = Math.min(terminalColumns(), 100);
-  if (id === undefined) {
-    if (options.json) printJson(METHODS.map(asJson));
-    else printLines(METHODS.flatMap((method) => entryLines(method, columns)));
+  if (options.leftOut) {
+    const rows = [...LEFT_OUT, ...STIFFNESS_LEFT_OUT];
+    if (options.json) printJson(rows);
+    else printLines(rows.flatMap(({ row, reason }) => [styled('bold', row), ...wrap(reason, columns, '    ')]));
     return EXIT.clean;
   }
-  const method = methodCalled(id);
-  if (options.json) printJson(asJson(method));
-  else printLines(methodLines(method, columns));
+  const [first = ''] = words;
+  const exact = words.length === 1 ? findMethod(first) : undefined;
+  if (exact !== undefined) {
+    if (options.json) printJson(asJson(exact));
+    else printLines(methodLines(exact, columns));
+    return EXIT.clean;
+  }
+  const found = METHODS.filter((method) => holdsAll(method, words));
+  // A mistyped id is answered with the nearest ones.
+  if (found.length === 0) methodCalled(words.join(' '));
+  if (options.json) printJson(found.map(asJson));
+  else printLines([...found.flatMap((method) => entryLines(method, columns)), '', ...closing(found.length, columns)]);
   return EXIT.clean;
+}
+
+function holdsAll({ id, title, source, verified, basis }: AnyRecord, words: readonly string[]): boolean {
+  const text = `${id} ${title} ${cite(source)} ${verified} ${basis ?? ''}`.toLowerCase();
+  return words.every((word) => text.includes(word.toLowerCase()));
+}
+
+function closing(count: number, columns: number): string[] {
+  const all = count === METHODS.length;
+  return wrap(
+    `${String(count)} ${count === 1 ? 'method' : 'methods'}${all ? '' : ` of ${String(METHODS.length)}`}; one in full by its id, fewer by words: swaymark methods period wall`,
+    columns,
+  );
 }
 
 function asJson(method: AnyRecord): unknown {

@@ -106,6 +106,6 @@ export function assess(
     spectrum: spectrum.name,
     weakType: weak.name,
     weakChance: weak.chance,
-    flags: flagsOf(building, cases, choice.byDefault, leading, pass.disagreement, spectrum, context),
+    flags: flagsOf(building, cases, choice.byDefault, leading, pass.disagreement, spectrum),
   };
 }

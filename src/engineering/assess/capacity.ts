@@ -6,19 +6,15 @@ import { SYSTEM_FACTORS } from '../capacity/systems.js';
 import { apply, applyAny } from '../formula.js';
 import type { AnyRecord } from '../formula.js';
 import { UBC_1961_MOMENT_FRAME, UBC_1961_OTHER } from '../period/past-records.js';
-import { ASCE7_22_PERIODS, UBC_HEIGHT_PERIODS } from '../period/height-records.js';
+import { ASCE7_22_PERIODS } from '../period/asce7.js';
+import { UBC_HEIGHT_PERIODS } from '../period/ubc.js';
 import type { Trace } from '../trace.js';
 import { EDITION_YEARS, detailingOf, ductilityOf } from './code-history.js';
 import type { EditionId } from './code-history.js';
-import type { Case } from './case-memory.js';
+import { ln } from '../numeric/elementary.js';
+import { entryOf } from './case-memory.js';
+import type { CapacityAtHeight, Case, Design } from './case-memory.js';
 import type { AssessContext } from './context.js';
-
-export interface CapacityAtHeight {
-  /** Strength coefficient × level. */
-  readonly strength_coefficient: number;
-  readonly overstrength: number;
-  readonly ductility: number;
-}
 
 const find = (list: readonly AnyRecord[], id: string): AnyRecord => {
   const found = list.find((record) => record.id === id);
@@ -136,6 +132,107 @@ function eraDesign(
   }
 }
 
+/** What of a building the coefficient of an edition depends on, `eraDesign` below told in short. */
+function dependsOn(system: System, edition: EditionId | null): Design['dependsOn'] {
+  const { periodClass } = SYSTEM_FACTORS[system];
+  const isMomentFrame = periodClass === 'steel-moment-frame' || periodClass === 'concrete-moment-frame';
+  switch (edition) {
+    case null:
+    case 'ubc-1927':
+    case 'ubc-1935':
+      return 'nothing';
+    case 'ubc-1949':
+      return 'storeys';
+    case 'ubc-1961':
+    case 'ubc-1976':
+      return isMomentFrame ? 'storeys' : 'more';
+    case 'ubc-1988':
+    case 'ubc-1997':
+    case 'asce7-2002':
+      return 'height';
+  }
+}
+
+/** True where the edition knows no such system, so that it counts as not designed. */
+function hasNoRow(system: System, edition: EditionId | null, strengthened: boolean): boolean {
+  return edition !== null && !strengthened && EDITION_YEARS[edition] >= (SYSTEM_FACTORS[system].noRowFrom ?? Infinity);
+}
+
+/** The memory of capacities that all cases of a system, an edition and a level of retrofit share. */
+export function designOf(
+  system: System,
+  edition: EditionId | null,
+  retrofit_level: number,
+  strengthened: boolean,
+  { caseMemory }: AssessContext,
+): Design {
+  const key = `${system}|${String(edition)}|${String(retrofit_level)}|${String(strengthened)}`;
+  return entryOf(caseMemory.designs, key, () => ({
+    dependsOn: hasNoRow(system, edition, strengthened) ? 'nothing' : dependsOn(system, edition),
+    found: new Map(),
+    last: null,
+  }));
+}
+
+/** What another building's capacity was found with holds here too, but for the coefficient of the two editions that know the plan. */
+function againAtHeight(
+  building: Building,
+  which: Case,
+  direction: DirectionName,
+  height_m: number,
+  { overstrength, ductility }: CapacityAtHeight,
+  context: AssessContext,
+): CapacityAtHeight {
+  const system = direction === 'longitudinal' ? which.system : which.system_transverse;
+  const detailing = detailingOf(system, which.edition, context.settings.codeHistory!);
+  const isDuctile = detailing === 'after' || detailing === 'special';
+  const { coefficient, levelFactor } = eraDesign(
+    building,
+    which.edition!,
+    system,
+    direction,
+    height_m,
+    isDuctile,
+    context,
+  );
+  const strength_coefficient = apply(STRENGTH, {
+    design_base_shear_coefficient: coefficient,
+    level_factor: levelFactor,
+    retrofit_level: which.retrofit_level,
+  });
+  return { strength_coefficient, overstrength, ductility, lnStrength: ln(strength_coefficient * overstrength) };
+}
+
+/** Heights kept of one design: a table in tenths of a metre has fewer. */
+const MOST_KEPT = 4096;
+
+/** `capacityAtHeight` for a building without a coefficient from the drawings and without a trace, out of the memory where it has it. */
+export function keptCapacity(
+  building: Building,
+  which: Case,
+  direction: DirectionName,
+  height_m: number,
+  context: AssessContext,
+): CapacityAtHeight {
+  const design = which.design[direction];
+  const { dependsOn: needs, found } = design;
+  if (needs === 'more') {
+    design.last =
+      design.last === null
+        ? capacityAtHeight(building, which, direction, height_m, null, context)
+        : againAtHeight(building, which, direction, height_m, design.last, context);
+    return design.last;
+  }
+  const key = needs === 'height' ? height_m : needs === 'storeys' ? building.storeys.value : 0;
+  let capacity = found.get(key);
+  if (capacity === undefined) {
+    capacity = capacityAtHeight(building, which, direction, height_m, null, context);
+    if (found.size >= MOST_KEPT) found.clear();
+    found.set(key, capacity);
+  }
+  return capacity;
+}
+
 /**
  * Strength and ductility of a case in a direction, at a height. `levelFactor` overrides the level of a drawings' coefficient.
  * Not for buildings with an assessed capacity.
@@ -159,10 +256,7 @@ export function capacityAtHeight(
     because: `${system}, ${which.edition === null ? 'no seismic design' : `designed to ${which.edition}`}: detailing class "${detailing}" [judgement]`,
     others: [],
   });
-  const noRow =
-    which.edition !== null &&
-    !which.strengthened &&
-    EDITION_YEARS[which.edition] >= (SYSTEM_FACTORS[system].noRowFrom ?? Infinity);
+  const noRow = hasNoRow(system, which.edition, which.strengthened);
   if (noRow) {
     trace?.choice({
       question: 'Design coefficient of the era',
@@ -201,12 +295,19 @@ export function capacityAtHeight(
     },
     trace,
   );
-  if (!Number.isFinite(design.reduction)) return { strength_coefficient, overstrength: OVERSTRENGTH, ductility };
+  if (!Number.isFinite(design.reduction))
+    return {
+      strength_coefficient,
+      overstrength: OVERSTRENGTH,
+      ductility,
+      lnStrength: ln(strength_coefficient * OVERSTRENGTH),
+    };
   const bounds = { code_reduction: design.reduction, level_factor: design.levelFactor };
   const overstrength = apply(OVERSTRENGTH_KEPT, { overstrength: OVERSTRENGTH, ...bounds }, trace);
   return {
     strength_coefficient,
     overstrength,
+    lnStrength: ln(strength_coefficient * overstrength),
     ductility: apply(DUCTILITY_KEPT, { ductility, overstrength, ...bounds }, trace),
   };
 }

@@ -1,6 +1,24 @@
 /** The cases of a building as data, and a memory of those already listed. */
-import type { System } from '../building.js';
-import type { EditionId } from './code-history.js';
+import type { PerDirection, System, Use } from '../building.js';
+import type { EditionId, Era } from './code-history.js';
+
+export interface CapacityAtHeight {
+  /** Strength coefficient × level. */
+  readonly strength_coefficient: number;
+  readonly overstrength: number;
+  readonly ductility: number;
+  /** ln of strength coefficient × overstrength. */
+  readonly lnStrength: number;
+}
+
+/** The capacities of a system designed to an edition, already found: all cases of the two share them. */
+export interface Design {
+  /** What of a building the design coefficient depends on; where it is more than that one number nothing is kept. */
+  readonly dependsOn: 'nothing' | 'storeys' | 'height' | 'more';
+  readonly found: Map<number, CapacityAtHeight>;
+  /** The last one found: overstrength and ductility are those of every building where `dependsOn` is `more`. */
+  last: CapacityAtHeight | null;
+}
 
 export interface Case {
   readonly system: System;
@@ -12,6 +30,7 @@ export interface Case {
   /** The era is that of a seismic retrofit. */
   readonly strengthened: boolean;
   readonly chance: number;
+  readonly design: PerDirection<Design>;
 }
 
 export interface Cases {
@@ -24,24 +43,55 @@ export interface Cases {
   readonly prior: string | null;
 }
 
+export type EraChances = readonly { readonly era: Era; readonly chance: number }[];
+
 export interface CaseMemory {
   readonly cases: Map<string, Cases | string>;
-  /** By system and year, for the common building: both known, one system in both directions, no retrofit. */
-  readonly plain: Map<string, Map<number, Cases | string>>;
+  /** By system and years, for the common building: one system in both directions, no retrofit. */
+  readonly known: Map<System, Map<number, Cases | string>>;
+  /** The same with the system not known: by use, class of storeys and years. */
+  readonly unknown: Map<Use | null, Map<number, Map<number, Cases | string>>>;
   /** Number of each pool of years: one array for all who share it. */
   readonly pools: WeakMap<readonly number[], number>;
+  readonly eras: Map<number, EraChances>;
+  readonly designs: Map<string, Design>;
+  poolCount: number;
+  /** Lists of cases kept. */
   count: number;
 }
 
 export function newCaseMemory(): CaseMemory {
-  return { cases: new Map(), plain: new Map(), pools: new WeakMap(), count: 0 };
+  return {
+    cases: new Map(),
+    known: new Map(),
+    unknown: new Map(),
+    pools: new WeakMap(),
+    eras: new Map(),
+    designs: new Map(),
+    poolCount: 0,
+    count: 0,
+  };
 }
 
-/** The pool's number in this memory. */
-export function poolNumber(years: readonly number[], memory: CaseMemory): number {
+/** A number that stands for the years in this memory: the year itself, 0 for none, below 0 for a pool. */
+export function yearsNumber(years: readonly number[], memory: CaseMemory): number {
+  if (years.length === 1) return years[0]!;
+  if (years.length === 0) return 0;
   const old = memory.pools.get(years);
   if (old !== undefined) return old;
-  memory.count += 1;
-  memory.pools.set(years, memory.count);
-  return memory.count;
+  memory.poolCount += 1;
+  memory.pools.set(years, -memory.poolCount);
+  return -memory.poolCount;
+}
+
+/** The entry of `key`, made when missing. */
+export function entryOf<K, V>(map: Map<K, V>, key: K, make: () => V): V {
+  let found = map.get(key);
+  if (found === undefined) map.set(key, (found = make()));
+  return found;
+}
+
+/** For `entryOf`. */
+export function newMap<K, V>(): Map<K, V> {
+  return new Map();
 }

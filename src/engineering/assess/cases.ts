@@ -1,9 +1,11 @@
 /** The discrete unknowns of a building: system and era, each combination with its chance. */
 import type { Building, System } from '../building.js';
-import { poolNumber } from './case-memory.js';
-import type { Case, Cases } from './case-memory.js';
-import { matchPrior } from '../prior/system-prior.js';
+import { designOf } from './capacity.js';
+import { entryOf, newMap, yearsNumber } from './case-memory.js';
+import type { Case, Cases, Design, EraChances } from './case-memory.js';
+import { matchPrior, storeysClass } from '../prior/system-prior.js';
 import { eraChances } from './code-history.js';
+import type { EditionId } from './code-history.js';
 import type { AssessContext } from './context.js';
 
 const DEFAULT_RETROFIT_LEVEL = 0.75;
@@ -12,24 +14,37 @@ const DEFAULT_RETROFIT_LEVEL = 0.75;
 export function casesOf(building: Building, context: AssessContext): Cases | string {
   const { years, system } = building;
   const kept = context.caseMemory;
-  const common =
-    system !== null && years.length === 1 && building.system_transverse === null && !(building.year_retrofitted > 0);
-  if (common) {
-    let byYear = kept.plain.get(system);
-    if (byYear === undefined) kept.plain.set(system, (byYear = new Map<number, Cases | string>()));
-    const year = years[0]!;
-    let found = byYear.get(year);
-    if (found === undefined) byYear.set(year, (found = listCases(building, context)));
+  const number = yearsNumber(years, kept);
+  if (building.system_transverse === null && !(building.year_retrofitted > 0)) {
+    const { priorClasses } = context;
+    const byYears =
+      system !== null
+        ? entryOf(kept.known, system, newMap<number, Cases | string>)
+        : entryOf(
+            entryOf(
+              kept.unknown,
+              priorClasses.uses.has(building.use) ? building.use : null,
+              newMap<number, Map<number, Cases | string>>,
+            ),
+            storeysClass(priorClasses, building.storeys.value),
+            newMap<number, Cases | string>,
+          );
+    let found = byYears.get(number);
+    if (found === undefined) {
+      found = listCases(building, context);
+      if (kept.count < MOST_KEPT) {
+        byYears.set(number, found);
+        kept.count += 1;
+      }
+    }
     return found;
   }
-  // a pool of years is one array for all who share it
-  const pool = years.length === 1 ? String(years[0]) : years.length === 0 ? '-' : `p${String(poolNumber(years, kept))}`;
   const strengthened =
     building.year_retrofitted > 0 ? `|${String(building.year_retrofitted)}|${String(building.retrofit_level)}` : '';
   const key =
-    building.system === null
-      ? `${pool}||${building.system_transverse ?? ''}|${building.use}|${String(building.storeys.value)}${strengthened}`
-      : `${pool}|${building.system}|${building.system_transverse ?? ''}${strengthened}`;
+    system === null
+      ? `${String(number)}||${building.system_transverse ?? ''}|${building.use}|${String(building.storeys.value)}${strengthened}`
+      : `${String(number)}|${system}|${building.system_transverse ?? ''}${strengthened}`;
   const old = kept.cases.get(key);
   if (old !== undefined) return old;
   const made = listCases(building, context);
@@ -47,17 +62,15 @@ function listCases(building: Building, context: AssessContext): Cases | string {
   const years = strengthened ? [retrofit] : built;
   const level = strengthened ? (building.retrofit_level > 0 ? building.retrofit_level : DEFAULT_RETROFIT_LEVEL) : 1;
   const known = building.system;
-  const found = new Map<string, Case>();
+  /** Chance by system, then by edition. */
+  const found = new Map<System, Map<EditionId | null, number>>();
   const priors = new Set<string>();
-  const eras = context.eras.length === 0 ? [{ edition: null, from: -Infinity, to: Infinity }] : context.eras;
   // A building with neither a year nor neighbours that have one: every era of the place alike [judgement].
   const spread = years.length > 0 ? years : [NaN];
   // The system goes with the year of construction, not with the year of a retrofit.
   const systemYears = built.length > 0 ? built : [NaN];
   for (const year of spread) {
-    const eraList = Number.isNaN(year)
-      ? eras.map((era) => ({ era, chance: 1 / eras.length }))
-      : eraChances(eras, year, settings.spreads.editionChange_years);
+    const eraList = erasOf(year, context);
     for (const systemYear of strengthened ? systemYears : [year]) {
       let systems: readonly { readonly system: System; readonly chance: number }[];
       if (known !== null) systems = [{ system: known, chance: 1 }];
@@ -70,25 +83,34 @@ function listCases(building: Building, context: AssessContext): Cases | string {
       }
       const share = 1 / spread.length / (strengthened ? systemYears.length : 1);
       for (const { system, chance } of systems) {
-        for (const { era, chance: eraChance } of eraList) {
-          const key = `${system}|${era.edition ?? ''}`;
-          const old = found.get(key);
-          const more = share * chance * eraChance;
-          found.set(key, {
-            system,
-            system_transverse: building.system_transverse ?? system,
-            edition: era.edition,
-            retrofit_level: level,
-            strengthened,
-            chance: (old?.chance ?? 0) + more,
-          });
-        }
+        const byEdition = entryOf(found, system, newMap<EditionId | null, number>);
+        for (const { era, chance: eraChance } of eraList)
+          byEdition.set(era.edition, (byEdition.get(era.edition) ?? 0) + share * chance * eraChance);
       }
     }
   }
-  const list = [...found.entries()]
-    .sort(([ka, a], [kb, b]) => b.chance - a.chance || (ka < kb ? -1 : 1))
-    .map(([, value]) => value);
+  const design = (system: System, edition: EditionId | null): Design =>
+    designOf(system, edition, level, strengthened, context);
+  const list: Case[] = [];
+  for (const [system, byEdition] of found) {
+    const system_transverse = building.system_transverse ?? system;
+    for (const [edition, chance] of byEdition) {
+      const longitudinal = design(system, edition);
+      list.push({
+        system,
+        system_transverse,
+        edition,
+        retrofit_level: level,
+        strengthened,
+        chance,
+        design: {
+          longitudinal,
+          transverse: system_transverse === system ? longitudinal : design(system_transverse, edition),
+        },
+      });
+    }
+  }
+  if (list.length > 1) list.sort((a, b) => b.chance - a.chance || (keyOf(a) < keyOf(b) ? -1 : 1));
   return {
     list,
     groups: groupBySystem(list),
@@ -97,15 +119,25 @@ function listCases(building: Building, context: AssessContext): Cases | string {
   };
 }
 
+function keyOf({ system, edition }: Case): string {
+  return `${system}|${edition ?? ''}`;
+}
+
+/** The eras of a year with their chances; of an unknown year (NaN) all alike. */
+function erasOf(year: number, { eras: all, settings, caseMemory }: AssessContext): EraChances {
+  return entryOf(caseMemory.eras, year, () => {
+    const eras = all.length === 0 ? [{ edition: null, from: -Infinity, to: Infinity }] : all;
+    return Number.isNaN(year)
+      ? eras.map((era) => ({ era, chance: 1 / eras.length }))
+      : eraChances(eras, year, settings.spreads.editionChange_years);
+  });
+}
+
 /** Cases of one pair of systems stand together, in order of first appearance. */
 function groupBySystem(list: readonly Case[]): readonly (readonly Case[])[] {
   if (list.length === 1) return [list];
-  const groups = new Map<string, Case[]>();
-  for (const which of list) {
-    const key = `${which.system}|${which.system_transverse}`;
-    const group = groups.get(key);
-    if (group === undefined) groups.set(key, [which]);
-    else group.push(which);
-  }
+  // the system across is the same function of the other for all cases of a building
+  const groups = new Map<System, Case[]>();
+  for (const which of list) entryOf(groups, which.system, (): Case[] => []).push(which);
   return [...groups.values()];
 }

@@ -39,3 +39,26 @@ export const COMBINED_PERIOD = record({
   verified: 'memory',
   limits: [],
 });
+
+const flexibleBase: Family<{ readonly period_ratio: number; readonly period_s: number }, Record<never, number>> = {
+  id: 'period/flexible-base',
+  yields: 'period_s',
+  unit: 's',
+  symbol: 'T̃',
+  inputs: [
+    { name: 'period_ratio', kind: 'number', meaning: 'period on flexible ground over that on a fixed base' },
+    { name: 'period_s', kind: 'number', unit: 's', meaning: 'period on a fixed base' },
+  ],
+  expression: 'period_ratio * period_s',
+  evaluate: ({ period_ratio, period_s }) => period_ratio * period_s,
+};
+
+export const FLEXIBLE_BASE = record({
+  id: 'mechanics/period/on-flexible-ground',
+  title: 'Period on the ground of record',
+  family: flexibleBase,
+  constants: {},
+  source: { standard: 'Veletsos and Meek', edition: '1974', clause: 'T̃ = (T̃/T) T' },
+  verified: 'memory',
+  limits: [],
+});

@@ -2,7 +2,9 @@
 import { ln } from '../numeric/elementary.js';
 import type { Building } from '../building.js';
 import type { AnyRecord, Inputs } from '../formula.js';
-import { heightFormula } from '../period/choose.js';
+import { candidates, periodFormula } from '../period/choose.js';
+import { priorClasses } from '../prior/system-prior.js';
+import type { PriorClasses } from '../prior/system-prior.js';
 import type { System } from '../building.js';
 import { SYSTEMS } from '../building.js';
 import type { CompiledSpectrum } from '../spectrum/compiled.js';
@@ -12,6 +14,8 @@ import { eras } from './code-history.js';
 import type { Era } from './code-history.js';
 import { newCaseMemory } from './case-memory.js';
 import type { CaseMemory } from './case-memory.js';
+import { newCurveMemory } from './curve-memory.js';
+import type { CurveMemory } from './curve-memory.js';
 import type { AssessSettings } from './settings.js';
 
 export interface ContextSpectrum {
@@ -24,17 +28,27 @@ export interface ContextSpectrum {
   readonly hold_from_s: number;
 }
 
+/** A formula that the study may read. */
+export interface Candidate {
+  readonly record: AnyRecord;
+  /** It needs the height alone and no limit forbids it: the usual case, taken without looking further. */
+  readonly plain: boolean;
+}
+
 export interface AssessContext {
   readonly settings: AssessSettings;
   readonly spectra: Readonly<Record<string, ContextSpectrum>>;
-  readonly formulas: Readonly<Record<System, AnyRecord>>;
+  /** Formulas of the period by system, best first: the study's own choice, then the standard's. */
+  readonly formulas: Readonly<Record<System, readonly Candidate[]>>;
   readonly eras: readonly Era[];
   /** ln λ0 + k² 0.4²/2 by spectrum of the ranking level, relative; 0 for all where k and the rate are the same everywhere. */
   readonly zoneTerms: Readonly<Record<string, number>>;
   /** Factor on every capacity: 1, but for a draw of the overstrength in a simulation. */
   readonly capacityFactor: number;
-  /** Cases found so far; speeds up, changes nothing. */
+  readonly priorClasses: PriorClasses;
+  /** Cases and demands found so far; they speed up and change nothing. */
   readonly caseMemory: CaseMemory;
+  readonly curveMemory: CurveMemory;
 }
 
 /** Median record-to-record dispersion in the closed form of the mean annual rate [from memory]. */
@@ -56,9 +70,10 @@ export function compileContext(settings: AssessSettings): AssessContext {
       hold_from_s: settings.holdPlateau ? reading.compiled.plateau_from_s : 0,
     };
   }
-  const formulas = Object.fromEntries(
-    SYSTEMS.map((system) => [system, heightFormula(system, settings.period.standard, settings.period.basis)]),
-  ) as Record<System, AnyRecord>;
+  const formulas = Object.fromEntries(SYSTEMS.map((system) => [system, candidatesOf(system, settings)])) as Record<
+    System,
+    readonly Candidate[]
+  >;
   return {
     settings,
     spectra,
@@ -66,8 +81,24 @@ export function compileContext(settings: AssessSettings): AssessContext {
     eras: settings.codeHistory === null ? [] : eras(settings.codeHistory),
     zoneTerms: zoneTerms(settings, spectra),
     capacityFactor: 1,
+    priorClasses: priorClasses(settings.systemPrior),
     caseMemory: newCaseMemory(),
+    curveMemory: newCurveMemory(),
   };
+}
+
+function candidatesOf(system: System, { period }: AssessSettings): readonly Candidate[] {
+  const { standard, basis, formulaFor } = period;
+  const own = formulaFor[system];
+  const records = [
+    ...(own === undefined ? [] : [periodFormula(own)]),
+    ...candidates(system, standard, basis).filter(({ id }) => id !== own),
+  ];
+  return records.map((record) => {
+    const { inputs } = record.family;
+    const heightAlone = inputs.length === 1 && inputs[0]?.name === 'height_m';
+    return { record, plain: heightAlone && record.limits.every(({ outside }) => outside !== 'reject') };
+  });
 }
 
 function zoneTerms(

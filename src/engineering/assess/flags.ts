@@ -1,7 +1,9 @@
 /** Things a reader must know about a result, as codes with their words. */
 import type { Building } from '../building.js';
+import { DIRECTIONS } from '../direction.js';
+import { siteCloseness } from '../site/closeness.js';
 import type { Cases } from './case-memory.js';
-import type { AssessContext, ContextSpectrum } from './context.js';
+import type { ContextSpectrum } from './context.js';
 import type { LeadingCase } from './leading.js';
 
 export const FLAGS: Readonly<Record<string, string>> = {
@@ -12,10 +14,31 @@ export const FLAGS: Readonly<Record<string, string>> = {
   'default-spectrum': "The site class or zone is not known or not named; the study's default spectrum is read.",
   'estimates-differ': 'Two estimates of the period are a factor of 2 or more apart.',
   'beyond-spectrum': 'The period is longer than the publication of the spectrum covers.',
-  'beyond-formula': "The building is outside the height formula's published range.",
+  'beyond-formula': 'The building is taller than the height formula is meant for.',
+  'stiffness-assumed':
+    'The stiffness behind the period rests on assumed values: modulus, cracking, or what the row does not give.',
+  'at-site-period': 'The period of a direction is within 15 % of that of the ground.',
+  'near-site-period': 'The period of a direction is within 25 % of that of the ground.',
+  'grows-into-site-period': 'Stiffer than the ground; in strong shaking the period may grow into that of the ground.',
   'near-edition-change': 'Built within a few years of a change of code; both editions count.',
   'design-level-unknown': 'The level of the design coefficient is not stated; both levels count.',
 };
+
+const SITE_FLAGS = {
+  close: 'at-site-period',
+  near: 'near-site-period',
+  'grows-into': 'grows-into-site-period',
+} as const;
+
+const BY_CLOSENESS = ['close', 'near', 'grows-into'] as const;
+
+/** The closer of the two directions to the period of the ground; null when both are apart, or the ground's is not on record. */
+function closestToSite({ directions }: LeadingCase, { structure }: Building): (typeof BY_CLOSENESS)[number] | null {
+  const site_period_s = structure?.site_period_s ?? NaN;
+  if (!(site_period_s > 0)) return null;
+  const found = DIRECTIONS.map((direction) => siteCloseness(directions[direction].period_s, site_period_s));
+  return BY_CLOSENESS.find((closeness) => found.includes(closeness)) ?? null;
+}
 
 /** Codes of the flags that apply, in the order of FLAGS. */
 export function flagsOf(
@@ -25,7 +48,6 @@ export function flagsOf(
   leading: LeadingCase,
   disagreement: number,
   spectrum: ContextSpectrum,
-  context: AssessContext,
 ): readonly string[] {
   const flags: string[] = [];
   if (!cases.systemKnown) flags.push('system-unknown');
@@ -37,8 +59,11 @@ export function flagsOf(
   const { longitudinal, transverse } = leading.directions;
   if (Math.max(longitudinal.period_s, transverse.period_s) > spectrum.compiled.valid_to_s)
     flags.push('beyond-spectrum');
-  const limit = context.formulas[leading.system].limits.find(({ input }) => input === 'height_m');
+  const limit = leading.formula?.limits.find(({ input }) => input === 'height_m');
   if (limit?.to !== undefined && building.height_m.value > limit.to) flags.push('beyond-formula');
+  if (leading.stiffnessAssumed) flags.push('stiffness-assumed');
+  const site = closestToSite(leading, building);
+  if (site !== null) flags.push(SITE_FLAGS[site]);
   if (building.years.length === 1 && cases.systemKnown && cases.list.length > 1) flags.push('near-edition-change');
   if (building.design_base_shear_coefficient > 0 && building.design_level === null) flags.push('design-level-unknown');
   return flags;

@@ -1,28 +1,25 @@
 /** The integration over the cases of a building, the nodes of its height and of its period's error. */
 import { exp, ln } from '../numeric/elementary.js';
-import type { Building, PerDirection } from '../building.js';
-import { reductionFactor } from '../capacity/records.js';
+import type { Building, DirectionName, PerDirection } from '../building.js';
 import { HEIGHT_NODES, ONE_NODE, PERIOD_NODES } from '../numeric/nodes.js';
 import type { Nodes } from '../numeric/nodes.js';
 import { mixtureQuantile } from '../priority/mixture.js';
-import { ordinate } from '../spectrum/compiled.js';
-import { capacityAtHeight } from './capacity.js';
-import type { CapacityAtHeight } from './capacity.js';
-import type { Case, Cases } from './case-memory.js';
+import { capacityAtHeight, keptCapacity } from './capacity.js';
+import { entryOf, newMap } from './case-memory.js';
+import type { CapacityAtHeight, Case, Cases } from './case-memory.js';
 import type { AssessContext, ContextSpectrum } from './context.js';
+import { curveAt, curvesOf, isByHeight, reducedAt } from './curve.js';
+import { MOST_HEIGHTS } from './curve-memory.js';
+import type { Curve, KeptBand, PeriodBand } from './curve-memory.js';
 import type { People } from './people.js';
-import { periodAt, periodModel } from './period.js';
+import { NO_PERIOD, alikeAcross, periodModel } from './period.js';
 import type { PeriodEstimate, PeriodModel } from './period.js';
 import type { Scratch } from './scratch.js';
 import { directionsAlike, drawingsLevels, importanceOf, massFactor } from './terms.js';
 
-export interface PeriodBand {
-  readonly p16_s: number;
-  readonly p50_s: number;
-  readonly p84_s: number;
-}
+export type { PeriodBand };
 
-/** z of the 16th and 84th percentiles. */
+/** z of the 84th percentile. */
 const Z84 = 0.994457883209753;
 
 export interface Pass {
@@ -33,6 +30,13 @@ export interface Pass {
 interface SystemModels {
   readonly longitudinal: PeriodModel;
   readonly transverse: PeriodModel;
+}
+
+/** One node of the height of one pair of systems. */
+interface Band {
+  readonly chance: number;
+  readonly longitudinal: PeriodEstimate;
+  readonly transverse: PeriodEstimate;
 }
 
 /** Adds every node of every case to the mixture and returns the percentiles of the periods. */
@@ -57,102 +61,84 @@ export function integrate(
   const sd = demandOnly ? 0 : Math.sqrt(slope_k * slope_k * strengthVariance + people.sigma * people.sigma);
   const offset = demandOnly ? 0 : constantTerm(building, people, spectrum, context);
   const levels = drawingsLevels(building);
-  const fixed = massFactor(building, context);
-  const bands: { chance: number; longitudinal: PeriodEstimate; transverse: PeriodEstimate }[] = [];
+  const lnFixed = ln(massFactor(building, context));
+  const lnGiven = demandOnly ? 0 : assessed ? ln(building.capacity_sa_g * context.capacityFactor) : NaN;
+  const bands: Band[] = [];
   let disagreement = 1;
+  const { score } = scratch;
+  const add = (
+    weight: number,
+    along: Curve,
+    ductilityA: number,
+    lnA: number,
+    across: Curve,
+    ductilityB: number,
+    lnB: number,
+  ): void => {
+    const a = reducedAt(along, ductilityA, spectrum, scratch);
+    const nodes = along.sigma > 0 || across.sigma > 0 ? PERIOD_NODES : ONE_NODE;
+    const first = nodes === ONE_NODE ? MIDDLE : 0;
+    if (across === along && ductilityA === ductilityB)
+      score.addNodes(weight, nodes, a, first, lnA < lnB ? lnA : lnB, slope_k, offset, sd);
+    else {
+      const b = reducedAt(across, ductilityB, spectrum, scratch);
+      const { worse } = scratch;
+      for (let j = 0; j < worse.length; j += 1) {
+        const x = a[j]! - lnA;
+        const y = b[j]! - lnB;
+        worse[j] = y > x ? y : x;
+      }
+      score.addNodes(weight, nodes, worse, first, 0, slope_k, offset, sd);
+    }
+  };
   for (const group of cases.groups) {
     const models = modelsOf(building, group[0]!, context);
-    if (models === null) return 'every method for the period is switched off';
-    const groupChance = group.reduce((sum, { chance }) => sum + chance, 0);
+    if (models === null) return NO_PERIOD;
+    let groupChance = 0;
+    for (const { chance } of group) groupChance += chance;
     const heights = heightNodes(building, models, demandOnly || assessed);
+    const curvesAlong = curvesOf(models.longitudinal, spectrum, context);
+    const oneModel = models.transverse === models.longitudinal;
+    const curvesAcross = oneModel ? curvesAlong : curvesOf(models.transverse, spectrum, context);
     for (let h = 0; h < heights.z.length; h += 1) {
       const height_m =
         building.height_m.value * (heights.z[h] === 0 ? 1 : exp(building.height_m.sigma * heights.z[h]!));
-      const along = periodAt(models.longitudinal, height_m, context);
-      const across = models.transverse === models.longitudinal ? along : periodAt(models.transverse, height_m, context);
-      disagreement = Math.max(disagreement, along.disagreement, across.disagreement);
-      bands.push({ chance: groupChance * heights.weight[h]!, longitudinal: along, transverse: across });
-      fillNodes(scratch, 0, along, spectrum);
-      const samePeriod = across === along || (across.period_s === along.period_s && across.sigma === along.sigma);
-      if (!samePeriod) fillNodes(scratch, 1, across, spectrum);
-      const across_i = samePeriod ? 0 : 1;
-      const nodes = along.sigma > 0 || across.sigma > 0 ? PERIOD_NODES : ONE_NODE;
-      const first = nodes === ONE_NODE ? (PERIOD_NODES.z.length - 1) / 2 : 0;
+      const along = curveAt(models.longitudinal, height_m, curvesAlong, context);
+      const other = oneModel ? along : curveAt(models.transverse, height_m, curvesAcross, context);
+      disagreement = Math.max(disagreement, along.disagreement, other.disagreement);
+      bands.push({ chance: groupChance * heights.weight[h]!, longitudinal: along, transverse: other });
+      const across = other.period_s === along.period_s && other.sigma === along.sigma ? along : other;
       for (const which of group) {
+        const alike = directionsAlike(building, which);
         for (const { level, chance: levelChance } of levels) {
           const weight = which.chance * heights.weight[h]! * levelChance;
           if (demandOnly || assessed) {
-            for (let j = 0; j < nodes.z.length; j += 1) {
-              const sa = Math.max(scratch.sa_g[0][first + j]!, scratch.sa_g[across_i][first + j]!);
-              const x = demandOnly
-                ? ln(sa)
-                : slope_k * ln(sa / (building.capacity_sa_g * context.capacityFactor)) + offset;
-              scratch.score.add(weight * nodes.weight[j]!, x, sd);
-            }
+            add(weight, along, 1, lnGiven, across, 1, lnGiven);
             continue;
           }
-          const a = capacityAtHeight(building, which, 'longitudinal', height_m, level, context);
-          const b = directionsAlike(building, which)
-            ? a
-            : capacityAtHeight(building, which, 'transverse', height_m, level, context);
-          addNodes(scratch, nodes, first, across_i, a, b, fixed, weight, slope_k, offset, sd, spectrum);
+          const a = capacityOf(building, which, 'longitudinal', height_m, level, context);
+          const b = alike ? a : capacityOf(building, which, 'transverse', height_m, level, context);
+          add(weight, along, a.ductility, a.lnStrength + lnFixed, across, b.ductility, b.lnStrength + lnFixed);
         }
       }
     }
   }
-  return {
-    period: {
-      longitudinal: percentiles(bands, 'longitudinal', scratch),
-      transverse: percentiles(bands, 'transverse', scratch),
-    },
-    disagreement,
-  };
+  return { period: periodBands(building, bands, cases, context, scratch), disagreement };
 }
 
-function addNodes(
-  scratch: Scratch,
-  nodes: Nodes,
-  first: number,
-  across_i: number,
-  a: CapacityAtHeight,
-  b: CapacityAtHeight,
-  fixed: number,
-  weight: number,
-  slope_k: number,
-  offset: number,
-  sd: number,
-  spectrum: ContextSpectrum,
-): void {
-  const corner = spectrum.compiled.plateau_to_s;
-  const strengthA = a.strength_coefficient * a.overstrength * fixed;
-  const strengthB = b.strength_coefficient * b.overstrength * fixed;
-  const one = across_i === 0 && strengthA === strengthB && a.ductility === b.ductility;
-  const periodA = scratch.period_s[0];
-  const saA = scratch.sa_g[0];
-  const periodB = scratch.period_s[across_i]!;
-  const saB = scratch.sa_g[across_i]!;
-  for (let j = 0; j < nodes.z.length; j += 1) {
-    let ratio = saA[first + j]! / (strengthA * reductionFactor(a.ductility, periodA[first + j]!, corner));
-    if (!one) {
-      const other = saB[first + j]! / (strengthB * reductionFactor(b.ductility, periodB[first + j]!, corner));
-      if (other > ratio) ratio = other;
-    }
-    scratch.score.add(weight * nodes.weight[j]!, slope_k * ln(ratio) + offset, sd);
-  }
-}
+const MIDDLE = (PERIOD_NODES.z.length - 1) / 2;
 
-/** Period and demand at the nodes of one direction. */
-function fillNodes(scratch: Scratch, d: 0 | 1, estimate: PeriodEstimate, spectrum: ContextSpectrum): void {
-  const stretch = scratch.stretch[d];
-  if (scratch.stretchSigma[d] !== estimate.sigma) {
-    for (let j = 0; j < stretch.length; j += 1) stretch[j] = exp(estimate.sigma * PERIOD_NODES.z[j]!);
-    scratch.stretchSigma[d] = estimate.sigma;
-  }
-  for (let j = 0; j < stretch.length; j += 1) {
-    const t = estimate.period_s * stretch[j]!;
-    scratch.period_s[d][j] = t;
-    scratch.sa_g[d][j] = ordinate(spectrum.compiled, Math.max(t, spectrum.hold_from_s));
-  }
+function capacityOf(
+  building: Building,
+  which: Case,
+  direction: DirectionName,
+  height_m: number,
+  level: number | null,
+  context: AssessContext,
+): CapacityAtHeight {
+  return level === null
+    ? keptCapacity(building, which, direction, height_m, context)
+    : capacityAtHeight(building, which, direction, height_m, level, context);
 }
 
 /** ln E + ln I + zone term. */
@@ -164,10 +150,8 @@ function constantTerm(building: Building, people: People, spectrum: ContextSpect
 function modelsOf(building: Building, which: Case, context: AssessContext): SystemModels | null {
   const longitudinal = periodModel(building, 'longitudinal', which.system, context);
   if (longitudinal === null) return null;
-  const plain = longitudinal.evidence === 'formula' && which.system === which.system_transverse;
-  const sameInput =
-    plain && !(building.measured_period_s.transverse > 0) && building.storey_stiffness_kN_per_m.transverse === null;
-  if (sameInput) return { longitudinal, transverse: longitudinal };
+  if (which.system === which.system_transverse && alikeAcross(building, longitudinal, which.system, context))
+    return { longitudinal, transverse: longitudinal };
   const transverse = periodModel(building, 'transverse', which.system_transverse, context);
   return transverse === null ? null : { longitudinal, transverse };
 }
@@ -175,20 +159,47 @@ function modelsOf(building: Building, which: Case, context: AssessContext): Syst
 /** An inferred height is integrated over unless nothing depends on it. */
 function heightNodes(building: Building, models: SystemModels, capacityWithoutHeight: boolean): Nodes {
   if (!(building.height_m.sigma > 0)) return ONE_NODE;
-  if (capacityWithoutHeight && models.longitudinal.formula === null && models.transverse.formula === null)
-    return ONE_NODE;
+  const heightless = ({ formula, stiffnessAt }: PeriodModel): boolean => formula === null && stiffnessAt === null;
+  if (capacityWithoutHeight && heightless(models.longitudinal) && heightless(models.transverse)) return ONE_NODE;
   return HEIGHT_NODES;
 }
 
-function percentiles(
-  bands: readonly {
-    readonly chance: number;
-    readonly longitudinal: PeriodEstimate;
-    readonly transverse: PeriodEstimate;
-  }[],
-  direction: 'longitudinal' | 'transverse',
+/** Percentiles of both directions; where one formula of an inferred height speaks, out of the memory when it is there. */
+function periodBands(
+  building: Building,
+  bands: readonly Band[],
+  cases: Cases,
+  context: AssessContext,
   scratch: Scratch,
-): PeriodBand {
+): PerDirection<PeriodBand> {
+  const alike = bands.every(({ longitudinal, transverse }) => longitudinal === transverse);
+  if (!alike)
+    return {
+      longitudinal: percentiles(bands, 'longitudinal', scratch),
+      transverse: percentiles(bands, 'transverse', scratch),
+    };
+  const { value, sigma } = building.height_m;
+  const model =
+    bands.length > 1 && cases.groups.length === 1
+      ? periodModel(building, 'longitudinal', cases.list[0]!.system, context)
+      : null;
+  if (model?.formula == null || !isByHeight(model)) {
+    const band = percentiles(bands, 'longitudinal', scratch);
+    return { longitudinal: band, transverse: band };
+  }
+  const kept = entryOf(context.curveMemory.bands, model.formula, newMap<number, KeptBand>);
+  const { chance } = bands[0]!;
+  const old = kept.get(value);
+  let band = old?.band;
+  if (old === undefined || band === undefined || old.chance !== chance || old.sigma !== sigma) {
+    band = percentiles(bands, 'longitudinal', scratch);
+    if (kept.size >= MOST_HEIGHTS) kept.clear();
+    kept.set(value, { chance, sigma, band });
+  }
+  return { longitudinal: band, transverse: band };
+}
+
+function percentiles(bands: readonly Band[], direction: DirectionName, scratch: Scratch): PeriodBand {
   if (bands.length === 1) {
     const { period_s, sigma } = bands[0]![direction];
     const factor = exp(Z84 * sigma);
@@ -196,6 +207,7 @@ function percentiles(
   }
   scratch.period.clear();
   for (const band of bands) scratch.period.add(band.chance, ln(band[direction].period_s), band[direction].sigma);
+  scratch.periodPool.restart();
   const mixture = scratch.period.gather(scratch.periodPool);
   const at = (q: number, z: number): number => exp(mixtureQuantile(mixture, q, z));
   return { p16_s: at(0.16, -Z84), p50_s: at(0.5, 0), p84_s: at(0.84, Z84) };

@@ -3,19 +3,21 @@ import type { Building, DirectionName, PerDirection, System } from '../building.
 import { ELASTIC_EQUIVALENT, REDUCTION } from '../capacity/records.js';
 import { DIRECTIONS } from '../direction.js';
 import { apply } from '../formula.js';
+import type { AnyRecord } from '../formula.js';
 import { ln } from '../numeric/elementary.js';
 import { LOG_SCORE } from '../priority/records.js';
+import { siteCloseness } from '../site/closeness.js';
 import { ordinate } from '../spectrum/compiled.js';
 import type { Trace } from '../trace.js';
 import { directionsAlike, drawingsLevels, importanceOf } from './terms.js';
-import { capacityAtHeight, irregularityFactor, massShare } from './capacity.js';
+import { capacityAtHeight, irregularityFactor, keptCapacity, massShare } from './capacity.js';
 import type { Case, Cases } from './case-memory.js';
 import type { EditionId } from './code-history.js';
 import { chooseSpectrum } from './context.js';
 import type { AssessContext, ContextSpectrum, SpectrumChoice } from './context.js';
 import { peopleOf } from './people.js';
-import { periodAt, periodModel } from './period.js';
-import type { Evidence } from './period.js';
+import { NO_PERIOD, alikeAcross, periodAt, periodModel } from './period.js';
+import type { Evidence, PeriodBasis, PeriodModel } from './period.js';
 
 export interface LeadingDirection {
   readonly period_s: number;
@@ -29,7 +31,13 @@ export interface LeadingCase {
   readonly chance: number;
   readonly governing: DirectionName;
   readonly directions: PerDirection<LeadingDirection>;
+  /** Of the governing direction: what its period rests on. */
   readonly evidence: Evidence;
+  readonly basis: PeriodBasis;
+  /** The formula that counts there, or null. */
+  readonly formula: AnyRecord | null;
+  /** The stiffness that counts there rests on assumed values. */
+  readonly stiffnessAssumed: boolean;
   readonly sa_g: number;
   readonly capacity_g: number;
   readonly demand_over_capacity: number;
@@ -49,10 +57,15 @@ export function leadingCase(
   const which = cases.list[0]!;
   if (trace !== undefined) openTrace(building, which, choice, trace);
   const worked = {} as Record<DirectionName, LeadingDirection>;
-  let evidence: Evidence = 'formula';
+  const models = {} as Record<DirectionName, PeriodModel>;
   for (const direction of DIRECTIONS) {
-    if (direction === 'transverse' && directionsAlike(building, which)) {
+    if (
+      direction === 'transverse' &&
+      directionsAlike(building, which) &&
+      alikeAcross(building, models.longitudinal, which.system, context)
+    ) {
       worked.transverse = worked.longitudinal;
+      models.transverse = models.longitudinal;
       trace?.heading('Transverse direction');
       trace?.choice({
         question: 'Transverse direction',
@@ -65,9 +78,10 @@ export function leadingCase(
     trace?.heading(direction === 'longitudinal' ? 'Longitudinal direction' : 'Transverse direction');
     const system = direction === 'longitudinal' ? which.system : which.system_transverse;
     const model = periodModel(building, direction, system, context, trace);
-    if (model === null) return 'every method for the period is switched off';
-    if (direction === 'longitudinal') evidence = model.evidence;
+    if (model === null) return NO_PERIOD;
+    models[direction] = model;
     const { period_s } = periodAt(model, building.height_m.value, context, trace);
+    if (trace !== undefined) siteCloseness(period_s, building.structure?.site_period_s ?? NaN, trace);
     const sa_g = readOrdinate(choice.spectrum, period_s, trace);
     const capacity_g =
       context.settings.rankBy === 'demand'
@@ -92,7 +106,10 @@ export function leadingCase(
     chance: which.chance,
     governing,
     directions: worked,
-    evidence,
+    evidence: models[governing].evidence,
+    basis: models[governing].basis,
+    formula: models[governing].formula,
+    stiffnessAssumed: models[governing].assumed,
     sa_g,
     capacity_g,
     demand_over_capacity: sa_g / capacity_g,
@@ -160,7 +177,11 @@ function capacityOf(
     return building.capacity_sa_g * context.capacityFactor;
   }
   const { level } = drawingsLevels(building)[0]!;
-  const at = capacityAtHeight(building, which, direction, building.height_m.value, level, context, trace);
+  const height_m = building.height_m.value;
+  const at =
+    trace === undefined && level === null
+      ? keptCapacity(building, which, direction, height_m, context)
+      : capacityAtHeight(building, which, direction, height_m, level, context, trace);
   const reduction = apply(
     REDUCTION,
     { ductility: at.ductility, period_s, corner_period_s: spectrum.compiled.plateau_to_s },

@@ -1,142 +1,55 @@
-/** One period per direction: measured, or the height formula and the storey stiffness combined. */
-import { exp, ln } from '../numeric/elementary.js';
+/**
+ * One period per direction. A measured one governs; otherwise one estimate per kind of evidence counts: the first formula of the chosen
+ * standard that the row can feed, and the best stiffness route it allows, combined in ln T.
+ */
 import type { Building, DirectionName, System } from '../building.js';
 import { apply, applyAny } from '../formula.js';
-import type { AnyRecord } from '../formula.js';
-import { MEASURED_SMALL, MEASURED_SMALL_BRITTLE, MEASURED_STRONG } from '../period/measured-records.js';
-import { UNIT_WEIGHT_KN_PER_M2 } from '../prior/unit-weight.js';
-import {
-  FLOOR_MASS,
-  GENERAL_CHAIN,
-  SINGLE_MASS,
-  SOFT_FIRST_COLUMNS,
-  SOFT_FIRST_WALLS,
-  UNIFORM_CHAIN,
-  WEIGHT_OF_AREA,
-} from '../stiffness/records.js';
+import type { AnyRecord, Inputs } from '../formula.js';
+import { exp, ln } from '../numeric/elementary.js';
+import { inputNames, toStrongShaking } from '../period/choose.js';
 import type { Trace } from '../trace.js';
-import type { AssessContext } from './context.js';
 import { COMBINED_PERIOD } from './combine.js';
+import type { AssessContext } from './context.js';
+import { chosenFormula, measured, routePeriods, stiffnessPeriod, strongPeriod } from './evidence.js';
+import type { MeasuredPeriod } from './evidence.js';
+import { formulaInputs } from './formula-inputs.js';
+
+/** Why a building has no period. */
+export const NO_PERIOD = 'no method gives a period: those the study leaves on need what is not on record';
 
 export type Evidence = 'measured' | 'formula' | 'stiffness' | 'formula and stiffness';
+/** What the counted formula was fitted to, or the kind of evidence where none counts. */
+export type PeriodBasis = 'design' | 'best-fit' | 'ambient' | 'measured' | 'mechanics';
 
 /** What is known of the period before the height is fixed. */
 export interface PeriodModel {
   readonly evidence: Evidence;
+  readonly basis: PeriodBasis;
   readonly formula: AnyRecord | null;
-  /** Measured or stiffness period, NaN when there is none. */
+  /** Inputs of the formula at a height; null: the height alone. */
+  readonly inputsAt: ((height_m: number) => Inputs) | null;
+  /** The record that lengthens a formula of small amplitude; null where it speaks of strong shaking. */
+  readonly strengthened: AnyRecord | null;
+  /** Measured or stiffness period at the height of record, NaN when there is none. */
   readonly period_s: number;
+  /** The stiffness period at another height, where it depends on it and the height is uncertain; else null. */
+  readonly stiffnessAt: ((height_m: number) => number) | null;
   /** Spread of ln T of that period. */
   readonly sigma: number;
   /** Spread of ln T of the shared input (mass), added once after combining. */
   readonly sharedSigma: number;
+  /** Ids of the measured record and the stiffness route that count, else null. */
+  readonly measuredId: string | null;
+  readonly routeId: string | null;
+  /** The route that counts rests on assumed values. */
+  readonly assumed: boolean;
+  /** Other estimates (s) that the counted ones are checked against. */
+  readonly checks: readonly number[];
 }
 
-const WALLS: ReadonlySet<System> = new Set<System>([
-  'concrete-shear-wall',
-  'reinforced-masonry-wall',
-  'confined-masonry-wall',
-  'unreinforced-masonry-wall',
-  'precast-tilt-up-wall',
-]);
-const BRITTLE: ReadonlySet<System> = new Set<System>(['concrete-infilled-frame', 'unreinforced-masonry-wall']);
+const SWAY_FORMULA = 'en1998-1-2004/period/gravity-sway';
 
-function measured(
-  building: Building,
-  direction: DirectionName,
-  system: System,
-  context: AssessContext,
-  trace?: Trace,
-): PeriodModel | null {
-  const value = building.measured_period_s[direction];
-  if (!(value > 0)) return null;
-  const strong = building.measured_amplitude === 'strong';
-  const method = strong ? MEASURED_STRONG : BRITTLE.has(system) ? MEASURED_SMALL_BRITTLE : MEASURED_SMALL;
-  const off = context.settings.period.switchedOff;
-  if (off.includes(method.id)) return null;
-  const period_s = apply(method, { period_s: value }, trace);
-  const { measuredStrong, measuredSmall, leastMeasured } = context.settings.spreads;
-  return {
-    evidence: 'measured',
-    formula: null,
-    period_s,
-    sigma: Math.max(strong ? measuredStrong : measuredSmall, leastMeasured),
-    sharedSigma: 0,
-  };
-}
-
-interface StiffnessPeriod {
-  readonly period_s: number;
-  readonly massSigma: number;
-}
-
-/** Period of the shear chain from the storey stiffness the row gives; null with the reason noted when something is missing. */
-function fromStiffness(
-  building: Building,
-  direction: DirectionName,
-  system: System,
-  context: AssessContext,
-  trace?: Trace,
-): StiffnessPeriod | null {
-  const given = building.storey_stiffness_kN_per_m[direction];
-  if (given === null) return null;
-  const storeys = Math.max(1, Math.round(building.storeys.value));
-  if (!(storeys >= 1) || (given.length > 1 && given.length !== storeys)) {
-    trace?.choice({
-      question: 'Period from storey stiffness',
-      taken: 'not used',
-      because: `${String(given.length)} storey stiffnesses for ${String(storeys)} storeys`,
-      others: [],
-    });
-    return null;
-  }
-  const weighed = building.seismic_weight_kN > 0;
-  const perArea = building.unit_weight_kN_per_m2 > 0 ? building.unit_weight_kN_per_m2 : UNIT_WEIGHT_KN_PER_M2[system];
-  if (!weighed && !(building.floor_area_m2.value > 0)) return null;
-  if (!weighed && !(building.unit_weight_kN_per_m2 > 0)) {
-    trace?.value('unit_weight_kN_per_m2', perArea, 'default', `unit weight of ${system} [judgement]`);
-  }
-  const weight_kN = weighed
-    ? building.seismic_weight_kN
-    : apply(WEIGHT_OF_AREA, { floor_area_m2: building.floor_area_m2.value, unit_weight_kN_per_m2: perArea }, trace);
-  const mass_t = apply(FLOOR_MASS, { weight_kN, storeys }, trace);
-  // T goes with the square root of the mass; a stated weight owes nothing to the floor area
-  const areaSigma = building.floor_area_m2.sigma;
-  const unitSigma = building.unit_weight_kN_per_m2 > 0 ? 0 : context.settings.spreads.unitWeight;
-  const massSigma = weighed ? 0 : 0.5 * Math.sqrt(unitSigma * unitSigma + areaSigma * areaSigma);
-  const springs = storeySprings(given, storeys, building, system, trace);
-  const alike = springs.every((value) => value === springs[0]);
-  const stiffness_kN_per_m = springs[0]!;
-  const period_s =
-    storeys === 1
-      ? apply(SINGLE_MASS, { mass_t, stiffness_kN_per_m }, trace)
-      : alike
-        ? apply(UNIFORM_CHAIN, { storeys, mass_t, stiffness_kN_per_m }, trace)
-        : apply(GENERAL_CHAIN, { masses_t: springs.map(() => mass_t), storey_stiffness_kN_per_m: springs }, trace);
-  return { period_s, massSigma };
-}
-
-/** One stiffness per storey, the first softened by its own height when the row gives it. */
-function storeySprings(
-  given: readonly number[],
-  storeys: number,
-  building: Building,
-  system: System,
-  trace?: Trace,
-): readonly number[] {
-  if (given.length > 1) return given;
-  const springs = new Array<number>(storeys).fill(given[0]!);
-  const first = building.first_storey_height_m;
-  const height = building.height_m.value;
-  if (storeys < 2 || !(first > 0) || !(height > first)) return springs;
-  const storey_height_m = (height - first) / (storeys - 1);
-  if (Math.abs(first / storey_height_m - 1) < 0.01) return springs;
-  const method = WALLS.has(system) ? SOFT_FIRST_WALLS : SOFT_FIRST_COLUMNS;
-  springs[0] = apply(method, { stiffness_kN_per_m: given[0]!, first_storey_height_m: first, storey_height_m }, trace);
-  return springs;
-}
-
-/** The evidence for the period of one direction. Null when nothing speaks (all methods switched off). */
+/** The evidence for the period of one direction. Null when nothing speaks: all methods switched off, or a formula that the row cannot feed. */
 export function periodModel(
   building: Building,
   direction: DirectionName,
@@ -145,37 +58,124 @@ export function periodModel(
   trace?: Trace,
 ): PeriodModel | null {
   const known = measured(building, direction, system, context, trace);
-  const formula = context.formulas[system];
-  if (known !== null) {
+  if (known !== null) return measuredModel(building, direction, system, context, known, trace);
+  const stiffness = stiffnessPeriod(building, direction, system, context, trace);
+  const found = chosenFormula(building, direction, system, context, trace);
+  // one sway on record is one piece of evidence, whichever name it goes by
+  const formula = stiffness !== null && found?.record.id === SWAY_FORMULA ? null : found;
+  if (stiffness === null && formula === null) return null;
+  if (stiffness !== null && formula !== null) {
     trace?.choice({
       question: 'Which evidence counts',
-      taken: 'the measured period',
-      because: 'a measurement governs; the others are checks',
-      others: [{ what: formula.title, why: 'a height formula knows only the height' }],
-    });
-    return known;
-  }
-  const off = context.settings.period.switchedOff;
-  const stiffness = off.includes('mechanics/period')
-    ? null
-    : fromStiffness(building, direction, system, context, trace);
-  const formulaOn = !off.includes(formula.id);
-  if (stiffness !== null && formulaOn) {
-    trace?.choice({
-      question: 'Which evidence counts',
-      taken: 'height formula and storey stiffness, combined',
+      taken: 'formula and stiffness, combined',
       because: 'two kinds of evidence; no measurement',
       others: [],
     });
   }
-  if (stiffness === null && !formulaOn) return null;
   return {
-    evidence: stiffness === null ? 'formula' : formulaOn ? 'formula and stiffness' : 'stiffness',
-    formula: formulaOn ? formula : null,
+    evidence: stiffness === null ? 'formula' : formula === null ? 'stiffness' : 'formula and stiffness',
+    basis: formula === null ? 'mechanics' : (formula.record.basis ?? 'design'),
+    formula: formula === null ? null : formula.record,
+    inputsAt: formula === null || formula.plain ? null : inputsOf(formula.record, building, direction, system),
+    strengthened: formula?.record.basis === 'ambient' ? toStrongShaking(system) : null,
     period_s: stiffness?.period_s ?? NaN,
-    sigma: context.settings.spreads.storeyStiffness,
+    stiffnessAt: stiffness === null ? null : atOtherHeights(building, direction, system, context),
+    sigma: stiffness?.sigma ?? NaN,
     sharedSigma: stiffness?.massSigma ?? 0,
+    measuredId: null,
+    routeId: stiffness?.id ?? null,
+    assumed: stiffness !== null && (stiffness.flags.length > 0 || stiffness.low_s !== stiffness.high_s),
+    checks: routePeriods(building, direction, system, context),
   };
+}
+
+function measuredModel(
+  building: Building,
+  direction: DirectionName,
+  system: System,
+  context: AssessContext,
+  known: MeasuredPeriod,
+  trace?: Trace,
+): PeriodModel {
+  const formula = chosenFormula(building, direction, system, context);
+  const stiffness = stiffnessPeriod(building, direction, system, context);
+  trace?.choice({
+    question: 'Which evidence counts',
+    taken: 'the measured period',
+    because: 'a measurement governs; the others are checks',
+    others: [
+      ...(formula === null ? [] : [{ what: formula.record.title, why: 'a formula knows less than a measurement' }]),
+      ...(stiffness === null ? [] : [{ what: stiffness.title, why: 'a model knows less than a measurement' }]),
+    ],
+  });
+  const checks = [...routePeriods(building, direction, system, context)];
+  if (formula !== null) checks.push(formulaPeriod(formula.record, building, direction, system));
+  if (stiffness !== null) checks.push(stiffness.period_s);
+  return {
+    evidence: 'measured',
+    basis: 'measured',
+    formula: null,
+    inputsAt: null,
+    strengthened: null,
+    period_s: known.period_s,
+    stiffnessAt: null,
+    sigma: known.sigma,
+    sharedSigma: 0,
+    measuredId: known.id,
+    routeId: null,
+    assumed: false,
+    checks,
+  };
+}
+
+function inputsOf(
+  record: AnyRecord,
+  building: Building,
+  direction: DirectionName,
+  system: System,
+): (height_m: number) => Inputs {
+  return (height_m) => {
+    const fed = formulaInputs(record, building, system, direction, height_m);
+    if (typeof fed === 'string') throw new Error(`${record.id}: ${fed}`);
+    return fed.inputs;
+  };
+}
+
+/** The period (s) of a formula at the height of record, lengthened for strong shaking where it is a law of small amplitude. */
+function formulaPeriod(record: AnyRecord, building: Building, direction: DirectionName, system: System): number {
+  const period_s = applyAny(record, inputsOf(record, building, direction, system)(building.height_m.value));
+  return record.basis === 'ambient' ? strongPeriod(toStrongShaking(system), period_s) : period_s;
+}
+
+/**
+ * True where the transverse period of a building of one system is the longitudinal one, whose `model` this is: a formula that reads
+ * nothing of a direction, and nothing on record that would make another one count across.
+ */
+export function alikeAcross(building: Building, model: PeriodModel, system: System, context: AssessContext): boolean {
+  if (model.evidence !== 'formula' || building.structure !== null) return false;
+  if (building.measured_period_s.transverse > 0 || building.storey_stiffness_kN_per_m.transverse !== null) return false;
+  const [first] = context.formulas[system];
+  if (first?.plain === true && first.record === model.formula) return true;
+  // without a structure on record the plan is all that tells the directions apart
+  return (
+    Object.is(building.plan_length_m, building.plan_width_m) ||
+    !context.formulas[system].some(({ record }) => inputNames(record).includes('plan_dimension_m'))
+  );
+}
+
+/** The stiffness period at the nodes of an inferred height; null where the height is known. */
+function atOtherHeights(
+  building: Building,
+  direction: DirectionName,
+  system: System,
+  context: AssessContext,
+): ((height_m: number) => number) | null {
+  if (!(building.height_m.sigma > 0)) return null;
+  // given storey stiffness depends on the height only where the first storey has a height of its own
+  if (building.structure === null && !(building.first_storey_height_m > 0)) return null;
+  return (value) =>
+    stiffnessPeriod({ ...building, height_m: { ...building.height_m, value } }, direction, system, context)?.period_s ??
+    NaN;
 }
 
 export interface PeriodEstimate {
@@ -186,31 +186,45 @@ export interface PeriodEstimate {
   readonly disagreement: number;
 }
 
+/** Largest over smallest of the checks and an estimate (s). */
+function apart(checks: readonly number[], period_s: number): number {
+  let low = period_s;
+  let high = period_s;
+  for (const check of checks) {
+    if (check < low) low = check;
+    if (check > high) high = check;
+  }
+  return high / low;
+}
+
 /** The period at a given height. */
 export function periodAt(model: PeriodModel, height_m: number, context: AssessContext, trace?: Trace): PeriodEstimate {
   const { spreads } = context.settings;
-  if (model.evidence === 'measured') return { period_s: model.period_s, sigma: model.sigma, disagreement: 1 };
+  if (model.evidence === 'measured')
+    return { period_s: model.period_s, sigma: model.sigma, disagreement: apart(model.checks, model.period_s) };
+  const byStiffness = model.stiffnessAt === null ? model.period_s : model.stiffnessAt(height_m);
   if (model.formula === null) {
     const sigma = Math.max(model.sigma, spreads.leastPeriod);
     return {
-      period_s: model.period_s,
+      period_s: byStiffness,
       sigma: Math.sqrt(sigma * sigma + model.sharedSigma * model.sharedSigma),
-      disagreement: 1,
+      disagreement: apart(model.checks, byStiffness),
     };
   }
-  const byFormula = applyAny(model.formula, { height_m }, trace);
-  if (Number.isNaN(model.period_s))
+  const printed = applyAny(model.formula, model.inputsAt === null ? { height_m } : model.inputsAt(height_m), trace);
+  const byFormula = model.strengthened === null ? printed : strongPeriod(model.strengthened, printed, trace);
+  if (Number.isNaN(byStiffness))
     return { period_s: byFormula, sigma: Math.max(spreads.heightFormula, spreads.leastPeriod), disagreement: 1 };
   const input = {
     period_1_s: byFormula,
     sigma_1: spreads.heightFormula,
-    period_2_s: model.period_s,
+    period_2_s: byStiffness,
     sigma_2: model.sigma,
   };
   const period_s = apply(COMBINED_PERIOD, input, trace);
   const w1 = 1 / (input.sigma_1 * input.sigma_1);
   const w2 = 1 / (input.sigma_2 * input.sigma_2);
-  const gap = ln(byFormula / model.period_s);
+  const gap = ln(byFormula / byStiffness);
   // two estimates: chi-square with one degree of freedom, the squared Birge ratio
   const chiSquare = ((w1 * w2) / (w1 + w2)) * gap * gap;
   const variance = Math.max(1, chiSquare) / (w1 + w2);
@@ -219,6 +233,6 @@ export function periodAt(model: PeriodModel, height_m: number, context: AssessCo
   return {
     period_s,
     sigma: Math.sqrt(sigma * sigma + share * share * model.sharedSigma * model.sharedSigma),
-    disagreement: exp(Math.abs(gap)),
+    disagreement: Math.max(exp(Math.abs(gap)), apart(model.checks, byFormula)),
   };
 }

@@ -44,6 +44,9 @@ export interface CodeHistorySettings {
 export interface Spreads {
   readonly heightFormula: number;
   readonly storeyStiffness: number;
+  readonly storeySections: number;
+  readonly storeyWalls: number;
+  readonly storeySway: number;
   readonly measuredStrong: number;
   readonly measuredSmall: number;
   readonly leastPeriod: number;
@@ -63,6 +66,9 @@ export interface Spreads {
 export const SPREADS: Spreads = {
   heightFormula: 0.3,
   storeyStiffness: 0.2,
+  storeySections: 0.3,
+  storeyWalls: 0.35,
+  storeySway: 0.3,
   measuredStrong: 0.1,
   measuredSmall: 0.2,
   leastPeriod: 0.2,
@@ -85,6 +91,8 @@ export interface AssessSettings {
   readonly period: {
     readonly standard: PeriodStandard;
     readonly basis: Basis;
+    /** Ids of formulas tried before those of the standard. */
+    readonly formulaFor: Partial<Readonly<Record<System, string>>>;
     readonly switchedOff: readonly string[];
   };
   readonly codeHistory: CodeHistorySettings | null;

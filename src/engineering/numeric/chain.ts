@@ -32,6 +32,8 @@ function ground(
 /**
  * First mode of a chain; `masses` (t) and `stiffness` (kN/m) bottom to top, same length N >= 1, all positive.
  * The eigenvalue is bracketed by Dunkerley (below) and Rayleigh with the self-weight sway (above) and bisected to the last bits.
+ * Dunkerley falls short by a factor of N at most, so every halving leaves a width of at most N 2^-j of the value: 60 halvings bring 120 storeys
+ * under 1e-16, and 80 are allowed. The walk is exact for masses and springs a few units in the last place from the given ones.
  * @throws RangeError for lists of different length or entries that are not positive.
  */
 export function chainMode(masses: readonly number[], stiffness: readonly number[]): ChainMode {

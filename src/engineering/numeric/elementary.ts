@@ -65,6 +65,7 @@ export function exp(x: number): number {
               (C5 +
                 r * (C6 + r * (C7 + r * (C8 + r * (C9 + r * (C10 + r * (C11 + r * (C12 + r * (C13 + r * C14)))))))))));
   const value = 1 + (r + r * r * tail);
+  if (n < LEAST) return 0.5 * value * POWERS[0]!;
   return n > 1023 ? value * 2 * POWERS[1023 - LEAST]! : value * POWERS[n - LEAST]!;
 }
 
@@ -120,4 +121,50 @@ export function sinOfAcute(x: number): number {
   let sum = 1;
   for (let k = 23; k >= 3; k -= 2) sum = 1 - (z / (k * (k - 1))) * sum;
   return x * sum;
+}
+
+/** π/2 in three parts, the first two with trailing zeros enough for exact products with whole numbers to 2^20 (after fdlibm). */
+const HALF_PI_HIGH = 1.57079632673412561417;
+const HALF_PI_MIDDLE = 6.0771005063039659766e-11;
+const HALF_PI_LOW = 2.02226624879595063154e-21;
+
+/** sin r and cos r for |r| up to π/4 by their series. */
+function sineSeries(r: number): number {
+  const z = r * r;
+  let sum = 1;
+  for (let k = 19; k >= 3; k -= 2) sum = 1 - (z / (k * (k - 1))) * sum;
+  return r * sum;
+}
+function cosineSeries(r: number): number {
+  const z = r * r;
+  let sum = 1;
+  for (let k = 20; k >= 2; k -= 2) sum = 1 - (z / (k * (k - 1))) * sum;
+  return sum;
+}
+
+/** sin(x + q π/2): x is brought to within π/4 of 0, which turns the quarter. */
+function sineOfQuarter(x: number, q: number): number {
+  if (!(Math.abs(x) <= 1e6)) throw new RangeError(`an angle within ±1,000,000 is needed, got ${String(x)}`);
+  const n = Math.round(x / 1.5707963267948966);
+  const r = x - n * HALF_PI_HIGH - n * HALF_PI_MIDDLE - n * HALF_PI_LOW;
+  switch ((((n + q) % 4) + 4) % 4) {
+    case 0:
+      return sineSeries(r);
+    case 1:
+      return cosineSeries(r);
+    case 2:
+      return -sineSeries(r);
+    default:
+      return -cosineSeries(r);
+  }
+}
+
+/** sin x, to about 2e-16 absolute. @throws RangeError beyond ±1,000,000. */
+export function sine(x: number): number {
+  return sineOfQuarter(x, 0);
+}
+
+/** cos x, to about 2e-16 absolute. @throws RangeError beyond ±1,000,000. */
+export function cosine(x: number): number {
+  return sineOfQuarter(x, 1);
 }

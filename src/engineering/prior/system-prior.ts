@@ -39,3 +39,31 @@ export function matchPrior(
 function within(value: number, from: number | null, to: number | null): boolean {
   return (from === null || value >= from) && (to === null || value <= to);
 }
+
+/** What of use and storeys a table tells apart: buildings of one class find the same groups. */
+export interface PriorClasses {
+  /** Uses that a group names. */
+  readonly uses: ReadonlySet<Use>;
+  /** Numbers of storeys at which a group begins or has ended. */
+  readonly storeys: readonly number[];
+}
+
+/** The classes of a table; without one all buildings are alike. */
+export function priorClasses(groups: readonly SystemPriorGroup[] | null): PriorClasses {
+  const uses = new Set<Use>();
+  const storeys = new Set<number>();
+  for (const { use, storeysFrom, storeysTo } of groups ?? []) {
+    if (use !== null) uses.add(use);
+    if (storeysFrom !== null) storeys.add(Math.ceil(storeysFrom));
+    if (storeysTo !== null) storeys.add(Math.floor(storeysTo) + 1);
+  }
+  return { uses, storeys: [...storeys] };
+}
+
+/** The class of a number of storeys: how many of the bounds it has reached. */
+export function storeysClass({ storeys: bounds }: PriorClasses, storeys: number): number {
+  const whole = Math.round(storeys);
+  let reached = 0;
+  for (const bound of bounds) if (whole >= bound) reached += 1;
+  return reached;
+}

@@ -6,15 +6,18 @@ import { exp } from '../numeric/elementary.js';
 import { INVERSE_ROOT_TWO_PI, cdfFrom, normalCdf } from '../numeric/normal.js';
 import type { Mixture } from './mixture.js';
 
+/** F as data, so that threads can read it too. */
 export interface Exceedance {
-  /** F(x), from the table; where parts have no spread, those above x, exactly. */
-  readonly count: (x: number) => number;
-  /** The same with those at x: differs from `count` only where parts have no spread. */
-  readonly countAt: (x: number) => number;
-  /** x with F(x) = n, to 1e-9 buildings, or the place where F steps over n. */
-  readonly threshold: (n: number) => number;
-  /** Chance of each building above the threshold; point masses at the threshold share the places left over equally. */
-  readonly chances: (threshold: number, n: number) => Float64Array;
+  /** Buildings in all. */
+  readonly n: number;
+  /** Smallest spread of any part. */
+  readonly least: number;
+  readonly low: number;
+  readonly step: number;
+  readonly value: Float64Array;
+  /** Where parts have no spread: the places at which they stand, increasing, and the weight of all above each, exactly. */
+  readonly places: Float64Array | null;
+  readonly above: Float64Array | null;
 }
 
 const POINTS = 2048;
@@ -22,27 +25,45 @@ const SD_CLASSES = 24;
 /** Point masses closer to the threshold than this are at it. */
 const AT = 1e-9;
 
+/** Tabulates F of all buildings. */
 export function exceedance(mixtures: readonly Mixture[]): Exceedance {
   const table = tabulate(mixtures);
-  const count = (x: number): number => {
-    const at = (x - table.low) / table.step;
-    if (at <= 0) return mixtures.length;
-    const i = Math.floor(at);
-    if (i >= POINTS - 1) return 0;
-    const f = at - i;
-    return table.value[i]! * (1 - f) + table.value[i + 1]! * f;
-  };
   const steps = table.least === 0 ? stepsOf(mixtures) : null;
-  return {
-    count: steps === null ? count : (x) => steps(x + AT),
-    countAt: steps === null ? count : (x) => steps(x - AT),
-    threshold: (n) => solve(mixtures, n, table),
-    chances: (threshold, n) => chancesAt(mixtures, threshold, n),
-  };
+  return { ...table, n: mixtures.length, places: steps?.places ?? null, above: steps?.above ?? null };
 }
 
-/** Weight of all parts with a mean above x, each taken at its mean. */
-function stepsOf(mixtures: readonly Mixture[]): (x: number) => number {
+/** F(x), from the table; where parts have no spread, those above x, exactly. */
+export function countAbove(table: Exceedance, x: number): number {
+  return table.places === null ? interpolated(table, x) : stepped(table, x + AT);
+}
+
+/** The same with those at x: differs only where parts have no spread. */
+export function countFrom(table: Exceedance, x: number): number {
+  return table.places === null ? interpolated(table, x) : stepped(table, x - AT);
+}
+
+function interpolated(table: Exceedance, x: number): number {
+  const at = (x - table.low) / table.step;
+  if (at <= 0) return table.n;
+  const i = Math.floor(at);
+  if (i >= POINTS - 1) return 0;
+  const f = at - i;
+  return table.value[i]! * (1 - f) + table.value[i + 1]! * f;
+}
+
+function stepped({ places, above }: Exceedance, x: number): number {
+  let low = 0;
+  let high = places!.length;
+  while (low < high) {
+    const middle = (low + high) >> 1;
+    if (places![middle]! > x) high = middle;
+    else low = middle + 1;
+  }
+  return above![low]!;
+}
+
+/** The places of all parts, each taken at its mean, with the weight above. */
+function stepsOf(mixtures: readonly Mixture[]): { readonly places: Float64Array; readonly above: Float64Array } {
   const weightOf = new Map<number, number>();
   for (const { mean, weight, from, to } of mixtures) {
     for (let i = from; i < to; i += 1) {
@@ -52,25 +73,10 @@ function stepsOf(mixtures: readonly Mixture[]): (x: number) => number {
   const places = Float64Array.from(weightOf.keys()).sort();
   const above = new Float64Array(places.length + 1);
   for (let i = places.length - 1; i >= 0; i -= 1) above[i] = above[i + 1]! + weightOf.get(places[i]!)!;
-  return (x) => {
-    let low = 0;
-    let high = places.length;
-    while (low < high) {
-      const middle = (low + high) >> 1;
-      if (places[middle]! > x) high = middle;
-      else low = middle + 1;
-    }
-    return above[low]!;
-  };
+  return { places, above };
 }
 
-interface Table {
-  /** Smallest spread of any part. */
-  readonly least: number;
-  readonly low: number;
-  readonly step: number;
-  readonly value: Float64Array;
-}
+type Table = Pick<Exceedance, 'least' | 'low' | 'step' | 'value'>;
 
 /**
  * F on a grid. Parts are first shared out over neighbouring grid points and neighbouring classes of spread (keeping their mean
@@ -162,8 +168,8 @@ function exact(mixtures: readonly Mixture[], x: number): { readonly count: numbe
   return { count, density: density * INVERSE_ROOT_TWO_PI };
 }
 
-/** Newton on the exact F from the table's answer, inside a bracket. */
-function solve(mixtures: readonly Mixture[], n: number, table: Table): number {
+/** x with F(x) = n, to 1e-9 buildings, or the place where F steps over n: Newton on the exact F from the table's answer, inside a bracket. */
+export function threshold(mixtures: readonly Mixture[], n: number, table: Exceedance): number {
   let i = 0;
   while (i < POINTS - 1 && table.value[i + 1]! > n) i += 1;
   let low = table.low - 1;
@@ -183,25 +189,39 @@ function solve(mixtures: readonly Mixture[], n: number, table: Table): number {
   return x;
 }
 
-function chancesAt(mixtures: readonly Mixture[], threshold: number, n: number): Float64Array {
-  const chance = new Float64Array(mixtures.length);
+/** Of each building the chance above a threshold, and the weight of its point masses at it. */
+export interface AboveThreshold {
+  readonly above: Float64Array;
+  readonly tied: Float64Array;
+}
+
+export function aboveThreshold(mixtures: readonly Mixture[], x: number): AboveThreshold {
+  const above = new Float64Array(mixtures.length);
   const tied = new Float64Array(mixtures.length);
-  let sum = 0;
-  let ties = 0;
   mixtures.forEach((m, b) => {
-    let above = 0;
+    let sum = 0;
     for (let i = m.from; i < m.to; i += 1) {
       const s = m.sd[i]!;
-      const gap = m.mean[i]! - threshold;
-      if (s > 0) above += m.weight[i]! * normalCdf(gap / s);
-      else if (gap > AT) above += m.weight[i]!;
+      const gap = m.mean[i]! - x;
+      if (s > 0) sum += m.weight[i]! * normalCdf(gap / s);
+      else if (gap > AT) sum += m.weight[i]!;
       else if (gap > -AT) tied[b]! += m.weight[i]!;
     }
     // weights sum to 1 but for the last bit
-    chance[b] = Math.min(1, above);
-    sum += chance[b];
-    ties += tied[b]!;
+    above[b] = Math.min(1, sum);
   });
+  return { above, tied };
+}
+
+/** Chance of each building to be among the first `n`: point masses at the threshold share the places left over equally. */
+export function sharedChances({ above, tied }: AboveThreshold, n: number): Float64Array {
+  const chance = above.slice();
+  let sum = 0;
+  let ties = 0;
+  for (let b = 0; b < chance.length; b += 1) {
+    sum += above[b]!;
+    ties += tied[b]!;
+  }
   if (ties > 0) {
     const share = Math.min(1, Math.max(0, (n - sum) / ties));
     for (let b = 0; b < chance.length; b += 1) chance[b]! += share * tied[b]!;

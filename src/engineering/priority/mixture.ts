@@ -3,6 +3,7 @@
  * (system, era) are added one by one and gathered into bins narrow against the spread, which keeps mean and variance exactly.
  */
 import { exp } from '../numeric/elementary.js';
+import type { Nodes } from '../numeric/nodes.js';
 import { INVERSE_ROOT_TWO_PI, cdfFrom, normalCdf } from '../numeric/normal.js';
 
 /** Parts `from` (inclusive) to `to` (exclusive) of arrays that many mixtures share: a million buildings are three arrays a pool block. */
@@ -22,6 +23,11 @@ export class MixturePool {
   private mean = new Float64Array(0);
   private sd = new Float64Array(0);
   private used = 0;
+
+  /** Gives the room of all mixtures taken so far again: for a caller that has copied them. */
+  restart(): void {
+    this.used = 0;
+  }
 
   /** Room for `parts` parts, to be filled by the caller. */
   take(parts: number): Mixture {
@@ -67,6 +73,32 @@ export class MixtureBuilder {
     this.mean[this.count] = mean;
     this.sd[this.count] = sd;
     this.count += 1;
+  }
+
+  /**
+   * Adds the parts of all `nodes` at once: their means are slope (value - less) + offset, with the values of the nodes from `first`
+   * on, their spread is `sd`.
+   */
+  addNodes(
+    weight: number,
+    nodes: Nodes,
+    values: Float64Array,
+    first: number,
+    less: number,
+    slope: number,
+    offset: number,
+    sd: number,
+  ): void {
+    if (!(weight > 0)) return;
+    const n = nodes.z.length;
+    while (this.count + n > this.weight.length) this.grow();
+    const { weight: weights, mean, sd: spreads, count } = this;
+    for (let j = 0; j < n; j += 1) {
+      weights[count + j] = weight * nodes.weight[j]!;
+      mean[count + j] = slope * (values[first + j]! - less) + offset;
+      spreads[count + j] = sd;
+    }
+    this.count = count + n;
   }
 
   /** The gathered mixture, weights summing to 1, means increasing. @throws Error when nothing was added. */

@@ -5,14 +5,15 @@
 import { exp } from '../numeric/elementary.js';
 import { mixtureCdf, mixtureMoments, mixtureQuantile } from './mixture.js';
 import type { Mixture } from './mixture.js';
-import { exceedance } from './exceedance.js';
-import type { Exceedance } from './exceedance.js';
+import { aboveThreshold, countAbove, countFrom, exceedance, sharedChances, threshold } from './exceedance.js';
+import type { AboveThreshold, Exceedance } from './exceedance.js';
 import { beats } from './pairwise.js';
 import { SIMULATED_UNDER, simulate } from './simulate.js';
 import type { Simulated } from './simulate.js';
 
-export interface RankInput {
-  readonly id: readonly string[];
+export interface RankInput<Ids extends readonly string[] | Int32Array = readonly string[]> {
+  /** Ids; where there are too many to simulate, numbers in their order do. */
+  readonly id: Ids;
   readonly mixtures: readonly Mixture[];
   /** Median ln S of each building. */
   readonly median: ArrayLike<number>;
@@ -51,29 +52,37 @@ export function relativePriority(lnPriority: number, lnOfMedian: number): number
 }
 
 /**
- * Order by median, the largest first; equal after rounding: larger people first, then id in code units. Keys and indices are packed
- * into 64-bit words, because a native sort of words is ten times as fast as a comparing one.
+ * Order of values, the largest first, and of equal ones by index; each with the steps of 1e-9 it lies below the largest: values of
+ * equal steps are equal. Keys and indices are packed into 64-bit words, because a native sort of words is ten times as fast as a
+ * comparing one; 2^24 values at most.
  */
-export function orderOf({ id, median, people }: RankInput): Int32Array {
-  const n = id.length;
+export function fallingOrder(values: ArrayLike<number>): { readonly order: Int32Array; readonly steps: Float64Array } {
+  const n = values.length;
   let largest = -Infinity;
-  for (let i = 0; i < n; i += 1) if (median[i]! > largest) largest = median[i]!;
+  for (let i = 0; i < n; i += 1) if (values[i]! > largest) largest = values[i]!;
   const words = new BigUint64Array(n);
   const halves = new Uint32Array(words.buffer);
-  const key = new Float64Array(n);
+  const steps = new Float64Array(n);
   for (let i = 0; i < n; i += 1) {
-    // 40 bits of steps of 1e-9 below the largest reach 1,099 units of ln S; farther down all are equal, and sorted below
-    const steps = Math.min(Math.round((largest - median[i]!) * 1e9), 0xffffffffff);
-    key[i] = steps;
-    halves[2 * i + 1] = Math.floor(steps / 256);
-    halves[2 * i] = ((steps % 256) * 0x1000000 + i) >>> 0;
+    // 40 bits of steps reach 1,099 units; farther down all are equal, and sorted below
+    const step = Math.min(Math.round((largest - values[i]!) * 1e9), 0xffffffffff);
+    steps[i] = step;
+    halves[2 * i + 1] = Math.floor(step / 256);
+    halves[2 * i] = ((step % 256) * 0x1000000 + i) >>> 0;
   }
   words.sort();
   const order = new Int32Array(n);
   for (let place = 0; place < n; place += 1) order[place] = halves[2 * place]! & 0xffffff;
+  return { order, steps };
+}
+
+/** Order by median, the largest first; equal after rounding: larger people first, then id in code units. */
+export function orderOf({ id, median, people }: RankInput<readonly string[] | Int32Array>): Int32Array {
+  const n = id.length;
+  const { order, steps } = fallingOrder(median);
   for (let place = 0; place < n;) {
     let end = place + 1;
-    while (end < n && key[order[end]!] === key[order[place]!]) end += 1;
+    while (end < n && steps[order[end]!] === steps[order[place]!]) end += 1;
     if (end - place > 1) {
       order
         .subarray(place, end)
@@ -84,19 +93,61 @@ export function orderOf({ id, median, people }: RankInput): Int32Array {
   return order;
 }
 
+/** What the chances and bands of every building are read from. */
+export interface RankBasis {
+  readonly order: Int32Array;
+  readonly curve: Exceedance;
+  /** ln S at which the list ends; -Infinity when it holds every building. */
+  readonly threshold: number;
+}
+
+/** Order, expected numbers above and threshold of a list of `listSize` places. */
+export function rankBasis(input: RankInput<readonly string[] | Int32Array>, listSize: number): RankBasis {
+  const curve = exceedance(input.mixtures);
+  const holdsAll = listSize >= input.id.length;
+  return {
+    order: orderOf(input),
+    curve,
+    threshold: holdsAll ? -Infinity : threshold(input.mixtures, listSize, curve),
+  };
+}
+
+/** Chance and ends of the band of some of the buildings, in closed form; the chances still without those tied at the threshold. */
+export interface Bands extends AboveThreshold {
+  readonly rankBest: Int32Array;
+  readonly rankWorst: Int32Array;
+}
+
+/** The bands of `mixtures`, all of the buildings or some. */
+export function bandsOf(mixtures: readonly Mixture[], { curve, threshold: x }: Omit<RankBasis, 'order'>): Bands {
+  const rankBest = new Int32Array(mixtures.length);
+  const rankWorst = new Int32Array(mixtures.length);
+  mixtures.forEach((m, i) => {
+    const high = mixtureQuantile(m, 0.95, Z95, 1e-2);
+    const low = mixtureQuantile(m, 0.05, -Z95, 1e-2);
+    rankBest[i] = bandEnd(countAbove(curve, high), m, high, curve.n, AT);
+    rankWorst[i] = bandEnd(countFrom(curve, low), m, low, curve.n, -AT);
+  });
+  return { ...aboveThreshold(mixtures, x), rankBest, rankWorst };
+}
+
 /** Ranks `input` with a list of `listSize` places (at least 1); under 200 buildings chances and bands are simulated from `seed`. */
-export function rankAll(input: RankInput, listSize: number, seed: number): Ranking {
+export function rankAll(
+  input: RankInput<readonly string[] | Int32Array>,
+  listSize: number,
+  seed: number,
+  basis: RankBasis = rankBasis(input, listSize),
+  tieGroup: Int32Array = tieGroups(basis.order, input.mixtures),
+  bands?: Bands,
+): Ranking {
   const n = input.id.length;
-  const order = orderOf(input);
+  const { order } = basis;
   const rank = new Int32Array(n);
   order.forEach((building, place) => (rank[building] = place + 1));
-  const all = listSize >= n;
-  const curve = exceedance(input.mixtures);
-  const threshold = all ? -Infinity : curve.threshold(listSize);
   const { chance, rankBest, rankWorst } =
     n < SIMULATED_UNDER
-      ? simulate(input.id, input.mixtures, listSize, seed)
-      : closed(input.mixtures, curve, all ? null : threshold, listSize);
+      ? simulate(Array.from<string | number>(input.id).map(String), input.mixtures, listSize, seed)
+      : closed(bands ?? bandsOf(input.mixtures, basis), listSize);
   // the rank itself lies in its band, also where equal medians or few buildings would put it a place outside
   for (let i = 0; i < n; i += 1) {
     rankBest[i] = Math.min(rankBest[i]!, rank[i]!);
@@ -110,61 +161,53 @@ export function rankAll(input: RankInput, listSize: number, seed: number): Ranki
     chance,
     rankBest,
     rankWorst,
-    tieGroup: tieGroups(order, input.mixtures),
-    threshold,
+    tieGroup,
+    threshold: basis.threshold,
     expectedWrong,
     largestEqualBlock: largestBlock(order, input.median),
   };
 }
 
-function closed(
-  mixtures: readonly Mixture[],
-  curve: Exceedance,
-  threshold: number | null,
-  listSize: number,
-): Simulated {
-  const n = mixtures.length;
-  const rankBest = new Int32Array(n);
-  const rankWorst = new Int32Array(n);
-  mixtures.forEach((m, i) => {
-    rankBest[i] = bandEnd(curve.count, m, mixtureQuantile(m, 0.95, Z95, 1e-2), n, AT);
-    rankWorst[i] = bandEnd(curve.countAt, m, mixtureQuantile(m, 0.05, -Z95, 1e-2), n, -AT);
-  });
-  return {
-    chance: threshold === null ? new Float64Array(n).fill(1) : curve.chances(threshold, listSize),
-    rankBest,
-    rankWorst,
-  };
+function closed({ rankBest, rankWorst, ...above }: Bands, listSize: number): Simulated {
+  const n = rankBest.length;
+  return { chance: listSize >= n ? new Float64Array(n).fill(1) : sharedChances(above, listSize), rankBest, rankWorst };
 }
 
 /** Where parts have no spread the best rank counts only those above, the worst those at the same place too. */
 const AT = 1e-9;
 
-/** Expected rank of a building whose ln S is x: one more than the others expected above it. */
-function bandEnd(count: (x: number) => number, own: Mixture, x: number, n: number, at: number): number {
-  const others = count(x) - (1 - mixtureCdf(own, x + at));
+/** Expected rank of a building whose ln S is x: one more than the others expected above it, of `count` with its own share. */
+function bandEnd(count: number, own: Mixture, x: number, n: number, at: number): number {
+  const others = count - (1 - mixtureCdf(own, x + at));
   return Math.min(n, Math.max(1, Math.round(1 + others)));
 }
 
 /** From its leader down to the first building that the leader beats with a chance of at least 0.80; contiguous. */
-function tieGroups(order: Int32Array, mixtures: readonly Mixture[]): Int32Array {
+export function tieGroups(order: Int32Array, mixtures: readonly Mixture[]): Int32Array {
   const group = new Int32Array(order.length);
-  let leader = 0;
+  if (order.length === 0) return group;
+  let leader = mixtures[order[0]!]!;
+  let moments = mixtureMoments(leader);
   let label = 1;
   for (let place = 0; place < order.length; place += 1) {
-    if (place > leader && toldApart(mixtures[order[leader]!]!, mixtures[order[place]!]!)) {
-      leader = place;
-      label += 1;
+    const other = mixtures[order[place]!]!;
+    if (other !== leader) {
+      const own = mixtureMoments(other);
+      if (toldApart(leader, moments, other, own)) {
+        leader = other;
+        moments = own;
+        label += 1;
+      }
     }
     group[order[place]!] = label;
   }
   return group;
 }
 
+type Moments = ReturnType<typeof mixtureMoments>;
+
 /** Settled from means and spreads where that is clear, by the whole mixtures otherwise. */
-function toldApart(a: Mixture, b: Mixture): boolean {
-  const p = mixtureMoments(a);
-  const q = mixtureMoments(b);
+function toldApart(a: Mixture, p: Moments, b: Mixture, q: Moments): boolean {
   const spread = Math.sqrt(p.sd * p.sd + q.sd * q.sd);
   if (spread > 0) {
     const z = (p.mean - q.mean) / spread;

@@ -5,6 +5,7 @@
 import { BUILDING_NUMBERS, BUILDING_WORDS } from '../../engineering/building-columns.js';
 import type { PageData } from '../../engineering/page-contract.js';
 import { RESULT_COLUMNS } from '../../engineering/results.js';
+import { STRUCTURE_NUMBERS, STRUCTURE_WORDS } from '../../engineering/structure-columns.js';
 
 type Cell = number | string | null;
 
@@ -33,6 +34,7 @@ export function packColumn(values: ArrayLike<Cell>, digits?: number): Packed {
 export function packPage(data: PageData): unknown {
   const { buildings } = data;
   const { inputs } = buildings;
+  const { structure } = inputs;
   return {
     ...data,
     buildings: {
@@ -43,6 +45,13 @@ export function packPage(data: PageData): unknown {
         id: packColumn(inputs.id),
         numbers: Object.fromEntries(BUILDING_NUMBERS.map((name) => [name, packColumn(inputs.numbers[name])])),
         words: Object.fromEntries(BUILDING_WORDS.map((name) => [name, packColumn(inputs.words[name])])),
+        structure:
+          structure === undefined
+            ? undefined
+            : {
+                numbers: Object.fromEntries(STRUCTURE_NUMBERS.map((name) => [name, packColumn(structure.numbers[name])])),
+                words: Object.fromEntries(STRUCTURE_WORDS.map((name) => [name, packColumn(structure.words[name])])),
+              },
       },
       name: packColumn(buildings.name),
       group: packColumn(buildings.group),

@@ -193,6 +193,21 @@ describe('assess', () => {
     expect(reason(building({ site_class: 'constructor' }), strict)).toContain('"constructor"');
   });
 
+  it('gives every building the same bits whatever was assessed before it', () => {
+    const backwards = compileContext(SETTINGS);
+    const kept = new Map([...PORTFOLIO].reverse().map((one) => [one.id, assess(one, backwards)]));
+    for (const one of PORTFOLIO) {
+      const fresh = assess(one, compileContext(SETTINGS));
+      const other = kept.get(one.id)!;
+      if (!isRanked(fresh) || !isRanked(other)) throw new Error('not ranked');
+      const { mixture: a, ...rest } = fresh;
+      const { mixture: b, ...others } = other;
+      expect(others).toEqual(rest);
+      for (const name of ['weight', 'mean', 'sd'] as const)
+        expect(b[name].slice(b.from, b.to), name).toEqual(a[name].slice(a.from, a.to));
+    }
+  });
+
   it('flags weak types by the chance of the cases that are', () => {
     const result = ranked(building({ system: null, years: [1930], storeys: given(2), height_m: given(7) }));
     expect(result.weakType).toBe('unreinforced-masonry');

@@ -1,6 +1,6 @@
 import fc from 'fast-check';
 import { describe, expect, it } from 'vitest';
-import { exp, ln, sinOfAcute } from '../../../src/engineering/numeric/elementary.js';
+import { cosine, exp, ln, sinOfAcute, sine } from '../../../src/engineering/numeric/elementary.js';
 
 // Judge: the language's own functions, which are within one unit in the last place on every engine.
 const close = (value: number, judge: number): void => {
@@ -20,6 +20,7 @@ describe('exp', () => {
     expect(exp(-1000)).toBe(0);
     expect(exp(NaN)).toBeNaN();
     expect(exp(-744)).toBeGreaterThan(0);
+    expect(exp(-745.1)).toBe(Math.exp(-745.1));
   });
 });
 
@@ -61,5 +62,23 @@ describe('sinOfAcute', () => {
     );
     expect(sinOfAcute(Math.PI / 2)).toBeCloseTo(1, 15);
     expect(() => sinOfAcute(2)).toThrow(RangeError);
+  });
+});
+
+describe('sine and cosine', () => {
+  it('agree with Math.sin and Math.cos', () => {
+    fc.assert(
+      fc.property(fc.double({ min: -1000, max: 1000, noNaN: true }), (x) => {
+        expect(Math.abs(sine(x) - Math.sin(x))).toBeLessThanOrEqual(2.3e-16);
+        expect(Math.abs(cosine(x) - Math.cos(x))).toBeLessThanOrEqual(2.3e-16);
+      }),
+      { numRuns: 20_000, seed: 6 },
+    );
+  });
+  it('are exact at 0 and refuse what they cannot bring near 0', () => {
+    expect(sine(0)).toBe(0);
+    expect(cosine(0)).toBe(1);
+    expect(() => sine(1e7)).toThrow(RangeError);
+    expect(() => cosine(NaN)).toThrow(RangeError);
   });
 });

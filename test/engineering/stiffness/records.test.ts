@@ -2,12 +2,8 @@ import fc from 'fast-check';
 import { describe, expect, it } from 'vitest';
 import { apply } from '../../../src/engineering/formula.js';
 import { FREQUENCY_TO_PERIOD } from '../../../src/engineering/period/measured-records.js';
-import {
-  FIRST_STOREY_SHARE,
-  GENERAL_CHAIN,
-  SINGLE_MASS,
-  UNIFORM_CHAIN,
-} from '../../../src/engineering/stiffness/records.js';
+import { FIRST_STOREY_SHARE } from '../../../src/engineering/stiffness/chain-shape.js';
+import { GENERAL_CHAIN, SINGLE_MASS, UNIFORM_CHAIN } from '../../../src/engineering/stiffness/chain.js';
 
 const mass = fc.double({ min: 10, max: 5000, noNaN: true });
 const spring = fc.double({ min: 1e3, max: 1e7, noNaN: true });

@@ -21,6 +21,13 @@ export function PeriodsSection({ data, spectrum, heights }: { data: PageData; sp
     h(ChartFigure, { chart: spectrum, hint: held }),
     slope === '' ? null : h('p', { class: 'quiet' }, slope),
     h(ChartFigure, { chart: heights, hint: PICK }),
+    h('h3', null, 'Estimates side by side, by lateral system'),
+    h(
+      'p',
+      { class: 'quiet' },
+      'What every published formula and every stiffness route makes of the buildings of one system, and which of them counts. For one building they stand in its sheet.',
+    ),
+    h('div', { id: 'class-estimates' }),
   );
 }
 

@@ -59,6 +59,10 @@ ol.hand > li.heading { font-weight: 600; border-bottom: 1px solid var(--ink-soft
 ol.hand .maths { font: .93em/1.6 ui-monospace, "SF Mono", Menlo, Consolas, "DejaVu Sans Mono", monospace; margin: .15rem 0 .15rem 1rem; overflow-wrap: anywhere; }
 ol.hand .result { font-weight: 600; }
 ol.hand .from { color: var(--ink-soft); font-size: .92em; margin-left: 1rem; }
+.estimates .from { color: var(--ink-soft); font-size: .88em; font-weight: 400; } .estimates th[scope=row] { font-weight: 400; min-width: 14rem; } .estimates td:last-child { min-width: 14rem; }
+.bars { position: relative; display: block; height: .7rem; min-width: 9rem; margin-top: .25rem; }
+.bar { position: absolute; top: .25rem; height: .2rem; background: var(--mark-soft); border-radius: 2px; } .bar.strong { top: .15rem; height: .4rem; background: var(--accent); }
+.bar-mark { position: absolute; top: 0; width: 2px; height: .7rem; background: var(--ink); print-color-adjust: exact; }
 .agrees { border: 1px solid var(--ink-soft); border-radius: 4px; padding: .5rem .8rem; overflow-wrap: anywhere; }
 @media (min-width: 861px) { .narrow-only { display: none; } }
 @media print { .narrow-only { display: none; } }

@@ -1,0 +1,98 @@
+/** What a mode of the shear building yields beside its period: participation, effective mass, drift. */
+import { record } from '../formula.js';
+import type { AnyRecord, Family } from '../formula.js';
+import { chainMode, chainProperties } from '../numeric/chain.js';
+import { chainModeOf, driftFactor } from '../numeric/chain-modes.js';
+import { MODE } from './chain.js';
+import type { ChainInput, ModeInput } from './chain.js';
+import { MASSES, STIFFNESSES, mechanics } from './specs.js';
+import type { None } from './specs.js';
+
+const firstStoreyShare: Family<ChainInput, None> = {
+  id: 'stiffness/first-storey-share',
+  yields: 'first_storey_share',
+  unit: null,
+  symbol: 'φ₁/φ_roof',
+  inputs: [MASSES, STIFFNESSES],
+  expression: null,
+  procedure: 'first-mode displacement of the first floor over that of the roof',
+  evaluate: ({ masses_t, storey_stiffness_kN_per_m }) =>
+    chainProperties(masses_t, chainMode(masses_t, storey_stiffness_kN_per_m)).firstStoreyShare,
+};
+
+const largestDrift: Family<ChainInput, None> = {
+  id: 'stiffness/drift-factor',
+  yields: 'drift_factor',
+  unit: null,
+  symbol: 'β₂',
+  inputs: [MASSES, STIFFNESSES],
+  expression: null,
+  procedure: 'largest storey drift of the first mode over the mean one, storeys of equal height',
+  evaluate: ({ masses_t, storey_stiffness_kN_per_m }) => driftFactor(chainMode(masses_t, storey_stiffness_kN_per_m)),
+};
+
+const participation: Family<ModeInput, None> = {
+  id: 'stiffness/participation',
+  yields: 'participation',
+  unit: null,
+  symbol: 'Γ',
+  inputs: [MASSES, STIFFNESSES, MODE],
+  expression: null,
+  procedure: 'Γ = Σmφ / Σmφ², φ the shape of the mode, 1 at the roof',
+  evaluate: ({ masses_t, storey_stiffness_kN_per_m, mode }) =>
+    chainProperties(masses_t, chainModeOf(masses_t, storey_stiffness_kN_per_m, mode)).participation,
+};
+
+const effectiveShare: Family<ModeInput, None> = {
+  ...participation,
+  id: 'stiffness/effective-mass-share',
+  yields: 'effective_mass_share',
+  symbol: 'M*/M',
+  procedure: 'M*/M = (Σmφ)² / (Σmφ² Σm), φ the shape of the mode',
+  evaluate: ({ masses_t, storey_stiffness_kN_per_m, mode }) =>
+    chainProperties(masses_t, chainModeOf(masses_t, storey_stiffness_kN_per_m, mode)).effectiveMassShare,
+};
+
+export const FIRST_STOREY_SHARE = record({
+  id: 'mechanics/drift/first-storey-share',
+  title: "First storey's share of roof displacement",
+  family: firstStoreyShare,
+  constants: {},
+  source: mechanics('first mode of the shear building'),
+  verified: 'mechanics',
+  limits: [],
+});
+const DRIFT_FACTOR = record({
+  id: 'mechanics/drift/largest-over-mean',
+  title: 'Largest storey drift over the mean one',
+  family: largestDrift,
+  constants: {},
+  source: mechanics('first mode of the shear building'),
+  verified: 'mechanics',
+  limits: [],
+});
+const PARTICIPATION = record({
+  id: 'mechanics/participation/roof',
+  title: 'Roof participation of a mode',
+  family: participation,
+  constants: {},
+  source: mechanics('modal analysis, textbook'),
+  verified: 'restated',
+  limits: [],
+});
+const EFFECTIVE_SHARE = record({
+  id: 'mechanics/mass/effective-share',
+  title: 'Effective mass of a mode over the total',
+  family: effectiveShare,
+  constants: {},
+  source: mechanics('modal analysis, textbook'),
+  verified: 'restated',
+  limits: [],
+});
+
+export const CHAIN_SHAPE_RECORDS: readonly AnyRecord[] = [
+  FIRST_STOREY_SHARE,
+  DRIFT_FACTOR,
+  PARTICIPATION,
+  EFFECTIVE_SHARE,
+];

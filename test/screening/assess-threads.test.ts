@@ -1,0 +1,82 @@
+import { join } from 'node:path';
+import { beforeAll, describe, expect, it } from 'vitest';
+import * as source from '../../src/screening/assess-threads.js';
+import type { BlockResult } from '../../src/screening/assess-block.js';
+import { readRun } from '../../src/screening/page-data.js';
+import { blocksOf, readBuildings, readPools } from '../../src/screening/read-buildings.js';
+import { openStudyDatabase, screen } from '../../src/screening/screen.js';
+import { loadStudy } from '../../src/study/load.js';
+import { buildCommand } from '../support/cli.js';
+import { MADE, demoCopy } from '../support/study-folder.js';
+
+type Built = typeof source;
+
+// the threads need the built body; from the source everything runs in this thread
+let built: Built;
+
+beforeAll(async () => {
+  buildCommand();
+  built = (await import(join(process.cwd(), 'dist/screening/assess-threads.js'))) as Built;
+}, 120_000);
+
+describe('startAssessor', () => {
+  it('gives the same bits in three threads as in this one', { timeout: 60_000 }, async () => {
+    const loaded = await loadStudy(demoCopy());
+    const db = await openStudyDatabase(loaded);
+    const here = source.startAssessor(1);
+    const there = built.startAssessor(3);
+    try {
+      const { runId, taken } = await screen(db, loaded, { made: MADE });
+      const { settings } = await readRun(db, runId);
+      const pools = await readPools(db, taken.inventoryId);
+      const all = await readBuildings(db, taken.inventoryId, { from: 0, to: taken.buildings });
+      const parts = [...blocksOf(all, 0, 50)];
+      const results = async (assessor: typeof here): Promise<readonly BlockResult[]> => {
+        assessor.begin(settings, pools);
+        return Promise.all(parts.map(({ block }) => assessor.assess(block)));
+      };
+      const [one, many] = [await results(here), await results(there)];
+      expect(one.reduce((sum, { ranked }) => sum + ranked.length, 0)).toBeGreaterThan(200);
+      one.forEach((result, i) => {
+        const other = many[i]!;
+        expect(Object.keys(other.numbers)).toEqual(Object.keys(result.numbers));
+        for (const [name, values] of Object.entries(result.numbers))
+          expect(Array.from(other.numbers[name]!), name).toEqual(Array.from(values));
+        expect(other.words).toEqual(result.words);
+        for (const [name, { words, codes }] of Object.entries(result.texts)) {
+          expect(other.texts[name]!.words, name).toEqual(words);
+          expect(other.texts[name]!.codes, name).toEqual(codes);
+        }
+        expect(other.ranked).toEqual(result.ranked);
+        expect(other.demand_g).toEqual(result.demand_g);
+        for (const name of ['weight', 'mean', 'sd', 'start'] as const)
+          expect(Array.from(other.mixtures[name]), name).toEqual(Array.from(result.mixtures[name]));
+      });
+    } finally {
+      await there.close();
+      await here.close();
+      db.close();
+    }
+  });
+
+  it('passes on what goes wrong in a thread', async () => {
+    const assessor = built.startAssessor(2);
+    try {
+      const block = { columns: { id: [], numbers: {}, words: {} }, notRanked: [], rows: 0 } as unknown;
+      await expect(assessor.assess(block as Parameters<typeof assessor.assess>[0])).rejects.toThrow(
+        'a block before the settings',
+      );
+    } finally {
+      await assessor.close();
+    }
+  });
+});
+
+describe('threadsFor', () => {
+  it('takes one thread for a small inventory and wherever the built body is missing', () => {
+    expect(built.threadsFor(9_999)).toBe(1);
+    expect(built.threadsFor(1_000_000)).toBeGreaterThanOrEqual(1);
+    expect(built.threadsFor(1_000_000)).toBeLessThanOrEqual(4);
+    expect(source.threadsFor(1_000_000)).toBe(1);
+  });
+});
