@@ -27,7 +27,7 @@ export interface Assessor {
 }
 
 /** Below it a thread's start costs more than it saves. */
-const WORTH_THREADS = 10_000;
+const WORTH_THREADS = 50_000;
 const MOST_THREADS = 4;
 
 const BODY = new URL('./assess-worker.js', import.meta.url);

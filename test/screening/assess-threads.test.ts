@@ -74,7 +74,7 @@ describe('startAssessor', () => {
 
 describe('threadsFor', () => {
   it('takes one thread for a small inventory and wherever the built body is missing', () => {
-    expect(built.threadsFor(9_999)).toBe(1);
+    expect(built.threadsFor(49_999)).toBe(1);
     expect(built.threadsFor(1_000_000)).toBeGreaterThanOrEqual(1);
     expect(built.threadsFor(1_000_000)).toBeLessThanOrEqual(4);
     expect(source.threadsFor(1_000_000)).toBe(1);
