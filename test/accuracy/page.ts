@@ -11,7 +11,7 @@ const KINDS: Readonly<Record<Kind, string>> = {
 };
 
 /** A relative error: two digits, and 0 under what a double can tell. */
-function share(value: number): string {
+export function share(value: number): string {
   if (value < 1e-12) return '0';
   return value >= 1e-4 ? `${(value * 100).toPrecision(2)} %` : `${(value * 100).toExponential(0)} %`;
 }
