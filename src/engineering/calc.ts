@@ -1,9 +1,11 @@
 /** One record of the register evaluated alone, from inputs written as text: what `calc` and the library do. */
 import { UserError, showValue } from '../errors.js';
 import { readAssignments } from './calc-inputs.js';
-import { apply } from './formula.js';
-import type { AnyRecord, InputSpec, InputValue, Limit, MethodRecord } from './formula.js';
+import { apply, describeSpec, misfit } from './formula.js';
+import type { AnyRecord, Inputs, InputSpec, InputValue, Limit, MethodRecord } from './formula.js';
 import { findMethod, METHODS } from './methods.js';
+import type { SpectrumFamily } from './spectrum/family.js';
+import { flagWords } from './spectrum/flags.js';
 import { Trace } from './trace.js';
 import { findUnit } from './units.js';
 
@@ -64,6 +66,8 @@ export function calculate(method: AnyRecord, assignments: readonly string[]): Ca
     const entry = given.get(spec.name);
     const value = entry?.value ?? spec.fallback;
     if (value === undefined) continue;
+    const wrong = misfit(spec, value);
+    if (wrong !== null) throw new UserError(`${method.id}: ${spec.name}: ${wrong}`);
     const origin = entry === undefined ? 'default' : entry.conversion === null ? 'given' : 'converted';
     trace.value(
       spec.name,
@@ -76,7 +80,14 @@ export function calculate(method: AnyRecord, assignments: readonly string[]): Ca
   const flags = method.limits.flatMap((limit) => checkLimit(method, limit, inputs[limit.input]));
   const own = Object.fromEntries(specs.map(({ name }) => [name, inputs[name]]));
   const value = evaluate(method, own, trace);
+  flags.push(...spectrumFlags(method, own as Inputs));
   return { method, inputs, value, unit: method.family.unit, flags, trace };
+}
+
+/** What a compiled spectrum says about its own parameters, in words. */
+function spectrumFlags(method: AnyRecord, inputs: Inputs): readonly string[] {
+  const { compile } = method.family as Partial<Pick<SpectrumFamily<Inputs>, 'compile'>>;
+  return compile === undefined ? [] : flagWords(compile(inputs));
 }
 
 function evaluate(method: AnyRecord, inputs: Readonly<Record<string, unknown>>, trace: Trace): number {
@@ -97,8 +108,10 @@ function evaluate(method: AnyRecord, inputs: Readonly<Record<string, unknown>>, 
 export function describeInput(spec: InputSpec): string {
   const words = spec.words === undefined ? '' : `, one of ${spec.words.join(', ')}`;
   const list = spec.kind === 'list' ? ', a list separated by commas' : '';
+  const bounded = spec.from ?? spec.above ?? spec.to ?? spec.least;
+  const range = bounded === undefined ? '' : `, ${describeSpec(spec)}`;
   const fallback = spec.fallback === undefined ? '' : `, ${String(spec.fallback)} when left out`;
-  return `${spec.name} (${spec.meaning}${words}${list}${fallback})`;
+  return `${spec.name} (${spec.meaning}${words}${list}${range}${fallback})`;
 }
 
 /** Quantities that a limit is on and the formula itself does not take, such as the mean storey height: they may be given to be checked. */

@@ -2,7 +2,7 @@
 import { evaluateExpression, parseExpression, writeExpression } from './expression.js';
 import { formatCount, formatNumber, formatQuantity, shownUnit, unitLabel, textInDisplay } from './format.js';
 import type { Display } from './format.js';
-import type { InputValue } from './formula.js';
+import type { Family, InputValue } from './formula.js';
 import { cite } from './source.js';
 import { segmentAt } from './spectrum/compiled.js';
 import type { SpectrumFamily } from './spectrum/family.js';
@@ -35,6 +35,26 @@ const SYMBOLS: Readonly<Record<string, string>> = {
   sd1_g: 'S_D1',
   tl_s: 'T_L',
   ag_g: 'a_g',
+  ss_g: 'S_S',
+  s1_g: 'S_1',
+  sxs_g: 'S_XS',
+  sx1_g: 'S_X1',
+  fa: 'F_a',
+  fv: 'F_v',
+  b1: 'B_1',
+  eta: 'η',
+  behaviour_factor: 'q',
+  lower_bound_factor: 'β',
+  return_factor: 'R',
+  distance_km: 'D',
+  performance_factor: 'S_p',
+  pga_ref_g: 'PGA_ref',
+  f_0p2: 'F(0.2)',
+  f_0p5: 'F(0.5)',
+  f_1: 'F(1)',
+  f_2: 'F(2)',
+  f_5: 'F(5)',
+  f_10: 'F(10)',
   mass_t: 'm',
   stiffness_kN_per_m: 'k',
   storeys: 'N',
@@ -166,6 +186,14 @@ const SYMBOLS: Readonly<Record<string, string>> = {
   effective_height_m: 'h̄',
   height_share: 'η',
   site_period_s: 'T_s',
+  fs: 'F_S',
+  f1: 'F_1',
+  alpha_max_g: 'α_max',
+  tg_s: 'T_g',
+  f0: 'F₀',
+  tc_star_s: 'T_C*',
+  tp_s: 'T_P',
+  standard_shear_coefficient: 'C₀',
 };
 
 const symbol = (name: string): string => SYMBOLS[name] ?? name;
@@ -218,21 +246,26 @@ function showValueStep({ name, value, origin }: ValueStep, display: Display): Pi
 export function expressionOf(step: Pick<FormulaStep, 'record' | 'inputs'>): {
   readonly text: string | null;
   readonly branch: string;
+  /** Numbers that the formula names besides inputs and constants. */
+  readonly quantities: Readonly<Record<string, number>>;
 } {
-  const family = step.record.family as { readonly expression: string | null } & Partial<
-    Pick<SpectrumFamily<Inputs>, 'compile'>
-  >;
+  const family = step.record.family as Family<Inputs, unknown> & Partial<Pick<SpectrumFamily<Inputs>, 'compile'>>;
   if (family.compile !== undefined && typeof step.inputs['period_s'] === 'number') {
-    const segment = segmentAt(family.compile(step.inputs), step.inputs['period_s']);
-    return { text: segment.expression, branch: segment.clause };
+    const compiled = family.compile(step.inputs);
+    const segment = segmentAt(compiled, step.inputs['period_s']);
+    return { text: segment.expression, branch: segment.clause, quantities: compiled.quantities ?? {} };
   }
-  return { text: family.expression, branch: '' };
+  const shown = family.shownAt?.(step.inputs, step.record.constants);
+  return { text: shown?.expression ?? family.expression, branch: shown?.clause ?? '', quantities: {} };
 }
 
 function formulaStep(step: FormulaStep, display: Display): HandStep {
   const { record, inputs, value } = step;
-  const { text, branch } = expressionOf(step);
-  const constants = record.constants as Readonly<Record<string, number>>;
+  const { text, branch, quantities } = expressionOf(step);
+  const constants: Readonly<Record<string, number>> = {
+    ...(record.constants as Readonly<Record<string, number>>),
+    ...quantities,
+  };
   let symbolic = record.family.procedure ?? '';
   let substituted = Object.entries(inputs)
     .map(([name, input]) => `${symbol(name)} = ${showInput(name, input, display)}`)
@@ -309,11 +342,12 @@ export function unitOfName(name: string): string | null {
 
 /** The display formula evaluated on its own: what the tests hold against the code. Null when the method is a procedure. */
 export function evaluateDisplayed(step: Pick<FormulaStep, 'record' | 'inputs'>): number | null {
-  const { text } = expressionOf(step);
+  const { text, quantities } = expressionOf(step);
   if (text === null) return null;
   const constants = step.record.constants as Readonly<Record<string, number>>;
   return evaluateExpression(parseExpression(text), {
     ...constants,
+    ...quantities,
     ...(step.inputs as Readonly<Record<string, number>>),
   });
 }

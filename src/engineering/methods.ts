@@ -15,9 +15,18 @@ import type { AnyRecord } from './formula.js';
 import { MEASURED_PERIODS } from './period/measured-records.js';
 import { PERIOD_RECORDS } from './period/periods.js';
 import { PRIORITY_RECORDS } from './priority/records.js';
+import { VS30_TABLES } from './site/vs30.js';
+import { ASCE7_SITE_TABLES } from './spectrum/asce7-factors.js';
+import { DAMPING_TABLES } from './spectrum/damping.js';
 import { SPECTRUM_RECORDS } from './spectrum/definition.js';
 import { SITE_RECORDS } from './site/records.js';
 import { CRACKING } from './stiffness/cracking.js';
+import { SPECTRUM_FACTOR_RECORDS } from './spectrum/factor-records.js';
+import { IS1893_SOILS } from './spectrum/is1893.js';
+import { NBC_2015_TABLES } from './spectrum/nbc-factors.js';
+import { NZS1170_RETURN_FACTORS } from './spectrum/nzs1170-factors.js';
+import { SHAPES, TABLE_ROWS } from './spectrum/nzs1170-shapes.js';
+import { WORLD_TABLES } from './spectrum/world.js';
 import { STIFFNESS_RECORDS } from './stiffness/records.js';
 import { ASSUMED_MATERIALS } from './stiffness/route-materials.js';
 import { VIBRATION_RECORDS } from './vibration/records.js';
@@ -31,6 +40,7 @@ export const METHODS: readonly AnyRecord[] = [
   ...STIFFNESS_RECORDS,
   ...SITE_RECORDS,
   ...SPECTRUM_RECORDS,
+  ...SPECTRUM_FACTOR_RECORDS,
   ...DEMAND_RECORDS,
   ...EDITION_RECORDS,
   ...CAPACITY_RECORDS,
@@ -48,6 +58,13 @@ export function findMethod(id: string): AnyRecord | undefined {
 const TABLES = {
   TYPE_1,
   TYPE_2,
+  ASCE7_SITE_TABLES,
+  NZS1170: { SHAPES, TABLE_ROWS, NZS1170_RETURN_FACTORS },
+  NBC_2015_TABLES,
+  IS1893_SOILS,
+  DAMPING_TABLES,
+  VS30_TABLES,
+  ...WORLD_TABLES,
   SYSTEM_FACTORS,
   EDITION_YEARS,
   UNIT_WEIGHT_KN_PER_M2,

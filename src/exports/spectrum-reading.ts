@@ -82,7 +82,10 @@ export function readSpectrum(
       beyond: period_s > compiled.valid_to_s,
     };
   });
-  const { code, ...parameters } = entry;
+  const { code, ...stated } = entry;
+  const parameters = Object.fromEntries(
+    Object.entries(stated).flatMap(([key, value]) => (value === undefined ? [] : [[key, value] as const])),
+  );
   return {
     name,
     code,

@@ -2,6 +2,7 @@
  * What one key of a study says about another. The checks read the raw value, whatever else is wrong with it, so that all
  * problems of a file come at once; what the schema already refuses they leave alone.
  */
+import { SPECTRUM_REGISTER } from '../engineering/spectrum/definition.js';
 import { showValue } from '../errors.js';
 import { suggest } from './nearest.js';
 import type { Finding } from './problems.js';
@@ -71,6 +72,12 @@ function checkLevels(study: unknown): Finding[] {
     for (const [below, name] of named(level)) {
       if (typeof name !== 'string' || known.includes(name)) continue;
       findings.push({ path: [...path, ...below], message: `no spectrum ${showValue(name)}${suggest(name, known)}` });
+    }
+    for (const [below, name] of named(level)) {
+      const code = typeof name === 'string' ? at(spectra, name, 'code') : undefined;
+      if (!SPECTRUM_REGISTER.some((entry) => entry.code === code && entry.reduced === true)) continue;
+      const message = `${String(code)} contains a behaviour factor and serves base shear; levels read elastic spectra`;
+      findings.push({ path: [...path, ...below], message });
     }
     const title = at(level, 'title');
     const first = titles.get(title);

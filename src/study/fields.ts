@@ -1,5 +1,7 @@
 /** The building blocks of the study's schema: each says in its own words what it expects, so that messages read alike. */
 import { z } from 'zod';
+import { describeRange } from '../engineering/formula.js';
+import type { NumberRange } from '../engineering/formula.js';
 import { showValue } from '../errors.js';
 import { suggest } from './nearest.js';
 
@@ -45,19 +47,13 @@ export function word<const T extends readonly string[]>(words: T) {
   });
 }
 
-interface Range {
-  /** Smallest value allowed. */
-  readonly from?: number;
-  /** Value it must exceed. */
-  readonly above?: number;
-  /** Largest value allowed. */
-  readonly to?: number;
+interface Range extends NumberRange {
   readonly unit?: string;
 }
 
 /** A finite number within a range. */
 export function number(range: Range) {
-  const error = expected(describeRange('a number', range));
+  const error = expected(describeRange('a number', range, range.unit));
   let schema = z.number({ error });
   if (range.from !== undefined) schema = schema.gte(range.from, { error });
   if (range.above !== undefined) schema = schema.gt(range.above, { error });
@@ -71,22 +67,15 @@ export function whole(range: { readonly from: number; readonly to: number; reado
   return z.int({ error }).gte(range.from, { error }).lte(range.to, { error });
 }
 
-/** A list of at least `least` items. */
-export function list<T extends z.ZodType>(item: T, what: string, least = 0) {
+/** A list of at least `least` and at most `most` items. */
+export function list<T extends z.ZodType>(item: T, what: string, least = 0, most?: number) {
   const error = expected(what);
-  return z.array(item, { error }).min(least, { error });
+  const items = z.array(item, { error }).min(least, { error });
+  return most === undefined ? items : items.max(most, { error });
 }
 
 /** A mapping from free names to values, with at least `least` entries. */
 export function mapping<T extends z.ZodType>(key: z.ZodString, value: T, what: string, least = 0) {
   const error = expected(what);
   return z.record(key, value, { error }).refine((entries) => Object.keys(entries).length >= least, { error });
-}
-
-function describeRange(kind: string, { from, above, to, unit }: Range): string {
-  const of = unit === undefined ? kind : `${kind} in ${unit}`;
-  if (from !== undefined && to !== undefined)
-    return to >= Number.MAX_SAFE_INTEGER ? `${of} >= ${from}` : `${of} ${from} to ${to}`;
-  if (above !== undefined) return to === undefined ? `${of} > ${above}` : `${of} > ${above} and <= ${to}`;
-  return from === undefined ? of : `${of} >= ${from}`;
 }

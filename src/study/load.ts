@@ -8,6 +8,7 @@ import { dotted, findingsOf } from './problems.js';
 import { readText } from './read-text.js';
 import { StudySchema } from './schema.js';
 import type { Study } from './schema.js';
+import { withTableFiles } from './table-files.js';
 
 /** A study with the file it comes from. */
 export interface LoadedStudy {
@@ -23,14 +24,15 @@ export interface LoadedStudy {
 }
 
 /**
- * Reads and checks a study file.
+ * Reads and checks a study file, and the tables of spectra that it names (`table-file` becomes `table`).
  * @throws UserError carrying every problem, in the order of the file, each with line, column and key.
  */
 export async function loadStudy(path: string): Promise<LoadedStudy> {
-  return studyFromText(await readText(path, 'a study file, for instance study.yaml'), path);
+  const loaded = studyFromText(await readText(path, 'a study file, for instance study.yaml'), path);
+  return { ...loaded, study: await withTableFiles(loaded.study, loaded.folder) };
 }
 
-/** Checks the text of a study file; `file` stands in messages, and its folder is the one paths are relative to. @throws UserError as `loadStudy`. */
+/** Checks the text of a study file without reading the files it names; `file` stands in messages, and its folder is the one paths are relative to. @throws UserError as `loadStudy`. */
 export function studyFromText(text: string, file = 'study.yaml'): LoadedStudy {
   const body = text.replace(/^\ufeff/u, '');
   const { value, errors, usable, offsetOf, positionAt } = readDocument(body);

@@ -8,15 +8,21 @@ const REASONS: Readonly<Record<string, string>> = {
   EACCES: 'this file may not be read',
 };
 
+/** The error for a file that cannot be opened, or undefined for a cause of another kind. */
+export function unreadable(path: string, what: string, cause: unknown): UserError | undefined {
+  const reason = REASONS[(cause as NodeJS.ErrnoException).code ?? ''];
+  return reason === undefined
+    ? undefined
+    : new UserError(`${reason}; give the path of ${what}`, { file: path }, { cause });
+}
+
 /** The text of a small UTF-8 file without its byte order mark; `what` names it in messages. @throws UserError when it cannot be read. */
 export async function readText(path: string, what: string): Promise<string> {
   let bytes: Buffer;
   try {
     bytes = await readFile(path);
   } catch (cause) {
-    const reason = REASONS[(cause as NodeJS.ErrnoException).code ?? ''];
-    if (reason === undefined) throw cause;
-    throw new UserError(`${reason}; give the path of ${what}`, { file: path }, { cause });
+    throw unreadable(path, what, cause) ?? cause;
   }
   try {
     return new TextDecoder('utf-8', { fatal: true }).decode(bytes);

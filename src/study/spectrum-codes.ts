@@ -1,10 +1,20 @@
-/** The spectra a study may define, one entry per code. To add a code, add its mapping here: schema, types and editor follow. */
+/** The spectra a study may define, made from the register of spectrum codes: schema, messages and editor follow the records. */
 import { z } from 'zod';
+import { describeSpec } from '../engineering/formula.js';
+import type { InputSpec } from '../engineering/formula.js';
+import { parametersOf } from '../engineering/spectrum/code.js';
+import type { SpectrumCode } from '../engineering/spectrum/code.js';
+import { compileSpectrum, SPECTRUM_REGISTER } from '../engineering/spectrum/definition.js';
+import type { SpectrumDefinition } from '../engineering/spectrum/definition.js';
 import { showValue } from '../errors.js';
 import { expected, list, number, strict, text, word } from './fields.js';
+import { SPECTRUM_UNITS } from './spectrum-units.js';
 
-/** Largest spectral value taken at face value, in g [judgement: catches percent of g and m/s²]. */
-const LARGEST_G = 10;
+/** A spectrum of a study: its code and parameters, and what the study says about it. */
+export type SpectrumEntry = SpectrumDefinition & {
+  readonly return_period_years?: number;
+  readonly note?: string;
+};
 
 const common = {
   return_period_years: number({ above: 0, to: 100000, unit: 'years' })
@@ -13,54 +23,66 @@ const common = {
   note: text().exactOptional().describe('Where the numbers come from; printed with the spectrum.'),
 };
 
-function en1998<const Code extends string>(code: Code, title: string) {
+function fieldOf(spec: InputSpec): z.ZodType {
+  if (spec.kind === 'word') return word(spec.words ?? []);
+  if (spec.kind === 'number') return number(spec);
+  return list(number(spec), describeSpec(spec), spec.least ?? 0, spec.most);
+}
+
+/** The field of one parameter: what may be left out gets its default, and the editor is told what it is. */
+function parameter(spec: InputSpec): z.ZodType {
+  const meaning = `${spec.meaning.charAt(0).toUpperCase()}${spec.meaning.slice(1)}`;
+  const described = spec.unit === undefined ? `${meaning}.` : `${meaning}, ${spec.unit}.`;
+  const field = fieldOf(spec);
+  return (spec.fallback === undefined ? field : field.default(spec.fallback)).describe(described);
+}
+
+function schemaOf(entry: SpectrumCode) {
   return strict({
-    code: z.literal(code).describe(title),
-    ag_g: number({ above: 0, to: LARGEST_G, unit: 'g' }).describe('Design ground acceleration on ground type A, g.'),
-    ground: word(['A', 'B', 'C', 'D', 'E']).describe('Ground type.'),
+    code: z.literal(entry.code).describe(`${entry.title}.`),
+    ...Object.fromEntries(parametersOf(entry).map((spec) => [spec.name, parameter(spec)])),
     ...common,
   });
 }
 
-const asce7TwoPeriod = strict({
-  code: z.literal('asce7-22-two-period').describe('ASCE 7-22 two-period design spectrum.'),
-  sds_g: number({ above: 0, to: LARGEST_G, unit: 'g' }).describe('Spectral acceleration at short periods SDS, g.'),
-  sd1_g: number({ above: 0, to: LARGEST_G, unit: 'g' }).describe('Spectral acceleration at 1 s SD1, g.'),
-  tl_s: number({ above: 0, to: 100, unit: 's' }).describe('Long-period transition period TL, s.'),
-  ...common,
-});
+/** A table in a file of its own; it is read with the study (table-files.ts) and becomes a `table`. */
+export const TABLE_FILE = 'table-file';
 
-const table = strict({
-  code: z.literal('table').describe('A spectrum given by its ordinates.'),
-  periods_s: list(number({ from: 0, to: 100, unit: 's' }), 'a list of at least two periods in s', 2).describe(
-    'Periods, s, increasing.',
-  ),
-  ordinates_g: list(
-    number({ above: 0, to: LARGEST_G, unit: 'g' }),
-    'a list of at least two ordinates in g',
-    2,
-  ).describe('5 % elastic spectral acceleration at those periods, g.'),
+const tableFile = strict({
+  code: z.literal(TABLE_FILE).describe('A spectrum given by its ordinates in a file.'),
+  file: text('the path of a file').describe('Table of periods and 5 % elastic ordinates, relative to this file.'),
+  unit: word(SPECTRUM_UNITS)
+    .exactOptional()
+    .describe('Unit of the ordinates; left out, the heading of the file names it.'),
   interpolation: word(['linear', 'log-log']).describe('Between the periods: linear, or straight in logarithms.'),
   ...common,
 });
 
-const SPECTRA = [
-  asce7TwoPeriod,
-  en1998('en1998-1-2004-elastic-type-1', 'EN 1998-1:2004 elastic spectrum, type 1.'),
-  en1998('en1998-1-2004-elastic-type-2', 'EN 1998-1:2004 elastic spectrum, type 2.'),
-  table,
-] as const;
+const SPECTRA = [...SPECTRUM_REGISTER.map(schemaOf), tableFile] as unknown as [
+  ReturnType<typeof schemaOf>,
+  ...ReturnType<typeof schemaOf>[],
+];
 
 /** Ids of the spectrum codes a study may name. */
-export const SPECTRUM_CODES: readonly z.output<(typeof SPECTRA)[number]>['code'][] = SPECTRA.map(
-  (entry) => entry.shape.code.value,
-);
+export const SPECTRUM_CODES: readonly string[] = [...SPECTRUM_REGISTER.map(({ code }) => code), TABLE_FILE];
 
-export const SpectrumSchema = z.discriminatedUnion('code', SPECTRA, {
+const union = z.discriminatedUnion('code', SPECTRA, {
   error: (issue) => {
     if (issue.code !== 'invalid_union') return expected('a spectrum: its code and parameters')(issue);
     const code = (issue.input as { code?: unknown }).code;
     const problem = code === undefined ? 'missing' : `unknown code ${showValue(code)}`;
     return `${problem}; known: ${SPECTRUM_CODES.join(', ')}`;
   },
+}) as unknown as z.ZodType<SpectrumEntry, SpectrumEntry>;
+
+/** A code and its parameters, each in its range and all of them together such that the code has a spectrum for them. */
+export const SpectrumSchema = union.superRefine((entry, context) => {
+  // checks.ts speaks of tables, place by place; a file of its own is read later; what a range refuses has been said
+  if (entry.code === 'table' || entry.code === TABLE_FILE || context.issues.length > 0) return;
+  try {
+    compileSpectrum(entry);
+  } catch (error) {
+    if (!(error instanceof RangeError)) throw error;
+    context.addIssue({ code: 'custom', message: error.message });
+  }
 });

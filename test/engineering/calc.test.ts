@@ -20,7 +20,9 @@ const failure = (work: () => unknown): string => {
 };
 
 /** A number that a record's limits allow, else one that is sensible for anything. */
-function sensible(method: AnyRecord, name: string): number {
+function sensible(method: AnyRecord, { name, ...spec }: InputSpec): number {
+  if (typeof spec.fallback === 'number') return spec.fallback;
+  if (spec.to !== undefined) return spec.from ? Math.sqrt(spec.from * spec.to) : spec.to / 8;
   const limit = method.limits.find(({ input }) => input === name);
   if (limit?.from !== undefined && limit.to !== undefined) return Math.sqrt(limit.from * limit.to);
   return limit?.to === undefined ? (limit?.from ?? 0.5) : limit.to / 2;
@@ -29,9 +31,10 @@ function sensible(method: AnyRecord, name: string): number {
 /** The second of two like quantities is larger, so that logarithms of ratios are not of one. */
 function assignment(method: AnyRecord, spec: InputSpec): string {
   if (spec.kind === 'word') return `${spec.name}=${spec.words?.[0] ?? 'x'}`;
-  if (spec.kind === 'list') return `${spec.name}=0.5,1,2`;
+  if (spec.kind === 'list')
+    return `${spec.name}=${[0.5, 1, 2, 2.5, ...Array<number>(40).fill(3)].slice(0, spec.least ?? 3).join(',')}`;
   if (spec.name === 'mode') return 'mode=1';
-  return `${spec.name}=${String(sensible(method, spec.name) * (spec.name.includes('_2') ? 2 : 1))}`;
+  return `${spec.name}=${String(sensible(method, spec) * (spec.name.includes('_2') ? 2 : 1))}`;
 }
 
 describe('calculate', () => {
@@ -117,8 +120,34 @@ describe('calculate', () => {
       'storeys = 14 is outside the limit of ASCE/SEI 7: at most 12 storeys',
     );
     expect(failure(() => run('asce7-22/spectrum/two-period', 'sds_g=80', 'sd1_g=0.4', 'period_s=1'))).toContain(
-      'our own limit: 0.01 to 4 g',
+      'sds_g: expected a number in g > 0 and <= 10, got 80',
     );
+  });
+
+  it('refuses numbers and lists outside the range of the input', () => {
+    const spectrum = (...inputs: string[]): string =>
+      failure(() => run('asce7-22/spectrum/multi-period', 'period_s=1', ...inputs));
+    expect(spectrum('ordinates_g=1,2')).toContain(
+      'ordinates_g: expected a list of 22 numbers in g > 0 and <= 10, got 2',
+    );
+    expect(failure(() => run('en1998-1-2004/damping/eta', 'damping_ratio=5'))).toBe(
+      'en1998-1-2004/damping/eta: damping_ratio: expected a number 0.02 to 0.5, got 5',
+    );
+  });
+
+  it('says in words what a spectrum flags of its parameters', () => {
+    const inputs = ['ss_g=0.9', 's1_g=0.4', 'site_class=default', 'period_s=2'];
+    const { flags, trace } = run('asce7-16/spectrum/two-period', ...inputs);
+    expect(flags).toEqual([
+      "The site class is not known; the code's rule for a default class is taken.",
+      expect.stringContaining('Supplement 3'),
+    ]);
+    // 2/3 × 1.9 × 0.4 × 1.5 / 2 = 0.38 (own arithmetic, F_v of class D at 0.4 g)
+    expect(handSteps(trace, 'si').at(-1)).toMatchObject({
+      symbolic: 'S_a = 2 / 3 × F_v × S_1 × 1.5 / T',
+      substituted: '= 2 / 3 × 1.900 × 0.4000 × 1.5 / 2.000',
+      result: '= 0.3800 g',
+    });
   });
 
   it('flags a value beyond a limit that only warns', () => {

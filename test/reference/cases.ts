@@ -11,7 +11,10 @@ import { REGRESSION_PERIOD_CASES } from './period-cases-regressions.js';
 import { US_PERIOD_CASES } from './period-cases-us.js';
 import { WALL_PERIOD_CASES } from './period-cases-walls.js';
 import { PERIOD_CASES } from './period-cases.js';
+import { SPECTRUM_CODE_CASES } from './spectrum-cases-codes.js';
+import { SPECTRUM_FACTOR_CASES } from './spectrum-cases-factors.js';
 import { SPECTRUM_CASES } from './spectrum-cases.js';
+import { WORLD_SPECTRUM_CASES } from './spectrum-cases-world.js';
 import { STIFFNESS_CASES } from './stiffness-cases.js';
 import { VIBRATION_CASES } from './vibration-cases.js';
 
@@ -27,6 +30,9 @@ export const REFERENCE_CASES: readonly ReferenceCase[] = [
   ...MEASURED_CASES,
   ...STIFFNESS_CASES,
   ...SPECTRUM_CASES,
+  ...SPECTRUM_CODE_CASES,
+  ...SPECTRUM_FACTOR_CASES,
+  ...WORLD_SPECTRUM_CASES,
   ...BASE_SHEAR_CASES,
   ...CAPACITY_CASES,
   ...VIBRATION_CASES,

@@ -2,6 +2,7 @@ import { describe, expect, it } from 'vitest';
 import { METHODS } from '../../src/engineering/methods.js';
 import { measure } from '../support/engineering-measure.js';
 import { REFERENCE_CASES } from './cases.js';
+import { NOT_RUN, SPECTRA_IDS } from './spectra-not-run.js';
 
 describe('REFERENCE_CASES', () => {
   it.each(REFERENCE_CASES)('$id reproduces $expected ($method)', (reference) => {
@@ -30,5 +31,12 @@ describe('REFERENCE_CASES', () => {
     // W08: 0.055 in the metric column of ASCE 7-02 would give 0.41 s where the foot coefficient gives 0.36 s
     const value = measure(REFERENCE_CASES.find(({ id }) => id === 'W08')!).value;
     expect(Math.abs(value - 0.41)).toBeGreaterThan(0.04);
+  });
+});
+
+describe('SPECTRA_IDS', () => {
+  it('each have a reference case or a reason why not, never both', () => {
+    const run = (id: string): boolean => REFERENCE_CASES.some((one) => one.id === id || one.id.startsWith(`${id}-`));
+    expect(SPECTRA_IDS.filter((id) => run(id) === Object.hasOwn(NOT_RUN, id))).toEqual([]);
   });
 });

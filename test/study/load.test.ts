@@ -4,6 +4,7 @@ import { join } from 'node:path';
 import { describe, expect, it } from 'vitest';
 import { UserError, formatError } from '../../src/errors.js';
 import { loadStudy, studyFromText } from '../../src/study/load.js';
+import { SPECTRUM_CODES } from '../../src/study/spectrum-codes.js';
 import { SAMPLE } from './sample.js';
 
 // No outside source for these checks: the messages are our own contract.
@@ -100,7 +101,7 @@ seed: -1
       'study.yaml:14:16 words.use.flats: unknown word "home"; known: residential, hotel, office, school, hospital, retail, assembly, laboratory, industrial, warehouse, parking, emergency, other, unknown',
       'study.yaml:15:20 words.yes_no.y: the same word as "Y" but for case and blanks, with another meaning; keep one',
       'study.yaml:16:24 words.status.in service: expected one of in-use, assessed, to-be-demolished, got true',
-      'study.yaml:19:20 hazard.spectra.design.code: unknown code "asce7-21"; known: asce7-22-two-period, en1998-1-2004-elastic-type-1, en1998-1-2004-elastic-type-2, table',
+      `study.yaml:19:20 hazard.spectra.design.code: unknown code "asce7-21"; known: ${SPECTRUM_CODES.join(', ')}`,
       'study.yaml:20:52 hazard.spectra.eu.ag_g: expected a number in g > 0 and <= 10, got "0,9"',
       'study.yaml:20:67 hazard.spectra.eu.ground: unknown word "F"; known: A, B, C, D, E',
       'study.yaml:21:36 hazard.spectra.tab.periods_s.1: log-log needs periods > 0, got 0; use linear or leave it out',

@@ -1,11 +1,11 @@
-/** Sensible inputs for every name a record may ask for: physical limits [judgement], drawn by fast-check. */
+/** Sensible inputs for every name a record may ask for, drawn by fast-check: physical limits [judgement], else the record's own range. */
 import fc from 'fast-check';
-import type { AnyRecord, Inputs } from '../../src/engineering/formula.js';
+import type { AnyRecord, Inputs, InputSpec, InputValue } from '../../src/engineering/formula.js';
 
 const between = (min: number, max: number): fc.Arbitrary<number> => fc.double({ min, max, noNaN: true });
 const whole = (min: number, max: number): fc.Arbitrary<number> => fc.integer({ min, max });
 
-const RANGES: Readonly<Record<string, fc.Arbitrary<number | string>>> = {
+const RANGES: Readonly<Record<string, fc.Arbitrary<number>>> = {
   height_m: between(2, 300),
   storeys: whole(1, 60),
   plan_dimension_m: between(4, 200),
@@ -33,7 +33,6 @@ const RANGES: Readonly<Record<string, fc.Arbitrary<number | string>>> = {
   sd1_g: between(0.02, 2),
   tl_s: between(2, 16),
   ag_g: between(0.01, 1),
-  ground: fc.constantFrom('A', 'B', 'C', 'D', 'E'),
   sa_g: between(0.01, 4),
   sa_1_g: between(0.05, 2),
   sa_2_g: between(0.05, 4),
@@ -70,7 +69,7 @@ const RANGES: Readonly<Record<string, fc.Arbitrary<number | string>>> = {
   slope_k: between(1, 5),
   period_ratio: between(1, 2),
   gravity_mps2: between(9.7, 9.9),
-  damping_ratio: between(0, 0.5),
+  damping_ratio: between(0.01, 0.3),
   modulus_MPa: between(100, 2e5),
   shear_modulus_MPa: between(40, 8e4),
   cracking_factor: between(0.2, 1),
@@ -122,7 +121,6 @@ const RANGES: Readonly<Record<string, fc.Arbitrary<number | string>>> = {
   aggregate_factor: between(0.7, 1.2),
   unit_weight_kN_per_m3: between(15, 25),
   masonry_strength_MPa: between(1, 20),
-  masonry_condition: fc.constantFrom('good', 'fair', 'poor'),
   axial_force_ratio: between(0, 1),
   density_t_per_m3: between(1.4, 2.3),
   vs30_mps: between(80, 1500),
@@ -163,15 +161,38 @@ const TABLE: fc.Arbitrary<{ readonly periods_s: readonly number[]; readonly ordi
     };
   });
 
-/** Inputs of `method`; none for procedures over lists of storeys. @throws Error for a name without a range. */
-export function inputsOf({ id, family }: AnyRecord): fc.Arbitrary<Inputs> {
-  const table = family.inputs.some(({ name }) => name === 'periods_s');
-  const plain = family.inputs.filter(({ name }) => !(table && (name === 'periods_s' || name === 'ordinates_g')));
-  const fields: Record<string, fc.Arbitrary<number | string>> = {};
-  for (const { name } of plain) {
-    const range = RANGES[name];
-    if (range === undefined) throw new Error(`no range for ${name} of ${id}`);
-    fields[name] = range;
+/** Values within the range that the record itself states. */
+function stated(spec: InputSpec): fc.Arbitrary<InputValue> | null {
+  if (spec.words !== undefined) return fc.constantFrom(...spec.words);
+  if (spec.to === undefined) return null;
+  const number = between(Math.max(spec.from ?? spec.above ?? 0, spec.to / 500), spec.to);
+  if (spec.kind === 'number') return spec.from === 0 ? fc.oneof(fc.constant(0), number) : number;
+  return fc.array(number, { minLength: spec.least ?? 1, maxLength: spec.most ?? (spec.least ?? 1) + 4 });
+}
+
+/** Whether the record has a value for `inputs`: a code may refuse parameters that do not go together. */
+function accepts({ family, constants }: AnyRecord, inputs: Inputs): boolean {
+  try {
+    family.evaluate(inputs, constants);
+    return true;
+  } catch (error) {
+    if (error instanceof RangeError) return false;
+    throw error;
   }
-  return table ? fc.tuple(TABLE, fc.record(fields)).map(([a, b]) => ({ ...a, ...b })) : fc.record(fields);
+}
+
+/** Inputs of `method`; none for procedures over lists of storeys. @throws Error for a name without a range. */
+export function inputsOf(method: AnyRecord): fc.Arbitrary<Inputs> {
+  const { id, family } = method;
+  const specs = family.inputs;
+  const table = specs.some(({ name }) => name === 'periods_s');
+  const plain = specs.filter(({ name }) => !(table && (name === 'periods_s' || name === 'ordinates_g')));
+  const fields: Record<string, fc.Arbitrary<InputValue>> = {};
+  for (const spec of plain) {
+    const range = RANGES[spec.name] ?? stated(spec);
+    if (range === null) throw new Error(`no range for ${spec.name} of ${id}`);
+    fields[spec.name] = range;
+  }
+  const all = table ? fc.tuple(TABLE, fc.record(fields)).map(([a, b]) => ({ ...a, ...b })) : fc.record(fields);
+  return 'compile' in family || family.shownAt !== undefined ? all.filter((inputs) => accepts(method, inputs)) : all;
 }

@@ -22,7 +22,7 @@ const layers: Family<
   { readonly layer_depths_m: readonly number[]; readonly layer_velocities_mps: readonly number[] },
   Record<never, number>
 > = {
-  ...oneLayer,
+  ...(oneLayer as Omit<typeof oneLayer, 'shownAt'>),
   id: 'site/layers',
   inputs: [
     { name: 'layer_depths_m', kind: 'list', unit: 'm', meaning: 'thickness of each layer' },

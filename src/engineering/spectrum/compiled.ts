@@ -17,7 +17,7 @@ export interface Segment {
   readonly over?: readonly Term[];
   /** Which branch of the publication this is. */
   readonly clause: string;
-  /** The branch as a display formula over the record's inputs (expression.ts). */
+  /** The branch as a display formula over the record's inputs and the spectrum's quantities (expression.ts). */
   readonly expression: string;
 }
 
@@ -29,17 +29,24 @@ export interface CompiledSpectrum {
   readonly plateau_to_s: number;
   /** Longest period the publication covers; beyond it the last branch is continued and flagged. */
   readonly valid_to_s: number;
+  /** Numbers on the way from the inputs to the segments that the display formulas name, such as site factors. */
+  readonly quantities?: Readonly<Record<string, number>>;
+  /** What a reader must know about these parameters; words in flags.ts. */
+  readonly flags?: readonly string[];
+}
+
+/** coefficient × period_s^exponent, the common exponents without a power. */
+export function termAt(coefficient: number, exponent: number, period_s: number): number {
+  if (exponent === 0) return coefficient;
+  if (exponent === -1) return coefficient / period_s;
+  if (exponent === 1) return coefficient * period_s;
+  if (exponent === -2) return coefficient / (period_s * period_s);
+  return coefficient * power(period_s, exponent);
 }
 
 function sum(terms: readonly Term[], period_s: number): number {
   let value = 0;
-  for (const { coefficient, exponent } of terms) {
-    if (exponent === 0) value += coefficient;
-    else if (exponent === -1) value += coefficient / period_s;
-    else if (exponent === 1) value += coefficient * period_s;
-    else if (exponent === -2) value += coefficient / (period_s * period_s);
-    else value += coefficient * power(period_s, exponent);
-  }
+  for (const { coefficient, exponent } of terms) value += termAt(coefficient, exponent, period_s);
   return value;
 }
 

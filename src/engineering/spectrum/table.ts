@@ -3,10 +3,11 @@ import { ln } from '../numeric/elementary.js';
 import { record } from '../formula.js';
 import type { MethodRecord } from '../formula.js';
 import { power } from '../numeric/power.js';
+import type { SpectrumCode } from './code.js';
 import { ordinate } from './compiled.js';
 import type { CompiledSpectrum, Segment } from './compiled.js';
 import type { SpectrumFamily } from './family.js';
-import { PERIOD_INPUT } from './family.js';
+import { LARGEST_G, PERIOD_INPUT } from './family.js';
 
 export interface TableInput {
   readonly periods_s: readonly number[];
@@ -30,24 +31,29 @@ function check({ periods_s, ordinates_g }: Omit<TableInput, 'period_s'>, positiv
 }
 
 /**
- * Segments of a table. The plateau starts where the largest ordinate stands and its corner is max(T S_a)/max S_a, which is where
+ * Segments of a table; `nameOf` says how the ordinate at a place is written in display formulas. The plateau starts where the largest ordinate stands and its corner is max(T S_a)/max S_a, which is where
  * the equal-velocity branch that envelopes the table leaves the largest ordinate.
  */
-function compileTable(input: Omit<TableInput, 'period_s'>, logarithmic: boolean): CompiledSpectrum {
+export function compileTable(
+  input: Omit<TableInput, 'period_s'>,
+  logarithmic: boolean,
+  nameOf: (place: number) => string = (place) => String(input.ordinates_g[place]!),
+): CompiledSpectrum {
   check(input, logarithmic);
   const { periods_s, ordinates_g } = input;
   const last = periods_s.length - 1;
   const segments: Segment[] = [];
-  const flat = (from_s: number, to_s: number, value: number): Segment => ({
+  const flat = (from_s: number, to_s: number, place: number): Segment => ({
     from_s,
     to_s,
-    terms: [{ coefficient: value, exponent: 0 }],
+    terms: [{ coefficient: ordinates_g[place]!, exponent: 0 }],
     clause: 'outside the table: the end ordinate',
-    expression: String(value),
+    expression: nameOf(place),
   });
-  if (periods_s[0]! > 0) segments.push(flat(0, periods_s[0]!, ordinates_g[0]!));
+  if (periods_s[0]! > 0) segments.push(flat(0, periods_s[0]!, 0));
   for (let i = 0; i < last; i += 1) {
     const [t1, t2, s1, s2] = [periods_s[i]!, periods_s[i + 1]!, ordinates_g[i]!, ordinates_g[i + 1]!];
+    const [n1, n2] = [nameOf(i), nameOf(i + 1)];
     const clause = `between ${String(t1)} s and ${String(t2)} s`;
     if (logarithmic) {
       const exponent = ln(s2 / s1) / ln(t2 / t1);
@@ -56,7 +62,7 @@ function compileTable(input: Omit<TableInput, 'period_s'>, logarithmic: boolean)
         to_s: t2,
         terms: [{ coefficient: s1 / power(t1, exponent), exponent }],
         clause,
-        expression: `${String(s1)} * (period_s / ${String(t1)}) ^ (ln(${String(s2)} / ${String(s1)}) / ln(${String(t2)} / ${String(t1)}))`,
+        expression: `${n1} * (period_s / ${String(t1)}) ^ (ln(${n2} / ${n1}) / ln(${String(t2)} / ${String(t1)}))`,
       });
     } else {
       const slope = (s2 - s1) / (t2 - t1);
@@ -68,11 +74,11 @@ function compileTable(input: Omit<TableInput, 'period_s'>, logarithmic: boolean)
           { coefficient: slope, exponent: 1 },
         ],
         clause,
-        expression: `${String(s1)} + (${String(s2)} - ${String(s1)}) * (period_s - ${String(t1)}) / (${String(t2)} - ${String(t1)})`,
+        expression: `${n1} + (${n2} - ${n1}) * (period_s - ${String(t1)}) / (${String(t2)} - ${String(t1)})`,
       });
     }
   }
-  segments.push(flat(periods_s[last]!, Infinity, ordinates_g[last]!));
+  segments.push(flat(periods_s[last]!, Infinity, last));
   const largest = Math.max(...ordinates_g);
   const velocity = Math.max(...ordinates_g.map((value, i) => value * periods_s[i]!));
   const plateau_from_s = periods_s[ordinates_g.indexOf(largest)]!;
@@ -91,8 +97,16 @@ function tableRecord(which: 'linear' | 'log-log'): MethodRecord<TableInput, Reco
     unit: 'g',
     symbol: 'S_a',
     inputs: [
-      { name: 'periods_s', kind: 'list', unit: 's', meaning: 'periods of the table, increasing' },
-      { name: 'ordinates_g', kind: 'list', unit: 'g', meaning: 'spectral accelerations at those periods' },
+      { name: 'periods_s', kind: 'list', unit: 's', from: 0, to: 100, least: 2, meaning: 'periods, increasing' },
+      {
+        name: 'ordinates_g',
+        kind: 'list',
+        unit: 'g',
+        above: 0,
+        to: LARGEST_G,
+        least: 2,
+        meaning: '5 % elastic spectral accelerations at those periods',
+      },
       PERIOD_INPUT,
     ],
     expression: null,
@@ -114,5 +128,17 @@ function tableRecord(which: 'linear' | 'log-log'): MethodRecord<TableInput, Reco
   });
 }
 
-export const TABLE_LINEAR = tableRecord('linear');
-export const TABLE_LOG_LOG = tableRecord('log-log');
+const LINEAR = tableRecord('linear');
+
+export const TABLE_CODES: readonly SpectrumCode[] = [
+  {
+    code: 'table',
+    title: 'A spectrum given by its ordinates',
+    record: LINEAR,
+    choice: {
+      name: 'interpolation',
+      meaning: 'between the periods: linear, or straight in logarithms',
+      records: { linear: LINEAR, 'log-log': tableRecord('log-log') },
+    },
+  },
+];

@@ -29,7 +29,7 @@ const byRootOfCube: typeof byRoot = {
 };
 
 const byRootInPsi: Family<Concrete, { readonly coefficient: number; readonly psi_MPa: number }> = {
-  ...byRoot,
+  ...(byRoot as Omit<typeof byRoot, 'shownAt'>),
   id: 'stiffness/modulus-by-root-psi',
   expression: 'coefficient * sqrt(concrete_strength_MPa / psi_MPa) * psi_MPa',
   evaluate: ({ concrete_strength_MPa }, { coefficient, psi_MPa }) =>

@@ -96,7 +96,10 @@ describe('assess', () => {
       spectra: Object.fromEntries(
         Object.entries(SETTINGS.spectra).map(([name, spectrum]) => {
           if (spectrum.code !== 'asce7-22-two-period') throw new Error(name);
-          return [name, { ...spectrum, sds_g: spectrum.sds_g * 1.7, sd1_g: spectrum.sd1_g * 1.7 }];
+          return [
+            name,
+            { ...spectrum, sds_g: Number(spectrum['sds_g']) * 1.7, sd1_g: Number(spectrum['sd1_g']) * 1.7 },
+          ];
         }),
       ),
     };
