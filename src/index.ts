@@ -15,7 +15,40 @@ export type { CheckOptions, CheckedStudy } from './exports/check-study.js';
 export { screenStudy } from './exports/screen-study.js';
 export type { ScreenStudyOptions, ScreenedStudy } from './exports/screen-study.js';
 
-export { explain, listStudyRuns, pageDataOfStudy, periods, periodsOfClass, withStudyDatabase } from './runs/open.js';
+export { refreshStudy, sweepStudy } from './exports/refresh-study.js';
+export type {
+  RefreshChoice,
+  RefreshStudyOptions,
+  RefreshedStudy,
+  SweepStudyOptions,
+  SweptStudy,
+} from './exports/refresh-study.js';
+export { parameterFromText, rangeFromText } from './study/parameters.js';
+export type { Parameter, ParameterRange } from './study/parameters.js';
+export type { ListChange, ListMove } from './screening/list-changes.js';
+export type { SweptValue } from './screening/sweep.js';
+
+export { compareStudy } from './exports/compare-study.js';
+export type { ComparedStudies, CompareStudyOptions } from './exports/compare-study.js';
+export type { Comparison, ExplainedMove, OneSided, SettingChange } from './screening/compare-runs.js';
+export type { ComparedRun } from './screening/read-compared.js';
+export type { FieldCount, InputChange } from './screening/compare-inputs.js';
+export { kendallTauB } from './engineering/numeric/kendall.js';
+
+export {
+  explain,
+  listStudyRuns,
+  noteRun,
+  pageDataOfStudy,
+  periods,
+  periodsOfClass,
+  showRun,
+  withStudyDatabase,
+} from './runs/open.js';
+export { deleteStudyRuns, planStudyDeletion } from './exports/delete-runs.js';
+export type { StudyDeletion } from './exports/delete-runs.js';
+export type { Deletion, InventoryEntry } from './runs/delete.js';
+export type { ListedBuilding, RunChanges, RunSheet, SettingDifference } from './runs/sheet.js';
 export type { RunChoice } from './runs/open.js';
 export { latestRun, listRuns, runById } from './runs/history.js';
 export type { RunEntry } from './runs/history.js';
@@ -37,6 +70,7 @@ export type { Ordinate, SpectrumSheet } from './exports/spectrum-reading.js';
 export { reviewSheet } from './exports/review.js';
 export type { ReviewSheet } from './exports/review.js';
 
+export { renderComparison } from './reports/compare.js';
 export { renderDashboard } from './reports/dashboard.js';
 export { readPageScript } from './reports/page-script.js';
 export { renderSummary } from './reports/summary.js';

@@ -19,8 +19,14 @@ function tipOf(p: Portfolio, i: number): string {
   ].join('\n');
 }
 
-const portfolio = portfolioOf(unpackPage(byId('page-data').textContent));
-startTable(portfolio);
-startClasses(portfolio);
-const open = startSheet(portfolio);
-startCharts(byId('page-charts').textContent, { tip: (i) => tipOf(portfolio, i), open });
+const charts = byId('page-charts').textContent;
+const data = document.getElementById('page-data');
+// The page of a comparison has charts, and no table of buildings.
+if (data === null) startCharts(charts, { tip: () => '', open: () => undefined });
+else {
+  const portfolio = portfolioOf(unpackPage(data.textContent));
+  startTable(portfolio);
+  startClasses(portfolio);
+  const open = startSheet(portfolio);
+  startCharts(charts, { tip: (i) => tipOf(portfolio, i), open });
+}

@@ -4,7 +4,11 @@ import type { Argument } from 'commander';
 import { EXIT } from '../errors.js';
 import { printError, terminalColumns } from './output/print.js';
 import { styled } from './output/style.js';
+import type { CompareCommandOptions } from './commands/compare.js';
 import type { MeasureCommandOptions } from './commands/measure.js';
+import type { RefreshCommandOptions } from './commands/refresh.js';
+import type { SpectrumCommandOptions } from './commands/spectrum.js';
+import type { RunsOptions } from './commands/runs.js';
 import { VERSION } from '../screening/version.js';
 
 const CAUTION =
@@ -66,7 +70,9 @@ export async function runProgram(argv: readonly string[]): Promise<number> {
     code = value ?? EXIT.clean;
   };
   addStudyCommands(program, keep);
+  addRefreshCommand(program, keep);
   addRunCommands(program, keep);
+  addCompareCommand(program, keep);
   addMethodCommands(program, keep);
   addMeasureCommand(program, keep);
   try {
@@ -111,6 +117,7 @@ function build(): Command {
         'swaymark init buildings.csv            # propose a study for a table',
         'swaymark check study.yaml              # what the inventory holds and lacks',
         'swaymark screen study.yaml             # rank, and write the dashboard',
+        'swaymark refresh --set ranking.k=3     # rank again with a changed parameter',
         'swaymark explain BH-012                # one building by hand',
         'swaymark calc asce7-22/period/other height_ft=93',
       )}\n\n${CAUTION}`,
@@ -178,6 +185,43 @@ function addStudyCommands(program: Command, keep: Keep): void {
     });
 }
 
+function addRefreshCommand(program: Command, keep: Keep): void {
+  program
+    .command('refresh')
+    .summary('rank again with changed parameters, without reading the inventory')
+    .description(
+      'Ranks the buildings kept with an earlier run by the study file as it stands, with parameters changed by --set or those of another study file, and keeps a new run: the same as a whole screening with these parameters. The inventory file is not read and may be gone. With --sweep it ranks over a range and shows how the list changes, and keeps nothing.',
+    )
+    .option(
+      '--set <path=value>',
+      'a parameter of the study by its path; repeatable',
+      (text: string, before: readonly string[]) => [...before, text],
+      [] as readonly string[],
+    )
+    .option('--with <file>', 'another study file of the same folder, whose parameters are used')
+    .option('--sweep <path=from:to:step>', 'a range of one parameter: a table of how the list changes, no run')
+    .addOption(study())
+    .addOption(run())
+    .option('--write', 'write the parameters of --set into the study file; comments stay')
+    .option('--note <text>', 'a note kept with the run', '')
+    .option('--no-reports', 'leave the reports as they are')
+    .option('--output <folder>', "folder of the reports (default: the study's)")
+    .addOption(units())
+    .addOption(json())
+    .addHelpText(
+      'after',
+      examples(
+        'swaymark refresh --set hazard.spectra.design.sds_g=1.2',
+        'swaymark refresh --set ranking.list_size=30 --set ranking.rank_by=ratio --write',
+        'swaymark refresh --with study-new-map.yaml --note "the map of next year"',
+        'swaymark refresh --sweep hazard.spectra.design.sd1_g=0.3:0.9:0.1',
+      ),
+    )
+    .action(async (options: RefreshCommandOptions) => {
+      keep(await (await import('./commands/refresh.js')).refresh(options));
+    });
+}
+
 function addRunCommands(program: Command, keep: Keep): void {
   program
     .command('explain')
@@ -221,15 +265,7 @@ function addRunCommands(program: Command, keep: Keep): void {
         keep(await (await import('./commands/periods.js')).periods(id, options));
       },
     );
-  program
-    .command('runs')
-    .summary('the runs kept for a study')
-    .addOption(study())
-    .addOption(json())
-    .addHelpText('after', examples('swaymark runs --study town/study.yaml'))
-    .action(async (options: { study?: string; json?: true }) => {
-      keep(await (await import('./commands/runs.js')).runs(options));
-    });
+  addHistoryCommands(program, keep);
   program
     .command('review')
     .summary('a sheet for checking some buildings by hand')
@@ -244,6 +280,96 @@ function addRunCommands(program: Command, keep: Keep): void {
     .addHelpText('after', examples('swaymark review --sample 10'))
     .action(async (options: { sample: number; output?: string; study?: string; run?: number; units: 'si' | 'us' }) => {
       keep(await (await import('./commands/review.js')).review(options));
+    });
+}
+
+function addCompareCommand(program: Command, keep: Keep): void {
+  program
+    .command('compare')
+    .summary('two runs side by side: who moved, and why')
+    .description(
+      'Compares two runs: who entered and left the list, how alike the orders are, and each move explained: the parts of its change of ln S, its own change against those of the others, what differs in data, settings and methods. Writes a page with the before-and-after picture.',
+    )
+    .argument('[before]', 'the earlier run (default: the one before the later)', wholeNumber)
+    .argument('[after]', 'the later run (default: the newest)', wholeNumber)
+    .addOption(study())
+    .option('--other-study <file>', 'the study file of the later run, where it is of another study')
+    .option('--most <number>', 'other large moves explained besides those of the lists', wholeNumber, 20)
+    .option('--output <folder>', "folder of the page (default: the study's)")
+    .option('--no-page', 'write no page')
+    .addOption(json())
+    .addHelpText(
+      'after',
+      examples(
+        'swaymark compare                       # the two newest runs',
+        'swaymark compare 1 3 --no-page',
+        'swaymark compare --study town-2013/study.yaml --other-study town-2014/study.yaml',
+      ),
+    )
+    .action(async (before: number | undefined, after: number | undefined, options: CompareCommandOptions) => {
+      keep(await (await import('./commands/compare.js')).compare(before, after, options));
+    });
+}
+
+function addHistoryCommands(program: Command, keep: Keep): void {
+  const runs = program
+    .command('runs')
+    .summary('the runs kept for a study: list, show, note, delete')
+    .description(
+      'Lists the runs kept in study.duckdb with their notes and fingerprints; or shows, notes or deletes some.',
+    )
+    .enablePositionalOptions()
+    .helpCommand('help [command]', 'print help for a command')
+    .addOption(study())
+    .addOption(json())
+    .addHelpText(
+      'after',
+      examples('swaymark runs --study town/study.yaml', 'swaymark runs show 2', 'swaymark runs delete 1 3'),
+    )
+    .action(async (options: RunsOptions) => {
+      keep(await (await import('./commands/runs.js')).runs(options));
+    });
+  // Options may stand before the subcommand too: `runs --study x.yaml show 2`.
+  const all = (command: Command): RunsOptions & { yes?: true } => command.optsWithGlobals();
+  const number = (text: string, before: readonly number[] = []): readonly number[] => [...before, wholeNumber(text)];
+  runs
+    .command('show')
+    .summary('everything kept about a run')
+    .description(
+      'Shows when and by what a run was made, its fingerprints, counts and account of rows, its list, and what differs in the settings from the run before.',
+    )
+    .argument('<run>', 'number of the run', wholeNumber)
+    .addOption(study())
+    .addOption(json())
+    .addHelpText('after', examples('swaymark runs show 2'))
+    .action(async (run: number, _options: unknown, command: Command) => {
+      keep(await (await import('./commands/runs.js')).showOneRun(run, all(command)));
+    });
+  runs
+    .command('note')
+    .summary('put another note to a run')
+    .description("Puts the text in the place of the run's note; an empty text leaves it without one.")
+    .argument('<run>', 'number of the run', wholeNumber)
+    .argument('<text>', 'the note')
+    .addOption(study())
+    .addOption(json())
+    .addHelpText('after', examples('swaymark runs note 1 "before the survey of block 4"'))
+    .action(async (run: number, text: string, _options: unknown, command: Command) => {
+      keep(await (await import('./commands/runs.js')).noteOneRun(run, text, all(command)));
+    });
+  runs
+    .command('delete')
+    .summary('delete runs and what only they use')
+    .description(
+      'Deletes runs with their results, and the inventories kept with them that no other run uses. Says what goes and asks; their numbers are not given again, and reports on the disk stay.',
+    )
+    .argument('<run...>', 'numbers of the runs', number)
+    .option('--yes', 'delete without asking')
+    .addOption(study())
+    .addOption(json())
+    .addHelpText('after', examples('swaymark runs delete 1 3', 'swaymark runs delete 2 --yes'))
+    .action(async (ids: readonly number[], _options: unknown, command: Command) => {
+      keep(await (await import('./commands/runs-delete.js')).deleteRuns(ids, all(command)));
     });
 }
 
@@ -272,32 +398,41 @@ function addMethodCommands(program: Command, keep: Keep): void {
     )
     .argument('<method-id>', 'id of the method (swaymark methods lists them)')
     .argument('[inputs...]', 'name=value; lists as 200,200,180; without inputs it says what it needs')
+    .option('--svg <file>', 'for a spectrum: its picture, with a dot at the period')
     .addOption(units())
     .addOption(json())
     .addHelpText(
       'after',
       examples(
         'swaymark calc asce7-22/period/other height_ft=93',
+        'swaymark calc en1998-1-2004/spectrum/elastic-type-1 ag_g=0.25 ground=C \\\n    period_s=0.8 --svg spectrum.svg',
         'swaymark calc mechanics/period/general-chain masses_t=200,200,180 \\\n    storey_stiffness_MN_per_m=90,80,80',
       ),
     )
-    .action(async (id: string, inputs: string[], options: { units: 'si' | 'us'; json?: true }) => {
-      keep((await import('./commands/calc.js')).calc(id, inputs, options));
+    .action(async (id: string, inputs: string[], options: { units: 'si' | 'us'; json?: true; svg?: string }) => {
+      keep(await (await import('./commands/calc.js')).calc(id, inputs, options));
     });
   program
     .command('spectrum')
     .summary("the study's spectra and their ordinates")
-    .argument('[name]', 'one spectrum: parameters, corners, ordinates')
+    .argument('[names...]', 'one spectrum: parameters, corners, ordinates; several: side by side')
     .addOption(study())
     .option('--at <periods>', 'periods in seconds, for instance 0.2,1', periods)
+    .option('--csv <file>', 'the ordinates as a table, at --at or at periods that draw the curve')
+    .option('--svg <file>', 'the curves as a picture, with dots at --at')
     .addOption(units())
     .addOption(json())
-    .addHelpText('after', examples('swaymark spectrum', 'swaymark spectrum design-c --at 0.2,1'))
-    .action(
-      async (name: string | undefined, options: { study?: string; at?: number[]; units: 'si' | 'us'; json?: true }) => {
-        keep(await (await import('./commands/spectrum.js')).spectrum(name, options));
-      },
-    );
+    .addHelpText(
+      'after',
+      examples(
+        'swaymark spectrum',
+        'swaymark spectrum design-c --at 0.2,1',
+        'swaymark spectrum design-c design-d --svg spectra.svg --csv spectra.csv',
+      ),
+    )
+    .action(async (names: string[], options: SpectrumCommandOptions) => {
+      keep(await (await import('./commands/spectrum.js')).spectrum(names, options));
+    });
 }
 
 function addMeasureCommand(program: Command, keep: Keep): void {

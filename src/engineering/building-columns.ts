@@ -53,6 +53,7 @@ export const BUILDING_WORDS = [
   'mass_irregularity',
   'site_class',
   'hazard_zone',
+  'spectrum',
   'design_level',
   'storey_stiffness_longitudinal_kN_per_m',
   'storey_stiffness_transverse_kN_per_m',
@@ -126,6 +127,7 @@ export function buildingReader(columns: BuildingColumns, pools: YearPools): (i: 
     mass_irregularity,
     site_class,
     hazard_zone,
+    spectrum,
     design_level,
   } = columns.words;
   const structureAt = columns.structure === undefined ? null : structureReader(columns.structure);
@@ -176,6 +178,7 @@ export function buildingReader(columns: BuildingColumns, pools: YearPools): (i: 
       mass_irregularity: mass_irregularity[i] as YesNo | null,
       site_class: site_class[i]!,
       hazard_zone: hazard_zone[i]!,
+      spectrum: spectrum[i]!,
       design_base_shear_coefficient: design_base_shear_coefficient[i]!,
       design_level: design_level[i] as Building['design_level'],
       capacity_sa_g: capacity_sa_g[i]!,

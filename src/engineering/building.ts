@@ -134,6 +134,8 @@ export interface Building {
   readonly mass_irregularity: YesNo | null;
   readonly site_class: string | null;
   readonly hazard_zone: string | null;
+  /** Name of the spectrum it reads, where the inventory says so itself. */
+  readonly spectrum: string | null;
   readonly design_base_shear_coefficient: number;
   readonly design_level: DesignLevel | null;
   readonly capacity_sa_g: number;

@@ -363,6 +363,7 @@ export const COLUMNS: readonly InventoryColumn[] = [
   measure('vs30_mps', 'Shear-wave velocity, upper 30 m', 'speed', 'mps', [50, 3000], 'vs30'),
   measure('site_period_s', 'Site period', 'time', 's', [0.01, 10], 'site period'),
   text('hazard_zone', 'Hazard zone', 'hazard zone', 'seismic zone', 'zone'),
+  text('spectrum', 'Spectrum of the study', 'spectrum'),
   plain(
     'design_base_shear_coefficient',
     'number',

@@ -1,13 +1,12 @@
 /** A vibration record from its file to the period, the picture and the row for the inventory. */
-import { basename, dirname } from 'node:path';
+import { basename } from 'node:path';
 import { measureRecord } from '../engineering/vibration/measure.js';
 import type { MeasureOptions, Measurement } from '../engineering/vibration/measurement.js';
-import { UserError } from '../errors.js';
 import { readVibrationRecord, within } from '../inventory/vibration-record.js';
 import type { RecordRequest, VibrationRecord } from '../inventory/vibration-record.js';
 import { vibrationSvg } from '../reports/vibration-chart.js';
 import { csvText } from './csv-text.js';
-import { prepareFolder, writeSet } from './write-set.js';
+import { writeNamed } from './write-named.js';
 
 export interface MeasureRequest extends RecordRequest, MeasureOptions {
   readonly svg?: string;
@@ -29,21 +28,7 @@ export async function measureFile(path: string, request: MeasureRequest): Promis
   const measured = within(path, () => measureRecord(record.signal, request));
   if (request.svg === undefined) return { record, measured, svg: null };
   const svg = await vibrationSvg(measured, `${basename(path)}, ${record.channel.name}`, record.channel.unit);
-  return { record, measured, svg: await writePicture(request.svg, svg) };
-}
-
-async function writePicture(path: string, svg: string): Promise<string> {
-  try {
-    const [written = path] = await writeSet(prepareFolder(dirname(path)), { [basename(path)]: svg });
-    return written;
-  } catch (error) {
-    if (!(error instanceof UserError)) throw error;
-    const problems = error.problems.map(({ place, message }) => ({
-      place,
-      message: message.replace('--output', '--svg'),
-    }));
-    throw UserError.of(problems);
-  }
+  return { record, measured, svg: await writeNamed(request.svg, svg, '--svg') };
 }
 
 /** The lines of an inventory that hold the measurement: header and row. A free decay is a forced vibration of small amplitude. */

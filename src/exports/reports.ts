@@ -10,6 +10,10 @@ import type { Database } from '../store/database.js';
 import { endRanking, prepareRanking, writeRankingCsv, writeRankingParquet } from './ranking.js';
 import { writeRejectsCsv } from './rejects.js';
 import { writeSet } from './write-set.js';
+import type { FileSource } from './write-set.js';
+
+/** The files a run writes. */
+export const REPORT_FILES = ['dashboard.html', 'summary.md', 'ranking.csv', 'ranking.parquet', 'rejects.csv'] as const;
 
 export interface Written {
   /** Paths of the files, the dashboard first. */
@@ -34,7 +38,7 @@ export async function writeReports(
     ranking.catch(() => undefined);
     const data = await pageDataOf(db, runId, display);
     const { inventory } = data.summary.fingerprints;
-    const files = await writeSet(folder, {
+    const sources: Readonly<Record<(typeof REPORT_FILES)[number], FileSource>> = {
       'dashboard.html': async (path) => {
         await ranking;
         await writersUnderWay();
@@ -50,8 +54,8 @@ export async function writeReports(
         await db.beside((other) => writeRankingParquet(other, runId, path));
       },
       'rejects.csv': (path) => db.beside((other) => writeRejectsCsv(other, inventory, path)),
-    });
-    return { files, data };
+    };
+    return { files: await writeSet(folder, sources), data };
   } finally {
     await endRanking(db, runId);
   }

@@ -4,6 +4,7 @@ import type { MethodRecord } from '../engineering/formula.js';
 import { SPECTRAL_DISPLACEMENT } from '../engineering/demand/records.js';
 import { segmentAt } from '../engineering/spectrum/compiled.js';
 import { compileSpectrum } from '../engineering/spectrum/definition.js';
+import { flagWords } from '../engineering/spectrum/flags.js';
 import { cite } from '../engineering/source.js';
 import { UserError, showValue } from '../errors.js';
 import type { LoadedStudy } from '../study/load.js';
@@ -33,7 +34,9 @@ export interface SpectrumSheet {
   readonly plateau: { readonly from_s: number; readonly to_s: number; readonly sa_g: number };
   /** Longest period the publication covers, s; null without a limit. */
   readonly valid_to_s: number | null;
-  /** Titles of the levels that read it, with the site class or zone. */
+  /** What a reader must know about these parameters, in words. */
+  readonly flags: readonly string[];
+  /** Titles of the levels that read it, with the site class, zone or name in the inventory. */
   readonly read_by: readonly string[];
   readonly ordinates: readonly Ordinate[];
 }
@@ -97,6 +100,7 @@ export function readSpectrum(
     corners_s: compiled.segments.slice(1).map(({ from_s }) => from_s),
     plateau: { from_s: compiled.plateau_from_s, to_s: compiled.plateau_to_s, sa_g: read(compiled.plateau_from_s) },
     valid_to_s: Number.isFinite(compiled.valid_to_s) ? compiled.valid_to_s : null,
+    flags: flagWords(compiled),
     read_by: readBy(loaded, name),
     ordinates,
   };
@@ -105,10 +109,13 @@ export function readSpectrum(
 function readBy({ study }: LoadedStudy, name: string): readonly string[] {
   return study.hazard.levels.flatMap((level) => {
     if ('spectrum' in level) return level.spectrum === name ? [level.title] : [];
+    if (level.spectra === undefined)
+      return [`${level.title}: where the inventory names it${level.otherwise === name ? ', otherwise' : ''}`];
     const keys = Object.entries(level.spectra)
       .filter(([, spectrum]) => spectrum === name)
       .map(([key]) => key);
     const which = level.otherwise === name ? [...keys, 'otherwise'] : keys;
-    return which.length === 0 ? [] : [`${level.title}: ${level.by.replace('_', ' ')} ${which.join(', ')}`];
+    const by = level.by === 'vs30' ? `site class by velocity (${level.classes})` : level.by.replace('_', ' ');
+    return which.length === 0 ? [] : [`${level.title}: ${by} ${which.join(', ')}`];
   });
 }

@@ -2,7 +2,7 @@
 import { COLUMNS, findColumn } from '../engineering/columns.js';
 import { Bug } from '../errors.js';
 import type { Database } from '../store/database.js';
-import { EXTRA_COLUMNS, FILLED_ATTRIBUTES, ORIGIN_TYPE, columnType } from '../store/schema.js';
+import { CORE_COLUMNS, EXTRA_COLUMNS, FILLED_ATTRIBUTES, ORIGIN_TYPE, columnType } from '../store/schema.js';
 import { quoteName, quoteText } from '../store/sql.js';
 import { keySql } from './cells.js';
 import type { Readings } from './cells.js';
@@ -80,7 +80,15 @@ export async function storeBuildings(
     Float64Array.from(fills, ({ sigma }) => sigma),
     fills.map(({ rule }) => rule),
   ]);
-  await db.run('INSERT INTO building_core SELECT * FROM intake_staged');
+  // By name: a column added by a migration stands last.
+  const core = [
+    'inventory_number',
+    'building_index',
+    ...CORE_COLUMNS.map(({ name }) => name),
+    ...FILLED_ATTRIBUTES.map((name) => `${name}_fill`),
+    ...['year_built_origin', 'year_pool', 'use_origin', 'system_origin', 'rows', 'first_row', 'findings', 'not_ranked'],
+  ];
+  await db.run(`INSERT INTO building_core (${core.map(quoteName).join(', ')}) SELECT * FROM intake_staged`);
   await db.run('DROP TABLE intake_staged');
   const stored = await db.value('SELECT count(*) FROM building_core WHERE inventory_number = ?', [number]);
   if (stored !== parts.sizes.rowCount) throw new Bug(`stored ${String(stored)} of ${parts.sizes.rowCount} buildings`);
@@ -96,7 +104,7 @@ export async function storeBuildings(
       ? `CASE WHEN ${key} NOT IN (SELECT first_row FROM intake_impossible) THEN ${sql} END`
       : sql;
   await db.run(
-    `INSERT INTO building_extra
+    `INSERT INTO building_extra (inventory_number, building_index, ${EXTRA_COLUMNS.map(({ name }) => quoteName(name)).join(', ')})
      SELECT ${number}, f.building_index, ${typed
        .filter(({ name }) => isExtra(name))
        .map(cell)

@@ -170,7 +170,8 @@ function fingerprint(source: Source, pairs: Source | undefined, study: IntakeStu
   return source.hash.copy().update(rest, 'utf8').digest('hex').slice(0, 16);
 }
 
-async function readTaken(db: Database, inventoryId: string): Promise<TakenIn> {
+/** An inventory that is in the database already. */
+export async function readTaken(db: Database, inventoryId: string): Promise<TakenIn> {
   const [row] = await db.rows<{ rows_in: number; buildings: number; attributes: string }>(
     'SELECT rows_in, buildings, attributes FROM inventory WHERE inventory_id = ?',
     [inventoryId],

@@ -1,46 +1,10 @@
 /** The picture of a measured record: its spectrum, and the decay where it is one. Drawn without a display, in plain colours. */
-import { View, parse } from 'vega';
-import { compile } from 'vega-lite';
-import type { Config, TopLevelSpec } from 'vega-lite';
 import { formatNumber } from '../engineering/format.js';
 import type { Measurement } from '../engineering/vibration/measurement.js';
+import { LINE, MARK, SOFT, svgOf } from './picture.js';
 
-const INK = '#1d2733';
-const SOFT = '#5b6b7b';
-const LINE = '#1f5a8c';
-const MARK = '#8a4b08';
-const GRID = '#e1e6eb';
-const FONT = 'system-ui, "Segoe UI", Roboto, "Helvetica Neue", Arial, sans-serif';
 const WIDTH = 680;
 const MOST_POINTS = 1500;
-
-const CONFIG: Config = {
-  background: '#ffffff',
-  font: FONT,
-  padding: 12,
-  view: { stroke: 'transparent' },
-  axis: {
-    labelColor: SOFT,
-    titleColor: INK,
-    domainColor: SOFT,
-    tickColor: SOFT,
-    gridColor: GRID,
-    labelFontSize: 12,
-    titleFontSize: 12.5,
-    titleFontWeight: 600,
-    titlePadding: 10,
-  },
-  title: { anchor: 'start', color: INK, fontSize: 15, fontWeight: 600, subtitleColor: SOFT, subtitleFontSize: 12, offset: 12 },
-};
-
-// File and column names are the owner's: no markup, and nothing an XML reader refuses.
-function xmlText(text: string): string {
-  return text
-    .replaceAll('&', '&amp;')
-    .replaceAll('<', '&lt;')
-    .replaceAll('>', '&gt;')
-    .replace(/[\p{Cc}\ufffe\uffff]/gu, ' ');
-}
 
 /** What the picture says, in words. */
 export function vibrationSentence(measured: Measurement): string {
@@ -57,12 +21,7 @@ export function vibrationSentence(measured: Measurement): string {
 /** The picture as SVG text. `unit` is that of the channel, as its header writes it. */
 export async function vibrationSvg(measured: Measurement, title: string, unit: string | null): Promise<string> {
   const charts = [spectrumChart(measured, unit), ...(measured.decay === null ? [] : [decayChart(measured, unit)])];
-  const spec = { title: { text: title, subtitle: [subtitleOf(measured), keyOf(measured)] }, vconcat: charts } as unknown as TopLevelSpec;
-  const view = new View(parse(compile(spec, { config: CONFIG }).spec), { renderer: 'none' });
-  const svg = await view.toSVG();
-  view.finalize();
-  const words = `<title>${xmlText(title)}</title><desc>${xmlText(vibrationSentence(measured))}</desc>`;
-  return `${svg.replace(/<svg([^>]*)>/, (_all, rest: string) => `<svg role="img"${rest.replace(/ role="[^"]*"/, '')}>${words}`)}\n`;
+  return svgOf({ title: { text: title, subtitle: [subtitleOf(measured), keyOf(measured)] }, vconcat: charts }, title, vibrationSentence(measured));
 }
 
 function subtitleOf({ frequency_hz, period_s, period_se_s, damping }: Measurement): string {

@@ -1,5 +1,5 @@
 /** The runs a study's database keeps. */
-import { UserError } from '../errors.js';
+import { Bug, UserError } from '../errors.js';
 import type { Database } from '../store/database.js';
 
 /** A run as a list shows it. */
@@ -47,14 +47,56 @@ export async function latestRun(db: Database): Promise<RunEntry> {
 
 /** The run of that number. @throws UserError when there is none, naming those there are. */
 export async function runById(db: Database, id: number): Promise<RunEntry> {
+  const [found] = await runsByIds(db, [id]);
+  if (found === undefined) throw new Bug(`run ${String(id)} is neither there nor missing`);
+  return found;
+}
+
+/** The runs of these numbers, oldest first, each once. @throws UserError naming every one that is not there, and those that are. */
+export async function runsByIds(db: Database, ids: readonly number[]): Promise<readonly RunEntry[]> {
   const runs = await listRuns(db);
-  const found = runs.find(({ run }) => run === id);
-  if (found !== undefined) return found;
-  const first = runs[0]?.run;
-  if (first === undefined) throw new UserError(NO_RUNS, { file: db.file });
-  const last = runs.at(-1)?.run ?? first;
-  throw new UserError(
-    `there is no run ${String(id)}; kept: ${first === last ? String(first) : `${String(first)} to ${String(last)}`}`,
-    { file: db.file },
-  );
+  const kept = runs.map(({ run }) => run);
+  if (kept.length === 0 && (await deletedRuns(db)).size === 0) throw new UserError(NO_RUNS, { file: db.file });
+  const missing = [...new Set(ids)].filter((id) => !kept.includes(id));
+  if (missing.length > 0) {
+    const deleted = await deletedRuns(db);
+    throw UserError.of(
+      missing.map((id) => ({ place: { file: db.file }, message: missingRun(id, deleted.get(id), kept) })),
+    );
+  }
+  return runs.filter(({ run }) => ids.includes(run));
+}
+
+function missingRun(id: number, deleted: string | undefined, kept: readonly number[]): string {
+  const what =
+    deleted === undefined
+      ? `there is no run ${String(id)}`
+      : `run ${String(id)} was deleted on ${deleted.slice(0, 10)}`;
+  return `${what}; kept: ${kept.length === 0 ? 'none' : spans(kept)}`;
+}
+
+/** "1, 3, 5 to 9". */
+function spans(numbers: readonly number[]): string {
+  const parts: [number, number][] = [];
+  for (const number of numbers) {
+    const last = parts.at(-1);
+    if (last?.[1] === number - 1) last[1] = number;
+    else parts.push([number, number]);
+  }
+  return parts.map(([from, to]) => (from === to ? String(from) : `${String(from)} to ${String(to)}`)).join(', ');
+}
+
+/** When each deleted run was deleted, ISO 8601, by its number. */
+async function deletedRuns(db: Database): Promise<ReadonlyMap<number, string>> {
+  if ((await db.value("SELECT count(*) FROM information_schema.tables WHERE table_name = 'run_deleted'")) === 0)
+    return new Map();
+  const rows = await db.rows<{ run_id: number; deleted: string }>('SELECT run_id, deleted FROM run_deleted');
+  return new Map(rows.map(({ run_id, deleted }) => [run_id, deleted]));
+}
+
+/** Puts `note` in the place of the run's note; empty text leaves it without. @returns the run as it was before. @throws UserError for an unknown run. */
+export async function writeNote(db: Database, id: number, note: string): Promise<RunEntry> {
+  const before = await runById(db, id);
+  await db.run('UPDATE run SET note = ? WHERE run_id = ?', [note, id]);
+  return before;
 }

@@ -13,8 +13,10 @@ import { databasePath, openStudyDatabase } from '../screening/screen.js';
 import type { Database } from '../store/database.js';
 import { loadStudy } from '../study/load.js';
 import type { LoadedStudy } from '../study/load.js';
-import { latestRun, listRuns, runById } from './history.js';
+import { latestRun, listRuns, runById, writeNote } from './history.js';
 import type { RunEntry } from './history.js';
+import { runSheet } from './sheet.js';
+import type { RunSheet } from './sheet.js';
 
 /** Which run is meant; the newest when left out. Units of what is shown; SI when left out. */
 export interface RunChoice {
@@ -44,6 +46,22 @@ export async function withStudyDatabase<T>(
   }
 }
 
+/** The same for writing. @throws UserError when there is none yet. */
+export async function changeStudyDatabase<T>(
+  path: string,
+  work: (db: Database, loaded: LoadedStudy) => Promise<T>,
+): Promise<T> {
+  const loaded = await loadStudy(path);
+  const file = databasePath(loaded);
+  if (!existsSync(file)) throw new UserError('this study has no run yet; run `swaymark screen` first', { file });
+  const db = await openStudyDatabase(loaded);
+  try {
+    return await work(db, loaded);
+  } finally {
+    db.close();
+  }
+}
+
 /** The chosen run of an open database. @throws UserError when there is none. */
 export async function chosenRun(db: Database, { run }: RunChoice): Promise<RunEntry> {
   return run === undefined ? latestRun(db) : runById(db, run);
@@ -57,6 +75,26 @@ export async function chosenRun(db: Database, { run }: RunChoice): Promise<RunEn
  */
 export async function listStudyRuns(path: string): Promise<readonly RunEntry[]> {
   return withStudyDatabase(path, listRuns);
+}
+
+/**
+ * Everything kept about run `run` of the study at `path`: provenance, counts, the account of rows, the list, and what differs from the run before.
+ * @throws UserError for a study without runs or an unknown run.
+ * @example
+ * const { list, before } = await showRun('study.yaml', 2);
+ */
+export async function showRun(path: string, run: number): Promise<RunSheet> {
+  return withStudyDatabase(path, (db) => runSheet(db, run));
+}
+
+/**
+ * Puts `note` in the place of the note of run `run` of the study at `path`; empty text leaves it without one.
+ * @returns the run as it was before. @throws UserError for a study without runs or an unknown run.
+ * @example
+ * await noteRun('study.yaml', 1, 'before the survey of block 4');
+ */
+export async function noteRun(path: string, run: number, note: string): Promise<RunEntry> {
+  return changeStudyDatabase(path, (db) => writeNote(db, run, note));
 }
 
 /**

@@ -33,11 +33,11 @@ const READ = 122_880;
 /** Parts of it handed to threads. */
 const PARTS = 4;
 
-/** Assesses `count` buildings and keeps the results as those of run `runId`. `onProgress` hears how many are done. */
+/** Assesses `count` buildings and keeps the results as those of run `runId`, or keeps none where it is null. `onProgress` hears how many are done. */
 export async function assessAll(
   db: Database,
   inventoryId: string,
-  runId: number,
+  runId: number | null,
   count: number,
   assessor: Assessor,
   onProgress?: (done: number) => void,
@@ -54,7 +54,7 @@ export async function assessAll(
       const work = (async (): Promise<void> => {
         const done = await result;
         await before;
-        await keepAssessed(db, runId, from, done);
+        if (runId !== null) await keepAssessed(db, runId, from, done);
         gathering.add(from, done);
         onProgress?.(from + done.rows);
       })();

@@ -1,7 +1,11 @@
 /** The assumptions register and the cautions that every report carries. */
 import type { AssessSettings } from '../engineering/assess/settings.js';
+import { compileContext } from '../engineering/assess/context.js';
 import { standardNote, standardRead } from '../engineering/period/choose.js';
 import type { Assumption } from '../engineering/page-contract.js';
+import { VS30_TABLES } from '../engineering/site/vs30.js';
+import { cite } from '../engineering/source.js';
+import { flagWords } from '../engineering/spectrum/flags.js';
 import type { SlopeFound } from './slopes.js';
 
 const JUDGEMENT = 'judgement';
@@ -103,6 +107,7 @@ export function assumptionsOf(settings: AssessSettings, slopes: readonly SlopeFo
       value: slopes.map(({ spectrum, k }) => `${k.toFixed(2)} for ${spectrum}`).join(', '),
       source: settings.slopeSource,
     },
+    ...spectrumAssumptions(settings),
     {
       id: 'code-history',
       statement: 'Code history of the place',
@@ -179,6 +184,31 @@ export function assumptionsOf(settings: AssessSettings, slopes: readonly SlopeFo
     { id: 'rank-by', statement: 'What is ranked', value: settings.rankBy, source: 'study' },
   ];
   return list;
+}
+
+/** What the spectra that some level reads say about their parameters, and by which table a velocity becomes a site class. */
+function spectrumAssumptions(settings: AssessSettings): readonly Assumption[] {
+  const { levels } = settings;
+  const read = new Set(levels.flatMap(({ spectra, otherwise }) => [...Object.values(spectra), otherwise]));
+  const codes = new Set(levels.flatMap(({ classes }) => (classes === undefined ? [] : [classes])));
+  return [
+    ...[...codes].map((code) => ({
+      id: `site-class-${code}`,
+      statement: 'Site class from the shear-wave velocity of the upper 30 m; the class on record where there is none',
+      value: code,
+      source: `${VS30_TABLES[code].source}, ${VS30_TABLES[code].verified === 'memory' ? 'from memory' : 'restated'}`,
+    })),
+    ...Object.values(compileContext(settings).spectra)
+      .filter(({ name }) => read.has(name))
+      .flatMap(({ name, compiled, record }) =>
+        flagWords(compiled).map((statement, i) => ({
+          id: `spectrum-${name}-${String(i + 1)}`,
+          statement,
+          value: name,
+          source: cite(record.source),
+        })),
+      ),
+  ];
 }
 
 export const CAUTIONS: readonly string[] = [

@@ -2,26 +2,45 @@
 import { resolve } from 'node:path';
 import { SPREADS } from '../engineering/assess/settings.js';
 import type { AssessSettings, LevelSettings } from '../engineering/assess/settings.js';
+import { SPECTRUM_REGISTER } from '../engineering/spectrum/definition.js';
 import { findMethod } from '../engineering/methods.js';
 import { STIFFNESS_ROUTES } from '../engineering/stiffness/routes.js';
 import { UserError, showValue } from '../errors.js';
 import { loadPrior } from '../study/prior.js';
 import type { LoadedStudy } from '../study/load.js';
-import type { Level } from '../study/schema.js';
+import type { Level, Study } from '../study/schema.js';
 
 /** Slope of the hazard curve where the study names one level only [judgement]. */
 const ASSUMED_SLOPE = 2.5;
 
-function levelOf(level: Level): LevelSettings {
+function levelOf(level: Level, study: Study): LevelSettings {
   if ('spectrum' in level) return { title: level.title, by: null, spectra: { all: level.spectrum }, otherwise: null };
-  return { title: level.title, by: level.by, spectra: level.spectra, otherwise: level.otherwise ?? null };
+  return {
+    title: level.title,
+    by: level.by,
+    ...(level.by === 'vs30' ? { classes: level.classes } : {}),
+    spectra: level.spectra ?? eachByItsName(study),
+    otherwise: level.otherwise ?? null,
+  };
+}
+
+/** Every elastic spectrum of the study under its own name; those that contain a behaviour factor serve base shear and are left out. */
+function eachByItsName({ hazard }: Study): Readonly<Record<string, string>> {
+  const reduced = new Set(SPECTRUM_REGISTER.flatMap(({ code, reduced: is }) => (is === true ? [code] : [])));
+  return Object.fromEntries(
+    Object.entries(hazard.spectra).flatMap(([name, { code }]) => (reduced.has(code) ? [] : [[name, name] as const])),
+  );
 }
 
 /**
  * Settings of a loaded study; the slope is the stated one, or 2.5 until two levels have given it (slopes.ts).
+ * `keptPrior` stands in for the table that system_prior names.
  * @throws UserError for a system prior that cannot be read or a method switched off that does not exist.
  */
-export async function settingsOf(loaded: LoadedStudy): Promise<AssessSettings> {
+export async function settingsOf(
+  loaded: LoadedStudy,
+  keptPrior?: NonNullable<AssessSettings['systemPrior']>,
+): Promise<AssessSettings> {
   const { study, folder } = loaded;
   study.period.switched_off.forEach((id, i) => {
     if (findMethod(id) === undefined && !STIFFNESS_ROUTES.some((route) => route.id === id)) {
@@ -39,11 +58,12 @@ export async function settingsOf(loaded: LoadedStudy): Promise<AssessSettings> {
       );
     }
   }
-  const prior = study.system_prior === undefined ? null : await loadPrior(resolve(folder, study.system_prior));
+  const prior =
+    study.system_prior === undefined ? null : (keptPrior ?? (await loadPrior(resolve(folder, study.system_prior))));
   const { place, seismic_design_enforced_from, adoption_lag_years, editions, detailing_from } = study.code_history;
   return {
     spectra: study.hazard.spectra,
-    levels: study.hazard.levels.map(levelOf),
+    levels: study.hazard.levels.map((level) => levelOf(level, study)),
     holdPlateau: study.hazard.hold_plateau,
     period: {
       standard: study.period.standard,

@@ -1,6 +1,6 @@
 /** Slope of the hazard curve per spectrum of the ranking level, from two levels at the zone's median period. */
-import { chooseSpectrum, compileContext, readAt } from '../engineering/assess/context.js';
-
+import { chooseSpectrum } from '../engineering/assess/choose-spectrum.js';
+import { compileContext, readAt } from '../engineering/assess/context.js';
 import { buildingReader } from '../engineering/building-columns.js';
 import type { YearPools } from '../engineering/building-columns.js';
 import type { AssessSettings } from '../engineering/assess/settings.js';

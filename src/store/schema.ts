@@ -7,6 +7,7 @@ import { RESULT_COLUMNS } from '../engineering/results.js';
 import type { ResultColumn } from '../engineering/results.js';
 import { UserError } from '../errors.js';
 import type { Database } from './database.js';
+import { SCHEMA_V1 } from './schema-v1.js';
 import { quoteName, quoteText } from './sql.js';
 
 export interface Migration {
@@ -27,7 +28,8 @@ const CORE = new Set(
 /** Attributes that carry origin, spread and rule. */
 export const FILLED_ATTRIBUTES = ['storeys_above', 'height_m', 'floor_area_m2'] as const;
 
-/** The columns of COLUMNS that stand in `building_extra`. */
+/** The columns of COLUMNS that stand in `building_core`, and those that stand in `building_extra`. */
+export const CORE_COLUMNS = COLUMNS.filter(({ name }) => CORE.has(name));
 export const EXTRA_COLUMNS = COLUMNS.filter(({ name }) => !CORE.has(name));
 
 /** The database type of an inventory column: words are enumerated, so that a code costs a byte and reads as its word. */
@@ -42,57 +44,6 @@ function enumType(words: readonly string[]): string {
 
 /** The database type of an origin. */
 export const ORIGIN_TYPE = enumType(ORIGINS);
-const columnDefinition = (column: InventoryColumn): string => `${quoteName(column.name)} ${columnType(column)}`;
-
-function buildingView(): string {
-  const columns = COLUMNS.map(({ name }) => `${CORE.has(name) ? 'c' : 'e'}.${quoteName(name)}`);
-  const filled = FILLED_ATTRIBUTES.flatMap((name, at) => [
-    `f${at}.origin AS ${name}_origin`,
-    `f${at}.sigma AS ${name}_sigma`,
-    `f${at}.rule AS ${name}_rule`,
-  ]);
-  const joins = FILLED_ATTRIBUTES.map(
-    (name, at) => `JOIN fill f${at} ON f${at}.inventory_number = c.inventory_number AND f${at}.fill = c.${name}_fill`,
-  );
-  return `CREATE VIEW building AS
-    SELECT i.inventory_id, c.building_index, ${columns.join(', ')}, ${filled.join(', ')}, c.year_built_origin, c.year_pool,
-      c.use_origin, c.system_origin, c.rows, c.first_row, c.findings, c.not_ranked
-    FROM building_core c JOIN inventory i ON i.inventory_number = c.inventory_number ${joins.join(' ')}
-    LEFT JOIN building_extra e ON e.inventory_number = c.inventory_number AND e.building_index = c.building_index`;
-}
-
-// No key on the large tables: an index over a million rows costs more than all their queries.
-const INTAKE_TABLES: readonly string[] = [
-  `CREATE TABLE inventory (inventory_id VARCHAR PRIMARY KEY, file VARCHAR NOT NULL, encoding VARCHAR NOT NULL,
-     delimiter VARCHAR NOT NULL, rows_in INTEGER NOT NULL, buildings INTEGER NOT NULL, attributes VARCHAR NOT NULL,
-     inventory_number INTEGER NOT NULL)`,
-  `CREATE TABLE building_core (${[
-    'inventory_number INTEGER NOT NULL',
-    'building_index INTEGER NOT NULL',
-    ...COLUMNS.filter(({ name }) => CORE.has(name)).map(columnDefinition),
-    ...FILLED_ATTRIBUTES.map((name) => `${name}_fill INTEGER NOT NULL`),
-    `year_built_origin ${ORIGIN_TYPE} NOT NULL`,
-    'year_pool INTEGER',
-    `use_origin ${ORIGIN_TYPE} NOT NULL`,
-    `system_origin ${ORIGIN_TYPE} NOT NULL`,
-    'rows INTEGER NOT NULL',
-    'first_row INTEGER NOT NULL',
-    'findings INTEGER NOT NULL',
-    'not_ranked VARCHAR',
-  ].join(', ')})`,
-  `CREATE TABLE building_extra (inventory_number INTEGER NOT NULL, building_index INTEGER NOT NULL,
-     ${EXTRA_COLUMNS.map(columnDefinition).join(', ')})`,
-  `CREATE TABLE fill (inventory_number INTEGER NOT NULL, fill INTEGER NOT NULL, origin ${ORIGIN_TYPE} NOT NULL,
-     sigma DOUBLE NOT NULL, rule VARCHAR NOT NULL)`,
-  buildingView(),
-  `CREATE TABLE year_pool (inventory_id VARCHAR NOT NULL, pool INTEGER NOT NULL, label VARCHAR NOT NULL,
-     position INTEGER NOT NULL, year DOUBLE NOT NULL)`,
-  `CREATE TABLE neighbour (inventory_id VARCHAR NOT NULL, id_a VARCHAR NOT NULL, id_b VARCHAR NOT NULL, gap_m DOUBLE,
-     floors_aligned VARCHAR)`,
-  'CREATE TABLE row_account (inventory_id VARCHAR NOT NULL, kind VARCHAR NOT NULL, rows INTEGER NOT NULL)',
-  `CREATE TABLE finding (inventory_id VARCHAR NOT NULL, "row" INTEGER, line INTEGER, id VARCHAR, column_name VARCHAR,
-     value VARCHAR, code VARCHAR NOT NULL, message VARCHAR NOT NULL, action VARCHAR NOT NULL, kind VARCHAR NOT NULL)`,
-];
 
 const RESULT_TYPES = { number: 'DOUBLE', whole: 'INTEGER', text: 'VARCHAR' } as const;
 
@@ -115,44 +66,61 @@ export const RANKED_COLUMNS = RESULT_COLUMNS.filter(({ name }) => RANKED.has(nam
 /** What is known of it alone, kept while the others are assessed; in `result_assessed`. The view `result` has both. */
 export const ASSESSED_COLUMNS = RESULT_COLUMNS.filter(({ name }) => !RANKED.has(name));
 
-function resultDefinition(columns: readonly ResultColumn[]): string {
-  const typed = columns.map(
-    ({ name, kind }) =>
-      `${quoteName(name)} ${RESULT_WORDS[name] === undefined ? RESULT_TYPES[kind] : enumType(RESULT_WORDS[name])}`,
-  );
-  return `run_id INTEGER NOT NULL, building_index INTEGER NOT NULL, ${typed.join(', ')}`;
+/** The database type of a result. */
+export function resultType({ name, kind }: ResultColumn): string {
+  const words = RESULT_WORDS[name];
+  return words === undefined ? RESULT_TYPES[kind] : enumType(words);
 }
 
-const RUN_TABLES: readonly string[] = [
-  `CREATE TABLE run (run_id INTEGER PRIMARY KEY, made VARCHAR NOT NULL, program VARCHAR NOT NULL, note VARCHAR NOT NULL,
-     title VARCHAR NOT NULL, inventory_id VARCHAR NOT NULL, study_fingerprint VARCHAR NOT NULL, methods_fingerprint VARCHAR NOT NULL,
-     settings VARCHAR NOT NULL, study_text VARCHAR NOT NULL, summary VARCHAR NOT NULL, buildings INTEGER NOT NULL,
-     ranked INTEGER NOT NULL, list_size INTEGER NOT NULL, rank_by VARCHAR NOT NULL, seed BIGINT NOT NULL)`,
-  `CREATE TABLE result_assessed (${resultDefinition(ASSESSED_COLUMNS)})`,
-  `CREATE TABLE result_ranked (${resultDefinition(RANKED_COLUMNS)})`,
-  `CREATE VIEW result AS SELECT a.run_id, a.building_index, ${RESULT_COLUMNS.map(
+function buildingView(): string {
+  const columns = COLUMNS.map(({ name }) => `${CORE.has(name) ? 'c' : 'e'}.${quoteName(name)}`);
+  const filled = FILLED_ATTRIBUTES.flatMap((name, at) => [
+    `f${at}.origin AS ${name}_origin`,
+    `f${at}.sigma AS ${name}_sigma`,
+    `f${at}.rule AS ${name}_rule`,
+  ]);
+  const joins = FILLED_ATTRIBUTES.map(
+    (name, at) => `JOIN fill f${at} ON f${at}.inventory_number = c.inventory_number AND f${at}.fill = c.${name}_fill`,
+  );
+  return `CREATE OR REPLACE VIEW building AS
+    SELECT i.inventory_id, c.building_index, ${columns.join(', ')}, ${filled.join(', ')}, c.year_built_origin, c.year_pool,
+      c.use_origin, c.system_origin, c.rows, c.first_row, c.findings, c.not_ranked
+    FROM building_core c JOIN inventory i ON i.inventory_number = c.inventory_number ${joins.join(' ')}
+    LEFT JOIN building_extra e ON e.inventory_number = c.inventory_number AND e.building_index = c.building_index`;
+}
+
+/** What statements read: made from the registers whenever the tables have changed, as they hold nothing of their own. */
+const VIEWS: readonly string[] = [
+  buildingView(),
+  `CREATE OR REPLACE VIEW result AS SELECT a.run_id, a.building_index, ${RESULT_COLUMNS.map(
     (column) => `${RANKED_COLUMNS.includes(column) ? 'k' : 'a'}.${quoteName(column.name)}`,
   ).join(', ')}
      FROM result_assessed a JOIN result_ranked k ON k.run_id = a.run_id AND k.building_index = a.building_index`,
 ];
 
-/** Every step from an empty database to today's tables, in order; a step once released is never edited. */
-export const MIGRATIONS: readonly Migration[] = [{ version: 1, statements: [...INTAKE_TABLES, ...RUN_TABLES] }];
+/**
+ * Every step from an empty database to today's tables, in order, as fixed text: a step once released is never edited. A new column or
+ * word in a register needs a further step (DEVELOPERS.md says how); test/store/schema.test.ts compares the registers with what they yield.
+ */
+export const MIGRATIONS: readonly Migration[] = [
+  { version: 1, statements: SCHEMA_V1 },
+  {
+    version: 2,
+    statements: [
+      'ALTER TABLE building_extra ADD COLUMN "spectrum" VARCHAR',
+      // The numbers of deleted runs are not given again.
+      'CREATE TABLE run_deleted (run_id INTEGER NOT NULL, deleted VARCHAR NOT NULL)',
+    ],
+  },
+];
 
 /**
- * Brings the tables up to date, in one transaction.
+ * Brings the tables up to date, in one transaction: killed or failing in the middle, it leaves them as they were.
  * @throws UserError when a newer program wrote the database.
  */
 export async function prepareSchema(db: Database, migrations: readonly Migration[] = MIGRATIONS): Promise<void> {
-  const latest = Math.max(...migrations.map(({ version }) => version));
+  if ((await schemaState(db, migrations)) === 'current') return;
   const found = await schemaVersion(db);
-  if (found > latest) {
-    throw new UserError(
-      `the database has tables of version ${found}, this program knows ${latest}; update swaymark or name another output`,
-      { file: db.file },
-    );
-  }
-  if (found === latest) return;
   await db.transaction(async () => {
     await db.run('CREATE TABLE IF NOT EXISTS schema_version (version INTEGER NOT NULL)');
     for (const { version, statements } of migrations) {
@@ -160,7 +128,25 @@ export async function prepareSchema(db: Database, migrations: readonly Migration
       for (const statement of statements) await db.run(statement);
       await db.run('INSERT INTO schema_version VALUES (?)', [version]);
     }
+    for (const view of VIEWS) await db.run(view);
   });
+}
+
+/** Whether the database has all tables of today, those of an earlier version, or none. @throws UserError when a newer program wrote it. */
+export async function schemaState(
+  db: Database,
+  migrations: readonly Migration[] = MIGRATIONS,
+): Promise<'current' | 'earlier' | 'empty'> {
+  const latest = Math.max(...migrations.map(({ version }) => version));
+  const found = await schemaVersion(db);
+  if (found > latest) {
+    throw new UserError(
+      `the database has tables of version ${String(found)}, this program knows ${String(latest)}; update swaymark, or move the file away and screen again`,
+      { file: db.file },
+    );
+  }
+  if (found === latest) return 'current';
+  return found === 0 ? 'empty' : 'earlier';
 }
 
 /** The version of the tables in the database, 0 when it has none. */

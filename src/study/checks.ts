@@ -2,6 +2,7 @@
  * What one key of a study says about another. The checks read the raw value, whatever else is wrong with it, so that all
  * problems of a file come at once; what the schema already refuses they leave alone.
  */
+import { VS30_TABLES } from '../engineering/site/vs30.js';
 import { SPECTRUM_REGISTER } from '../engineering/spectrum/definition.js';
 import { showValue } from '../errors.js';
 import { suggest } from './nearest.js';
@@ -87,20 +88,45 @@ function checkLevels(study: unknown): Finding[] {
         message: `level ${first + 1} has the title ${showValue(title)} already; name them apart`,
       });
     } else titles.set(title, i);
-    const by = at(level, 'by');
-    const given = by === 'site_class' ? ['site_class', 'vs30_mps'] : ['hazard_zone'];
-    const silent = given.every((column) => at(columns, column) === undefined);
-    if (
-      (by === 'site_class' || by === 'hazard_zone') &&
-      silent &&
-      isMapping(columns) &&
-      at(level, 'otherwise') === undefined
-    ) {
-      const message = `inventory.columns names no ${by}, so no building would have a spectrum; name it, or say otherwise:`;
-      findings.push({ path: [...path, 'by'], message });
-    }
-    return findings;
+    return [...findings, ...checkColumns(level, columns, path), ...checkClasses(level, path)];
   });
+}
+
+/** Columns of the inventory of which a level needs one, by the word after `by`. */
+const READ_BY: Readonly<Record<string, readonly string[]>> = {
+  site_class: ['site_class'],
+  hazard_zone: ['hazard_zone'],
+  vs30: ['vs30_mps', 'site_class'],
+  spectrum: ['spectrum'],
+};
+
+function checkColumns(level: unknown, columns: unknown, path: readonly Step[]): Finding[] {
+  const by = at(level, 'by');
+  const read = typeof by === 'string' && Object.hasOwn(READ_BY, by) ? (READ_BY[by] ?? []) : [];
+  if (read.length === 0 || !isMapping(columns) || at(level, 'otherwise') !== undefined) return [];
+  if (read.some((column) => at(columns, column) !== undefined)) return [];
+  const remedy =
+    by === 'site_class' && at(columns, 'vs30_mps') !== undefined
+      ? 'read its vs30_mps with by: vs30 and classes:'
+      : 'name it, or say otherwise:';
+  const message = `inventory.columns names no ${read[0] ?? ''}, so no building would have a spectrum; ${remedy}`;
+  return [{ path: [...path, 'by'], message }];
+}
+
+/** Site classes that the code of a level by velocity does not have. */
+function checkClasses(level: unknown, path: readonly Step[]): Finding[] {
+  const code = at(level, 'classes');
+  if (at(level, 'by') !== 'vs30' || typeof code !== 'string') return [];
+  const table = Object.entries(VS30_TABLES).find(([name]) => name === code)?.[1];
+  if (table === undefined) return [];
+  const known = table.classes.map(({ site_class }) => site_class);
+  return entries(at(level, 'spectra'))
+    .filter(([site_class]) => !known.includes(site_class))
+    .map(([site_class]) => ({
+      path: [...path, 'spectra', site_class],
+      message: `${code} has no site class ${showValue(site_class)} that a velocity tells; it has ${known.join(', ')}`,
+      atKey: true,
+    }));
 }
 
 function checkSlope(study: unknown): Finding[] {

@@ -3,6 +3,8 @@ import { z } from 'zod';
 import { SYSTEMS } from '../engineering/building.js';
 import type { System } from '../engineering/building.js';
 import { BASES, PERIOD_STANDARDS } from '../engineering/period/choose.js';
+import { VS30_TABLES } from '../engineering/site/vs30.js';
+import { showValue } from '../errors.js';
 import { CodeHistorySchema } from './code-editions.js';
 import { expected, list, mapping, strict, text, whole, word } from './fields.js';
 import { InventorySchema, NeighboursSchema, WordsSchema } from './inventory-schema.js';
@@ -11,18 +13,52 @@ import { SpectrumSchema } from './spectrum-codes.js';
 const levelTitle = text().describe('Name of the level in reports; no two alike.');
 const spectrumName = text('the name of a spectrum of hazard.spectra');
 
+const otherwise = spectrumName
+  .exactOptional()
+  .describe('The spectrum of buildings whose value is blank or not listed; without it they are not ranked.');
+
+const byColumn = strict({
+  title: levelTitle,
+  by: word(['site_class', 'hazard_zone']).describe('The column that says which spectrum a building reads.'),
+  spectra: mapping(z.string(), spectrumName, 'site classes or zones, each with the name of a spectrum', 1).describe(
+    'Its values, each with the name of a spectrum.',
+  ),
+  otherwise,
+});
+
+const VELOCITY_CODES = Object.keys(VS30_TABLES) as readonly (keyof typeof VS30_TABLES)[];
+
+const byVelocity = strict({
+  title: levelTitle,
+  by: z.literal('vs30').describe('The site class of vs30_mps; where that is blank, the one of the column site_class.'),
+  classes: word(VELOCITY_CODES).describe(
+    'The code whose site classes are meant: letters do not carry from one to another.',
+  ),
+  spectra: mapping(z.string(), spectrumName, 'site classes, each with the name of a spectrum', 1).describe(
+    'Site classes of that code, each with the name of a spectrum.',
+  ),
+  otherwise,
+});
+
+const byName = strict({
+  title: levelTitle,
+  by: z.literal('spectrum').describe('The column spectrum of the inventory names the spectrum of each building.'),
+  spectra: mapping(z.string(), spectrumName, 'names of the inventory, each with the name of a spectrum', 1)
+    .exactOptional()
+    .describe('Names of the inventory, each with the name of a spectrum; left out, they are names of hazard.spectra.'),
+  otherwise,
+});
+
+const LEVEL_KEYS = ['site_class', 'hazard_zone', 'vs30', 'spectrum'] as const;
+
 const LevelSchema = z.union(
   [
     strict({ title: levelTitle, spectrum: spectrumName.describe('The spectrum every building reads.') }),
-    strict({
-      title: levelTitle,
-      by: word(['site_class', 'hazard_zone']).describe('The column that says which spectrum a building reads.'),
-      spectra: mapping(z.string(), spectrumName, 'site classes or zones, each with the name of a spectrum', 1).describe(
-        'Its values, each with the name of a spectrum.',
-      ),
-      otherwise: spectrumName
-        .exactOptional()
-        .describe('The spectrum of buildings whose value is blank or not listed; without it they are not ranked.'),
+    z.discriminatedUnion('by', [byColumn, byVelocity, byName], {
+      error: (issue) => {
+        const by = (issue.input as { by?: unknown } | undefined)?.by;
+        return by === undefined ? undefined : `unknown word ${showValue(by)}; known: ${LEVEL_KEYS.join(', ')}`;
+      },
     }),
   ],
   { error: expected('{title, spectrum} or {title, by, spectra, otherwise}') },

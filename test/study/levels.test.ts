@@ -1,5 +1,5 @@
 import { describe, expect, it } from 'vitest';
-import { returnPeriodYears, spectraOf, spectrumFor } from '../../src/study/levels.js';
+import { returnPeriodYears, spectraOf } from '../../src/study/levels.js';
 import { studyFromText } from '../../src/study/load.js';
 import { SAMPLE } from './sample.js';
 
@@ -13,20 +13,6 @@ describe('spectraOf', () => {
     expect(spectraOf(byClass!)).toEqual(['design', 'drawn']);
     expect(spectraOf(single!)).toEqual(['rare']);
     expect(spectraOf(studyFromText(SAMPLE).study.hazard.levels[0]!)).toEqual(['design']);
-  });
-});
-
-describe('spectrumFor', () => {
-  const at = (site_class: string | null) => ({ site_class, hazard_zone: null });
-  it('takes the one of the site class, else otherwise, else none', () => {
-    expect(spectrumFor(byClass!, at('D'))).toBe('drawn');
-    expect([at('E'), at(null), at('constructor')].map((building) => spectrumFor(byClass!, building))).toEqual([
-      null,
-      null,
-      null,
-    ]);
-    expect(spectrumFor(single!, at(null))).toBe('rare');
-    expect(spectrumFor(studyFromText(SAMPLE).study.hazard.levels[0]!, at('E'))).toBe('design');
   });
 });
 

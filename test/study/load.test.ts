@@ -113,8 +113,7 @@ seed: -1
       'study.yaml:25:30 hazard.levels.1.spectrum: no spectrum "dseign" (did you mean "design"?)',
       'study.yaml:26:15 hazard.levels.2.title: level 1 has the title "one" already; name them apart',
       'study.yaml:26:24 hazard.levels.2.by: inventory.columns names no hazard_zone, so no building would have a spectrum; name it, or say otherwise:',
-      'study.yaml:27:26 hazard.levels.3.by: unknown word "zone"; known: site_class, hazard_zone',
-      'study.yaml:27:41 hazard.levels.3.spectra: expected site classes or zones, each with the name of a spectrum, got {}',
+      'study.yaml:27:26 hazard.levels.3.by: unknown word "zone"; known: site_class, hazard_zone, vs30, spectrum',
       'study.yaml:28:1 code_history.seismic_design_enforced_from: missing; expected a year 1800 to 2100',
       'study.yaml:29:3 code_history.place: expected text, got nothing',
       'study.yaml:32:22 code_history.editions.ubc-1949.zone: expected a zone: 1, 2 or 3, got 4',
@@ -146,10 +145,15 @@ seed: -1
     expect(changed(', otherwise: design', '')).toEqual([]);
   });
 
-  it('takes the site class from vs30_mps where no class is given', () => {
+  it('points from site classes that are not there to the velocities that are', () => {
     const [from, without] = ['site_class: Ground', 'spectra: {C: design}, otherwise: design'];
     const vs30 = SAMPLE.replace(from, 'vs30_mps: Vs30').replace(without, 'spectra: {C: design}');
-    expect(complaints(vs30)).toEqual([]);
+    expect(complaints(vs30)).toEqual([
+      expect.stringContaining(
+        'hazard.levels.1.by: inventory.columns names no site_class, so no building would have a spectrum; read its vs30_mps with by: vs30 and classes:',
+      ) as string,
+    ]);
+    expect(complaints(vs30.replace('by: site_class', 'by: vs30, classes: asce7-22'))).toEqual([]);
   });
 
   it('tells one kind of level from the other', () => {

@@ -44,6 +44,7 @@ const BLANK: Building = {
   mass_irregularity: null,
   site_class: 'C',
   hazard_zone: null,
+  spectrum: null,
   design_base_shear_coefficient: NaN,
   design_level: null,
   capacity_sa_g: NaN,

@@ -5,18 +5,19 @@ import type { InputSpec } from '../../engineering/formula.js';
 import { handSteps, nameWithoutUnit } from '../../engineering/hand.js';
 import { cite } from '../../engineering/source.js';
 import { EXIT } from '../../errors.js';
+import { drawCalculation } from '../../exports/spectrum-files.js';
 import { printJson, printLines, terminalColumns } from '../output/print.js';
 import { stepLines } from '../output/steps.js';
 import { styled } from '../output/style.js';
-import { wrap } from '../output/text.js';
+import { clean, wrap } from '../output/text.js';
 import { methodLines } from './methods.js';
 
 /** `swaymark calc`: one method by itself. */
-export function calc(
+export async function calc(
   id: string,
   inputs: readonly string[],
-  options: { readonly units: 'si' | 'us'; readonly json?: true },
-): number {
+  options: { readonly units: 'si' | 'us'; readonly json?: true; readonly svg?: string },
+): Promise<number> {
   const method = methodCalled(id);
   const columns = Math.min(terminalColumns(), 100);
   if (inputs.length === 0 && method.family.inputs.length > 0) {
@@ -31,8 +32,12 @@ export function calc(
     return EXIT.clean;
   }
   const result = calculate(method, inputs);
+  const svg = options.svg === undefined ? null : await drawCalculation(result, options.svg);
   if (options.json) printJson(asJson(result, options.units));
-  else printLines(lines(result, options.units, columns));
+  else {
+    const drawn = svg === null ? [] : wrap(clean(`spectrum drawn in ${svg}`), columns);
+    printLines([...lines(result, options.units, columns), ...drawn]);
+  }
   return EXIT.clean;
 }
 

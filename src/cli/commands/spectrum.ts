@@ -3,7 +3,8 @@ import { unitOfName } from '../../engineering/hand.js';
 import { convert, findUnit } from '../../engineering/units.js';
 import type { Unit } from '../../engineering/units.js';
 import { Bug, EXIT } from '../../errors.js';
-import { readSpectrum, spectrumNames } from '../../exports/spectrum-reading.js';
+import { writeSpectra } from '../../exports/spectrum-files.js';
+import { DEFAULT_PERIODS_S, readSpectrum, spectrumNames } from '../../exports/spectrum-reading.js';
 import type { SpectrumSheet } from '../../exports/spectrum-reading.js';
 import { loadStudy } from '../../study/load.js';
 import { findStudy } from '../find-study.js';
@@ -13,26 +14,74 @@ import { styled } from '../output/style.js';
 import { table } from '../output/table.js';
 import { clean, wrap } from '../output/text.js';
 
-interface Options {
+export interface SpectrumCommandOptions {
   readonly study?: string;
   readonly at?: readonly number[];
+  readonly csv?: string;
+  readonly svg?: string;
   readonly units: 'si' | 'us';
   readonly json?: true;
 }
 
-/** `swaymark spectrum`: the study's spectra, or one of them with its ordinates. */
-export async function spectrum(name: string | undefined, options: Options): Promise<number> {
+/** `swaymark spectrum`: the study's spectra, one of them with its ordinates, or several side by side; as files too. */
+export async function spectrum(names: readonly string[], options: SpectrumCommandOptions): Promise<number> {
   const loaded = await loadStudy(findStudy(options.study));
-  if (name === undefined) {
-    const sheets = spectrumNames(loaded).map((each) => readSpectrum(loaded, each, options.at ?? []));
-    if (options.json) printJson(sheets);
-    else printLines(listLines(sheets, options.at ?? [], terminalColumns()));
-    return EXIT.clean;
+  const { at, csv, svg, units, json } = options;
+  const asked = [...new Set(names)];
+  const listed = asked.length === 0 ? spectrumNames(loaded) : asked;
+  const periods = at ?? (asked.length === 0 ? [] : DEFAULT_PERIODS_S);
+  const sheets = listed.map((name) => readSpectrum(loaded, name, periods));
+  const files = await writeSpectra(loaded, listed, at ?? [], { csv, svg });
+  const columns = terminalColumns();
+  const [first] = sheets;
+  if (json) printJson(asked.length === 1 ? first : sheets);
+  else {
+    const lines =
+      asked.length === 0
+        ? listLines(sheets, periods, columns)
+        : asked.length === 1 && first !== undefined
+          ? sheetLines(first, units, columns)
+          : besideLines(sheets, periods, columns);
+    printLines([...lines, ...(files.length === 0 ? [] : ['']), ...files.map((file) => clean(`written: ${file}`))]);
   }
-  const sheet = readSpectrum(loaded, name, options.at);
-  if (options.json) printJson(sheet);
-  else printLines(sheetLines(sheet, options.units, terminalColumns()));
   return EXIT.clean;
+}
+
+/** Several spectra side by side: one column each, and the second over the first where there are two. */
+function besideLines(sheets: readonly SpectrumSheet[], periods: readonly number[], columns: number): string[] {
+  const ratio = sheets.length === 2;
+  const head = [
+    { title: 'T (s)', right: true },
+    ...sheets.map(({ name }) => ({ title: clean(name), right: true, shrinkTo: 8 })),
+    ...(ratio ? [{ title: 'second / first', right: true, spare: 1 }] : []),
+  ];
+  const rows = periods.map((period_s, i) => {
+    const values = sheets.map(({ ordinates }) => ordinates[i]?.sa_g ?? NaN);
+    const [one = NaN, two = NaN] = values;
+    const marked = values.map((sa_g, s) => `${formatNumber(sa_g, 4)}${sheets[s]?.ordinates[i]?.beyond ? ' *' : ''}`);
+    return [formatNumber(period_s, 4), ...marked, ...(ratio ? [formatNumber(two / one)] : [])];
+  });
+  const beyond = sheets.some(({ ordinates }) => ordinates.some((ordinate) => ordinate.beyond));
+  return [
+    ...sheets.flatMap((sheet) => [
+      ...wrap(clean(`${sheet.name}: ${sheet.title}; ${plateauWords(sheet)}`), columns, '', '    '),
+      ...noteLines(sheet, columns),
+    ]),
+    '',
+    styled('bold', 'S_a (g)'),
+    ...table(head, rows, columns),
+    ...(beyond ? ['* longer than the publication covers'] : []),
+  ];
+}
+
+function noteLines({ flags }: SpectrumSheet, columns: number): string[] {
+  return flags.flatMap((flag) => wrap(`note: ${flag}`, columns, '  ', '      '));
+}
+
+function plateauWords({ plateau }: SpectrumSheet): string {
+  if (!(plateau.to_s > plateau.from_s))
+    return `largest ordinate ${formatQuantity(plateau.sa_g, 'g', 'si')} at ${formatQuantity(plateau.from_s, 's', 'si')}`;
+  return `plateau ${formatQuantity(plateau.sa_g, 'g', 'si')} from ${formatQuantity(plateau.from_s, 's', 'si')} to ${formatQuantity(plateau.to_s, 's', 'si')}`;
 }
 
 function listLines(sheets: readonly SpectrumSheet[], at: readonly number[], columns: number): string[] {
@@ -50,7 +99,7 @@ function listLines(sheets: readonly SpectrumSheet[], at: readonly number[], colu
     formatNumber(plateau.sa_g),
     formatNumber(plateau.to_s),
     ...ordinates.map(({ sa_g }) => formatNumber(sa_g)),
-    read_by.length === 0 ? 'nobody' : read_by.join('; ').replaceAll(/(?:site class|hazard zone) /g, ''),
+    read_by.length === 0 ? 'nobody' : read_by.join('; ').replaceAll(/(?:site class|hazard zone|spectrum) (?!by)/g, ''),
   ]);
   return table(head, rows, columns);
 }
@@ -64,7 +113,7 @@ function parameterLines({ parameters }: SpectrumSheet, columns: number): string[
 }
 
 function sheetLines(sheet: SpectrumSheet, display: 'si' | 'us', columns: number): string[] {
-  const { name, title, source, verified, corners_s, plateau, valid_to_s, read_by, ordinates } = sheet;
+  const { name, title, source, verified, corners_s, valid_to_s, read_by, ordinates } = sheet;
   const small = unitCalled(display === 'us' ? 'in' : 'mm');
   const head = [
     { title: 'T (s)', right: true },
@@ -84,7 +133,7 @@ function sheetLines(sheet: SpectrumSheet, display: 'si' | 'us', columns: number)
     ...wrap(`read by: ${read_by.length === 0 ? 'nobody' : clean(read_by.join('; '))}`, columns, '', '  '),
     '',
     ...parameterLines(sheet, columns),
-    `  plateau ${formatQuantity(plateau.sa_g, 'g', display)} from ${formatQuantity(plateau.from_s, 's', display)} to ${formatQuantity(plateau.to_s, 's', display)}`,
+    `  ${plateauWords(sheet)}`,
     ...wrap(
       `corners at ${corners_s.map((corner) => formatQuantity(corner, 's', display)).join(', ')}`,
       columns,
@@ -92,6 +141,7 @@ function sheetLines(sheet: SpectrumSheet, display: 'si' | 'us', columns: number)
       '      ',
     ),
     ...(valid_to_s === null ? [] : [`  covers periods up to ${formatQuantity(valid_to_s, 's', display)}`]),
+    ...noteLines(sheet, columns),
     '',
     ...table(head, rows, columns),
   ];

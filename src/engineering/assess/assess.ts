@@ -11,7 +11,8 @@ import { mixtureMoments, mixtureQuantile } from '../priority/mixture.js';
 import type { Mixture } from '../priority/mixture.js';
 import type { Trace } from '../trace.js';
 import { casesOf } from './cases.js';
-import { chooseSpectrum, readAt, slopeFor } from './context.js';
+import { chooseSpectrum } from './choose-spectrum.js';
+import { readAt, slopeFor } from './context.js';
 import type { AssessContext } from './context.js';
 import { flagsOf } from './flags.js';
 import { integrate } from './integrate.js';
@@ -106,6 +107,6 @@ export function assess(
     spectrum: spectrum.name,
     weakType: weak.name,
     weakChance: weak.chance,
-    flags: flagsOf(building, cases, choice.byDefault, leading, pass.disagreement, spectrum),
+    flags: flagsOf(building, cases, choice, leading, pass.disagreement),
   };
 }

@@ -4,7 +4,8 @@ import { formatNumber, formatShare } from '../format.js';
 import type { Mixture } from '../priority/mixture.js';
 import type { Trace } from '../trace.js';
 import type { Case, Cases } from './case-memory.js';
-import type { AssessContext, SpectrumChoice } from './context.js';
+import type { SpectrumChoice } from './choose-spectrum.js';
+import type { AssessContext } from './context.js';
 import { leadingCase, scoreOf } from './leading.js';
 
 interface Closing {

@@ -1,6 +1,5 @@
 /** The study's settings made ready for a pass over the buildings. */
 import { ln } from '../numeric/elementary.js';
-import type { Building } from '../building.js';
 import type { AnyRecord, Inputs } from '../formula.js';
 import { candidates, periodFormula } from '../period/choose.js';
 import { priorClasses } from '../prior/system-prior.js';
@@ -126,43 +125,6 @@ function zoneTerms(
 /** Slope of the hazard curve where the ranking spectrum is `name`. */
 export function slopeFor(context: AssessContext, name: string): number {
   return context.settings.rankBy === 'demand' ? 1 : slopeOf(context.settings, name);
-}
-
-export interface SpectrumChoice {
-  readonly spectrum: ContextSpectrum;
-  /** Why this one. */
-  readonly because: string;
-  /** True when the building's class was blank or not named and the default was taken. */
-  readonly byDefault: boolean;
-}
-
-/** The spectrum `building` reads at level `levelIndex`, or a reason why there is none. */
-export function chooseSpectrum(
-  context: AssessContext,
-  building: Building,
-  levelIndex: number,
-): SpectrumChoice | string {
-  const level = context.settings.levels[levelIndex];
-  if (level === undefined) return 'no such level';
-  const key = level.by === null ? 'all' : building[level.by];
-  // own keys only: a cell may hold any text, `constructor` too
-  const named = key !== null && Object.hasOwn(level.spectra, key) ? level.spectra[key] : undefined;
-  const name = named ?? level.otherwise;
-  if (name === null) {
-    return key === null
-      ? `${level.by === 'site_class' ? 'site class' : 'hazard zone'} not known and the study names no spectrum for that`
-      : `no spectrum for ${level.by === 'site_class' ? 'site class' : 'hazard zone'} "${key}"`;
-  }
-  const spectrum = context.spectra[name];
-  if (spectrum === undefined) return `spectrum "${name}" is not defined`;
-  const byDefault = named === undefined;
-  const because =
-    level.by === null
-      ? 'one spectrum for all buildings'
-      : byDefault
-        ? `${level.by === 'site_class' ? 'site class' : 'hazard zone'} ${key === null ? 'not known' : `"${key}" not named`}: the study's default`
-        : `${level.by === 'site_class' ? 'site class' : 'hazard zone'} ${String(key)}`;
-  return { spectrum, because, byDefault };
 }
 
 /** S_a at a period, the plateau held below its start. */

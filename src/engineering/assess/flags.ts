@@ -3,7 +3,7 @@ import type { Building } from '../building.js';
 import { DIRECTIONS } from '../direction.js';
 import { siteCloseness } from '../site/closeness.js';
 import type { Cases } from './case-memory.js';
-import type { ContextSpectrum } from './context.js';
+import type { SpectrumChoice } from './choose-spectrum.js';
 import type { LeadingCase } from './leading.js';
 
 export const FLAGS: Readonly<Record<string, string>> = {
@@ -11,7 +11,10 @@ export const FLAGS: Readonly<Record<string, string>> = {
   'year-unknown': 'The year of construction is not known; the years of like buildings stand in.',
   'height-inferred': 'The height is inferred.',
   'storeys-inferred': 'The number of storeys is inferred.',
-  'default-spectrum': "The site class or zone is not known or not named; the study's default spectrum is read.",
+  'default-spectrum':
+    "The site class, zone or spectrum is not known or not named; the study's default spectrum is read.",
+  'class-differs': 'The site class on record is not that of the shear-wave velocity; the velocity is read.',
+  'velocity-unknown': 'The shear-wave velocity is not known; the site class on record is read.',
   'estimates-differ': 'Two estimates of the period are a factor of 2 or more apart.',
   'beyond-spectrum': 'The period is longer than the publication of the spectrum covers.',
   'beyond-formula': 'The building is taller than the height formula is meant for.',
@@ -44,17 +47,17 @@ function closestToSite({ directions }: LeadingCase, { structure }: Building): (t
 export function flagsOf(
   building: Building,
   cases: Cases,
-  defaultSpectrum: boolean,
+  { spectrum, byDefault, classFlag }: SpectrumChoice,
   leading: LeadingCase,
   disagreement: number,
-  spectrum: ContextSpectrum,
 ): readonly string[] {
   const flags: string[] = [];
   if (!cases.systemKnown) flags.push('system-unknown');
   if (building.years.length !== 1) flags.push('year-unknown');
   if (building.height_m.origin !== 'given') flags.push('height-inferred');
   if (building.storeys.origin !== 'given') flags.push('storeys-inferred');
-  if (defaultSpectrum) flags.push('default-spectrum');
+  if (byDefault) flags.push('default-spectrum');
+  if (classFlag !== null) flags.push(classFlag);
   if (disagreement >= 2) flags.push('estimates-differ');
   const { longitudinal, transverse } = leading.directions;
   if (Math.max(longitudinal.period_s, transverse.period_s) > spectrum.compiled.valid_to_s)

@@ -7,14 +7,17 @@ import type { AnyRecord } from '../formula.js';
 import { ln } from '../numeric/elementary.js';
 import { LOG_SCORE } from '../priority/records.js';
 import { siteCloseness } from '../site/closeness.js';
+import { cite } from '../source.js';
 import { ordinate } from '../spectrum/compiled.js';
+import { flagWords } from '../spectrum/flags.js';
 import type { Trace } from '../trace.js';
 import { directionsAlike, drawingsLevels, importanceOf } from './terms.js';
 import { capacityAtHeight, irregularityFactor, keptCapacity, massShare } from './capacity.js';
 import type { Case, Cases } from './case-memory.js';
 import type { EditionId } from './code-history.js';
-import { chooseSpectrum } from './context.js';
-import type { AssessContext, ContextSpectrum, SpectrumChoice } from './context.js';
+import { chooseSpectrum } from './choose-spectrum.js';
+import type { SpectrumChoice } from './choose-spectrum.js';
+import type { AssessContext, ContextSpectrum } from './context.js';
 import { peopleOf } from './people.js';
 import { NO_PERIOD, alikeAcross, periodAt, periodModel } from './period.js';
 import type { Evidence, PeriodBasis, PeriodModel } from './period.js';
@@ -136,7 +139,12 @@ function openTrace(building: Building, which: Case, choice: SpectrumChoice, trac
     building.years.length === 1 ? building.yearOrigin : 'inferred',
     eraWords(building, which),
   );
-  trace.choice({ question: 'Spectrum', taken: choice.spectrum.name, because: choice.because, others: [] });
+  const { name, compiled, record } = choice.spectrum;
+  trace.choice({ question: 'Spectrum', taken: name, because: choice.because, others: [] });
+  for (const words of flagWords(compiled)) {
+    const because = `of the parameters the study gives it, by ${cite(record.source)}`;
+    trace.choice({ question: `About ${name}`, taken: words, because, others: [] });
+  }
 }
 
 function eraWords(building: Building, which: Case): string {

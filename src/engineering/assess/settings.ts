@@ -2,6 +2,7 @@
 import type { System } from '../building.js';
 import type { Basis, PeriodStandard } from '../period/choose.js';
 import type { SystemPriorGroup } from '../prior/system-prior.js';
+import type { VelocityCode } from '../site/vs30.js';
 import type { SpectrumDefinition } from '../spectrum/definition.js';
 
 export const RANK_BY = ['people', 'ratio', 'demand'] as const;
@@ -11,11 +12,13 @@ export type NamedSpectrum = SpectrumDefinition & { readonly return_period_years?
 
 export interface LevelSettings {
   readonly title: string;
-  /** null: one spectrum for all. */
-  readonly by: 'site_class' | 'hazard_zone' | null;
-  /** Site class or zone -> spectrum name; with `by` null the only entry is "all". */
+  /** What says which spectrum a building reads; vs30: the site class of its shear-wave velocity; null: one spectrum for all. */
+  readonly by: 'site_class' | 'hazard_zone' | 'vs30' | 'spectrum' | null;
+  /** With `by` vs30 only: the code whose classes are meant. */
+  readonly classes?: VelocityCode | undefined;
+  /** Site class, zone or name in the inventory -> spectrum name; with `by` null the only entry is "all". */
   readonly spectra: Readonly<Record<string, string>>;
-  /** Spectrum of buildings whose class or zone is blank or not named. */
+  /** Spectrum of buildings whose class, zone or name is blank or not listed. */
   readonly otherwise: string | null;
 }
 

@@ -1,0 +1,111 @@
+/** The last part of a screening or a refreshing: assess and rank the buildings of an inventory, keep results and run. */
+import type { AssessSettings } from '../engineering/assess/settings.js';
+import type { TakenIn } from '../inventory/take-in.js';
+import type { Database } from '../store/database.js';
+import { studyFingerprint } from '../study/fingerprint.js';
+import type { LoadedStudy } from '../study/load.js';
+import type { Assessed } from './assess-all.js';
+import { assessInventory, withAssessor } from './assess-inventory.js';
+import type { Report } from './assess-inventory.js';
+import { assumptionsOf } from './assumptions.js';
+import { methodsFingerprint } from './fingerprints.js';
+import { keepRanked } from './keep-results.js';
+import { accountLines, attributeCounts, rankingFigures } from './summarise.js';
+import type { StoredSummary } from './summarise.js';
+import { PROGRAM } from './version.js';
+
+export interface KeepOptions {
+  /** When the run is made; the caller owns the clock. */
+  readonly made: Date;
+  readonly note?: string;
+}
+
+export interface ScreenOutcome {
+  readonly runId: number;
+  readonly taken: TakenIn;
+  readonly summary: StoredSummary;
+}
+
+/** Assesses and ranks the inventory `taken` and keeps the run, inside the caller's transaction. @throws UserError when none can be ranked. */
+export async function keepRun(
+  db: Database,
+  loaded: LoadedStudy,
+  first: AssessSettings,
+  taken: TakenIn,
+  options: KeepOptions,
+  report: Report,
+): Promise<ScreenOutcome> {
+  const { study } = loaded;
+  const count = taken.buildings;
+  const runId = await nextRunId(db);
+  const listSize = study.ranking.list_size;
+  const { settings, slopes, assessed, ranked } = await withAssessor(count, (assessor) =>
+    assessInventory(db, loaded, first, taken, runId, assessor, report),
+  );
+  assessed.mixtures.length = 0;
+  assessed.flat.length = 0;
+  report('keeping');
+  const account = { ...taken.account, ...(await rankedRows(db, taken.inventoryId, count, assessed)) };
+  const summary: StoredSummary = {
+    rows_in: taken.rowsIn,
+    buildings: count,
+    ...rankingFigures(assessed, ranked, listSize),
+    account: accountLines(account),
+    attributes: attributeCounts(taken.attributes),
+    assumptions: assumptionsOf(settings, slopes),
+    slopes,
+  };
+  await db.run('INSERT INTO run VALUES (?, ?, ?, ?, ?, ?, ?, ?, ?, ?, ?, ?, ?, ?, ?, ?)', [
+    runId,
+    options.made.toISOString(),
+    PROGRAM,
+    options.note ?? '',
+    study.title,
+    taken.inventoryId,
+    studyFingerprint(study),
+    methodsFingerprint(),
+    JSON.stringify(settings),
+    loaded.text,
+    JSON.stringify(summary),
+    count,
+    assessed.id.length,
+    listSize,
+    study.ranking.rank_by,
+    study.seed,
+  ]);
+  await keepRanked(db, runId, count, ranked.columns);
+  return { runId, taken, summary };
+}
+
+/** One more than every run there is or was: a deleted run's number stands on its reports, and would be taken for the new one. */
+async function nextRunId(db: Database): Promise<number> {
+  const last = await db.value(
+    'SELECT max(run_id) FROM (SELECT run_id FROM run UNION ALL SELECT run_id FROM run_deleted)',
+  );
+  return Number(last ?? 0) + 1;
+}
+
+/** Rows of ranked and of not ranked buildings, counted from the results: status and missing values are known only now. */
+async function rankedRows(
+  db: Database,
+  inventoryId: string,
+  count: number,
+  assessed: Assessed,
+): Promise<Readonly<Record<string, number>>> {
+  // Nearly every building is one row: only the others are read.
+  const merged = await db.columns(
+    `SELECT building_index AS at, rows FROM building_core
+     WHERE rows <> 1 AND inventory_number = (SELECT inventory_number FROM inventory WHERE inventory_id = ?)`,
+    { at: 'i32', rows: 'i32' },
+    [inventoryId],
+  );
+  const isRanked = new Uint8Array(count);
+  for (const at of assessed.index) isRanked[at] = 1;
+  let ranked = assessed.index.length;
+  let not = count - ranked;
+  merged.at.forEach((at, i) => {
+    if (isRanked[at] === 1) ranked += merged.rows[i]! - 1;
+    else not += merged.rows[i]! - 1;
+  });
+  return { 'merged-into-ranked': ranked, 'merged-into-not-ranked': not };
+}
