@@ -132,7 +132,7 @@ const DAMPING: readonly ReferenceCase[] = [
       return [`SP-51-${String(damping)}`, percent(damping), eta, half(4)];
     }),
   ),
-  ...rows('asce41-17/damping/b1', { source: 'Public transcription of ASCE 41-17 (2-3)', mark: 'restated' }, [
+  ...rows('asce41-17/damping/b1', { source: 'Public page that restates ASCE 41-17 (2-3)', mark: 'restated' }, [
     'SP-37',
     percent(5),
     1.0024,
