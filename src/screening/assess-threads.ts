@@ -10,17 +10,18 @@ import { bandsOf } from '../engineering/priority/rank.js';
 import type { Bands } from '../engineering/priority/rank.js';
 import { Bug } from '../errors.js';
 import { BlockAssessor } from './assess-block.js';
-import type { BlockInput, BlockResult } from './assess-block.js';
+import type { BlockResult } from './assess-block.js';
 import { mixturesOf } from './flat-mixtures.js';
 import type { FlatArrays } from './flat-mixtures.js';
-import { packBlock } from './thread-messages.js';
-import type { BandBasis, FromThread, ToThread } from './thread-messages.js';
+import { memoryOf, unpackBlock } from './thread-messages.js';
+import type { BandBasis, FromThread, PackedBlock, ToThread } from './thread-messages.js';
 
 export interface Assessor {
   /** Blocks worth handing over before the first comes back. */
   readonly threads: number;
   readonly begin: (settings: AssessSettings, pools: YearPools) => void;
-  readonly assess: (block: BlockInput) => Promise<BlockResult>;
+  /** Takes the memory of the block over. */
+  readonly assess: (block: PackedBlock) => Promise<BlockResult>;
   /** Chances and bands of the buildings with these mixtures. */
   readonly bands: (mixtures: FlatArrays, basis: BandBasis) => Promise<Bands>;
   readonly close: () => Promise<void>;
@@ -29,6 +30,9 @@ export interface Assessor {
 /** Below it a thread's start costs more than it saves. */
 const WORTH_THREADS = 50_000;
 const MOST_THREADS = 4;
+
+/** Room for the objects of a building that do not outlive it: cleared away less often, most are gone by then. */
+const YOUNG_MB = 64;
 
 const BODY = new URL('./assess-worker.js', import.meta.url);
 
@@ -48,7 +52,9 @@ export function startAssessor(threads: number): Assessor {
       here = new BlockAssessor(compileContext(settings), pools);
     },
     assess: (block) =>
-      here === null ? Promise.reject(new Bug('a block before the settings')) : Promise.resolve(here.assess(block)),
+      here === null
+        ? Promise.reject(new Bug('a block before the settings'))
+        : Promise.resolve(here.assess(unpackBlock(block))),
     bands: (mixtures, basis) => Promise.resolve(bandsOf(mixturesOf(mixtures), basis)),
     close: () => Promise.resolve(),
   };
@@ -70,7 +76,7 @@ class Threads implements Assessor {
     this.threads = threads;
     this.#load = new Array<number>(threads).fill(0);
     this.#workers = Array.from({ length: threads }, (_, at) => {
-      const worker = new Worker(BODY);
+      const worker = new Worker(BODY, { resourceLimits: { maxYoungGenerationSizeMb: YOUNG_MB } });
       worker.on('message', (message: FromThread) => {
         this.#answered(message);
       });
@@ -88,8 +94,8 @@ class Threads implements Assessor {
     for (const worker of this.#workers) worker.postMessage({ kind: 'begin', settings, pools } satisfies ToThread);
   };
 
-  assess = (block: BlockInput): Promise<BlockResult> =>
-    this.#ask((task) => ({ kind: 'block', task, rows: block.rows, block: packBlock(block) })) as Promise<BlockResult>;
+  assess = (block: PackedBlock): Promise<BlockResult> =>
+    this.#ask((task) => ({ kind: 'block', task, block }), memoryOf(block)) as Promise<BlockResult>;
 
   bands = (mixtures: FlatArrays, basis: BandBasis): Promise<Bands> =>
     this.#ask((task) => ({ kind: 'bands', task, mixtures, basis })) as Promise<Bands>;
@@ -99,14 +105,14 @@ class Threads implements Assessor {
   };
 
   /** Hands a task to the thread with the fewest. */
-  #ask(message: (task: number) => ToThread): Promise<BlockResult | Bands> {
+  #ask(message: (task: number) => ToThread, given: ArrayBuffer[] = []): Promise<BlockResult | Bands> {
     const worker = this.#load.indexOf(Math.min(...this.#load));
     const task = this.#task;
     this.#task += 1;
     this.#load[worker]! += 1;
     return new Promise((resolve, reject) => {
       this.#waiting.set(task, { resolve, reject, worker });
-      this.#workers[worker]!.postMessage(message(task));
+      this.#workers[worker]!.postMessage(message(task), given);
     });
   }
 

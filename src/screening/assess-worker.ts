@@ -7,7 +7,7 @@ import { Bug } from '../errors.js';
 import { BlockAssessor } from './assess-block.js';
 import type { BlockResult } from './assess-block.js';
 import { mixturesOf } from './flat-mixtures.js';
-import { unpackBlock } from './thread-messages.js';
+import { memoryOf, unpackBlock } from './thread-messages.js';
 import type { FromThread, ToThread } from './thread-messages.js';
 
 const port = parentPort;
@@ -17,7 +17,7 @@ let assessor: BlockAssessor | null = null;
 function workedOut(message: Exclude<ToThread, { kind: 'begin' }>): BlockResult | Bands {
   if (message.kind === 'bands') return bandsOf(mixturesOf(message.mixtures), message.basis);
   if (assessor === null) throw new Bug('a block before the settings');
-  return assessor.assess(unpackBlock(message.block, message.rows));
+  return assessor.assess(unpackBlock(message.block));
 }
 
 function answer(message: Exclude<ToThread, { kind: 'begin' }>): FromThread {
@@ -31,5 +31,8 @@ function answer(message: Exclude<ToThread, { kind: 'begin' }>): FromThread {
 
 port.on('message', (message: ToThread) => {
   if (message.kind === 'begin') assessor = new BlockAssessor(compileContext(message.settings), message.pools);
-  else port.postMessage(answer(message));
+  else {
+    const told = answer(message);
+    port.postMessage(told, memoryOf(told));
+  }
 });

@@ -207,26 +207,6 @@ function blanks(rows: number): readonly string[] {
   return nothing(rows).texts;
 }
 
-/** Parts of at most `size` rows of a block that begins at building `start`. */
-export function* blocksOf(
-  { columns, notRanked, rows }: BuildingBlock,
-  start: number,
-  size: number,
-): Generator<{ readonly from: number; readonly block: BuildingBlock }> {
-  for (let from = 0; from < rows; from += size) {
-    const to = Math.min(rows, from + size);
-    const cut = (value: unknown): unknown => {
-      if (value instanceof Float64Array || value instanceof Int32Array) return value.subarray(from, to);
-      if (Array.isArray(value)) return value.slice(from, to);
-      return value === undefined
-        ? undefined
-        : Object.fromEntries(Object.entries(value as object).map(([name, entry]) => [name, cut(entry)]));
-    };
-    const block = { columns: cut(columns) as BuildingColumns, notRanked: notRanked.slice(from, to), rows: to - from };
-    yield { from: start + from, block };
-  }
-}
-
 /** The ids of the buildings with these indices. */
 export async function readIds(db: Database, inventoryId: string, indices: Int32Array): Promise<readonly string[]> {
   const { at, id } = await db.columns(

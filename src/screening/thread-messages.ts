@@ -18,7 +18,7 @@ export type BandBasis = Pick<RankBasis, 'curve' | 'threshold'>;
 
 export type ToThread =
   | { readonly kind: 'begin'; readonly settings: AssessSettings; readonly pools: YearPools }
-  | { readonly kind: 'block'; readonly task: number; readonly rows: number; readonly block: Packed }
+  | { readonly kind: 'block'; readonly task: number; readonly block: PackedBlock }
   | { readonly kind: 'bands'; readonly task: number; readonly mixtures: FlatArrays; readonly basis: BandBasis };
 
 export type FromThread =
@@ -26,13 +26,57 @@ export type FromThread =
   | { readonly kind: 'failed'; readonly task: number; readonly message: string };
 
 /** A block ready to cross. */
-export function packBlock({ columns, notRanked }: BlockInput): Packed {
+export interface PackedBlock {
+  readonly rows: number;
+  readonly columns: Packed;
+}
+
+/** Packs a block. */
+export function packBlock({ columns, notRanked, rows }: BlockInput): PackedBlock {
   // the ids stay behind: nothing is computed from them
-  return packed({ ...columns, id: [], notRanked });
+  return { rows, columns: packed({ ...columns, id: [], notRanked }) };
+}
+
+/** Parts of at most `size` rows of a block that begins at building `start`, in memory of their own. */
+export function* partsOf(
+  { columns, rows }: PackedBlock,
+  start: number,
+  size: number,
+): Generator<{ readonly from: number; readonly part: PackedBlock }> {
+  for (let from = 0; from < rows; from += size) {
+    const to = Math.min(rows, from + size);
+    yield { from: start + from, part: { rows: to - from, columns: cut(columns, from, to) } };
+  }
+}
+
+function cut(value: Packed, from: number, to: number): Packed {
+  switch (value.kind) {
+    case 'numbers':
+      return { ...value, values: value.values.slice(from, to) };
+    case 'texts':
+      return { ...value, texts: { ...value.texts, codes: value.texts.codes.slice(from, to) } };
+    case 'record':
+      return {
+        ...value,
+        entries: Object.fromEntries(Object.entries(value.entries).map(([name, entry]) => [name, cut(entry, from, to)])),
+      };
+    default:
+      return value;
+  }
+}
+
+/**
+ * The memory under the typed arrays of a message, to be handed over instead of copied: the sender must not use them again. What is
+ * shared between threads anyway is left out.
+ */
+export function memoryOf(value: unknown): ArrayBuffer[] {
+  if (ArrayBuffer.isView(value)) return value.buffer instanceof ArrayBuffer ? [value.buffer] : [];
+  if (typeof value !== 'object' || value === null) return [];
+  return Object.values(value).flatMap(memoryOf);
 }
 
 /** The block on the other side; the ids are blank. */
-export function unpackBlock(block: Packed, rows: number): BlockInput {
+export function unpackBlock({ columns: block, rows }: PackedBlock): BlockInput {
   const blank = { numbers: new Float64Array(rows).fill(NaN), texts: new Array<null>(rows).fill(null) };
   const { notRanked, ...columns } = unpacked(block, blank) as BlockInput['columns'] & Pick<BlockInput, 'notRanked'>;
   return { columns: { ...columns, id: new Array<string>(rows).fill('') }, notRanked, rows };

@@ -3,8 +3,9 @@ import { beforeAll, describe, expect, it } from 'vitest';
 import * as source from '../../src/screening/assess-threads.js';
 import type { BlockResult } from '../../src/screening/assess-block.js';
 import { readRun } from '../../src/screening/page-data.js';
-import { blocksOf, readBuildings, readPools } from '../../src/screening/read-buildings.js';
+import { readBuildings, readPools } from '../../src/screening/read-buildings.js';
 import { openStudyDatabase, screen } from '../../src/screening/screen.js';
+import { packBlock, partsOf } from '../../src/screening/thread-messages.js';
 import { loadStudy } from '../../src/study/load.js';
 import { buildCommand } from '../support/cli.js';
 import { MADE, demoCopy } from '../support/study-folder.js';
@@ -30,10 +31,9 @@ describe('startAssessor', () => {
       const { settings } = await readRun(db, runId);
       const pools = await readPools(db, taken.inventoryId);
       const all = await readBuildings(db, taken.inventoryId, { from: 0, to: taken.buildings });
-      const parts = [...blocksOf(all, 0, 50)];
       const results = async (assessor: typeof here): Promise<readonly BlockResult[]> => {
         assessor.begin(settings, pools);
-        return Promise.all(parts.map(({ block }) => assessor.assess(block)));
+        return Promise.all([...partsOf(packBlock(all), 0, 50)].map(({ part }) => assessor.assess(part)));
       };
       const [one, many] = [await results(here), await results(there)];
       expect(one.reduce((sum, { ranked }) => sum + ranked.length, 0)).toBeGreaterThan(200);
@@ -62,10 +62,8 @@ describe('startAssessor', () => {
   it('passes on what goes wrong in a thread', async () => {
     const assessor = built.startAssessor(2);
     try {
-      const block = { columns: { id: [], numbers: {}, words: {} }, notRanked: [], rows: 0 } as unknown;
-      await expect(assessor.assess(block as Parameters<typeof assessor.assess>[0])).rejects.toThrow(
-        'a block before the settings',
-      );
+      const block = packBlock({ columns: { id: [], numbers: {}, words: {} }, notRanked: [], rows: 0 } as never);
+      await expect(assessor.assess(block)).rejects.toThrow('a block before the settings');
     } finally {
       await assessor.close();
     }

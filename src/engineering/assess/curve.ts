@@ -59,12 +59,14 @@ export function reducedAt(curve: Curve, ductility: number, spectrum: ContextSpec
     scratch.stretchSigma = sigma;
   }
   const corner = spectrum.compiled.plateau_to_s;
-  const ln_g = new Float64Array(stretch.length);
-  for (let j = 0; j < stretch.length; j += 1) {
-    const t = period_s * stretch[j]!;
+  const lnAt = (t: number): number => {
     const sa_g = readAt(spectrum, t);
-    ln_g[j] = ln(ductility === 1 ? sa_g : sa_g / reductionFactor(ductility, t, corner));
-  }
+    return ln(ductility === 1 ? sa_g : sa_g / reductionFactor(ductility, t, corner));
+  };
+  const ln_g = new Float64Array(stretch.length);
+  // a period without a spread is the same at every node: a simulation draws a million such
+  if (sigma === 0) ln_g.fill(lnAt(period_s));
+  else for (let j = 0; j < stretch.length; j += 1) ln_g[j] = lnAt(period_s * stretch[j]!);
   reduced.push({ ductility, ln_g });
   return ln_g;
 }
