@@ -39,7 +39,10 @@ interface Band {
   readonly transverse: PeriodEstimate;
 }
 
-/** Adds every node of every case to the mixture and returns the percentiles of the periods. */
+/**
+ * Adds every node of every case to the mixture and returns the percentiles of the periods. `told` hears, after the nodes of a case at
+ * a node of the height are added, which they were.
+ */
 export function integrate(
   building: Building,
   cases: Cases,
@@ -48,6 +51,7 @@ export function integrate(
   slope_k: number,
   context: AssessContext,
   scratch: Scratch,
+  told?: (which: Case, heightNode: number) => void,
 ): Pass | string {
   const { rankBy, spreads } = context.settings;
   const demandOnly = rankBy === 'demand';
@@ -114,11 +118,13 @@ export function integrate(
           const weight = which.chance * heights.weight[h]! * levelChance;
           if (demandOnly || assessed) {
             add(weight, along, 1, lnGiven, across, 1, lnGiven);
+            told?.(which, h);
             continue;
           }
           const a = capacityOf(building, which, 'longitudinal', height_m, level, context);
           const b = alike ? a : capacityOf(building, which, 'transverse', height_m, level, context);
           add(weight, along, a.ductility, a.lnStrength + lnFixed, across, b.ductility, b.lnStrength + lnFixed);
+          told?.(which, h);
         }
       }
     }

@@ -101,6 +101,17 @@ export class MixtureBuilder {
     this.count = count + n;
   }
 
+  /** Parts added so far. */
+  get size(): number {
+    return this.count;
+  }
+
+  /** The parts as they were added, in arrays of their own. */
+  raw(): Mixture {
+    const part = (values: Float64Array): Float64Array => values.slice(0, this.count);
+    return { weight: part(this.weight), mean: part(this.mean), sd: part(this.sd), from: 0, to: this.count };
+  }
+
   /** The gathered mixture, weights summing to 1, means increasing. @throws Error when nothing was added. */
   gather(pool: MixturePool): Mixture {
     const { weight, mean, sd, count } = this;

@@ -1,0 +1,152 @@
+/** The order of visits of a survey: always the one that is worth most for its cost, given the visits planned before it. */
+import type { Unknown, Worth } from './survey-value.js';
+import { valueAt, worthAt } from './survey-value.js';
+
+/** One kind of visit. */
+export interface Visit {
+  readonly name: string;
+  readonly hours: number;
+  /** In the currency of the study. */
+  readonly money: number;
+  /** Chance that it finds each unknown out; what is left out it does not ask. */
+  readonly finds: Partial<Readonly<Record<Unknown, number>>>;
+}
+
+export interface Candidate {
+  readonly index: number;
+  readonly worth: Worth;
+}
+
+export interface Limits {
+  /** Infinity: no limit. */
+  readonly hours: number;
+  readonly money: number;
+}
+
+/** What visits are weighed by. */
+export type Cost = 'hours' | 'money';
+
+export interface PlannedVisit {
+  readonly index: number;
+  readonly visit: Visit;
+  /** What it may find out that visits before it have not for certain. */
+  readonly asks: readonly Unknown[];
+  /** In units of S, beyond what earlier visits to the building are worth. */
+  readonly value: number;
+  readonly valuePerCost: number;
+  /** All visits to here. */
+  readonly hours: number;
+  readonly money: number;
+  /** Chance that the building stands on the wrong side of the edge: before and after this visit. */
+  readonly wrongBefore: number;
+  readonly wrongAfter: number;
+}
+
+/** Values under this share of the largest are none. */
+const NOTHING = 1e-6;
+
+interface State {
+  readonly candidate: Candidate;
+  readonly taken: Set<string>;
+  /** Chance that each unknown is found out by the visits planned. */
+  readonly found: Map<Unknown, number>;
+  value: number;
+  /** NaN before the first visit. */
+  wrong: number;
+  next: Step | null;
+}
+
+interface Step {
+  readonly visit: Visit;
+  readonly value: number;
+  readonly ratio: number;
+}
+
+/**
+ * Plans visits until neither hours nor money allow another that is worth anything. Equal ratios go in the order of the candidates,
+ * then of the visits. A visit that no longer fits is passed over for one that does.
+ */
+export function planCampaign(
+  candidates: readonly Candidate[],
+  visits: readonly Visit[],
+  limits: Limits,
+  cost: Cost,
+): readonly PlannedVisit[] {
+  const left = { ...limits };
+  const states: State[] = candidates.map((candidate) => ({
+    candidate,
+    taken: new Set(),
+    found: new Map(),
+    value: 0,
+    wrong: NaN,
+    next: null,
+  }));
+  let largest = 0;
+  for (const state of states) {
+    const all = state.candidate.worth.value.at(-1)!;
+    if (all > largest) largest = all;
+  }
+  for (const state of states) state.next = bestStep(state, visits, left, cost, NOTHING * largest);
+  const planned: PlannedVisit[] = [];
+  for (;;) {
+    let best: State | null = null;
+    for (const state of states) {
+      if (state.next !== null && !fits(state.next.visit, left))
+        state.next = bestStep(state, visits, left, cost, NOTHING * largest);
+      if (state.next !== null && (best?.next == null || state.next.ratio > best.next.ratio)) best = state;
+    }
+    if (best?.next == null) return planned;
+    const { visit, value, ratio } = best.next;
+    const state = best;
+    const { wrong } = worthAt(state.candidate.worth, (unknown) => foundWith(state, visit, unknown));
+    left.hours -= visit.hours;
+    left.money -= visit.money;
+    planned.push({
+      index: best.candidate.index,
+      visit,
+      asks: asked(best, visit),
+      value: value - best.value,
+      valuePerCost: ratio,
+      hours: limits.hours === Infinity ? sum(planned, 'hours') + visit.hours : limits.hours - left.hours,
+      money: limits.money === Infinity ? sum(planned, 'money') + visit.money : limits.money - left.money,
+      wrongBefore: Number.isNaN(best.wrong) ? best.candidate.worth.wrongOf(0) : best.wrong,
+      wrongAfter: wrong,
+    });
+    for (const unknown of asked(best, visit)) best.found.set(unknown, foundWith(best, visit, unknown));
+    best.taken.add(visit.name);
+    best.value = value;
+    best.wrong = wrong;
+    best.next = bestStep(best, visits, left, cost, NOTHING * largest);
+  }
+}
+
+function sum(planned: readonly PlannedVisit[], what: Cost): number {
+  return planned.at(-1)?.[what] ?? 0;
+}
+
+function fits({ hours, money }: Visit, left: Limits): boolean {
+  // a sum of visits that fills the limit exactly must not fail by its last digit
+  const most = (limit: number): number => limit + 1e-9 * (1 + Math.abs(limit));
+  return hours <= most(left.hours) && money <= most(left.money);
+}
+
+function asked({ candidate: { worth }, found }: State, { finds }: Visit): readonly Unknown[] {
+  return worth.unknowns.filter((unknown) => (finds[unknown] ?? 0) > 0 && (found.get(unknown) ?? 0) < 1);
+}
+
+function foundWith({ found }: State, { finds }: Visit, unknown: Unknown): number {
+  return 1 - (1 - (found.get(unknown) ?? 0)) * (1 - (finds[unknown] ?? 0));
+}
+
+function bestStep(state: State, visits: readonly Visit[], left: Limits, cost: Cost, least: number): Step | null {
+  let best: Step | null = null;
+  for (const visit of visits) {
+    if (state.taken.has(visit.name) || !fits(visit, left) || asked(state, visit).length === 0) continue;
+    const value = valueAt(state.candidate.worth, (unknown) => foundWith(state, visit, unknown));
+    const gain = value - state.value;
+    if (!(gain > least)) continue;
+    const ratio = gain / Math.max(visit[cost], 1e-9);
+    if (best === null || ratio > best.ratio) best = { visit, value, ratio };
+  }
+  return best;
+}

@@ -1,0 +1,128 @@
+import { describe, expect, it } from 'vitest';
+import { assess, isRanked } from '../../../src/engineering/assess/assess.js';
+import { casesOf } from '../../../src/engineering/assess/cases.js';
+import { compileContext } from '../../../src/engineering/assess/context.js';
+import { unknownsOf } from '../../../src/engineering/assess/unknowns.js';
+import type { Building } from '../../../src/engineering/building.js';
+import { mixtureMoments } from '../../../src/engineering/priority/mixture.js';
+import type { Unknowns } from '../../../src/engineering/priority/survey-value.js';
+import { building, given, inferred } from '../../support/engineering-building.js';
+import { inventedPortfolio } from '../../support/engineering-portfolio.js';
+import { random } from '../../support/engineering-random.js';
+import { SETTINGS } from '../../support/engineering-settings.js';
+
+const context = compileContext(SETTINGS);
+
+const found = (one: Building): Unknowns => {
+  const unknowns = unknownsOf(one, context);
+  if (unknowns === null) throw new Error(`${one.id} is not ranked`);
+  return unknowns;
+};
+
+const assessed = (one: Building): { readonly mean: number; readonly sd: number } => {
+  const result = assess(one, context);
+  if (!isRanked(result)) throw new Error(result.reason);
+  return { mean: result.lnPriorityMean, sd: result.lnPrioritySd };
+};
+
+/** Mean and standard deviation of the parts that hold `value` of `unknown`. */
+function classMoments({ parts, learnable }: Unknowns, unknown: string, value: number) {
+  const { values } = learnable.find((one) => one.unknown === unknown)!;
+  const at = Array.from(values!.keys()).filter((i) => values![i] === value);
+  const all = at.reduce((sum, i) => sum + parts.weight[i]!, 0);
+  const pick = (column: Float64Array, scale = 1): Float64Array => Float64Array.from(at, (i) => column[i]! / scale);
+  return {
+    chance: all,
+    ...mixtureMoments({
+      weight: pick(parts.weight, all),
+      mean: pick(parts.mean),
+      sd: pick(parts.sd),
+      from: 0,
+      to: at.length,
+    }),
+  };
+}
+
+describe('unknownsOf', () => {
+  it('holds the whole distribution: mean and spread are those of the assessment', () => {
+    for (const one of inventedPortfolio(150, random(77))) {
+      const result = assess(one, context);
+      const unknowns = unknownsOf(one, context);
+      expect(unknowns === null).toBe(!isRanked(result));
+      if (unknowns === null || !isRanked(result)) continue;
+      const { mean, sd } = mixtureMoments(unknowns.parts);
+      expect(mean).toBeCloseTo(result.lnPriorityMean, 8);
+      expect(sd).toBeCloseTo(result.lnPrioritySd, 8);
+    }
+  });
+
+  it('holds for each system what the assessment says once the system is known', () => {
+    const one = building({
+      id: 'U-1',
+      system: null,
+      use: 'office',
+      storeys: given(5),
+      height_m: given(18),
+      years: [1958],
+    });
+    const cases = casesOf(one, context);
+    if (typeof cases === 'string') throw new Error(cases);
+    const systems = [...new Set(cases.list.map(({ system }) => system))];
+    expect(systems.length).toBeGreaterThan(1);
+    const unknowns = found(one);
+    systems.forEach((system) => {
+      // numbered in the order of the cases' groups
+      const number = cases.groups.findIndex(([first]) => first!.system === system);
+      const own = classMoments(unknowns, 'system', number);
+      const known = assessed({ ...one, system });
+      expect(own.mean).toBeCloseTo(known.mean, 8);
+      expect(own.sd).toBeCloseTo(known.sd, 8);
+      expect(own.chance).toBeCloseTo(
+        cases.list.filter((which) => which.system === system).reduce((sum, { chance }) => sum + chance, 0),
+        12,
+      );
+    });
+  });
+
+  it('asks nothing of a building whose facts are on record but its drawings', () => {
+    const known = building({
+      system: 'concrete-shear-wall',
+      use: 'office',
+      storeys: given(4),
+      height_m: given(14),
+      years: [1985],
+      occupants_peak: 100,
+    });
+    expect(found(known).learnable.map(({ unknown }) => unknown)).toEqual(['drawings']);
+    expect(found({ ...known, design_base_shear_coefficient: 0.1, design_level: 'strength' }).learnable).toEqual([]);
+    expect(found({ ...known, capacity_sa_g: 0.5 }).learnable).toEqual([]);
+  });
+
+  it('names what is not on record', () => {
+    const blank = building({
+      system: null,
+      use: 'unknown',
+      storeys: inferred(4, 0.2),
+      height_m: inferred(14, 0.2),
+      years: [1930, 1968, 1995],
+      floor_area_m2: given(800),
+    });
+    expect(found(blank).learnable.map(({ unknown }) => unknown)).toEqual([
+      'system',
+      'year',
+      'height',
+      'use',
+      'occupants',
+      'drawings',
+    ]);
+  });
+
+  it('takes off with the use what knowing it takes off the assessment', () => {
+    const one = building({ system: 'timber-light-frame', use: 'unknown', floor_area_m2: given(500), years: [1950] });
+    const { learnable } = found(one);
+    const tau = learnable.find(({ unknown }) => unknown === 'use')!.tau;
+    const before = assessed(one).sd;
+    const after = assessed({ ...one, use: 'other' }).sd;
+    expect(tau * tau).toBeCloseTo(before * before - after * after, 6);
+  });
+});

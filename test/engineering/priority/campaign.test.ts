@@ -1,0 +1,97 @@
+import { describe, expect, it } from 'vitest';
+import { planCampaign } from '../../../src/engineering/priority/campaign.js';
+import type { Candidate, Visit } from '../../../src/engineering/priority/campaign.js';
+import type { Worth } from '../../../src/engineering/priority/survey-value.js';
+import { random } from '../../support/engineering-random.js';
+
+/** Two unknowns whose values simply add. */
+const adding = (system: number, year: number): Worth => ({
+  unknowns: ['system', 'year'],
+  value: Float64Array.of(0, system, year, system + year),
+  wrongOf: (set) => [0.4, 0.3, 0.2, 0.1][set]!,
+});
+
+const STREET: Visit = { name: 'street', hours: 0.5, money: 50, finds: { system: 1 } };
+const DESK: Visit = { name: 'desk', hours: 1, money: 20, finds: { year: 1 } };
+const free = { hours: Infinity, money: Infinity };
+
+describe('planCampaign', () => {
+  it('takes the visits in the order of value for cost and stops at the limit', () => {
+    const candidates: Candidate[] = [
+      { index: 7, worth: adding(1, 4) },
+      { index: 3, worth: adding(3, 0.5) },
+    ];
+    const all = planCampaign(candidates, [STREET, DESK], free, 'hours');
+    // for an hour: 6 (3 street), 4 (7 desk), 2 (7 street), 0.5 (3 desk)
+    expect(all.map(({ index, visit }) => `${String(index)} ${visit.name}`)).toEqual([
+      '3 street',
+      '7 desk',
+      '7 street',
+      '3 desk',
+    ]);
+    expect(all.map(({ valuePerCost }) => valuePerCost)).toEqual([6, 4, 2, 0.5]);
+    expect(all.at(-1)).toMatchObject({ hours: 3, money: 140 });
+    const short = planCampaign(candidates, [STREET, DESK], { hours: 1.5, money: Infinity }, 'hours');
+    expect(short.map(({ index, visit }) => `${String(index)} ${visit.name}`)).toEqual(['3 street', '7 desk']);
+    // money decides otherwise: 0.2 and 0.025 of a desk, 0.06 and 0.02 of a street visit
+    const cheap = planCampaign(candidates, [STREET, DESK], { hours: Infinity, money: 70 }, 'money');
+    expect(cheap.map(({ index, visit }) => `${String(index)} ${visit.name}`)).toEqual(['7 desk', '3 street']);
+  });
+
+  it('passes over a visit that no longer fits for one that does', () => {
+    const plan = planCampaign(
+      [{ index: 0, worth: adding(1, 9) }],
+      [STREET, DESK],
+      { hours: 0.5, money: Infinity },
+      'hours',
+    );
+    expect(plan.map(({ visit }) => visit.name)).toEqual(['street']);
+  });
+
+  it('counts a second visit only for what the first has left open, and the values add to that of both', () => {
+    const again: Visit = { name: 'drawings', hours: 4, money: 400, finds: { system: 1, year: 1 } };
+    const half: Visit = { name: 'desk', hours: 1, money: 20, finds: { year: 0.5 } };
+    const plan = planCampaign([{ index: 0, worth: adding(2, 1) }], [half, again], free, 'hours');
+    const total = plan.reduce((sum, { value }) => sum + value, 0);
+    expect(plan.map(({ visit, value }) => [visit.name, value])).toEqual([['drawings', 3]]);
+    expect(total).toBeCloseTo(3, 12);
+  });
+
+  it('is never better served by another order of the same number of visits, where values add', () => {
+    const { uniform } = random(42);
+    for (let world = 0; world < 20; world += 1) {
+      const candidates = Array.from({ length: 6 }, (_, index) => ({ index, worth: adding(uniform(), uniform()) }));
+      const plan = planCampaign(
+        candidates,
+        [
+          { ...STREET, hours: 1 },
+          { ...DESK, hours: 1 },
+        ],
+        { hours: 5, money: Infinity },
+        'hours',
+      );
+      const best = candidates
+        .flatMap(({ worth }) => [worth.value[1]!, worth.value[2]!])
+        .sort((a, b) => b - a)
+        .slice(0, 5);
+      expect(plan.reduce((sum, { value }) => sum + value, 0)).toBeCloseTo(
+        best.reduce((sum, value) => sum + value, 0),
+        12,
+      );
+    }
+  });
+
+  it('leaves out what is worth nothing', () => {
+    const plan = planCampaign(
+      [
+        { index: 0, worth: adding(1, 1) },
+        { index: 1, worth: adding(1e-9, 0) },
+      ],
+      [STREET, DESK],
+      free,
+      'hours',
+    );
+    expect(plan.every(({ index }) => index === 0)).toBe(true);
+    expect(planCampaign([], [STREET], free, 'hours')).toEqual([]);
+  });
+});

@@ -1,0 +1,243 @@
+import { describe, expect, it } from 'vitest';
+import type { Mixture } from '../../../src/engineering/priority/mixture.js';
+import { mixtureQuantile } from '../../../src/engineering/priority/mixture.js';
+import {
+  UNKNOWNS,
+  expectedExcess,
+  mostWorth,
+  shareOf,
+  worthAt,
+  worthOf,
+} from '../../../src/engineering/priority/survey-value.js';
+import type { Learnable, Unknowns } from '../../../src/engineering/priority/survey-value.js';
+import { random } from '../../support/engineering-random.js';
+
+const normal = (mean: number, sd: number): Mixture => ({
+  weight: Float64Array.of(1),
+  mean: Float64Array.of(mean),
+  sd: Float64Array.of(sd),
+  from: 0,
+  to: 1,
+});
+
+/** One normal of which the share `share` of the variance can be learnt. */
+const oneNormal = (mean: number, sd: number, share: number): Unknowns => ({
+  parts: normal(mean, sd),
+  learnable: [{ unknown: 'occupants', values: null, tau: sd * Math.sqrt(share) }],
+});
+
+/** Parts of two words and a height, and two spreads to learn. */
+function invented(seed: number): Unknowns {
+  const { uniform } = random(seed);
+  const weight: number[] = [];
+  const mean: number[] = [];
+  const sd: number[] = [];
+  const told: number[][] = [[], [], []];
+  const tau = [0.2 + 0.2 * uniform(), 0.3 * uniform()];
+  for (let a = 0; a < 3; a += 1)
+    for (let b = 0; b < 2; b += 1)
+      for (let h = 0; h < 2; h += 1) {
+        weight.push(0.1 + uniform());
+        mean.push(1.2 * a * uniform() - b * uniform() + 0.4 * h);
+        sd.push(0.5 + 0.5 * uniform());
+        [a, b, h].forEach((value, i) => told[i]!.push(value));
+      }
+  const total = weight.reduce((sum, value) => sum + value, 0);
+  const learnable: Learnable[] = [
+    ...(['system', 'year', 'height'] as const).map((unknown, i) => ({
+      unknown,
+      values: Int32Array.from(told[i]!),
+      tau: 0,
+    })),
+    { unknown: 'occupants', values: null, tau: tau[0]! },
+    { unknown: 'drawings', values: Int32Array.from(told[1]!), tau: tau[1]! },
+  ];
+  const parts = {
+    weight: Float64Array.from(weight, (value) => value / total),
+    mean: Float64Array.from(mean),
+    sd: Float64Array.from(sd),
+    from: 0,
+    to: weight.length,
+  };
+  return { parts, learnable };
+}
+
+describe('worthOf', () => {
+  // the data sheet of ranking, 4.3: δ, s, share, chance of error now and after, by formula and by brute force to 0.001
+  it.each([
+    [0.1, 0.7, 0.5, 0.443, 0.246],
+    [0.5, 0.7, 0.5, 0.238, 0.181],
+    [0.5, 0.9, 0.2, 0.289, 0.269],
+    [1.0, 0.6, 0.8, 0.048, 0.033],
+  ])('gives the chances of error of the sheet for δ %s, s %s, share %s', (delta, sd, share, now, after) => {
+    const { wrongOf } = worthOf(oneNormal(delta, sd, share), { threshold: 0, unit: 0 });
+    expect(wrongOf(0)).toBeCloseTo(now, 3);
+    // the sheet's own two differ by 0.001
+    expect(Math.abs(wrongOf(1) - after)).toBeLessThan(0.0015);
+  });
+
+  it('halves the chance of error at the edge as arccos says', () => {
+    // two normals of correlation √share have opposite signs with chance arccos(√share)/π (Sheppard 1899)
+    for (const share of [0.2, 0.5, 0.9]) {
+      const { wrongOf } = worthOf(oneNormal(0, 0.8, share), { threshold: 0, unit: 0 });
+      // the lesser of two chances has a kink, which 33 nodes meet to 0.006
+      expect(Math.abs(wrongOf(1) - Math.acos(Math.sqrt(share)) / Math.PI)).toBeLessThan(0.006);
+    }
+  });
+
+  it.each([1, 2, 3, 4, 5])('agrees with a nested simulation, world %s', (seed) => {
+    const unknowns = invented(seed);
+    const { parts, learnable } = unknowns;
+    const edge = { threshold: 0.9, unit: 0 };
+    const worth = worthOf(unknowns, edge);
+    const source = random(1000 + seed);
+    const T = Math.exp(edge.threshold);
+    const median = Math.exp(mixtureQuantile(parts, 0.5, 0));
+    const mean = parts.weight.reduce((sum, w, i) => sum + w * Math.exp(parts.mean[i]! + 0.5 * parts.sd[i]! ** 2), 0);
+    const pick = (chances: readonly number[]): number => {
+      let left = source.uniform();
+      return Math.max(
+        chances.findIndex((chance) => (left -= chance) < 0),
+        0,
+      );
+    };
+    const OUTER = 1500;
+    const INNER = 300;
+    for (const set of [1, 2, 8, 9, 16, 31]) {
+      const learnt = learnable.filter((_, i) => ((set >> i) & 1) === 1);
+      const tau = Math.sqrt(learnt.reduce((sum, one) => sum + one.tau ** 2, 0));
+      let gain = 0;
+      let squares = 0;
+      for (let outer = 0; outer < OUTER; outer += 1) {
+        // a true building, what is learnt of it, and all buildings that look the same
+        const truth = pick(Array.from(parts.weight));
+        const shift = tau * source.normal();
+        const alike = Array.from(parts.weight, (w, i) =>
+          learnt.every(({ values }) => values === null || values[i] === values[truth]) ? w : 0,
+        );
+        const all = alike.reduce((sum, w) => sum + w, 0);
+        let sum = 0;
+        for (let inner = 0; inner < INNER; inner += 1) {
+          const i = pick(alike.map((w) => w / all));
+          const rest = Math.sqrt(parts.sd[i]! ** 2 - tau * tau);
+          sum += Math.exp(parts.mean[i]! + shift + rest * source.normal());
+        }
+        const one = Math.max(((sum / INNER) * median) / mean, T);
+        gain += one;
+        squares += one * one;
+      }
+      const found = gain / OUTER - Math.max(median, T);
+      const error = Math.sqrt((squares / OUTER - (gain / OUTER) ** 2) / OUTER);
+      // the inner mean is itself noisy, which lifts the larger of two a little
+      expect(Math.abs(found - worth.value[set]!), `set ${String(set)}`).toBeLessThan(4 * error + 0.02);
+    }
+  });
+
+  it('is never below 0, never less for a larger set, and nothing for nothing', () => {
+    for (let seed = 1; seed <= 200; seed += 1) {
+      const { value, wrongOf } = worthOf(invented(seed), { threshold: -1 + (seed % 30) / 10, unit: 0 });
+      expect(value[0]).toBe(0);
+      for (let set = 0; set < value.length; set += 1) {
+        for (let bit = 0; bit < 5; bit += 1) {
+          if (((set >> bit) & 1) === 1) continue;
+          expect(value[set | (1 << bit)]!).toBeGreaterThanOrEqual(value[set]! - 1e-12);
+          if (seed <= 10) expect(wrongOf(set | (1 << bit))).toBeLessThanOrEqual(wrongOf(set) + 1e-4);
+        }
+      }
+    }
+  });
+
+  it('never exceeds what knowing S itself is worth, and vanishes far from the edge', () => {
+    for (let seed = 1; seed <= 100; seed += 1) {
+      const { parts, learnable } = invented(seed);
+      const median = mixtureQuantile(parts, 0.5, 0);
+      for (const threshold of [-6, -1, 0, 1, 2, 9]) {
+        const edge = { threshold, unit: 0 };
+        const most = mostWorth(parts, median, edge);
+        const { value } = worthOf({ parts, learnable }, edge);
+        expect(value.at(-1)!).toBeLessThanOrEqual(most + 1e-9);
+        if (Math.abs(threshold) > 5) expect(value.at(-1)!).toBeLessThan(0.02);
+      }
+    }
+  });
+
+  it('learns of a discrete unknown by its classes alone', () => {
+    // two classes, no spread: in one the building is worth 3, in the other 1; the edge is at 2; by hand ½ (3 - 2)
+    const parts: Mixture = {
+      weight: Float64Array.of(0.5, 0.5),
+      mean: Float64Array.of(Math.log(1), Math.log(3)),
+      sd: Float64Array.of(1e-9, 1e-9),
+      from: 0,
+      to: 2,
+    };
+    const learnable: Learnable[] = [{ unknown: 'system', values: Int32Array.of(0, 1), tau: 0 }];
+    const { value, wrongOf } = worthOf({ parts, learnable }, { threshold: Math.log(2), unit: 0 });
+    const median = Math.exp(mixtureQuantile(parts, 0.5, 0));
+    // scaled so that the expectation, 2, is the median
+    const [low, high] = [1 * (median / 2), 3 * (median / 2)];
+    const byHand = 0.5 * Math.max(low, 2) + 0.5 * Math.max(high, 2) - Math.max(median, 2);
+    expect(value[1]).toBeCloseTo(byHand, 9);
+    expect(wrongOf(1)).toBeCloseTo(0, 9);
+    expect(wrongOf(0)).toBeCloseTo(0.5, 9);
+  });
+});
+
+describe('expectedExcess', () => {
+  it('is m Φ(d1) - T Φ(d2)', () => {
+    // m 100, T 100, τ 0.2: 7.9656 (handbook value of the closed form of an option at the money without interest; from memory)
+    expect(expectedExcess(100, 0.2, 100)).toBeCloseTo(7.9656, 4);
+    expect(expectedExcess(3, 0, 2)).toBe(1);
+    expect(expectedExcess(1, 0, 2)).toBe(0);
+    expect(expectedExcess(0, 1, 2)).toBe(0);
+    expect(expectedExcess(2, 1, 0)).toBe(2);
+  });
+});
+
+describe('worthAt', () => {
+  it('runs from nothing to everything, and learns the stated share of the variance', () => {
+    const worth = worthOf(invented(7), { threshold: 1, unit: 0 });
+    expect(worthAt(worth, () => 0).value).toBe(0);
+    expect(worthAt(worth, () => 1).value).toBeCloseTo(worth.value.at(-1)!, 12);
+    const half = worthAt(worth, () => 0.5).value;
+    expect(half).toBeGreaterThan(0);
+    expect(half).toBeLessThan(worth.value.at(-1)!);
+  });
+});
+
+describe('shareOf', () => {
+  it('is the share that was put in', () => {
+    for (const share of [0.1, 0.5, 1])
+      expect(shareOf(oneNormal(0, 0.7, share), oneNormal(0, 0.7, share).learnable[0]!)).toBeCloseTo(share, 12);
+  });
+
+  it('is the variance of the class means over the whole variance', () => {
+    const unknowns = invented(11);
+    const { parts, learnable } = unknowns;
+    const source = random(5);
+    const draws = Array.from({ length: 40_000 }, () => {
+      let left = source.uniform();
+      let i = 0;
+      while (i < parts.to - 1 && left > parts.weight[i]!) {
+        left -= parts.weight[i]!;
+        i += 1;
+      }
+      return { system: learnable[0]!.values![i]!, x: parts.mean[i]! + parts.sd[i]! * source.normal() };
+    });
+    const mean = (list: readonly { readonly x: number }[]): number =>
+      list.reduce((sum, { x }) => sum + x, 0) / list.length;
+    const middle = mean(draws);
+    const variance = draws.reduce((sum, { x }) => sum + (x - middle) ** 2, 0) / draws.length;
+    let between = 0;
+    for (const system of [0, 1, 2]) {
+      const own = draws.filter((one) => one.system === system);
+      between += (own.length / draws.length) * (mean(own) - middle) ** 2;
+    }
+    expect(Math.abs(shareOf(unknowns, learnable[0]!) - between / variance)).toBeLessThan(0.02);
+  });
+});
+
+describe('UNKNOWNS', () => {
+  it('names each once', () => {
+    expect(new Set(UNKNOWNS).size).toBe(UNKNOWNS.length);
+  });
+});
