@@ -8,6 +8,7 @@ import type { CompareCommandOptions } from './commands/compare.js';
 import type { MeasureCommandOptions } from './commands/measure.js';
 import type { RefreshCommandOptions } from './commands/refresh.js';
 import type { SpectrumCommandOptions } from './commands/spectrum.js';
+import type { SurveyCommandOptions } from './commands/survey.js';
 import type { RunsOptions } from './commands/runs.js';
 import { VERSION } from '../screening/version.js';
 
@@ -73,6 +74,7 @@ export async function runProgram(argv: readonly string[]): Promise<number> {
   addRefreshCommand(program, keep);
   addRunCommands(program, keep);
   addCompareCommand(program, keep);
+  addSurveyCommand(program, keep);
   addMethodCommands(program, keep);
   addMeasureCommand(program, keep);
   try {
@@ -308,6 +310,25 @@ function addCompareCommand(program: Command, keep: Keep): void {
     )
     .action(async (before: number | undefined, after: number | undefined, options: CompareCommandOptions) => {
       keep(await (await import('./commands/compare.js')).compare(before, after, options));
+    });
+}
+
+function addSurveyCommand(program: Command, keep: Keep): void {
+  program
+    .command('survey')
+    .summary('which building to visit next, and for what')
+    .description(
+      'Plans the visits that firm up the list most for what they cost: building, what to find out, by which kind of visit, until hours or money are spent. Costs and what a visit finds out are set in the study under survey.',
+    )
+    .option('--hours <number>', 'hours there are for visits', positive)
+    .option('--money <number>', "money there is for visits, in the study's currency", positive)
+    .addOption(study())
+    .addOption(run())
+    .option('--csv <file>', 'the plan as a sheet to fill in')
+    .addOption(json())
+    .addHelpText('after', examples('swaymark survey --hours 16', 'swaymark survey --hours 40 --csv field.csv'))
+    .action(async (options: SurveyCommandOptions) => {
+      keep(await (await import('./commands/survey.js')).survey(options));
     });
 }
 

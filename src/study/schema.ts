@@ -9,6 +9,7 @@ import { CodeHistorySchema } from './code-editions.js';
 import { expected, list, mapping, strict, text, whole, word } from './fields.js';
 import { InventorySchema, NeighboursSchema, WordsSchema } from './inventory-schema.js';
 import { SpectrumSchema } from './spectrum-codes.js';
+import { SurveySchema } from './survey-schema.js';
 
 const levelTitle = text().describe('Name of the level in reports; no two alike.');
 const spectrumName = text('the name of a spectrum of hazard.spectra');
@@ -136,6 +137,7 @@ export const StudySchema = strict({
     .exactOptional()
     .describe('Table of chances of the lateral system by use, storeys and year; needed where systems are unknown.'),
   ranking: RankingSchema.prefault({}).describe('What the list is ordered by, and how long it is.'),
+  survey: SurveySchema.prefault({}).describe('What visits cost and find out, for planning a survey.'),
   seed: whole({ from: 0, to: 2 ** 32 - 1 })
     .default(1)
     .describe('Seed of every random draw.'),

@@ -1,0 +1,99 @@
+/** The survey of a study planned, and its sheet for the field. */
+import type { Cost, Visit } from '../engineering/priority/campaign.js';
+import { UserError } from '../errors.js';
+import { ANSWERS, askedWords, reasonWord } from '../reports/survey/words.js';
+import { chosenRun, withStudyDatabase } from '../runs/open.js';
+import type { Report } from '../screening/assess-inventory.js';
+import { planSurvey } from '../screening/survey.js';
+import type { SurveyPlan, SurveyStep } from '../screening/survey.js';
+import type { Study } from '../study/schema.js';
+import { csvText } from './csv-text.js';
+import { writeNamed } from './write-named.js';
+
+export interface SurveyChoice {
+  /** Hours there are for visits; no limit when left out. */
+  readonly hours?: number | undefined;
+  /** Money there is for visits, in the study's currency; no limit when left out. */
+  readonly money?: number | undefined;
+  /** The run planned from; the newest when left out. */
+  readonly run?: number | undefined;
+  /** File the sheet for the field is written to. */
+  readonly csv?: string | undefined;
+  readonly report?: Report;
+}
+
+export interface PlannedSurvey {
+  readonly plan: SurveyPlan;
+  /** Path of the sheet, or null. */
+  readonly csv: string | null;
+}
+
+/**
+ * Plans the visits to make next for the study at `path`: always the one that is worth most for an hour (or for money, where only that is
+ * limited) until hours and money are spent.
+ * @throws UserError when neither is limited, for a study without runs, an unknown run, or money that no visit costs.
+ * @example
+ * const { plan } = await surveyStudy('study.yaml', { hours: 16 });
+ */
+export async function surveyStudy(
+  path: string,
+  { hours = Infinity, money = Infinity, run, csv, report }: SurveyChoice,
+): Promise<PlannedSurvey> {
+  if (hours === Infinity && money === Infinity)
+    throw new UserError('a survey is planned within hours or money: say how many, for instance --hours 16');
+  const cost: Cost = hours === Infinity ? 'money' : 'hours';
+  const plan = await withStudyDatabase(path, async (db, { study, file }) => {
+    const visits = visitsOf(study);
+    if (cost === 'money' && visits.every((visit) => visit.money === 0))
+      throw new UserError('no visit costs money in this study: set survey.money_per_hour or the money of a visit', {
+        file,
+        key: 'survey',
+      });
+    const { run: runId } = await chosenRun(db, { run });
+    return planSurvey(db, runId, { visits, limits: { hours, money }, cost }, report);
+  });
+  return { plan, csv: csv === undefined ? null : await writeNamed(csv, fieldSheet(plan), '--csv') };
+}
+
+/** The visits of a study with what they cost in all. */
+function visitsOf({ survey }: Study): readonly Visit[] {
+  return Object.entries(survey.visits).map(([name, { hours, money, finds }]) => ({
+    name,
+    hours,
+    money: money + hours * survey.money_per_hour,
+    finds,
+  }));
+}
+
+const HEAD = ['place', 'id', 'name', 'group', 'lon', 'lat', 'rank', 'visit', 'find out', 'because'] as const;
+const TAIL = ['surveyor', 'surveyed_on', 'remark'] as const;
+
+/** Every column that answers something. */
+export const ANSWER_COLUMNS: readonly string[] = Object.values(ANSWERS).flat();
+
+/**
+ * The plan as a table for a tablet: a row a visit, cells of what is asked left blank, cells of what is not asked holding a dash so that
+ * nobody looks for more. What is filled in goes back with `survey --take`.
+ */
+export function fieldSheet({ steps }: SurveyPlan): string {
+  const rows = steps.map((step) => {
+    const asked = new Set(step.asks.flatMap((unknown) => ANSWERS[unknown]));
+    return [
+      step.place,
+      step.id,
+      step.name,
+      step.group,
+      step.lon,
+      step.lat,
+      step.rank,
+      step.visit,
+      askedWords(step),
+      reasonWord(step),
+      ...ANSWER_COLUMNS.map((column) => (asked.has(column) ? null : '–')),
+      ...TAIL.map(() => null),
+    ] satisfies (string | number | null)[];
+  });
+  return csvText([...HEAD, ...ANSWER_COLUMNS, ...TAIL], rows);
+}
+
+export type { SurveyPlan, SurveyStep };

@@ -1,0 +1,224 @@
+/** The survey of a kept run: which building to visit next, for what, and what it does to the list. */
+import { compileContext } from '../engineering/assess/context.js';
+import { unknownsOf } from '../engineering/assess/unknowns.js';
+import { buildingReader } from '../engineering/building-columns.js';
+import type { Candidate, Cost, Limits, PlannedVisit, Visit } from '../engineering/priority/campaign.js';
+import { planCampaign } from '../engineering/priority/campaign.js';
+import { rankBasis } from '../engineering/priority/rank.js';
+import type { Edge, Unknown } from '../engineering/priority/survey-value.js';
+import { mostWorth, shareOf, worthOf } from '../engineering/priority/survey-value.js';
+import { UserError } from '../errors.js';
+import { indexRanges } from '../store/chunks.js';
+import type { Database } from '../store/database.js';
+import { assessAll } from './assess-all.js';
+import type { Assessed } from './assess-all.js';
+import type { Report } from './assess-inventory.js';
+import { withAssessor } from './assess-inventory.js';
+import { readRun } from './page-data.js';
+import { readBuildings, readPools } from './read-buildings.js';
+
+/** Buildings whose unknowns are weighed one by one; in larger inventories those that could be worth most. */
+const MOST_CANDIDATES = 5_000;
+/** Values under this share of the largest are none. */
+const NOTHING = 1e-6;
+const BLOCK = 65_536;
+
+export interface SurveyWish {
+  readonly visits: readonly Visit[];
+  readonly limits: Limits;
+  /** What visits are weighed by. */
+  readonly cost: Cost;
+}
+
+/** One visit of the plan, with the building as the list shows it. */
+export interface SurveyStep {
+  readonly place: number;
+  readonly id: string;
+  readonly name: string | null;
+  readonly group: string | null;
+  readonly lon: number | null;
+  readonly lat: number | null;
+  readonly rank: number;
+  readonly chance: number;
+  readonly visit: string;
+  readonly asks: readonly Unknown[];
+  /** Share of the building's spread (variance of ln S) that each unknown it asks for stands for. */
+  readonly shares: readonly number[];
+  /** In units of the priority of the median building. */
+  readonly value: number;
+  readonly value_per_cost: number;
+  readonly hours: number;
+  readonly money: number;
+  readonly hours_so_far: number;
+  readonly money_so_far: number;
+  /** Expected wrong places of the list once all visits to here are made. */
+  readonly expected_wrong_places: number;
+}
+
+export interface SurveyPlan {
+  readonly run: number;
+  readonly list_size: number;
+  readonly cost: Cost;
+  readonly steps: readonly SurveyStep[];
+  readonly buildings: number;
+  readonly hours: number;
+  readonly money: number;
+  readonly expected_wrong_before: number;
+  readonly expected_wrong_after: number;
+  /** Ranked buildings; those of which something could be learnt that matters; those weighed one by one. */
+  readonly ranked: number;
+  readonly worth_visiting: number;
+  readonly weighed: number;
+  /** Only those that could be worth most were weighed. */
+  readonly capped: boolean;
+  /** Value of every unknown of every weighed building together, and how many buildings hold 80 % of it. */
+  readonly value_of_all: number;
+  readonly buildings_of_80_percent: number;
+}
+
+/** Plans the survey of run `runId`. @throws UserError for an unknown run, or a list that holds every building. */
+export async function planSurvey(
+  db: Database,
+  runId: number,
+  { visits, limits, cost }: SurveyWish,
+  report: Report = () => undefined,
+): Promise<SurveyPlan> {
+  const run = await readRun(db, runId);
+  const listSize = run.summary.list_size;
+  if (run.summary.ranked <= listSize)
+    throw new UserError(
+      `the list of run ${String(runId)} holds all ${String(run.summary.ranked)} ranked buildings: nothing a survey finds out changes it; set ranking.list_size lower`,
+    );
+  const pools = await readPools(db, run.inventory_id);
+  const count = run.summary.buildings;
+  report('assessing', 0);
+  const assessed = await withAssessor(count, async (assessor) => {
+    assessor.begin(run.settings, pools);
+    return assessAll(db, run.inventory_id, null, count, assessor, (done) => {
+      report('assessing', done / count);
+    });
+  });
+  report('weighing', 0);
+  const basis = rankBasis(assessed, listSize);
+  const edge: Edge = {
+    threshold: basis.threshold,
+    unit: assessed.median[basis.order[Math.floor((basis.order.length - 1) / 2)]!]!,
+  };
+  const { chosen, worthVisiting } = mostPromising(assessed, edge);
+  const context = compileContext(run.settings);
+  const candidates: Candidate[] = [];
+  const shares = new Map<number, ReadonlyMap<Unknown, number>>();
+  for (const range of indexRanges(count, BLOCK)) {
+    const wanted = chosen.filter((index) => index >= range.from && index < range.to);
+    if (wanted.length === 0) continue;
+    const { columns } = await readBuildings(db, run.inventory_id, range);
+    const read = buildingReader(columns, pools);
+    for (const index of wanted) {
+      const unknowns = unknownsOf(read(index - range.from), context);
+      if (unknowns === null || unknowns.learnable.length === 0) continue;
+      candidates.push({ index, worth: worthOf(unknowns, edge) });
+      shares.set(index, new Map(unknowns.learnable.map((one) => [one.unknown, shareOf(unknowns, one)])));
+    }
+    report('weighing', range.to / count);
+  }
+  report('planning');
+  // the best ranked first: equal values go in the order of the list
+  const rankOf = new Int32Array(count);
+  basis.order.forEach((at, place) => (rankOf[assessed.index[at]!] = place + 1));
+  candidates.sort((a, b) => rankOf[a.index]! - rankOf[b.index]!);
+  const planned = planCampaign(candidates, visits, limits, cost);
+  const before = run.summary.expected_wrong_places;
+  const all = candidates.map(({ worth }) => worth.value.at(-1)!).sort((a, b) => b - a);
+  const valueOfAll = all.reduce((sum, value) => sum + value, 0);
+  let wrong = before;
+  const named = await namesOf(db, runId, run.inventory_id, [...new Set(planned.map(({ index }) => index))]);
+  const steps = planned.map((one, i): SurveyStep => {
+    // a building wrongly in and one wrongly out are one wrong place
+    wrong -= 0.5 * (one.wrongBefore - one.wrongAfter);
+    return stepOf(one, i, named.get(one.index)!, shares.get(one.index)!, Math.max(wrong, 0));
+  });
+  return {
+    run: runId,
+    list_size: listSize,
+    cost,
+    steps,
+    buildings: new Set(planned.map(({ index }) => index)).size,
+    hours: planned.at(-1)?.hours ?? 0,
+    money: planned.at(-1)?.money ?? 0,
+    expected_wrong_before: before,
+    expected_wrong_after: steps.at(-1)?.expected_wrong_places ?? before,
+    ranked: assessed.id.length,
+    worth_visiting: worthVisiting,
+    weighed: candidates.length,
+    capped: worthVisiting > MOST_CANDIDATES,
+    value_of_all: valueOfAll,
+    buildings_of_80_percent: holding(all, 0.8 * valueOfAll),
+  };
+}
+
+/** Indices of the buildings whose S is worth knowing at all, the most promising where there are too many to weigh. */
+function mostPromising(
+  { index, mixtures, median }: Assessed,
+  edge: Edge,
+): { readonly chosen: readonly number[]; readonly worthVisiting: number } {
+  const most = Float64Array.from(mixtures, (mixture, i) => mostWorth(mixture, median[i]!, edge));
+  const largest = most.reduce((a, b) => Math.max(a, b), 0);
+  const promising = Array.from(most.keys()).filter((i) => most[i]! > NOTHING * largest);
+  const chosen = promising
+    .sort((a, b) => most[b]! - most[a]! || a - b)
+    .slice(0, MOST_CANDIDATES)
+    .map((i) => index[i]!)
+    .sort((a, b) => a - b);
+  return { chosen, worthVisiting: promising.length };
+}
+
+/** How many of the falling `values` it takes to reach `sum`. */
+function holding(values: readonly number[], sum: number): number {
+  let left = sum;
+  let taken = 0;
+  while (taken < values.length && left > 0) {
+    left -= values[taken]!;
+    taken += 1;
+  }
+  return taken;
+}
+
+type Named = Pick<SurveyStep, 'id' | 'name' | 'group' | 'lon' | 'lat' | 'rank' | 'chance'>;
+
+async function namesOf(
+  db: Database,
+  runId: number,
+  inventoryId: string,
+  indices: readonly number[],
+): Promise<ReadonlyMap<number, Named>> {
+  const rows = await db.rows<Named & { at: number }>(
+    `SELECT b.building_index AS at, b.id, b.name, b."group", b.lon, b.lat, r."rank", r.chance FROM building b
+     JOIN result r ON r.run_id = ? AND r.building_index = b.building_index
+     WHERE b.inventory_id = ? AND b.building_index IN (SELECT unnest(CAST(? AS INTEGER[])))`,
+    [runId, inventoryId, `[${indices.join(',')}]`],
+  );
+  return new Map(rows.map(({ at, ...named }) => [at, named]));
+}
+
+function stepOf(
+  { visit, asks, value, valuePerCost, hours, money }: PlannedVisit,
+  i: number,
+  named: Named,
+  shares: ReadonlyMap<Unknown, number>,
+  wrong: number,
+): SurveyStep {
+  return {
+    place: i + 1,
+    ...named,
+    visit: visit.name,
+    asks,
+    shares: asks.map((unknown) => shares.get(unknown)!),
+    value,
+    value_per_cost: valuePerCost,
+    hours: visit.hours,
+    money: visit.money,
+    hours_so_far: hours,
+    money_so_far: money,
+    expected_wrong_places: wrong,
+  };
+}
