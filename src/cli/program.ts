@@ -325,6 +325,8 @@ function addSurveyCommand(program: Command, keep: Keep): void {
     .addOption(study())
     .addOption(run())
     .option('--csv <file>', 'the plan as a sheet to fill in')
+    .option('--output <folder>', 'folder of the page (default: that of the reports)')
+    .option('--no-page', 'write no page')
     .addOption(json())
     .addHelpText('after', examples('swaymark survey --hours 16', 'swaymark survey --hours 40 --csv field.csv'))
     .action(async (options: SurveyCommandOptions) => {

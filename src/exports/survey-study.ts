@@ -1,14 +1,19 @@
-/** The survey of a study planned, and its sheet for the field. */
+/** The survey of a study planned, its page, and its sheet for the field. */
+import { resolve } from 'node:path';
 import type { Cost, Visit } from '../engineering/priority/campaign.js';
 import { UserError } from '../errors.js';
+import { readPageScript } from '../reports/page-script.js';
+import { renderSurvey } from '../reports/survey.js';
 import { ANSWERS, askedWords, reasonWord } from '../reports/survey/words.js';
 import { chosenRun, withStudyDatabase } from '../runs/open.js';
 import type { Report } from '../screening/assess-inventory.js';
 import { planSurvey } from '../screening/survey.js';
 import type { SurveyPlan, SurveyStep } from '../screening/survey.js';
+import { loadStudy } from '../study/load.js';
 import type { Study } from '../study/schema.js';
 import { csvText } from './csv-text.js';
 import { writeNamed } from './write-named.js';
+import { prepareFolder, writeSet } from './write-set.js';
 
 export interface SurveyChoice {
   /** Hours there are for visits; no limit when left out. */
@@ -19,6 +24,10 @@ export interface SurveyChoice {
   readonly run?: number | undefined;
   /** File the sheet for the field is written to. */
   readonly csv?: string | undefined;
+  /** Write no page. */
+  readonly page?: boolean;
+  /** Folder of the page; the study's own when left out. */
+  readonly output?: string | undefined;
   readonly report?: Report;
 }
 
@@ -26,18 +35,20 @@ export interface PlannedSurvey {
   readonly plan: SurveyPlan;
   /** Path of the sheet, or null. */
   readonly csv: string | null;
+  /** Path of the page, or null. */
+  readonly page: string | null;
 }
 
 /**
  * Plans the visits to make next for the study at `path`: always the one that is worth most for an hour (or for money, where only that is
- * limited) until hours and money are spent.
+ * limited) until hours and money are spent. Writes survey-<run>.html into the study's folder of reports, unless told not to.
  * @throws UserError when neither is limited, for a study without runs, an unknown run, or money that no visit costs.
  * @example
  * const { plan } = await surveyStudy('study.yaml', { hours: 16 });
  */
 export async function surveyStudy(
   path: string,
-  { hours = Infinity, money = Infinity, run, csv, report }: SurveyChoice,
+  { hours = Infinity, money = Infinity, run, csv, page = true, output, report }: SurveyChoice,
 ): Promise<PlannedSurvey> {
   if (hours === Infinity && money === Infinity)
     throw new UserError('a survey is planned within hours or money: say how many, for instance --hours 16');
@@ -52,7 +63,13 @@ export async function surveyStudy(
     const { run: runId } = await chosenRun(db, { run });
     return planSurvey(db, runId, { visits, limits: { hours, money }, cost }, report);
   });
-  return { plan, csv: csv === undefined ? null : await writeNamed(csv, fieldSheet(plan), '--csv') };
+  const sheet = csv === undefined ? null : await writeNamed(csv, fieldSheet(plan), '--csv');
+  if (!page) return { plan, csv: sheet, page: null };
+  const { study, folder } = await loadStudy(path);
+  const into = prepareFolder(output ?? resolve(folder, study.output));
+  const name = `survey-${String(plan.run)}.html`;
+  await writeSet(into, { [name]: renderSurvey(study.title, plan, readPageScript()) });
+  return { plan, csv: sheet, page: resolve(into, name) };
 }
 
 /** The visits of a study with what they cost in all. */

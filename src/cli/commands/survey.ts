@@ -17,6 +17,8 @@ export interface SurveyCommandOptions {
   readonly study?: string;
   readonly run?: number;
   readonly csv?: string;
+  readonly output?: string;
+  readonly page: boolean;
   readonly json?: true;
 }
 
@@ -24,20 +26,17 @@ export interface SurveyCommandOptions {
 const SHOWN = 25;
 
 /** `swaymark survey`: which building to visit next, for what. */
-export async function survey({ hours, money, run, csv, json, ...options }: SurveyCommandOptions): Promise<number> {
+export async function survey({ json, study, ...wish }: SurveyCommandOptions): Promise<number> {
   const progress = progressLine();
   try {
-    const planned = await surveyStudy(findStudy(options.study), {
-      hours,
-      money,
-      run,
-      csv,
+    const planned = await surveyStudy(findStudy(study), {
+      ...wish,
       report: (step, share = NaN) => {
         progress.update({ step, share });
       },
     });
     progress.end();
-    if (json) printJson({ ...planned.plan, csv: planned.csv });
+    if (json) printJson({ ...planned.plan, csv: planned.csv, page: planned.page });
     else printLines(lines(planned, terminalColumns()));
     return EXIT.clean;
   } finally {
@@ -45,7 +44,7 @@ export async function survey({ hours, money, run, csv, json, ...options }: Surve
   }
 }
 
-function lines({ plan, csv }: PlannedSurvey, columns: number): string[] {
+function lines({ plan, csv, page }: PlannedSurvey, columns: number): string[] {
   const { steps, cost } = plan;
   const money = plan.money > 0;
   return [
@@ -95,7 +94,10 @@ function lines({ plan, csv }: PlannedSurvey, columns: number): string[] {
             .flatMap((step) => wrap(clean(`${step.id}: ${reasonWord(step)}`), columns, '  ', '      ')),
           '',
         ]),
-    ...(csv === null ? [] : [`Written: ${clean(relative(process.cwd(), csv) || csv)}`, '']),
+    ...[page, csv].flatMap((path) =>
+      path === null ? [] : [`Written: ${clean(relative(process.cwd(), path) || path)}`],
+    ),
+    '',
     ...wrap(
       'What a visit finds out firms up an order for further assessment; it is no statement on the safety of any building.',
       columns,
