@@ -1,6 +1,7 @@
 /** What the dashboard page carries: filled by screening, drawn by reports, read by the page's script. */
 import type { AssessSettings } from './assess/settings.js';
 import type { BuildingColumns, YearPools } from './building-columns.js';
+import type { Unknown } from './priority/survey-value.js';
 
 /** Where a portfolio's values come from, counted per attribute. */
 export interface AttributeCount {
@@ -38,6 +39,43 @@ export interface Assumption {
   readonly source: string;
 }
 
+/** One visit of a survey. */
+export interface SurveyVisit {
+  readonly place: number;
+  readonly id: string;
+  readonly name: string | null;
+  readonly group: string | null;
+  readonly rank: number;
+  readonly visit: string;
+  readonly asks: readonly Unknown[];
+  /** Share of the building's spread (variance of ln S) that each unknown it asks for stands for. */
+  readonly shares: readonly number[];
+  /** In units of the priority of the median building. */
+  readonly value: number;
+  readonly value_per_cost: number;
+  readonly hours_so_far: number;
+  /** Expected wrong places of the list once all visits to here are made. */
+  readonly expected_wrong_places: number;
+}
+
+/** What a week of visits would do to the list. */
+export interface SurveyOutlook {
+  readonly hours: number;
+  readonly visits: number;
+  readonly buildings: number;
+  readonly expected_wrong_before: number;
+  readonly expected_wrong_after: number;
+  /** Hours of visits that would halve the expected wrong places; null: more than were planned. */
+  readonly halving_hours: number | null;
+  /** How many hours of visits were planned to find them, and the wrong places then. */
+  readonly reach_hours: number;
+  readonly reach_wrong: number;
+  readonly worth_visiting: number;
+  readonly buildings_of_80_percent: number;
+  /** The first visits. */
+  readonly steps: readonly SurveyVisit[];
+}
+
 export interface PageSummary {
   readonly title: string;
   readonly run: string;
@@ -63,6 +101,8 @@ export interface PageSummary {
   readonly findings: readonly FindingCount[];
   readonly assumptions: readonly Assumption[];
   readonly cautions: readonly string[];
+  /** Left out where none was planned with the run. */
+  readonly survey?: SurveyOutlook | null;
   /** Slope of the hazard curve per spectrum of the ranking level. */
   readonly slopes: readonly { readonly spectrum: string; readonly k: number; readonly how: string }[];
 }

@@ -1,16 +1,16 @@
 /** The survey of a study planned, its page, and its sheet for the field. */
 import { resolve } from 'node:path';
-import type { Cost, Visit } from '../engineering/priority/campaign.js';
+import type { Cost } from '../engineering/priority/campaign.js';
 import { UserError } from '../errors.js';
 import { readPageScript } from '../reports/page-script.js';
 import { renderSurvey } from '../reports/survey.js';
 import { ANSWERS, askedWords, reasonWord } from '../reports/survey/words.js';
 import { chosenRun, withStudyDatabase } from '../runs/open.js';
 import type { Report } from '../screening/assess-inventory.js';
+import { visitsOf } from '../screening/survey-outlook.js';
 import { planSurvey } from '../screening/survey.js';
 import type { SurveyPlan, SurveyStep } from '../screening/survey.js';
 import { loadStudy } from '../study/load.js';
-import type { Study } from '../study/schema.js';
 import { csvText } from './csv-text.js';
 import { writeNamed } from './write-named.js';
 import { prepareFolder, writeSet } from './write-set.js';
@@ -70,16 +70,6 @@ export async function surveyStudy(
   const name = `survey-${String(plan.run)}.html`;
   await writeSet(into, { [name]: renderSurvey(study.title, plan, readPageScript()) });
   return { plan, csv: sheet, page: resolve(into, name) };
-}
-
-/** The visits of a study with what they cost in all. */
-function visitsOf({ survey }: Study): readonly Visit[] {
-  return Object.entries(survey.visits).map(([name, { hours, money, finds }]) => ({
-    name,
-    hours,
-    money: money + hours * survey.money_per_hour,
-    finds,
-  }));
 }
 
 const HEAD = ['place', 'id', 'name', 'group', 'lon', 'lat', 'rank', 'visit', 'find out', 'because'] as const;

@@ -12,6 +12,7 @@ import { packPage } from './dashboard/pack.js';
 import { MapSection, OriginsSection, PeriodsSection } from './dashboard/sections/figures.js';
 import { ListSection } from './dashboard/sections/list.js';
 import { AllSection, AssumptionsSection, CautionsSection, Foot, InventorySection } from './dashboard/sections/records.js';
+import { SurveySection } from './dashboard/sections/survey.js';
 import { Top } from './dashboard/sections/top.js';
 import { BASE_STYLE } from './dashboard/style/base.js';
 import { PARTS_STYLE } from './dashboard/style/parts.js';
@@ -46,6 +47,7 @@ export function renderDashboard(data: PageData, pageScript: string): string {
         h(PeriodsSection, { data, spectrum, heights }),
         h(MapSection, { chart: map }),
         h(OriginsSection, { chart: provenance }),
+        h(SurveySection, { data }),
         h(AllSection, { data }),
         h(InventorySection, { data }),
         h(AssumptionsSection, { data }),

@@ -4,8 +4,10 @@ import type { PageData } from '../engineering/page-contract.js';
 import { answerNotes, answerSentence, attributeTotal, decisiveAttributes, LEVEL_OF_WORK, orderSentence, slopeSentence } from './dashboard/answers.js';
 import { capacityWords, demandPlaces, governingPeriod, listLength, numberAt } from './dashboard/reading.js';
 import { middleSentence, reasonTeller } from './dashboard/reasons.js';
+import { visitsTable } from './dashboard/sections/survey.js';
 import { madeAt } from './made-at.js';
 import { markdownTable, markdownText } from './markdown.js';
+import { outlookSentence, worthwhileSentence } from './survey/words.js';
 
 /** Longest list printed in full; the rest stands in ranking.csv. */
 const MOST_PLACES = 60;
@@ -21,6 +23,7 @@ export function renderSummary(data: PageData): string {
     ...answerNotes(data).map((note) => markdownText(note)),
     '## The list',
     listPart(data),
+    ...surveyPart(data),
     '## Where the rows went',
     markdownTable(['Rows', 'Number'], [...summary.account.map(({ title, rows }) => [markdownText(title), formatCount(rows)]), ['All rows read', formatCount(summary.rows_in)]], [1]),
     '## Where the numbers came from',
@@ -80,6 +83,17 @@ function listPart(data: PageData): string {
     ...(shown < places ? [`The first ${formatCount(shown)} of ${formatCount(places)} places; all of them stand in ranking.csv.`] : []),
   ];
   return [markdownTable(head.map(markdownText), rows, [0, 4, 5, 6, 7, 8, 9, 10]), ...notes.map((note) => note.replaceAll('_', '\\_'))].join('\n\n');
+}
+
+/** The first visits of a survey; nothing where none was planned. */
+function surveyPart({ summary: { survey, ranked } }: PageData): readonly string[] {
+  if (survey == null) return [];
+  const { head, rows } = visitsTable(survey);
+  return [
+    '## What to find out next',
+    [outlookSentence(survey), worthwhileSentence(survey, ranked)].filter((text) => text !== '').join(' '),
+    ...(rows.length === 0 ? [] : [markdownTable(head, rows.map((row) => row.map(markdownText)), [0, 2, 6, 7, 8])]),
+  ];
 }
 
 function slopesPart({ summary }: PageData): readonly string[] {

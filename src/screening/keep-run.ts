@@ -10,8 +10,10 @@ import type { Report } from './assess-inventory.js';
 import { assumptionsOf } from './assumptions.js';
 import { methodsFingerprint } from './fingerprints.js';
 import { keepRanked } from './keep-results.js';
+import { readPools } from './read-buildings.js';
 import { accountLines, attributeCounts, rankingFigures } from './summarise.js';
 import type { StoredSummary } from './summarise.js';
+import { surveyOutlook } from './survey-outlook.js';
 import { PROGRAM } from './version.js';
 
 export interface KeepOptions {
@@ -42,6 +44,21 @@ export async function keepRun(
   const { settings, slopes, assessed, ranked } = await withAssessor(count, (assessor) =>
     assessInventory(db, loaded, first, taken, runId, assessor, report),
   );
+  report('planning');
+  const figures = rankingFigures(assessed, ranked, listSize);
+  const { inventoryId } = taken;
+  const pools = await readPools(db, inventoryId);
+  const basis = {
+    runId,
+    inventoryId,
+    settings,
+    pools,
+    count,
+    listSize,
+    expectedWrong: figures.expected_wrong_places,
+    assessed,
+  };
+  const survey = await surveyOutlook(db, basis, study);
   assessed.mixtures.length = 0;
   assessed.flat.length = 0;
   report('keeping');
@@ -49,11 +66,12 @@ export async function keepRun(
   const summary: StoredSummary = {
     rows_in: taken.rowsIn,
     buildings: count,
-    ...rankingFigures(assessed, ranked, listSize),
+    ...figures,
     account: accountLines(account),
     attributes: attributeCounts(taken.attributes),
     assumptions: assumptionsOf(settings, slopes),
     slopes,
+    survey,
   };
   await db.run('INSERT INTO run VALUES (?, ?, ?, ?, ?, ?, ?, ?, ?, ?, ?, ?, ?, ?, ?, ?)', [
     runId,

@@ -35,6 +35,7 @@ export type StoredSummary = Pick<
   | 'attributes'
   | 'assumptions'
   | 'slopes'
+  | 'survey'
 >;
 
 export function accountLines(account: RowAccount): readonly AccountLine[] {

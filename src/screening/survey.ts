@@ -1,6 +1,8 @@
 /** The survey of a kept run: which building to visit next, for what, and what it does to the list. */
 import { compileContext } from '../engineering/assess/context.js';
+import type { AssessSettings } from '../engineering/assess/settings.js';
 import { unknownsOf } from '../engineering/assess/unknowns.js';
+import type { YearPools } from '../engineering/building-columns.js';
 import { buildingReader } from '../engineering/building-columns.js';
 import type { Candidate, Cost, Limits, PlannedVisit, Visit } from '../engineering/priority/campaign.js';
 import { planCampaign } from '../engineering/priority/campaign.js';
@@ -39,7 +41,6 @@ export interface SurveyStep {
   readonly lon: number | null;
   readonly lat: number | null;
   readonly rank: number;
-  readonly chance: number;
   readonly visit: string;
   readonly asks: readonly Unknown[];
   /** Share of the building's spread (variance of ln S) that each unknown it asks for stands for. */
@@ -76,28 +77,52 @@ export interface SurveyPlan {
   readonly buildings_of_80_percent: number;
 }
 
+/** What a plan stands on. */
+export interface SurveyBasis {
+  readonly runId: number;
+  readonly inventoryId: string;
+  readonly settings: AssessSettings;
+  readonly pools: YearPools;
+  /** Buildings of the inventory. */
+  readonly count: number;
+  readonly listSize: number;
+  readonly expectedWrong: number;
+  readonly assessed: Assessed;
+}
+
 /** Plans the survey of run `runId`. @throws UserError for an unknown run, or a list that holds every building. */
 export async function planSurvey(
   db: Database,
   runId: number,
-  { visits, limits, cost }: SurveyWish,
+  wish: SurveyWish,
   report: Report = () => undefined,
 ): Promise<SurveyPlan> {
   const run = await readRun(db, runId);
-  const listSize = run.summary.list_size;
-  if (run.summary.ranked <= listSize)
+  const { list_size: listSize, ranked, buildings: count, expected_wrong_places: expectedWrong } = run.summary;
+  if (ranked <= listSize)
     throw new UserError(
-      `the list of run ${String(runId)} holds all ${String(run.summary.ranked)} ranked buildings: nothing a survey finds out changes it; set ranking.list_size lower`,
+      `the list of run ${String(runId)} holds all ${String(ranked)} ranked buildings: nothing a survey finds out changes it; set ranking.list_size lower`,
     );
-  const pools = await readPools(db, run.inventory_id);
-  const count = run.summary.buildings;
+  const { inventory_id: inventoryId, settings } = run;
+  const pools = await readPools(db, inventoryId);
   report('assessing', 0);
   const assessed = await withAssessor(count, async (assessor) => {
-    assessor.begin(run.settings, pools);
-    return assessAll(db, run.inventory_id, null, count, assessor, (done) => {
+    assessor.begin(settings, pools);
+    return assessAll(db, inventoryId, null, count, assessor, (done) => {
       report('assessing', done / count);
     });
   });
+  const basis = { runId, inventoryId, settings, pools, count, listSize, expectedWrong, assessed };
+  return planOn(db, basis, wish, report);
+}
+
+/** Plans a survey for buildings assessed already. */
+export async function planOn(
+  db: Database,
+  { runId, inventoryId, settings, pools, count, listSize, expectedWrong, assessed }: SurveyBasis,
+  { visits, limits, cost }: SurveyWish,
+  report: Report = () => undefined,
+): Promise<SurveyPlan> {
   report('weighing', 0);
   const basis = rankBasis(assessed, listSize);
   const edge: Edge = {
@@ -105,13 +130,13 @@ export async function planSurvey(
     unit: assessed.median[basis.order[Math.floor((basis.order.length - 1) / 2)]!]!,
   };
   const { chosen, worthVisiting } = mostPromising(assessed, edge);
-  const context = compileContext(run.settings);
+  const context = compileContext(settings);
   const candidates: Candidate[] = [];
   const shares = new Map<number, ReadonlyMap<Unknown, number>>();
   for (const range of indexRanges(count, BLOCK)) {
     const wanted = chosen.filter((index) => index >= range.from && index < range.to);
     if (wanted.length === 0) continue;
-    const { columns } = await readBuildings(db, run.inventory_id, range);
+    const { columns } = await readBuildings(db, inventoryId, range);
     const read = buildingReader(columns, pools);
     for (const index of wanted) {
       const unknowns = unknownsOf(read(index - range.from), context);
@@ -127,15 +152,15 @@ export async function planSurvey(
   basis.order.forEach((at, place) => (rankOf[assessed.index[at]!] = place + 1));
   candidates.sort((a, b) => rankOf[a.index]! - rankOf[b.index]!);
   const planned = planCampaign(candidates, visits, limits, cost);
-  const before = run.summary.expected_wrong_places;
   const all = candidates.map(({ worth }) => worth.value.at(-1)!).sort((a, b) => b - a);
   const valueOfAll = all.reduce((sum, value) => sum + value, 0);
-  let wrong = before;
-  const named = await namesOf(db, runId, run.inventory_id, [...new Set(planned.map(({ index }) => index))]);
+  let wrong = expectedWrong;
+  const named = await namesOf(db, inventoryId, [...new Set(planned.map(({ index }) => index))]);
   const steps = planned.map((one, i): SurveyStep => {
     // a building wrongly in and one wrongly out are one wrong place
     wrong -= 0.5 * (one.wrongBefore - one.wrongAfter);
-    return stepOf(one, i, named.get(one.index)!, shares.get(one.index)!, Math.max(wrong, 0));
+    const building = { ...named.get(one.index)!, rank: rankOf[one.index]! };
+    return stepOf(one, i, building, shares.get(one.index)!, Math.max(wrong, 0));
   });
   return {
     run: runId,
@@ -145,8 +170,8 @@ export async function planSurvey(
     buildings: new Set(planned.map(({ index }) => index)).size,
     hours: planned.at(-1)?.hours ?? 0,
     money: planned.at(-1)?.money ?? 0,
-    expected_wrong_before: before,
-    expected_wrong_after: steps.at(-1)?.expected_wrong_places ?? before,
+    expected_wrong_before: expectedWrong,
+    expected_wrong_after: steps.at(-1)?.expected_wrong_places ?? expectedWrong,
     ranked: assessed.id.length,
     worth_visiting: worthVisiting,
     weighed: candidates.length,
@@ -183,19 +208,17 @@ function holding(values: readonly number[], sum: number): number {
   return taken;
 }
 
-type Named = Pick<SurveyStep, 'id' | 'name' | 'group' | 'lon' | 'lat' | 'rank' | 'chance'>;
+type Named = Pick<SurveyStep, 'id' | 'name' | 'group' | 'lon' | 'lat'>;
 
 async function namesOf(
   db: Database,
-  runId: number,
   inventoryId: string,
   indices: readonly number[],
 ): Promise<ReadonlyMap<number, Named>> {
   const rows = await db.rows<Named & { at: number }>(
-    `SELECT b.building_index AS at, b.id, b.name, b."group", b.lon, b.lat, r."rank", r.chance FROM building b
-     JOIN result r ON r.run_id = ? AND r.building_index = b.building_index
-     WHERE b.inventory_id = ? AND b.building_index IN (SELECT unnest(CAST(? AS INTEGER[])))`,
-    [runId, inventoryId, `[${indices.join(',')}]`],
+    `SELECT building_index AS at, id, name, "group", lon, lat FROM building
+     WHERE inventory_id = ? AND building_index IN (SELECT unnest(CAST(? AS INTEGER[])))`,
+    [inventoryId, `[${indices.join(',')}]`],
   );
   return new Map(rows.map(({ at, ...named }) => [at, named]));
 }
@@ -203,7 +226,7 @@ async function namesOf(
 function stepOf(
   { visit, asks, value, valuePerCost, hours, money }: PlannedVisit,
   i: number,
-  named: Named,
+  named: Named & Pick<SurveyStep, 'rank'>,
   shares: ReadonlyMap<Unknown, number>,
   wrong: number,
 ): SurveyStep {

@@ -2,6 +2,7 @@
 import { formatCount, formatNumber, formatShare } from '../../engineering/format.js';
 import type { AttributeCount, PageData } from '../../engineering/page-contract.js';
 import { SURE } from '../../screening/summarise.js';
+import { outlookSentence } from '../survey/words.js';
 import { counted, listLength } from './reading.js';
 
 export const LEVEL_OF_WORK = 'Desk screening: no building was visited, no drawings were read.';
@@ -129,7 +130,8 @@ export function slopeSentence({ slopes }: Pick<PageData['summary'], 'slopes'>): 
 /** What "sure" and "wrong" mean, the edge of the list and the weak types, one sentence each. */
 export function answerNotes({ summary }: PageData): readonly string[] {
   const { tie_group_at_edge: edge } = summary;
-  const before = [heightUnitSentence(summary), notRankedSentence(summary)].filter((note) => note !== '');
+  const survey = summary.survey == null ? '' : outlookSentence(summary.survey);
+  const before = [survey, heightUnitSentence(summary), notRankedSentence(summary)].filter((note) => note !== '');
   const notes = [
     ...before,
     `“Sure” is a chance of at least ${formatShare(SURE)} that the building truly belongs to the list; “wrong” is a place that better knowledge would give to another building.`,

@@ -1,7 +1,8 @@
 /** A survey in words: what is asked, why, and what it does to the list. */
-import { formatNumber, formatShare } from '../../engineering/format.js';
+import { formatCount, formatNumber, formatShare } from '../../engineering/format.js';
 import type { Unknown } from '../../engineering/priority/survey-value.js';
-import type { SurveyPlan, SurveyStep } from '../../screening/survey.js';
+import type { SurveyOutlook, SurveyVisit } from '../../engineering/page-contract.js';
+import type { SurveyPlan } from '../../screening/survey.js';
 
 /** What a surveyor is asked for. */
 export const ASKED: Readonly<Record<Unknown, string>> = {
@@ -25,12 +26,12 @@ export const ANSWERS: Readonly<Record<Unknown, readonly string[]>> = {
   drawings: ['design_base_shear_coefficient', 'design_level'],
 };
 
-export function askedWords({ asks }: Pick<SurveyStep, 'asks'>): string {
+export function askedWords({ asks }: Pick<SurveyVisit, 'asks'>): string {
   return asks.map((unknown) => ASKED[unknown]).join(', ');
 }
 
 /** "lateral system unknown: 61 % of the spread", the largest unknown of those asked for. */
-export function reasonWord({ asks, shares }: Pick<SurveyStep, 'asks' | 'shares'>): string {
+export function reasonWord({ asks, shares }: Pick<SurveyVisit, 'asks' | 'shares'>): string {
   const share = Math.max(...shares);
   const unknown = asks[shares.indexOf(share)];
   return unknown === undefined
@@ -53,4 +54,20 @@ export function planSentences(plan: SurveyPlan): readonly string[] {
       ? [`The ${String(plan.weighed)} that could be worth most were weighed one by one.`]
       : []),
   ];
+}
+
+/** What a survey would do to the list, in a sentence a council understands. */
+export function outlookSentence({ hours, expected_wrong_before: before, expected_wrong_after: after, halving_hours, reach_hours, reach_wrong }: SurveyOutlook): string {
+  if (hours === 0) return 'No visit would change the list: what is unknown at its edge is known already or cannot be seen.';
+  if (halving_hours !== null) return `${formatNumber(halving_hours, 2)} h of visits would halve that.`;
+  const told = `${formatNumber(hours, 2)} h of visits would bring the places expected to be wrong from about ${formatNumber(before, 2)} to about ${formatNumber(after, 2)}`;
+  const further = reach_hours > hours ? `, ${formatNumber(reach_hours, 3)} h to about ${formatNumber(reach_wrong, 2)}` : '';
+  return `${told}${further}; the rest no visit settles: it is the scatter of strength and of the codes themselves, which a detailed assessment finds out.`;
+}
+
+/** Where there is something to learn. */
+export function worthwhileSentence({ worth_visiting, buildings_of_80_percent, expected_wrong_before }: SurveyOutlook, ranked: number): string {
+  return expected_wrong_before > 0 && worth_visiting > 0
+    ? `Of ${formatCount(ranked)} ranked buildings ${formatCount(worth_visiting)} are worth any visit at all, and ${formatCount(buildings_of_80_percent)} hold 80 % of what there is to learn.`
+    : '';
 }

@@ -11,6 +11,7 @@ const CONTENTS: readonly (readonly [string, string])[] = [
   ['periods', 'Spectrum and periods'],
   ['places', 'Map'],
   ['origins', 'Where the numbers came from'],
+  ['survey', 'What to find out next'],
   ['all', 'All buildings'],
   ['inventory', 'State of the inventory'],
   ['assumptions', 'Assumptions'],
