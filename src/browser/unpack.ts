@@ -29,7 +29,11 @@ interface PackedColumns {
 }
 
 interface PackedBuildings extends Pick<PageBuildings, 'shown' | 'all' | 'pools'> {
-  readonly inputs: PackedColumns & { readonly id: Packed; readonly structure?: PackedColumns };
+  readonly inputs: PackedColumns & {
+    readonly id: Packed;
+    readonly structure?: PackedColumns;
+    readonly place?: { readonly lon: Packed; readonly lat: Packed };
+  };
   readonly name: Packed;
   readonly group: Packed;
   readonly part_of: Packed;
@@ -52,6 +56,7 @@ export function unpackPage(json: string): LoadedPage {
   return {
     summary: packed.summary,
     settings: packed.settings,
+    grids: packed.grids,
     display: packed.display,
     buildings: {
       shown: rest.shown,
@@ -68,6 +73,8 @@ export function unpackPage(json: string): LoadedPage {
                 numbers: mapped(inputs.structure.numbers, numbers),
                 words: mapped(inputs.structure.words, words),
               } as unknown as BuildingColumns['structure']),
+        place:
+          inputs.place === undefined ? undefined : { lon: numbers(inputs.place.lon), lat: numbers(inputs.place.lat) },
       },
       name: words(rest.name),
       group: words(rest.group),

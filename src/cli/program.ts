@@ -31,6 +31,16 @@ function periods(text: string): number[] {
   });
 }
 
+/** A coordinate of at most so many degrees, east and north positive. */
+function degrees(most: number): (text: string) => number {
+  return (text) => {
+    const value = Number(text);
+    if (text.trim() === '' || !(Math.abs(value) <= most))
+      throw new InvalidArgumentError(`Expected degrees, -${String(most)} to ${String(most)}.`);
+    return value;
+  };
+}
+
 function positive(text: string): number {
   const value = Number(text);
   if (text.trim() === '' || !(value > 0 && value < Infinity))
@@ -441,6 +451,8 @@ function addMethodCommands(program: Command, keep: Keep): void {
     .argument('[names...]', 'one spectrum: parameters, corners, ordinates; several: side by side')
     .addOption(study())
     .option('--at <periods>', 'periods in seconds, for instance 0.2,1', periods)
+    .option('--lon <degrees>', 'with --lat: the place at which hazard grids are read', degrees(360))
+    .option('--lat <degrees>', 'its latitude', degrees(90))
     .option('--csv <file>', 'the ordinates as a table, at --at or at periods that draw the curve')
     .option('--svg <file>', 'the curves as a picture, with dots at --at')
     .addOption(units())
@@ -450,6 +462,7 @@ function addMethodCommands(program: Command, keep: Keep): void {
       examples(
         'swaymark spectrum',
         'swaymark spectrum design-c --at 0.2,1',
+        'swaymark spectrum hazard-475 --lon 13.42 --lat 43.61',
         'swaymark spectrum design-c design-d --svg spectra.svg --csv spectra.csv',
       ),
     )

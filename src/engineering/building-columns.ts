@@ -65,6 +65,8 @@ export interface BuildingColumns {
   readonly words: Readonly<Record<(typeof BUILDING_WORDS)[number], Words>>;
   /** Handed over only where some building of the inventory knows any of it. */
   readonly structure?: StructureColumns | undefined;
+  /** Coordinates, degrees: handed over only where a spectrum hangs on the place. */
+  readonly place?: { readonly lon: Numbers; readonly lat: Numbers } | undefined;
 }
 
 /** Equally likely years by pool number. */
@@ -130,6 +132,7 @@ export function buildingReader(columns: BuildingColumns, pools: YearPools): (i: 
     spectrum,
     design_level,
   } = columns.words;
+  const { place } = columns;
   const structureAt = columns.structure === undefined ? null : structureReader(columns.structure);
   return (i) => {
     const year = year_built[i]!;
@@ -178,6 +181,8 @@ export function buildingReader(columns: BuildingColumns, pools: YearPools): (i: 
       mass_irregularity: mass_irregularity[i] as YesNo | null,
       site_class: site_class[i]!,
       hazard_zone: hazard_zone[i]!,
+      lon: place === undefined ? NaN : place.lon[i]!,
+      lat: place === undefined ? NaN : place.lat[i]!,
       spectrum: spectrum[i]!,
       design_base_shear_coefficient: design_base_shear_coefficient[i]!,
       design_level: design_level[i] as Building['design_level'],

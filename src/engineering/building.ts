@@ -134,6 +134,9 @@ export interface Building {
   readonly mass_irregularity: YesNo | null;
   readonly site_class: string | null;
   readonly hazard_zone: string | null;
+  /** Where it stands, degrees; NaN where not known, and where no spectrum of the study hangs on the place. */
+  readonly lon: number;
+  readonly lat: number;
   /** Name of the spectrum it reads, where the inventory says so itself. */
   readonly spectrum: string | null;
   readonly design_base_shear_coefficient: number;

@@ -2,6 +2,7 @@
  * Display formulas: parsed by jsep, evaluated in tests against the code, and written out symbolically and with numbers put in.
  * Grammar: + - * / ^ ( ), names, numbers, pi, and the functions sqrt, sin, ln, exp, min, max.
  */
+import { formatNumber } from './format.js';
 import { exp, ln, sinOfAcute } from './numeric/elementary.js';
 import jsep from 'jsep';
 import { power } from './numeric/power.js';
@@ -65,6 +66,8 @@ export function evaluateExpression(node: Node, values: Readonly<Record<string, n
   }
 }
 
+/** Longer than any constant is printed. */
+const LONGEST_LITERAL = 9;
 const STRENGTH: Readonly<Record<string, number>> = { '+': 1, '-': 1, '*': 2, '/': 2, '^': 3 };
 const SIGN: Readonly<Record<string, string>> = { '*': ' × ', '/': ' / ', '+': ' + ', '-': ' − ', '^': '^' };
 
@@ -74,7 +77,11 @@ export function writeExpression(node: Node, nameOf: (name: string) => string): s
 }
 
 function write(node: Node, nameOf: (name: string) => string): { text: string; strength: number } {
-  if (node.type === 'Literal') return { text: (node as jsep.Literal).raw, strength: 9 };
+  if (node.type === 'Literal') {
+    const { raw } = node as jsep.Literal;
+    // an ordinate of a table that was computed has all its digits
+    return { text: raw.length > LONGEST_LITERAL ? formatNumber(Number(raw), 4) : raw, strength: 9 };
+  }
   if (node.type === 'Identifier') {
     const { name } = node as jsep.Identifier;
     return { text: name === 'pi' ? 'π' : nameOf(name), strength: 9 };

@@ -95,6 +95,15 @@ const SYMBOLS: Readonly<Record<string, string>> = {
   period_2_s: 'T₂',
   sigma_2: 'σ₂',
   zone_share: 'z',
+  east_share: 'x',
+  north_share: 'y',
+  place_deg: 'place',
+  line_1_deg: 'line₁',
+  line_2_deg: 'line₂',
+  sa_sw_g: 'S_SW',
+  sa_se_g: 'S_SE',
+  sa_nw_g: 'S_NW',
+  sa_ne_g: 'S_NE',
   zone_floor: '0.8 Z N_v',
   near_fault_s1_g: 'S₁',
   ca_g: 'C_a',
@@ -208,7 +217,9 @@ const symbolIn =
 const COUNTS: ReadonlySet<string> = new Set(['storeys', 'occupants_peak', 'occupied_hours_per_week']);
 
 function showNumber(name: string, value: number): string {
-  return COUNTS.has(name) && Number.isInteger(value) ? formatCount(value) : formatNumber(value, 4);
+  if (COUNTS.has(name) && Number.isInteger(value)) return formatCount(value);
+  // a metre is the fifth decimal of a degree
+  return formatNumber(value, name.endsWith('_deg') ? 8 : 4);
 }
 
 /** A number as the formula takes it, in the unit of its record; the unit is named where the display shows the quantity in another. */

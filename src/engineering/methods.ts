@@ -19,6 +19,7 @@ import { VS30_TABLES } from './site/vs30.js';
 import { ASCE7_SITE_TABLES } from './spectrum/asce7-factors.js';
 import { DAMPING_TABLES } from './spectrum/damping.js';
 import { SPECTRUM_RECORDS } from './spectrum/definition.js';
+import { GRID_RECORDS } from './spectrum/grid-records.js';
 import { SITE_RECORDS } from './site/records.js';
 import { CRACKING } from './stiffness/cracking.js';
 import { SPECTRUM_FACTOR_RECORDS } from './spectrum/factor-records.js';
@@ -41,6 +42,7 @@ export const METHODS: readonly AnyRecord[] = [
   ...SITE_RECORDS,
   ...SPECTRUM_RECORDS,
   ...SPECTRUM_FACTOR_RECORDS,
+  ...GRID_RECORDS,
   ...DEMAND_RECORDS,
   ...EDITION_RECORDS,
   ...CAPACITY_RECORDS,

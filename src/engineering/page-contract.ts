@@ -2,6 +2,7 @@
 import type { AssessSettings } from './assess/settings.js';
 import type { BuildingColumns, YearPools } from './building-columns.js';
 import type { Unknown } from './priority/survey-value.js';
+import type { CarriedGrid } from './spectrum/grid-carry.js';
 
 /** Where a portfolio's values come from, counted per attribute. */
 export interface AttributeCount {
@@ -76,6 +77,18 @@ export interface SurveyOutlook {
   readonly steps: readonly SurveyVisit[];
 }
 
+/** The ordinates of a hazard grid over the ranked buildings that read it. */
+export interface GridSpread {
+  readonly spectrum: string;
+  /** Buildings behind the quantiles: all, or of a large inventory some thousands spread evenly over it. */
+  readonly buildings: number;
+  readonly periods_s: readonly number[];
+  /** Period by period, g: 5th percentile, median, 95th percentile. */
+  readonly low_g: readonly number[];
+  readonly median_g: readonly number[];
+  readonly high_g: readonly number[];
+}
+
 export interface PageSummary {
   readonly title: string;
   readonly run: string;
@@ -105,6 +118,8 @@ export interface PageSummary {
   readonly survey?: SurveyOutlook | null;
   /** Slope of the hazard curve per spectrum of the ranking level. */
   readonly slopes: readonly { readonly spectrum: string; readonly k: number; readonly how: string }[];
+  /** Grids that the first two levels read; none in runs made before there were any. */
+  readonly grids?: readonly GridSpread[] | undefined;
 }
 
 /**
@@ -132,5 +147,7 @@ export interface PageData {
   readonly summary: PageSummary;
   readonly settings: AssessSettings;
   readonly buildings: PageBuildings;
+  /** What the shown buildings read of the study's grids, by fingerprint. */
+  readonly grids: Readonly<Record<string, CarriedGrid>>;
   readonly display: 'si' | 'us';
 }

@@ -1,8 +1,15 @@
 /** Intake and data quality of a study's inventory, without keeping anything. */
+import { chooseSpectrum } from '../engineering/assess/choose-spectrum.js';
+import { compileContext } from '../engineering/assess/context.js';
+import { noPlaceReason, outsideReason } from '../engineering/assess/site-spectrum.js';
+import { buildingReader } from '../engineering/building-columns.js';
 import type { AccountLine, AttributeCount, FindingCount } from '../engineering/page-contract.js';
 import { takeIn } from '../inventory/take-in.js';
 import type { TakenIn } from '../inventory/take-in.js';
+import { readBuildings } from '../screening/read-buildings.js';
+import { settingsOf } from '../screening/settings.js';
 import { accountLines, attributeCounts, findingCounts } from '../screening/summarise.js';
+import { indexRanges } from '../store/chunks.js';
 import { openDatabase } from '../store/database.js';
 import type { Database } from '../store/database.js';
 import { prepareSchema } from '../store/schema.js';
@@ -30,6 +37,8 @@ export interface CheckedStudy {
   readonly findings: readonly FindingCount[];
   /** How many buildings `screen` will not rank for want of a lateral system; empty when none. */
   readonly not_rankable: string;
+  /** How many it will not rank because a hazard grid does not reach them; empty when none. */
+  readonly off_grid: string;
   readonly rejected: { readonly share: number; readonly limit: number; readonly over: boolean };
   readonly files: readonly string[];
 }
@@ -44,6 +53,29 @@ function notRankable({ study }: LoadedStudy, { attributes }: Pick<TakenIn, 'attr
   const unknown = Object.entries(attributes).find(([name]) => name === 'system')?.[1].unknown ?? 0;
   if (unknown === 0 || study.system_prior !== undefined) return '';
   return `${unknown === 1 ? '1 building' : `${String(unknown)} buildings`} cannot be ranked as the study stands: the lateral system is not known and no system_prior names a table of chances.`;
+}
+
+/** Buildings that the grids of the ranking level do not reach, by reason. */
+async function offGrid(
+  db: Database,
+  loaded: LoadedStudy,
+  { inventoryId, buildings }: Pick<TakenIn, 'inventoryId' | 'buildings'>,
+): Promise<string> {
+  if (loaded.grids.size === 0) return '';
+  // no table of system chances is needed here
+  const context = compileContext(await settingsOf(loaded, []), loaded.grids);
+  const reasons = new Set([...context.grids.keys()].flatMap((name) => [noPlaceReason(name), outsideReason(name)]));
+  const counts = new Map<string, number>();
+  for (const range of indexRanges(buildings)) {
+    const { columns, rows } = await readBuildings(db, inventoryId, range, { ids: false, places: true });
+    const buildingAt = buildingReader(columns, {});
+    for (let i = 0; i < rows; i += 1) {
+      const choice = chooseSpectrum(context, buildingAt(i), 0);
+      if (typeof choice === 'string' && reasons.has(choice)) counts.set(choice, (counts.get(choice) ?? 0) + 1);
+    }
+  }
+  const told = [...counts].map(([reason, count]) => `${reason} (${String(count)})`).join('; ');
+  return told === '' ? '' : `Buildings that have no spectrum, so that \`screen\` will not rank them: ${told}.`;
 }
 
 /** Share of rejected rows against the study's limit. */
@@ -103,6 +135,7 @@ export async function checkStudy(path: string, options: CheckOptions = {}): Prom
       attributes: attributeCounts(taken.attributes),
       findings: await findingCounts(db, inventoryId),
       not_rankable: notRankable(loaded, taken),
+      off_grid: await offGrid(db, loaded, taken),
       rejected: rejectedShare(loaded, taken),
       files,
     };

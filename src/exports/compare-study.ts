@@ -10,7 +10,7 @@ import type { Comparison, CompareOptions } from '../screening/compare-runs.js';
 import type { RunOf } from '../screening/read-compared.js';
 import { databasePath } from '../screening/screen.js';
 import type { Database } from '../store/database.js';
-import { loadStudy } from '../study/load.js';
+import { loadStudyAlone } from '../study/load.js';
 import type { LoadedStudy } from '../study/load.js';
 import { prepareFolder, writeSet } from './write-set.js';
 
@@ -41,8 +41,8 @@ export interface ComparedStudies {
  * const { comparison } = await compareStudy('study.yaml', { before: 1, after: 2, page: false });
  */
 export async function compareStudy(path: string, options: CompareStudyOptions = {}): Promise<ComparedStudies> {
-  const loaded = await loadStudy(path);
-  const other = options.otherStudy === undefined ? null : await loadStudy(options.otherStudy);
+  const loaded = await loadStudyAlone(path);
+  const other = options.otherStudy === undefined ? null : await loadStudyAlone(options.otherStudy);
   // one database cannot be opened twice
   const apart = other !== null && databasePath(other) !== databasePath(loaded) ? other : null;
   const compared = await withStudyDatabase(path, (db) =>

@@ -13,7 +13,7 @@ import { sweep } from '../screening/sweep.js';
 import type { SweptValue } from '../screening/sweep.js';
 import type { Database } from '../store/database.js';
 import type { StudyChange } from '../study/changes.js';
-import { loadStudy } from '../study/load.js';
+import { loadStudyAlone, withFiles } from '../study/load.js';
 import type { LoadedStudy } from '../study/load.js';
 import { withParameters } from '../study/parameters.js';
 import type { Parameter, ParameterRange } from '../study/parameters.js';
@@ -22,6 +22,9 @@ import { writeReports } from './reports.js';
 import type { ScreenedStudy } from './screen-study.js';
 import { replaceFile } from './replace-file.js';
 import { prepareFolder } from './write-set.js';
+
+/** A grid of hazard whose file is gone is the one kept with the run. */
+const GONE = { leaveMissing: true } as const;
 
 /** Which run to stand on, and what to change. */
 export interface RefreshChoice {
@@ -71,13 +74,13 @@ export interface RefreshedStudy extends ScreenOutcome {
  */
 export async function refreshStudy(path: string, options: RefreshStudyOptions = {}): Promise<RefreshedStudy> {
   const { set = [], write = false } = options;
-  const own = await loadStudy(path);
+  const own = await loadStudyAlone(path);
   if (write && options.with !== undefined)
     throw new UserError('with another study file there is nothing to write: it holds the parameters already', {
       file: options.with,
     });
   if (write && set.length === 0) throw new UserError('nothing to write: no parameter is set', { file: path });
-  const loaded = await withParameters(await parametersOf(own, options.with), set);
+  const loaded = await withParameters(await parametersOf(own, options.with), set, GONE);
   requireDatabase(own);
   const folder =
     options.reports === false ? null : prepareFolder(options.output ?? resolve(own.folder, loaded.study.output));
@@ -133,12 +136,12 @@ export async function sweepStudy(
   range: ParameterRange,
   options: SweepStudyOptions = {},
 ): Promise<SweptStudy> {
-  const own = await loadStudy(path);
+  const own = await loadStudyAlone(path);
   const start = await parametersOf(own, options.with);
   const studies: { readonly value: number; readonly loaded: LoadedStudy }[] = [];
   for (const value of range.values) {
     const swept = { path: range.path, value, given: `${range.given ?? range.path} at ${String(value)}` };
-    studies.push({ value, loaded: await withParameters(start, [...(options.set ?? []), swept]) });
+    studies.push({ value, loaded: await withParameters(start, [...(options.set ?? []), swept], GONE) });
   }
   return withStudyDatabase(path, async (db) => {
     options.onOpen?.(db);
@@ -150,13 +153,13 @@ export async function sweepStudy(
 
 /** The study whose parameters are meant: the other file's, with the paths in it as they are in the study's folder. */
 async function parametersOf(own: LoadedStudy, other: string | undefined): Promise<LoadedStudy> {
-  if (other === undefined) return own;
+  if (other === undefined) return withFiles(own, GONE);
   if (resolve(dirname(other)) !== resolve(own.folder))
     throw new UserError(
       `lies in another folder than the study ${own.file}: the paths in it would mean other files; put it beside the study`,
       { file: other },
     );
-  return loadStudy(other);
+  return withFiles(await loadStudyAlone(other), GONE);
 }
 
 function requireDatabase(loaded: LoadedStudy): void {

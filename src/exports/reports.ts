@@ -5,7 +5,8 @@ import type { PageData } from '../engineering/page-contract.js';
 import { renderDashboard } from '../reports/dashboard.js';
 import { readPageScript } from '../reports/page-script.js';
 import { renderSummary } from '../reports/summary.js';
-import { pageDataOf } from '../screening/page-data.js';
+import { gridRejectsSql } from '../screening/grid-rejects.js';
+import { pageDataOf, readRun } from '../screening/page-data.js';
 import type { Database } from '../store/database.js';
 import { endRanking, prepareRanking, writeRankingCsv, writeRankingParquet } from './ranking.js';
 import { writeRejectsCsv } from './rejects.js';
@@ -38,6 +39,7 @@ export async function writeReports(
     ranking.catch(() => undefined);
     const data = await pageDataOf(db, runId, display);
     const { inventory } = data.summary.fingerprints;
+    const rejects = gridRejectsSql(await readRun(db, runId));
     const sources: Readonly<Record<(typeof REPORT_FILES)[number], FileSource>> = {
       'dashboard.html': async (path) => {
         await ranking;
@@ -53,7 +55,7 @@ export async function writeReports(
         await ranking;
         await db.beside((other) => writeRankingParquet(other, runId, path));
       },
-      'rejects.csv': (path) => db.beside((other) => writeRejectsCsv(other, inventory, path)),
+      'rejects.csv': (path) => db.beside((other) => writeRejectsCsv(other, inventory, path, rejects)),
     };
     return { files: await writeSet(folder, sources), data };
   } finally {

@@ -10,6 +10,7 @@ import { Trace } from '../engineering/trace.js';
 import { findUnit } from '../engineering/units.js';
 import { UserError } from '../errors.js';
 import { explainBuilding } from '../screening/explain.js';
+import { readGrids } from '../screening/kept-grids.js';
 import { readRun } from '../screening/page-data.js';
 import type { Database } from '../store/database.js';
 import { csvText } from './csv-text.js';
@@ -69,7 +70,7 @@ export async function reviewSheet(
   const chosen = drawSample(ranked, size, seed);
   const drawn = `${String(chosen.length)} of the ${String(ranked.length)} ranked buildings of run ${String(runId)}, drawn without replacement with seed ${String(seed)}; each had the same chance`;
 
-  const context = compileContext(run.settings);
+  const context = compileContext(run.settings, await readGrids(db, run.settings));
   const rows: (string | number | null)[][] = [];
   for (const { id, name, rank } of chosen) {
     // Explaining first proves that the value recomputed here is the stored one.

@@ -10,6 +10,7 @@ import type { DrawnSpectrum } from '../reports/spectrum-chart.js';
 import type { LoadedStudy } from '../study/load.js';
 import { csvText } from './csv-text.js';
 import { readSpectrum } from './spectrum-reading.js';
+import type { SpectrumPlace } from './spectrum-reading.js';
 import { writeNamed } from './write-named.js';
 
 export interface SpectrumFiles {
@@ -35,7 +36,7 @@ export function drawnPeriods(
 
 /**
  * Writes the spectra `names` of a study: the table at `at`, or where no periods are asked for at those that draw the curve; the picture with a
- * dot at every period asked for. One spectrum alone is written as a table that a study can read back (table-file).
+ * dot at every period asked for. Grids are read at `place`. One spectrum alone is written as a table that a study can read back (table-file).
  * @returns the paths written. @throws UserError when a file cannot be written or there are too many spectra for a picture.
  */
 export async function writeSpectra(
@@ -43,13 +44,14 @@ export async function writeSpectra(
   names: readonly string[],
   at: readonly number[],
   { csv, svg }: SpectrumFiles,
+  place?: SpectrumPlace,
 ): Promise<readonly string[]> {
-  const plain = names.map((name) => readSpectrum(loaded, name, []));
+  const plain = names.map((name) => readSpectrum(loaded, name, [], place));
   const drawn = drawnPeriods(plain, at);
   const written: string[] = [];
   if (csv !== undefined) {
     const periods = at.length > 0 ? [...at].sort((a, b) => a - b) : drawn;
-    const columns = names.map((name) => readSpectrum(loaded, name, periods).ordinates.map(({ sa_g }) => sa_g));
+    const columns = names.map((name) => readSpectrum(loaded, name, periods, place).ordinates.map(({ sa_g }) => sa_g));
     const head = names.length === 1 ? ['sa_g'] : names.map((name) => `${name} sa_g`);
     const rows = periods.map((period_s, i) => [period_s, ...columns.map((column) => column[i] ?? null)]);
     written.push(await writeNamed(csv, csvText(['period_s', ...head], rows), '--csv'));
@@ -61,8 +63,8 @@ export async function writeSpectra(
       );
     const spectra = plain.map((sheet): DrawnSpectrum => {
       const { name, title, corners_s, plateau } = sheet;
-      const points = readSpectrum(loaded, name, drawn).ordinates;
-      return { name, about: title, points, plateau, corners_s, read: readSpectrum(loaded, name, at).ordinates };
+      const points = readSpectrum(loaded, name, drawn, place).ordinates;
+      return { name, about: title, points, plateau, corners_s, read: readSpectrum(loaded, name, at, place).ordinates };
     });
     written.push(await writeNamed(svg, await spectraSvg(spectra), '--svg'));
   }

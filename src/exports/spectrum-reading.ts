@@ -3,12 +3,17 @@ import { apply } from '../engineering/formula.js';
 import type { MethodRecord } from '../engineering/formula.js';
 import { SPECTRAL_DISPLACEMENT } from '../engineering/demand/records.js';
 import { segmentAt } from '../engineering/spectrum/compiled.js';
+import { siteSpectrum } from '../engineering/assess/site-spectrum.js';
+import { formatNumber } from '../engineering/format.js';
 import { compileSpectrum } from '../engineering/spectrum/definition.js';
+import type { SpectrumReading } from '../engineering/spectrum/definition.js';
+import { HAZARD_GRID } from '../engineering/spectrum/grid.js';
 import { flagWords } from '../engineering/spectrum/flags.js';
 import { cite } from '../engineering/source.js';
-import { UserError, showValue } from '../errors.js';
+import { Bug, UserError, showValue } from '../errors.js';
 import type { LoadedStudy } from '../study/load.js';
 import { nearest } from '../study/nearest.js';
+import type { SpectrumEntry } from '../study/spectrum-codes.js';
 
 export interface Ordinate {
   readonly period_s: number;
@@ -20,8 +25,16 @@ export interface Ordinate {
   readonly beyond: boolean;
 }
 
+/** A place, degrees. */
+export interface SpectrumPlace {
+  readonly lon: number;
+  readonly lat: number;
+}
+
 export interface SpectrumSheet {
   readonly name: string;
+  /** Where a grid was read; null for a spectrum that is the same everywhere. */
+  readonly place: SpectrumPlace | null;
   readonly code: string;
   readonly method: string;
   readonly title: string;
@@ -50,8 +63,8 @@ export function spectrumNames({ study }: LoadedStudy): readonly string[] {
 }
 
 /**
- * Spectrum `name` of a loaded study with its ordinates at `periods_s`.
- * @throws UserError for an unknown name or a negative period.
+ * Spectrum `name` of a loaded study with its ordinates at `periods_s`; of a hazard grid the one at `place`.
+ * @throws UserError for an unknown name, a negative period, a grid without a place or a place that it does not cover.
  * @example
  * const { ordinates } = readSpectrum(await loadStudy('study.yaml'), 'design-c', [0.2, 1]);
  */
@@ -59,6 +72,7 @@ export function readSpectrum(
   loaded: LoadedStudy,
   name: string,
   periods_s: readonly number[] = DEFAULT_PERIODS_S,
+  place?: SpectrumPlace,
 ): SpectrumSheet {
   const entry = Object.hasOwn(loaded.study.hazard.spectra, name) ? loaded.study.hazard.spectra[name] : undefined;
   if (entry === undefined) {
@@ -71,7 +85,8 @@ export function readSpectrum(
       },
     );
   }
-  const { record, inputs, compiled } = compileSpectrum(entry);
+  const isGrid = entry.code === HAZARD_GRID;
+  const { record, inputs, compiled } = isGrid ? readingAt(loaded, name, entry, place) : compileSpectrum(entry);
   const read = (period_s: number): number => apply(record as MethodRecord, { ...inputs, period_s });
   const ordinates = periods_s.map((period_s) => {
     if (!(period_s >= 0 && period_s < Infinity))
@@ -85,12 +100,13 @@ export function readSpectrum(
       beyond: period_s > compiled.valid_to_s,
     };
   });
-  const { code, ...stated } = entry;
+  const { code, grid: _grid, ...stated } = entry;
   const parameters = Object.fromEntries(
     Object.entries(stated).flatMap(([key, value]) => (value === undefined ? [] : [[key, value] as const])),
   );
   return {
     name,
+    place: isGrid && place !== undefined ? place : null,
     code,
     method: record.id,
     title: record.title,
@@ -106,7 +122,39 @@ export function readSpectrum(
   };
 }
 
-function readBy({ study }: LoadedStudy, name: string): readonly string[] {
+/** The table that a grid gives at a place. */
+function readingAt(
+  { study, grids, file }: LoadedStudy,
+  name: string,
+  entry: SpectrumEntry,
+  place: SpectrumPlace | undefined,
+): SpectrumReading {
+  const grid = grids.get(String(entry['grid']));
+  if (grid === undefined) throw new Bug(`the grid of ${name} has not been read`);
+  const [west, east] = [grid.lon[0], grid.lon.at(-1)].map((line) => formatNumber(line ?? NaN, 7));
+  const [south, north] = [grid.lat[0], grid.lat.at(-1)].map((line) => formatNumber(line ?? NaN, 7));
+  const extent = `longitude ${String(west)} to ${String(east)}°, latitude ${String(south)} to ${String(north)}°`;
+  if (place === undefined)
+    throw new UserError(
+      `${showValue(name)} is a hazard grid and differs from place to place (${extent}); say where: --lon and --lat in degrees`,
+      { file },
+    );
+  const source = {
+    name,
+    grid,
+    interpolation: entry['interpolation'] === 'log-log' ? 'log-log' : 'linear',
+    return_period_years: entry.return_period_years ?? null,
+    holdPlateau: study.hazard.hold_plateau,
+  } as const;
+  const found = siteSpectrum(source, place.lon, place.lat);
+  if (typeof found !== 'string') return found;
+  throw new UserError(
+    `longitude ${String(place.lon)}, latitude ${String(place.lat)} lies ${found}: it covers ${extent}, but for cells that lack a node`,
+  );
+}
+
+/** Titles of the levels that read a spectrum, with what leads there. */
+export function readBy({ study }: LoadedStudy, name: string): readonly string[] {
   return study.hazard.levels.flatMap((level) => {
     if ('spectrum' in level) return level.spectrum === name ? [level.title] : [];
     if (level.spectra === undefined)

@@ -10,7 +10,7 @@ import type { Report } from '../screening/assess-inventory.js';
 import { visitsOf } from '../screening/survey-outlook.js';
 import { planSurvey } from '../screening/survey.js';
 import type { SurveyPlan, SurveyStep } from '../screening/survey.js';
-import { loadStudy } from '../study/load.js';
+import { loadStudyAlone } from '../study/load.js';
 import { csvText } from './csv-text.js';
 import { writeNamed } from './write-named.js';
 import { prepareFolder, writeSet } from './write-set.js';
@@ -65,7 +65,7 @@ export async function surveyStudy(
   });
   const sheet = csv === undefined ? null : await writeNamed(csv, fieldSheet(plan), '--csv');
   if (!page) return { plan, csv: sheet, page: null };
-  const { study, folder } = await loadStudy(path);
+  const { study, folder } = await loadStudyAlone(path);
   const into = prepareFolder(output ?? resolve(folder, study.output));
   const name = `survey-${String(plan.run)}.html`;
   await writeSet(into, { [name]: renderSurvey(study.title, plan, readPageScript()) });

@@ -50,6 +50,7 @@ export function proposeStudy(path: string): ProposedStudy {
     `hazard:  ${MARK} the design spectra of the site, and who reads which`,
     '  spectra:',
     '    design: {code: asce7-22-two-period, sds_g: , sd1_g: , tl_s: , return_period_years: }',
+    '    # a grid of hazard instead: map: {code: hazard-grid, file: map.csv, unit: g, interpolation: log-log, return_period_years: }',
     '  levels:',
     '    - {title: design level, spectrum: design}',
     '',

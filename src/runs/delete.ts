@@ -27,7 +27,7 @@ export interface Deletion {
   readonly left: readonly number[];
 }
 
-const OF_RUN = ['result_assessed', 'result_ranked', 'run'] as const;
+const OF_RUN = ['result_assessed', 'result_ranked', 'run_grid', 'run'] as const;
 const OF_NUMBER = ['building_core', 'building_extra', 'fill'] as const;
 const OF_INVENTORY = ['year_pool', 'neighbour', 'row_account', 'finding', 'inventory'] as const;
 
@@ -65,6 +65,9 @@ export async function deleteRuns(db: Database, ids: readonly number[], when: Dat
       for (const table of OF_RUN) await db.run(`DELETE FROM ${table} WHERE run_id = ?`, [run]);
       await db.run('INSERT INTO run_deleted VALUES (?, ?)', [run, when.toISOString()]);
     }
+    // grids that no run reads any more
+    for (const table of ['hazard_ordinate', 'hazard_grid'])
+      await db.run(`DELETE FROM ${table} WHERE grid_number NOT IN (SELECT grid_number FROM run_grid)`);
     for (const { inventory } of deletion.inventories) {
       const number = await db.value('SELECT inventory_number FROM inventory WHERE inventory_id = ?', [inventory]);
       for (const table of OF_NUMBER) await db.run(`DELETE FROM ${table} WHERE inventory_number = ?`, [number]);

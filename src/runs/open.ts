@@ -11,7 +11,7 @@ import type { PeriodClass, PeriodSheet } from '../screening/period-sheet.js';
 import { pageDataOf } from '../screening/page-data.js';
 import { databasePath, openStudyDatabase } from '../screening/screen.js';
 import type { Database } from '../store/database.js';
-import { loadStudy } from '../study/load.js';
+import { loadStudyAlone } from '../study/load.js';
 import type { LoadedStudy } from '../study/load.js';
 import { latestRun, listRuns, runById, writeNote } from './history.js';
 import type { RunEntry } from './history.js';
@@ -35,7 +35,7 @@ export async function withStudyDatabase<T>(
   work: (db: Database, loaded: LoadedStudy) => Promise<T>,
   folders: readonly string[] = [],
 ): Promise<T> {
-  const loaded = await loadStudy(path);
+  const loaded = await loadStudyAlone(path);
   const file = databasePath(loaded);
   if (!existsSync(file)) throw new UserError('this study has no run yet; run `swaymark screen` first', { file });
   const db = await openStudyDatabase(loaded, true, folders);
@@ -51,7 +51,7 @@ export async function changeStudyDatabase<T>(
   path: string,
   work: (db: Database, loaded: LoadedStudy) => Promise<T>,
 ): Promise<T> {
-  const loaded = await loadStudy(path);
+  const loaded = await loadStudyAlone(path);
   const file = databasePath(loaded);
   if (!existsSync(file)) throw new UserError('this study has no run yet; run `swaymark screen` first', { file });
   const db = await openStudyDatabase(loaded);

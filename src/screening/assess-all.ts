@@ -34,13 +34,14 @@ const READ = 122_880;
 /** Parts of it handed to threads. */
 const PARTS = 4;
 
-/** Assesses `count` buildings and keeps the results as those of run `runId`, or keeps none where it is null. `onProgress` hears how many are done. */
+/** Assesses `count` buildings and keeps the results as those of run `runId`, or keeps none where it is null; `places`: they are told where they stand. `onProgress` hears how many are done. */
 export async function assessAll(
   db: Database,
   inventoryId: string,
   runId: number | null,
   count: number,
   assessor: Assessor,
+  places: boolean,
   onProgress?: (done: number) => void,
 ): Promise<Assessed> {
   const gathering = new Gathering(count);
@@ -49,7 +50,7 @@ export async function assessAll(
   let kept: Promise<void> = Promise.resolve();
   for (const range of indexRanges(count, READ)) {
     // packed whole, then cut: cutting columns of numbers and codes costs next to nothing
-    const input = packBlock(await readBuildings(db, inventoryId, range, { ids: false }));
+    const input = packBlock(await readBuildings(db, inventoryId, range, { ids: false, places }));
     for (const { from, part } of partsOf(input, range.from, Math.ceil(READ / PARTS))) {
       const result = assessor.assess(part);
       const before = kept;

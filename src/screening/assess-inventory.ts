@@ -38,7 +38,7 @@ export async function withAssessor<T>(count: number, work: (assessor: Assessor) 
  */
 export async function assessInventory(
   db: Database,
-  { study }: Pick<LoadedStudy, 'study'>,
+  { study, grids }: Pick<LoadedStudy, 'study' | 'grids'>,
   first: AssessSettings,
   { inventoryId, buildings: count }: Pick<TakenIn, 'inventoryId' | 'buildings'>,
   runId: number | null,
@@ -47,10 +47,10 @@ export async function assessInventory(
 ): Promise<AssessedInventory> {
   const pools = await readPools(db, inventoryId);
   report('hazard slope');
-  const found = await withSlopes(first, study.ranking.k === 'from-levels', db, inventoryId, pools, count);
-  assessor.begin(found.settings, pools);
+  const found = await withSlopes(first, grids, study.ranking.k === 'from-levels', db, inventoryId, pools, count);
+  assessor.begin(found.settings, pools, grids);
   report('assessing', 0);
-  const assessed = await assessAll(db, inventoryId, runId, count, assessor, (done) => {
+  const assessed = await assessAll(db, inventoryId, runId, count, assessor, grids.size > 0, (done) => {
     report('assessing', done / count);
   });
   if (assessed.id.length === 0) throw nothingRanked(assessed, count);
@@ -61,6 +61,10 @@ export async function assessInventory(
 
 /** What to do about a reason that keeps buildings out of the ranking. */
 const REMEDIES: readonly (readonly [RegExp, string])[] = [
+  [
+    /^(?:outside the hazard grid|no coordinates)/,
+    'map columns of lon and lat in degrees, or name a grid that covers them',
+  ],
   [/^system not known/, 'give their systems, or name in system_prior a table of chances that covers them'],
   [/height/, 'map a column of heights or of storeys'],
   [/people/, 'map a column of people or of floor areas, or rank by ratio or by demand'],

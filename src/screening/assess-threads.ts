@@ -8,18 +8,19 @@ import type { AssessSettings } from '../engineering/assess/settings.js';
 import type { YearPools } from '../engineering/building-columns.js';
 import { bandsOf } from '../engineering/priority/rank.js';
 import type { Bands } from '../engineering/priority/rank.js';
+import type { HazardGrids } from '../engineering/spectrum/grid.js';
 import { Bug } from '../errors.js';
 import { BlockAssessor } from './assess-block.js';
 import type { BlockResult } from './assess-block.js';
 import { mixturesOf } from './flat-mixtures.js';
 import type { FlatArrays } from './flat-mixtures.js';
-import { memoryOf, unpackBlock } from './thread-messages.js';
+import { memoryOf, sharedGrids, unpackBlock } from './thread-messages.js';
 import type { BandBasis, FromThread, PackedBlock, ToThread } from './thread-messages.js';
 
 export interface Assessor {
   /** Blocks worth handing over before the first comes back. */
   readonly threads: number;
-  readonly begin: (settings: AssessSettings, pools: YearPools) => void;
+  readonly begin: (settings: AssessSettings, pools: YearPools, grids: HazardGrids) => void;
   /** Takes the memory of the block over. */
   readonly assess: (block: PackedBlock) => Promise<BlockResult>;
   /** Chances and bands of the buildings with these mixtures. */
@@ -48,8 +49,8 @@ export function startAssessor(threads: number): Assessor {
   let here: BlockAssessor | null = null;
   return {
     threads: 1,
-    begin: (settings, pools) => {
-      here = new BlockAssessor(compileContext(settings), pools);
+    begin: (settings, pools, grids) => {
+      here = new BlockAssessor(compileContext(settings, grids), pools);
     },
     assess: (block) =>
       here === null
@@ -90,8 +91,9 @@ class Threads implements Assessor {
     });
   }
 
-  begin = (settings: AssessSettings, pools: YearPools): void => {
-    for (const worker of this.#workers) worker.postMessage({ kind: 'begin', settings, pools } satisfies ToThread);
+  begin = (settings: AssessSettings, pools: YearPools, grids: HazardGrids): void => {
+    const message = { kind: 'begin', settings, pools, grids: sharedGrids(grids) } satisfies ToThread;
+    for (const worker of this.#workers) worker.postMessage(message);
   };
 
   assess = (block: PackedBlock): Promise<BlockResult> =>

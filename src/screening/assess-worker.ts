@@ -30,7 +30,8 @@ function answer(message: Exclude<ToThread, { kind: 'begin' }>): FromThread {
 }
 
 port.on('message', (message: ToThread) => {
-  if (message.kind === 'begin') assessor = new BlockAssessor(compileContext(message.settings), message.pools);
+  if (message.kind === 'begin')
+    assessor = new BlockAssessor(compileContext(message.settings, message.grids), message.pools);
   else {
     const told = answer(message);
     port.postMessage(told, memoryOf(told));

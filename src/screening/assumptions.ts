@@ -3,6 +3,7 @@ import type { AssessSettings } from '../engineering/assess/settings.js';
 import { compileContext } from '../engineering/assess/context.js';
 import { standardNote, standardRead } from '../engineering/period/choose.js';
 import type { Assumption } from '../engineering/page-contract.js';
+import { HAZARD_GRID } from '../engineering/spectrum/grid.js';
 import { VS30_TABLES } from '../engineering/site/vs30.js';
 import { cite } from '../engineering/source.js';
 import { flagWords } from '../engineering/spectrum/flags.js';
@@ -198,6 +199,14 @@ function spectrumAssumptions(settings: AssessSettings): readonly Assumption[] {
       value: code,
       source: `${VS30_TABLES[code].source}, ${VS30_TABLES[code].verified === 'memory' ? 'from memory' : 'restated'}`,
     })),
+    ...Object.entries(settings.spectra)
+      .filter(([name, { code }]) => code === HAZARD_GRID && read.has(name))
+      .map(([name, entry]) => ({
+        id: `hazard-grid-${name}`,
+        statement: `Each building reads its own spectrum from the grid ${name}: bilinear in ln S_a between the four nodes around it, ${entry['interpolation'] === 'log-log' ? 'log-log' : 'linear'} between periods; one k for all of it, as for a zone`,
+        value: String(entry['file']),
+        source: `file of the study (${String(entry['read'])}); contents ${String(entry['grid'])}`,
+      })),
     ...Object.values(compileContext(settings).spectra)
       .filter(({ name }) => read.has(name))
       .flatMap(({ name, compiled, record }) =>

@@ -12,6 +12,7 @@ import { Trace } from '../engineering/trace.js';
 import { Bug, UserError, showValue } from '../errors.js';
 import type { Database } from '../store/database.js';
 import { quoteName } from '../store/sql.js';
+import { readGrids } from './kept-grids.js';
 import { readRun } from './page-data.js';
 import type { StoredRun } from './page-data.js';
 import { readBuildings, readPools } from './read-buildings.js';
@@ -36,12 +37,12 @@ export async function explainBuilding(db: Database, runId: number, id: string, d
   const run = await readRun(db, runId);
   const found = await findBuilding(db, run, id);
   const at = found.index;
-  const { columns } = await readBuildings(db, run.inventory_id, { from: at, to: at + 1 });
+  const { columns } = await readBuildings(db, run.inventory_id, { from: at, to: at + 1 }, { places: true });
   const building = buildingAt(columns, 0, await readPools(db, run.inventory_id));
   const trace = new Trace();
   const result =
     found.not_ranked === null
-      ? assess(building, compileContext(run.settings), trace)
+      ? assess(building, compileContext(run.settings, await readGrids(db, run.settings)), trace)
       : { id, reason: found.not_ranked };
   const names = RESULT_COLUMNS.map(({ name }) => quoteName(name)).join(', ');
   const [stored] = await db.rows(`SELECT ${names} FROM result WHERE run_id = ? AND building_index = ?`, [runId, at]);

@@ -9,8 +9,10 @@ import { assessInventory, withAssessor } from './assess-inventory.js';
 import type { Report } from './assess-inventory.js';
 import { assumptionsOf } from './assumptions.js';
 import { methodsFingerprint } from './fingerprints.js';
+import { gridSpreads } from './grid-spreads.js';
 import { keepRanked } from './keep-results.js';
 import { readPools } from './read-buildings.js';
+import { keepGrids } from './kept-grids.js';
 import { accountLines, attributeCounts, rankingFigures } from './summarise.js';
 import type { StoredSummary } from './summarise.js';
 import { surveyOutlook } from './survey-outlook.js';
@@ -52,6 +54,7 @@ export async function keepRun(
     runId,
     inventoryId,
     settings,
+    grids: loaded.grids,
     pools,
     count,
     listSize,
@@ -72,6 +75,7 @@ export async function keepRun(
     assumptions: assumptionsOf(settings, slopes),
     slopes,
     survey,
+    ...(loaded.grids.size === 0 ? {} : { grids: await gridSpreads(settings, loaded.grids, db, taken, assessed.index) }),
   };
   await db.run('INSERT INTO run VALUES (?, ?, ?, ?, ?, ?, ?, ?, ?, ?, ?, ?, ?, ?, ?, ?)', [
     runId,
@@ -91,6 +95,7 @@ export async function keepRun(
     study.ranking.rank_by,
     study.seed,
   ]);
+  await keepGrids(db, runId, settings, loaded.grids);
   await keepRanked(db, runId, count, ranked.columns);
   return { runId, taken, summary };
 }

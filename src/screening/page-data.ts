@@ -6,12 +6,15 @@ import type { Display } from '../engineering/format.js';
 import type { AssessSettings } from '../engineering/assess/settings.js';
 import type { PageData } from '../engineering/page-contract.js';
 import { RESULT_COLUMNS } from '../engineering/results.js';
+import { cropped } from '../engineering/spectrum/grid-carry.js';
 import { STRUCTURE_NUMBERS, STRUCTURE_WORDS } from '../engineering/structure-columns.js';
 import { UserError } from '../errors.js';
 import type { Database } from '../store/database.js';
 import { quoteName } from '../store/sql.js';
 import type { ColumnKind } from '../store/vectors.js';
 import { CAUTIONS } from './assumptions.js';
+import { gridRejects } from './grid-rejects.js';
+import { readGrids } from './kept-grids.js';
 import { STRUCTURE_SPEC, knowsStructure, readPools } from './read-buildings.js';
 import { findingCounts } from './summarise.js';
 import type { StoredSummary } from './summarise.js';
@@ -91,6 +94,8 @@ export async function pageDataOf(db: Database, runId: number, display: Display):
   const numbers = (name: string): (number | null)[] =>
     Array.from(read[name] as Float64Array, (value) => (Number.isNaN(value) ? null : value));
   const texts = (name: string): (string | null)[] => [...(read[name] as readonly (string | null)[])];
+  const grids = await readGrids(db, run.settings);
+  const place = { lon: read['lon'] as Float64Array, lat: read['lat'] as Float64Array };
   const { made, program, title, rank_by, inventory_id, study_fingerprint, methods_fingerprint } = run;
   return {
     summary: {
@@ -101,7 +106,7 @@ export async function pageDataOf(db: Database, runId: number, display: Display):
       program,
       rank_by,
       fingerprints: { study: study_fingerprint, inventory: inventory_id, methods: methods_fingerprint },
-      findings: (await findingCounts(db, inventory_id)).map((finding) => ({
+      findings: [...(await gridRejects(db, run)), ...(await findingCounts(db, inventory_id))].map((finding) => ({
         ...finding,
         example: textInDisplay(finding.example, display),
       })),
@@ -125,6 +130,7 @@ export async function pageDataOf(db: Database, runId: number, display: Display):
               words: pick(STRUCTURE_WORDS),
             } as unknown as BuildingColumns['structure'])
           : undefined,
+        place: grids.size > 0 ? { lon: Array.from(place.lon), lat: Array.from(place.lat) } : undefined,
       },
       pools: await readPools(db, inventory_id),
       name: texts('name'),
@@ -138,6 +144,7 @@ export async function pageDataOf(db: Database, runId: number, display: Display):
         RESULT_COLUMNS.map(({ name, kind }) => [name, kind === 'text' ? texts(`r_${name}`) : numbers(`r_${name}`)]),
       ),
     },
+    grids: Object.fromEntries([...grids].map(([name, grid]) => [name, cropped(grid, place.lon, place.lat)])),
     display,
   };
 }

@@ -65,6 +65,8 @@ export interface ReadOptions {
   readonly every?: number;
   /** Read the ids too; without them they are blank. */
   readonly ids?: boolean;
+  /** Read where they stand too. */
+  readonly places?: boolean;
 }
 
 /** The buildings of one range of indices, in their order. */
@@ -72,12 +74,16 @@ export async function readBuildings(
   db: Database,
   inventoryId: string,
   { from, to }: IndexRange,
-  { every = 1, ids = true }: ReadOptions = {},
+  { every = 1, ids = true, places = false }: ReadOptions = {},
 ): Promise<BuildingBlock> {
   const number = await db.value('SELECT inventory_number FROM inventory WHERE inventory_id = ?', [inventoryId]);
   if (typeof number !== 'number') throw new Bug(`inventory ${inventoryId} is not in the database`);
   const where = `WHERE inventory_number = ? AND building_index >= ? AND building_index < ? ${every > 1 ? `AND building_index % ${String(Math.trunc(every))} = 0` : ''}`;
-  const spec = ids ? { ...CORE_SPEC, id: 'text' as const } : CORE_SPEC;
+  const spec: Readonly<Record<string, ColumnKind>> = {
+    ...CORE_SPEC,
+    ...(ids ? { id: 'text' } : {}),
+    ...(places ? { lon: 'f64', lat: 'f64' } : {}),
+  };
   const query = `SELECT ${Object.keys(spec).map(quoteName).join(', ')} FROM building_core ${where}`;
   const params = [number, from, to];
   // They are stored in their order; sorting them again would cost as much as reading them.
@@ -103,6 +109,7 @@ export async function readBuildings(
             words: pick(STRUCTURE_WORDS),
           } as unknown as BuildingColumns['structure'])
         : undefined,
+      place: places ? { lon: arrays['lon'] as Numbers, lat: arrays['lat'] as Numbers } : undefined,
     },
     notRanked: arrays['not_ranked'] as Words,
     rows,

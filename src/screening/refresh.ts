@@ -1,5 +1,7 @@
 /** A run from the inventory of an earlier one with other parameters: demand is read again, the inventory's file is not. */
 import type { AssessSettings } from '../engineering/assess/settings.js';
+import { HAZARD_GRID } from '../engineering/spectrum/grid.js';
+import type { HazardGrids } from '../engineering/spectrum/grid.js';
 import { UserError } from '../errors.js';
 import { readTaken } from '../inventory/take-in.js';
 import type { Database } from '../store/database.js';
@@ -9,7 +11,9 @@ import { studyFromText } from '../study/load.js';
 import type { LoadedStudy } from '../study/load.js';
 import { dotted } from '../study/problems.js';
 import type { Study } from '../study/schema.js';
+import { withKeptGrids } from '../study/hazard-grids.js';
 import { keepRun } from './keep-run.js';
+import { readGrids } from './kept-grids.js';
 import type { ScreenOutcome } from './keep-run.js';
 import type { ScreenOptions } from './screen.js';
 import { settingsOf } from './settings.js';
@@ -22,6 +26,8 @@ export interface BaseRun {
   /** Its study as it was then. */
   readonly study: Study;
   readonly listSize: number;
+  /** The grids of hazard kept with it. */
+  readonly grids: () => Promise<HazardGrids>;
 }
 
 /** Run `runId` as the base of a refresh; `loaded` is the study whose folder holds the database. @throws UserError when its study cannot be read. */
@@ -31,10 +37,13 @@ export async function baseRun(db: Database, loaded: LoadedStudy, runId: number):
     [runId],
   );
   if (row === undefined) throw new UserError(`there is no run ${String(runId)}; swaymark runs lists them`);
+  const settings = JSON.parse(row.settings) as AssessSettings;
+  let grids: Promise<HazardGrids> | undefined;
   return {
     runId,
     inventoryId: row.inventory_id,
-    settings: JSON.parse(row.settings) as AssessSettings,
+    settings,
+    grids: () => (grids ??= readGrids(db, settings)),
     study: keptStudy(row.study_text, loaded, runId),
     listSize: row.list_size,
   };
@@ -71,10 +80,25 @@ export function refuseIntake(base: BaseRun, loaded: LoadedStudy): void {
   );
 }
 
-/** What the study's file says otherwise than it did for `base`, key by key, besides title and folder of reports. */
+/** What the study's file says otherwise than it did for `base`, key by key, besides title and folder of reports; and other contents of its grids. */
 export function parameterChanges(base: BaseRun, loaded: LoadedStudy): readonly StudyChange[] {
   const { study } = studyFromText(loaded.text, loaded.file);
-  return changesBetween(base.study, study).filter(({ path: [first] }) => first !== 'title' && first !== 'output');
+  const stated = changesBetween(base.study, study).filter(
+    ({ path: [first] }) => first !== 'title' && first !== 'output',
+  );
+  const contents = Object.entries(loaded.study.hazard.spectra).flatMap(([name, { code, grid }]): StudyChange[] => {
+    const before = base.settings.spectra[name];
+    // one that is not read here is taken as it was kept
+    return code !== HAZARD_GRID || grid === undefined || before?.code !== HAZARD_GRID || before['grid'] === grid
+      ? []
+      : [{ path: ['hazard', 'spectra', name, 'grid'], from: before['grid'], to: grid }];
+  });
+  return [...stated, ...contents];
+}
+
+/** `loaded` with the grids whose files are gone as they were kept with `base`. @throws UserError for one that is not. */
+export function gridsOn(base: BaseRun, loaded: LoadedStudy): Promise<LoadedStudy> {
+  return withKeptGrids(loaded, base.settings.spectra, base.grids);
 }
 
 /** Settings of `loaded` with the table of system chances of `base`, where both name the same: its file may be gone. */
@@ -84,16 +108,17 @@ export function settingsOn(base: BaseRun, loaded: LoadedStudy): Promise<AssessSe
 }
 
 /**
- * Ranks the inventory of `base` by the study `loaded` and keeps the run, as a whole screening with the same parameters would: equal to the last bit.
+ * Ranks the inventory of `base` by the study `stated` and keeps the run, as a whole screening with the same parameters would: equal to the last bit.
  * @throws UserError for a parameter that changes intake or cannot be used; then nothing is kept.
  */
 export async function refresh(
   db: Database,
   base: BaseRun,
-  loaded: LoadedStudy,
+  stated: LoadedStudy,
   options: ScreenOptions,
 ): Promise<ScreenOutcome> {
-  refuseIntake(base, loaded);
+  refuseIntake(base, stated);
+  const loaded = await gridsOn(base, stated);
   const first = await settingsOn(base, loaded);
   return db.transaction(async () => {
     const taken = await readTaken(db, base.inventoryId);

@@ -36,6 +36,7 @@ export type StoredSummary = Pick<
   | 'assumptions'
   | 'slopes'
   | 'survey'
+  | 'grids'
 >;
 
 export function accountLines(account: RowAccount): readonly AccountLine[] {

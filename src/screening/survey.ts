@@ -9,6 +9,7 @@ import { planCampaign } from '../engineering/priority/campaign.js';
 import { rankBasis } from '../engineering/priority/rank.js';
 import type { Edge, Unknown } from '../engineering/priority/survey-value.js';
 import { mostWorth, shareOf, worthOf } from '../engineering/priority/survey-value.js';
+import type { HazardGrids } from '../engineering/spectrum/grid.js';
 import { UserError } from '../errors.js';
 import { indexRanges } from '../store/chunks.js';
 import type { Database } from '../store/database.js';
@@ -16,6 +17,7 @@ import { assessAll } from './assess-all.js';
 import type { Assessed } from './assess-all.js';
 import type { Report } from './assess-inventory.js';
 import { withAssessor } from './assess-inventory.js';
+import { readGrids } from './kept-grids.js';
 import { readRun } from './page-data.js';
 import { readBuildings, readPools } from './read-buildings.js';
 
@@ -82,6 +84,8 @@ export interface SurveyBasis {
   readonly runId: number;
   readonly inventoryId: string;
   readonly settings: AssessSettings;
+  /** Grids of hazard that the settings name. */
+  readonly grids: HazardGrids;
   readonly pools: YearPools;
   /** Buildings of the inventory. */
   readonly count: number;
@@ -105,21 +109,22 @@ export async function planSurvey(
     );
   const { inventory_id: inventoryId, settings } = run;
   const pools = await readPools(db, inventoryId);
+  const grids = await readGrids(db, settings);
   report('assessing', 0);
   const assessed = await withAssessor(count, async (assessor) => {
-    assessor.begin(settings, pools);
-    return assessAll(db, inventoryId, null, count, assessor, (done) => {
+    assessor.begin(settings, pools, grids);
+    return assessAll(db, inventoryId, null, count, assessor, grids.size > 0, (done) => {
       report('assessing', done / count);
     });
   });
-  const basis = { runId, inventoryId, settings, pools, count, listSize, expectedWrong, assessed };
+  const basis = { runId, inventoryId, settings, grids, pools, count, listSize, expectedWrong, assessed };
   return planOn(db, basis, wish, report);
 }
 
 /** Plans a survey for buildings assessed already. */
 export async function planOn(
   db: Database,
-  { runId, inventoryId, settings, pools, count, listSize, expectedWrong, assessed }: SurveyBasis,
+  { runId, inventoryId, settings, grids, pools, count, listSize, expectedWrong, assessed }: SurveyBasis,
   { visits, limits, cost }: SurveyWish,
   report: Report = () => undefined,
 ): Promise<SurveyPlan> {
@@ -130,13 +135,13 @@ export async function planOn(
     unit: assessed.median[basis.order[Math.floor((basis.order.length - 1) / 2)]!]!,
   };
   const { chosen, worthVisiting } = mostPromising(assessed, edge);
-  const context = compileContext(settings);
+  const context = compileContext(settings, grids);
   const candidates: Candidate[] = [];
   const shares = new Map<number, ReadonlyMap<Unknown, number>>();
   for (const range of indexRanges(count, BLOCK)) {
     const wanted = chosen.filter((index) => index >= range.from && index < range.to);
     if (wanted.length === 0) continue;
-    const { columns } = await readBuildings(db, inventoryId, range);
+    const { columns } = await readBuildings(db, inventoryId, range, { places: grids.size > 0 });
     const read = buildingReader(columns, pools);
     for (const index of wanted) {
       const unknowns = unknownsOf(read(index - range.from), context);

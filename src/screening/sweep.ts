@@ -6,7 +6,7 @@ import type { LoadedStudy } from '../study/load.js';
 import { assessInventory, withAssessor } from './assess-inventory.js';
 import { listChange, ranksOfRun } from './list-changes.js';
 import type { ListChange } from './list-changes.js';
-import { refuseIntake, settingsOn } from './refresh.js';
+import { gridsOn, refuseIntake, settingsOn } from './refresh.js';
 import type { BaseRun } from './refresh.js';
 import type { ScreenProgress } from './screen.js';
 import { rankingFigures } from './summarise.js';
@@ -31,8 +31,9 @@ export async function sweep(
 ): Promise<readonly SweptValue[]> {
   // all of them before the first is ranked, which may take long
   const jobs: { readonly value: number; readonly loaded: LoadedStudy; readonly settings: AssessSettings }[] = [];
-  for (const { value, loaded } of studies) {
-    refuseIntake(base, loaded);
+  for (const { value, loaded: stated } of studies) {
+    refuseIntake(base, stated);
+    const loaded = await gridsOn(base, stated);
     jobs.push({ value, loaded, settings: await settingsOn(base, loaded) });
   }
   const taken = await readTaken(db, base.inventoryId);

@@ -2,6 +2,7 @@
 import type { AssessSettings } from '../engineering/assess/settings.js';
 import type { YearPools } from '../engineering/building-columns.js';
 import type { Bands, RankBasis } from '../engineering/priority/rank.js';
+import type { HazardGrid, HazardGrids } from '../engineering/spectrum/grid.js';
 import { Bug } from '../errors.js';
 import { coded, decoded } from './assess-block.js';
 import type { BlockInput, BlockResult, Coded } from './assess-block.js';
@@ -17,7 +18,12 @@ export type Packed =
 export type BandBasis = Pick<RankBasis, 'curve' | 'threshold'>;
 
 export type ToThread =
-  | { readonly kind: 'begin'; readonly settings: AssessSettings; readonly pools: YearPools }
+  | {
+      readonly kind: 'begin';
+      readonly settings: AssessSettings;
+      readonly pools: YearPools;
+      readonly grids: HazardGrids;
+    }
   | { readonly kind: 'block'; readonly task: number; readonly block: PackedBlock }
   | { readonly kind: 'bands'; readonly task: number; readonly mixtures: FlatArrays; readonly basis: BandBasis };
 
@@ -113,4 +119,15 @@ function unpacked(value: Packed, blank: Blank): unknown {
     case 'record':
       return Object.fromEntries(Object.entries(value.entries).map(([name, entry]) => [name, unpacked(entry, blank)]));
   }
+}
+
+/** Grids in memory that threads look at together: each would else get a copy of its own. */
+export function sharedGrids(grids: HazardGrids): HazardGrids {
+  const shared = (values: Float64Array): Float64Array => {
+    const copy = new Float64Array(new SharedArrayBuffer(values.byteLength));
+    copy.set(values);
+    return copy;
+  };
+  const share = (grid: HazardGrid): HazardGrid => ({ ...grid, sa_g: shared(grid.sa_g), ln_sa: shared(grid.ln_sa) });
+  return new Map([...grids].map(([fingerprint, grid]) => [fingerprint, share(grid)]));
 }

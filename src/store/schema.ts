@@ -110,6 +110,10 @@ export const MIGRATIONS: readonly Migration[] = [
       'ALTER TABLE building_extra ADD COLUMN "spectrum" VARCHAR',
       // The numbers of deleted runs are not given again.
       'CREATE TABLE run_deleted (run_id INTEGER NOT NULL, deleted VARCHAR NOT NULL)',
+      // Hazard on grids: each kept once by its fingerprint; `axes` holds periods and lines as JSON, places are counted line by line.
+      'CREATE TABLE hazard_grid (grid_number INTEGER PRIMARY KEY, grid_id VARCHAR NOT NULL, axes VARCHAR NOT NULL)',
+      'CREATE TABLE hazard_ordinate (grid_number INTEGER NOT NULL, place INTEGER NOT NULL, period INTEGER NOT NULL, sa_g DOUBLE NOT NULL)',
+      'CREATE TABLE run_grid (run_id INTEGER NOT NULL, grid_number INTEGER NOT NULL)',
     ],
   },
 ];

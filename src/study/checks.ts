@@ -3,6 +3,7 @@
  * problems of a file come at once; what the schema already refuses they leave alone.
  */
 import { VS30_TABLES } from '../engineering/site/vs30.js';
+import { HAZARD_GRID } from '../engineering/spectrum/grid.js';
 import { SPECTRUM_REGISTER } from '../engineering/spectrum/definition.js';
 import { showValue } from '../errors.js';
 import { suggest } from './nearest.js';
@@ -88,7 +89,12 @@ function checkLevels(study: unknown): Finding[] {
         message: `level ${first + 1} has the title ${showValue(title)} already; name them apart`,
       });
     } else titles.set(title, i);
-    return [...findings, ...checkColumns(level, columns, path), ...checkClasses(level, path)];
+    return [
+      ...findings,
+      ...checkColumns(level, columns, path),
+      ...checkClasses(level, path),
+      ...checkPlaces(level, spectra, columns, path),
+    ];
   });
 }
 
@@ -111,6 +117,19 @@ function checkColumns(level: unknown, columns: unknown, path: readonly Step[]): 
       : 'name it, or say otherwise:';
   const message = `inventory.columns names no ${read[0] ?? ''}, so no building would have a spectrum; ${remedy}`;
   return [{ path: [...path, 'by'], message }];
+}
+
+/** A level of grids alone needs to know where the buildings stand. */
+function checkPlaces(level: unknown, spectra: unknown, columns: unknown, path: readonly Step[]): Finding[] {
+  const names = named(level);
+  const isGrid = ([, name]: (typeof names)[number]): boolean =>
+    typeof name === 'string' && at(spectra, name, 'code') === HAZARD_GRID;
+  if (names.length === 0 || !names.every(isGrid) || !isMapping(columns)) return [];
+  const has = (column: string): boolean => at(columns, column) !== undefined;
+  if ((has('lon') && has('lat')) || has('footprint')) return [];
+  const message =
+    'inventory.columns names no lon and lat, so no building would have a place on the grid; name them, or a footprint';
+  return [{ path: [...path, ...(names[0]?.[0] ?? [])], message }];
 }
 
 /** Site classes that the code of a level by velocity does not have. */

@@ -3,10 +3,10 @@ import { UserError, showValue } from '../errors.js';
 import type { Place } from '../errors.js';
 import type { KeyPath } from './document.js';
 import { setAtPath, valueFromText } from './edit.js';
-import { studyFromText } from './load.js';
+import { studyFromText, withFiles } from './load.js';
+import type { GridReading } from './hazard-grids.js';
 import type { LoadedStudy } from './load.js';
 import { dotted } from './problems.js';
-import { withTableFiles } from './table-files.js';
 
 /** One parameter of a study and its value. */
 export interface Parameter {
@@ -60,11 +60,15 @@ function parted(text: string, given: string, form: string): { readonly path: str
 }
 
 /**
- * `loaded` with `parameters` put in one after the other and checked as a study file is; the tables of spectra it names are read again.
- * The file stays as it is.
+ * `loaded` with `parameters` put in one after the other and checked as a study file is; the tables of spectra it names are read again,
+ * and grids of another file. The study file stays as it is. `leaveMissing`: as for `withHazardGrids`.
  * @throws UserError with the texts of `loadStudy`, placed at the parameter as it was given.
  */
-export async function withParameters(loaded: LoadedStudy, parameters: readonly Parameter[]): Promise<LoadedStudy> {
+export async function withParameters(
+  loaded: LoadedStudy,
+  parameters: readonly Parameter[],
+  { leaveMissing = false }: Pick<GridReading, 'leaveMissing'> = {},
+): Promise<LoadedStudy> {
   if (parameters.length === 0) return loaded;
   let text = loaded.text;
   for (const { path, value, given = path } of parameters) text = at(given, () => setAtPath(text, path, value));
@@ -75,13 +79,13 @@ export async function withParameters(loaded: LoadedStudy, parameters: readonly P
   } catch (error) {
     throw moved(error, replace);
   }
-  const study = await withTableFiles(changed.study, loaded.folder);
+  const { study, grids } = await withFiles({ ...changed, folder: loaded.folder }, { known: loaded, leaveMissing });
   const placeOf = (path: KeyPath): Place => {
     const key = dotted(path);
     // what is no parameter's stands where the file has it, if the file has it
     return parameters.some((one) => concerns(one.path, key)) ? replace({ key }) : loaded.placeOf(path);
   };
-  return { ...changed, study, folder: loaded.folder, placeOf };
+  return { ...changed, study, grids, folder: loaded.folder, placeOf };
 }
 
 function concerns(path: string, key: string): boolean {

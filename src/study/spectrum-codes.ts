@@ -4,6 +4,7 @@ import { describeSpec } from '../engineering/formula.js';
 import type { InputSpec } from '../engineering/formula.js';
 import { parametersOf } from '../engineering/spectrum/code.js';
 import type { SpectrumCode } from '../engineering/spectrum/code.js';
+import { HAZARD_GRID } from '../engineering/spectrum/grid.js';
 import { compileSpectrum, SPECTRUM_REGISTER } from '../engineering/spectrum/definition.js';
 import type { SpectrumDefinition } from '../engineering/spectrum/definition.js';
 import { showValue } from '../errors.js';
@@ -58,13 +59,31 @@ const tableFile = strict({
   ...common,
 });
 
-const SPECTRA = [...SPECTRUM_REGISTER.map(schemaOf), tableFile] as unknown as [
+const hazardGrid = strict({
+  code: z.literal(HAZARD_GRID).describe('Hazard that varies over the map: each building reads its own spectrum.'),
+  file: text('the path of a file').describe(
+    'Grid of 5 % elastic ordinates, CSV or Parquet, relative to this file: one row a node with lon, lat and a column for each period, such as SA(0.2).',
+  ),
+  unit: word(SPECTRUM_UNITS)
+    .exactOptional()
+    .describe('Unit of the ordinates; left out, the headings of the file name it.'),
+  interpolation: word(['linear', 'log-log']).describe(
+    'Between the periods: linear, or straight in logarithms. Between the nodes it is bilinear in ln S_a.',
+  ),
+  ...common,
+});
+
+const SPECTRA = [...SPECTRUM_REGISTER.map(schemaOf), tableFile, hazardGrid] as unknown as [
   ReturnType<typeof schemaOf>,
   ...ReturnType<typeof schemaOf>[],
 ];
 
 /** Ids of the spectrum codes a study may name. */
-export const SPECTRUM_CODES: readonly string[] = [...SPECTRUM_REGISTER.map(({ code }) => code), TABLE_FILE];
+export const SPECTRUM_CODES: readonly string[] = [
+  ...SPECTRUM_REGISTER.map(({ code }) => code),
+  TABLE_FILE,
+  HAZARD_GRID,
+];
 
 const union = z.discriminatedUnion('code', SPECTRA, {
   error: (issue) => {
@@ -78,7 +97,8 @@ const union = z.discriminatedUnion('code', SPECTRA, {
 /** A code and its parameters, each in its range and all of them together such that the code has a spectrum for them. */
 export const SpectrumSchema = union.superRefine((entry, context) => {
   // checks.ts speaks of tables, place by place; a file of its own is read later; what a range refuses has been said
-  if (entry.code === 'table' || entry.code === TABLE_FILE || context.issues.length > 0) return;
+  if (entry.code === 'table' || entry.code === TABLE_FILE || entry.code === HAZARD_GRID) return;
+  if (context.issues.length > 0) return;
   try {
     compileSpectrum(entry);
   } catch (error) {

@@ -2,6 +2,7 @@
 import { BASE_SHEAR_CASES } from './base-shear-cases.js';
 import { CAPACITY_CASES } from './capacity-cases.js';
 import type { ReferenceCase } from './case.js';
+import { GRID_CASES } from './grid-cases.js';
 import { MEASURED_CASES } from './measured-cases.js';
 import { ANSWERED_CODE_CASES } from './period-cases-answers.js';
 import { CODE_PERIOD_CASES } from './period-cases-codes.js';
@@ -36,4 +37,5 @@ export const REFERENCE_CASES: readonly ReferenceCase[] = [
   ...BASE_SHEAR_CASES,
   ...CAPACITY_CASES,
   ...VIBRATION_CASES,
+  ...GRID_CASES,
 ];

@@ -8,6 +8,7 @@ import { openStudyDatabase, screen } from '../../src/screening/screen.js';
 import { packBlock, partsOf } from '../../src/screening/thread-messages.js';
 import { loadStudy } from '../../src/study/load.js';
 import { buildCommand } from '../support/cli.js';
+import { TWO_GRIDS, gridCopy, gridCsv, rising } from '../support/hazard-grid.js';
 import { MADE, demoCopy } from '../support/study-folder.js';
 
 type Built = typeof source;
@@ -21,8 +22,11 @@ beforeAll(async () => {
 }, 120_000);
 
 describe('startAssessor', () => {
-  it('gives the same bits in three threads as in this one', { timeout: 60_000 }, async () => {
-    const loaded = await loadStudy(demoCopy());
+  it.each([
+    ['spectra for all', () => demoCopy()],
+    ['grids', () => gridCopy(TWO_GRIDS, { 'h475.csv': gridCsv(rising(1)), 'h2475.csv': gridCsv(rising(1.7)) })],
+  ])('gives the same bits in three threads as in this one: %s', { timeout: 60_000 }, async (_, study) => {
+    const loaded = await loadStudy(study());
     const db = await openStudyDatabase(loaded);
     const here = source.startAssessor(1);
     const there = built.startAssessor(3);
@@ -30,9 +34,9 @@ describe('startAssessor', () => {
       const { runId, taken } = await screen(db, loaded, { made: MADE });
       const { settings } = await readRun(db, runId);
       const pools = await readPools(db, taken.inventoryId);
-      const all = await readBuildings(db, taken.inventoryId, { from: 0, to: taken.buildings });
+      const all = await readBuildings(db, taken.inventoryId, { from: 0, to: taken.buildings }, { places: true });
       const results = async (assessor: typeof here): Promise<readonly BlockResult[]> => {
-        assessor.begin(settings, pools);
+        assessor.begin(settings, pools, loaded.grids);
         return Promise.all([...partsOf(packBlock(all), 0, 50)].map(({ part }) => assessor.assess(part)));
       };
       const [one, many] = [await results(here), await results(there)];

@@ -2,7 +2,7 @@ import { mkdtemp, rm, writeFile } from 'node:fs/promises';
 import { tmpdir } from 'node:os';
 import { join } from 'node:path';
 import { afterAll, beforeAll, describe, expect, it } from 'vitest';
-import { ordinatesAt } from '../../src/engineering/spectrum/grid.js';
+import { ordinatesAt } from '../../src/engineering/spectrum/grid-read.js';
 import { UserError, formatError } from '../../src/errors.js';
 import { openDatabase } from '../../src/store/database.js';
 import { quoteText } from '../../src/store/sql.js';

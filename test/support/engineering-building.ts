@@ -44,6 +44,8 @@ const BLANK: Building = {
   mass_irregularity: null,
   site_class: 'C',
   hazard_zone: null,
+  lon: NaN,
+  lat: NaN,
   spectrum: null,
   design_base_shear_coefficient: NaN,
   design_level: null,

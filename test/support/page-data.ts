@@ -251,7 +251,13 @@ export function pageData({
     first_row: rows.map((row) => row['first_row'] as number),
     results: Object.fromEntries(RESULT_COLUMNS.map(({ name }) => [name, results.map((row) => row[name] ?? null)])),
   };
-  return { summary: summaryOf(rows, results, ranked.length, listSize), settings: SETTINGS, buildings, display };
+  return {
+    summary: summaryOf(rows, results, ranked.length, listSize),
+    settings: SETTINGS,
+    buildings,
+    grids: {},
+    display,
+  };
 }
 
 function summaryOf(rows: readonly Row[], results: readonly Row[], ranked: number, listSize: number): PageSummary {

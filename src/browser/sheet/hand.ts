@@ -3,6 +3,7 @@ import { assess, isRanked } from '../../engineering/assess/assess.js';
 import { compileContext } from '../../engineering/assess/context.js';
 import type { AssessContext } from '../../engineering/assess/context.js';
 import { buildingAt } from '../../engineering/building-columns.js';
+import { gridsOf } from '../../engineering/spectrum/grid-carry.js';
 import { handSteps } from '../../engineering/hand.js';
 import type { HandStep } from '../../engineering/hand.js';
 import { Trace } from '../../engineering/trace.js';
@@ -17,7 +18,7 @@ import type { Portfolio } from '../portfolio.js';
 export function handMaker(p: Portfolio): (i: number) => readonly HTMLElement[] {
   let context: AssessContext | null = null;
   return (i) => {
-    context ??= compileContext(p.page.settings);
+    context ??= compileContext(p.page.settings, gridsOf(p.page.grids));
     const trace = new Trace();
     const result = assess(buildingAt(p.page.buildings.inputs, i, p.page.buildings.pools), context, trace);
     const steps = handSteps(trace, p.page.display);

@@ -59,7 +59,7 @@ function lines(checked: CheckedStudy, file: string, columns: number, display: 's
       ? ['Nothing was found amiss.']
       : [styled('bold', 'Findings'), ...findingBlock(findings, columns, display)]),
     '',
-    ...[heightUnitSentence(checked), checked.not_rankable].flatMap((sentence) =>
+    ...[heightUnitSentence(checked), checked.not_rankable, checked.off_grid].flatMap((sentence) =>
       sentence === '' ? [] : [...wrap(clean(sentence), columns), ''],
     ),
     ...(rejected.over ? wrap(overLimit(rejected), columns) : []),

@@ -1,12 +1,14 @@
 import { formatNumber, formatQuantity, unitLabel } from '../../engineering/format.js';
 import { unitOfName } from '../../engineering/hand.js';
+import { HAZARD_GRID } from '../../engineering/spectrum/grid.js';
 import { convert, findUnit } from '../../engineering/units.js';
 import type { Unit } from '../../engineering/units.js';
-import { Bug, EXIT } from '../../errors.js';
+import { Bug, EXIT, UserError } from '../../errors.js';
 import { writeSpectra } from '../../exports/spectrum-files.js';
-import { DEFAULT_PERIODS_S, readSpectrum, spectrumNames } from '../../exports/spectrum-reading.js';
+import { DEFAULT_PERIODS_S, readBy, readSpectrum, spectrumNames } from '../../exports/spectrum-reading.js';
 import type { SpectrumSheet } from '../../exports/spectrum-reading.js';
 import { loadStudy } from '../../study/load.js';
+import type { LoadedStudy } from '../../study/load.js';
 import { findStudy } from '../find-study.js';
 import { printJson, printLines, terminalColumns } from '../output/print.js';
 import { markWords } from '../output/steps.js';
@@ -19,32 +21,62 @@ export interface SpectrumCommandOptions {
   readonly at?: readonly number[];
   readonly csv?: string;
   readonly svg?: string;
+  readonly lon?: number;
+  readonly lat?: number;
   readonly units: 'si' | 'us';
   readonly json?: true;
 }
 
 /** `swaymark spectrum`: the study's spectra, one of them with its ordinates, or several side by side; as files too. */
 export async function spectrum(names: readonly string[], options: SpectrumCommandOptions): Promise<number> {
+  const { at, csv, svg, units, json, lon, lat } = options;
+  if ((lon === undefined) !== (lat === undefined))
+    throw new UserError('a place takes both --lon and --lat, in degrees');
+  const place = lon === undefined || lat === undefined ? undefined : { lon, lat };
   const loaded = await loadStudy(findStudy(options.study));
-  const { at, csv, svg, units, json } = options;
   const asked = [...new Set(names)];
-  const listed = asked.length === 0 ? spectrumNames(loaded) : asked;
+  const all = spectrumNames(loaded);
+  // without a place the list names the grids and reads the others
+  const grids = asked.length > 0 || place !== undefined ? [] : all.filter((name) => isGrid(loaded, name));
+  const listed = asked.length === 0 ? all.filter((name) => !grids.includes(name)) : asked;
   const periods = at ?? (asked.length === 0 ? [] : DEFAULT_PERIODS_S);
-  const sheets = listed.map((name) => readSpectrum(loaded, name, periods));
-  const files = await writeSpectra(loaded, listed, at ?? [], { csv, svg });
+  const sheets = listed.map((name) => readSpectrum(loaded, name, periods, place));
+  const files = await writeSpectra(loaded, listed, at ?? [], { csv, svg }, place);
   const columns = terminalColumns();
   const [first] = sheets;
   if (json) printJson(asked.length === 1 ? first : sheets);
   else {
     const lines =
       asked.length === 0
-        ? listLines(sheets, periods, columns)
+        ? [
+            ...(sheets.length === 0 ? [] : listLines(sheets, periods, columns)),
+            ...(sheets.length > 0 && grids.length > 0 ? [''] : []),
+            ...gridLines(loaded, grids, columns),
+          ]
         : asked.length === 1 && first !== undefined
           ? sheetLines(first, units, columns)
           : besideLines(sheets, periods, columns);
     printLines([...lines, ...(files.length === 0 ? [] : ['']), ...files.map((file) => clean(`written: ${file}`))]);
   }
   return EXIT.clean;
+}
+
+function isGrid({ study }: LoadedStudy, name: string): boolean {
+  return study.hazard.spectra[name]?.code === HAZARD_GRID;
+}
+
+/** What there is to say of grids without a place. */
+function gridLines(loaded: LoadedStudy, names: readonly string[], columns: number): string[] {
+  const { study, grids } = loaded;
+  return names.flatMap((name) => {
+    const entry = study.hazard.spectra[name];
+    const grid = grids.get(String(entry?.['grid']));
+    if (entry === undefined || grid === undefined) return [];
+    const from = (lines: Float64Array): string =>
+      `${formatNumber(lines[0] ?? NaN, 7)} to ${formatNumber(lines.at(-1) ?? NaN, 7)}°`;
+    const words = `${name}: hazard grid ${String(entry['file'])}, ${String(entry['read'])}; longitude ${from(grid.lon)}, latitude ${from(grid.lat)}; read by: ${readBy(loaded, name).join('; ') || 'nobody'}; --lon and --lat read it at a place`;
+    return wrap(clean(words), columns, '', '  ');
+  });
 }
 
 /** Several spectra side by side: one column each, and the second over the first where there are two. */
@@ -64,7 +96,7 @@ function besideLines(sheets: readonly SpectrumSheet[], periods: readonly number[
   const beyond = sheets.some(({ ordinates }) => ordinates.some((ordinate) => ordinate.beyond));
   return [
     ...sheets.flatMap((sheet) => [
-      ...wrap(clean(`${sheet.name}: ${sheet.title}; ${plateauWords(sheet)}`), columns, '', '    '),
+      ...wrap(clean(`${placeName(sheet)}: ${sheet.title}; ${plateauWords(sheet)}`), columns, '', '    '),
       ...noteLines(sheet, columns),
     ]),
     '',
@@ -72,6 +104,10 @@ function besideLines(sheets: readonly SpectrumSheet[], periods: readonly number[
     ...table(head, rows, columns),
     ...(beyond ? ['* longer than the publication covers'] : []),
   ];
+}
+
+function placeName({ name, place }: SpectrumSheet): string {
+  return place === null ? name : `${name} at longitude ${String(place.lon)}°, latitude ${String(place.lat)}°`;
 }
 
 function noteLines({ flags }: SpectrumSheet, columns: number): string[] {
@@ -113,7 +149,7 @@ function parameterLines({ parameters }: SpectrumSheet, columns: number): string[
 }
 
 function sheetLines(sheet: SpectrumSheet, display: 'si' | 'us', columns: number): string[] {
-  const { name, title, source, verified, corners_s, valid_to_s, read_by, ordinates } = sheet;
+  const { title, source, verified, corners_s, valid_to_s, read_by, ordinates } = sheet;
   const small = unitCalled(display === 'us' ? 'in' : 'mm');
   const head = [
     { title: 'T (s)', right: true },
@@ -128,7 +164,7 @@ function sheetLines(sheet: SpectrumSheet, display: 'si' | 'us', columns: number)
     beyond ? `${clause}; beyond the publication` : clause,
   ]);
   return [
-    styled('bold', clean(name)),
+    styled('bold', clean(placeName(sheet))),
     ...wrap(`${title}, ${source} [${markWords(verified)}]`, columns),
     ...wrap(`read by: ${read_by.length === 0 ? 'nobody' : clean(read_by.join('; '))}`, columns, '', '  '),
     '',

@@ -4,6 +4,7 @@ import { formatNumber } from '../format.js';
 import { VS30_TABLES, siteClassFromVs30 } from '../site/vs30.js';
 import type { AssessContext, ContextSpectrum } from './context.js';
 import type { LevelSettings } from './settings.js';
+import { siteSpectrum } from './site-spectrum.js';
 
 export interface SpectrumChoice {
   readonly spectrum: ContextSpectrum;
@@ -40,9 +41,17 @@ export function chooseSpectrum(
   if (level === undefined) return 'no such level';
   if (level.by === null) {
     const name = level.spectra['all'] ?? '';
-    const spectrum = context.spectra[name];
-    if (spectrum === undefined) return `spectrum "${name}" is not defined`;
-    return { spectrum, because: 'one spectrum for all buildings', byDefault: false, classFlag: null };
+    const spectrum = spectrumCalled(name, building, context);
+    if (typeof spectrum === 'string') return spectrum;
+    return {
+      spectrum,
+      because:
+        spectrum.site === null
+          ? 'one spectrum for all buildings'
+          : 'one grid for all buildings, read at the place of each',
+      byDefault: false,
+      classFlag: null,
+    };
   }
   const called = CALLED[level.by];
   const { key, because, flag } =
@@ -55,14 +64,25 @@ export function chooseSpectrum(
       ? `${called} not known and the study names no spectrum for that`
       : `no spectrum ${level.by === 'spectrum' ? `"${key}" in the study` : `for ${called} "${key}"`}`;
   }
-  const spectrum = context.spectra[name];
-  if (spectrum === undefined) return `spectrum "${name}" is not defined`;
+  const spectrum = spectrumCalled(name, building, context);
+  if (typeof spectrum === 'string') return spectrum;
   if (named !== undefined) {
     const plain = level.by === 'spectrum' ? `the inventory names "${String(key)}"` : `${called} ${String(key)}`;
     return { spectrum, because: because ?? plain, byDefault: false, classFlag: flag };
   }
   const reason = key === null ? `${called} not known` : `${because ?? `${called} "${key}"`} not named`;
   return { spectrum, because: `${reason}: the study's default`, byDefault: true, classFlag: flag };
+}
+
+/** The spectrum `name` of the study, of a grid that of the building's place; a reason where there is none. */
+function spectrumCalled(
+  name: string,
+  { lon, lat }: Building,
+  { spectra, grids }: AssessContext,
+): ContextSpectrum | string {
+  const source = grids.size > 0 ? grids.get(name) : undefined;
+  if (source !== undefined) return siteSpectrum(source, lon, lat);
+  return spectra[name] ?? `spectrum "${name}" is not defined`;
 }
 
 /** The site class of the velocity of the upper 30 m; where there is none, the class on record. */

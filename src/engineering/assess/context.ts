@@ -9,6 +9,9 @@ import { SYSTEMS } from '../building.js';
 import type { CompiledSpectrum } from '../spectrum/compiled.js';
 import { ordinate } from '../spectrum/compiled.js';
 import { compileSpectrum } from '../spectrum/definition.js';
+import { HAZARD_GRID } from '../spectrum/grid.js';
+import type { HazardGrid, HazardGrids } from '../spectrum/grid.js';
+import type { SiteTable, TableInterpolation } from '../spectrum/grid-table.js';
 import { eras } from './code-history.js';
 import type { Era } from './code-history.js';
 import { newCaseMemory } from './case-memory.js';
@@ -25,6 +28,20 @@ export interface ContextSpectrum {
   readonly return_period_years: number | null;
   /** Periods below this are read at it (0 when the ramp is used). */
   readonly hold_from_s: number;
+  /** End of the plateau (corner period T_c), and the longest period the publication covers. */
+  readonly corner_s: number;
+  readonly valid_to_s: number;
+  /** Where the spectrum is one building's alone, read from a grid at its place: its table. */
+  readonly site: SiteTable | null;
+}
+
+/** A spectrum of the study that is a grid. */
+export interface GridSource {
+  readonly name: string;
+  readonly grid: HazardGrid;
+  readonly interpolation: TableInterpolation;
+  readonly return_period_years: number | null;
+  readonly holdPlateau: boolean;
 }
 
 /** A formula that the study may read. */
@@ -36,7 +53,10 @@ export interface Candidate {
 
 export interface AssessContext {
   readonly settings: AssessSettings;
+  /** Spectra that are the same wherever a building stands, by name. */
   readonly spectra: Readonly<Record<string, ContextSpectrum>>;
+  /** Those that are a grid, by name: `siteSpectrum` makes one of them a building's. */
+  readonly grids: ReadonlyMap<string, GridSource>;
   /** Formulas of the period by system, best first: the study's own choice, then the standard's. */
   readonly formulas: Readonly<Record<System, readonly Candidate[]>>;
   readonly eras: readonly Era[];
@@ -57,16 +77,25 @@ function slopeOf(settings: AssessSettings, spectrum: string): number {
   return typeof settings.slope === 'number' ? settings.slope : (settings.slope[spectrum] ?? 2.5);
 }
 
-/** Compiles spectra, picks formulas and lays out eras. @throws RangeError for spectrum parameters out of range. */
-export function compileContext(settings: AssessSettings): AssessContext {
+const NO_GRIDS: HazardGrids = new Map();
+
+/**
+ * Compiles spectra, picks formulas and lays out eras; `grids` are those the settings name by their fingerprints.
+ * @throws RangeError for spectrum parameters out of range.
+ */
+export function compileContext(settings: AssessSettings, grids: HazardGrids = NO_GRIDS): AssessContext {
   const spectra: Record<string, ContextSpectrum> = {};
   for (const [name, { return_period_years, ...definition }] of Object.entries(settings.spectra)) {
+    if (definition.code === HAZARD_GRID) continue;
     const reading = compileSpectrum(definition);
     spectra[name] = {
       name,
       ...reading,
       return_period_years: return_period_years ?? null,
       hold_from_s: settings.holdPlateau ? reading.compiled.plateau_from_s : 0,
+      corner_s: reading.compiled.plateau_to_s,
+      valid_to_s: reading.compiled.valid_to_s,
+      site: null,
     };
   }
   const formulas = Object.fromEntries(SYSTEMS.map((system) => [system, candidatesOf(system, settings)])) as Record<
@@ -76,9 +105,10 @@ export function compileContext(settings: AssessSettings): AssessContext {
   return {
     settings,
     spectra,
+    grids: gridSources(settings, grids),
     formulas,
     eras: settings.codeHistory === null ? [] : eras(settings.codeHistory),
-    zoneTerms: zoneTerms(settings, spectra),
+    zoneTerms: zoneTerms(settings),
     capacityFactor: 1,
     priorClasses: priorClasses(settings.systemPrior),
     caseMemory: newCaseMemory(),
@@ -100,16 +130,29 @@ function candidatesOf(system: System, { period }: AssessSettings): readonly Cand
   });
 }
 
-function zoneTerms(
-  settings: AssessSettings,
-  spectra: Readonly<Record<string, ContextSpectrum>>,
-): Readonly<Record<string, number>> {
+function gridSources(settings: AssessSettings, grids: HazardGrids): ReadonlyMap<string, GridSource> {
+  const sources = new Map<string, GridSource>();
+  for (const [name, entry] of Object.entries(settings.spectra)) {
+    const grid = entry.code === HAZARD_GRID ? grids.get(String(entry['grid'])) : undefined;
+    if (grid === undefined) continue;
+    sources.set(name, {
+      name,
+      grid,
+      interpolation: entry['interpolation'] === 'log-log' ? 'log-log' : 'linear',
+      return_period_years: entry.return_period_years ?? null,
+      holdPlateau: settings.holdPlateau,
+    });
+  }
+  return sources;
+}
+
+function zoneTerms(settings: AssessSettings): Readonly<Record<string, number>> {
   const level = settings.levels[0];
   if (level === undefined) return {};
   const names = [...new Set([...Object.values(level.spectra), ...(level.otherwise === null ? [] : [level.otherwise])])];
   const raw = names.map((name) => {
     const k = slopeOf(settings, name);
-    const years = spectra[name]?.return_period_years ?? null;
+    const years = settings.spectra[name]?.return_period_years ?? null;
     return {
       name,
       k,
@@ -129,5 +172,6 @@ export function slopeFor(context: AssessContext, name: string): number {
 
 /** S_a at a period, the plateau held below its start. */
 export function readAt(spectrum: ContextSpectrum, period_s: number): number {
-  return ordinate(spectrum.compiled, Math.max(period_s, spectrum.hold_from_s));
+  const read_s = Math.max(period_s, spectrum.hold_from_s);
+  return spectrum.site === null ? ordinate(spectrum.compiled, read_s) : spectrum.site.read(read_s);
 }

@@ -26,7 +26,8 @@ export function curvesOf(
   spectrum: ContextSpectrum,
   { curveMemory }: AssessContext,
 ): Map<number, Curve> | null {
-  if (model.formula === null || !isByHeight(model)) return null;
+  // what a building reads from a grid is its own
+  if (spectrum.site !== null || model.formula === null || !isByHeight(model)) return null;
   const byFormula = entryOf(curveMemory.curves, spectrum, newMap<AnyRecord, Map<number, Curve>>);
   return entryOf(byFormula, model.formula, newMap<number, Curve>);
 }
@@ -58,7 +59,7 @@ export function reducedAt(curve: Curve, ductility: number, spectrum: ContextSpec
     for (let j = 0; j < stretch.length; j += 1) stretch[j] = exp(sigma * PERIOD_NODES.z[j]!);
     scratch.stretchSigma = sigma;
   }
-  const corner = spectrum.compiled.plateau_to_s;
+  const corner = spectrum.corner_s;
   const lnAt = (t: number): number => {
     const sa_g = readAt(spectrum, t);
     return ln(ductility === 1 ? sa_g : sa_g / reductionFactor(ductility, t, corner));

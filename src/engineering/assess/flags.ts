@@ -60,8 +60,7 @@ export function flagsOf(
   if (classFlag !== null) flags.push(classFlag);
   if (disagreement >= 2) flags.push('estimates-differ');
   const { longitudinal, transverse } = leading.directions;
-  if (Math.max(longitudinal.period_s, transverse.period_s) > spectrum.compiled.valid_to_s)
-    flags.push('beyond-spectrum');
+  if (Math.max(longitudinal.period_s, transverse.period_s) > spectrum.valid_to_s) flags.push('beyond-spectrum');
   const limit = leading.formula?.limits.find(({ input }) => input === 'height_m');
   if (limit?.to !== undefined && building.height_m.value > limit.to) flags.push('beyond-formula');
   if (leading.stiffnessAssumed) flags.push('stiffness-assumed');

@@ -8,7 +8,6 @@ import { ln } from '../numeric/elementary.js';
 import { LOG_SCORE } from '../priority/records.js';
 import { siteCloseness } from '../site/closeness.js';
 import { cite } from '../source.js';
-import { ordinate } from '../spectrum/compiled.js';
 import { flagWords } from '../spectrum/flags.js';
 import type { Trace } from '../trace.js';
 import { directionsAlike, drawingsLevels, importanceOf } from './terms.js';
@@ -17,10 +16,12 @@ import type { Case, Cases } from './case-memory.js';
 import type { EditionId } from './code-history.js';
 import { chooseSpectrum } from './choose-spectrum.js';
 import type { SpectrumChoice } from './choose-spectrum.js';
+import { readAt } from './context.js';
 import type { AssessContext, ContextSpectrum } from './context.js';
 import { peopleOf } from './people.js';
 import { NO_PERIOD, alikeAcross, periodAt, periodModel } from './period.js';
 import type { Evidence, PeriodBasis, PeriodModel } from './period.js';
+import { SiteSpectrum, traceOrdinates, tracePlace } from './site-spectrum.js';
 
 export interface LeadingDirection {
   readonly period_s: number;
@@ -141,6 +142,7 @@ function openTrace(building: Building, which: Case, choice: SpectrumChoice, trac
   );
   const { name, compiled, record } = choice.spectrum;
   trace.choice({ question: 'Spectrum', taken: name, because: choice.because, others: [] });
+  if (choice.spectrum instanceof SiteSpectrum) tracePlace(choice.spectrum, trace);
   for (const words of flagWords(compiled)) {
     const because = `of the parameters the study gives it, by ${cite(record.source)}`;
     trace.choice({ question: `About ${name}`, taken: words, because, others: [] });
@@ -165,8 +167,11 @@ function readOrdinate(spectrum: ContextSpectrum, period_s: number, trace?: Trace
       others: [],
     });
   }
-  const sa_g = ordinate(spectrum.compiled, read_s);
-  trace?.formula(spectrum.record, { ...spectrum.inputs, period_s: read_s }, sa_g);
+  const sa_g = readAt(spectrum, period_s);
+  if (trace !== undefined) {
+    if (spectrum instanceof SiteSpectrum) traceOrdinates(spectrum, read_s, trace);
+    trace.formula(spectrum.record, { ...spectrum.inputs, period_s: read_s }, sa_g);
+  }
   return sa_g;
 }
 
@@ -190,11 +195,7 @@ function capacityOf(
     trace === undefined && level === null
       ? keptCapacity(building, which, direction, height_m, context)
       : capacityAtHeight(building, which, direction, height_m, level, context, trace);
-  const reduction = apply(
-    REDUCTION,
-    { ductility: at.ductility, period_s, corner_period_s: spectrum.compiled.plateau_to_s },
-    trace,
-  );
+  const reduction = apply(REDUCTION, { ductility: at.ductility, period_s, corner_period_s: spectrum.corner_s }, trace);
   return (
     apply(
       ELASTIC_EQUIVALENT,
@@ -252,7 +253,5 @@ export function scoreOf(
 function secondLevel(building: Building, period_s: number, context: AssessContext): number {
   if (context.settings.levels.length < 2) return NaN;
   const choice = chooseSpectrum(context, building, 1);
-  return typeof choice === 'string'
-    ? NaN
-    : ordinate(choice.spectrum.compiled, Math.max(period_s, choice.spectrum.hold_from_s));
+  return typeof choice === 'string' ? NaN : readAt(choice.spectrum, period_s);
 }

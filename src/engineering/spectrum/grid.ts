@@ -3,7 +3,7 @@
  * them bilinearly in ln S_a from the four nodes around it. Places without a node leave holes: a site in a cell that lacks a corner
  * is outside, as is one beyond the grid. Sizes: n nodes, P periods.
  */
-import { exp, ln } from '../numeric/elementary.js';
+import { ln } from '../numeric/elementary.js';
 
 export interface GridNodes {
   /** Increasing, s; P of them. */
@@ -25,6 +25,12 @@ export interface HazardGrid {
   readonly sa_g: Float64Array;
   readonly ln_sa: Float64Array;
 }
+
+/** As a study names such a spectrum; it is read with the study, and its ordinates are those of each building's place. */
+export const HAZARD_GRID = 'hazard-grid';
+
+/** Grids by their fingerprints. */
+export type HazardGrids = ReadonlyMap<string, HazardGrid>;
 
 /** Nodes that form no regular grid; `node` is the place of the one that shows it, null where none does. */
 export class GridError extends RangeError {
@@ -163,79 +169,4 @@ function hasCell(nodeAt: Int32Array, width: number): boolean {
       return true;
   }
   return false;
-}
-
-/** The interval of `lines` that holds `value`, -1 outside or for NaN; the last line belongs to the last interval. */
-function intervalOf(lines: Float64Array, value: number): number {
-  const last = lines.length - 1;
-  if (!(value >= lines[0]! && value <= lines[last]!)) return -1;
-  let i = Math.min(Math.floor(((value - lines[0]!) / (lines[last]! - lines[0]!)) * last), last - 1);
-  // Lines lie a little off their even places.
-  while (i > 0 && lines[i]! > value) i -= 1;
-  while (i < last - 1 && lines[i + 1]! <= value) i += 1;
-  return i;
-}
-
-/**
- * Writes the P ordinates (g) at a site to `out` from `at` on; false, and nothing written, where the site is outside or its
- * coordinates are NaN. Longitudes may differ from the grid's by a full turn.
- */
-export function readGrid(grid: HazardGrid, lon: number, lat: number, out: Float64Array, at = 0): boolean {
-  const { periods_s, nodeAt, sa_g, ln_sa } = grid;
-  const width = grid.lon.length;
-  const x = lon < grid.lon[0]! ? lon + 360 : lon > grid.lon[width - 1]! ? lon - 360 : lon;
-  const i = intervalOf(grid.lon, x);
-  const j = intervalOf(grid.lat, lat);
-  if (i < 0 || j < 0) return false;
-  const fx = (x - grid.lon[i]!) / (grid.lon[i + 1]! - grid.lon[i]!);
-  const fy = (lat - grid.lat[j]!) / (grid.lat[j + 1]! - grid.lat[j]!);
-  const a = nodeAt[j * width + i]!;
-  const b = nodeAt[j * width + i + 1]!;
-  const c = nodeAt[(j + 1) * width + i]!;
-  const d = nodeAt[(j + 1) * width + i + 1]!;
-  const wa = (1 - fx) * (1 - fy);
-  const wb = fx * (1 - fy);
-  const wc = (1 - fx) * fy;
-  const wd = fx * fy;
-  // A corner without weight may be missing: the edge of a hole belongs to the cell beside it.
-  if ((wa > 0 && a < 0) || (wb > 0 && b < 0) || (wc > 0 && c < 0) || (wd > 0 && d < 0)) return false;
-  const periods = periods_s.length;
-  const alone = wa === 1 ? a : wb === 1 ? b : wc === 1 ? c : wd === 1 ? d : -1;
-  for (let p = 0; p < periods; p += 1) {
-    if (alone >= 0) {
-      out[at + p] = sa_g[alone * periods + p]!;
-      continue;
-    }
-    let sum = 0;
-    if (wa > 0) sum += wa * ln_sa[a * periods + p]!;
-    if (wb > 0) sum += wb * ln_sa[b * periods + p]!;
-    if (wc > 0) sum += wc * ln_sa[c * periods + p]!;
-    if (wd > 0) sum += wd * ln_sa[d * periods + p]!;
-    out[at + p] = exp(sum);
-  }
-  return true;
-}
-
-/** The P ordinates (g) at a site; null outside. */
-export function ordinatesAt(grid: HazardGrid, lon: number, lat: number): Float64Array | null {
-  const out = new Float64Array(grid.periods_s.length);
-  return readGrid(grid, lon, lat, out) ? out : null;
-}
-
-export interface SiteOrdinates {
-  /** g; P for each site, site after site; NaN for sites outside. */
-  readonly sa_g: Float64Array;
-  /** 1 for sites that the grid covers. */
-  readonly inside: Uint8Array;
-}
-
-/** The ordinates of many sites at once; `lon` and `lat` of the same length, degrees, NaN where not known. */
-export function ordinatesOfSites(grid: HazardGrid, lon: Float64Array, lat: Float64Array): SiteOrdinates {
-  const periods = grid.periods_s.length;
-  const sa_g = new Float64Array(lon.length * periods).fill(NaN);
-  const inside = new Uint8Array(lon.length);
-  for (let site = 0; site < lon.length; site += 1) {
-    if (readGrid(grid, lon[site]!, lat[site]!, sa_g, site * periods)) inside[site] = 1;
-  }
-  return { sa_g, inside };
 }

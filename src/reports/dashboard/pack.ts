@@ -52,6 +52,7 @@ export function packPage(data: PageData): unknown {
                 numbers: Object.fromEntries(STRUCTURE_NUMBERS.map((name) => [name, packColumn(structure.numbers[name])])),
                 words: Object.fromEntries(STRUCTURE_WORDS.map((name) => [name, packColumn(structure.words[name])])),
               },
+        place: inputs.place === undefined ? undefined : { lon: packColumn(inputs.place.lon), lat: packColumn(inputs.place.lat) },
       },
       name: packColumn(buildings.name),
       group: packColumn(buildings.group),

@@ -2,9 +2,15 @@ import fc from 'fast-check';
 import { describe, expect, it } from 'vitest';
 import { ordinate } from '../../../src/engineering/spectrum/compiled.js';
 import { compileSpectrum } from '../../../src/engineering/spectrum/definition.js';
-import { GridError, layGrid, ordinatesAt, ordinatesOfSites } from '../../../src/engineering/spectrum/grid.js';
+import { GridError, layGrid } from '../../../src/engineering/spectrum/grid.js';
+import { ordinatesAt, ordinatesOfSites } from '../../../src/engineering/spectrum/grid-read.js';
 import type { GridNodes } from '../../../src/engineering/spectrum/grid.js';
-import { definitionOfTable, plateauOfTable, readTable } from '../../../src/engineering/spectrum/grid-table.js';
+import {
+  SiteTable,
+  definitionOfTable,
+  plateauOfTable,
+  readTable,
+} from '../../../src/engineering/spectrum/grid-table.js';
 
 const PERIODS = [0.2, 0.5, 1, 2];
 
@@ -237,6 +243,9 @@ describe('readTable', () => {
           const { compiled } = compileSpectrum(definitionOfTable(periods_s, sa_g, 6, which));
           for (const t of [period, 0.05, 0.5, 5])
             expect(readTable(periods_s, sa_g, 6, which, t)).toBe(ordinate(compiled, t));
+          const site = new SiteTable(periods_s, sa_g.subarray(6), which);
+          // the second time from what the first has worked out
+          for (const t of [period, period, 0.05, 0.5, 5, 8, 0.01]) expect(site.read(t)).toBe(ordinate(compiled, t));
           expect(plateauOfTable(periods_s, sa_g, 6)).toEqual([compiled.plateau_from_s, compiled.plateau_to_s]);
         },
       ),

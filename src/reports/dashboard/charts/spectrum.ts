@@ -1,41 +1,93 @@
 /** The design spectrum with the portfolio's governing periods hanging under the same axis. */
+import { compileContext } from '../../../engineering/assess/context.js';
+import { siteSpectrum } from '../../../engineering/assess/site-spectrum.js';
 import { formatCount, formatNumber, formatQuantity, formatShare } from '../../../engineering/format.js';
-import type { PageData } from '../../../engineering/page-contract.js';
+import type { GridSpread, PageData } from '../../../engineering/page-contract.js';
 import { ordinate } from '../../../engineering/spectrum/compiled.js';
 import type { CompiledSpectrum } from '../../../engineering/spectrum/compiled.js';
 import { compileSpectrum } from '../../../engineering/spectrum/definition.js';
+import { HAZARD_GRID } from '../../../engineering/spectrum/grid.js';
+import { gridsOf } from '../../../engineering/spectrum/grid-carry.js';
 import { governingPeriod, listLength, middle, rankedShown, textAt } from '../reading.js';
 import { columnsOf } from './chart.js';
 import type { Chart } from './chart.js';
 import { roundSteps } from './ticks.js';
 
+type LayerSpec = Extract<Chart['spec'], { layer: unknown }>['layer'][number];
+
 interface NamedCurve {
   readonly name: string;
   readonly level: string;
+  /** Of a grid the median of its buildings. */
   readonly compiled: CompiledSpectrum;
+  readonly band: Band | null;
+}
+
+/** The 5th and 95th percentile of the ordinates of a grid over the buildings that read it. */
+interface Band {
+  readonly buildings: number;
+  readonly low: CompiledSpectrum;
+  readonly high: CompiledSpectrum;
 }
 
 /** Every spectrum a level reads, the ranking level first. */
-function curvesOf({ settings }: PageData): readonly NamedCurve[] {
+function curvesOf({ settings, summary }: PageData): readonly NamedCurve[] {
   return settings.levels.slice(0, 2).flatMap((level) => {
     const names = [...new Set([...Object.values(level.spectra), ...(level.otherwise === null ? [] : [level.otherwise])])];
-    return names.flatMap((name) => {
+    return names.flatMap((name): NamedCurve[] => {
       const named = settings.spectra[name];
       if (named === undefined) return [];
       const { return_period_years, ...definition } = named;
       const years = return_period_years === undefined ? '' : `, ${formatCount(return_period_years)} years`;
-      return [{ name, level: `${level.title}${years}`, compiled: compileSpectrum(definition).compiled }];
+      const curve = { name, level: `${level.title}${years}` };
+      if (definition.code !== HAZARD_GRID) return [{ ...curve, compiled: compileSpectrum(definition).compiled, band: null }];
+      const spread = summary.grids?.find(({ spectrum }) => spectrum === name);
+      if (spread === undefined) return [];
+      const table = (ordinates_g: readonly number[]): CompiledSpectrum =>
+        compileSpectrum({ code: 'table', periods_s: spread.periods_s, ordinates_g, interpolation: definition['interpolation'] }).compiled;
+      return [{ ...curve, compiled: table(spread.median_g), band: bandOf(spread, table) }];
     });
   });
 }
 
-const seriesName = ({ name, level }: NamedCurve): string => `${name} (${level})`;
+function bandOf({ buildings, low_g, high_g }: GridSpread, table: (ordinates_g: readonly number[]) => CompiledSpectrum): Band {
+  return { buildings, low: table(low_g), high: table(high_g) };
+}
 
-function sample(curve: NamedCurve, to_s: number) {
-  const { compiled } = curve;
+const seriesName = ({ name, level, band }: NamedCurve): string => `${name}${band === null ? '' : ', median'} (${level})`;
+
+/** End of the plateau of the spectrum that building `i` reads; NaN where there is none. */
+function cornersOf(data: PageData): (i: number) => number {
+  const { spectra, grids } = compileContext(data.settings, gridsOf(data.grids));
+  const { place } = data.buildings.inputs;
+  return (i) => {
+    const name = textAt(data, 'spectrum', i);
+    const source = grids.get(name);
+    if (source === undefined) return spectra[name]?.corner_s ?? NaN;
+    const found = siteSpectrum(source, place?.lon[i] ?? NaN, place?.lat[i] ?? NaN);
+    return typeof found === 'string' ? NaN : found.corner_s;
+  };
+}
+
+function samplePeriods({ compiled }: NamedCurve, to_s: number): readonly number[] {
   const corners = compiled.segments.flatMap(({ from_s }) => [from_s - 1e-6, from_s]);
   const periods = [...Array.from({ length: 161 }, (_, i) => (i * to_s) / 160), ...corners].filter((t) => t >= 0 && t <= to_s);
-  return [...new Set(periods)].sort((a, b) => a - b).map((period_s) => ({ series: seriesName(curve), period_s, sa_g: ordinate(compiled, period_s) }));
+  return [...new Set(periods)].sort((a, b) => a - b);
+}
+
+function sample(curve: NamedCurve, to_s: number) {
+  return samplePeriods(curve, to_s).map((period_s) => ({ series: seriesName(curve), period_s, sa_g: ordinate(curve.compiled, period_s) }));
+}
+
+function sampleBand(curve: NamedCurve, to_s: number) {
+  const { band } = curve;
+  if (band === null) return [];
+  return samplePeriods(curve, to_s).map((period_s) => ({
+    series: seriesName(curve),
+    period_s,
+    low_g: ordinate(band.low, period_s),
+    high_g: ordinate(band.high, period_s),
+  }));
 }
 
 /** Share of the plot's height under the axis that the strip of buildings takes. */
@@ -51,7 +103,9 @@ export function spectrumChart(data: PageData): Chart {
   const width_s = to_s > 4 ? 0.1 : 0.05;
   const curves = curvesOf(data);
   const points = curves.flatMap((curve) => sample(curve, to_s));
-  const most_g = points.reduce((most, { sa_g }) => Math.max(most, sa_g), 0.1);
+  const bands = curves.flatMap((curve) => sampleBand(curve, to_s));
+  const top_g = points.reduce((most, { sa_g }) => Math.max(most, sa_g), 0.1);
+  const most_g = bands.reduce((most, { high_g }) => Math.max(most, high_g), top_g);
   const bins = Array.from({ length: Math.ceil(to_s / width_s - 1e-9) }, (_, b) => {
     const inside = (i: number): boolean => Math.min(Math.floor((periods[i] ?? NaN) / width_s), Math.ceil(to_s / width_s) - 1) === b;
     const members = Array.from({ length: shown }, (_unused, i) => i).filter(inside);
@@ -71,20 +125,23 @@ export function spectrumChart(data: PageData): Chart {
   return {
     id: 'spectrum',
     title: 'Where the buildings’ periods meet the design spectrum',
-    sentence: `${sentence(data, curves, periods, listed)} The bars hanging under the axis count buildings by governing period, ${step} each; the stronger colour, and each tick on the axis, is a listed building.`,
+    sentence: `${sentence(data, periods, listed)} The bars hanging under the axis count buildings by governing period, ${step} each; the stronger colour, and each tick on the axis, is a listed building.${bandSentence(curves)}`,
     table: {
       caption: `Buildings by governing period, in steps of ${step}, with the spectra at the middle of each step`,
-      head: ['Period (s)', 'Buildings', 'In the list', ...curves.map(({ name }) => `S_a, ${name} (g)`)],
+      head: ['Period (s)', 'Buildings', 'In the list', ...curves.flatMap(({ name, band }) => (band === null ? [`S_a, ${name} (g)`] : [`S_a, ${name}, median (g)`, `${name}, 5 to 95 % (g)`]))],
       rows: bins
         .filter(({ count }) => count > 0)
         .map((bin) => [
           `${bin.from_s.toFixed(2)} to ${bin.to_s.toFixed(2)}`,
           formatCount(bin.count),
           formatCount(bin.inList),
-          ...curves.map(({ compiled }) => formatNumber(ordinate(compiled, (bin.from_s + bin.to_s) / 2), 3)),
+          ...curves.flatMap(({ compiled, band }) => {
+            const at = (spectrum: CompiledSpectrum): string => formatNumber(ordinate(spectrum, (bin.from_s + bin.to_s) / 2), 3);
+            return band === null ? [at(compiled)] : [at(compiled), `${at(band.low)} to ${at(band.high)}`];
+          }),
         ]),
     },
-    data: { curves: columnsOf(points), bars: columnsOf(bars), rug: columnsOf(rug), note: columnsOf([{ text: note, period_s: to_s, sa_g: -STRIP * most_g }]) },
+    data: { ...(bands.length === 0 ? {} : { bands: columnsOf(bands) }), curves: columnsOf(points), bars: columnsOf(bars), rug: columnsOf(rug), note: columnsOf([{ text: note, period_s: to_s, sa_g: -STRIP * most_g }]) },
     renderer: 'svg',
     spec: spec(to_s, most_g, curves),
   };
@@ -105,6 +162,7 @@ function spec(to_s: number, most_g: number, curves: readonly NamedCurve[]): Char
     width: 'container',
     height: 380,
     layer: [
+      ...bandLayer(curves, period, acceleration),
       {
         data: { name: 'bars' },
         mark: { type: 'rect', color: 'var(--mark-faint)' },
@@ -153,13 +211,40 @@ function spec(to_s: number, most_g: number, curves: readonly NamedCurve[]): Char
   };
 }
 
+/** The bands of the grids, under all else. */
+function bandLayer(curves: readonly NamedCurve[], period: object, acceleration: object): LayerSpec[] {
+  if (curves.every(({ band }) => band === null)) return [];
+  return [
+    {
+      data: { name: 'bands' },
+      mark: { type: 'area', color: 'var(--mark-faint)', opacity: 0.7 },
+      encoding: {
+        x: { ...period, field: 'period_s' },
+        y: { ...acceleration, field: 'low_g' },
+        y2: { field: 'high_g' },
+        detail: { field: 'series', type: 'nominal' as const },
+      },
+    },
+  ];
+}
+
+/** What is drawn of a spectrum that differs from building to building. */
+function bandSentence(curves: readonly NamedCurve[]): string {
+  const grids = curves.flatMap(({ name, band }) => (band === null ? [] : [{ name, band }]));
+  const [first] = grids;
+  if (first === undefined) return '';
+  const names = grids.map(({ name }) => name).join(' and ');
+  const read = grids.length === 1 ? `The spectrum ${names} is read from a grid` : `The spectra ${names} are read from grids`;
+  return ` ${read} at each building’s own place: drawn are the median of the ordinates of ${formatCount(first.band.buildings)} buildings, period by period, and as a band where the middle 90 % of them lie (5 to 95 %).`;
+}
+
 const DASHES: readonly number[][] = [[1, 0], [7, 3], [2, 3], [10, 3, 2, 3], [4, 2], [1, 2]];
 
-function sentence(data: PageData, curves: readonly NamedCurve[], periods: readonly number[], listed: number): string {
+function sentence(data: PageData, periods: readonly number[], listed: number): string {
   if (periods.length === 0) return 'No building could be ranked, so only the spectra are drawn.';
-  const corner = new Map(curves.map(({ name, compiled }) => [name, compiled.plateau_to_s]));
+  const cornerAt = cornersOf(data);
   const onPlateau = (count: number): number =>
-    periods.slice(0, count).filter((period_s, i) => period_s <= (corner.get(textAt(data, 'spectrum', i)) ?? NaN)).length;
+    periods.slice(0, count).filter((period_s, i) => period_s <= cornerAt(i)).length;
   const s = (value: number): string => formatQuantity(value, 's', data.display);
   return (
     `Governing periods run from ${s(Math.min(...periods))} to ${s(Math.max(...periods))}, half of them below ${s(middle(periods))}. ` +
