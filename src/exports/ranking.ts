@@ -4,6 +4,7 @@ import { pipeline } from 'node:stream/promises';
 import type { Display } from '../engineering/format.js';
 import { shownUnit } from '../engineering/format.js';
 import { RESULT_COLUMNS } from '../engineering/results.js';
+import type { ResultColumn } from '../engineering/results.js';
 import { findUnit } from '../engineering/units.js';
 import { UserError } from '../errors.js';
 import type { Database } from '../store/database.js';
@@ -75,34 +76,20 @@ function csvColumns(display: Display): string[] {
   ];
 }
 
-function parquetColumns(): string[] {
-  const results = RESULT_COLUMNS.map(({ name }) => name).filter((name) => name !== 'rank');
-  return ['rank', 'id', 'name', 'group', ...results, ...TAKEN.map(({ name }) => name)].map(quoteName);
-}
-
-/** Holds the sorted tables in memory, in sight of every connection: a temporary table is its own connection's alone. */
-const SHELF = 'export_shelf';
-
 /** Rows from which on the CSV is written in two parts at once: the engine writes one file with one thread. */
 const WORTH_PARTS = 50_000;
 
-interface RankedTable {
-  readonly name: string;
-  readonly rows: number;
-}
-
-/** The table that holds run `runId` in rank order, made when missing: a kept run never changes. */
-async function rankedTable(db: Database, runId: number): Promise<RankedTable> {
+/** The select of run `runId` in rank order, past the views, whose other columns cost as much again. The index is in the order of ids. */
+async function rankedRows(db: Database, runId: number): Promise<string> {
   const run = String(Math.trunc(runId));
   const inventory = await db.value(
     'SELECT inventory_number FROM run JOIN inventory USING (inventory_id) WHERE run_id = ?',
     [runId],
   );
   if (typeof inventory !== 'number') throw new UserError(`there is no run ${run}; \`swaymark runs\` lists them`);
-  const name = tableName(runId);
-  const results = RESULT_COLUMNS.map(
-    (column) => `${RANKED_COLUMNS.includes(column) ? 'k' : 'a'}.${quoteName(column.name)}`,
-  );
+  const result = (column: ResultColumn): string =>
+    `${RANKED_COLUMNS.includes(column) ? 'k' : 'a'}.${quoteName(column.name)}`;
+  const results = RESULT_COLUMNS.filter(({ name }) => name !== 'rank').map(result);
   const taken = TAKEN.map((column) => {
     const filled = FILLED_ATTRIBUTES.find((attribute) => column.name === `${attribute}_origin`);
     return filled === undefined ? `c.${quoteName(column.name)}` : `${filled}_of.origin AS ${quoteName(column.name)}`;
@@ -111,46 +98,36 @@ async function rankedTable(db: Database, runId: number): Promise<RankedTable> {
     (attribute) =>
       `JOIN fill ${attribute}_of ON ${attribute}_of.inventory_number = ${String(inventory)} AND ${attribute}_of.fill = c.${attribute}_fill`,
   );
-  // Writable whatever the study's database is opened for; its own memory only.
-  await db.run(`ATTACH IF NOT EXISTS ':memory:' AS ${SHELF} (READ_WRITE)`);
-  // Sorted once for all files, and past the views, whose other columns cost as much again. The index is in the order of ids.
-  await db.run(`CREATE TABLE IF NOT EXISTS ${name} AS
-    SELECT ${[...results, 'c.id', 'c.name', 'c."group"', ...taken].join(', ')} FROM result_assessed a
+  return `SELECT ${['k."rank"', 'c.id', 'c.name', 'c."group"', ...results, ...taken].join(', ')} FROM result_assessed a
     JOIN result_ranked k ON k.run_id = ${run} AND k.building_index = a.building_index
     JOIN building_core c ON c.inventory_number = ${String(inventory)} AND c.building_index = a.building_index ${fills.join(' ')}
-    WHERE a.run_id = ${run} ORDER BY k."rank" NULLS LAST, a.building_index`);
-  return { name, rows: Number(await db.value(`SELECT count(*) FROM ${name}`)) };
+    WHERE a.run_id = ${run} ORDER BY k."rank" NULLS LAST, a.building_index`;
 }
 
-function tableName(runId: number): string {
-  return `${SHELF}.main.ranking_${String(Math.trunc(runId))}`;
-}
-
-/** Lays out run `runId` for the writers, so that they may run beside each other; `endRanking` clears it away. */
-export async function prepareRanking(db: Database, runId: number): Promise<void> {
-  await rankedTable(db, runId);
-}
-
-/** Frees what the writers of run `runId` share. */
-export async function endRanking(db: Database, runId: number): Promise<void> {
-  const attached = await db.value(`SELECT count(*) FROM duckdb_databases() WHERE database_name = ?`, [SHELF]);
-  if (attached === 1) await db.run(`DROP TABLE IF EXISTS ${tableName(runId)}`);
+/** Writes run `runId` to `path` as Parquet: every building in rank order in SI units, numbers in full. The folder must be open to `db`. */
+export async function writeRankingParquet(db: Database, runId: number, path: string): Promise<void> {
+  await db.run(
+    `COPY (${await rankedRows(db, runId)}) TO ${quoteText(path)} (FORMAT parquet, COMPRESSION zstd, COMPRESSION_LEVEL 1, PRESERVE_ORDER true)`,
+  );
 }
 
 /**
- * Writes run `runId` to `path` as CSV for spreadsheets: UTF-8 with byte order mark, CRLF, formulas made harmless. The folder must be
- * open to `db`. From `worthParts` rows on two connections write half each, and the second half is put behind the first.
+ * Writes the ranking in the file `ranking`, of `writeRankingParquet`, to `path` as CSV for spreadsheets: UTF-8 with byte order mark, CRLF,
+ * formulas made harmless. Both folders must be open to `db`. The file has the rows joined and sorted: reading them back costs a tenth of
+ * doing it again, or of a table beside it in memory. From `worthParts` rows on two connections write half each, and the second half is
+ * put behind the first.
  */
 export async function writeRankingCsv(
   db: Database,
-  runId: number,
+  ranking: string,
   path: string,
   display: Display = 'si',
   worthParts = WORTH_PARTS,
 ): Promise<void> {
-  const { name, rows } = await rankedTable(db, runId);
+  const from = `read_parquet(${quoteText(ranking)})`;
+  const rows = Number(await db.value(`SELECT count(*) FROM ${from}`));
   const copy = (to: string, where: string, options: string): string =>
-    `COPY (SELECT ${csvColumns(display).join(', ')} FROM ${name} ${where}) TO ${quoteText(to)} ${options}`;
+    `COPY (SELECT ${csvColumns(display).join(', ')} FROM ${from} ${where}) TO ${quoteText(to)} ${options}`;
   if (rows < worthParts) {
     await db.run(copy(path, '', CSV_OPTIONS));
     return;
@@ -166,12 +143,4 @@ export async function writeRankingCsv(
   } finally {
     rmSync(rest, { force: true });
   }
-}
-
-/** Writes run `runId` to `path` as Parquet: the same rows and columns in SI units, numbers in full. The folder must be open to `db`. */
-export async function writeRankingParquet(db: Database, runId: number, path: string): Promise<void> {
-  const { name } = await rankedTable(db, runId);
-  await db.run(
-    `COPY (SELECT ${parquetColumns().join(', ')} FROM ${name}) TO ${quoteText(path)} (FORMAT parquet, COMPRESSION zstd, COMPRESSION_LEVEL 1, PRESERVE_ORDER true)`,
-  );
 }

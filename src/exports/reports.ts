@@ -8,7 +8,7 @@ import { renderSummary } from '../reports/summary.js';
 import { gridRejectsSql } from '../screening/grid-rejects.js';
 import { pageDataOf, readRun } from '../screening/page-data.js';
 import type { Database } from '../store/database.js';
-import { endRanking, prepareRanking, writeRankingCsv, writeRankingParquet } from './ranking.js';
+import { writeRankingCsv, writeRankingParquet } from './ranking.js';
 import { writeRejectsCsv } from './rejects.js';
 import { writeSet } from './write-set.js';
 import type { FileSource } from './write-set.js';
@@ -33,39 +33,31 @@ export async function writeReports(
   folder: string,
   display: Display = 'si',
 ): Promise<Written> {
-  try {
-    // the table of the ranking is laid out while the page is drawn
-    const ranking = db.beside((other) => prepareRanking(other, runId));
-    ranking.catch(() => undefined);
-    const data = await pageDataOf(db, runId, display);
-    const { inventory } = data.summary.fingerprints;
-    const rejects = gridRejectsSql(await readRun(db, runId));
-    const sources: Readonly<Record<(typeof REPORT_FILES)[number], FileSource>> = {
-      'dashboard.html': async (path) => {
-        await ranking;
-        await writersUnderWay();
-        await writeFile(path, renderDashboard(data, readPageScript()));
-      },
-      'summary.md': renderSummary(data),
-      'ranking.csv': async (path) => {
-        await ranking;
-        await db.beside((other) => writeRankingCsv(other, runId, path, display));
-      },
-      'ranking.parquet': async (path) => {
-        await ranking;
-        await db.beside((other) => writeRankingParquet(other, runId, path));
-      },
-      'rejects.csv': (path) => db.beside((other) => writeRejectsCsv(other, inventory, path, rejects)),
-    };
-    return { files: await writeSet(folder, sources), data };
-  } finally {
-    await endRanking(db, runId);
-  }
-}
-
-/** Gives the writers of the ranking time to hand their statements over, before drawing the page keeps this thread busy. */
-function writersUnderWay(): Promise<void> {
-  return new Promise((resolve) => {
-    setTimeout(resolve, 50);
+  const data = pageDataOf(db, runId, display);
+  data.catch(() => undefined);
+  let lay!: (path: Promise<string>) => void;
+  const ranking = new Promise<string>((resolve) => {
+    lay = resolve;
   });
+  const sources: Readonly<Record<(typeof REPORT_FILES)[number], FileSource>> = {
+    // drawn while the ranking is joined and sorted, which needs nothing of this thread
+    'dashboard.html': async (path) => writeFile(path, renderDashboard(await data, readPageScript())),
+    'summary.md': async (path) => writeFile(path, renderSummary(await data)),
+    'ranking.csv': async (path) => {
+      const from = await ranking;
+      await db.beside((other) => writeRankingCsv(other, from, path, display));
+    },
+    'ranking.parquet': async (path) => {
+      const written = db.beside((other) => writeRankingParquet(other, runId, path));
+      lay(written.then(() => path));
+      await written;
+    },
+    'rejects.csv': async (path) => {
+      const { inventory } = (await data).summary.fingerprints;
+      const rejects = gridRejectsSql(await readRun(db, runId));
+      await db.beside((other) => writeRejectsCsv(other, inventory, path, rejects));
+    },
+  };
+  const files = await writeSet(folder, sources);
+  return { files, data: await data };
 }

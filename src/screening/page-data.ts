@@ -10,6 +10,7 @@ import { cropped } from '../engineering/spectrum/grid-carry.js';
 import { STRUCTURE_NUMBERS, STRUCTURE_WORDS } from '../engineering/structure-columns.js';
 import { UserError } from '../errors.js';
 import type { Database } from '../store/database.js';
+import { RANKED_COLUMNS } from '../store/schema.js';
 import { quoteName } from '../store/sql.js';
 import type { ColumnKind } from '../store/vectors.js';
 import { CAUTIONS } from './assumptions.js';
@@ -64,15 +65,16 @@ export async function pageDataOf(db: Database, runId: number, display: Display):
   const structured = await knowsStructure(db, run.inventory_id);
   if (structured) Object.assign(spec, STRUCTURE_SPEC);
   const resultSpec: Record<string, ColumnKind> = {};
-  const results = RESULT_COLUMNS.map(({ name, kind }) => {
+  const results = RESULT_COLUMNS.map((column) => {
+    const { name, kind } = column;
     resultSpec[`r_${name}`] = KIND[kind] === 'i32' ? 'f64' : KIND[kind]!;
-    return `r.${quoteName(name)} AS ${quoteName(`r_${name}`)}`;
+    return `${RANKED_COLUMNS.includes(column) ? 'k' : 'a'}.${quoteName(name)} AS ${quoteName(`r_${name}`)}`;
   });
   const buildings = Object.keys(spec).map((name) => `b.${quoteName(name)}`);
-  // The places first: joining and sorting a million rows of all columns to show some thousands takes seconds.
+  // The places first, and past the view of results: joining and sorting a million rows of all columns to show some thousands takes seconds.
   await db.run(
     `CREATE OR REPLACE TEMP TABLE page_place AS SELECT building_index, row_number() OVER (ORDER BY "rank" NULLS LAST, building_index) AS place
-     FROM (SELECT building_index, "rank" FROM result WHERE run_id = ? ORDER BY "rank" NULLS LAST, building_index LIMIT ${String(SHOWN_AT_MOST)})`,
+     FROM (SELECT building_index, "rank" FROM result_ranked WHERE run_id = ? ORDER BY "rank" NULLS LAST, building_index LIMIT ${String(SHOWN_AT_MOST)})`,
     [runId],
   );
   const ofBuildings = await db.columns(
@@ -81,7 +83,8 @@ export async function pageDataOf(db: Database, runId: number, display: Display):
     [run.inventory_id],
   );
   const ofResults = await db.columns(
-    `SELECT ${results.join(', ')} FROM result r JOIN page_place p USING (building_index) WHERE r.run_id = ? ORDER BY p.place`,
+    `SELECT ${results.join(', ')} FROM result_assessed a JOIN page_place p ON p.building_index = a.building_index
+     JOIN result_ranked k ON k.run_id = a.run_id AND k.building_index = p.building_index WHERE a.run_id = ? ORDER BY p.place`,
     resultSpec,
     [runId],
   );
@@ -111,7 +114,7 @@ export async function pageDataOf(db: Database, runId: number, display: Display):
         example: textInDisplay(finding.example, display),
       })),
       not_ranked: await db.rows<{ reason: string; count: number }>(
-        'SELECT not_ranked AS reason, count(*) AS count FROM result WHERE run_id = ? AND not_ranked IS NOT NULL GROUP BY 1 ORDER BY 2 DESC, 1',
+        'SELECT not_ranked AS reason, count(*) AS count FROM result_assessed WHERE run_id = ? AND not_ranked IS NOT NULL GROUP BY 1 ORDER BY 2 DESC, 1',
         [runId],
       ),
       cautions: CAUTIONS,

@@ -25,10 +25,10 @@ beforeAll(async () => {
   const loaded = await loadStudy(at('study.yaml'));
   db = await openStudyDatabase(loaded);
   inventoryId = (await screen(db, loaded, { made: new Date(0) })).taken.inventoryId;
-  await writeRankingCsv(db, 1, at('si.csv'));
-  await writeRankingCsv(db, 1, at('us.csv'), 'us');
-  await writeRankingCsv(db, 1, at('parts.csv'), 'si', 1);
   await writeRankingParquet(db, 1, at('ranking.parquet'));
+  await writeRankingCsv(db, at('ranking.parquet'), at('si.csv'));
+  await writeRankingCsv(db, at('ranking.parquet'), at('us.csv'), 'us');
+  await writeRankingCsv(db, at('ranking.parquet'), at('parts.csv'), 'si', 1);
   await writeRejectsCsv(db, inventoryId, at('rejects.csv'));
 });
 afterAll(() => {
@@ -85,6 +85,18 @@ describe('writeRankingParquet', () => {
     );
     expect(differing).toBe(0);
     expect(await db.value(`SELECT count(*) FROM read_parquet('${at('ranking.parquet')}')`)).toBe(6);
+  });
+
+  it('holds one run of several, and each building once', async () => {
+    const loaded = await loadStudy(at('study.yaml'));
+    const { runId } = await screen(db, loaded, { made: new Date(1) });
+    expect(runId).toBe(2);
+    for (const run of [1, 2]) {
+      await writeRankingParquet(db, run, at('again.parquet'));
+      await writeRankingCsv(db, at('again.parquet'), at('again.csv'));
+      expect(readFileSync(at('again.csv')).equals(readFileSync(at('si.csv')))).toBe(true);
+    }
+    await expect(writeRankingParquet(db, 3, at('none.parquet'))).rejects.toThrow('there is no run 3');
   });
 });
 

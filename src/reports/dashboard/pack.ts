@@ -15,19 +15,36 @@ export type Packed = readonly [0, number, Cell] | readonly [1, readonly Cell[], 
 /** Numbers the page recomputes or compares travel to the last bit; the rest to six significant digits. */
 const EXACT: ReadonlySet<string> = new Set(['ln_priority', 'ln_priority_sd']);
 
+/** What travels for `value`: null for an unknown number, others to `digits` significant digits. */
+function travelling(value: Cell, digits: number | undefined): Cell {
+  if (typeof value !== 'number') return value;
+  if (!Number.isFinite(value)) return null;
+  return digits === undefined ? value : Number(value.toPrecision(digits));
+}
+
 /** `values` in the shortest of the three forms. */
 export function packColumn(values: ArrayLike<Cell>, digits?: number): Packed {
-  const cells = Array.from(values, (value) => {
-    if (typeof value !== 'number') return value;
-    if (!Number.isFinite(value)) return null;
-    return digits === undefined ? value : Number(value.toPrecision(digits));
-  });
-  const distinct = [...new Set(cells)];
-  const [only] = distinct;
-  if (distinct.length === 1 && only !== undefined) return [0, cells.length, only];
-  if (distinct.length > cells.length / 3 || distinct.length > 5000) return [2, cells];
-  const place = new Map(distinct.map((value, i) => [value, i]));
-  return [1, distinct, cells.map((value) => place.get(value) ?? 0)];
+  const most = Math.min(values.length / 3, 5000);
+  /** Place of each value to travel, and of each value as it came: rounding costs far more than looking up. */
+  const placeOf = new Map<Cell, number>();
+  const known = new Map<Cell, number>();
+  const places = new Array<number>(values.length);
+  for (let i = 0; i < values.length; i += 1) {
+    const value = values[i] ?? null;
+    let place = known.get(value);
+    if (place === undefined) {
+      const cell = travelling(value, digits);
+      place = placeOf.get(cell) ?? placeOf.size;
+      placeOf.set(cell, place);
+      known.set(value, place);
+      // one value is a constant, however few cells there are
+      if (placeOf.size > 1 && placeOf.size > most) return [2, Array.from(values, (each) => travelling(each, digits))];
+    }
+    places[i] = place;
+  }
+  const [only, ...others] = placeOf.keys();
+  if (only !== undefined && others.length === 0) return [0, values.length, only];
+  return [1, [...placeOf.keys()], places];
 }
 
 /** Page data with every column packed. */

@@ -38,7 +38,8 @@ export function governingPeriod(data: PageData, i: number): number {
 
 /** The middle value of the numbers in `values`; NaN when there is none. */
 export function middle(values: readonly number[]): number {
-  const known = values.filter((value) => !Number.isNaN(value)).sort((a, b) => a - b);
+  // typed numbers sort by themselves, several times as fast as with a comparison of ours
+  const known = Float64Array.from(values.filter((value) => !Number.isNaN(value))).sort();
   const half = known.length >> 1;
   const upper = known[half] ?? NaN;
   return known.length % 2 === 1 ? upper : ((known[half - 1] ?? NaN) + upper) / 2;

@@ -26,6 +26,14 @@ describe('packColumn', () => {
     expect(packColumn(['x', 'x', 'x'])).toEqual([0, 3, 'x']);
     expect(packColumn(['x', 'y', 'x', 'y', 'x', 'y'])).toEqual([1, ['x', 'y'], [0, 1, 0, 1, 0, 1]]);
   });
+
+  it('counts values as they travel: those that round to the same are one', () => {
+    expect(packColumn([1.0001, 1.0002, 1.0003], 3)).toEqual([0, 3, 1]);
+    expect(packColumn([1.0001, 2, 1.0002, 2.0001, 1, 2], 3)).toEqual([1, [1, 2], [0, 1, 0, 1, 0, 1]]);
+    expect(packColumn([1.0001, 2, 1.0002], 3)).toEqual([2, [1, 2, 1]]);
+    expect(packColumn(['x'])).toEqual([0, 1, 'x']);
+    expect(packColumn([])).toEqual([1, [], []]);
+  });
 });
 
 describe('packPage', () => {

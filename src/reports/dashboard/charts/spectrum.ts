@@ -106,10 +106,12 @@ export function spectrumChart(data: PageData): Chart {
   const bands = curves.flatMap((curve) => sampleBand(curve, to_s));
   const top_g = points.reduce((most, { sa_g }) => Math.max(most, sa_g), 0.1);
   const most_g = bands.reduce((most, { high_g }) => Math.max(most, high_g), top_g);
-  const bins = Array.from({ length: Math.ceil(to_s / width_s - 1e-9) }, (_, b) => {
-    const inside = (i: number): boolean => Math.min(Math.floor((periods[i] ?? NaN) / width_s), Math.ceil(to_s / width_s) - 1) === b;
-    const members = Array.from({ length: shown }, (_unused, i) => i).filter(inside);
-    return { from_s: b * width_s, to_s: (b + 1) * width_s, count: members.length, inList: members.filter((i) => i < listed).length };
+  const bins = Array.from({ length: Math.ceil(to_s / width_s - 1e-9) }, (_, b) => ({ from_s: b * width_s, to_s: (b + 1) * width_s, count: 0, inList: 0 }));
+  periods.forEach((period_s, i) => {
+    const bin = bins[Math.min(Math.floor(period_s / width_s), Math.ceil(to_s / width_s) - 1)];
+    if (bin === undefined) return;
+    bin.count += 1;
+    if (i < listed) bin.inList += 1;
   });
   const tallest = bins.reduce((most, { count }) => Math.max(most, count), 1);
   const bars = bins.map((bin) => ({
