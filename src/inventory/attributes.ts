@@ -24,7 +24,8 @@ export async function countAttributes(
   for (const name of FILLED_ATTRIBUTES) {
     const counts = { given: 0, inferred: 0, default: 0, unknown: 0 };
     const perFill = new Float64Array(inferred.fills.length);
-    for (const fill of inferred[name].fill) perFill[fill] = (perFill[fill] ?? 0) + 1;
+    const { fill: fills } = inferred[name];
+    for (let at = 0; at < fills.length; at += 1) perFill[fills[at]!]! += 1;
     inferred.fills.forEach(({ origin }, fill) => {
       counts[origin] += perFill[fill] ?? 0;
     });

@@ -21,47 +21,56 @@ export function findContradictions(sizes: Sizes, plans: Plans, notes: BuildingNo
   const heightContradicted = new Uint8Array(rows);
   const retrofitDoubted = new Uint8Array(rows);
   const { storeys_above: storeys, height_m: height, floor_area_m2: area } = sizes;
-  const number = (values: Float64Array | undefined, at: number): number => values?.[at] ?? NaN;
+  // A column that is not there is one of NaN, shared: the loop below is hot and reads arrays alone.
+  const none = new Float64Array(rows).fill(NaN);
+  const storeysAt = storeys ?? none;
+  const heightAt = height ?? none;
+  const areaAt = area ?? none;
+  const totalAt = sizes.storeys_total ?? none;
+  const belowAt = sizes.storeys_below ?? none;
+  const builtAt = sizes.year_built ?? none;
+  const retrofittedAt = sizes.year_retrofitted ?? none;
+  const countAt = sizes.count ?? none;
 
   const ratio = new Float64Array(storeys === undefined || height === undefined ? 0 : rows);
-  for (let at = 0; at < ratio.length; at += 1) ratio[at] = number(height, at) / number(storeys, at);
+  for (let at = 0; at < ratio.length; at += 1) ratio[at] = height![at]! / storeys![at]!;
   const median = medianOf(ratio);
   const usual = median >= 2.5 && median <= 5;
 
   for (let at = 0; at < rows; at += 1) {
-    const row = sizes.first_row[at] ?? 0;
-    const n = number(storeys, at);
-    const perStorey = ratio[at] ?? NaN;
+    const row = sizes.first_row[at]!;
+    const n = storeysAt[at]!;
+    const perStorey = heightAt[at]! / n;
     if (n >= 2 && (perStorey < HEIGHT_PER_STOREY.low || perStorey > HEIGHT_PER_STOREY.high)) {
       heightContradicted[at] = 1;
-      const h = number(height, at);
+      const h = heightAt[at]!;
       const check = usual && perStorey >= 9 && perStorey <= 14 ? CHECKS.looksLikeFeet : CHECKS.heightStoreys;
       notes.add(check, row, h, `${short(h)} m over ${short(n)} storeys is ${short(perStorey)} m per storey`);
     }
-    const plate = number(area, at) / n;
+    const plate = areaAt[at]! / n;
     if (n >= 2 && plate < SMALLEST_PLATE_M2) {
       storeysDoubted[at] = 1;
       notes.add(
         CHECKS.plateSmall,
         row,
         n,
-        `${short(number(area, at))} m² over ${short(n)} storeys is ${short(plate)} m² per storey`,
+        `${short(areaAt[at]!)} m² over ${short(n)} storeys is ${short(plate)} m² per storey`,
       );
-    } else if (plate > 1.3 * (plans.area_m2[at] ?? NaN)) {
-      const message = `${short(plate)} m² per storey over a plan of ${short(plans.area_m2[at] ?? NaN)} m²`;
-      notes.add(CHECKS.plateLarge, row, number(area, at), message);
+    } else if (plate > 1.3 * plans.area_m2[at]!) {
+      const message = `${short(plate)} m² per storey over a plan of ${short(plans.area_m2[at]!)} m²`;
+      notes.add(CHECKS.plateLarge, row, areaAt[at]!, message);
     }
-    const merged = sizes.merged_storeys[at] ?? 0;
+    const merged = sizes.merged_storeys[at]!;
     if (merged === 2 || (merged === 1 && plate > STOREYS_OF_UNITS.plate_m2)) {
       storeysOfUnits[at] = 1;
       const message =
         merged === 2
           ? `only units give storeys, ${short(n)} at most`
-          : `${short(number(area, at))} m² over ${short(n)} ${n === 1 ? 'storey' : 'storeys'} is ${short(plate)} m² per storey`;
+          : `${short(areaAt[at]!)} m² over ${short(n)} ${n === 1 ? 'storey' : 'storeys'} is ${short(plate)} m² per storey`;
       notes.add(CHECKS.storeysOfUnits, row, n, message);
     }
-    const total = number(sizes.storeys_total, at);
-    const below = number(sizes.storeys_below, at);
+    const total = totalAt[at]!;
+    const below = belowAt[at]!;
     if (Math.abs(n + below - total) > 1e-9) {
       notes.add(
         CHECKS.storeySum,
@@ -70,13 +79,13 @@ export function findContradictions(sizes: Sizes, plans: Plans, notes: BuildingNo
         `${short(n)} above and ${short(below)} below, but ${short(total)} in all`,
       );
     }
-    const built = number(sizes.year_built, at);
-    const retrofitted = number(sizes.year_retrofitted, at);
+    const built = builtAt[at]!;
+    const retrofitted = retrofittedAt[at]!;
     if (retrofitted < built) {
       retrofitDoubted[at] = 1;
       notes.add(CHECKS.retrofitFirst, row, retrofitted, `retrofitted ${retrofitted}, built ${built}`);
     }
-    const count = number(sizes.count, at);
+    const count = countAt[at]!;
     if (count > 1) notes.add(CHECKS.campusRow, row, count, `the row stands for ${count} buildings`);
   }
   checkPlaces(sizes, plans, notes);
@@ -100,8 +109,8 @@ function checkPlaces(sizes: Sizes, plans: Plans, notes: BuildingNotes): void {
   const middleLon = medianOf(lon);
   const middleLat = medianOf(lat);
   for (let at = 0; at < sizes.rowCount; at += 1) {
-    const x = lon[at] ?? NaN;
-    const y = lat[at] ?? NaN;
+    const x = lon[at]!;
+    const y = lat[at]!;
     if (Number.isNaN(x) && Number.isNaN(y)) continue;
     const near = Math.abs(x - middleLon) <= 2 && Math.abs(y - middleLat) <= 2;
     if (near) continue;
@@ -110,7 +119,7 @@ function checkPlaces(sizes: Sizes, plans: Plans, notes: BuildingNotes): void {
     const check = x === 0 && y === 0 ? CHECKS.zeroPlace : swapped ? CHECKS.swappedPlace : CHECKS.farPlace;
     if (!Number.isNaN(y) || swapped) {
       const message = `(${x}, ${y}) where the inventory lies about (${short(middleLon)}, ${short(middleLat)})`;
-      notes.add(check, sizes.first_row[at] ?? 0, x, message);
+      notes.add(check, sizes.first_row[at]!, x, message);
     }
     lon[at] = NaN;
     lat[at] = NaN;

@@ -2,8 +2,8 @@
 import type { Database } from '../store/database.js';
 import { keySql } from './cells.js';
 import type { Mapping } from './header.js';
-import type { PlainTable } from './normalise.js';
 import { readTableSql } from './read.js';
+import type { Table } from './table.js';
 
 const LEFT_OUT = 'the row is left out';
 
@@ -14,7 +14,7 @@ const LEFT_OUT = 'the row is left out';
  * rows are merged, rows that only repeat the merge key are parts of one building, equal or not: units of one size are
  * common. Only a separate id column tells a repeated row from a second unit.
  */
-export async function decideFates(db: Database, table: PlainTable, mapping: Mapping): Promise<void> {
+export async function decideFates(db: Database, table: Table, mapping: Mapping): Promise<void> {
   await db.run('CREATE OR REPLACE TEMP TABLE intake_fate ("row" INTEGER, fate VARCHAR)');
   const { rejects } = table;
   if (rejects.length > 0) {
@@ -51,7 +51,7 @@ async function rejectRowsWithoutKey(db: Database, mapping: Mapping): Promise<voi
   );
 }
 
-async function findTwins(db: Database, table: PlainTable, mapping: Mapping): Promise<void> {
+async function findTwins(db: Database, table: Table, mapping: Mapping): Promise<void> {
   // Grouped by hash: a tenth of the work; what only shares its hash falls out when the ids themselves are compared below.
   await db.run(`CREATE OR REPLACE TEMP TABLE intake_repeated AS
     SELECT c."row", c.id FROM intake_cell c
@@ -61,7 +61,7 @@ async function findTwins(db: Database, table: PlainTable, mapping: Mapping): Pro
   await db.run(`CREATE OR REPLACE TEMP TABLE intake_twin AS
     SELECT "row", id, min("row") OVER (PARTITION BY id) AS first_row, min("row") OVER (PARTITION BY id, digest) AS same_row
     FROM (SELECT r."row", r.id, md5(concat_ws(chr(31), ${cells})) AS digest
-          FROM ${readTableSql(table)} t JOIN intake_repeated r ON r."row" = t."row")`);
+          FROM ${readTableSql(table.rewritten())} t JOIN intake_repeated r ON r."row" = t."row")`);
   const kept = mapping.mergeBy === undefined ? '' : 'AND same_row <> "row"';
   await db.run(`INSERT INTO intake_fate
     SELECT "row", CASE WHEN same_row < "row" THEN 'exact-duplicate' ELSE 'rejected' END

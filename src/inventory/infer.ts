@@ -43,17 +43,19 @@ const GIVEN: Fill = { origin: 'given', sigma: 0, rule: '' };
 
 class Fills {
   readonly list: Fill[] = [];
-  readonly #numbers = new Map<string, number>();
+  readonly #ofRule = new Map<string, number[]>();
 
-  number(fill: Fill): number {
-    const key = `${fill.origin} ${fill.sigma} ${fill.rule}`;
-    let number = this.#numbers.get(key);
-    if (number === undefined) {
-      number = this.list.length;
-      this.list.push(fill);
-      this.#numbers.set(key, number);
+  // By the rule, which has one origin and a few spreads: a key of all three would have the spread printed for every building.
+  number({ origin, sigma, rule }: Fill): number {
+    let numbers = this.#ofRule.get(rule);
+    if (numbers === undefined) this.#ofRule.set(rule, (numbers = []));
+    for (const number of numbers) {
+      const fill = this.list[number]!;
+      if (fill.sigma === sigma && fill.origin === origin) return number;
     }
-    return number;
+    numbers.push(this.list.length);
+    this.list.push({ origin, sigma, rule });
+    return this.list.length - 1;
   }
 }
 
@@ -180,17 +182,22 @@ export function inferSizes(sizes: Sizes, plans: { readonly area_m2: Float64Array
   const height = column();
   const floor = column();
   const sizeless = new Uint8Array(rows);
-  const number = (values: Float64Array | undefined, at: number): number =>
-    values === undefined ? NaN : (values[at] as number);
+  const none = new Float64Array(rows).fill(NaN);
+  const aboveAt = sizes.storeys_above ?? none;
+  const heightAt = sizes.height_m ?? none;
+  const areaAt = sizes.floor_area_m2 ?? none;
+  const belowAt = sizes.storeys_below ?? none;
+  const totalAt = sizes.storeys_total ?? none;
+  const firstStoreyAt = sizes.first_storey_height_m ?? none;
   const put = ({ value, fill }: FilledColumn, at: number, found: Value): void => {
     value[at] = found.value;
     fill[at] = found.sigma === 0 && found.origin === 'given' ? given : fills.number(found);
   };
 
   for (let at = 0; at < rows; at += 1) {
-    const above = doubts.storeysDoubted[at] === 1 ? NaN : number(sizes.storeys_above, at);
-    const height_m = number(sizes.height_m, at);
-    const area_m2 = number(sizes.floor_area_m2, at);
+    const above = doubts.storeysDoubted[at] === 1 ? NaN : aboveAt[at]!;
+    const height_m = heightAt[at]!;
+    const area_m2 = areaAt[at]!;
     const isOfUnits = above > 0 && doubts.storeysOfUnits[at] === 1;
     if (above > 0) storeys.value[at] = above;
     if (isOfUnits) storeys.fill[at] = ofUnits;
@@ -209,10 +216,10 @@ export function inferSizes(sizes: Sizes, plans: { readonly area_m2: Float64Array
       use: sizes.use[at] as number,
       above,
       ofUnits: isOfUnits,
-      below: number(sizes.storeys_below, at),
-      total: number(sizes.storeys_total, at),
+      below: belowAt[at]!,
+      total: totalAt[at]!,
       height_m,
-      firstStorey_m: number(sizes.first_storey_height_m, at),
+      firstStorey_m: firstStoreyAt[at]!,
       area_m2,
       plan_m2: plans.area_m2[at] as number,
     };

@@ -1,30 +1,37 @@
+const SAMPLES = 2048;
+
 /**
  * Middle value of the entries that are not NaN (the lower of two), NaN of none; the answer does not depend on their
- * order. Partitions a copy around a pivot until the middle stands: a full sort of a million values takes ten times as long.
+ * order. A sample brackets the middle, and only what lies between is sorted: a full sort of a million values takes ten times as long.
  */
 export function medianOf(values: Float64Array): number {
-  const known = values.filter((value) => !Number.isNaN(value));
-  if (known.length === 0) return NaN;
-  const middle = (known.length - 1) >> 1;
-  let low = 0;
-  let high = known.length - 1;
-  while (low < high) {
-    const pivot = known[(low + high) >> 1] as number;
-    let i = low;
-    let j = high;
-    while (i <= j) {
-      while ((known[i] as number) < pivot) i += 1;
-      while ((known[j] as number) > pivot) j -= 1;
-      if (i > j) break;
-      const held = known[i] as number;
-      known[i] = known[j] as number;
-      known[j] = held;
-      i += 1;
-      j -= 1;
+  const known = new Float64Array(values.length);
+  let count = 0;
+  for (let i = 0; i < values.length; i += 1) {
+    const value = values[i]!;
+    if (value === value) {
+      known[count] = value;
+      count += 1;
     }
-    if (middle <= j) high = j;
-    else if (middle >= i) low = i;
-    else break;
   }
-  return known[middle] as number;
+  if (count === 0) return NaN;
+  const middle = (count - 1) >> 1;
+  if (count <= 4 * SAMPLES) return known.subarray(0, count).sort()[middle]!;
+  const sample = Float64Array.from({ length: SAMPLES }, (_, i) => known[Math.floor((i * count) / SAMPLES)]!).sort();
+  const low = sample[Math.floor(0.44 * SAMPLES)]!;
+  const high = sample[Math.floor(0.56 * SAMPLES)]!;
+  const between = new Float64Array(count);
+  let below = 0;
+  let inside = 0;
+  for (let i = 0; i < count; i += 1) {
+    const value = known[i]!;
+    if (value < low) below += 1;
+    else if (value <= high) {
+      between[inside] = value;
+      inside += 1;
+    }
+  }
+  const at = middle - below;
+  // a sample that misses the middle, as of values in some order: sort them all
+  return at >= 0 && at < inside ? between.subarray(0, inside).sort()[at]! : known.subarray(0, count).sort()[middle]!;
 }

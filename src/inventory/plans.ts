@@ -33,8 +33,12 @@ export function readPlans(sizes: Sizes, notes: BuildingNotes): Plans {
   const fill = (array: Float64Array, at: number, value: number): void => {
     if (Number.isNaN(array[at])) array[at] = value;
   };
+  if (sizes.footprint === undefined) {
+    for (let at = 0; at < rows; at += 1) plans.area_m2[at] = plans.length_m[at]! * plans.width_m[at]!;
+    return plans;
+  }
   for (let at = 0; at < rows; at += 1) {
-    const text = sizes.footprint?.[at] ?? null;
+    const text = sizes.footprint[at] ?? null;
     const found = text === null ? undefined : readFootprint(text);
     if (found !== undefined) {
       fill(plans.length_m, at, found.length_m);

@@ -148,7 +148,12 @@ function plannedColumns(mapping: Mapping, { plans, sizes }: BuildingParts): Read
 }
 
 function isSame(a: Float64Array, b: Float64Array): boolean {
-  return a.every((value, at) => Object.is(value, b[at]) || value === b[at]);
+  for (let at = 0; at < a.length; at += 1) {
+    const value = a[at]!;
+    const other = b[at]!;
+    if (value !== other && (value === value || other === other)) return false;
+  }
+  return true;
 }
 
 /**
@@ -178,8 +183,11 @@ async function appendFilled(
 
 /** For each of `rows`, its position in `sorted`, which holds the same rows in another order. */
 function placesOf(sorted: Int32Array, rows: Int32Array): Int32Array {
-  const last = rows.reduce((most, row) => Math.max(most, row), 0);
+  let last = 0;
+  for (let at = 0; at < rows.length; at += 1) if (rows[at]! > last) last = rows[at]!;
   const placeOfRow = new Int32Array(last + 1).fill(-1);
   for (let place = 0; place < sorted.length; place += 1) placeOfRow[sorted[place] as number] = place;
-  return rows.map((row) => placeOfRow[row] as number);
+  const places = new Int32Array(rows.length);
+  for (let at = 0; at < rows.length; at += 1) places[at] = placeOfRow[rows[at]!]!;
+  return places;
 }

@@ -19,8 +19,6 @@ import { inferSizes } from './infer.js';
 import type { IntakeStudy } from './intake-study.js';
 import { inspectNeighbours, takeInNeighbours } from './neighbours.js';
 import { noteListLengths } from './list-lengths.js';
-import { normalise } from './normalise.js';
-import type { PlainTable } from './normalise.js';
 import { readPlans } from './plans.js';
 import { makeYearPools, storeYearPools } from './pools.js';
 import { readCells } from './read.js';
@@ -28,6 +26,8 @@ import { readSizes } from './sizes.js';
 import { inspectSource } from './source.js';
 import type { Source } from './source.js';
 import { storeBuildings } from './store-buildings.js';
+import { openTable } from './table.js';
+import type { Table } from './table.js';
 
 /** Goes into the fingerprint: an intake that reads differently is another inventory. */
 const INTAKE_VERSION = 4;
@@ -66,7 +66,7 @@ export async function takeIn(
     return readTaken(db, inventoryId);
 
   progress('reading');
-  const table = normalise(source, study.inventory.delimiter);
+  const table = openTable(db, source, study.inventory.delimiter);
   try {
     const mapping = mapHeader(table.header, { ...study.inventory, file: path });
     return await takeTable(db, study, { source, pairs, table, mapping, inventoryId }, progress, begin);
@@ -79,7 +79,7 @@ export async function takeIn(
 interface Parts {
   readonly source: Source;
   readonly pairs: Source | undefined;
-  readonly table: PlainTable;
+  readonly table: Table;
   readonly mapping: Mapping;
   readonly inventoryId: string;
 }
@@ -194,7 +194,7 @@ export async function readTaken(db: Database, inventoryId: string): Promise<Take
   };
 }
 
-async function noteTable(db: Database, table: PlainTable): Promise<void> {
+async function noteTable(db: Database, table: Table): Promise<void> {
   const add = async (code: string, value: number, message: string, action: string): Promise<void> => {
     await db.run("INSERT INTO intake_finding VALUES (NULL, NULL, NULL, ?, ?, ?, ?, 'note')", [
       String(value),

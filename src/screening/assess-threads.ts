@@ -6,6 +6,9 @@ import { Worker } from 'node:worker_threads';
 import { compileContext } from '../engineering/assess/context.js';
 import type { AssessSettings } from '../engineering/assess/settings.js';
 import type { YearPools } from '../engineering/building-columns.js';
+import { answerOf } from '../engineering/priority/exceedance.js';
+import type { SetAnswer, SetTask } from '../engineering/priority/exceedance.js';
+import type { Mixture } from '../engineering/priority/mixture.js';
 import { bandsOf } from '../engineering/priority/rank.js';
 import type { Bands } from '../engineering/priority/rank.js';
 import type { HazardGrids } from '../engineering/spectrum/grid.js';
@@ -23,6 +26,8 @@ export interface Assessor {
   readonly begin: (settings: AssessSettings, pools: YearPools, grids: HazardGrids) => void;
   /** Takes the memory of the block over. */
   readonly assess: (block: PackedBlock) => Promise<BlockResult>;
+  /** The answer of a set of mixtures, all as one, to a task. */
+  readonly answer: (set: Mixture, of: SetTask) => Promise<SetAnswer>;
   /** Chances and bands of the buildings with these mixtures. */
   readonly bands: (mixtures: FlatArrays, basis: BandBasis) => Promise<Bands>;
   readonly close: () => Promise<void>;
@@ -56,13 +61,14 @@ export function startAssessor(threads: number): Assessor {
       here === null
         ? Promise.reject(new Bug('a block before the settings'))
         : Promise.resolve(here.assess(unpackBlock(block))),
+    answer: (set, of) => Promise.resolve(answerOf([set], of)),
     bands: (mixtures, basis) => Promise.resolve(bandsOf(mixturesOf(mixtures), basis)),
     close: () => Promise.resolve(),
   };
 }
 
 interface Waiting {
-  readonly resolve: (result: BlockResult | Bands) => void;
+  readonly resolve: (result: BlockResult | Bands | SetAnswer) => void;
   readonly reject: (error: Error) => void;
 }
 
@@ -99,6 +105,9 @@ class Threads implements Assessor {
   assess = (block: PackedBlock): Promise<BlockResult> =>
     this.#ask((task) => ({ kind: 'block', task, block }), memoryOf(block)) as Promise<BlockResult>;
 
+  answer = (set: Mixture, of: SetTask): Promise<SetAnswer> =>
+    this.#ask((task) => ({ kind: 'set', task, set, of })) as Promise<SetAnswer>;
+
   bands = (mixtures: FlatArrays, basis: BandBasis): Promise<Bands> =>
     this.#ask((task) => ({ kind: 'bands', task, mixtures, basis })) as Promise<Bands>;
 
@@ -107,7 +116,7 @@ class Threads implements Assessor {
   };
 
   /** Hands a task to the thread with the fewest. */
-  #ask(message: (task: number) => ToThread, given: ArrayBuffer[] = []): Promise<BlockResult | Bands> {
+  #ask(message: (task: number) => ToThread, given: ArrayBuffer[] = []): Promise<BlockResult | Bands | SetAnswer> {
     const worker = this.#load.indexOf(Math.min(...this.#load));
     const task = this.#task;
     this.#task += 1;

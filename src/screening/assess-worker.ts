@@ -1,6 +1,8 @@
 /** The body of a thread that assesses: settings first, then block after block, and the bands of the ranking in the end. */
 import { parentPort } from 'node:worker_threads';
 import { compileContext } from '../engineering/assess/context.js';
+import { answerOf } from '../engineering/priority/exceedance.js';
+import type { SetAnswer } from '../engineering/priority/exceedance.js';
 import { bandsOf } from '../engineering/priority/rank.js';
 import type { Bands } from '../engineering/priority/rank.js';
 import { Bug } from '../errors.js';
@@ -14,7 +16,8 @@ const port = parentPort;
 if (port === null) throw new Bug('assess-worker is started as a thread');
 let assessor: BlockAssessor | null = null;
 
-function workedOut(message: Exclude<ToThread, { kind: 'begin' }>): BlockResult | Bands {
+function workedOut(message: Exclude<ToThread, { kind: 'begin' }>): BlockResult | Bands | SetAnswer {
+  if (message.kind === 'set') return answerOf([message.set], message.of);
   if (message.kind === 'bands') return bandsOf(mixturesOf(message.mixtures), message.basis);
   if (assessor === null) throw new Bug('a block before the settings');
   return assessor.assess(unpackBlock(message.block));

@@ -1,5 +1,5 @@
 /** Ranks the assessed buildings: rank, chance, band and tie group as columns over the whole inventory. */
-import { fallingOrder, rankAll, rankBasis, relativePriority, tieGroups } from '../engineering/priority/rank.js';
+import { basisOf, fallingOrder, orderOf, rankAll, relativePriority, tieGroups } from '../engineering/priority/rank.js';
 import type { Bands, Ranking } from '../engineering/priority/rank.js';
 import { NULL_CODE } from '../store/codes.js';
 import { RANKED_COLUMNS, RESULT_WORDS } from '../store/schema.js';
@@ -27,28 +27,51 @@ export async function rankInventory(
 ): Promise<Ranked> {
   const { index, id, mixtures, median, people, demand } = assessed;
   const input = { id, mixtures, median, people };
-  const basis = rankBasis(input, listSize);
-  const { curve, threshold } = basis;
-  const parts = Promise.all(assessed.flat.map((flat) => assessor.bands(flat, { curve, threshold })));
+  const found = basisBy(assessor, assessed, listSize);
   // meanwhile, in this thread
-  const groups = tieGroups(basis.order, mixtures);
-  const ranking = rankAll(input, listSize, seed, basis, groups, joined(await parts, id.length));
+  const order = orderOf(input);
   const n = id.length;
   const columns = emptyColumns(count);
   const { numbers, wholes, words } = columns;
-  const medianOfPortfolio = n === 0 ? 0 : median[ranking.order[Math.floor((n - 1) / 2)]!]!;
-  const [inside, outside] = [IN_LIST.indexOf('yes'), IN_LIST.indexOf('no')];
-  const put = <A extends Float64Array | Int32Array | Uint8Array>(out: A | undefined, value: (i: number) => number) => {
-    for (let i = 0; i < n; i += 1) out![index[i]!] = value(i);
+  const medianOfPortfolio = n === 0 ? 0 : median[order[Math.floor((n - 1) / 2)]!]!;
+  fillDemandRanks(columns, index, demand);
+  const basis = { order, ...(await found) };
+  const { curve, threshold } = basis;
+  const parts = Promise.all(assessed.flat.map((flat) => assessor.bands(flat, { curve, threshold })));
+  // and again
+  const groups = tieGroups(order, mixtures);
+  const priority = numbers['priority']!;
+  for (let i = 0; i < n; i += 1) priority[index[i]!] = relativePriority(median[i]!, medianOfPortfolio);
+  const ranking = rankAll(input, listSize, seed, basis, groups, joined(await parts, n));
+  const put = (out: Float64Array | Int32Array | undefined, values: Float64Array | Int32Array) => {
+    for (let i = 0; i < n; i += 1) out![index[i]!] = values[i]!;
   };
-  put(wholes['rank'], (i) => ranking.rank[i]!);
-  put(wholes['rank_best'], (i) => ranking.rankBest[i]!);
-  put(wholes['rank_worst'], (i) => ranking.rankWorst[i]!);
-  put(wholes['tie_group'], (i) => ranking.tieGroup[i]!);
-  put(numbers['chance'], (i) => ranking.chance[i]!);
-  put(numbers['priority'], (i) => relativePriority(median[i]!, medianOfPortfolio));
-  put(words['in_list'], (i) => (ranking.rank[i]! <= listSize ? inside : outside));
-  // equal demands share their places: on a plateau there is no order by demand
+  put(wholes['rank'], ranking.rank);
+  put(wholes['rank_best'], ranking.rankBest);
+  put(wholes['rank_worst'], ranking.rankWorst);
+  put(wholes['tie_group'], ranking.tieGroup);
+  put(numbers['chance'], ranking.chance);
+  const inList = words['in_list']!;
+  const [inside, outside] = [IN_LIST.indexOf('yes'), IN_LIST.indexOf('no')];
+  for (let i = 0; i < n; i += 1) inList[index[i]!] = ranking.rank[i]! <= listSize ? inside : outside;
+  return { ranking, medianOfPortfolio, columns };
+}
+
+/** Expected numbers above and threshold, worked out set by set; the sets do not depend on the number of threads. */
+async function basisBy(assessor: Assessor, { flat, mixtures, id }: Assessed, listSize: number) {
+  const sets = flat.map(({ weight, mean, sd, start }) => ({ weight, mean, sd, from: 0, to: start.at(-1)! }));
+  const steps = basisOf(mixtures, id.length, listSize);
+  let next = steps.next();
+  while (next.done !== true) {
+    const { value } = next;
+    next = steps.next(await Promise.all(sets.map((set) => assessor.answer(set, value))));
+  }
+  return next.value;
+}
+
+/** Equal demands share their places: on a plateau there is no order by demand. */
+function fillDemandRanks({ wholes }: RankedColumns, index: Int32Array, demand: Float64Array): void {
+  const n = index.length;
   const { order: byDemand, steps } = fallingOrder(demand);
   const firstPlace = wholes['demand_rank']!;
   const lastPlace = wholes['demand_rank_last']!;
@@ -62,7 +85,6 @@ export async function rankInventory(
     }
     from = to;
   }
-  return { ranking, medianOfPortfolio, columns };
 }
 
 /** The bands of all buildings from those of one set after the other. */

@@ -1,6 +1,8 @@
 /** What the main thread and the threads that assess tell each other. Columns cross as numbers: a text costs more than a building. */
 import type { AssessSettings } from '../engineering/assess/settings.js';
 import type { YearPools } from '../engineering/building-columns.js';
+import type { SetAnswer, SetTask } from '../engineering/priority/exceedance.js';
+import type { Mixture } from '../engineering/priority/mixture.js';
 import type { Bands, RankBasis } from '../engineering/priority/rank.js';
 import type { HazardGrid, HazardGrids } from '../engineering/spectrum/grid.js';
 import { Bug } from '../errors.js';
@@ -25,10 +27,11 @@ export type ToThread =
       readonly grids: HazardGrids;
     }
   | { readonly kind: 'block'; readonly task: number; readonly block: PackedBlock }
+  | { readonly kind: 'set'; readonly task: number; readonly set: Mixture; readonly of: SetTask }
   | { readonly kind: 'bands'; readonly task: number; readonly mixtures: FlatArrays; readonly basis: BandBasis };
 
 export type FromThread =
-  | { readonly kind: 'done'; readonly task: number; readonly result: BlockResult | Bands }
+  | { readonly kind: 'done'; readonly task: number; readonly result: BlockResult | Bands | SetAnswer }
   | { readonly kind: 'failed'; readonly task: number; readonly message: string };
 
 /** A block ready to cross. */

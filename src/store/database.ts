@@ -1,5 +1,5 @@
-import { statSync } from 'node:fs';
-import { resolve } from 'node:path';
+import { realpathSync, statSync } from 'node:fs';
+import { isAbsolute, relative, resolve } from 'node:path';
 import {
   DOUBLE,
   DuckDBDataChunk,
@@ -35,6 +35,7 @@ const MEMORY_LIMIT = '700MB';
 interface Shared {
   readonly instance: DuckDBInstance;
   readonly readOnly: boolean;
+  readonly folders: readonly string[];
   users: number;
 }
 
@@ -53,6 +54,7 @@ export async function openDatabase(options: OpenOptions): Promise<Database> {
     return new Database(
       await instance.connect(),
       undefined,
+      options.folders ?? [],
       () => instance.connect(),
       () => {
         instance.closeSync();
@@ -62,7 +64,8 @@ export async function openDatabase(options: OpenOptions): Promise<Database> {
   const path = resolve(options.path);
   let shared = OPEN.get(path);
   if (shared === undefined) {
-    shared = { instance: await start(path, readOnly, options.folders ?? []), readOnly, users: 0 };
+    const folders = options.folders ?? [];
+    shared = { instance: await start(path, readOnly, folders), readOnly, folders, users: 0 };
     OPEN.set(path, shared);
   } else if (shared.readOnly && !readOnly) {
     throw new Bug(`${path} is already open for reading in this process; close it before writing`);
@@ -72,6 +75,7 @@ export async function openDatabase(options: OpenOptions): Promise<Database> {
   return new Database(
     await held.instance.connect(),
     path,
+    held.folders,
     () => held.instance.connect(),
     () => {
       held.users -= 1;
@@ -113,6 +117,7 @@ async function start(path: string, readOnly: boolean, folders: readonly string[]
 /** One connection. Statements run one at a time and their results are materialised: a stream on it could be cut short silently. */
 export class Database {
   readonly file: string | undefined;
+  readonly #folders: readonly string[];
   readonly #connection: DuckDBConnection;
   readonly #connect: () => Promise<DuckDBConnection>;
   readonly #release: () => void;
@@ -123,13 +128,25 @@ export class Database {
   constructor(
     connection: DuckDBConnection,
     file: string | undefined,
+    folders: readonly string[],
     connect: () => Promise<DuckDBConnection>,
     release: () => void,
   ) {
     this.#connection = connection;
     this.#connect = connect;
+    this.#folders = folders;
     this.file = file;
     this.#release = release;
+  }
+
+  /** Whether statements may name the file: it lies in a folder that the database was opened with, and its name is no pattern. */
+  reads(path: string): boolean {
+    if (/[*?[\]{}]/.test(path)) return false;
+    const real = realpathSync(path);
+    return this.#folders.some((folder) => {
+      const within = relative(realpathSync(folder), real);
+      return within !== '' && !within.startsWith('..') && !isAbsolute(within);
+    });
   }
 
   /** Runs statements; returns how many rows the last one changed. */
@@ -257,7 +274,7 @@ export class Database {
    * is committed, and no temporary tables.
    */
   async beside<T>(work: (db: Database) => Promise<T>): Promise<T> {
-    const other = new Database(await this.#connect(), this.file, this.#connect, () => undefined);
+    const other = new Database(await this.#connect(), this.file, this.#folders, this.#connect, () => undefined);
     this.#beside.add(other);
     try {
       return await work(other);

@@ -168,11 +168,13 @@ export function writeColumn(chunk: DuckDBDataChunk, column: number, values: Writ
   if (values instanceof Float64Array) {
     const part = values.slice(from, from + rows);
     bindings.copy_data_to_vector(vector, 0, part.buffer, 0, part.byteLength);
-    writeValidity(vector, rows, (i) => !Number.isNaN(part[i]!));
+    let first = 0;
+    while (first < rows && part[first] === part[first]) first += 1;
+    if (first < rows) writeValidity(vector, rows, (i) => !Number.isNaN(part[i]!));
   } else if (values instanceof Int32Array) {
     const part = values.slice(from, from + rows);
     bindings.copy_data_to_vector(vector, 0, part.buffer, 0, part.byteLength);
-    writeValidity(vector, rows, (i) => part[i] !== NULL_I32);
+    if (part.includes(NULL_I32)) writeValidity(vector, rows, (i) => part[i] !== NULL_I32);
   } else if ('codes' in values) {
     const part = values.codes.slice(from, from + rows);
     bindings.copy_data_to_vector(vector, 0, part.buffer, 0, part.byteLength);

@@ -1,5 +1,6 @@
 import { join } from 'node:path';
 import { beforeAll, describe, expect, it } from 'vitest';
+import type { SetTask } from '../../src/engineering/priority/exceedance.js';
 import * as source from '../../src/screening/assess-threads.js';
 import type { BlockResult } from '../../src/screening/assess-block.js';
 import { readRun } from '../../src/screening/page-data.js';
@@ -56,6 +57,13 @@ describe('startAssessor', () => {
         for (const name of ['weight', 'mean', 'sd', 'start'] as const)
           expect(Array.from(other.mixtures[name]), name).toEqual(Array.from(result.mixtures[name]));
       });
+      const answers = async (assessor: typeof here): Promise<unknown> => {
+        const sets = one.map(({ mixtures }) => ({ ...mixtures, from: 0, to: mixtures.start.at(-1)! }));
+        const all = (of: SetTask) => Promise.all(sets.map(({ start: _, ...set }) => assessor.answer(set, of)));
+        const grid = { kind: 'grid', low: -20, high: 20, least: 0.01, most: 3 } as const;
+        return [await all({ kind: 'range' }), await all(grid), await all({ kind: 'count', x: 0 })];
+      };
+      expect(await answers(there)).toEqual(await answers(here));
     } finally {
       await there.close();
       await here.close();

@@ -25,11 +25,51 @@ const SD_CLASSES = 24;
 /** Point masses closer to the threshold than this are at it. */
 const AT = 1e-9;
 
-/** Tabulates F of all buildings. */
-export function exceedance(mixtures: readonly Mixture[]): Exceedance {
-  const table = tabulate(mixtures);
-  const steps = table.least === 0 ? stepsOf(mixtures) : null;
-  return { ...table, n: mixtures.length, places: steps?.places ?? null, above: steps?.above ?? null };
+/**
+ * What is asked of every set of mixtures on the way to F and its threshold. The answers are summed in the order of the sets: whoever
+ * works them out, one thread or many, changes no bit.
+ */
+export type SetTask =
+  { readonly kind: 'range' } | ({ readonly kind: 'grid' } & Range) | { readonly kind: 'count'; readonly x: number };
+
+/** The ends of the parts of all mixtures, five spreads out, and their smallest and largest spread. */
+export interface Range {
+  readonly low: number;
+  readonly high: number;
+  readonly least: number;
+  readonly most: number;
+}
+
+/** A few numbers for a task: the range; the weight on each point of the grid; the count above x and its density. */
+export type SetAnswer = Float64Array;
+
+/** Works out a task for one set. */
+export function answerOf(mixtures: readonly Mixture[], task: SetTask): SetAnswer {
+  if (task.kind === 'range') return rangeOf(mixtures);
+  return task.kind === 'grid' ? gridOf(mixtures, task) : exact(mixtures, task.x);
+}
+
+/** Tabulates F of `n` buildings: yields tasks, takes the answers of all sets to each; `mixtures` are all of them, in one list of any kind. */
+export function* exceedance(
+  mixtures: readonly Mixture[],
+  n: number,
+): Generator<SetTask, Exceedance, readonly SetAnswer[]> {
+  const range = widest(yield { kind: 'range' });
+  const { low, least } = range;
+  const step = stepOf(range);
+  const weights = summed(yield { kind: 'grid', ...range });
+  const value = new Float64Array(POINTS);
+  variancesOf(range).forEach((variance, c) => {
+    spreadOut(weights.subarray(c * ROW, (c + 1) * ROW), Math.sqrt(variance) / step, value);
+  });
+  const steps = least === 0 ? stepsOf(mixtures) : null;
+  return { low, step, value, least, n, places: steps?.places ?? null, above: steps?.above ?? null };
+}
+
+function summed(answers: readonly SetAnswer[]): Float64Array {
+  const sum = answers[0]?.slice() ?? new Float64Array(0);
+  for (const answer of answers.slice(1)) for (let i = 0; i < sum.length; i += 1) sum[i]! += answer[i]!;
+  return sum;
 }
 
 /** F(x), from the table; where parts have no spread, those above x, exactly. */
@@ -76,13 +116,7 @@ function stepsOf(mixtures: readonly Mixture[]): { readonly places: Float64Array;
   return { places, above };
 }
 
-type Table = Pick<Exceedance, 'least' | 'low' | 'step' | 'value'>;
-
-/**
- * F on a grid. Parts are first shared out over neighbouring grid points and neighbouring classes of spread (keeping their mean
- * and variance), so that the cost does not grow with buildings times points.
- */
-function tabulate(mixtures: readonly Mixture[]): Table {
+function rangeOf(mixtures: readonly Mixture[]): SetAnswer {
   let low = Infinity;
   let high = -Infinity;
   let least = Infinity;
@@ -95,17 +129,46 @@ function tabulate(mixtures: readonly Mixture[]): Table {
       most = Math.max(most, sd[i]!);
     }
   }
+  return Float64Array.of(low, high, least, most);
+}
+
+function widest(answers: readonly SetAnswer[]): Range {
+  let [low, high, least, most] = [Infinity, -Infinity, Infinity, 0];
+  for (const answer of answers) {
+    low = Math.min(low, answer[0]!);
+    high = Math.max(high, answer[1]!);
+    least = Math.min(least, answer[2]!);
+    most = Math.max(most, answer[3]!);
+  }
   if (!(high > low)) {
     low -= 1;
     high += 1;
   }
-  low -= 1e-6;
-  const step = (high - low) / (POINTS - 2);
-  const variances = Array.from(
+  return { low: low - 1e-6, high, least, most };
+}
+
+function stepOf({ low, high }: Range): number {
+  return (high - low) / (POINTS - 2);
+}
+
+function variancesOf({ least, most }: Range): readonly number[] {
+  return Array.from(
     { length: SD_CLASSES },
     (_, c) => least * least + ((most * most - least * least) * c) / (SD_CLASSES - 1),
   );
-  const grid = variances.map(() => new Float64Array(POINTS + 1));
+}
+
+/** Points of the grid of one class of spread. */
+const ROW = POINTS + 1;
+
+/**
+ * The parts shared out over neighbouring grid points and neighbouring classes of spread (keeping their mean and variance), so that
+ * the cost does not grow with buildings times points.
+ */
+function gridOf(mixtures: readonly Mixture[], range: Range): SetAnswer {
+  const { low, least, most } = range;
+  const step = stepOf(range);
+  const grid = new Float64Array(SD_CLASSES * ROW);
   for (const { weight, mean, sd, from, to } of mixtures) {
     for (let i = from; i < to; i += 1) {
       const at = (mean[i]! - low) / step;
@@ -116,15 +179,14 @@ function tabulate(mixtures: readonly Mixture[]): Table {
       const c = Math.min(SD_CLASSES - 2, Math.floor(v));
       const r = v - c;
       const w = weight[i]!;
-      grid[c]![g]! += w * (1 - r) * (1 - f);
-      grid[c]![g + 1]! += w * (1 - r) * f;
-      grid[c + 1]![g]! += w * r * (1 - f);
-      grid[c + 1]![g + 1]! += w * r * f;
+      const here = c * ROW + g;
+      grid[here]! += w * (1 - r) * (1 - f);
+      grid[here + 1]! += w * (1 - r) * f;
+      grid[here + ROW]! += w * r * (1 - f);
+      grid[here + ROW + 1]! += w * r * f;
     }
   }
-  const value = new Float64Array(POINTS);
-  grid.forEach((counts, c) => spreadOut(counts, Math.sqrt(variances[c]!) / step, value));
-  return { low, step, value, least };
+  return grid;
 }
 
 /** Adds to `value` the exceedance of the counts, each spread normally with `sd` in grid steps. */
@@ -147,7 +209,8 @@ function spreadOut(counts: Float64Array, sd: number, value: Float64Array): void 
   }
 }
 
-function exact(mixtures: readonly Mixture[], x: number): { readonly count: number; readonly density: number } {
+/** The count above x and its density. */
+function exact(mixtures: readonly Mixture[], x: number): SetAnswer {
   let count = 0;
   let density = 0;
   for (const { weight, mean, sd, from, to } of mixtures) {
@@ -155,9 +218,11 @@ function exact(mixtures: readonly Mixture[], x: number): { readonly count: numbe
       const s = sd[i]!;
       const gap = mean[i]! - x;
       if (s > 0) {
+        // nearly all are far below: told without a division
+        if (gap < -9 * s) continue;
         const z = gap / s;
         if (z > 9) count += weight[i]!;
-        else if (z > -9) {
+        else {
           const e = exp(-0.5 * z * z);
           count += weight[i]! * cdfFrom(z, e);
           density += (weight[i]! * e) / s;
@@ -165,18 +230,21 @@ function exact(mixtures: readonly Mixture[], x: number): { readonly count: numbe
       } else if (gap > 0) count += weight[i]!;
     }
   }
-  return { count, density: density * INVERSE_ROOT_TWO_PI };
+  return Float64Array.of(count, density * INVERSE_ROOT_TWO_PI);
 }
 
-/** x with F(x) = n, to 1e-9 buildings, or the place where F steps over n: Newton on the exact F from the table's answer, inside a bracket. */
-export function threshold(mixtures: readonly Mixture[], n: number, table: Exceedance): number {
+/**
+ * x with F(x) = n, to 1e-9 buildings, or the place where F steps over n: Newton on the exact F from the table's answer, inside a
+ * bracket. Yields tasks, takes the answers of all sets to each.
+ */
+export function* threshold(n: number, table: Exceedance): Generator<SetTask, number, readonly SetAnswer[]> {
   let i = 0;
   while (i < POINTS - 1 && table.value[i + 1]! > n) i += 1;
   let low = table.low - 1;
   let high = table.low + table.step * POINTS + 1;
   let x = table.low + table.step * (i + 0.5);
   for (let pass = 0; pass < 100; pass += 1) {
-    const { count, density } = exact(mixtures, x);
+    const [count = 0, density = 0] = summed(yield { kind: 'count', x });
     const error = count - n;
     if (Math.abs(error) < 1e-9) return x;
     if (error > 0) low = x;

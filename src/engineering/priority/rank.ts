@@ -5,8 +5,8 @@
 import { exp } from '../numeric/elementary.js';
 import { mixtureCdf, mixtureMoments, mixtureQuantile } from './mixture.js';
 import type { Mixture } from './mixture.js';
-import { aboveThreshold, countAbove, countFrom, exceedance, sharedChances, threshold } from './exceedance.js';
-import type { AboveThreshold, Exceedance } from './exceedance.js';
+import { aboveThreshold, answerOf, countAbove, countFrom, exceedance, sharedChances, threshold } from './exceedance.js';
+import type { AboveThreshold, Exceedance, SetAnswer, SetTask } from './exceedance.js';
 import { beats } from './pairwise.js';
 import { SIMULATED_UNDER, simulate } from './simulate.js';
 import type { Simulated } from './simulate.js';
@@ -101,15 +101,22 @@ export interface RankBasis {
   readonly threshold: number;
 }
 
-/** Order, expected numbers above and threshold of a list of `listSize` places. */
+/** Expected numbers above and threshold of a list of `listSize` places: yields tasks, takes the answers of all sets of mixtures to each. */
+export function* basisOf(
+  mixtures: readonly Mixture[],
+  count: number,
+  listSize: number,
+): Generator<SetTask, Omit<RankBasis, 'order'>, readonly SetAnswer[]> {
+  const curve = yield* exceedance(mixtures, count);
+  return { curve, threshold: listSize >= count ? -Infinity : yield* threshold(listSize, curve) };
+}
+
+/** The same with the order, of all mixtures as one set. */
 export function rankBasis(input: RankInput<readonly string[] | Int32Array>, listSize: number): RankBasis {
-  const curve = exceedance(input.mixtures);
-  const holdsAll = listSize >= input.id.length;
-  return {
-    order: orderOf(input),
-    curve,
-    threshold: holdsAll ? -Infinity : threshold(input.mixtures, listSize, curve),
-  };
+  const steps = basisOf(input.mixtures, input.id.length, listSize);
+  let next = steps.next();
+  while (next.done !== true) next = steps.next([answerOf(input.mixtures, next.value)]);
+  return { order: orderOf(input), ...next.value };
 }
 
 /** Chance and ends of the band of some of the buildings, in closed form; the chances still without those tied at the threshold. */
