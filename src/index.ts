@@ -28,6 +28,16 @@ export type { Parameter, ParameterRange } from './study/parameters.js';
 export type { ListChange, ListMove } from './screening/list-changes.js';
 export type { SweptValue } from './screening/sweep.js';
 
+export { budgetStudy } from './exports/budget-study.js';
+export type { BudgetStudyOptions } from './exports/budget-study.js';
+export type { BudgetBatch, BudgetBuilding, BudgetOverride, BudgetPlan } from './screening/budget-plan.js';
+export type { CostFrom } from './screening/budget-inputs.js';
+
+export { sensitivityStudy } from './exports/sensitivity-study.js';
+export type { SensitivityStudyOptions } from './exports/sensitivity-study.js';
+export type { HeldPlace, Sensitivity, SwitchEffect } from './screening/sensitivity.js';
+export type { NotSwitched } from './screening/switches.js';
+
 export { compareStudy } from './exports/compare-study.js';
 export type { ComparedStudies, CompareStudyOptions } from './exports/compare-study.js';
 export type { Comparison, ExplainedMove, OneSided, SettingChange } from './screening/compare-runs.js';

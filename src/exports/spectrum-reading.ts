@@ -145,6 +145,7 @@ function readingAt(
     interpolation: entry['interpolation'] === 'log-log' ? 'log-log' : 'linear',
     return_period_years: entry.return_period_years ?? null,
     holdPlateau: study.hazard.hold_plateau,
+    factor: 1,
   } as const;
   const found = siteSpectrum(source, place.lon, place.lat);
   if (typeof found !== 'string') return found;

@@ -1,4 +1,5 @@
 /** The assumptions register and the cautions that every report carries. */
+import { assumedWith } from '../engineering/assess/assumed.js';
 import type { AssessSettings } from '../engineering/assess/settings.js';
 import { compileContext } from '../engineering/assess/context.js';
 import { standardNote, standardRead } from '../engineering/period/choose.js';
@@ -14,6 +15,8 @@ const JUDGEMENT = 'judgement';
 /** What a run assumed, each with its value and source. */
 export function assumptionsOf(settings: AssessSettings, slopes: readonly SlopeFound[]): readonly Assumption[] {
   const { spreads, period, codeHistory } = settings;
+  const { ductility, irregularity, leastCoefficient, overstrength, retrofitLevel, peopleWeight, importanceWeight } =
+    assumedWith(settings.assumed);
   const read = standardRead(period.standard, period.basis);
   const list: Assumption[] = [
     {
@@ -108,6 +111,12 @@ export function assumptionsOf(settings: AssessSettings, slopes: readonly SlopeFo
       value: slopes.map(({ spectrum, k }) => `${k.toFixed(2)} for ${spectrum}`).join(', '),
       source: settings.slopeSource,
     },
+    {
+      id: 'spectrum-level',
+      statement: 'Ordinates of the spectra are taken as the study gives them, without an error of their own',
+      value: 'as stated',
+      source: 'study',
+    },
     ...spectrumAssumptions(settings),
     {
       id: 'code-history',
@@ -131,22 +140,28 @@ export function assumptionsOf(settings: AssessSettings, slopes: readonly SlopeFo
       source: JUDGEMENT,
     },
     {
+      id: 'retrofit-level',
+      statement: "Share of its year's code that a retrofit reached, where the row does not say",
+      value: String(retrofitLevel),
+      source: JUDGEMENT,
+    },
+    {
       id: 'reductions',
       statement: 'K, R_w and R of the editions by system',
       value: 'register capacity/systems',
       source: 'from memory of the editions',
     },
-    { id: 'floor', statement: 'Least strength coefficient', value: '0.04', source: JUDGEMENT },
+    { id: 'floor', statement: 'Least strength coefficient', value: String(leastCoefficient), source: JUDGEMENT },
     {
       id: 'overstrength',
       statement: 'Overstrength Ω, and σ of its logarithm',
-      value: `2.0; ${String(spreads.overstrength)}`,
+      value: `${overstrength.toFixed(1)}; ${String(spreads.overstrength)}`,
       source: JUDGEMENT,
     },
     {
       id: 'ductility',
       statement: 'Ductility by detailing class: none, before, after, special',
-      value: '1.5 or 2.0; 2.0; 3.0; 4.0',
+      value: `${ductility.brittle.toFixed(1)} or ${ductility.none.toFixed(1)}; ${ductility.before.toFixed(1)}; ${ductility.after.toFixed(1)}; ${ductility.special.toFixed(1)}`,
       source: JUDGEMENT,
     },
     {
@@ -164,7 +179,7 @@ export function assumptionsOf(settings: AssessSettings, slopes: readonly SlopeFo
     {
       id: 'irregularity',
       statement: 'Irregularities given as yes multiply capacity',
-      value: 'soft or weak storey 0.7, torsion 0.8, others 0.9 each; blank counts as none',
+      value: `soft or weak storey ${String(irregularity.storey)}, torsion ${String(irregularity.torsion)}, others ${String(irregularity.other)} each; blank counts as none`,
       source: JUDGEMENT,
     },
     {
@@ -181,6 +196,18 @@ export function assumptionsOf(settings: AssessSettings, slopes: readonly SlopeFo
       statement: 'People from floor area, density and hours of use; σ of ln E',
       value: `${String(spreads.peopleKnownUse)}, ${String(spreads.peopleUnknownUse)} with the use unknown, ${String(spreads.peopleCounted)} when counted`,
       source: 'densities from memory, hours and spreads judgement',
+    },
+    {
+      id: 'people-weight',
+      statement: 'Exponent of the people exposed in the priority',
+      value: String(peopleWeight),
+      source: 'judgement: annual rate of demand over capacity, times people',
+    },
+    {
+      id: 'importance',
+      statement: 'Exponent of the importance factor in the priority; the factor is 1 where the row has none',
+      value: String(importanceWeight),
+      source: 'policy of the study',
     },
     { id: 'rank-by', statement: 'What is ranked', value: settings.rankBy, source: 'study' },
   ];

@@ -3,6 +3,7 @@ import { BUILDING_NUMBERS, BUILDING_WORDS } from '../engineering/building-column
 import type { BuildingColumns } from '../engineering/building-columns.js';
 import { textInDisplay } from '../engineering/format.js';
 import type { Display } from '../engineering/format.js';
+import { settingsFromJson } from '../engineering/assess/settings.js';
 import type { AssessSettings } from '../engineering/assess/settings.js';
 import type { PageData } from '../engineering/page-contract.js';
 import { RESULT_COLUMNS } from '../engineering/results.js';
@@ -47,7 +48,7 @@ export async function readRun(db: Database, runId: number): Promise<StoredRun> {
   if (row === undefined) throw new UserError(`there is no run ${String(runId)}; swaymark runs lists them`);
   return {
     ...row,
-    settings: JSON.parse(row.settings) as AssessSettings,
+    settings: settingsFromJson(row.settings),
     summary: JSON.parse(row.summary) as StoredSummary,
   };
 }

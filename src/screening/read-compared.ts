@@ -1,5 +1,6 @@
 /** One run as a comparison needs it: its record, and its buildings by index. */
 import { compileContext } from '../engineering/assess/context.js';
+import { settingsFromJson } from '../engineering/assess/settings.js';
 import type { AssessSettings } from '../engineering/assess/settings.js';
 import type { Ladder, ScoreTerms } from '../engineering/priority/compare.js';
 import { UserError } from '../errors.js';
@@ -84,7 +85,7 @@ export async function readCompared({ db, runId }: RunOf): Promise<ComparedSide> 
   if (row === undefined)
     throw new UserError(`there is no run ${String(runId)}; swaymark runs lists them`, { file: db.file });
   const { inventory_id, study_fingerprint, methods_fingerprint, settings: text, seed, ...entry } = row;
-  const settings = JSON.parse(text) as AssessSettings;
+  const settings = settingsFromJson(text);
   const count = entry.buildings;
   const of = await db.columns(
     'SELECT building_index AS at, id, name, importance_factor AS importance FROM building WHERE inventory_id = ?',

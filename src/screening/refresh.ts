@@ -1,4 +1,5 @@
 /** A run from the inventory of an earlier one with other parameters: demand is read again, the inventory's file is not. */
+import { settingsFromJson } from '../engineering/assess/settings.js';
 import type { AssessSettings } from '../engineering/assess/settings.js';
 import { HAZARD_GRID } from '../engineering/spectrum/grid.js';
 import type { HazardGrids } from '../engineering/spectrum/grid.js';
@@ -37,7 +38,7 @@ export async function baseRun(db: Database, loaded: LoadedStudy, runId: number):
     [runId],
   );
   if (row === undefined) throw new UserError(`there is no run ${String(runId)}; swaymark runs lists them`);
-  const settings = JSON.parse(row.settings) as AssessSettings;
+  const settings = settingsFromJson(row.settings);
   let grids: Promise<HazardGrids> | undefined;
   return {
     runId,

@@ -1,5 +1,6 @@
 /** From the study file to the settings an assessment runs on. */
 import { resolve } from 'node:path';
+import { ASSUMED } from '../engineering/assess/assumed.js';
 import { SPREADS } from '../engineering/assess/settings.js';
 import type { AssessSettings, LevelSettings } from '../engineering/assess/settings.js';
 import { SPECTRUM_REGISTER } from '../engineering/spectrum/definition.js';
@@ -83,5 +84,6 @@ export async function settingsOf(
     slope: typeof study.ranking.k === 'number' ? study.ranking.k : ASSUMED_SLOPE,
     slopeSource: typeof study.ranking.k === 'number' ? 'stated' : 'assumed',
     spreads: SPREADS,
+    assumed: ASSUMED,
   };
 }

@@ -13,7 +13,13 @@ type Step = string | number;
 
 /** Findings across keys in the plain value of a study file. */
 export function crossCheck(study: unknown): Finding[] {
-  return [...checkSpectra(study), ...checkLevels(study), ...checkSlope(study), ...checkWords(study)];
+  return [
+    ...checkSpectra(study),
+    ...checkLevels(study),
+    ...checkSlope(study),
+    ...checkWords(study),
+    ...checkBudget(study),
+  ];
 }
 
 function checkSpectra(study: unknown): Finding[] {
@@ -193,6 +199,22 @@ function checkWords(study: unknown): Finding[] {
       return [{ path: ['words', kind, theirs], message, atKey: true }];
     });
   });
+}
+
+/** A building on both lists, or twice on one: someone has to decide. */
+function checkBudget(study: unknown): Finding[] {
+  const seen = new Map<string, string>();
+  return (['include', 'exclude'] as const).flatMap((name) =>
+    items(at(study, 'budget', name)).flatMap((entry, i) => {
+      const id = at(entry, 'id');
+      if (typeof id !== 'string') return [];
+      const before = seen.get(id);
+      seen.set(id, name);
+      if (before === undefined) return [];
+      const message = `${showValue(id)} stands in budget.${before} already; keep one of the two`;
+      return [{ path: ['budget', name, i, 'id'], message }];
+    }),
+  );
 }
 
 function isMapping(value: unknown): value is Readonly<Record<string, unknown>> {

@@ -5,6 +5,7 @@ import type { System } from '../engineering/building.js';
 import { BASES, PERIOD_STANDARDS } from '../engineering/period/choose.js';
 import { VS30_TABLES } from '../engineering/site/vs30.js';
 import { showValue } from '../errors.js';
+import { BudgetSchema } from './budget-schema.js';
 import { CodeHistorySchema } from './code-editions.js';
 import { expected, list, mapping, strict, text, whole, word } from './fields.js';
 import { InventorySchema, NeighboursSchema, WordsSchema } from './inventory-schema.js';
@@ -138,6 +139,7 @@ export const StudySchema = strict({
     .describe('Table of chances of the lateral system by use, storeys and year; needed where systems are unknown.'),
   ranking: RankingSchema.prefault({}).describe('What the list is ordered by, and how long it is.'),
   survey: SurveySchema.prefault({}).describe('What visits cost and find out, for planning a survey.'),
+  budget: BudgetSchema.exactOptional().describe('What assessments cost, and which must or must not be among them.'),
   seed: whole({ from: 0, to: 2 ** 32 - 1 })
     .default(1)
     .describe('Seed of every random draw.'),

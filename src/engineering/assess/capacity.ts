@@ -1,7 +1,7 @@
 /** Capacity of one case in one direction: assessed, from the drawings' coefficient, or from the code of its era. */
 import type { Building, DirectionName, System } from '../building.js';
 import { ASCE7_2002, UBC_1927, UBC_1949, UBC_1961, UBC_1976, UBC_1988, UBC_1997 } from '../capacity/editions.js';
-import { DUCTILITY_KEPT, OVERSTRENGTH, OVERSTRENGTH_KEPT, STRENGTH, WORKING_TO_STRENGTH } from '../capacity/records.js';
+import { DUCTILITY_KEPT, OVERSTRENGTH_KEPT, WORKING_TO_STRENGTH } from '../capacity/records.js';
 import { SYSTEM_FACTORS } from '../capacity/systems.js';
 import { apply, applyAny } from '../formula.js';
 import type { AnyRecord } from '../formula.js';
@@ -9,6 +9,7 @@ import { UBC_1961_MOMENT_FRAME, UBC_1961_OTHER } from '../period/past-records.js
 import { ASCE7_22_PERIODS } from '../period/asce7.js';
 import { UBC_HEIGHT_PERIODS } from '../period/ubc.js';
 import type { Trace } from '../trace.js';
+import type { IrregularityFactors } from './assumed.js';
 import { EDITION_YEARS, detailingOf, ductilityOf } from './code-history.js';
 import type { EditionId } from './code-history.js';
 import { ln } from '../numeric/elementary.js';
@@ -195,7 +196,7 @@ function againAtHeight(
     isDuctile,
     context,
   );
-  const strength_coefficient = apply(STRENGTH, {
+  const strength_coefficient = apply(context.strength, {
     design_base_shear_coefficient: coefficient,
     level_factor: levelFactor,
     retrofit_level: which.retrofit_level,
@@ -249,7 +250,7 @@ export function capacityAtHeight(
   const system = direction === 'longitudinal' ? which.system : which.system_transverse;
   const history = context.settings.codeHistory;
   const detailing = history === null ? 'none' : detailingOf(system, which.edition, history);
-  const ductility = ductilityOf(system, detailing);
+  const ductility = ductilityOf(system, detailing, context.assumed.ductility);
   trace?.choice({
     question: 'Detailing and ductility',
     taken: `μ = ${String(ductility)}`,
@@ -287,7 +288,7 @@ export function capacityAtHeight(
     };
   }
   const strength_coefficient = apply(
-    STRENGTH,
+    context.strength,
     {
       design_base_shear_coefficient: design.coefficient,
       level_factor: design.levelFactor,
@@ -295,15 +296,16 @@ export function capacityAtHeight(
     },
     trace,
   );
+  const { overstrength: assumedOverstrength } = context.assumed;
   if (!Number.isFinite(design.reduction))
     return {
       strength_coefficient,
-      overstrength: OVERSTRENGTH,
+      overstrength: assumedOverstrength,
       ductility,
-      lnStrength: ln(strength_coefficient * OVERSTRENGTH),
+      lnStrength: ln(strength_coefficient * assumedOverstrength),
     };
   const bounds = { code_reduction: design.reduction, level_factor: design.levelFactor };
-  const overstrength = apply(OVERSTRENGTH_KEPT, { overstrength: OVERSTRENGTH, ...bounds }, trace);
+  const overstrength = apply(OVERSTRENGTH_KEPT, { overstrength: assumedOverstrength, ...bounds }, trace);
   return {
     strength_coefficient,
     overstrength,
@@ -317,12 +319,12 @@ export function massShare(building: Building): number {
   return building.storeys.value > 2 ? 0.85 : 1;
 }
 
-/** Product of the irregularity factors of the flags given as "yes" [judgement]: soft or weak storey 0.7, torsion 0.8, others 0.9 each. */
-export function irregularityFactor(building: Building): number {
+/** Product of the irregularity factors of the flags given as "yes". */
+export function irregularityFactor(building: Building, { storey, torsion, other }: IrregularityFactors): number {
   let factor = 1;
-  if (building.soft_storey === 'yes' || building.weak_storey === 'yes') factor *= 0.7;
-  if (building.torsion === 'yes') factor *= 0.8;
+  if (building.soft_storey === 'yes' || building.weak_storey === 'yes') factor *= storey;
+  if (building.torsion === 'yes') factor *= torsion;
   for (const flag of [building.reentrant_corner, building.setback, building.mass_irregularity])
-    if (flag === 'yes') factor *= 0.9;
+    if (flag === 'yes') factor *= other;
   return factor;
 }

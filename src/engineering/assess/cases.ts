@@ -8,8 +8,6 @@ import { eraChances } from './code-history.js';
 import type { EditionId } from './code-history.js';
 import type { AssessContext } from './context.js';
 
-const DEFAULT_RETROFIT_LEVEL = 0.75;
-
 /** Lists the cases of `building`, or says why there are none. The same answer is kept for buildings alike in all it depends on. */
 export function casesOf(building: Building, context: AssessContext): Cases | string {
   const { years, system } = building;
@@ -60,7 +58,11 @@ function listCases(building: Building, context: AssessContext): Cases | string {
   const built = building.years;
   const strengthened = retrofit > 0 && (built.length === 0 || retrofit >= Math.min(...built));
   const years = strengthened ? [retrofit] : built;
-  const level = strengthened ? (building.retrofit_level > 0 ? building.retrofit_level : DEFAULT_RETROFIT_LEVEL) : 1;
+  const level = strengthened
+    ? building.retrofit_level > 0
+      ? building.retrofit_level
+      : context.assumed.retrofitLevel
+    : 1;
   const known = building.system;
   /** Chance by system, then by edition. */
   const found = new Map<System, Map<EditionId | null, number>>();

@@ -1,6 +1,8 @@
 /** The code history of a place as intervals of the year of construction, and the chance of each edition for a building. */
 import type { System } from '../building.js';
 import { SYSTEM_FACTORS } from '../capacity/systems.js';
+import { ASSUMED } from './assumed.js';
+import type { Ductilities } from './assumed.js';
 import type { CodeHistorySettings, EditionInputs } from './settings.js';
 
 export type EditionId = keyof EditionInputs;
@@ -70,17 +72,12 @@ export function detailingOf(system: System, edition: EditionId | null, history: 
 }
 
 /** Displacement ductility of a detailing class [judgement]. */
-export function ductilityOf(system: System, detailing: Detailing): number {
+export function ductilityOf(
+  system: System,
+  detailing: Detailing,
+  ductilities: Ductilities = ASSUMED.ductility,
+): number {
   const factors = SYSTEM_FACTORS[system];
-  if (factors.detailingFrom === null) return 1.5;
-  switch (detailing) {
-    case 'none':
-      return factors.brittle ? 1.5 : 2;
-    case 'before':
-      return 2;
-    case 'after':
-      return 3;
-    case 'special':
-      return 4;
-  }
+  if (factors.detailingFrom === null || (detailing === 'none' && factors.brittle)) return ductilities.brittle;
+  return ductilities[detailing];
 }

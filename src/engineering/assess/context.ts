@@ -1,5 +1,6 @@
 /** The study's settings made ready for a pass over the buildings. */
 import { ln } from '../numeric/elementary.js';
+import { STRENGTH } from '../capacity/records.js';
 import type { AnyRecord, Inputs } from '../formula.js';
 import { candidates, periodFormula } from '../period/choose.js';
 import { priorClasses } from '../prior/system-prior.js';
@@ -7,8 +8,10 @@ import type { PriorClasses } from '../prior/system-prior.js';
 import type { System } from '../building.js';
 import { SYSTEMS } from '../building.js';
 import type { CompiledSpectrum } from '../spectrum/compiled.js';
-import { ordinate } from '../spectrum/compiled.js';
+import { ordinate, scaled } from '../spectrum/compiled.js';
 import { compileSpectrum } from '../spectrum/definition.js';
+import { assumedWith } from './assumed.js';
+import type { Assumed } from './assumed.js';
 import { HAZARD_GRID } from '../spectrum/grid.js';
 import type { HazardGrid, HazardGrids } from '../spectrum/grid.js';
 import type { SiteTable, TableInterpolation } from '../spectrum/grid-table.js';
@@ -42,6 +45,8 @@ export interface GridSource {
   readonly interpolation: TableInterpolation;
   readonly return_period_years: number | null;
   readonly holdPlateau: boolean;
+  /** On every ordinate: 1, but for a switch of the sensitivity. */
+  readonly factor: number;
 }
 
 /** A formula that the study may read. */
@@ -53,6 +58,9 @@ export interface Candidate {
 
 export interface AssessContext {
   readonly settings: AssessSettings;
+  readonly assumed: Assumed;
+  /** Strength coefficient with the least one of these settings. */
+  readonly strength: typeof STRENGTH;
   /** Spectra that are the same wherever a building stands, by name. */
   readonly spectra: Readonly<Record<string, ContextSpectrum>>;
   /** Those that are a grid, by name: `siteSpectrum` makes one of them a building's. */
@@ -84,6 +92,7 @@ const NO_GRIDS: HazardGrids = new Map();
  * @throws RangeError for spectrum parameters out of range.
  */
 export function compileContext(settings: AssessSettings, grids: HazardGrids = NO_GRIDS): AssessContext {
+  const assumed = assumedWith(settings.assumed);
   const spectra: Record<string, ContextSpectrum> = {};
   for (const [name, { return_period_years, ...definition }] of Object.entries(settings.spectra)) {
     if (definition.code === HAZARD_GRID) continue;
@@ -91,6 +100,7 @@ export function compileContext(settings: AssessSettings, grids: HazardGrids = NO
     spectra[name] = {
       name,
       ...reading,
+      compiled: scaled(reading.compiled, assumed.spectrumFactor[name] ?? 1),
       return_period_years: return_period_years ?? null,
       hold_from_s: settings.holdPlateau ? reading.compiled.plateau_from_s : 0,
       corner_s: reading.compiled.plateau_to_s,
@@ -104,6 +114,11 @@ export function compileContext(settings: AssessSettings, grids: HazardGrids = NO
   >;
   return {
     settings,
+    assumed,
+    strength:
+      assumed.leastCoefficient === STRENGTH.constants.floor_g
+        ? STRENGTH
+        : { ...STRENGTH, constants: { floor_g: assumed.leastCoefficient } },
     spectra,
     grids: gridSources(settings, grids),
     formulas,
@@ -131,6 +146,7 @@ function candidatesOf(system: System, { period }: AssessSettings): readonly Cand
 }
 
 function gridSources(settings: AssessSettings, grids: HazardGrids): ReadonlyMap<string, GridSource> {
+  const { spectrumFactor } = assumedWith(settings.assumed);
   const sources = new Map<string, GridSource>();
   for (const [name, entry] of Object.entries(settings.spectra)) {
     const grid = entry.code === HAZARD_GRID ? grids.get(String(entry['grid'])) : undefined;
@@ -141,6 +157,7 @@ function gridSources(settings: AssessSettings, grids: HazardGrids): ReadonlyMap<
       interpolation: entry['interpolation'] === 'log-log' ? 'log-log' : 'linear',
       return_period_years: entry.return_period_years ?? null,
       holdPlateau: settings.holdPlateau,
+      factor: spectrumFactor[name] ?? 1,
     });
   }
   return sources;

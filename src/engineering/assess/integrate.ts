@@ -62,7 +62,8 @@ export function integrate(
       spreads.era * spreads.era +
       // a coefficient read in the drawings does not rest on the era table
       (building.design_base_shear_coefficient > 0 ? 0 : spreads.eraTable * spreads.eraTable);
-  const sd = demandOnly ? 0 : Math.sqrt(slope_k * slope_k * strengthVariance + people.sigma * people.sigma);
+  const peopleSigma = context.assumed.peopleWeight * people.sigma;
+  const sd = demandOnly ? 0 : Math.sqrt(slope_k * slope_k * strengthVariance + peopleSigma * peopleSigma);
   const offset = demandOnly ? 0 : constantTerm(building, people, spectrum, context);
   const levels = drawingsLevels(building);
   const lnFixed = ln(massFactor(building, context));
@@ -147,10 +148,12 @@ function capacityOf(
     : capacityAtHeight(building, which, direction, height_m, level, context);
 }
 
-/** ln E + ln I + zone term. */
+/** ln E + ln I, each times its weight (1), + zone term. */
 function constantTerm(building: Building, people: People, spectrum: ContextSpectrum, context: AssessContext): number {
   const zone = context.zoneTerms[spectrum.name] ?? 0;
-  return zone + (context.settings.rankBy === 'people' ? ln(people.people_exposed) + ln(importanceOf(building)) : 0);
+  if (context.settings.rankBy !== 'people') return zone;
+  const { peopleWeight, importanceWeight } = context.assumed;
+  return zone + (peopleWeight * ln(people.people_exposed) + importanceWeight * ln(importanceOf(building)));
 }
 
 function modelsOf(building: Building, which: Case, context: AssessContext): SystemModels | null {

@@ -9,6 +9,7 @@ import { LOG_SCORE } from '../priority/records.js';
 import { siteCloseness } from '../site/closeness.js';
 import { cite } from '../source.js';
 import { flagWords } from '../spectrum/flags.js';
+import { power } from '../numeric/power.js';
 import type { Trace } from '../trace.js';
 import { directionsAlike, drawingsLevels, importanceOf } from './terms.js';
 import { capacityAtHeight, irregularityFactor, keptCapacity, massShare } from './capacity.js';
@@ -203,12 +204,17 @@ function capacityOf(
         strength_coefficient: at.strength_coefficient,
         overstrength: at.overstrength,
         reduction,
-        irregularity: irregularityFactor(building),
+        irregularity: irregularityFactor(building, context.assumed.irregularity),
         mass_share: massShare(building),
       },
       trace,
     ) * context.capacityFactor
   );
+}
+
+/** A factor of the priority with its weight as exponent. */
+function weighed(factor: number, weight: number): number {
+  return weight === 1 ? factor : power(factor, weight);
 }
 
 /** ln S at a demand and a capacity. */
@@ -222,6 +228,7 @@ export function scoreOf(
   trace?: Trace,
 ): number {
   const { rankBy } = context.settings;
+  const { peopleWeight, importanceWeight } = context.assumed;
   if (rankBy === 'demand') {
     trace?.value('ln_priority', ln(sa_g), 'computed', 'ranked by demand alone: ln S is ln S_a');
     return ln(sa_g);
@@ -242,8 +249,8 @@ export function scoreOf(
       slope_k,
       sa_g,
       capacity_sa_g: capacity_g,
-      people_exposed: typeof people === 'string' ? 1 : people.people_exposed,
-      importance_factor: rankBy === 'people' ? importanceOf(building) : 1,
+      people_exposed: typeof people === 'string' ? 1 : weighed(people.people_exposed, peopleWeight),
+      importance_factor: rankBy === 'people' ? weighed(importanceOf(building), importanceWeight) : 1,
       zone_term,
     },
     trace,

@@ -2,7 +2,6 @@
 import type { Building } from '../building.js';
 import { apply } from '../formula.js';
 import { PEOPLE_AT_PEAK, PEOPLE_EXPOSED } from '../priority/records.js';
-import { USE_VALUES } from '../prior/use.js';
 import type { Trace } from '../trace.js';
 import type { AssessContext } from './context.js';
 
@@ -15,7 +14,7 @@ export interface People {
 /** Counted people where the row gives them, else floor area times the density of the use; hours from the row or the use. */
 export function peopleOf(building: Building, context: AssessContext, trace?: Trace): People | string {
   const { spreads } = context.settings;
-  const values = USE_VALUES[building.use];
+  const values = context.assumed.uses[building.use];
   const counted = building.occupants_peak >= 0;
   const area = building.floor_area_m2;
   if (!counted && !(area.value > 0)) return 'neither people nor floor area is known';

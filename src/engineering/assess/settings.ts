@@ -4,6 +4,8 @@ import type { Basis, PeriodStandard } from '../period/choose.js';
 import type { SystemPriorGroup } from '../prior/system-prior.js';
 import type { VelocityCode } from '../site/vs30.js';
 import type { SpectrumDefinition } from '../spectrum/definition.js';
+import { assumedWith } from './assumed.js';
+import type { Assumed } from './assumed.js';
 
 export const RANK_BY = ['people', 'ratio', 'demand'] as const;
 export type RankBy = (typeof RANK_BY)[number];
@@ -105,4 +107,12 @@ export interface AssessSettings {
   readonly slope: number | Readonly<Record<string, number>>;
   readonly slopeSource: 'two levels' | 'stated' | 'assumed';
   readonly spreads: Spreads;
+  /** Left out in runs made before these were settings: the defaults then. */
+  readonly assumed?: Assumed | undefined;
+}
+
+/** The settings kept with a run, with what its version did not write yet. */
+export function settingsFromJson(text: string): AssessSettings {
+  const stored = JSON.parse(text) as AssessSettings;
+  return { ...stored, assumed: assumedWith(stored.assumed) };
 }

@@ -72,6 +72,7 @@ export function siteSpectrum(source: GridSource, lon: number, lat: number): Site
   if (Number.isNaN(lon) || Number.isNaN(lat)) return noPlaceReason(source.name);
   const sa_g = new Float64Array(source.grid.periods_s.length);
   if (!readGrid(source.grid, lon, lat, sa_g)) return outsideReason(source.name);
+  if (source.factor !== 1) for (let i = 0; i < sa_g.length; i += 1) sa_g[i]! *= source.factor;
   return new SiteSpectrum(source, lon, lat, sa_g);
 }
 

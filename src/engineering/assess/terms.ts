@@ -13,7 +13,7 @@ export function importanceOf(building: Building): number {
 
 /** Irregularities and mass share: what multiplies strength, overstrength and ductility alike in every case. */
 export function massFactor(building: Building, context: AssessContext): number {
-  return (irregularityFactor(building) * context.capacityFactor) / massShare(building);
+  return (irregularityFactor(building, context.assumed.irregularity) * context.capacityFactor) / massShare(building);
 }
 
 type Levels = readonly { readonly level: number | null; readonly chance: number }[];

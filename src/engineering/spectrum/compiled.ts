@@ -71,6 +71,16 @@ export function ordinate(spectrum: CompiledSpectrum, period_s: number): number {
   return segment.over === undefined ? top : top / sum(segment.over, period_s);
 }
 
+/** The spectrum with every ordinate times `factor`: same corners, same branches. */
+export function scaled(spectrum: CompiledSpectrum, factor: number): CompiledSpectrum {
+  if (factor === 1) return spectrum;
+  const segments = spectrum.segments.map((segment) => ({
+    ...segment,
+    terms: segment.terms.map(({ coefficient, exponent }) => ({ coefficient: coefficient * factor, exponent })),
+  }));
+  return { ...spectrum, segments };
+}
+
 /** Spectral displacement (m): S_d = S_a g (T/2π)². */
 export function displacement_m(spectrum: CompiledSpectrum, period_s: number): number {
   const t = period_s / (2 * Math.PI);

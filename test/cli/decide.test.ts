@@ -1,0 +1,87 @@
+import { existsSync, readFileSync, writeFileSync } from 'node:fs';
+import { join } from 'node:path';
+import { afterAll, beforeAll, describe, expect, it } from 'vitest';
+import { SMALL_STUDY, buildCommand, scratch, swaymark, writeSmallStudy } from '../support/cli.js';
+
+const small = scratch();
+const study = join(small.folder, 'study.yaml');
+const run = (...args: string[]): ReturnType<typeof swaymark> => swaymark(args, { cwd: small.folder });
+
+beforeAll(() => {
+  buildCommand();
+  writeSmallStudy(small.folder);
+  expect(run('screen', 'study.yaml').code).toBe(0);
+}, 120_000);
+afterAll(() => {
+  small.remove();
+});
+
+function expectPlain(out: string): void {
+  for (const line of out.split('\n')) expect(line.length, line).toBeLessThanOrEqual(80);
+  // a name with escapes and a character that reverses the reading order stays harmless
+  expect(out).not.toContain('\u001b');
+  expect(out).not.toContain('\u202e');
+}
+
+describe('budget', () => {
+  it('shows the choice within 80 columns, with musts, reasons and the written table', () => {
+    const section =
+      'budget:\n  currency: crowns\n  include: [{id: A3, reason: "asked \u202efor", author: the owner}]\n  batches: {mobilisation: 500, least_chance: 0}\n';
+    writeFileSync(study, `${SMALL_STUDY}${section}`);
+    const { code, out, err } = run('budget', '--money', '25000', '--csv', 'plan.csv');
+    expect([code, err]).toEqual([0, '']);
+    expectPlain(out);
+    expect(out).toMatch(/^\d assessments out of run 1 for [\d\u202f ]+ crowns; of/u);
+    expect(out).toMatch(/in: A3 .*, rank \d, .*: asked for \(the owner\)/s);
+    expect(out).toContain('Written: plan.csv');
+    expect(readFileSync(join(small.folder, 'plan.csv'), 'utf8')).toContain('must include');
+    const plan = JSON.parse(run('budget', '--money', '25000', '--json').out) as {
+      spent: number;
+      bound: number;
+      value: number;
+    };
+    expect(plan.spent).toBeLessThanOrEqual(25_000);
+    expect(plan.bound).toBeGreaterThanOrEqual(plan.value);
+    writeFileSync(study, SMALL_STUDY);
+  });
+
+  it('ends with 1 where the money buys nothing and with 2 where something is to be mended', () => {
+    const nothing = run('budget', '--money', '10');
+    expect([nothing.code, nothing.err]).toEqual([1, '']);
+    expect(nothing.out).toContain('buys no assessment out of run 1: the cheapest assessment that counts costs');
+    expectPlain(nothing.out);
+    for (const money of ['0', '-5', '180,000', 'much', '1e300', ''])
+      expect(run('budget', '--money', money), money).toMatchObject({ code: 2, out: '' });
+    expect(run('budget').err).toContain('--money');
+    writeFileSync(study, `${SMALL_STUDY}budget: {include: [{id: A9, reason: x}]}\n`);
+    const unknown = run('budget', '--money', '9000');
+    expect(unknown.code).toBe(2);
+    expect(unknown.err).toMatch(/^study\.yaml:\d+:\d+ budget\.include\.1\.id: run 1 has no building "A9"/);
+    writeFileSync(study, SMALL_STUDY);
+  });
+});
+
+describe('sensitivity', () => {
+  it('shows every switch within 80 columns, the uniform chances among them, and keeps nothing', () => {
+    const { code, out, err } = run('sensitivity', '--csv', 'switches.csv');
+    expect([code, err]).toEqual([0, '']);
+    expectPlain(out);
+    expect(out).toMatch(/^system-prior +none .*uniform: all alike +study +2 of 2 +1\.000$/m);
+    expect(out).toMatch(/On the list whatever is switched|On the list, and in how many/);
+    expect(out).toMatch(/^ {2}cracking: a constant/m);
+    expect(existsSync(join(small.folder, 'switches.csv'))).toBe(true);
+    expect(JSON.parse(run('runs', '--json').out)).toHaveLength(1);
+  });
+
+  it('takes some by their ids, in JSON too, and refuses others', () => {
+    const { code, out } = run('sensitivity', '--only', 'floor, rank-by', '--json');
+    expect(code).toBe(0);
+    const { switches } = JSON.parse(out) as { switches: { assumption: string }[] };
+    expect([...new Set(switches.map(({ assumption }) => assumption))].sort()).toEqual(['floor', 'rank-by']);
+    const wrong = run('sensitivity', '--only', 'flor');
+    expect([wrong.code, wrong.out]).toEqual([2, '']);
+    expect(wrong.err).toContain('--only: no assumption is called "flor"; those switched are ');
+    expect(run('sensitivity', '--only', 'floor,').code).toBe(2);
+    expect(run('sensitivity', '--sample', '0').code).toBe(2);
+  });
+});
