@@ -28,6 +28,9 @@ export type { Parameter, ParameterRange } from './study/parameters.js';
 export type { ListChange, ListMove } from './screening/list-changes.js';
 export type { SweptValue } from './screening/sweep.js';
 
+export { surveyStudy } from './exports/survey-study.js';
+export type { PlannedSurvey, SurveyChoice } from './exports/survey-study.js';
+export type { SurveyPlan, SurveyStep } from './screening/survey.js';
 export { budgetStudy } from './exports/budget-study.js';
 export type { BudgetStudyOptions } from './exports/budget-study.js';
 export type { BudgetBatch, BudgetBuilding, BudgetOverride, BudgetPlan } from './screening/budget-plan.js';

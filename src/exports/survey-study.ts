@@ -9,7 +9,7 @@ import { chosenRun, withStudyDatabase } from '../runs/open.js';
 import type { Report } from '../screening/assess-inventory.js';
 import { visitsOf } from '../screening/survey-outlook.js';
 import { planSurvey } from '../screening/survey.js';
-import type { SurveyPlan, SurveyStep } from '../screening/survey.js';
+import type { SurveyPlan } from '../screening/survey.js';
 import { loadStudyAlone } from '../study/load.js';
 import { csvText } from './csv-text.js';
 import { writeNamed } from './write-named.js';
@@ -102,5 +102,3 @@ export function fieldSheet({ steps }: SurveyPlan): string {
   });
   return csvText([...HEAD, ...ANSWER_COLUMNS, ...TAIL], rows);
 }
-
-export type { SurveyPlan, SurveyStep };

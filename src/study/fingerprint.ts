@@ -13,7 +13,10 @@ export function canonicalJson(value: unknown): string {
   });
 }
 
-/** First 16 hexadecimal digits of the SHA-256 of a study with its defaults filled in: the same whatever the order of keys, comments, layout the folder of the reports and the budget, which no run depends on. */
-export function studyFingerprint({ output: _output, budget: _budget, ...study }: Study): string {
+/**
+ * First 16 hexadecimal digits of the SHA-256 of a study with its defaults filled in: the same whatever the order of keys, comments, layout, the folder
+ * of the reports, the budget and the visits of a survey, which no ranking depends on.
+ */
+export function studyFingerprint({ output: _output, budget: _budget, survey: _survey, ...study }: Study): string {
   return createHash('sha256').update(canonicalJson(study), 'utf8').digest('hex').slice(0, 16);
 }
