@@ -31,6 +31,8 @@ export type { SweptValue } from './screening/sweep.js';
 export { surveyStudy } from './exports/survey-study.js';
 export type { PlannedSurvey, SurveyChoice } from './exports/survey-study.js';
 export type { SurveyPlan, SurveyStep } from './screening/survey.js';
+export { takeAnswers } from './exports/take-answers.js';
+export type { TakenAnswers } from './exports/take-answers.js';
 export { budgetStudy } from './exports/budget-study.js';
 export type { BudgetStudyOptions } from './exports/budget-study.js';
 export type { BudgetBatch, BudgetBuilding, BudgetOverride, BudgetPlan } from './screening/budget-plan.js';

@@ -132,7 +132,8 @@ async function readDistinct(db: Database, mapped: MappedColumn, source: string, 
   return { found: true, codes: new Set(notes.flatMap((note) => note?.code ?? [])) };
 }
 
-function vocabularyOf(study: IntakeStudy, vocabulary: string | undefined): ReadonlyMap<string, string> {
+/** The study's own words of a vocabulary, folded, and ours. */
+export function vocabularyOf(study: IntakeStudy, vocabulary: string | undefined): ReadonlyMap<string, string> {
   const words = vocabulary === undefined ? undefined : study.words[vocabulary];
   return new Map(Object.entries(words ?? {}).map(([theirs, ours]) => [foldWord(theirs), ours]));
 }

@@ -5,6 +5,8 @@ import type { Database } from '../store/database.js';
 import { canonicalJson } from '../study/fingerprint.js';
 import { readAccount, storeAccount } from './account.js';
 import type { RowAccount } from './account.js';
+import { answersFingerprint, currentAnswers, layAnswers } from './answers.js';
+import type { Answer } from './answers.js';
 import { countAttributes } from './attributes.js';
 import type { Attributes } from './attributes.js';
 import { makeBuildings } from './buildings.js';
@@ -61,7 +63,8 @@ export async function takeIn(
   const path = at(folder, study.inventory.file);
   const source = inspectSource(path, study.inventory.encoding);
   const pairs = study.neighbours === undefined ? undefined : inspectNeighbours(at(folder, study.neighbours.file));
-  const inventoryId = fingerprint(source, pairs, study);
+  const answers = await currentAnswers(db);
+  const inventoryId = fingerprint(source, pairs, study, answers);
   if ((await db.value('SELECT count(*) FROM inventory WHERE inventory_id = ?', [inventoryId])) === 1)
     return readTaken(db, inventoryId);
 
@@ -69,7 +72,7 @@ export async function takeIn(
   const table = openTable(db, source, study.inventory.delimiter);
   try {
     const mapping = mapHeader(table.header, { ...study.inventory, file: path });
-    return await takeTable(db, study, { source, pairs, table, mapping, inventoryId }, progress, begin);
+    return await takeTable(db, study, { source, pairs, table, mapping, inventoryId, answers }, progress, begin);
   } finally {
     table.remove();
     await dropScratch(db);
@@ -82,6 +85,7 @@ interface Parts {
   readonly table: Table;
   readonly mapping: Mapping;
   readonly inventoryId: string;
+  readonly answers: readonly Answer[];
 }
 
 async function takeTable(
@@ -91,13 +95,14 @@ async function takeTable(
   progress: (step: IntakeStep) => void,
   begin: () => Promise<void>,
 ): Promise<TakenIn> {
-  const { source, pairs, table, mapping, inventoryId } = parts;
+  const { source, pairs, table, inventoryId, answers } = parts;
   if (table.written + table.rejects.length === 0) {
     const message = `the table has a header (${table.header.length} columns) and no rows; add a row for each building below it`;
     throw new UserError(message, { file: source.path });
   }
   await startFindings(db);
-  await readCells(db, table, mapping, study.inventory);
+  await readCells(db, table, parts.mapping, study.inventory);
+  const mapping = await layAnswers(db, parts.mapping, study, answers);
   await noteTable(db, table);
 
   progress('casting');
@@ -155,7 +160,13 @@ function at(folder: string, path: string): string {
   return isAbsolute(path) ? path : join(folder, path);
 }
 
-function fingerprint(source: Source, pairs: Source | undefined, study: IntakeStudy): string {
+function fingerprint(
+  source: Source,
+  pairs: Source | undefined,
+  study: IntakeStudy,
+  answers: readonly Answer[],
+): string {
+  const found = answersFingerprint(answers);
   const {
     file: _file,
     rejects_limit: _limit,
@@ -166,6 +177,7 @@ function fingerprint(source: Source, pairs: Source | undefined, study: IntakeStu
     reading,
     words: study.words,
     pairs: pairs?.hash.copy().digest('hex') ?? null,
+    ...(found === null ? {} : { answers: found }),
   });
   return source.hash.copy().update(rest, 'utf8').digest('hex').slice(0, 16);
 }

@@ -114,6 +114,8 @@ export const MIGRATIONS: readonly Migration[] = [
       'CREATE TABLE hazard_grid (grid_number INTEGER PRIMARY KEY, grid_id VARCHAR NOT NULL, axes VARCHAR NOT NULL)',
       'CREATE TABLE hazard_ordinate (grid_number INTEGER NOT NULL, place INTEGER NOT NULL, period INTEGER NOT NULL, sa_g DOUBLE NOT NULL)',
       'CREATE TABLE run_grid (run_id INTEGER NOT NULL, grid_number INTEGER NOT NULL)',
+      // What surveys have found out, cell by cell as it was written down; of two answers to one question the later counts.
+      'CREATE TABLE survey_answer (answer INTEGER NOT NULL, id VARCHAR NOT NULL, column_name VARCHAR NOT NULL, cell VARCHAR NOT NULL, visit VARCHAR, surveyor VARCHAR, surveyed_on VARCHAR, remark VARCHAR, taken VARCHAR NOT NULL)',
     ],
   },
 ];

@@ -37,8 +37,16 @@ export function addDecisionCommands(program: Command, keep: Keep): void {
     .option('--csv <file>', 'the plan as a sheet to fill in')
     .option('--output <folder>', 'folder of the page (default: that of the reports)')
     .option('--no-page', 'write no page')
+    .option('--take <file>', 'bring the answers of a filled-in sheet back into the study')
     .addOption(json())
-    .addHelpText('after', examples('swaymark survey --hours 16', 'swaymark survey --hours 40 --csv field.csv'))
+    .addHelpText(
+      'after',
+      examples(
+        'swaymark survey --hours 16',
+        'swaymark survey --hours 40 --csv field.csv',
+        'swaymark survey --take field.csv',
+      ),
+    )
     .action(async (options: SurveyCommandOptions) => {
       keep(await (await import('../commands/survey.js')).survey(options));
     });

@@ -1,0 +1,169 @@
+import { readFileSync, writeFileSync } from 'node:fs';
+import { dirname, join } from 'node:path';
+import { describe, expect, it } from 'vitest';
+import { takeAnswers } from '../../src/exports/take-answers.js';
+import { fieldSheet } from '../../src/exports/survey-study.js';
+import { openStudyDatabase, screen } from '../../src/screening/screen.js';
+import { planSurvey } from '../../src/screening/survey.js';
+import { visitsOf } from '../../src/screening/survey-outlook.js';
+import { loadStudy } from '../../src/study/load.js';
+import { MADE, demoCopy } from '../support/study-folder.js';
+
+type Row = Record<string, string | number | null>;
+
+/** Screens the study at `path` and gives the buildings asked for as they are kept. */
+async function screened(
+  path: string,
+  ids: readonly string[],
+): Promise<{ readonly rows: Row[]; readonly inventory: string }> {
+  const loaded = await loadStudy(path);
+  const db = await openStudyDatabase(loaded);
+  try {
+    const { taken } = await screen(db, loaded, { made: MADE });
+    const rows = await db.rows<Row>(
+      `SELECT id, CAST(system AS VARCHAR) AS system, system_origin, storeys_above, storeys_above_origin, height_m, height_m_origin,
+         occupants_peak, year_built, findings FROM building WHERE inventory_id = ? AND id IN (${ids.map((id) => `'${id}'`).join(', ')}) ORDER BY id`,
+      [taken.inventoryId],
+    );
+    return { rows, inventory: taken.inventoryId };
+  } finally {
+    db.close();
+  }
+}
+
+/** The study of the demo over three rows of two lots, merged, with neither systems nor uses. */
+function small(): string {
+  return demoCopy({
+    inventory: () => 'lot,area,year\nL1,400,1950\nL1,600,1950\nL2,500,1960\n',
+    study: (text) =>
+      text
+        .replace(
+          /columns:\n(?: {4}.*\n)+/,
+          'columns:\n    id: lot\n    floor_area_m2: area\n    year_built: year\n  merge_rows_by: lot\n',
+        )
+        .replace(/^ {2}no_building:.*\n(?: {4}.*\n)*/m, '')
+        .replace(/^neighbours:.*\n(?: .*\n)*/m, '')
+        .replace(/list_size: \d+/, 'list_size: 1')
+        .replace(/^budget:\n(?: .*\n)*/m, ''),
+  });
+}
+
+function sheet(path: string, text: string): string {
+  const file = join(dirname(path), 'back.csv');
+  writeFileSync(file, text);
+  return file;
+}
+
+describe('takeAnswers', () => {
+  it(
+    'lays answers over the inventory from the next screening on, and leaves the file of the owner alone',
+    { timeout: 120_000 },
+    async () => {
+      const path = demoCopy();
+      const inventory = readFileSync(join(dirname(path), 'inventory.csv'), 'utf8');
+      const before = await screened(path, ['BH-006', 'BH-024']);
+      const file = sheet(
+        path,
+        '\ufeffid,system,height_m,storeys_above,occupants_peak,visit,surveyor,surveyed_on\r\nBH-006,concrete shear wall,–,?,,street,N. N.,2026-12-03\r\nBH-024,–,41 ft,3,12,street,N. N.,2026-12-03\r\n',
+      );
+      expect(await takeAnswers(path, file, MADE)).toEqual({
+        answers: 4,
+        buildings: 2,
+        columns: { system: 1, height_m: 1, storeys_above: 1, occupants_peak: 1 },
+      });
+      const after = await screened(path, ['BH-006', 'BH-024']);
+      expect(after.inventory).not.toBe(before.inventory);
+      expect(readFileSync(join(dirname(path), 'inventory.csv'), 'utf8')).toBe(inventory);
+      expect(before.rows[0]).toMatchObject({ id: 'BH-006', system_origin: 'unknown' });
+      expect(after.rows[0]).toMatchObject({ id: 'BH-006', system: 'concrete-shear-wall', system_origin: 'given' });
+      // 41 ft × 0.3048, by hand
+      expect(after.rows[1]).toMatchObject({
+        id: 'BH-024',
+        storeys_above: 3,
+        storeys_above_origin: 'given',
+        occupants_peak: 12,
+      });
+      expect(after.rows[1]?.['height_m']).toBeCloseTo(12.4968, 9);
+      expect(after.rows[1]?.['height_m_origin']).toBe('given');
+      // what was not asked stays as it was
+      expect(after.rows[0]?.['year_built']).toBe(before.rows[0]?.['year_built']);
+      expect(Number(after.rows[0]?.['findings'])).toBe(Number(before.rows[0]?.['findings']) + 1);
+      // the same answers again are the same inventory, a later one counts instead
+      await takeAnswers(path, sheet(path, 'id,occupants_peak\nBH-024,30\n'), MADE);
+      expect((await screened(path, ['BH-024'])).rows[0]).toMatchObject({ occupants_peak: 30, storeys_above: 3 });
+    },
+  );
+
+  it(
+    'answers columns that the inventory does not have, and buildings of several rows once',
+    { timeout: 120_000 },
+    async () => {
+      const path = small();
+      const before = await screened(path, ['L1']);
+      expect(before.rows[0]).toMatchObject({ system_origin: 'unknown', occupants_peak: null });
+      await takeAnswers(
+        path,
+        sheet(path, 'id,system,occupants_peak,storeys_above\nL1,timber-light-frame,25,4\n'),
+        MADE,
+      );
+      const after = await screened(path, ['L1', 'L2']);
+      // 25, not 25 for each of its two rows
+      expect(after.rows[0]).toMatchObject({
+        id: 'L1',
+        system: 'timber-light-frame',
+        occupants_peak: 25,
+        storeys_above: 4,
+      });
+      expect(after.rows[1]).toMatchObject({ id: 'L2', system_origin: 'unknown', occupants_peak: null });
+    },
+  );
+
+  it('says of every cell what is wrong, and takes nothing', { timeout: 60_000 }, async () => {
+    const path = small();
+    await screened(path, ['L1']);
+    const of = (text: string): Promise<unknown> => takeAnswers(path, sheet(path, text), MADE);
+    await expect(of('id,system,height_m\nL1,brickish,tall\n')).rejects.toMatchObject({
+      problems: [
+        {
+          place: { row: 2, columnName: 'system' },
+          message: expect.stringContaining('"brickish" is not a word of system') as string,
+        },
+        { place: { row: 2, columnName: 'height_m' }, message: expect.stringContaining('"tall"') as string },
+      ],
+    });
+    await expect(of('id,system\n,concrete-shear-wall\n')).rejects.toThrow('without the id');
+    await expect(of('id,system\nNOWHERE,concrete-shear-wall\n')).rejects.toThrow(
+      '"NOWHERE" is no building of the newest run',
+    );
+    await expect(of('id,colour\nL1,red\n')).rejects.toThrow('none of the columns that answer something');
+    await expect(of('name,system\nL1,x\n')).rejects.toThrow('no column id');
+    await expect(of('id,system\nL1,–\n')).rejects.toThrow('answers nothing');
+    const loaded = await loadStudy(path);
+    const db = await openStudyDatabase(loaded);
+    expect(await db.value('SELECT count(*) FROM survey_answer')).toBe(0);
+    db.close();
+  });
+
+  it('takes the sheet that a plan wrote, filled in', { timeout: 60_000 }, async () => {
+    const path = demoCopy();
+    const loaded = await loadStudy(path);
+    const db = await openStudyDatabase(loaded);
+    const { runId } = await screen(db, loaded, { made: MADE });
+    const plan = await planSurvey(db, runId, {
+      visits: visitsOf(loaded.study),
+      limits: { hours: 10, money: Infinity },
+      cost: 'hours',
+    });
+    db.close();
+    const [head = '', ...lines] = fieldSheet(plan).replace('\ufeff', '').trimEnd().split('\r\n');
+    const at = head.split(',').indexOf('system');
+    const asked = plan.steps.filter(({ asks }) => asks.includes('system')).length;
+    const filled = lines.map((line) => {
+      const cells = line.match(/(?:"(?:[^"]|"")*"|[^,]*)(?:,|$)/g)!.map((cell) => cell.replace(/,$/, ''));
+      if (cells[at] === '') cells[at] = 'steel-moment-frame';
+      return cells.slice(0, head.split(',').length).join(',');
+    });
+    const taken = await takeAnswers(path, sheet(path, `\ufeff${[head, ...filled].join('\r\n')}\r\n`), MADE);
+    expect(taken.columns).toEqual({ system: asked });
+  });
+});
