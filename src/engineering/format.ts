@@ -99,8 +99,22 @@ export function plainWords(code: string): string {
   return code.replaceAll('-', ' ');
 }
 
-/** An edition in words: "ubc-1976" -> "UBC 1976"; other words as they are. */
+const CODE_WORDS: Readonly<Record<string, string>> = {
+  ubc: 'UBC',
+  asce7: 'ASCE 7 of',
+  japan: 'Japanese code of',
+  nz: 'New Zealand code of',
+  italy: 'Italian code of',
+  greece: 'Greek code of',
+  turkey: 'Turkish code of',
+  india: 'Indian code of',
+  canada: 'Canadian code of',
+  own: "the study's own code, row",
+};
+
+/** An edition in words: "ubc-1976" -> "UBC 1976", "italy-1975" -> "Italian code of 1975"; other words as they are. */
 export function editionWords(code: string): string {
-  const found = /^(ubc|asce7)-(\d{4})$/.exec(code);
-  return found === null ? code : `${found[1] === 'ubc' ? 'UBC' : 'ASCE 7 of'} ${found[2] ?? ''}`;
+  const [, family = '', year = ''] = /^([a-z0-9]+)-(\d+)$/.exec(code) ?? [];
+  const words = CODE_WORDS[family];
+  return words === undefined ? code : `${words} ${year}`;
 }

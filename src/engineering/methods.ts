@@ -2,13 +2,21 @@
 import { EDITION_YEARS } from './assess/code-history.js';
 import { SPREADS } from './assess/settings.js';
 import { MIN_COEFFICIENT_G, OVERSTRENGTH, WORKING_TO_STRENGTH } from './capacity/records.js';
+import {
+  BRACE_YIELD_MPA,
+  CHECK_C,
+  CHECK_EDITIONS,
+  MASONRY_STRESS_MPA,
+  STRENGTH_RECORDS,
+} from './capacity/strength-records.js';
 import { SYSTEM_FACTORS } from './capacity/systems.js';
 import { STOREY_HEIGHTS } from './prior/storey-height.js';
 import { UNIT_WEIGHT_KN_PER_M2 } from './prior/unit-weight.js';
 import { USE_VALUES } from './prior/use.js';
 import { TYPE_1, TYPE_2 } from './spectrum/en1998.js';
 import { COMBINED_PERIOD, FLEXIBLE_BASE } from './assess/combine.js';
-import { EDITION_RECORDS } from './capacity/editions.js';
+import { CODE_RATIO } from './capacity/code-ratio.js';
+import { CODE_FAMILIES, ERA_RECORDS, SYSTEM_TABLES } from './capacity/families.js';
 import { CAPACITY_RECORDS } from './capacity/records.js';
 import { DEMAND_RECORDS } from './demand/records.js';
 import type { AnyRecord } from './formula.js';
@@ -44,8 +52,10 @@ export const METHODS: readonly AnyRecord[] = [
   ...SPECTRUM_FACTOR_RECORDS,
   ...GRID_RECORDS,
   ...DEMAND_RECORDS,
-  ...EDITION_RECORDS,
+  ...ERA_RECORDS,
   ...CAPACITY_RECORDS,
+  ...STRENGTH_RECORDS,
+  CODE_RATIO,
   ...PRIORITY_RECORDS,
 ];
 
@@ -69,6 +79,9 @@ const TABLES = {
   ...WORLD_TABLES,
   SYSTEM_FACTORS,
   EDITION_YEARS,
+  CODE_FAMILIES,
+  SYSTEM_TABLES,
+  checks: { CHECK_EDITIONS, CHECK_C, MASONRY_STRESS_MPA, BRACE_YIELD_MPA },
   UNIT_WEIGHT_KN_PER_M2,
   USE_VALUES,
   STOREY_HEIGHTS,

@@ -1,5 +1,6 @@
 /** The study file that `init` proposes for a table: what is known is filled in, what only its owner knows is a question. */
 import { basename } from 'node:path';
+import { FAMILY_IDS } from '../engineering/capacity/families.js';
 import { findColumn } from '../engineering/columns.js';
 import { BLANK } from '../study/inventory-schema.js';
 import { foldWord } from './cell.js';
@@ -56,6 +57,7 @@ export function proposeStudy(path: string): ProposedStudy {
     '',
     `code_history:  ${MARK} which editions did the place use, with which hazard inputs, enforced from when?`,
     '  place: ',
+    `  # families: ${FAMILY_IDS.join(', ')}`,
     '  family: us-ubc-asce7',
     '  seismic_design_enforced_from: ',
     '  editions: {}',

@@ -147,8 +147,8 @@ export function assumptionsOf(settings: AssessSettings, slopes: readonly SlopeFo
     },
     {
       id: 'reductions',
-      statement: 'K, R_w and R of the editions by system',
-      value: 'register capacity/systems',
+      statement: 'K, R_w, R, q and their like of the editions by system',
+      value: 'registers of engineering/capacity',
       source: 'from memory of the editions',
     },
     { id: 'floor', statement: 'Least strength coefficient', value: String(leastCoefficient), source: JUDGEMENT },
@@ -157,6 +157,12 @@ export function assumptionsOf(settings: AssessSettings, slopes: readonly SlopeFo
       statement: 'Overstrength Ω, and σ of its logarithm',
       value: `${overstrength.toFixed(1)}; ${String(spreads.overstrength)}`,
       source: JUDGEMENT,
+    },
+    {
+      id: 'strength-check',
+      statement: 'Capacity from areas of columns, walls or braces where a row has them, and σ of its logarithm',
+      value: `${settings.strengthCheck?.method ?? 'none'}; ${String(spreads.strengthCheck)}`,
+      source: 'study; factors from memory, spread judgement',
     },
     {
       id: 'ductility',

@@ -2,7 +2,8 @@
 import { resolve } from 'node:path';
 import { ASSUMED } from '../engineering/assess/assumed.js';
 import { SPREADS } from '../engineering/assess/settings.js';
-import type { AssessSettings, LevelSettings } from '../engineering/assess/settings.js';
+import type { AssessSettings, CodeHistorySettings, LevelSettings } from '../engineering/assess/settings.js';
+import { OWN_FAMILY_ID } from '../engineering/capacity/families.js';
 import { SPECTRUM_REGISTER } from '../engineering/spectrum/definition.js';
 import { findMethod } from '../engineering/methods.js';
 import { STIFFNESS_ROUTES } from '../engineering/stiffness/routes.js';
@@ -33,6 +34,22 @@ function eachByItsName({ hazard }: Study): Readonly<Record<string, string>> {
   );
 }
 
+function codeHistoryOf(history: Study['code_history']): CodeHistorySettings {
+  const { place, family, seismic_design_enforced_from, adoption_lag_years, detailing_from, weak_types } = history;
+  const common = {
+    place,
+    family,
+    seismic_design_enforced_from,
+    adoption_lag_years,
+    ...(detailing_from === undefined ? {} : { detailing_from }),
+    ...(weak_types === undefined ? {} : { weak_types }),
+  };
+  // the file of a table has been read with the study
+  return history.family === OWN_FAMILY_ID
+    ? { ...common, editions: {}, table: history.table ?? [] }
+    : { ...common, editions: history.editions };
+}
+
 /**
  * Settings of a loaded study; the slope is the stated one, or 2.5 until two levels have given it (slopes.ts).
  * `keptPrior` stands in for the table that system_prior names.
@@ -61,7 +78,6 @@ export async function settingsOf(
   }
   const prior =
     study.system_prior === undefined ? null : (keptPrior ?? (await loadPrior(resolve(folder, study.system_prior))));
-  const { place, seismic_design_enforced_from, adoption_lag_years, editions, detailing_from } = study.code_history;
   return {
     spectra: study.hazard.spectra,
     levels: study.hazard.levels.map((level) => levelOf(level, study)),
@@ -72,13 +88,8 @@ export async function settingsOf(
       formulaFor: study.period.formula_for,
       switchedOff: study.period.switched_off,
     },
-    codeHistory: {
-      place,
-      seismic_design_enforced_from,
-      adoption_lag_years,
-      editions,
-      ...(detailing_from === undefined ? {} : { detailing_from }),
-    },
+    codeHistory: codeHistoryOf(study.code_history),
+    strengthCheck: { method: study.strength_check.method, timeIndex: study.strength_check.time_index },
     systemPrior: prior,
     rankBy: study.ranking.rank_by,
     slope: typeof study.ranking.k === 'number' ? study.ranking.k : ASSUMED_SLOPE,

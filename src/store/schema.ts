@@ -1,6 +1,7 @@
 import { EDITION_YEARS } from '../engineering/assess/code-history.js';
 import { WEAK_TYPES } from '../engineering/assess/weak.js';
 import { ORIGINS, SYSTEMS } from '../engineering/building.js';
+import { OWN_IDS } from '../engineering/capacity/own-table.js';
 import { COLUMNS } from '../engineering/columns.js';
 import type { InventoryColumn } from '../engineering/columns.js';
 import { RESULT_COLUMNS } from '../engineering/results.js';
@@ -54,7 +55,7 @@ export const RESULT_WORDS: Readonly<Record<string, readonly string[]>> = {
   period_evidence: ['measured', 'formula', 'stiffness', 'formula and stiffness'],
   period_basis: ['best-fit', 'design', 'ambient', 'measured', 'mechanics'],
   case_system: SYSTEMS,
-  case_edition: ['no seismic design', ...Object.keys(EDITION_YEARS)],
+  case_edition: ['no seismic design', ...Object.keys(EDITION_YEARS), ...OWN_IDS],
   weak_type: WEAK_TYPES.map(({ name }) => name),
 };
 
@@ -116,6 +117,14 @@ export const MIGRATIONS: readonly Migration[] = [
       'CREATE TABLE run_grid (run_id INTEGER NOT NULL, grid_number INTEGER NOT NULL)',
       // What surveys have found out, cell by cell as it was written down; of two answers to one question the later counts.
       'CREATE TABLE survey_answer (answer INTEGER NOT NULL, id VARCHAR NOT NULL, column_name VARCHAR NOT NULL, cell VARCHAR NOT NULL, visit VARCHAR, surveyor VARCHAR, surveyed_on VARCHAR, remark VARCHAR, taken VARCHAR NOT NULL)',
+      `ALTER TABLE result_assessed ALTER COLUMN "case_edition" SET DATA TYPE ENUM ('no seismic design', 'ubc-1927', 'ubc-1935',
+      'ubc-1949', 'ubc-1961', 'ubc-1976', 'ubc-1988', 'ubc-1997', 'asce7-2002', 'japan-1924', 'japan-1950', 'japan-1981',
+      'nz-1935', 'nz-1955', 'nz-1965', 'nz-1976', 'nz-2004', 'italy-1909', 'italy-1935', 'italy-1975', 'italy-2003',
+      'greece-1959', 'greece-1985', 'greece-1995', 'turkey-1949', 'turkey-1968', 'turkey-1975', 'turkey-1998', 'turkey-2018',
+      'india-1970', 'india-2002', 'india-2016', 'canada-1953', 'canada-1975', 'canada-1990', 'canada-2005',
+      'own-1', 'own-2', 'own-3', 'own-4', 'own-5', 'own-6', 'own-7', 'own-8', 'own-9',
+      'own-10', 'own-11', 'own-12', 'own-13', 'own-14', 'own-15', 'own-16', 'own-17', 'own-18',
+      'own-19', 'own-20', 'own-21', 'own-22', 'own-23', 'own-24')`,
     ],
   },
 ];

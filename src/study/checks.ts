@@ -7,6 +7,7 @@ import { HAZARD_GRID } from '../engineering/spectrum/grid.js';
 import { SPECTRUM_REGISTER } from '../engineering/spectrum/definition.js';
 import { showValue } from '../errors.js';
 import { suggest } from './nearest.js';
+import { checkOwnTable } from './own-table.js';
 import type { Finding } from './problems.js';
 
 type Step = string | number;
@@ -19,6 +20,7 @@ export function crossCheck(study: unknown): Finding[] {
     ...checkSlope(study),
     ...checkWords(study),
     ...checkBudget(study),
+    ...checkOwnTable(at(study, 'code_history')),
   ];
 }
 

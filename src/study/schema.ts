@@ -2,12 +2,13 @@
 import { z } from 'zod';
 import { SYSTEMS } from '../engineering/building.js';
 import type { System } from '../engineering/building.js';
+import { STRENGTH_CHECKS } from '../engineering/assess/settings.js';
 import { BASES, PERIOD_STANDARDS } from '../engineering/period/choose.js';
 import { VS30_TABLES } from '../engineering/site/vs30.js';
 import { showValue } from '../errors.js';
 import { BudgetSchema } from './budget-schema.js';
 import { CodeHistorySchema } from './code-editions.js';
-import { expected, list, mapping, strict, text, whole, word } from './fields.js';
+import { expected, list, mapping, number, strict, text, whole, word } from './fields.js';
 import { InventorySchema, NeighboursSchema, WordsSchema } from './inventory-schema.js';
 import { SpectrumSchema } from './spectrum-codes.js';
 import { SurveySchema } from './survey-schema.js';
@@ -125,6 +126,15 @@ const RankingSchema = strict({
     ),
 });
 
+const StrengthCheckSchema = strict({
+  method: word(STRENGTH_CHECKS)
+    .default('asce41-17')
+    .describe('Average stress of ASCE 41 by edition, the Japanese first-level index (concrete), or none.'),
+  time_index: number({ from: 0.7, to: 1 })
+    .default(0.9)
+    .describe('Time index T of the Japanese index: age and state, 0.7 to 1.0 [judgement].'),
+});
+
 /** The shape of study.yaml. What one key says about another is checked in checks.ts. */
 export const StudySchema = strict({
   title: text().describe('Title of the study, printed on every report.'),
@@ -134,6 +144,9 @@ export const StudySchema = strict({
   hazard: HazardSchema.describe('Spectra, and who reads which.'),
   period: PeriodSchema.prefault({}).describe('How periods are estimated.'),
   code_history: CodeHistorySchema.describe('What the place required of new buildings, and when.'),
+  strength_check: StrengthCheckSchema.prefault({}).describe(
+    'Capacity from areas of columns, walls or braces, for rows that have them and no design coefficient.',
+  ),
   system_prior: text('the path of a file')
     .exactOptional()
     .describe('Table of chances of the lateral system by use, storeys and year; needed where systems are unknown.'),

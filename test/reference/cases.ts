@@ -2,6 +2,7 @@
 import { BASE_SHEAR_CASES } from './base-shear-cases.js';
 import { CAPACITY_CASES } from './capacity-cases.js';
 import type { ReferenceCase } from './case.js';
+import { ERA_CASES } from './era-cases.js';
 import { GRID_CASES } from './grid-cases.js';
 import { MEASURED_CASES } from './measured-cases.js';
 import { ANSWERED_CODE_CASES } from './period-cases-answers.js';
@@ -17,6 +18,7 @@ import { SPECTRUM_FACTOR_CASES } from './spectrum-cases-factors.js';
 import { SPECTRUM_CASES } from './spectrum-cases.js';
 import { WORLD_SPECTRUM_CASES } from './spectrum-cases-world.js';
 import { STIFFNESS_CASES } from './stiffness-cases.js';
+import { STRENGTH_CASES } from './strength-cases.js';
 import { VIBRATION_CASES } from './vibration-cases.js';
 
 export const REFERENCE_CASES: readonly ReferenceCase[] = [
@@ -35,7 +37,9 @@ export const REFERENCE_CASES: readonly ReferenceCase[] = [
   ...SPECTRUM_FACTOR_CASES,
   ...WORLD_SPECTRUM_CASES,
   ...BASE_SHEAR_CASES,
+  ...ERA_CASES,
   ...CAPACITY_CASES,
+  ...STRENGTH_CASES,
   ...VIBRATION_CASES,
   ...GRID_CASES,
 ];

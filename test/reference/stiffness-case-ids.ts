@@ -9,18 +9,12 @@ export const STIFFNESS_CASE_IDS: readonly string[] = [
 ];
 
 const DEMAND = 'demand of the building, not its period: no record yet';
-const CAPACITY = 'capacity from member checks, not the period: no record yet';
-const JAPAN = 'base shear of a code whose editions are not in the register yet';
 const POUNDING = 'gap between neighbours: no record yet';
 
 /** Rows whose quantity no record computes yet. */
 export const NOT_RUN: Readonly<Record<string, string>> = {
   'SD-49': DEMAND,
   'SD-50': DEMAND,
-  'SD-58': JAPAN,
-  'SD-59': JAPAN,
-  'SD-61': CAPACITY,
-  'SD-62': CAPACITY,
   'SD-64': POUNDING,
   'SD-65': POUNDING,
   'SD-72': POUNDING,

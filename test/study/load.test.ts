@@ -208,6 +208,34 @@ seed: -1
     ).toEqual([]);
   });
 
+  it('reads the history of a family, and says at its place what an edition of it lacks', () => {
+    const us = SAMPLE.slice(SAMPLE.indexOf('  family: us'));
+    const greek = [
+      '  family: greece',
+      '  seismic_design_enforced_from: 1959',
+      '  editions:',
+      '    greece-1959: {zone: II, ground: medium}',
+      '    greece-1995: {zone_g: 0.24, ground: B}',
+      '',
+    ].join('\n');
+    const { study } = studyFromText(SAMPLE.replace(us, greek));
+    expect(study.code_history).toHaveProperty('editions', {
+      'greece-1959': { zone: 'II', ground: 'medium' },
+      'greece-1995': { zone_g: 0.24, ground: 'B' },
+    });
+    const line = SAMPLE.slice(0, SAMPLE.indexOf(us)).split('\n').length;
+    expect(complaints(SAMPLE.replace(us, greek.replace('zone: II, ', '').replace('greece-1995', 'ubc-1997')))).toEqual([
+      `study.yaml:${String(line + 3)}:5 code_history.editions.greece-1959.zone: missing; expected one of I, II, III`,
+      `study.yaml:${String(line + 4)}:5 code_history.editions.ubc-1997: unknown key; known: greece-1959, greece-1985, greece-1995`,
+    ]);
+    expect(complaints(SAMPLE.replace(us, greek.replace('family: greece', 'family: atlantis')))).toEqual([
+      `study.yaml:${String(line)}:11 code_history.family: unknown word "atlantis"; known: us-ubc-asce7, japan, new-zealand, italy, greece, turkey, india, canada, own-table`,
+    ]);
+    expect(complaints(SAMPLE.replace(us, greek.replace('  family: greece\n', '')))[0]).toMatch(
+      /code_history\.family: missing; expected one of us-ubc-asce7, japan/,
+    );
+  });
+
   it('counts columns alike with and without a byte order mark, and lines alike with CRLF', () => {
     const bad = SAMPLE.replace('family: us-ubc-asce7', 'family: other').replace('title: Two', 'titel: Two');
     const plain = complaints(bad);

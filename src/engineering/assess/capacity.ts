@@ -1,162 +1,56 @@
 /** Capacity of one case in one direction: assessed, from the drawings' coefficient, or from the code of its era. */
 import type { Building, DirectionName, System } from '../building.js';
-import { ASCE7_2002, UBC_1927, UBC_1949, UBC_1961, UBC_1976, UBC_1988, UBC_1997 } from '../capacity/editions.js';
-import { DUCTILITY_KEPT, OVERSTRENGTH_KEPT, WORKING_TO_STRENGTH } from '../capacity/records.js';
-import { SYSTEM_FACTORS } from '../capacity/systems.js';
-import { apply, applyAny } from '../formula.js';
-import type { AnyRecord } from '../formula.js';
-import { UBC_1961_MOMENT_FRAME, UBC_1961_OTHER } from '../period/past-records.js';
-import { ASCE7_22_PERIODS } from '../period/asce7.js';
-import { UBC_HEIGHT_PERIODS } from '../period/ubc.js';
+import { NOT_DESIGNED } from '../capacity/edition.js';
+import type { CodeEdition, DesignFacts, EraDesign } from '../capacity/edition.js';
+import type { CarriedId } from '../capacity/families.js';
+import { DUCTILITY_KEPT, OVERSTRENGTH_KEPT } from '../capacity/records.js';
+import { apply } from '../formula.js';
+import { cite } from '../source.js';
+import type { Verified } from '../source.js';
 import type { Trace } from '../trace.js';
+import { detailingOf, ductilityOf, editionOf, familyOf } from './code-history.js';
 import type { IrregularityFactors } from './assumed.js';
-import { EDITION_YEARS, detailingOf, ductilityOf } from './code-history.js';
 import type { EditionId } from './code-history.js';
 import { ln } from '../numeric/elementary.js';
 import { entryOf } from './case-memory.js';
 import type { CapacityAtHeight, Case, Design } from './case-memory.js';
 import type { AssessContext } from './context.js';
+import type { CodeHistorySettings } from './settings.js';
 
-const find = (list: readonly AnyRecord[], id: string): AnyRecord => {
-  const found = list.find((record) => record.id === id);
-  if (found === undefined) throw new Error(`no record ${id}`);
-  return found;
+const MARKS: Readonly<Record<Verified, string>> = {
+  printed: 'read in print',
+  restated: 'restated',
+  memory: 'from memory',
+  judgement: 'as the study states it',
+  mechanics: 'mechanics',
 };
-
-const PERIOD_1988 = {
-  'steel-moment-frame': find(UBC_HEIGHT_PERIODS, 'ubc-1988/period/steel-moment-frame'),
-  'concrete-moment-frame': find(UBC_HEIGHT_PERIODS, 'ubc-1988/period/concrete-moment-frame-or-eccentric-braced'),
-  'eccentric-braced': find(UBC_HEIGHT_PERIODS, 'ubc-1988/period/concrete-moment-frame-or-eccentric-braced'),
-  other: find(UBC_HEIGHT_PERIODS, 'ubc-1988/period/other'),
-};
-const PERIOD_2002 = {
-  'steel-moment-frame': find(ASCE7_22_PERIODS, 'asce7-22/period/steel-moment-frame'),
-  'concrete-moment-frame': find(ASCE7_22_PERIODS, 'asce7-22/period/concrete-moment-frame'),
-  'eccentric-braced': find(ASCE7_22_PERIODS, 'asce7-22/period/steel-eccentric-or-buckling-restrained'),
-  other: find(ASCE7_22_PERIODS, 'asce7-22/period/other'),
-};
-
-const ZONE_SHARES: Readonly<Record<number, number>> = { 1: 0.25, 2: 0.5, 3: 1 };
-
-interface EraDesign {
-  readonly coefficient: number;
-  readonly levelFactor: number;
-  /** The edition's own reduction of the elastic force. */
-  readonly reduction: number;
-}
-
-const NOT_DESIGNED: EraDesign = { coefficient: 0, levelFactor: 1, reduction: Infinity };
-
-/** Plan dimension along the force: the length for the longitudinal direction. Square root of the plate's area when not known. */
-function planDimension_m(building: Building, direction: DirectionName): number {
-  const side = direction === 'longitudinal' ? building.plan_length_m : building.plan_width_m;
-  if (side > 0) return side;
-  const plate = building.floor_area_m2.value / Math.max(1, building.storeys.value);
-  return plate > 0 ? Math.sqrt(plate) : 15;
-}
 
 /** What the edition asked of the system, with the edition's own period and the place's own inputs. */
-function eraDesign(
-  building: Building,
-  edition: EditionId,
-  system: System,
-  direction: DirectionName,
-  height_m: number,
-  ductile: boolean,
-  context: AssessContext,
-  trace?: Trace,
-): EraDesign {
-  const inputs = context.settings.codeHistory!.editions;
-  const factors = SYSTEM_FACTORS[system];
-  const storeys = building.storeys.value;
-  const structure_factor = factors.k[ductile ? 1 : 0];
-  const pastPeriod = (): number =>
-    factors.periodClass === 'steel-moment-frame' || factors.periodClass === 'concrete-moment-frame'
-      ? apply(UBC_1961_MOMENT_FRAME, { storeys }, trace)
-      : apply(UBC_1961_OTHER, { height_m, plan_dimension_m: planDimension_m(building, direction) }, trace);
-  const working = (coefficient: number, reduction: number): EraDesign => ({
-    coefficient,
-    levelFactor: WORKING_TO_STRENGTH,
-    reduction,
+function eraDesign(edition: EditionId, facts: DesignFacts, context: AssessContext, trace?: Trace): EraDesign {
+  const history = context.settings.codeHistory!;
+  const row = editionOf(edition, history);
+  const { title, source, verified, note } = row;
+  trace?.choice({
+    question: 'Code of the era',
+    taken: title,
+    because: `${cite(source)}, ${MARKS[verified]}${note === undefined ? '' : `; ${note}`}`,
+    others: [],
   });
-  switch (edition) {
-    case 'ubc-1927': {
-      const coefficient = inputs['ubc-1927']!.soil === 'firm' ? 0.075 : 0.1;
-      return working(apply(UBC_1927, { coefficient }, trace), Infinity);
-    }
-    case 'ubc-1935':
-      return working(apply(UBC_1927, { coefficient: inputs['ubc-1935']!.coefficient }, trace), Infinity);
-    case 'ubc-1949': {
-      const zone_share = ZONE_SHARES[inputs['ubc-1949']!.zone] ?? 0;
-      return working(apply(UBC_1949, { zone_share, storeys }, trace), Infinity);
-    }
-    case 'ubc-1961': {
-      const { zone_factor } = inputs['ubc-1961']!;
-      return working(
-        apply(UBC_1961, { zone_factor, structure_factor, period_s: pastPeriod() }, trace),
-        8 / structure_factor,
-      );
-    }
-    case 'ubc-1976': {
-      const { zone_factor, site_factor } = inputs['ubc-1976']!;
-      return working(
-        apply(UBC_1976, { zone_factor, structure_factor, site_factor, period_s: pastPeriod() }, trace),
-        8 / structure_factor,
-      );
-    }
-    case 'ubc-1988': {
-      const { zone_factor, site_factor } = inputs['ubc-1988']!;
-      const period_s = applyAny(PERIOD_1988[factors.periodClass], { height_m }, trace);
-      return working(
-        apply(UBC_1988, { zone_factor, site_factor, reduction_r: factors.rw, period_s }, trace),
-        factors.rw,
-      );
-    }
-    case 'ubc-1997': {
-      const { ca_g, cv_g, zone_factor, nv } = inputs['ubc-1997']!;
-      const period_s = applyAny(PERIOD_1988[factors.periodClass], { height_m }, trace);
-      const zone_floor = zone_factor >= 0.4 ? 0.8 * zone_factor * nv : 0;
-      const coefficient = apply(UBC_1997, { ca_g, cv_g, zone_floor, reduction_r: factors.r1997, period_s }, trace);
-      return { coefficient, levelFactor: 1, reduction: factors.r1997 };
-    }
-    case 'asce7-2002': {
-      const { sds_g, sd1_g, s1_g } = inputs['asce7-2002']!;
-      const period_s = applyAny(PERIOD_2002[factors.periodClass], { height_m }, trace);
-      const near_fault_s1_g = s1_g >= 0.6 ? s1_g : 0;
-      const coefficient = apply(
-        ASCE7_2002,
-        { sds_g, sd1_g, near_fault_s1_g, reduction_r: factors.r2002, period_s },
-        trace,
-      );
-      return { coefficient, levelFactor: 1, reduction: factors.r2002 };
-    }
-  }
-}
-
-/** What of a building the coefficient of an edition depends on, `eraDesign` below told in short. */
-function dependsOn(system: System, edition: EditionId | null): Design['dependsOn'] {
-  const { periodClass } = SYSTEM_FACTORS[system];
-  const isMomentFrame = periodClass === 'steel-moment-frame' || periodClass === 'concrete-moment-frame';
-  switch (edition) {
-    case null:
-    case 'ubc-1927':
-    case 'ubc-1935':
-      return 'nothing';
-    case 'ubc-1949':
-      return 'storeys';
-    case 'ubc-1961':
-    case 'ubc-1976':
-      return isMomentFrame ? 'storeys' : 'more';
-    case 'ubc-1988':
-    case 'ubc-1997':
-    case 'asce7-2002':
-      return 'height';
-  }
+  const stated: unknown = history.editions[edition as CarriedId];
+  // an era exists only where something is stated for its edition, and that is of the type it reads
+  return (row as CodeEdition).design(facts, stated, trace);
 }
 
 /** True where the edition knows no such system, so that it counts as not designed. */
-function hasNoRow(system: System, edition: EditionId | null, strengthened: boolean): boolean {
-  return edition !== null && !strengthened && EDITION_YEARS[edition] >= (SYSTEM_FACTORS[system].noRowFrom ?? Infinity);
+function hasNoRow(
+  system: System,
+  edition: EditionId | null,
+  strengthened: boolean,
+  history: CodeHistorySettings | null,
+): boolean {
+  if (edition === null || strengthened || history === null) return false;
+  const { year, hasRow } = editionOf(edition, history);
+  return year >= (familyOf(history).noRowFrom[system] ?? Infinity) || hasRow?.(system) === false;
 }
 
 /** The memory of capacities that all cases of a system, an edition and a level of retrofit share. */
@@ -165,17 +59,20 @@ export function designOf(
   edition: EditionId | null,
   retrofit_level: number,
   strengthened: boolean,
-  { caseMemory }: AssessContext,
+  { caseMemory, settings }: AssessContext,
 ): Design {
   const key = `${system}|${String(edition)}|${String(retrofit_level)}|${String(strengthened)}`;
   return entryOf(caseMemory.designs, key, () => ({
-    dependsOn: hasNoRow(system, edition, strengthened) ? 'nothing' : dependsOn(system, edition),
+    dependsOn:
+      edition === null || hasNoRow(system, edition, strengthened, settings.codeHistory)
+        ? 'nothing'
+        : editionOf(edition, settings.codeHistory!).dependsOn(system),
     found: new Map(),
     last: null,
   }));
 }
 
-/** What another building's capacity was found with holds here too, but for the coefficient of the two editions that know the plan. */
+/** What another building's capacity was found with holds here too, but for the coefficient of editions that know the plan. */
 function againAtHeight(
   building: Building,
   which: Case,
@@ -186,16 +83,9 @@ function againAtHeight(
 ): CapacityAtHeight {
   const system = direction === 'longitudinal' ? which.system : which.system_transverse;
   const detailing = detailingOf(system, which.edition, context.settings.codeHistory!);
-  const isDuctile = detailing === 'after' || detailing === 'special';
-  const { coefficient, levelFactor } = eraDesign(
-    building,
-    which.edition!,
-    system,
-    direction,
-    height_m,
-    isDuctile,
-    context,
-  );
+  const ductile = detailing === 'after' || detailing === 'special';
+  const facts = { building, direction, system, height_m, ductile };
+  const { coefficient, levelFactor } = eraDesign(which.edition!, facts, context);
   const strength_coefficient = apply(context.strength, {
     design_base_shear_coefficient: coefficient,
     level_factor: levelFactor,
@@ -257,7 +147,7 @@ export function capacityAtHeight(
     because: `${system}, ${which.edition === null ? 'no seismic design' : `designed to ${which.edition}`}: detailing class "${detailing}" [judgement]`,
     others: [],
   });
-  const noRow = hasNoRow(system, which.edition, which.strengthened);
+  const noRow = hasNoRow(system, which.edition, which.strengthened, history);
   if (noRow) {
     trace?.choice({
       question: 'Design coefficient of the era',
@@ -270,12 +160,8 @@ export function capacityAtHeight(
     which.edition === null || noRow
       ? NOT_DESIGNED
       : eraDesign(
-          building,
           which.edition,
-          system,
-          direction,
-          height_m,
-          detailing === 'after' || detailing === 'special',
+          { building, direction, system, height_m, ductile: detailing === 'after' || detailing === 'special' },
           context,
           trace,
         );

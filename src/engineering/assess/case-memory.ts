@@ -1,5 +1,6 @@
 /** The cases of a building as data, and a memory of those already listed. */
 import type { PerDirection, System, Use } from '../building.js';
+import type { DependsOn } from '../capacity/edition.js';
 import type { EditionId, Era } from './code-history.js';
 
 export interface CapacityAtHeight {
@@ -9,12 +10,14 @@ export interface CapacityAtHeight {
   readonly ductility: number;
   /** ln of strength coefficient × overstrength. */
   readonly lnStrength: number;
+  /** It comes from a strength check: a capacity to be taken as it is, or a strength to which ductility and share of mass still come. */
+  readonly checked?: 'as it is' | 'with ductility';
 }
 
 /** The capacities of a system designed to an edition, already found: all cases of the two share them. */
 export interface Design {
   /** What of a building the design coefficient depends on; where it is more than that one number nothing is kept. */
-  readonly dependsOn: 'nothing' | 'storeys' | 'height' | 'more';
+  readonly dependsOn: DependsOn;
   readonly found: Map<number, CapacityAtHeight>;
   /** The last one found: overstrength and ductility are those of every building where `dependsOn` is `more`. */
   last: CapacityAtHeight | null;
@@ -25,6 +28,8 @@ export interface Case {
   readonly system_transverse: System;
   /** null: no seismic design. */
   readonly edition: EditionId | null;
+  /** Its year; 0 without one. */
+  readonly editionYear: number;
   /** 1, or the share of its year's code that a retrofit reached. */
   readonly retrofit_level: number;
   /** The era is that of a seismic retrofit. */

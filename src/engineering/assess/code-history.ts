@@ -1,23 +1,45 @@
 /** The code history of a place as intervals of the year of construction, and the chance of each edition for a building. */
 import type { System } from '../building.js';
+import type { CodeEdition } from '../capacity/edition.js';
+import { CODE_FAMILIES, EDITIONS, FIRST_FAMILY, OWN_FAMILY, OWN_FAMILY_ID } from '../capacity/families.js';
+import { ownEditions } from '../capacity/own-table.js';
+import type { CarriedId, CodeFamily, EditionId } from '../capacity/families.js';
 import { SYSTEM_FACTORS } from '../capacity/systems.js';
 import { ASSUMED } from './assumed.js';
 import type { Ductilities } from './assumed.js';
-import type { CodeHistorySettings, EditionInputs } from './settings.js';
+import type { CodeHistorySettings } from './settings.js';
 
-export type EditionId = keyof EditionInputs;
+export type { EditionId };
 
-/** Year in print of each edition. */
-export const EDITION_YEARS: Readonly<Record<EditionId, number>> = {
-  'ubc-1927': 1927,
-  'ubc-1935': 1935,
-  'ubc-1949': 1949,
-  'ubc-1961': 1961,
-  'ubc-1976': 1976,
-  'ubc-1988': 1988,
-  'ubc-1997': 1997,
-  'asce7-2002': 2000,
-};
+/** Year in print of each edition that is carried. */
+export const EDITION_YEARS = Object.fromEntries(
+  Object.entries(EDITIONS).map(([edition, { year }]) => [edition, year]),
+) as Readonly<Record<CarriedId, number>>;
+
+/** The family of codes of a history. */
+export function familyOf(history: CodeHistorySettings): CodeFamily {
+  const { family = FIRST_FAMILY } = history;
+  return family === OWN_FAMILY_ID ? OWN_FAMILY : CODE_FAMILIES[family];
+}
+
+const own = new WeakMap<CodeHistorySettings, Readonly<Record<string, CodeEdition<never>>>>();
+/** The rows of the study's own table as editions, made once for each history. */
+function ownOf(history: CodeHistorySettings): Readonly<Record<string, CodeEdition<never>>> {
+  let made = own.get(history);
+  if (made === undefined) own.set(history, (made = ownEditions(history.table ?? [])));
+  return made;
+}
+
+/** An edition of a history. */
+export function editionOf(edition: EditionId, history: CodeHistorySettings): CodeEdition<never> {
+  return history.family === OWN_FAMILY_ID ? ownOf(history)[edition]! : EDITIONS[edition as CarriedId];
+}
+
+/** Ids of the editions a history uses. */
+function idsOf(history: CodeHistorySettings): readonly EditionId[] {
+  if (history.family === OWN_FAMILY_ID) return Object.keys(ownOf(history)) as EditionId[];
+  return (Object.keys(familyOf(history).editions) as CarriedId[]).filter((id) => history.editions[id] !== undefined);
+}
 
 export interface Era {
   /** null: no seismic design. */
@@ -32,9 +54,8 @@ export interface Era {
  */
 export function eras(history: CodeHistorySettings): readonly Era[] {
   const enforced = history.seismic_design_enforced_from;
-  const starts = (Object.keys(EDITION_YEARS) as EditionId[])
-    .filter((edition) => history.editions[edition] !== undefined)
-    .map((edition) => ({ edition, start: EDITION_YEARS[edition] + history.adoption_lag_years }))
+  const starts = idsOf(history)
+    .map((edition) => ({ edition, start: editionOf(edition, history).year + history.adoption_lag_years }))
     .sort((a, b) => a.start - b.start);
   const before = starts.filter(({ start }) => start <= enforced).at(-1);
   const after = starts.filter(({ start }) => start > enforced);
@@ -64,11 +85,12 @@ export type Detailing = 'none' | 'before' | 'after' | 'special';
 /** Detailing class of a system designed to an edition (null: no seismic design). */
 export function detailingOf(system: System, edition: EditionId | null, history: CodeHistorySettings): Detailing {
   if (edition === null) return 'none';
+  const { detailingFrom, specialFrom } = familyOf(history);
   const factors = SYSTEM_FACTORS[system];
-  const from = history.detailing_from?.[system] ?? factors.detailingFrom;
-  const year = EDITION_YEARS[edition];
-  if (from === null || year < from) return 'before';
-  return factors.special && year >= 1997 ? 'special' : 'after';
+  const from = history.detailing_from?.[system] ?? (factors.neverDuctile ? Infinity : detailingFrom);
+  const { year } = editionOf(edition, history);
+  if (year < from) return 'before';
+  return factors.special && year >= (specialFrom ?? Infinity) ? 'special' : 'after';
 }
 
 /** Displacement ductility of a detailing class [judgement]. */
@@ -78,6 +100,6 @@ export function ductilityOf(
   ductilities: Ductilities = ASSUMED.ductility,
 ): number {
   const factors = SYSTEM_FACTORS[system];
-  if (factors.detailingFrom === null || (detailing === 'none' && factors.brittle)) return ductilities.brittle;
+  if (factors.neverDuctile || (detailing === 'none' && factors.brittle)) return ductilities.brittle;
   return ductilities[detailing];
 }

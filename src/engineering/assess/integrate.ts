@@ -15,6 +15,7 @@ import type { People } from './people.js';
 import { NO_PERIOD, alikeAcross, periodModel } from './period.js';
 import type { PeriodEstimate, PeriodModel } from './period.js';
 import type { Scratch } from './scratch.js';
+import { strengthCheck } from './strength-check.js';
 import { directionsAlike, drawingsLevels, importanceOf, massFactor } from './terms.js';
 
 export type { PeriodBand };
@@ -64,6 +65,9 @@ export function integrate(
       (building.design_base_shear_coefficient > 0 ? 0 : spreads.eraTable * spreads.eraTable);
   const peopleSigma = context.assumed.peopleWeight * people.sigma;
   const sd = demandOnly ? 0 : Math.sqrt(slope_k * slope_k * strengthVariance + peopleSigma * peopleSigma);
+  const sdChecked = Math.sqrt(
+    slope_k * slope_k * spreads.strengthCheck * spreads.strengthCheck + peopleSigma * peopleSigma,
+  );
   const offset = demandOnly ? 0 : constantTerm(building, people, spectrum, context);
   const levels = drawingsLevels(building);
   const lnFixed = ln(massFactor(building, context));
@@ -79,12 +83,13 @@ export function integrate(
     across: Curve,
     ductilityB: number,
     lnB: number,
+    sdOfCase = sd,
   ): void => {
     const a = reducedAt(along, ductilityA, spectrum, scratch);
     const nodes = along.sigma > 0 || across.sigma > 0 ? PERIOD_NODES : ONE_NODE;
     const first = nodes === ONE_NODE ? MIDDLE : 0;
     if (across === along && ductilityA === ductilityB)
-      score.addNodes(weight, nodes, a, first, lnA < lnB ? lnA : lnB, slope_k, offset, sd);
+      score.addNodes(weight, nodes, a, first, lnA < lnB ? lnA : lnB, slope_k, offset, sdOfCase);
     else {
       const b = reducedAt(across, ductilityB, spectrum, scratch);
       const { worse } = scratch;
@@ -93,7 +98,7 @@ export function integrate(
         const y = b[j]! - lnB;
         worse[j] = y > x ? y : x;
       }
-      score.addNodes(weight, nodes, worse, first, 0, slope_k, offset, sd);
+      score.addNodes(weight, nodes, worse, first, 0, slope_k, offset, sdOfCase);
     }
   };
   for (const group of cases.groups) {
@@ -124,7 +129,17 @@ export function integrate(
           }
           const a = capacityOf(building, which, 'longitudinal', height_m, level, context);
           const b = alike ? a : capacityOf(building, which, 'transverse', height_m, level, context);
-          add(weight, along, a.ductility, a.lnStrength + lnFixed, across, b.ductility, b.lnStrength + lnFixed);
+          const sdOfCase = a.checked === undefined && b.checked === undefined ? sd : sdChecked;
+          add(
+            weight,
+            along,
+            a.ductility,
+            a.lnStrength + lnFixed,
+            across,
+            b.ductility,
+            b.lnStrength + lnFixed,
+            sdOfCase,
+          );
           told?.(which, h);
         }
       }
@@ -143,6 +158,10 @@ function capacityOf(
   level: number | null,
   context: AssessContext,
 ): CapacityAtHeight {
+  if (level === null && building.structure !== null) {
+    const check = strengthCheck(building, which, direction, height_m, context);
+    if (check !== null && typeof check !== 'string') return check;
+  }
   return level === null
     ? keptCapacity(building, which, direction, height_m, context)
     : capacityAtHeight(building, which, direction, height_m, level, context);

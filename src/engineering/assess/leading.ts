@@ -13,13 +13,15 @@ import { power } from '../numeric/power.js';
 import type { Trace } from '../trace.js';
 import { directionsAlike, drawingsLevels, importanceOf } from './terms.js';
 import { capacityAtHeight, irregularityFactor, keptCapacity, massShare } from './capacity.js';
-import type { Case, Cases } from './case-memory.js';
+import type { CapacityAtHeight, Case, Cases } from './case-memory.js';
 import type { EditionId } from './code-history.js';
+import { codeRatio } from './code-ratio.js';
 import { chooseSpectrum } from './choose-spectrum.js';
 import type { SpectrumChoice } from './choose-spectrum.js';
 import { readAt } from './context.js';
 import type { AssessContext, ContextSpectrum } from './context.js';
 import { peopleOf } from './people.js';
+import { strengthCheck } from './strength-check.js';
 import { NO_PERIOD, alikeAcross, periodAt, periodModel } from './period.js';
 import type { Evidence, PeriodBasis, PeriodModel } from './period.js';
 import { SiteSpectrum, traceOrdinates, tracePlace } from './site-spectrum.js';
@@ -192,10 +194,15 @@ function capacityOf(
   }
   const { level } = drawingsLevels(building)[0]!;
   const height_m = building.height_m.value;
+  const check = level === null ? strengthCheck(building, which, direction, height_m, context, trace) : null;
+  if (trace !== undefined) showWay(level !== null, check, trace);
   const at =
-    trace === undefined && level === null
-      ? keptCapacity(building, which, direction, height_m, context)
-      : capacityAtHeight(building, which, direction, height_m, level, context, trace);
+    check !== null && typeof check !== 'string'
+      ? check
+      : trace === undefined && level === null
+        ? keptCapacity(building, which, direction, height_m, context)
+        : capacityAtHeight(building, which, direction, height_m, level, context, trace);
+  if (trace !== undefined) showCodeRatio(building, which, direction, context, trace);
   const reduction = apply(REDUCTION, { ductility: at.ductility, period_s, corner_period_s: spectrum.corner_s }, trace);
   return (
     apply(
@@ -205,7 +212,7 @@ function capacityOf(
         overstrength: at.overstrength,
         reduction,
         irregularity: irregularityFactor(building, context.assumed.irregularity),
-        mass_share: massShare(building),
+        mass_share: at.checked === 'as it is' ? 1 : massShare(building),
       },
       trace,
     ) * context.capacityFactor
@@ -215,6 +222,43 @@ function capacityOf(
 /** A factor of the priority with its weight as exponent. */
 function weighed(factor: number, weight: number): number {
   return weight === 1 ? factor : power(factor, weight);
+}
+
+/** Shown beside, counted nowhere. */
+function showCodeRatio(
+  building: Building,
+  which: Case,
+  direction: DirectionName,
+  context: AssessContext,
+  trace: Trace,
+): void {
+  if (Number.isNaN(codeRatio(building, which, direction, context))) return;
+  trace.choice({
+    question: 'Plain code ratio',
+    taken: 'shown beside the capacity, not counted',
+    because: 'it leaves out the period of the building, its ductility and today’s spectrum',
+    others: [],
+  });
+  codeRatio(building, which, direction, context, trace);
+}
+
+/** Which of the ways to a capacity was taken, and why not those before it. */
+function showWay(byDrawings: boolean, check: CapacityAtHeight | string | null, trace: Trace): void {
+  const assessment = { what: 'finished assessment', why: 'no assessed capacity on record' };
+  const drawings = { what: "drawings' coefficient", why: 'no design coefficient on record' };
+  const checkWhy = check === null ? 'nothing of the structure on record, or no check wanted by the study' : '';
+  const era = { what: 'code of the era', why: 'a better way comes first' };
+  const byCheck = check !== null && typeof check !== 'string';
+  trace.choice({
+    question: 'Way to the capacity',
+    taken: byDrawings ? "drawings' coefficient" : byCheck ? 'strength check of the first storey' : 'code of the era',
+    because: 'the best of the four ways for which the row has what it takes',
+    others: byDrawings
+      ? [assessment, { what: 'strength check', why: 'a better way comes first' }, era]
+      : byCheck
+        ? [assessment, drawings, era]
+        : [assessment, drawings, { what: 'strength check', why: typeof check === 'string' ? check : checkWhy }],
+  });
 }
 
 /** ln S at a demand and a capacity. */

@@ -1,5 +1,8 @@
 /** Everything of a study that an assessment depends on, as plain data: stored with the run and shipped with the page. */
 import type { System } from '../building.js';
+import type { FamilyId, WeakDates } from '../capacity/families.js';
+import type { OwnEra } from '../capacity/own-table.js';
+import type { EditionInputs } from '../capacity/stated.js';
 import type { Basis, PeriodStandard } from '../period/choose.js';
 import type { SystemPriorGroup } from '../prior/system-prior.js';
 import type { VelocityCode } from '../site/vs30.js';
@@ -24,25 +27,26 @@ export interface LevelSettings {
   readonly otherwise: string | null;
 }
 
-/** Editions of the US code history a place used, each with its own hazard inputs. */
-export interface EditionInputs {
-  readonly 'ubc-1927'?: { readonly soil: 'firm' | 'soft' } | undefined;
-  readonly 'ubc-1935'?: { readonly coefficient: number } | undefined;
-  readonly 'ubc-1949'?: { readonly zone: number } | undefined;
-  readonly 'ubc-1961'?: { readonly zone_factor: number } | undefined;
-  readonly 'ubc-1976'?: { readonly zone_factor: number; readonly site_factor: number } | undefined;
-  readonly 'ubc-1988'?: { readonly zone_factor: number; readonly site_factor: number } | undefined;
-  readonly 'ubc-1997'?:
-    { readonly ca_g: number; readonly cv_g: number; readonly zone_factor: number; readonly nv: number } | undefined;
-  readonly 'asce7-2002'?: { readonly sds_g: number; readonly sd1_g: number; readonly s1_g: number } | undefined;
-}
-
 export interface CodeHistorySettings {
   readonly place: string;
+  /** Left out in settings kept before there was more than one. */
+  readonly family?: FamilyId | undefined;
   readonly seismic_design_enforced_from: number;
   readonly adoption_lag_years: number;
   readonly editions: EditionInputs;
+  /** Rows of the study's own table, by rising year; with family own-table alone. */
+  readonly table?: readonly OwnEra[] | undefined;
+  /** Dates of weak types where the place differs from the family. */
+  readonly weak_types?: Partial<Omit<WeakDates, 'source'>> | undefined;
   readonly detailing_from?: Partial<Record<System, number>> | undefined;
+}
+
+export const STRENGTH_CHECKS = ['asce41-17', 'asce41-13', 'japan-first-level', 'none'] as const;
+
+export interface StrengthCheckSettings {
+  readonly method: (typeof STRENGTH_CHECKS)[number];
+  /** T of the Japanese index: age and state of the building, 0.7 to 1.0. */
+  readonly timeIndex: number;
 }
 
 /** Standard deviations of natural logarithms: the one register of spreads [judgement throughout]. */
@@ -60,6 +64,8 @@ export interface Spreads {
   readonly era: number;
   readonly eraTable: number;
   readonly overstrength: number;
+  /** Of a capacity from areas of columns, walls or braces: it stands for era, era table and overstrength together. */
+  readonly strengthCheck: number;
   readonly assessedCapacity: number;
   readonly peopleKnownUse: number;
   readonly peopleUnknownUse: number;
@@ -82,6 +88,7 @@ export const SPREADS: Spreads = {
   era: 0.15,
   eraTable: 0.2,
   overstrength: 0.3,
+  strengthCheck: 0.35,
   assessedCapacity: 0.2,
   peopleKnownUse: 0.4,
   peopleUnknownUse: 0.7,
@@ -101,6 +108,8 @@ export interface AssessSettings {
     readonly switchedOff: readonly string[];
   };
   readonly codeHistory: CodeHistorySettings | null;
+  /** Left out, as in settings kept before there were any: none. */
+  readonly strengthCheck?: StrengthCheckSettings | undefined;
   readonly systemPrior: readonly SystemPriorGroup[] | null;
   readonly rankBy: RankBy;
   /** A number for all, or one per spectrum of the ranking level (found from two levels). */

@@ -1,7 +1,6 @@
 /** Terms of a building that do not depend on its period. */
-import type { Building } from '../building.js';
+import type { Building, Structure } from '../building.js';
 import { WORKING_TO_STRENGTH } from '../capacity/records.js';
-import { SYSTEM_FACTORS } from '../capacity/systems.js';
 import { irregularityFactor, massShare } from './capacity.js';
 import type { Case } from './case-memory.js';
 import type { AssessContext } from './context.js';
@@ -45,7 +44,19 @@ export function directionsAlike(building: Building, which: Case): boolean {
     stiffness.transverse !== null
   )
     return false;
-  if (which.edition !== 'ubc-1961' && which.edition !== 'ubc-1976') return true;
-  const { periodClass } = SYSTEM_FACTORS[which.system];
-  return periodClass === 'steel-moment-frame' || periodClass === 'concrete-moment-frame';
+  return (
+    which.design.longitudinal.dependsOn !== 'more' && (building.structure === null || areasAlike(building.structure))
+  );
+}
+
+/** No area that a strength check would read by direction. */
+function areasAlike({
+  wall_areas_m2: walls,
+  brace_area_m2: braces,
+  column_width_m,
+  column_depth_m,
+}: Structure): boolean {
+  if (walls.longitudinal !== null || walls.transverse !== null) return false;
+  if (braces.longitudinal > 0 || braces.transverse > 0) return false;
+  return !(column_width_m > 0) || column_width_m === column_depth_m;
 }

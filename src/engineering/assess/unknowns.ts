@@ -11,6 +11,7 @@ import type { AssessContext } from './context.js';
 import { integrate } from './integrate.js';
 import { peopleOf } from './people.js';
 import { newScratch } from './scratch.js';
+import { strengthCheck } from './strength-check.js';
 import type { Scratch } from './scratch.js';
 
 const shared = newScratch();
@@ -63,8 +64,18 @@ export function unknownsOf(building: Building, context: AssessContext, scratch: 
   // drawings settle what era tables and the years around a change of edition leave open
   const byDrawings = !(building.capacity_sa_g > 0) && !(building.design_base_shear_coefficient > 0);
   if (settings.rankBy !== 'demand' && byDrawings)
-    add('drawings', numbered(edition), slope_k * settings.spreads.eraTable);
+    add(
+      'drawings',
+      numbered(edition),
+      byCheck(building, cases.list[0]!, context) ? 0 : slope_k * settings.spreads.eraTable,
+    );
   return { parts, learnable };
+}
+
+/** The capacity does not rest on an era table. */
+function byCheck(building: Building, which: Case, context: AssessContext): boolean {
+  const check = strengthCheck(building, which, 'longitudinal', building.height_m.value, context);
+  return check !== null && typeof check !== 'string';
 }
 
 /** The nodes of one case at one height. */

@@ -1,10 +1,9 @@
 /**
- * Structural types known to be weak, flagged whatever the rank. Dates are of the US family; each is marked with what it rests on.
+ * Structural types known to be weak, flagged whatever the rank. Dates are those of the family of codes (capacity/families.ts), or of the study.
  */
 import type { Building } from '../building.js';
-import { SYSTEM_FACTORS } from '../capacity/systems.js';
 import type { Case, Cases } from './case-memory.js';
-import { EDITION_YEARS } from './code-history.js';
+import { familyOf } from './code-history.js';
 import type { CodeHistorySettings } from './settings.js';
 
 export interface WeakType {
@@ -17,12 +16,12 @@ export const WEAK_TYPES: readonly WeakType[] = [
   { name: 'unreinforced-masonry', title: 'Unreinforced masonry', source: 'common practice, no source' },
   {
     name: 'concrete-frame-before-detailing',
-    title: 'Concrete frame before ductile detailing (UBC 1976)',
-    source: 'date restated',
+    title: 'Concrete frame before ductile detailing',
+    source: 'detailing date of the family of codes',
   },
   {
     name: 'welded-steel-frame',
-    title: 'Welded steel moment frame of 1961 to 1994 (UBC 1961 to 1988 editions)',
+    title: 'Welded steel moment frame of the years whose connections broke',
     source: 'from memory: connection damage found in 1994',
   },
   {
@@ -32,32 +31,48 @@ export const WEAK_TYPES: readonly WeakType[] = [
   },
   {
     name: 'tilt-up-before-wall-anchors',
-    title: 'Tilt-up walls before the wall-anchor rules (UBC 1976)',
+    title: 'Tilt-up walls before the wall-anchor rules',
     source: 'from memory',
   },
-  { name: 'precast-frame', title: 'Precast concrete frame before UBC 1997', source: 'judgement' },
+  { name: 'precast-frame', title: 'Precast concrete frame of the early rules', source: 'judgement' },
 ];
+
+/** The study's date, else that of the family; without a code history every building is older than any. */
+function dateOf(name: 'tilt_up_before' | 'precast_before', history: CodeHistorySettings | null): number {
+  return history === null ? Infinity : (history.weak_types?.[name] ?? familyOf(history).weak[name]);
+}
+
+function isWelded(year: number, history: CodeHistorySettings | null): boolean {
+  if (history === null) return false;
+  const { weak_types: own } = history;
+  const { weak } = familyOf(history);
+  return (
+    year >= (own?.welded_from ?? weak.welded_from ?? Infinity) &&
+    year < (own?.welded_before ?? weak.welded_before ?? -Infinity)
+  );
+}
 
 /** The weak type of a case, or null. */
 export function weakTypeOf(building: Building, which: Case, history: CodeHistorySettings | null): string | null {
-  const year = which.edition === null ? 0 : EDITION_YEARS[which.edition];
+  const year = which.editionYear;
   switch (which.system) {
     case 'unreinforced-masonry-wall':
       return 'unreinforced-masonry';
     case 'concrete-moment-frame':
     case 'concrete-infilled-frame': {
-      const from = history?.detailing_from?.[which.system] ?? SYSTEM_FACTORS[which.system].detailingFrom ?? 1976;
+      const from =
+        history?.detailing_from?.[which.system] ?? (history === null ? Infinity : familyOf(history).detailingFrom);
       return year < from ? 'concrete-frame-before-detailing' : null;
     }
     case 'steel-moment-frame':
-      return year >= 1961 && year < 1997 ? 'welded-steel-frame' : null;
+      return isWelded(year, history) ? 'welded-steel-frame' : null;
     case 'timber-light-frame':
     case 'timber-post-and-beam':
       return building.soft_storey === 'yes' ? 'open-front-timber' : null;
     case 'precast-tilt-up-wall':
-      return year < 1976 ? 'tilt-up-before-wall-anchors' : null;
+      return year < dateOf('tilt_up_before', history) ? 'tilt-up-before-wall-anchors' : null;
     case 'precast-concrete-frame':
-      return year < 1997 ? 'precast-frame' : null;
+      return year < dateOf('precast_before', history) ? 'precast-frame' : null;
     default:
       return null;
   }

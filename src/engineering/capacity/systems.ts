@@ -17,8 +17,8 @@ export interface SystemFactors {
   readonly brittle: boolean;
   /** Belongs to the special systems of current editions. */
   readonly special: boolean;
-  /** First year of ductile detailing in the US family (UBC 1976 for concrete and masonry); null: detailing never made it ductile. */
-  readonly detailingFrom: number | null;
+  /** No detailing makes it ductile. */
+  readonly neverDuctile: boolean;
   /** First edition year from which the family gave the system no row: such a building counts as not designed [judgement]. */
   readonly noRowFrom: number | null;
   /** Which design period formula the editions gave it. */
@@ -30,7 +30,7 @@ function factors(
   rw: number,
   r1997: number,
   r2002: number,
-  more: Partial<Pick<SystemFactors, 'brittle' | 'special' | 'detailingFrom' | 'noRowFrom' | 'periodClass'>> = {},
+  more: Partial<Pick<SystemFactors, 'brittle' | 'special' | 'neverDuctile' | 'noRowFrom' | 'periodClass'>> = {},
 ): SystemFactors {
   return {
     k,
@@ -39,7 +39,7 @@ function factors(
     r2002,
     brittle: false,
     special: false,
-    detailingFrom: 1976,
+    neverDuctile: false,
     noRowFrom: null,
     periodClass: 'other',
     ...more,
@@ -65,7 +65,7 @@ export const SYSTEM_FACTORS: Readonly<Record<System, SystemFactors>> = {
   'confined-masonry-wall': factors([1.33, 1.33], 5, 3, 2.5, { brittle: true }),
   'unreinforced-masonry-wall': factors([1.33, 1.33], 1.5, 1.5, 1.5, {
     brittle: true,
-    detailingFrom: null,
+    neverDuctile: true,
     noRowFrom: 1961,
   }),
   'timber-light-frame': factors([1.33, 1], 8, 5.5, 6.5, { special: true }),

@@ -9,7 +9,7 @@ import { INDIA_PERIODS } from './india.js';
 import { JAPAN_PERIODS } from './japan.js';
 import { OCEANIA_NEPAL_PERIODS } from './oceania-nepal.js';
 import { OTHER_CODE_RECORDS } from './other-codes.js';
-import { UBC_1961_MOMENT_FRAME, UBC_1961_OTHER } from './past-records.js';
+import { PAST_PERIODS, UBC_1961_MOMENT_FRAME, UBC_1961_OTHER } from './past-records.js';
 import { GOEL_CHOPRA_LIMITS, REGRESSION_PERIODS } from './regressions.js';
 import { UBC_HEIGHT_PERIODS, UBC_MORE_RECORDS } from './ubc.js';
 
@@ -20,6 +20,7 @@ export const PERIOD_RECORDS: readonly AnyRecord[] = [
   ...UBC_HEIGHT_PERIODS,
   UBC_1961_MOMENT_FRAME,
   UBC_1961_OTHER,
+  ...PAST_PERIODS,
   ...ASCE7_WALL_AND_LIMIT_RECORDS,
   ...ASCE7_EARLIER_PERIODS,
   ...FEMA_PERIODS,
