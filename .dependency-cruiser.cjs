@@ -35,7 +35,7 @@ const ENGINEERING_FLOORS = [
   ['spectrum'],
   ['stiffness'],
   ['demand', 'vibration'],
-  ['capacity'],
+  ['capacity', 'irregularity'],
   ['priority'],
   ['results'],
   ['assess'],

@@ -30,6 +30,9 @@ export const BUILDING_NUMBERS = [
   'measured_period_transverse_s',
   'design_base_shear_coefficient',
   'capacity_sa_g',
+  'reentrant_projection',
+  'reentrant_area_share',
+  'footprint_area_m2',
 ] as const;
 
 export const BUILDING_WORDS = [
@@ -105,6 +108,9 @@ export function buildingReader(columns: BuildingColumns, pools: YearPools): (i: 
     measured_period_transverse_s,
     design_base_shear_coefficient,
     capacity_sa_g,
+    reentrant_projection,
+    reentrant_area_share,
+    footprint_area_m2,
   } = columns.numbers;
   const {
     status,
@@ -179,6 +185,9 @@ export function buildingReader(columns: BuildingColumns, pools: YearPools): (i: 
       reentrant_corner: reentrant_corner[i] as YesNo | null,
       setback: setback[i] as YesNo | null,
       mass_irregularity: mass_irregularity[i] as YesNo | null,
+      reentrant_projection: reentrant_projection[i]!,
+      reentrant_area_share: reentrant_area_share[i]!,
+      footprint_area_m2: footprint_area_m2[i]!,
       site_class: site_class[i]!,
       hazard_zone: hazard_zone[i]!,
       lon: place === undefined ? NaN : place.lon[i]!,

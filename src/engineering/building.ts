@@ -132,6 +132,11 @@ export interface Building {
   readonly reentrant_corner: YesNo | null;
   readonly setback: YesNo | null;
   readonly mass_irregularity: YesNo | null;
+  /** Of the footprint: the larger over its corners of the lesser projection beyond the corner, as a share of the plan. */
+  readonly reentrant_projection: number;
+  /** Of the footprint: the largest area between outline and hull, as a share of the floor. */
+  readonly reentrant_area_share: number;
+  readonly footprint_area_m2: number;
   readonly site_class: string | null;
   readonly hazard_zone: string | null;
   /** Where it stands, degrees; NaN where not known, and where no spectrum of the study hangs on the place. */

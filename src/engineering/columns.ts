@@ -352,6 +352,21 @@ export const COLUMNS: readonly InventoryColumn[] = [
   word('reentrant_corner', 'Re-entrant corner', YES_NO, 'yes_no', 're-entrant corner', 'plan shape'),
   word('setback', 'Setback', YES_NO, 'yes_no', 'setback'),
   word('mass_irregularity', 'Mass irregularity', YES_NO, 'yes_no', 'mass irregularity', 'heavy floor'),
+  plain(
+    'reentrant_projection',
+    'number',
+    'Projection beyond a re-entrant corner, share of the plan',
+    [0, 1],
+    'reentrant projection',
+  ),
+  plain(
+    'reentrant_area_share',
+    'number',
+    'Area between outline and hull, share of the floor',
+    [0, 10],
+    'reentrant area share',
+  ),
+  measure('footprint_area_m2', 'Footprint area', 'area', 'm2', [2, 1000000], 'footprint area', 'ground area'),
   text('condition', 'Condition', 'condition'),
   {
     name: 'site_class',

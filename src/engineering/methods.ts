@@ -1,6 +1,6 @@
 /** The register of methods: every record, one array. Ids never change meaning. */
 import { EDITION_YEARS } from './assess/code-history.js';
-import { SPREADS } from './assess/settings.js';
+import { IRREGULARITY, SPREADS } from './assess/settings.js';
 import { MIN_COEFFICIENT_G, OVERSTRENGTH, WORKING_TO_STRENGTH } from './capacity/records.js';
 import {
   BRACE_YIELD_MPA,
@@ -18,8 +18,12 @@ import { COMBINED_PERIOD, FLEXIBLE_BASE } from './assess/combine.js';
 import { CODE_RATIO } from './capacity/code-ratio.js';
 import { CODE_FAMILIES, ERA_RECORDS, SYSTEM_TABLES } from './capacity/families.js';
 import { CAPACITY_RECORDS } from './capacity/records.js';
+import { MASS_FACTOR_TABLE } from './demand/base-shear.js';
+import { DRIFT_MARKS } from './demand/drift.js';
 import { DEMAND_RECORDS } from './demand/records.js';
 import type { AnyRecord } from './formula.js';
+import { IRREGULARITY_EDITIONS, ONE_SIDED_SHARE, USABLE_SHARE } from './irregularity/editions.js';
+import { IRREGULARITY_RECORDS } from './irregularity/records.js';
 import { MEASURED_PERIODS } from './period/measured-records.js';
 import { PERIOD_RECORDS } from './period/periods.js';
 import { PRIORITY_RECORDS } from './priority/records.js';
@@ -56,6 +60,7 @@ export const METHODS: readonly AnyRecord[] = [
   ...CAPACITY_RECORDS,
   ...STRENGTH_RECORDS,
   CODE_RATIO,
+  ...IRREGULARITY_RECORDS,
   ...PRIORITY_RECORDS,
 ];
 
@@ -86,9 +91,13 @@ const TABLES = {
   USE_VALUES,
   STOREY_HEIGHTS,
   SPREADS,
+  IRREGULARITY,
+  MASS_FACTOR_TABLE,
+  DRIFT_MARKS,
+  IRREGULARITY_EDITIONS,
   CRACKING,
   ASSUMED_MATERIALS,
-  factors: [MIN_COEFFICIENT_G, WORKING_TO_STRENGTH, OVERSTRENGTH],
+  factors: [MIN_COEFFICIENT_G, WORKING_TO_STRENGTH, OVERSTRENGTH, ONE_SIDED_SHARE, USABLE_SHARE],
 };
 
 /** What the numbers of the catalogue are, for a fingerprint: the records (id, constants, limits, expression) and the tables. */

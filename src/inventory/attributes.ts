@@ -10,7 +10,15 @@ import type { Inferred } from './infer.js';
 export type Attributes = Readonly<Record<string, Readonly<Record<Origin, number>>>>;
 
 const WITH_ORIGIN = ['year_built', 'use', 'system'] as const;
-const FROM_FOOTPRINT = new Set(['plan_length_m', 'plan_width_m', 'lon', 'lat']);
+const FROM_FOOTPRINT = new Set([
+  'plan_length_m',
+  'plan_width_m',
+  'lon',
+  'lat',
+  'reentrant_projection',
+  'reentrant_area_share',
+  'footprint_area_m2',
+]);
 
 /** Counts where every attribute of the stored buildings comes from; what the study does not map and nothing fills is left out. */
 export async function countAttributes(

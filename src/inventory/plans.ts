@@ -10,6 +10,9 @@ export interface Plans {
   readonly area_m2: Float64Array;
   readonly lon: Float64Array;
   readonly lat: Float64Array;
+  readonly reentrant_projection: Float64Array;
+  readonly reentrant_area_share: Float64Array;
+  readonly footprint_area_m2: Float64Array;
 }
 
 const UNREADABLE = {
@@ -29,6 +32,9 @@ export function readPlans(sizes: Sizes, notes: BuildingNotes): Plans {
     area_m2: new Float64Array(rows),
     lon: take(sizes.lon),
     lat: take(sizes.lat),
+    reentrant_projection: take(sizes.reentrant_projection),
+    reentrant_area_share: take(sizes.reentrant_area_share),
+    footprint_area_m2: take(sizes.footprint_area_m2),
   };
   const fill = (array: Float64Array, at: number, value: number): void => {
     if (Number.isNaN(array[at])) array[at] = value;
@@ -45,6 +51,9 @@ export function readPlans(sizes: Sizes, notes: BuildingNotes): Plans {
       fill(plans.width_m, at, found.width_m);
       fill(plans.lon, at, found.lon);
       fill(plans.lat, at, found.lat);
+      fill(plans.reentrant_projection, at, found.reentrant_projection);
+      fill(plans.reentrant_area_share, at, found.reentrant_area_share);
+      fill(plans.footprint_area_m2, at, found.area_m2);
     } else if (text !== null) {
       const message = 'the footprint is not a polygon of longitudes and latitudes: POLYGON ((lon lat, lon lat, …))';
       notes.add(UNREADABLE, sizes.first_row[at] ?? 0, text.slice(0, 200), message);

@@ -18,6 +18,9 @@ const NUMBERS = [
   'count',
   'lon',
   'lat',
+  'reentrant_projection',
+  'reentrant_area_share',
+  'footprint_area_m2',
 ] as const;
 type NumberName = (typeof NUMBERS)[number];
 

@@ -12,7 +12,15 @@ import type { Mapping } from './header.js';
 import type { Plans } from './plans.js';
 import type { Sizes } from './sizes.js';
 
-const PLANNED = ['plan_length_m', 'plan_width_m', 'lon', 'lat'] as const;
+const PLANNED = [
+  'plan_length_m',
+  'plan_width_m',
+  'lon',
+  'lat',
+  'reentrant_projection',
+  'reentrant_area_share',
+  'footprint_area_m2',
+] as const;
 
 /** Why a building cannot be ranked for what the inventory says of it. */
 export const SIZELESS = 'no-size: neither storeys, height, floor area, plan nor use is known';
@@ -134,7 +142,8 @@ function sourceOf(mapping: Mapping, readings: Readings) {
 
 /** Plan sides and coordinates where they are not simply those of the file: read from footprints, or left off the map. */
 function plannedColumns(mapping: Mapping, { plans, sizes }: BuildingParts): ReadonlyMap<string, Float64Array> {
-  const values = { plan_length_m: plans.length_m, plan_width_m: plans.width_m, lon: plans.lon, lat: plans.lat };
+  const { length_m, width_m, area_m2: _, ...rest } = plans;
+  const values = { plan_length_m: length_m, plan_width_m: width_m, ...rest };
   const planned = new Map<string, Float64Array>();
   for (const name of PLANNED) {
     const given = sizes[name];

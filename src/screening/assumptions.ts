@@ -1,6 +1,8 @@
 /** The assumptions register and the cautions that every report carries. */
 import { assumedWith } from '../engineering/assess/assumed.js';
+import { NO_IRREGULARITY_CHANCES } from '../engineering/assess/settings.js';
 import type { AssessSettings } from '../engineering/assess/settings.js';
+import { IRREGULARITY_EDITIONS } from '../engineering/irregularity/editions.js';
 import { compileContext } from '../engineering/assess/context.js';
 import { standardNote, standardRead } from '../engineering/period/choose.js';
 import type { Assumption } from '../engineering/page-contract.js';
@@ -15,8 +17,9 @@ const JUDGEMENT = 'judgement';
 /** What a run assumed, each with its value and source. */
 export function assumptionsOf(settings: AssessSettings, slopes: readonly SlopeFound[]): readonly Assumption[] {
   const { spreads, period, codeHistory } = settings;
-  const { ductility, irregularity, leastCoefficient, overstrength, retrofitLevel, peopleWeight, importanceWeight } =
-    assumedWith(settings.assumed);
+  const { ductility, leastCoefficient, overstrength, retrofitLevel, peopleWeight, importanceWeight } = assumedWith(
+    settings.assumed,
+  );
   const read = standardRead(period.standard, period.basis);
   const list: Assumption[] = [
     {
@@ -182,12 +185,7 @@ export function assumptionsOf(settings: AssessSettings, slopes: readonly SlopeFo
       value: 'yes',
       source: 'simplification: chances of single buildings are hardly affected',
     },
-    {
-      id: 'irregularity',
-      statement: 'Irregularities given as yes multiply capacity',
-      value: `soft or weak storey ${String(irregularity.storey)}, torsion ${String(irregularity.torsion)}, others ${String(irregularity.other)} each; blank counts as none`,
-      source: JUDGEMENT,
-    },
+    ...irregularityAssumptions(settings),
     {
       id: 'system-prior',
       statement: 'Chances of the lateral system where it is not known',
@@ -218,6 +216,37 @@ export function assumptionsOf(settings: AssessSettings, slopes: readonly SlopeFo
     { id: 'rank-by', statement: 'What is ranked', value: settings.rankBy, source: 'study' },
   ];
   return list;
+}
+
+/** Factors, chances and limits of irregularities. */
+function irregularityAssumptions({ irregularity }: AssessSettings): readonly Assumption[] {
+  const { factors, chances } = irregularity ?? NO_IRREGULARITY_CHANCES;
+  const { soft_storey: soft, weak_storey: weak } = chances;
+  const share = (chance: number): string => `${String(Math.round(chance * 1000) / 10)} %`;
+  const set = 'study, defaults judgement';
+  const factorsFound: Assumption = {
+    id: 'irregularity',
+    statement: 'Irregularities multiply capacity',
+    value: `soft or weak storey ${String(factors.soft_or_weak_storey)}, torsion ${String(factors.torsion)}, re-entrant corner ${String(factors.reentrant_corner)}, setback ${String(factors.setback)}, mass ${String(factors.mass_irregularity)}`,
+    source: set,
+  };
+  if (irregularity === undefined)
+    return [{ ...factorsFound, value: `${factorsFound.value}; blank counts as none`, source: JUDGEMENT }];
+  return [
+    factorsFound,
+    {
+      id: 'irregularity-chances',
+      statement: 'Chance of an irregularity where the row neither says nor shows it; the capacity is a mixture',
+      value: `soft storey ${share(soft.frame)} of frames, ${share(soft.wall)} of others; weak storey ${share(weak.frame)}, ${share(weak.wall)}; torsion ${share(chances.torsion)}, re-entrant corner ${share(chances.reentrant_corner)}, setback ${share(chances.setback)}, mass ${share(chances.mass_irregularity)}`,
+      source: set,
+    },
+    {
+      id: 'irregularity-limits',
+      statement: 'Limits that tell irregularities from storey stiffness, heights, areas and footprint',
+      value: IRREGULARITY_EDITIONS[irregularity.edition].title,
+      source: 'study',
+    },
+  ];
 }
 
 /** What the spectra that some level reads say about their parameters, and by which table a velocity becomes a site class. */

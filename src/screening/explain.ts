@@ -1,6 +1,7 @@
 /** One building of a run again, with its hand calculation: the stored inputs through the same code. */
 import { assess, isRanked } from '../engineering/assess/assess.js';
 import type { Assessment, NotRanked } from '../engineering/assess/assess.js';
+import { closenessOf, swayOf } from '../engineering/assess/neighbours.js';
 import { compileContext } from '../engineering/assess/context.js';
 import type { Building } from '../engineering/building.js';
 import { buildingAt } from '../engineering/building-columns.js';
@@ -13,6 +14,7 @@ import { Bug, UserError, showValue } from '../errors.js';
 import type { Database } from '../store/database.js';
 import { quoteName } from '../store/sql.js';
 import { readGrids } from './kept-grids.js';
+import { neighboursOf } from './neighbours.js';
 import { readRun } from './page-data.js';
 import type { StoredRun } from './page-data.js';
 import { readBuildings, readPools } from './read-buildings.js';
@@ -40,10 +42,15 @@ export async function explainBuilding(db: Database, runId: number, id: string, d
   const { columns } = await readBuildings(db, run.inventory_id, { from: at, to: at + 1 }, { places: true });
   const building = buildingAt(columns, 0, await readPools(db, run.inventory_id));
   const trace = new Trace();
-  const result =
-    found.not_ranked === null
-      ? assess(building, compileContext(run.settings, await readGrids(db, run.settings)), trace)
-      : { id, reason: found.not_ranked };
+  const context = compileContext(run.settings, await readGrids(db, run.settings));
+  const result = found.not_ranked === null ? assess(building, context, trace) : { id, reason: found.not_ranked };
+  if (isRanked(result)) {
+    const own = swayOf(building, context);
+    for (const { building: other, ...gap } of await neighboursOf(db, run.inventory_id, at, id)) {
+      const sway = swayOf(other, context);
+      if (own !== null && sway !== null) closenessOf(own, sway, gap, trace);
+    }
+  }
   const names = RESULT_COLUMNS.map(({ name }) => quoteName(name)).join(', ');
   const [stored] = await db.rows(`SELECT ${names} FROM result WHERE run_id = ? AND building_index = ?`, [runId, at]);
   if (stored === undefined) throw new Bug(`run ${String(runId)} has no result for building ${String(at)}`);

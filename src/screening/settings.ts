@@ -96,5 +96,6 @@ export async function settingsOf(
     slopeSource: typeof study.ranking.k === 'number' ? 'stated' : 'assumed',
     spreads: SPREADS,
     assumed: ASSUMED,
+    irregularity: study.irregularity,
   };
 }

@@ -1,7 +1,7 @@
 /** What a sensitivity run switches: every entry of the register of assumptions that can be, each to one or more other values. */
 import { ASSUMED, assumedWith } from '../engineering/assess/assumed.js';
 import type { Assumed } from '../engineering/assess/assumed.js';
-import { RANK_BY } from '../engineering/assess/settings.js';
+import { NO_IRREGULARITY_CHANCES, RANK_BY } from '../engineering/assess/settings.js';
 import type { AssessSettings, RankBy, Spreads } from '../engineering/assess/settings.js';
 import type { Assumption } from '../engineering/page-contract.js';
 import type { Mark, Switch } from './switch.js';
@@ -131,7 +131,7 @@ function historySwitches(settings: AssessSettings): readonly Switch[] {
 }
 
 function capacitySwitches(settings: AssessSettings): readonly Switch[] {
-  const { ductility, irregularity } = assumedWith(settings.assumed);
+  const { ductility } = assumedWith(settings.assumed);
   const one = (assumption: string, to: string, change: Partial<Assumed>, from?: string): Switch => {
     return { assumption, to, settings: assuming(settings, change), ...(from === undefined ? {} : { from }) };
   };
@@ -143,11 +143,6 @@ function capacitySwitches(settings: AssessSettings): readonly Switch[] {
     after: 1 + factor * (ductility.after - 1),
     special: 1 + factor * (ductility.special - 1),
   });
-  const squared = {
-    storey: irregularity.storey ** 2,
-    torsion: irregularity.torsion ** 2,
-    other: irregularity.other ** 2,
-  };
   return [
     ...[0.02, 0.08].map((leastCoefficient) => one('floor', String(leastCoefficient), { leastCoefficient })),
     ...[1.5, 3].map((overstrength) => one('overstrength', `Ω ${overstrength.toFixed(1)}`, { overstrength })),
@@ -162,8 +157,56 @@ function capacitySwitches(settings: AssessSettings): readonly Switch[] {
       ductility: { brittle: 2, none: 2, before: 2, after: 2, special: 2 },
     }),
     { assumption: 'era-spread', to: 'σ × 1.5', settings: spreading(settings, ['era', 'eraTable'], 1.5) },
-    one('irregularity', 'no factor', { irregularity: { storey: 1, torsion: 1, other: 1 } }),
-    one('irregularity', 'each factor squared', { irregularity: squared }),
+    ...irregularitySwitches(settings),
+  ];
+}
+
+function irregularitySwitches(settings: AssessSettings): readonly Switch[] {
+  const own = settings.irregularity ?? NO_IRREGULARITY_CHANCES;
+  const factors = (change: (factor: number) => number): AssessSettings => {
+    const { soft_or_weak_storey, torsion, reentrant_corner, setback, mass_irregularity } = own.factors;
+    return {
+      ...settings,
+      irregularity: {
+        ...own,
+        factors: {
+          soft_or_weak_storey: change(soft_or_weak_storey),
+          torsion: change(torsion),
+          reentrant_corner: change(reentrant_corner),
+          setback: change(setback),
+          mass_irregularity: change(mass_irregularity),
+        },
+      },
+    };
+  };
+  const chances = (times: number): AssessSettings => {
+    const { soft_storey: soft, weak_storey: weak, torsion, reentrant_corner, setback, mass_irregularity } = own.chances;
+    const of = (chance: number): number => Math.min(1, times * chance);
+    return {
+      ...settings,
+      irregularity: {
+        ...own,
+        chances: {
+          soft_storey: { frame: of(soft.frame), wall: of(soft.wall) },
+          weak_storey: { frame: of(weak.frame), wall: of(weak.wall) },
+          torsion: of(torsion),
+          reentrant_corner: of(reentrant_corner),
+          setback: of(setback),
+          mass_irregularity: of(mass_irregularity),
+        },
+      },
+    };
+  };
+  return [
+    { assumption: 'irregularity', to: 'no factor', settings: factors(() => 1) },
+    { assumption: 'irregularity', to: 'each factor squared', settings: factors((factor) => factor * factor) },
+    // runs of earlier versions have no such entry in their register
+    ...(settings.irregularity === undefined
+      ? []
+      : [
+          { assumption: 'irregularity-chances', to: 'blank counts as none', settings: chances(0) },
+          { assumption: 'irregularity-chances', to: 'chances doubled', settings: chances(2) },
+        ]),
   ];
 }
 
@@ -242,6 +285,7 @@ const REASONS: readonly (readonly [RegExp, string])[] = [
   [/^cracking$/, 'a constant of the stiffness models; their bias is switched as a whole'],
   [/^foundation$/, 'a constant of the stiffness models; their bias is switched as a whole'],
   [/^amplitude$/, 'a constant of the records of measured periods'],
+  [/^irregularity-limits$/, 'limits that tell what a row shows; the factors and the chances are switched'],
   [/^reductions$/, 'a table, not a number; overstrength and ductility are switched'],
   [/^site-class-/, 'the code is that of the spectra'],
   [/^spectrum-/, 'a remark on the spectrum; its level is switched'],

@@ -127,6 +127,12 @@ export const MIGRATIONS: readonly Migration[] = [
       'own-19', 'own-20', 'own-21', 'own-22', 'own-23', 'own-24')`,
     ],
   },
+  {
+    version: 3,
+    statements: ['reentrant_projection', 'reentrant_area_share', 'footprint_area_m2'].map(
+      (name) => `ALTER TABLE building_extra ADD COLUMN "${name}" DOUBLE`,
+    ),
+  },
 ];
 
 /**

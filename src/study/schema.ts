@@ -10,6 +10,7 @@ import { BudgetSchema } from './budget-schema.js';
 import { CodeHistorySchema } from './code-editions.js';
 import { expected, list, mapping, number, strict, text, whole, word } from './fields.js';
 import { InventorySchema, NeighboursSchema, WordsSchema } from './inventory-schema.js';
+import { IrregularitySchema } from './irregularity-schema.js';
 import { SpectrumSchema } from './spectrum-codes.js';
 import { SurveySchema } from './survey-schema.js';
 
@@ -150,6 +151,7 @@ export const StudySchema = strict({
   system_prior: text('the path of a file')
     .exactOptional()
     .describe('Table of chances of the lateral system by use, storeys and year; needed where systems are unknown.'),
+  irregularity: IrregularitySchema.prefault({}).describe('Irregularities: limits, factors, chances.'),
   ranking: RankingSchema.prefault({}).describe('What the list is ordered by, and how long it is.'),
   survey: SurveySchema.prefault({}).describe('What visits cost and find out, for planning a survey.'),
   budget: BudgetSchema.exactOptional().describe('What assessments cost, and which must or must not be among them.'),

@@ -306,6 +306,21 @@ describe('takeIn', () => {
     expect(codes(intake)).toEqual(['not-a-polygon']);
   });
 
+  it('measures re-entrant corners of footprints, and keeps what the row says of them', async () => {
+    const l = 'POLYGON ((0 0, 0.0004 0, 0.0004 0.0002, 0.0002 0.0002, 0.0002 0.0004, 0 0.0004, 0 0))';
+    const intake = await intakeOfText(`id;f;r\nA;${l};\nB;${l};0.07\nC;;\n`, {
+      columns: { id: 'id', footprint: 'f', reentrant_projection: 'r' },
+    });
+    // half of each side beyond the corner; the triangle of the hull is an eighth of the square, the floor three quarters
+    expect(building(intake, 'A')).toMatchObject({
+      reentrant_projection: expect.closeTo(0.5, 6),
+      reentrant_area_share: expect.closeTo(1 / 6, 6),
+    });
+    expect(Number(building(intake, 'A')['footprint_area_m2'])).toBeCloseTo(0.75 * 44.53 * 44.23, -1);
+    expect(building(intake, 'B')).toMatchObject({ reentrant_projection: 0.07 });
+    expect(building(intake, 'C')).toMatchObject({ reentrant_projection: null, footprint_area_m2: null });
+  });
+
   it('reads neighbours and notes pairs that name no building', async () => {
     const file = writeTable(`${HEADER}A,3,,,,\nB,2,,,,\n`);
     const pairs = writeTable('id_a,id_b,gap_m,floors_aligned\nA,B,0.05,yes\nA,C,1,\nB,A,wide,maybe\n', 'pairs.csv');

@@ -4,6 +4,8 @@ import { CAPACITY_CASES } from './capacity-cases.js';
 import type { ReferenceCase } from './case.js';
 import { ERA_CASES } from './era-cases.js';
 import { GRID_CASES } from './grid-cases.js';
+import { DEMAND_CASES } from './demand-cases.js';
+import { IRREGULARITY_CASES } from './irregularity-cases.js';
 import { MEASURED_CASES } from './measured-cases.js';
 import { ANSWERED_CODE_CASES } from './period-cases-answers.js';
 import { CODE_PERIOD_CASES } from './period-cases-codes.js';
@@ -40,6 +42,8 @@ export const REFERENCE_CASES: readonly ReferenceCase[] = [
   ...ERA_CASES,
   ...CAPACITY_CASES,
   ...STRENGTH_CASES,
+  ...IRREGULARITY_CASES,
+  ...DEMAND_CASES,
   ...VIBRATION_CASES,
   ...GRID_CASES,
 ];

@@ -42,6 +42,9 @@ const BLANK: Building = {
   reentrant_corner: null,
   setback: null,
   mass_irregularity: null,
+  reentrant_projection: NaN,
+  reentrant_area_share: NaN,
+  footprint_area_m2: NaN,
   site_class: 'C',
   hazard_zone: null,
   lon: NaN,
@@ -55,6 +58,16 @@ const BLANK: Building = {
 
 /** The invented building with `fields` changed. */
 export const building = (fields: Partial<Building> = {}): Building => ({ ...BLANK, ...fields });
+
+/** Flags of a building that is irregular in no way, all on record. */
+export const NO_IRREGULARITY = {
+  soft_storey: 'no',
+  weak_storey: 'no',
+  torsion: 'no',
+  reentrant_corner: 'no',
+  setback: 'no',
+  mass_irregularity: 'no',
+} as const satisfies Partial<Building>;
 
 /** What is known of a structure: nothing but `fields`. */
 export const structure = (fields: Partial<Structure>): Structure => ({

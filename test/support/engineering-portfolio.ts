@@ -13,10 +13,22 @@ import type { Random } from './engineering-random.js';
 const USES: readonly Use[] = ['residential', 'office', 'school', 'hospital', 'retail', 'unknown'];
 const CHANGE_YEARS = [1952, 1963, 1978, 1990, 1999, 2002];
 
+/** Written out here, not taken from the program: systems of frames, and what one storey cannot have. */
+const FRAMES = new Set<System>([
+  'steel-moment-frame',
+  'concrete-moment-frame',
+  'concrete-infilled-frame',
+  'precast-concrete-frame',
+  'timber-post-and-beam',
+]);
+const FLAGS = ['soft_storey', 'weak_storey', 'torsion', 'reentrant_corner', 'setback', 'mass_irregularity'] as const;
+const COMPARE = new Set<string>(['soft_storey', 'weak_storey', 'setback', 'mass_irregularity']);
+
 /** `count` invented buildings: system, year, height, people each known or not; a few measured, with stiffness, drawings or an assessed capacity. */
 export function inventedPortfolio(count: number, random: Random): readonly Building[] {
   const { uniform, normal } = random;
   const pick = <T>(list: readonly T[]): T => list[Math.floor(uniform() * list.length)]!;
+  const flag = (): 'yes' | 'no' | null => (uniform() < 0.05 ? 'yes' : uniform() < 0.2 ? 'no' : null);
   const year = (): number => Math.floor(1905 + 115 * uniform());
   return Array.from({ length: count }, (_, i) => {
     const use = pick(USES);
@@ -59,8 +71,12 @@ export function inventedPortfolio(count: number, random: Random): readonly Build
       storey_stiffness_kN_per_m: stiff
         ? { longitudinal: [stiffness], transverse: [stiffness * 0.7] }
         : { longitudinal: null, transverse: null },
-      soft_storey: uniform() < 0.05 ? 'yes' : null,
-      torsion: uniform() < 0.05 ? 'yes' : null,
+      soft_storey: flag(),
+      weak_storey: uniform() < 0.3 ? 'no' : null,
+      torsion: flag(),
+      reentrant_corner: flag(),
+      setback: flag(),
+      mass_irregularity: uniform() < 0.1 ? 'no' : null,
       site_class: pick(['B', 'C', 'D']),
       year_retrofitted: retrofitted ? 1985 + Math.floor(25 * uniform()) : NaN,
       design_base_shear_coefficient: drawings ? 0.05 + 0.1 * uniform() : NaN,
@@ -86,11 +102,12 @@ export interface Drawer {
 
 /**
  * Draws the unknown inputs of `original` from what the study says of them: year (pool, then either side of it), system of the
- * prior row that fits, height, period by the evidence at that height and system with its error, overstrength, era, people, level
- * of the drawings. The periods are handed over as measured in strong shaking.
+ * prior row that fits, irregularities by the chances of that system, height, period by the evidence at that height and system with
+ * its error, overstrength, era, people, level of the drawings. The periods are handed over as measured in strong shaking.
  */
 export function drawerOf(original: Building, context: AssessContext, { uniform, normal }: Random): Drawer {
-  const { spreads, systemPrior } = context.settings;
+  const { spreads, systemPrior, irregularity } = context.settings;
+  const { chances } = irregularity!;
   const people = peopleOf(original, context);
   if (typeof people === 'string') throw new Error(people);
   const retrofitted = original.year_retrofitted > 0;
@@ -124,14 +141,14 @@ export function drawerOf(original: Building, context: AssessContext, { uniform, 
     const built = original.years.length === 0 ? NaN : original.years[Math.floor(uniform() * original.years.length)]!;
     let system = original.system;
     if (system === null) {
-      const { chances } = matchPrior(systemPrior!, original.use, original.storeys.value, built)!;
+      const row = matchPrior(systemPrior!, original.use, original.storeys.value, built)!.chances;
       let left = uniform();
       let i = 0;
-      while (i < chances.length - 1 && left >= chances[i]!.chance) {
-        left -= chances[i]!.chance;
+      while (i < row.length - 1 && left >= row[i]!.chance) {
+        left -= row[i]!.chance;
         i += 1;
       }
-      system = chances[i]!.system;
+      system = row[i]!.system;
     }
     if (retrofitted) {
       years[0] = built;
@@ -142,6 +159,15 @@ export function drawerOf(original: Building, context: AssessContext, { uniform, 
     } else years[0] = built + change();
     drawn.system = system;
     const across = original.system_transverse ?? system;
+    const isFrame = FRAMES.has(system) || FRAMES.has(across);
+    const oneStorey = original.storeys.value < 2;
+    for (const name of FLAGS) {
+      if (original[name] !== null) continue;
+      const prior = chances[name];
+      const chance =
+        oneStorey && COMPARE.has(name) ? 0 : typeof prior === 'number' ? prior : isFrame ? prior.frame : prior.wall;
+      drawn[name] = uniform() < chance ? 'yes' : 'no';
+    }
     height.value = original.height_m.value * Math.exp(original.height_m.sigma * normal());
     const z = normal();
     const a = periodAt(modelOf('longitudinal', system), height.value, context);

@@ -1,6 +1,6 @@
 /** Invented study settings for tests of the engineering: three site classes, a code history, a table of system chances. */
 import type { AssessSettings, Spreads } from '../../src/engineering/assess/settings.js';
-import { SPREADS } from '../../src/engineering/assess/settings.js';
+import { IRREGULARITY, SPREADS } from '../../src/engineering/assess/settings.js';
 import type { SystemPriorGroup } from '../../src/engineering/prior/system-prior.js';
 
 const group = (
@@ -70,6 +70,7 @@ export const SETTINGS: AssessSettings = {
   slope: 2.5,
   slopeSource: 'assumed',
   spreads: SPREADS,
+  irregularity: IRREGULARITY,
 };
 
 /** Every spread 0: the drawn inputs are taken as they are. */

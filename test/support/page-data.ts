@@ -4,7 +4,7 @@ import type { BuildingColumns } from '../../src/engineering/building-columns.js'
 import { assess, isRanked } from '../../src/engineering/assess/assess.js';
 import type { Assessment, NotRanked } from '../../src/engineering/assess/assess.js';
 import { compileContext } from '../../src/engineering/assess/context.js';
-import { SPREADS } from '../../src/engineering/assess/settings.js';
+import { IRREGULARITY, SPREADS } from '../../src/engineering/assess/settings.js';
 import type { AssessSettings } from '../../src/engineering/assess/settings.js';
 import { normalCdf } from '../../src/engineering/numeric/normal.js';
 import type { PageBuildings, PageData, PageSummary } from '../../src/engineering/page-contract.js';
@@ -64,6 +64,7 @@ export const SETTINGS: AssessSettings = {
   slope: { 'design-c': 2.6, 'design-d': 3.1 },
   slopeSource: 'two levels',
   spreads: SPREADS,
+  irregularity: IRREGULARITY,
 };
 
 /** The numeric recipe of a linear congruential generator, enough for invented rows. */

@@ -14,6 +14,7 @@ import { casesOf } from './cases.js';
 import { chooseSpectrum } from './choose-spectrum.js';
 import { readAt, slopeFor } from './context.js';
 import type { AssessContext } from './context.js';
+import { demandsOf } from './demands.js';
 import { flagsOf } from './flags.js';
 import { integrate } from './integrate.js';
 import type { PeriodBand } from './integrate.js';
@@ -91,8 +92,10 @@ export function assess(
   const leading = leadingCase(building, cases, choice, slope_k, context, trace);
   if (typeof leading === 'string') return { id, reason: leading };
   const weak = weakOf(building, cases, context.settings.codeHistory);
-  if (trace !== undefined)
+  if (trace !== undefined) {
+    demandsOf(building, cases, choice, leading, context, trace);
     closeTrace(trace, { building, cases, choice, slope_k, context, mixture, lnPriority, sd: moments.sd });
+  }
   return {
     id,
     mixture,
@@ -107,6 +110,6 @@ export function assess(
     spectrum: spectrum.name,
     weakType: weak.name,
     weakChance: weak.chance,
-    flags: flagsOf(building, cases, choice, leading, pass.disagreement),
+    flags: flagsOf(building, cases, choice, leading, pass.disagreement, context),
   };
 }

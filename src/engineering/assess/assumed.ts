@@ -17,22 +17,12 @@ export interface Ductilities {
   readonly special: number;
 }
 
-/** Factors on capacity of irregularities given as "yes" [judgement]. */
-export interface IrregularityFactors {
-  /** Soft or weak storey. */
-  readonly storey: number;
-  readonly torsion: number;
-  /** Re-entrant corner, setback, irregular mass: each. */
-  readonly other: number;
-}
-
 export interface Assumed {
   /** Least strength coefficient, V/W [judgement]. */
   readonly leastCoefficient: number;
   /** Ω [judgement]. */
   readonly overstrength: number;
   readonly ductility: Ductilities;
-  readonly irregularity: IrregularityFactors;
   /** Share of its year's code that a retrofit reached where the row does not say [judgement]. */
   readonly retrofitLevel: number;
   readonly uses: Readonly<Record<Use, UseValues>>;
@@ -47,7 +37,6 @@ export const ASSUMED: Assumed = {
   leastCoefficient: MIN_COEFFICIENT_G,
   overstrength: OVERSTRENGTH,
   ductility: { brittle: 1.5, none: 2, before: 2, after: 3, special: 4 },
-  irregularity: { storey: 0.7, torsion: 0.8, other: 0.9 },
   retrofitLevel: 0.75,
   uses: USE_VALUES,
   peopleWeight: 1,
@@ -62,7 +51,6 @@ export function assumedWith(stated: Partial<Assumed> | undefined): Assumed {
     ...ASSUMED,
     ...stated,
     ductility: { ...ASSUMED.ductility, ...stated.ductility },
-    irregularity: { ...ASSUMED.irregularity, ...stated.irregularity },
     uses: { ...ASSUMED.uses, ...stated.uses },
   };
 }

@@ -9,7 +9,6 @@ import { cite } from '../source.js';
 import type { Verified } from '../source.js';
 import type { Trace } from '../trace.js';
 import { detailingOf, ductilityOf, editionOf, familyOf } from './code-history.js';
-import type { IrregularityFactors } from './assumed.js';
 import type { EditionId } from './code-history.js';
 import { ln } from '../numeric/elementary.js';
 import { entryOf } from './case-memory.js';
@@ -203,14 +202,4 @@ export function capacityAtHeight(
 /** Share of the mass in the first mode: 1 up to two storeys, 0.85 above (EN 1998-1 4.3.3.2.2 λ). */
 export function massShare(building: Building): number {
   return building.storeys.value > 2 ? 0.85 : 1;
-}
-
-/** Product of the irregularity factors of the flags given as "yes". */
-export function irregularityFactor(building: Building, { storey, torsion, other }: IrregularityFactors): number {
-  let factor = 1;
-  if (building.soft_storey === 'yes' || building.weak_storey === 'yes') factor *= storey;
-  if (building.torsion === 'yes') factor *= torsion;
-  for (const flag of [building.reentrant_corner, building.setback, building.mass_irregularity])
-    if (flag === 'yes') factor *= other;
-  return factor;
 }

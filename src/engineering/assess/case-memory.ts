@@ -50,6 +50,19 @@ export interface Cases {
 
 export type EraChances = readonly { readonly era: Era; readonly chance: number }[];
 
+/** What an irregularity does to the capacity of a building; independent of its systems but for the chance of the storey. */
+export interface Irregularity {
+  /** Chance of a soft or weak storey where a frame carries sideways load, and where walls or braces do. */
+  readonly storeyChance: { readonly frame: number; readonly wall: number };
+  /** ln of its factor. */
+  readonly lnStorey: number;
+  /** Mean and variance of ln of the factor of the others. */
+  readonly lnRest: number;
+  readonly varianceRest: number;
+  /** The whole factor at its central value, without a soft or weak storey and with one. */
+  readonly central: readonly [number, number];
+}
+
 export interface CaseMemory {
   readonly cases: Map<string, Cases | string>;
   /** By system and years, for the common building: one system in both directions, no retrofit. */
@@ -60,6 +73,8 @@ export interface CaseMemory {
   readonly pools: WeakMap<readonly number[], number>;
   readonly eras: Map<number, EraChances>;
   readonly designs: Map<string, Design>;
+  /** By the states of the flags (irregularity.ts). */
+  readonly irregularities: (Irregularity | undefined)[];
   poolCount: number;
   /** Lists of cases kept. */
   count: number;
@@ -73,6 +88,7 @@ export function newCaseMemory(): CaseMemory {
     pools: new WeakMap(),
     eras: new Map(),
     designs: new Map(),
+    irregularities: [],
     poolCount: 0,
     count: 0,
   };

@@ -6,6 +6,7 @@ import type { Trace } from '../trace.js';
 import type { Case, Cases } from './case-memory.js';
 import type { SpectrumChoice } from './choose-spectrum.js';
 import type { AssessContext } from './context.js';
+import { REGULAR, irregularityOf, storeyChanceOf } from './irregularity.js';
 import { leadingCase, scoreOf } from './leading.js';
 
 interface Closing {
@@ -41,12 +42,13 @@ export function closeTrace(trace: Trace, closing: Closing): void {
     const rest = cases.list.slice(SHOWN).reduce((sum, { chance }) => sum + chance, 0);
     trace.value('further cases', String(cases.list.length - SHOWN), 'prior', `together ${formatShare(rest)}`);
   }
+  irregularWords(trace, closing);
   for (let i = mixture.from; i < mixture.to; i += 1) {
     trace.value(
       `part ${String(i - mixture.from + 1)} of the distribution of ln S`,
       `weight ${formatNumber(mixture.weight[i]!, 4)}, mean ${formatNumber(mixture.mean[i]!, 5)}, standard deviation ${formatNumber(mixture.sd[i]!, 4)}`,
       'computed',
-      'gathered from all cases and the nodes of period and height; strength, era and people make the standard deviation',
+      'gathered from all cases, the nodes of period and height, and the soft or weak storey where it is not known; strength, era, the other irregularities and people make the standard deviation',
     );
   }
   trace.value('ln_priority_sd', sd, 'computed', 'standard deviation of the whole distribution');
@@ -57,6 +59,24 @@ export function closeTrace(trace: Trace, closing: Closing): void {
     context.settings.rankBy === 'demand'
       ? 'ln of the larger S_a of the two directions at their median periods'
       : 'median: the ln S at which Σ weight × Φ((ln S - mean) / standard deviation) is one half',
+  );
+}
+
+/** What a soft or weak storey does in a case where it is not known whether there is one. */
+function irregularWords(trace: Trace, { building, cases, slope_k, context }: Closing): void {
+  const without = context.settings.rankBy === 'demand' || building.capacity_sa_g > 0;
+  const irregularity = without ? REGULAR : irregularityOf(building, context);
+  const { frame, wall } = irregularity.storeyChance;
+  const open = cases.list.some((which) => {
+    const chance = storeyChanceOf(irregularity, which);
+    return chance > 0 && chance < 1;
+  });
+  if (!open) return;
+  trace.value(
+    'soft or weak storey',
+    `ln S higher by ${formatNumber(-slope_k * irregularity.lnStorey, 4)} with one; chance ${formatShare(frame)} where a frame stands, ${formatShare(wall)} elsewhere`,
+    'prior',
+    'every case counts twice, without one and with one, each with its chance: a blank is not the best case',
   );
 }
 

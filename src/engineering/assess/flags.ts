@@ -4,6 +4,8 @@ import { DIRECTIONS } from '../direction.js';
 import { siteCloseness } from '../site/closeness.js';
 import type { Cases } from './case-memory.js';
 import type { SpectrumChoice } from './choose-spectrum.js';
+import type { AssessContext } from './context.js';
+import { irregularitiesRead } from './irregularity.js';
 import type { LeadingCase } from './leading.js';
 
 export const FLAGS: Readonly<Record<string, string>> = {
@@ -24,6 +26,10 @@ export const FLAGS: Readonly<Record<string, string>> = {
   'near-site-period': 'The period of a direction is within 25 % of that of the ground.',
   'grows-into-site-period': 'Stiffer than the ground; in strong shaking the period may grow into that of the ground.',
   'near-edition-change': 'Built within a few years of a change of code; both editions count.',
+  'soft-storey-read': 'A soft storey is read from storey stiffness or the height of the first storey.',
+  'torsion-read': 'Torsion is read from the wall areas: one wall has most of a direction.',
+  'reentrant-corner-read': 'A re-entrant corner is read from the footprint.',
+  'setback-read': 'A setback is read from floor area, storeys and footprint.',
   'design-level-unknown': 'The level of the design coefficient is not stated; both levels count.',
 };
 
@@ -43,6 +49,22 @@ function closestToSite({ directions }: LeadingCase, { structure }: Building): (t
   return BY_CLOSENESS.find((closeness) => found.includes(closeness)) ?? null;
 }
 
+/** True where an irregularity may be read from numbers: most rows have none of them. */
+function hasNumbers({
+  first_storey_height_m,
+  reentrant_projection,
+  structure,
+  storey_stiffness_kN_per_m,
+}: Building): boolean {
+  return (
+    first_storey_height_m > 0 ||
+    reentrant_projection >= 0 ||
+    structure !== null ||
+    storey_stiffness_kN_per_m.longitudinal !== null ||
+    storey_stiffness_kN_per_m.transverse !== null
+  );
+}
+
 /** Codes of the flags that apply, in the order of FLAGS. */
 export function flagsOf(
   building: Building,
@@ -50,6 +72,7 @@ export function flagsOf(
   { spectrum, byDefault, classFlag }: SpectrumChoice,
   leading: LeadingCase,
   disagreement: number,
+  context: AssessContext,
 ): readonly string[] {
   const flags: string[] = [];
   if (!cases.systemKnown) flags.push('system-unknown');
@@ -67,6 +90,8 @@ export function flagsOf(
   const site = closestToSite(leading, building);
   if (site !== null) flags.push(SITE_FLAGS[site]);
   if (building.years.length === 1 && cases.systemKnown && cases.list.length > 1) flags.push('near-edition-change');
+  if (hasNumbers(building))
+    for (const name of irregularitiesRead(building, context)) flags.push(`${name.replaceAll('_', '-')}-read`);
   if (building.design_base_shear_coefficient > 0 && building.design_level === null) flags.push('design-level-unknown');
   return flags;
 }

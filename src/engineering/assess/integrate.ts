@@ -11,6 +11,7 @@ import type { AssessContext, ContextSpectrum } from './context.js';
 import { curveAt, curvesOf, isByHeight, reducedAt } from './curve.js';
 import { MOST_HEIGHTS } from './curve-memory.js';
 import type { Curve, KeptBand, PeriodBand } from './curve-memory.js';
+import { REGULAR, irregularityOf, storeyChanceOf } from './irregularity.js';
 import type { People } from './people.js';
 import { NO_PERIOD, alikeAcross, periodModel } from './period.js';
 import type { PeriodEstimate, PeriodModel } from './period.js';
@@ -42,7 +43,7 @@ interface Band {
 
 /**
  * Adds every node of every case to the mixture and returns the percentiles of the periods. `told` hears, after the nodes of a case at
- * a node of the height are added, which they were.
+ * a node of the height, without a soft or weak storey (0) or with one (1), are added, which they were.
  */
 export function integrate(
   building: Building,
@@ -52,7 +53,7 @@ export function integrate(
   slope_k: number,
   context: AssessContext,
   scratch: Scratch,
-  told?: (which: Case, heightNode: number) => void,
+  told?: (which: Case, heightNode: number, storey: 0 | 1) => void,
 ): Pass | string {
   const { rankBy, spreads } = context.settings;
   const demandOnly = rankBy === 'demand';
@@ -64,13 +65,15 @@ export function integrate(
       // a coefficient read in the drawings does not rest on the era table
       (building.design_base_shear_coefficient > 0 ? 0 : spreads.eraTable * spreads.eraTable);
   const peopleSigma = context.assumed.peopleWeight * people.sigma;
-  const sd = demandOnly ? 0 : Math.sqrt(slope_k * slope_k * strengthVariance + peopleSigma * peopleSigma);
-  const sdChecked = Math.sqrt(
-    slope_k * slope_k * spreads.strengthCheck * spreads.strengthCheck + peopleSigma * peopleSigma,
-  );
+  const irregular = demandOnly || assessed ? REGULAR : irregularityOf(building, context);
+  const spread = (variance: number): number =>
+    Math.sqrt(slope_k * slope_k * (variance + irregular.varianceRest) + peopleSigma * peopleSigma);
+  const sd = demandOnly ? 0 : spread(strengthVariance);
+  const sdChecked = spread(spreads.strengthCheck * spreads.strengthCheck);
   const offset = demandOnly ? 0 : constantTerm(building, people, spectrum, context);
   const levels = drawingsLevels(building);
-  const lnFixed = ln(massFactor(building, context));
+  const lnFixed = ln(massFactor(building, context)) + irregular.lnRest;
+  const lnIrregular = lnFixed + irregular.lnStorey;
   const lnGiven = demandOnly ? 0 : assessed ? ln(building.capacity_sa_g * context.capacityFactor) : NaN;
   const bands: Band[] = [];
   let disagreement = 1;
@@ -120,27 +123,27 @@ export function integrate(
       const across = other.period_s === along.period_s && other.sigma === along.sigma ? along : other;
       for (const which of group) {
         const alike = directionsAlike(building, which);
+        const storey = storeyChanceOf(irregular, which);
         for (const { level, chance: levelChance } of levels) {
           const weight = which.chance * heights.weight[h]! * levelChance;
           if (demandOnly || assessed) {
             add(weight, along, 1, lnGiven, across, 1, lnGiven);
-            told?.(which, h);
+            told?.(which, h, 0);
             continue;
           }
           const a = capacityOf(building, which, 'longitudinal', height_m, level, context);
           const b = alike ? a : capacityOf(building, which, 'transverse', height_m, level, context);
           const sdOfCase = a.checked === undefined && b.checked === undefined ? sd : sdChecked;
-          add(
-            weight,
-            along,
-            a.ductility,
-            a.lnStrength + lnFixed,
-            across,
-            b.ductility,
-            b.lnStrength + lnFixed,
-            sdOfCase,
-          );
-          told?.(which, h);
+          const { ductility: mu, lnStrength: lnA } = a;
+          const { ductility: muB, lnStrength: lnB } = b;
+          if (storey < 1) {
+            add(weight * (1 - storey), along, mu, lnA + lnFixed, across, muB, lnB + lnFixed, sdOfCase);
+            told?.(which, h, 0);
+          }
+          if (storey > 0) {
+            add(weight * storey, along, mu, lnA + lnIrregular, across, muB, lnB + lnIrregular, sdOfCase);
+            told?.(which, h, 1);
+          }
         }
       }
     }

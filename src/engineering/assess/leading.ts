@@ -12,7 +12,7 @@ import { flagWords } from '../spectrum/flags.js';
 import { power } from '../numeric/power.js';
 import type { Trace } from '../trace.js';
 import { directionsAlike, drawingsLevels, importanceOf } from './terms.js';
-import { capacityAtHeight, irregularityFactor, keptCapacity, massShare } from './capacity.js';
+import { capacityAtHeight, keptCapacity, massShare } from './capacity.js';
 import type { CapacityAtHeight, Case, Cases } from './case-memory.js';
 import type { EditionId } from './code-history.js';
 import { codeRatio } from './code-ratio.js';
@@ -20,6 +20,7 @@ import { chooseSpectrum } from './choose-spectrum.js';
 import type { SpectrumChoice } from './choose-spectrum.js';
 import { readAt } from './context.js';
 import type { AssessContext, ContextSpectrum } from './context.js';
+import { centralFactor } from './irregularity.js';
 import { peopleOf } from './people.js';
 import { strengthCheck } from './strength-check.js';
 import { NO_PERIOD, alikeAcross, periodAt, periodModel } from './period.js';
@@ -63,6 +64,9 @@ export function leadingCase(
 ): LeadingCase | string {
   const which = cases.list[0]!;
   if (trace !== undefined) openTrace(building, which, choice, trace);
+  const byCapacity = context.settings.rankBy !== 'demand' && !(building.capacity_sa_g > 0);
+  if (byCapacity) trace?.heading('Irregularities');
+  const irregularity = byCapacity ? centralFactor(building, which, context, trace) : 1;
   const worked = {} as Record<DirectionName, LeadingDirection>;
   const models = {} as Record<DirectionName, PeriodModel>;
   for (const direction of DIRECTIONS) {
@@ -93,7 +97,7 @@ export function leadingCase(
     const capacity_g =
       context.settings.rankBy === 'demand'
         ? NaN
-        : capacityOf(building, which, direction, period_s, choice.spectrum, context, trace);
+        : capacityOf(building, which, direction, period_s, irregularity, choice.spectrum, context, trace);
     worked[direction] = { period_s, sa_g, capacity_g };
   }
   const load = (d: LeadingDirection): number => (Number.isNaN(d.capacity_g) ? d.sa_g : d.sa_g / d.capacity_g);
@@ -184,6 +188,7 @@ function capacityOf(
   which: Case,
   direction: DirectionName,
   period_s: number,
+  irregularity: number,
   spectrum: ContextSpectrum,
   context: AssessContext,
   trace?: Trace,
@@ -211,7 +216,7 @@ function capacityOf(
         strength_coefficient: at.strength_coefficient,
         overstrength: at.overstrength,
         reduction,
-        irregularity: irregularityFactor(building, context.assumed.irregularity),
+        irregularity,
         mass_share: at.checked === 'as it is' ? 1 : massShare(building),
       },
       trace,

@@ -3,6 +3,7 @@ import type { System } from '../building.js';
 import type { FamilyId, WeakDates } from '../capacity/families.js';
 import type { OwnEra } from '../capacity/own-table.js';
 import type { EditionInputs } from '../capacity/stated.js';
+import type { IrregularityEdition } from '../irregularity/editions.js';
 import type { Basis, PeriodStandard } from '../period/choose.js';
 import type { SystemPriorGroup } from '../prior/system-prior.js';
 import type { VelocityCode } from '../site/vs30.js';
@@ -96,6 +97,58 @@ export const SPREADS: Spreads = {
   editionChange_years: 3,
 };
 
+/** Factors on the capacity, and chances where a row says nothing [judgement throughout]. */
+export interface IrregularitySettings {
+  /** Whose limits tell an irregularity from the numbers of a row. */
+  readonly edition: IrregularityEdition;
+  readonly factors: {
+    readonly soft_or_weak_storey: number;
+    readonly torsion: number;
+    readonly reentrant_corner: number;
+    readonly setback: number;
+    readonly mass_irregularity: number;
+  };
+  readonly chances: {
+    /** Where a frame stands in either direction, and elsewhere. */
+    readonly soft_storey: { readonly frame: number; readonly wall: number };
+    readonly weak_storey: { readonly frame: number; readonly wall: number };
+    readonly torsion: number;
+    readonly reentrant_corner: number;
+    readonly setback: number;
+    readonly mass_irregularity: number;
+  };
+}
+
+/**
+ * Judgement. An open ground storey is mostly a matter of frames (shops and cars under flats); corner lots and cores to one side make
+ * torsion, wings make re-entrant corners.
+ */
+export const IRREGULARITY: IrregularitySettings = {
+  edition: 'asce7-16',
+  factors: { soft_or_weak_storey: 0.7, torsion: 0.8, reentrant_corner: 0.9, setback: 0.9, mass_irregularity: 0.9 },
+  chances: {
+    soft_storey: { frame: 0.15, wall: 0.05 },
+    weak_storey: { frame: 0.1, wall: 0.05 },
+    torsion: 0.15,
+    reentrant_corner: 0.15,
+    setback: 0.1,
+    mass_irregularity: 0.05,
+  },
+};
+
+/** What runs were assessed with that knew no chances: a blank counted as none. */
+export const NO_IRREGULARITY_CHANCES: IrregularitySettings = {
+  ...IRREGULARITY,
+  chances: {
+    soft_storey: { frame: 0, wall: 0 },
+    weak_storey: { frame: 0, wall: 0 },
+    torsion: 0,
+    reentrant_corner: 0,
+    setback: 0,
+    mass_irregularity: 0,
+  },
+};
+
 export interface AssessSettings {
   readonly spectra: Readonly<Record<string, NamedSpectrum>>;
   readonly levels: readonly LevelSettings[];
@@ -118,6 +171,8 @@ export interface AssessSettings {
   readonly spreads: Spreads;
   /** Left out in runs made before these were settings: the defaults then. */
   readonly assumed?: Assumed | undefined;
+  /** Absent in runs of earlier versions: NO_IRREGULARITY_CHANCES, and nothing read from numbers. */
+  readonly irregularity?: IrregularitySettings | undefined;
 }
 
 /** The settings kept with a run, with what its version did not write yet. */

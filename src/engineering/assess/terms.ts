@@ -1,7 +1,7 @@
 /** Terms of a building that do not depend on its period. */
 import type { Building, Structure } from '../building.js';
 import { WORKING_TO_STRENGTH } from '../capacity/records.js';
-import { irregularityFactor, massShare } from './capacity.js';
+import { massShare } from './capacity.js';
 import type { Case } from './case-memory.js';
 import type { AssessContext } from './context.js';
 
@@ -10,9 +10,9 @@ export function importanceOf(building: Building): number {
   return building.importance_factor > 0 ? building.importance_factor : 1;
 }
 
-/** Irregularities and mass share: what multiplies strength, overstrength and ductility alike in every case. */
+/** Mass share: what multiplies strength, overstrength and ductility alike in every case. */
 export function massFactor(building: Building, context: AssessContext): number {
-  return (irregularityFactor(building, context.assumed.irregularity) * context.capacityFactor) / massShare(building);
+  return context.capacityFactor / massShare(building);
 }
 
 type Levels = readonly { readonly level: number | null; readonly chance: number }[];

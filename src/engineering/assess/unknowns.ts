@@ -9,6 +9,7 @@ import { chooseSpectrum } from './choose-spectrum.js';
 import { slopeFor } from './context.js';
 import type { AssessContext } from './context.js';
 import { integrate } from './integrate.js';
+import { irregularityOf } from './irregularity.js';
 import { peopleOf } from './people.js';
 import { newScratch } from './scratch.js';
 import { strengthCheck } from './strength-check.js';
@@ -27,9 +28,18 @@ export function unknownsOf(building: Building, context: AssessContext, scratch: 
   const slope_k = slopeFor(context, choice.spectrum.name);
   const told: Cell[] = [];
   scratch.score.clear();
-  const pass = integrate(building, cases, people, choice.spectrum, slope_k, context, scratch, (which, heightNode) => {
-    told.push({ which, heightNode, to: scratch.score.size });
-  });
+  const pass = integrate(
+    building,
+    cases,
+    people,
+    choice.spectrum,
+    slope_k,
+    context,
+    scratch,
+    (which, heightNode, storey) => {
+      told.push({ which, heightNode, storey, to: scratch.score.size });
+    },
+  );
   if (typeof pass === 'string') return null;
   const { parts, cells, cellOf } = gathered(scratch.score.raw(), told);
   const numbered = (valueOf: (cell: Cell) => string | number): Int32Array | null => {
@@ -60,6 +70,13 @@ export function unknownsOf(building: Building, context: AssessContext, scratch: 
       numbered(({ heightNode }) => heightNode),
       0,
     );
+  // a soft or weak storey parts the cells; the other irregularities are gathered in their spread
+  if (settings.rankBy !== 'demand' && !(building.capacity_sa_g > 0))
+    add(
+      'irregularity',
+      numbered(({ storey }) => storey),
+      slope_k * Math.sqrt(irregularityOf(building, context).varianceRest),
+    );
   if (settings.rankBy === 'people') addPeople(building, context, people.sigma, add);
   // drawings settle what era tables and the years around a change of edition leave open
   const byDrawings = !(building.capacity_sa_g > 0) && !(building.design_base_shear_coefficient > 0);
@@ -78,10 +95,11 @@ function byCheck(building: Building, which: Case, context: AssessContext): boole
   return check !== null && typeof check !== 'string';
 }
 
-/** The nodes of one case at one height. */
+/** The nodes of one case at one height, without a soft or weak storey (0) or with one (1). */
 interface Cell {
   readonly which: Case;
   readonly heightNode: number;
+  readonly storey: 0 | 1;
   /** Where its nodes end. */
   readonly to: number;
 }

@@ -1,6 +1,10 @@
 /** What is read off the spectrum besides S_a itself. */
 import { record } from '../formula.js';
 import type { AnyRecord, Family } from '../formula.js';
+import { BASE_SHEAR_RECORDS } from './base-shear.js';
+import { DRIFT_RECORDS } from './drift.js';
+import { INELASTIC_RECORDS } from './inelastic.js';
+import { SEPARATION_RECORDS } from './separation.js';
 
 const displacement: Family<{ readonly sa_g: number; readonly period_s: number }, { readonly gravity_mps2: number }> = {
   id: 'demand/spectral-displacement',
@@ -28,4 +32,10 @@ export const SPECTRAL_DISPLACEMENT = record({
   limits: [],
 });
 
-export const DEMAND_RECORDS: readonly AnyRecord[] = [SPECTRAL_DISPLACEMENT];
+export const DEMAND_RECORDS: readonly AnyRecord[] = [
+  SPECTRAL_DISPLACEMENT,
+  ...BASE_SHEAR_RECORDS,
+  ...INELASTIC_RECORDS,
+  ...DRIFT_RECORDS,
+  ...SEPARATION_RECORDS,
+];

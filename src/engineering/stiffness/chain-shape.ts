@@ -15,7 +15,7 @@ const firstStoreyShare: Family<ChainInput, None> = {
   symbol: 'φ₁/φ_roof',
   inputs: [MASSES, STIFFNESSES],
   expression: null,
-  procedure: 'first-mode displacement of the first floor over that of the roof',
+  procedure: 'φ₁/φ_roof = displacement of the first floor over that of the roof, first mode',
   evaluate: ({ masses_t, storey_stiffness_kN_per_m }) =>
     chainProperties(masses_t, chainMode(masses_t, storey_stiffness_kN_per_m)).firstStoreyShare,
 };
@@ -27,7 +27,7 @@ const largestDrift: Family<ChainInput, None> = {
   symbol: 'β₂',
   inputs: [MASSES, STIFFNESSES],
   expression: null,
-  procedure: 'largest storey drift of the first mode over the mean one, storeys of equal height',
+  procedure: 'β₂ = largest storey drift of the first mode over the mean one, storeys of equal height',
   evaluate: ({ masses_t, storey_stiffness_kN_per_m }) => driftFactor(chainMode(masses_t, storey_stiffness_kN_per_m)),
 };
 
@@ -62,7 +62,7 @@ export const FIRST_STOREY_SHARE = record({
   verified: 'mechanics',
   limits: [],
 });
-const DRIFT_FACTOR = record({
+export const DRIFT_FACTOR = record({
   id: 'mechanics/drift/largest-over-mean',
   title: 'Largest storey drift over the mean one',
   family: largestDrift,
@@ -71,7 +71,7 @@ const DRIFT_FACTOR = record({
   verified: 'mechanics',
   limits: [],
 });
-const PARTICIPATION = record({
+export const PARTICIPATION = record({
   id: 'mechanics/participation/roof',
   title: 'Roof participation of a mode',
   family: participation,

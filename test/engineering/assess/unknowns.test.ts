@@ -6,7 +6,7 @@ import { unknownsOf } from '../../../src/engineering/assess/unknowns.js';
 import type { Building } from '../../../src/engineering/building.js';
 import { mixtureMoments } from '../../../src/engineering/priority/mixture.js';
 import type { Unknowns } from '../../../src/engineering/priority/survey-value.js';
-import { building, given, inferred } from '../../support/engineering-building.js';
+import { NO_IRREGULARITY, building, given, inferred } from '../../support/engineering-building.js';
 import { inventedPortfolio } from '../../support/engineering-portfolio.js';
 import { random } from '../../support/engineering-random.js';
 import { SETTINGS } from '../../support/engineering-settings.js';
@@ -86,6 +86,7 @@ describe('unknownsOf', () => {
 
   it('asks nothing of a building whose facts are on record but its drawings', () => {
     const known = building({
+      ...NO_IRREGULARITY,
       system: 'concrete-shear-wall',
       use: 'office',
       storeys: given(4),
@@ -111,10 +112,44 @@ describe('unknownsOf', () => {
       'system',
       'year',
       'height',
+      'irregularity',
       'use',
       'occupants',
       'drawings',
     ]);
+  });
+
+  it('tells a soft or weak storey apart, and takes the other irregularities off the spread', () => {
+    const blank = building({ system: 'concrete-moment-frame', years: [1958] });
+    const unknowns = found(blank);
+    const { tau } = unknowns.learnable.find(({ unknown }) => unknown === 'irregularity')!;
+    const none = classMoments(unknowns, 'irregularity', 0);
+    const some = classMoments(unknowns, 'irregularity', 1);
+    // chances of a soft and of a weak storey of a frame, from the settings: 1 - 0.85 × 0.9
+    expect(some.chance).toBeCloseTo(0.235, 12);
+    expect(some.mean - none.mean).toBeCloseTo(-2.5 * Math.log(0.7), 10);
+    const storeyKnown = { ...blank, soft_storey: 'no', weak_storey: 'no' } as const;
+    const open = assessed(storeyKnown);
+    const shut = assessed({
+      ...NO_IRREGULARITY,
+      ...storeyKnown,
+      torsion: 'no',
+      reentrant_corner: 'no',
+      setback: 'no',
+      mass_irregularity: 'no',
+    });
+    expect(none.mean).toBeCloseTo(open.mean, 8);
+    expect(none.sd).toBeCloseTo(open.sd, 8);
+    expect(tau * tau).toBeCloseTo(open.sd ** 2 - shut.sd ** 2, 8);
+  });
+
+  it('asks for no irregularity where the row answers all six, or the building is assessed', () => {
+    const asks = (one: Building): boolean => found(one).learnable.some(({ unknown }) => unknown === 'irregularity');
+    expect(asks(building())).toBe(true);
+    expect(asks(building({ ...NO_IRREGULARITY, mass_irregularity: null }))).toBe(true);
+    expect(asks(building(NO_IRREGULARITY))).toBe(false);
+    expect(asks(building({ ...NO_IRREGULARITY, torsion: 'yes', soft_storey: 'yes' }))).toBe(false);
+    expect(asks(building({ capacity_sa_g: 0.4 }))).toBe(false);
   });
 
   it('takes off with the use what knowing it takes off the assessment', () => {

@@ -1,0 +1,221 @@
+/**
+ * What the shaking asks of a building beside S_a: base shear, roof displacement, storey drift. Worked for the leading case at its
+ * central values when a person looks at a building; no part of the priority and of the pass over all buildings.
+ */
+import type { Building, DirectionName, PerDirection, System } from '../building.js';
+import { SYSTEM_FACTORS } from '../capacity/systems.js';
+import { BASE_SHEAR_ASCE7, BASE_SHEAR_ELASTIC, massFactorOf } from '../demand/base-shear.js';
+import { ROOF_DISPLACEMENT, STOREY_DRIFT, driftMark } from '../demand/drift.js';
+import { C1, C2, STRENGTH_RATIO } from '../demand/inelastic.js';
+import { SPECTRAL_DISPLACEMENT } from '../demand/records.js';
+import { DIRECTIONS } from '../direction.js';
+import { formatShare } from '../format.js';
+import { apply, applyAny } from '../formula.js';
+import type { AnyRecord } from '../formula.js';
+import { DRIFT_FACTOR, FIRST_STOREY_SHARE, PARTICIPATION } from '../stiffness/chain-shape.js';
+import { WALL_FRAME_RECORDS } from '../stiffness/wall-frame.js';
+import type { Trace } from '../trace.js';
+import { capacityAtHeight } from './capacity.js';
+import type { Cases } from './case-memory.js';
+import type { SpectrumChoice } from './choose-spectrum.js';
+import type { AssessContext } from './context.js';
+import { centralFactor, softFirstStorey } from './irregularity.js';
+import type { LeadingCase } from './leading.js';
+import { drawingsLevels, importanceOf } from './terms.js';
+
+export interface DirectionDemand {
+  readonly period_s: number;
+  readonly roof_displacement_m: number;
+  /** Largest storey drift over its height. */
+  readonly drift_ratio: number;
+  /** The last published mark the drift passes; null: none. */
+  readonly passed: string | null;
+}
+
+const findShape = (id: string): AnyRecord => {
+  const found = WALL_FRAME_RECORDS.find((one) => one.id === id);
+  if (found === undefined) throw new Error(`no record ${id}`);
+  return found;
+};
+const WALL_PARTICIPATION = findShape('miranda-taghavi-2005/participation/roof');
+const WALL_DRIFT = findShape('miranda-taghavi-2005/drift/largest-over-mean');
+
+/** α of walls, and of walls with frames and braced bays (guide: under 1.5 walls, 1.5 to 5 dual, 1.5 to 6 braced; from memory). */
+const ALPHA: Partial<Readonly<Record<System, number>>> = {
+  'concrete-shear-wall': 1,
+  'reinforced-masonry-wall': 1,
+  'confined-masonry-wall': 1,
+  'unreinforced-masonry-wall': 1,
+  'precast-tilt-up-wall': 1,
+  'concrete-wall-frame': 3,
+  'steel-concentric-braced-frame': 3,
+  'steel-eccentric-braced-frame': 3,
+  'steel-buckling-restrained-braced-frame': 3,
+};
+/** Up to this many storeys walls give way in shear more than they bend, and the shear building serves them too [judgement]. */
+const SQUAT_STOREYS = 3;
+const MOST_STOREYS = 100;
+
+/** Demands of the leading case in both directions. */
+export function demandsOf(
+  building: Building,
+  cases: Cases,
+  choice: SpectrumChoice,
+  leading: LeadingCase,
+  context: AssessContext,
+  trace?: Trace,
+): PerDirection<DirectionDemand> {
+  const found = {} as Record<DirectionName, DirectionDemand>;
+  for (const direction of DIRECTIONS) {
+    const isSame = direction === 'transverse' && leading.directions.transverse === leading.directions.longitudinal;
+    if (isSame) {
+      found.transverse = found.longitudinal;
+      continue;
+    }
+    trace?.heading(`Base shear and drift, ${direction} (no part of the priority)`);
+    found[direction] = demandOf(building, cases, choice, leading, direction, context, trace);
+  }
+  return found;
+}
+
+function demandOf(
+  building: Building,
+  cases: Cases,
+  choice: SpectrumChoice,
+  leading: LeadingCase,
+  direction: DirectionName,
+  context: AssessContext,
+  trace?: Trace,
+): DirectionDemand {
+  const which = cases.list[0]!;
+  const system = direction === 'longitudinal' ? which.system : which.system_transverse;
+  const { period_s, sa_g } = leading.directions[direction];
+  const height_m = building.height_m.value;
+  const storeys = Math.min(MOST_STOREYS, Math.max(1, Math.round(building.storeys.value)));
+  const mass_share = massFactorOf(system, storeys, period_s);
+  apply(BASE_SHEAR_ELASTIC, { sa_g, mass_share }, trace);
+  codeShear(building, system, choice, period_s, trace);
+  const sd_m = apply(SPECTRAL_DISPLACEMENT, { sa_g, period_s }, trace);
+  let c1 = 1;
+  let c2 = 1;
+  if (building.capacity_sa_g > 0)
+    trace?.choice({
+      question: 'Inelastic displacement',
+      taken: 'as the elastic one',
+      because: 'a finished assessment gives a capacity, not a strength',
+      others: [],
+    });
+  else {
+    const { level } = drawingsLevels(building)[0]!;
+    const at = capacityAtHeight(building, which, direction, height_m, level, context);
+    const yield_coefficient = at.strength_coefficient * at.overstrength * centralFactor(building, which, context);
+    const strength_ratio = apply(STRENGTH_RATIO, { sa_g, mass_share, yield_coefficient }, trace);
+    c1 = apply(C1, { strength_ratio, site_factor_a: siteFactor(building, trace), period_s }, trace);
+    c2 = apply(C2, { strength_ratio, period_s }, trace);
+  }
+  const { participation, drift_factor } = shapeOf(building, system, direction, storeys, context, trace);
+  const roof_displacement_m = apply(ROOF_DISPLACEMENT, { sd_m, participation, c1, c2 }, trace);
+  const drift_ratio = apply(STOREY_DRIFT, { roof_displacement_m, height_m, drift_factor }, trace);
+  const { passed, marks } = driftMark(system, drift_ratio);
+  trace?.value(
+    'drift mark',
+    passed === null ? 'passes none' : `past ${passed}`,
+    'computed',
+    `published marks ${marks.map((mark) => formatDrift(mark)).join(', ')} for immediate occupancy, life safety, collapse prevention (FEMA 356 Table C1-3, from memory); a screening value, not a finding`,
+  );
+  return { period_s, roof_displacement_m, drift_ratio, passed };
+}
+
+const formatDrift = (ratio: number): string => `${String(Number((ratio * 100).toFixed(2)))} %`;
+
+/** Today's design base shear where the spectrum is of ASCE/SEI 7 and so names what the formula asks. */
+function codeShear(
+  building: Building,
+  system: System,
+  { spectrum }: SpectrumChoice,
+  period_s: number,
+  trace?: Trace,
+): void {
+  const { sds_g, sd1_g, tl_s } = spectrum.inputs;
+  if (!spectrum.record.id.startsWith('asce7') || typeof sds_g !== 'number' || typeof sd1_g !== 'number') return;
+  apply(
+    BASE_SHEAR_ASCE7,
+    {
+      sds_g,
+      sd1_g,
+      tl_s: typeof tl_s === 'number' ? tl_s : 8,
+      near_fault_s1_g: 0,
+      reduction_r: SYSTEM_FACTORS[system].r2002,
+      importance_factor: importanceOf(building),
+      period_s,
+    },
+    trace,
+  );
+}
+
+/** a of C1 by site class: 130 (A, B), 90 (C), 60 (D and softer, and where it is not known: the larger displacement). */
+function siteFactor({ site_class }: Building, trace?: Trace): number {
+  const letter = site_class?.trim().toUpperCase() ?? '';
+  const a = letter === 'A' || letter === 'B' ? 130 : letter === 'C' ? 90 : 60;
+  trace?.value(
+    'site_factor_a',
+    a,
+    'computed',
+    `site class ${letter === '' ? 'not known' : letter}; ASCE/SEI 41-17 7.4.1.3.1`,
+  );
+  return a;
+}
+
+/** β₁ and β₂: of the shear building, whose first storey may be soft, or of walls with what frames stand beside them. */
+function shapeOf(
+  building: Building,
+  system: System,
+  direction: DirectionName,
+  storeys: number,
+  context: AssessContext,
+  trace?: Trace,
+): { readonly participation: number; readonly drift_factor: number } {
+  const given = building.storey_stiffness_kN_per_m[direction];
+  const soft = softFirstStorey(building, system, context);
+  const alpha = ALPHA[system];
+  const byList = given !== null && given.length === storeys && storeys > 1;
+  if (alpha !== undefined && storeys > SQUAT_STOREYS && !byList && soft === null) {
+    const ratio = { stiffness_ratio: alpha };
+    trace?.value(
+      'stiffness_ratio',
+      alpha,
+      'assumed',
+      `frame over wall, α, of ${system} [judgement within published ranges]`,
+    );
+    return {
+      participation: applyAny(WALL_PARTICIPATION, ratio, trace),
+      drift_factor: applyAny(WALL_DRIFT, ratio, trace),
+    };
+  }
+  const stiffness = byList
+    ? [...given]
+    : Array.from({ length: storeys }, (_, i) => (i === 0 && soft !== null ? soft.share : 1));
+  const chain = { masses_t: stiffness.map(() => 1), storey_stiffness_kN_per_m: stiffness };
+  trace?.choice({
+    question: 'Shape of the sway',
+    taken: byList
+      ? 'shear building of the storey stiffness given'
+      : soft === null
+        ? 'shear building, storeys alike'
+        : `shear building, first storey ${formatShare(soft.share)} as stiff as the others`,
+    because: byList
+      ? 'from the inventory; floors of equal mass'
+      : soft === null
+        ? 'nothing tells the storeys apart'
+        : soft.why,
+    others: [],
+  });
+  if (storeys > 1) {
+    const share = apply(FIRST_STOREY_SHARE, chain, trace);
+    trace?.value('first_storey_share', share, 'computed', 'of the roof displacement; storeys alike in height');
+  }
+  return {
+    participation: apply(PARTICIPATION, { ...chain, mode: 1 }, trace),
+    drift_factor: apply(DRIFT_FACTOR, chain, trace),
+  };
+}

@@ -1,0 +1,100 @@
+/** Tables 1.10, 1.11 and 4.7 of the data sheet of stiffness and demand (exact solutions); drift marks of FEMA 356 Table C1-3, from memory. */
+import { describe, expect, it } from 'vitest';
+import { assess, isRanked } from '../../../src/engineering/assess/assess.js';
+import { casesOf } from '../../../src/engineering/assess/cases.js';
+import { chooseSpectrum } from '../../../src/engineering/assess/choose-spectrum.js';
+import { compileContext } from '../../../src/engineering/assess/context.js';
+import { demandsOf } from '../../../src/engineering/assess/demands.js';
+import type { DirectionDemand } from '../../../src/engineering/assess/demands.js';
+import type { Building } from '../../../src/engineering/building.js';
+import { Trace } from '../../../src/engineering/trace.js';
+import { NO_IRREGULARITY, building, given } from '../../support/engineering-building.js';
+import { SETTINGS } from '../../support/engineering-settings.js';
+
+const context = compileContext(SETTINGS);
+
+/** Demand along the building, and the last value of each record in the trace. */
+function worked(fields: Partial<Building>): {
+  readonly demand: DirectionDemand;
+  readonly values: ReadonlyMap<string, number>;
+} {
+  const one = building({ ...NO_IRREGULARITY, ...fields });
+  const result = assess(one, context);
+  const cases = casesOf(one, context);
+  const choice = chooseSpectrum(context, one, 0);
+  if (!isRanked(result) || typeof cases === 'string' || typeof choice === 'string') throw new Error('not ranked');
+  const trace = new Trace();
+  const demand = demandsOf(one, cases, choice, result.leading, context, trace).longitudinal;
+  const values = new Map(
+    trace.steps.flatMap((step) => (step.kind === 'formula' ? [[step.record.id, step.value] as const] : [])),
+  );
+  return { demand, values };
+}
+
+describe('demandsOf', () => {
+  it('takes the sway of a frame from the shear building', () => {
+    const five = worked({ storeys: given(5), height_m: given(17) });
+    expect(five.values.get('mechanics/participation/roof')).toBeCloseTo(1.252, 3);
+    expect(five.values.get('mechanics/drift/largest-over-mean')).toBeCloseTo(1.42, 2);
+    const one = worked({ storeys: given(1), height_m: given(4) });
+    expect(one.values.get('mechanics/participation/roof')).toBe(1);
+    expect(one.values.get('mechanics/drift/largest-over-mean')).toBe(1);
+  });
+
+  it('takes that of tall walls from the cantilever with frames beside it', () => {
+    const walls = worked({ system: 'concrete-shear-wall', storeys: given(8), height_m: given(27) });
+    expect(walls.values.get('miranda-taghavi-2005/participation/roof')).toBeCloseTo(1.552, 3);
+    const dual = worked({ system: 'concrete-wall-frame', storeys: given(8), height_m: given(27) });
+    expect(dual.values.get('miranda-taghavi-2005/drift/largest-over-mean')).toBeCloseTo(1.262, 3);
+  });
+
+  it('concentrates drift in a soft first storey', () => {
+    const plain = worked({ storeys: given(3), height_m: given(10.5) });
+    const soft = worked({ storeys: given(3), height_m: given(10.5), soft_storey: 'yes' });
+    // k1 at 70 %: share 0.545 of the roof's displacement against 0.445
+    expect(soft.values.get('mechanics/drift/first-storey-share')).toBeCloseTo(0.545, 3);
+    expect(plain.values.get('mechanics/drift/first-storey-share')).toBeCloseTo(0.445, 3);
+    expect(soft.demand.drift_ratio).toBeGreaterThan(1.2 * plain.demand.drift_ratio);
+    const tall = worked({ storeys: given(3), height_m: given(12), first_storey_height_m: 6, soft_storey: null });
+    // columns at (3/6)³ = 0.125 of those above: between the 0.75 of 0.3 and the 0.91 of 0.1
+    const share = tall.values.get('mechanics/drift/first-storey-share')!;
+    expect(share).toBeGreaterThan(0.75);
+    expect(share).toBeLessThan(0.91);
+  });
+
+  it('is the elastic displacement times its factors, worked by hand', () => {
+    const { demand, values } = worked({ storeys: given(4), height_m: given(14) });
+    const T = demand.period_s;
+    const sa = Math.min(1, 0.6 / T);
+    const strength = (values.get('asce41-17/displacement/strength-ratio')! / (sa * 0.9)) ** -1;
+    // UBC 1961 at 0.1 × 4 s, working stress, Ω = 2
+    expect(strength).toBeCloseTo((0.05 / 0.4 ** (1 / 3)) * 1.4 * 2, 10);
+    const ratio = (sa * 0.9) / strength;
+    const c1 = 1 + (ratio - 1) / (90 * T * T);
+    const c2 = 1 + ((ratio - 1) / T) ** 2 / 800;
+    const sd = sa * 9.80665 * (T / (2 * Math.PI)) ** 2;
+    expect(demand.roof_displacement_m).toBeCloseTo(values.get('mechanics/participation/roof')! * c1 * c2 * sd, 10);
+    expect(demand.drift_ratio).toBeCloseTo(
+      (values.get('mechanics/drift/largest-over-mean')! * demand.roof_displacement_m) / 14,
+      12,
+    );
+    // today's code at R = 3 of a frame of ordinary detailing or what the register gives it: never over the elastic force
+    expect(values.get('asce7-16/base-shear/equivalent-lateral-force')!).toBeLessThan(sa);
+  });
+
+  it('names the mark a drift passes', () => {
+    const frail = worked({
+      system: 'unreinforced-masonry-wall',
+      years: [1920],
+      storeys: given(3),
+      height_m: given(10),
+    });
+    expect(frail.demand.drift_ratio).toBeGreaterThan(0.01);
+    expect(frail.demand.passed).toBe('collapse prevention');
+  });
+
+  it('leaves the elastic displacement where a finished assessment gives no strength', () => {
+    const { values } = worked({ capacity_sa_g: 0.4 });
+    expect(values.has('asce41-17/displacement/c1')).toBe(false);
+  });
+});

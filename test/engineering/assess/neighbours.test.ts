@@ -1,0 +1,61 @@
+/** SD-64 (IBC eq. 16-64): 0.12 and 0.09 m need 0.15 m; the height rule of ASCE 41-17 Table 17-2, from memory. */
+import { describe, expect, it } from 'vitest';
+import { compileContext } from '../../../src/engineering/assess/context.js';
+import { closenessOf, swayOf } from '../../../src/engineering/assess/neighbours.js';
+import type { Sway } from '../../../src/engineering/assess/neighbours.js';
+import { Trace } from '../../../src/engineering/trace.js';
+import { building, given } from '../../support/engineering-building.js';
+import { SETTINGS } from '../../support/engineering-settings.js';
+
+const sway = (id: string, height_m: number, roof_displacement_m: number): Sway => ({
+  id,
+  height_m,
+  period_s: 0.5,
+  roof_displacement_m,
+  plateau_g: 1,
+});
+const GAP = { gap_m: 0.12, how: 'given', floors_aligned: null } as const;
+
+describe('closenessOf', () => {
+  it('needs the root of the squares, less where floors are aligned', () => {
+    const [a, b] = [sway('A', 10, 0.12), sway('B', 10, 0.09)];
+    expect(closenessOf(a, b, GAP)).toMatchObject({ short: true, needed_m: expect.closeTo(0.15, 12) as number });
+    expect(closenessOf(a, b, { ...GAP, floors_aligned: 'yes' })).toMatchObject({
+      short: false,
+      needed_m: expect.closeTo(0.105, 12) as number,
+    });
+    // 1.5 % of 10 m in high seismicity
+    expect(closenessOf(a, b, { ...GAP, gap_m: 0.149 }).shortByHeight).toBe(true);
+    expect(closenessOf(a, b, { ...GAP, gap_m: 0.151 })).toMatchObject({ short: false, shortByHeight: false });
+  });
+
+  it('takes the sway at the height of the shorter, and says what makes it worse', () => {
+    const found = closenessOf(sway('A', 20, 0.24), sway('B', 10, 0.09), { ...GAP, floors_aligned: 'no' });
+    expect(found.needed_m).toBeCloseTo(0.15, 12);
+    expect(found.worse).toHaveLength(2);
+  });
+
+  it('writes its steps under a heading of its own', () => {
+    const trace = new Trace();
+    closenessOf(sway('A', 10, 0.12), sway('B', 10, 0.09), GAP, trace);
+    const ids = trace.steps.flatMap((step) => (step.kind === 'formula' ? [step.record.id] : []));
+    expect(ids).toEqual([
+      'asce7-16/separation/srss',
+      'jeng-kasai-maison-1992/separation/correlation',
+      'jeng-kasai-maison-1992/separation/double-difference',
+      'asce41-17/separation/by-height-high',
+    ]);
+  });
+});
+
+describe('swayOf', () => {
+  it('takes the larger direction, and nothing of a building that cannot be assessed', () => {
+    const context = compileContext(SETTINGS);
+    const slender = building({
+      measured_period_s: { longitudinal: 0.3, transverse: 0.9 },
+      measured_amplitude: 'strong',
+    });
+    expect(swayOf(slender, context)!.period_s).toBe(0.9);
+    expect(swayOf(building({ height_m: given(NaN) }), context)).toBe(null);
+  });
+});
