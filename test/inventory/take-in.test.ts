@@ -313,8 +313,8 @@ describe('takeIn', () => {
     });
     // half of each side beyond the corner; the triangle of the hull is an eighth of the square, the floor three quarters
     expect(building(intake, 'A')).toMatchObject({
-      reentrant_projection: expect.closeTo(0.5, 6),
-      reentrant_area_share: expect.closeTo(1 / 6, 6),
+      reentrant_projection: expect.closeTo(0.5, 6) as number,
+      reentrant_area_share: expect.closeTo(1 / 6, 6) as number,
     });
     expect(Number(building(intake, 'A')['footprint_area_m2'])).toBeCloseTo(0.75 * 44.53 * 44.23, -1);
     expect(building(intake, 'B')).toMatchObject({ reentrant_projection: 0.07 });

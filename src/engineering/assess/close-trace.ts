@@ -8,6 +8,7 @@ import type { SpectrumChoice } from './choose-spectrum.js';
 import type { AssessContext } from './context.js';
 import { REGULAR, irregularityOf, storeyChanceOf } from './irregularity.js';
 import { leadingCase, scoreOf } from './leading.js';
+import { spreadShares } from './spread-shares.js';
 
 interface Closing {
   readonly building: Building;
@@ -22,9 +23,11 @@ interface Closing {
 
 /** Cases written out one by one; the rest are counted. */
 const SHOWN = 12;
+/** Shares of the spread under this are left out. */
+const LEAST_SHARE = 0.005;
 
 export function closeTrace(trace: Trace, closing: Closing): void {
-  const { cases, context, mixture, lnPriority, sd } = closing;
+  const { building, cases, choice, context, mixture, lnPriority, sd } = closing;
   trace.heading('From the leading case to the priority');
   const why =
     cases.prior === null
@@ -50,6 +53,21 @@ export function closeTrace(trace: Trace, closing: Closing): void {
       'computed',
       'gathered from all cases, the nodes of period and height, and the soft or weak storey where it is not known; strength, era, the other irregularities and people make the standard deviation',
     );
+  }
+  const shares = spreadShares(building, choice.spectrum, context);
+  const [largest, ...others] = shares ?? [];
+  if (largest !== undefined) {
+    trace.choice({
+      question: 'Where the spread comes from',
+      taken: `${largest.what}: ${formatShare(largest.share)} of the spread`,
+      because: `the largest share of the variance of ln S${largest.learnable ? ', which a visit can find out' : ', which no visit settles'}`,
+      others: others
+        .filter(({ share }) => share >= LEAST_SHARE)
+        .map(({ what, share, learnable }) => ({
+          what,
+          why: `${formatShare(share)}${learnable ? ', a visit can find it out' : ''}`,
+        })),
+    });
   }
   trace.value('ln_priority_sd', sd, 'computed', 'standard deviation of the whole distribution');
   trace.value(

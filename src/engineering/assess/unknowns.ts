@@ -89,8 +89,8 @@ export function unknownsOf(building: Building, context: AssessContext, scratch: 
   return { parts, learnable };
 }
 
-/** The capacity does not rest on an era table. */
-function byCheck(building: Building, which: Case, context: AssessContext): boolean {
+/** The capacity of a case comes from a strength check, not from an era table. */
+export function byCheck(building: Building, which: Case, context: AssessContext): boolean {
   const check = strengthCheck(building, which, 'longitudinal', building.height_m.value, context);
   return check !== null && typeof check !== 'string';
 }
