@@ -22,7 +22,7 @@ const failure = (work: () => unknown): string => {
 /** A number that a record's limits allow, else one that is sensible for anything. */
 function sensible(method: AnyRecord, { name, ...spec }: InputSpec): number {
   if (typeof spec.fallback === 'number') return spec.fallback;
-  if (spec.to !== undefined) return spec.from ? Math.sqrt(spec.from * spec.to) : spec.to / 8;
+  if (spec.to !== undefined) return (spec.from ?? 0) > 0 ? Math.sqrt(spec.from! * spec.to) : spec.to / 8;
   const limit = method.limits.find(({ input }) => input === name);
   if (limit?.from !== undefined && limit.to !== undefined) return Math.sqrt(limit.from * limit.to);
   return limit?.to === undefined ? (limit?.from ?? 0.5) : limit.to / 2;

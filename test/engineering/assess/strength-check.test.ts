@@ -3,7 +3,7 @@ import { assess, isRanked } from '../../../src/engineering/assess/assess.js';
 import type { Assessment } from '../../../src/engineering/assess/assess.js';
 import { compileContext } from '../../../src/engineering/assess/context.js';
 import type { StrengthCheckSettings } from '../../../src/engineering/assess/settings.js';
-import { SPREADS } from '../../../src/engineering/assess/settings.js';
+import { NO_IRREGULARITY_CHANCES, SPREADS } from '../../../src/engineering/assess/settings.js';
 import type { Building, Structure } from '../../../src/engineering/building.js';
 import { Trace } from '../../../src/engineering/trace.js';
 import { building, given, structure } from '../../support/engineering-building.js';
@@ -11,7 +11,12 @@ import { SETTINGS } from '../../support/engineering-settings.js';
 
 type Method = StrengthCheckSettings['method'];
 const contextOf = (method: Method, timeIndex = 1) =>
-  compileContext({ ...SETTINGS, rankBy: 'ratio', strengthCheck: { method, timeIndex } });
+  compileContext({
+    ...SETTINGS,
+    rankBy: 'ratio',
+    strengthCheck: { method, timeIndex },
+    irregularity: NO_IRREGULARITY_CHANCES,
+  });
 
 function assessed(method: Method, fields: Partial<Building>, trace?: Trace, timeIndex?: number): Assessment {
   const result = assess(building(fields), contextOf(method, timeIndex), trace);
