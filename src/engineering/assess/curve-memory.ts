@@ -20,6 +20,8 @@ export interface Curve {
   readonly sigma: number;
   readonly disagreement: number;
   readonly reduced: Reduced[];
+  /** It is one building's own and gone with it: its arrays are lent. */
+  readonly own: boolean;
 }
 
 /** Percentiles of the period where the height is inferred and the system is one. */

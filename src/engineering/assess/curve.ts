@@ -13,6 +13,7 @@ import { MOST_HEIGHTS } from './curve-memory.js';
 import type { Curve } from './curve-memory.js';
 import { periodAt } from './period.js';
 import type { PeriodModel } from './period.js';
+import { lend } from './scratch.js';
 import type { Scratch } from './scratch.js';
 
 /** True where the period is a function of formula and height alone, whatever the building. */
@@ -42,7 +43,7 @@ export function curveAt(
   const old = shared?.get(height_m);
   if (old !== undefined) return old;
   const { period_s, sigma, disagreement } = periodAt(model, height_m, context);
-  const made: Curve = { period_s, sigma, disagreement, reduced: [] };
+  const made: Curve = { period_s, sigma, disagreement, reduced: [], own: shared === null };
   if (shared !== null) {
     if (shared.size >= MOST_HEIGHTS) shared.clear();
     shared.set(height_m, made);
@@ -64,7 +65,7 @@ export function reducedAt(curve: Curve, ductility: number, spectrum: ContextSpec
     const sa_g = readAt(spectrum, t);
     return ln(ductility === 1 ? sa_g : sa_g / reductionFactor(ductility, t, corner));
   };
-  const ln_g = new Float64Array(stretch.length);
+  const ln_g = curve.own ? lend(scratch) : new Float64Array(stretch.length);
   // a period without a spread is the same at every node: a simulation draws a million such
   if (sigma === 0) ln_g.fill(lnAt(period_s));
   else for (let j = 0; j < stretch.length; j += 1) ln_g[j] = lnAt(period_s * stretch[j]!);

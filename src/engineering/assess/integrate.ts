@@ -76,6 +76,7 @@ export function integrate(
   const lnIrregular = lnFixed + irregular.lnStorey;
   const lnGiven = demandOnly ? 0 : assessed ? ln(building.capacity_sa_g * context.capacityFactor) : NaN;
   const bands: Band[] = [];
+  scratch.lentCount = 0;
   let disagreement = 1;
   const { score } = scratch;
   const add = (

@@ -13,6 +13,9 @@ export interface Scratch {
   stretchSigma: number;
   /** The worse direction at the nodes. */
   readonly worse: Float64Array;
+  /** Arrays of one value a node, lent until the next building. */
+  readonly lent: Float64Array[];
+  lentCount: number;
 }
 
 export function newScratch(): Scratch {
@@ -24,5 +27,16 @@ export function newScratch(): Scratch {
     stretch: new Float64Array(PERIOD_NODES.z.length),
     stretchSigma: NaN,
     worse: new Float64Array(PERIOD_NODES.z.length),
+    lent: [],
+    lentCount: 0,
   };
+}
+
+/** An array of one value a node, to be filled whole; it is lent again once `lentCount` is set back. */
+export function lend(scratch: Scratch): Float64Array {
+  const { lent, lentCount } = scratch;
+  let array = lent[lentCount];
+  if (array === undefined) lent.push((array = new Float64Array(PERIOD_NODES.z.length)));
+  scratch.lentCount = lentCount + 1;
+  return array;
 }

@@ -104,13 +104,14 @@ interface Cell {
   readonly to: number;
 }
 
+const builder = new MixtureBuilder();
+const pool = new MixturePool();
+
 /** The nodes gathered within each cell, cells apart: the error of the period is no unknown that a survey finds out. */
 function gathered(
   nodes: Mixture,
   cells: readonly Cell[],
 ): { readonly parts: Mixture; readonly cells: readonly Cell[]; readonly cellOf: Int32Array } {
-  const builder = new MixtureBuilder();
-  const pool = new MixturePool();
   const weight: number[] = [];
   const mean: number[] = [];
   const sd: number[] = [];
