@@ -16,7 +16,20 @@ export default defineConfig({
     projects: [
       {
         extends: true,
-        test: { name: 'unit', include: ['test/**/*.test.ts'], exclude: ['test/browser/**', 'test/fixtures/**'] },
+        test: {
+          name: 'unit',
+          include: ['test/**/*.test.ts'],
+          exclude: ['test/browser/**', 'test/engineering/**', 'test/reference/**', 'test/fixtures/**'],
+        },
+      },
+      {
+        extends: true,
+        // Pure functions: nothing is left behind that a next file could see, and loading the methods anew for each costs minutes.
+        test: {
+          name: 'engineering',
+          include: ['test/engineering/**/*.test.ts', 'test/reference/**/*.test.ts'],
+          isolate: false,
+        },
       },
       {
         extends: true,

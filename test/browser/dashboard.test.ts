@@ -186,16 +186,21 @@ describe('renderDashboard', () => {
     async (colorScheme) => {
       const page = await open(address, { colorScheme });
       await page.evaluate(axeSource);
-      const problems = (): Promise<string[]> =>
-        page.evaluate(`axe.run({ resultTypes: ['violations'] }).then(({ violations }) =>
+      // structure does not hang on the scheme or the width: all rules once, elsewhere those of colours and sizes
+      const problems = (rules: string): Promise<string[]> =>
+        page.evaluate(`axe.run({ resultTypes: ['violations']${rules} }).then(({ violations }) =>
           violations.map(({ id, nodes }) => id + ': ' + nodes.slice(0, 3).map(({ target }) => target.join(' ')).join(', ')))`);
       await page.evaluate('document.querySelectorAll("details").forEach((details) => { details.open = true; })');
       for (const width of [1280, 390]) {
         await page.setViewportSize({ width, height: 900 });
-        expect(await problems()).toEqual([]);
+        const rules =
+          colorScheme === 'light' && width === 1280
+            ? ''
+            : ", runOnly: ['color-contrast', 'target-size', 'scrollable-region-focusable', 'link-in-text-block']";
+        expect(await problems(rules)).toEqual([]);
         await page.locator('#list-table a').first().click();
         await page.locator('#make-hand').click();
-        expect(await problems()).toEqual([]);
+        expect(await problems(rules)).toEqual([]);
         await page.keyboard.press('Escape');
       }
     },

@@ -24,7 +24,7 @@ const RESULTS = `SELECT b.id, ${RESULT_COLUMNS.map(({ name }) => `r."${name}"`).
   WHERE r.run_id = ? ORDER BY b.id`;
 
 describe('screen', () => {
-  it('recomputes every demo building with a trace to the same bits as stored', { timeout: 120_000 }, async () => {
+  it('recomputes every third demo building with a trace to the same bits as stored', { timeout: 120_000 }, async () => {
     await screened(demoCopy(), async (db, { runId }) => {
       const rows = await db.rows<{
         id: string;
@@ -33,7 +33,8 @@ describe('screen', () => {
         capacity_g: number | null;
       }>(RESULTS, [runId]);
       expect(rows.length).toBeGreaterThan(230);
-      for (const { id, ln_priority, sa_g, capacity_g } of rows) {
+      // who-reads.test.ts recomputes all of them without a trace; with a trace and its neighbours one takes a tenth of a second
+      for (const { id, ln_priority, sa_g, capacity_g } of rows.filter((_, i) => i % 3 === 0)) {
         const { result, steps, stored } = await explainBuilding(db, runId, id, 'si');
         if ('reason' in result) {
           expect(stored['not_ranked']).toBe(result.reason);
