@@ -22,7 +22,7 @@ const BLOCK = 100;
 const LATER = 1_000;
 /** The 0.02 can be told apart from chance with 10,000 draws, which take minutes: DEVELOPERS.md says how; the suite draws fewer. */
 const ALL_DRAWS = 10_000;
-const DRAWS = Number(process.env['SWAYMARK_MONTE_CARLO_DRAWS'] ?? 3_000);
+const DRAWS = Number(process.env['SWAYMARK_MONTE_CARLO_DRAWS'] ?? 2_000);
 /** What chance alone adds to the largest of some hundred gaps: 3.5 standard errors of a chance of one half. */
 const BY_CHANCE = DRAWS >= ALL_DRAWS ? 0 : 3.5 * Math.sqrt(0.25 / DRAWS);
 
