@@ -71,6 +71,8 @@ export interface SurveyOutlook {
   /** How many hours of visits were planned to find them, and the wrong places then. */
   readonly reach_hours: number;
   readonly reach_wrong: number;
+  /** Wrong places were everything found out that a visit can. */
+  readonly least_wrong: number;
   readonly worth_visiting: number;
   readonly buildings_of_80_percent: number;
   /** The first visits. */

@@ -2,9 +2,10 @@
 import { resolve } from 'node:path';
 import type { Cost } from '../engineering/priority/campaign.js';
 import { UserError } from '../errors.js';
+import { ANSWERS, ANSWER_COLUMNS } from '../inventory/answers.js';
 import { readPageScript } from '../reports/page-script.js';
 import { renderSurvey } from '../reports/survey.js';
-import { ANSWERS, askedWords, reasonWord } from '../reports/survey/words.js';
+import { askedWords, reasonWord } from '../reports/survey/words.js';
 import { chosenRun, withStudyDatabase } from '../runs/open.js';
 import type { Report } from '../screening/assess-inventory.js';
 import { visitsOf } from '../screening/survey-outlook.js';
@@ -74,9 +75,6 @@ export async function surveyStudy(
 
 const HEAD = ['place', 'id', 'name', 'group', 'lon', 'lat', 'rank', 'visit', 'find out', 'because'] as const;
 const TAIL = ['surveyor', 'surveyed_on', 'remark'] as const;
-
-/** Every column that answers something. */
-export const ANSWER_COLUMNS: readonly string[] = Object.values(ANSWERS).flat();
 
 /**
  * The plan as a table for a tablet: a row a visit, cells of what is asked left blank, cells of what is not asked holding a dash so that

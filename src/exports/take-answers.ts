@@ -3,12 +3,11 @@ import { CsvError, parse } from 'csv-parse/sync';
 import { findColumn } from '../engineering/columns.js';
 import { UserError, showValue } from '../errors.js';
 import type { Problem } from '../errors.js';
-import { readAnswer } from '../inventory/answers.js';
+import { ANSWER_COLUMNS, readAnswer } from '../inventory/answers.js';
 import { changeStudyDatabase, chosenRun } from '../runs/open.js';
 import type { Database } from '../store/database.js';
 import { readText } from '../study/read-text.js';
 import type { Study } from '../study/schema.js';
-import { ANSWER_COLUMNS } from './survey-study.js';
 
 /** What is written where nothing was asked or found out. */
 const NOTHING = new Set(['', '-', '–', '—', '?']);

@@ -6,6 +6,7 @@ import { createHash } from 'node:crypto';
 import { findColumn } from '../engineering/columns.js';
 import type { InventoryColumn } from '../engineering/columns.js';
 import { findUnit } from '../engineering/units.js';
+import type { Unknown } from '../engineering/priority/survey-value.js';
 import { Bug } from '../errors.js';
 import type { Database } from '../store/database.js';
 import { quoteName, quoteText } from '../store/sql.js';
@@ -15,6 +16,20 @@ import { keySql, vocabularyOf } from './cells.js';
 import type { MappedColumn, Mapping } from './header.js';
 import type { IntakeStudy } from './intake-study.js';
 import { isNumeric, oddName } from './read.js';
+
+/** Inventory columns that answer each question. */
+export const ANSWERS: Readonly<Record<Unknown, readonly string[]>> = {
+  system: ['system'],
+  year: ['year_built'],
+  height: ['storeys_above', 'height_m'],
+  irregularity: ['soft_storey', 'weak_storey', 'torsion', 'reentrant_corner', 'setback', 'mass_irregularity'],
+  use: ['use'],
+  occupants: ['occupants_peak'],
+  drawings: ['design_base_shear_coefficient', 'design_level'],
+};
+
+/** Every column that answers something. */
+export const ANSWER_COLUMNS: readonly string[] = Object.values(ANSWERS).flat();
 
 /** One answer as it is kept. */
 export interface Answer {

@@ -9,6 +9,7 @@ import type { AssessSettings } from '../engineering/assess/settings.js';
 import { casesOf } from '../engineering/assess/cases.js';
 import { periodAt, periodModel } from '../engineering/assess/period.js';
 import { apply } from '../engineering/formula.js';
+import { substituted } from '../engineering/hand.js';
 import { HAZARD_SLOPE } from '../engineering/priority/records.js';
 import type { HazardGrids } from '../engineering/spectrum/grid.js';
 import { indexRanges } from '../store/chunks.js';
@@ -103,14 +104,13 @@ export async function withSlopes(
         },
       ];
     }
-    const { sa_1_g, sa_2_g } = pair;
-    const slopeAt = ({ sa_1_g: one, sa_2_g: two }: Pair): number =>
-      apply(HAZARD_SLOPE, {
-        sa_1_g: one,
-        sa_2_g: two,
-        return_period_1_years: years,
-        return_period_2_years: partnerYears,
-      });
+    const inputsAt = ({ sa_1_g, sa_2_g }: Pair) => ({
+      sa_1_g,
+      sa_2_g,
+      return_period_1_years: years,
+      return_period_2_years: partnerYears,
+    });
+    const slopeAt = (at: Pair): number => apply(HAZARD_SLOPE, inputsAt(at));
     const k = slopeAt(pair);
     // where the rarer level ranks, the larger ratio is the larger k
     const [low, high] = (pair.spread ?? []).map(slopeAt).sort((a, b) => a - b);
@@ -122,7 +122,7 @@ export async function withSlopes(
       {
         spectrum,
         k,
-        how: `ln(${String(partnerYears)}/${String(years)}) / ln(${sa_2_g.toPrecision(4)}/${sa_1_g.toPrecision(4)}) at the median period ${period_s.toFixed(2)} s${over}`,
+        how: `${substituted(HAZARD_SLOPE, inputsAt(pair))} at the median period ${period_s.toFixed(2)} s${over}`,
       },
     ];
   });

@@ -45,6 +45,7 @@ export async function surveyOutlook(
     halving_hours: plan.steps.find(({ expected_wrong_places }) => expected_wrong_places <= half)?.hours_so_far ?? null,
     reach_hours: plan.hours,
     reach_wrong: plan.expected_wrong_after,
+    least_wrong: plan.expected_wrong_least,
     worth_visiting: plan.worth_visiting,
     buildings_of_80_percent: plan.buildings_of_80_percent,
     steps: week.slice(0, TOLD),

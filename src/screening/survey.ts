@@ -4,6 +4,7 @@ import type { AssessSettings } from '../engineering/assess/settings.js';
 import { unknownsOf } from '../engineering/assess/unknowns.js';
 import type { YearPools } from '../engineering/building-columns.js';
 import { buildingReader } from '../engineering/building-columns.js';
+import type { SurveyVisit } from '../engineering/page-contract.js';
 import type { Candidate, Cost, Limits, PlannedVisit, Visit } from '../engineering/priority/campaign.js';
 import { planCampaign } from '../engineering/priority/campaign.js';
 import { rankBasis } from '../engineering/priority/rank.js';
@@ -34,28 +35,13 @@ export interface SurveyWish {
   readonly cost: Cost;
 }
 
-/** One visit of the plan, with the building as the list shows it. */
-export interface SurveyStep {
-  readonly place: number;
-  readonly id: string;
-  readonly name: string | null;
-  readonly group: string | null;
+/** One visit of the plan, with where its building stands and what it costs. */
+export interface SurveyStep extends SurveyVisit {
   readonly lon: number | null;
   readonly lat: number | null;
-  readonly rank: number;
-  readonly visit: string;
-  readonly asks: readonly Unknown[];
-  /** Share of the building's spread (variance of ln S) that each unknown it asks for stands for. */
-  readonly shares: readonly number[];
-  /** In units of the priority of the median building. */
-  readonly value: number;
-  readonly value_per_cost: number;
   readonly hours: number;
   readonly money: number;
-  readonly hours_so_far: number;
   readonly money_so_far: number;
-  /** Expected wrong places of the list once all visits to here are made. */
-  readonly expected_wrong_places: number;
 }
 
 export interface SurveyPlan {
@@ -68,6 +54,8 @@ export interface SurveyPlan {
   readonly money: number;
   readonly expected_wrong_before: number;
   readonly expected_wrong_after: number;
+  /** Were everything known of the weighed buildings that a visit can find out. */
+  readonly expected_wrong_least: number;
   /** Ranked buildings; those of which something could be learnt that matters; those weighed one by one. */
   readonly ranked: number;
   readonly worth_visiting: number;
@@ -177,6 +165,10 @@ export async function planOn(
     money: planned.at(-1)?.money ?? 0,
     expected_wrong_before: expectedWrong,
     expected_wrong_after: steps.at(-1)?.expected_wrong_places ?? expectedWrong,
+    expected_wrong_least: Math.max(
+      0,
+      expectedWrong - 0.5 * sumOf(candidates, ({ worth }) => worth.wrongOf(0) - worth.wrongOf(worth.value.length - 1)),
+    ),
     ranked: assessed.id.length,
     worth_visiting: worthVisiting,
     weighed: candidates.length,
@@ -200,6 +192,10 @@ function mostPromising(
     .map((i) => index[i]!)
     .sort((a, b) => a - b);
   return { chosen, worthVisiting: promising.length };
+}
+
+function sumOf<T>(list: readonly T[], of: (one: T) => number): number {
+  return list.reduce((sum, one) => sum + of(one), 0);
 }
 
 /** How many of the falling `values` it takes to reach `sum`. */

@@ -1,10 +1,11 @@
 /** What a sensitivity run switches: every entry of the register of assumptions that can be, each to one or more other values. */
 import { ASSUMED, assumedWith } from '../engineering/assess/assumed.js';
 import type { Assumed } from '../engineering/assess/assumed.js';
-import { NO_IRREGULARITY_CHANCES, RANK_BY } from '../engineering/assess/settings.js';
+import { RANK_BY } from '../engineering/assess/settings.js';
 import type { AssessSettings, RankBy, Spreads } from '../engineering/assess/settings.js';
 import type { Assumption } from '../engineering/page-contract.js';
 import type { Mark, Switch } from './switch.js';
+import { irregularitySwitches } from './switches-irregularity.js';
 import { periodSwitches } from './switches-period.js';
 import { priorSwitches } from './switches-prior.js';
 
@@ -158,55 +159,6 @@ function capacitySwitches(settings: AssessSettings): readonly Switch[] {
     }),
     { assumption: 'era-spread', to: 'σ × 1.5', settings: spreading(settings, ['era', 'eraTable'], 1.5) },
     ...irregularitySwitches(settings),
-  ];
-}
-
-function irregularitySwitches(settings: AssessSettings): readonly Switch[] {
-  const own = settings.irregularity ?? NO_IRREGULARITY_CHANCES;
-  const factors = (change: (factor: number) => number): AssessSettings => {
-    const { soft_or_weak_storey, torsion, reentrant_corner, setback, mass_irregularity } = own.factors;
-    return {
-      ...settings,
-      irregularity: {
-        ...own,
-        factors: {
-          soft_or_weak_storey: change(soft_or_weak_storey),
-          torsion: change(torsion),
-          reentrant_corner: change(reentrant_corner),
-          setback: change(setback),
-          mass_irregularity: change(mass_irregularity),
-        },
-      },
-    };
-  };
-  const chances = (times: number): AssessSettings => {
-    const { soft_storey: soft, weak_storey: weak, torsion, reentrant_corner, setback, mass_irregularity } = own.chances;
-    const of = (chance: number): number => Math.min(1, times * chance);
-    return {
-      ...settings,
-      irregularity: {
-        ...own,
-        chances: {
-          soft_storey: { frame: of(soft.frame), wall: of(soft.wall) },
-          weak_storey: { frame: of(weak.frame), wall: of(weak.wall) },
-          torsion: of(torsion),
-          reentrant_corner: of(reentrant_corner),
-          setback: of(setback),
-          mass_irregularity: of(mass_irregularity),
-        },
-      },
-    };
-  };
-  return [
-    { assumption: 'irregularity', to: 'no factor', settings: factors(() => 1) },
-    { assumption: 'irregularity', to: 'each factor squared', settings: factors((factor) => factor * factor) },
-    // runs of earlier versions have no such entry in their register
-    ...(settings.irregularity === undefined
-      ? []
-      : [
-          { assumption: 'irregularity-chances', to: 'blank counts as none', settings: chances(0) },
-          { assumption: 'irregularity-chances', to: 'chances doubled', settings: chances(2) },
-        ]),
   ];
 }
 

@@ -1,20 +1,10 @@
-import { realpathSync, statSync } from 'node:fs';
+import { realpathSync } from 'node:fs';
 import { isAbsolute, relative, resolve } from 'node:path';
-import {
-  DOUBLE,
-  DuckDBDataChunk,
-  DuckDBEnumType,
-  DuckDBInstance,
-  DuckDBTypeId,
-  ENUM,
-  INTEGER,
-  VARCHAR,
-} from '@duckdb/node-api';
-import type { DuckDBConnection, DuckDBMaterializedResult } from '@duckdb/node-api';
-import { Bug, UserError } from '../errors.js';
+import { DOUBLE, DuckDBDataChunk, DuckDBEnumType, DuckDBTypeId, ENUM, INTEGER, VARCHAR } from '@duckdb/node-api';
+import type { DuckDBConnection, DuckDBInstance, DuckDBMaterializedResult } from '@duckdb/node-api';
+import { Bug } from '../errors.js';
+import { startInstance } from './instance.js';
 import { translateError } from './messages.js';
-import { scratchFolder } from './scratch.js';
-import { quoteText } from './sql.js';
 import { enumCodeType, readNumbers, readTexts, readWords, writeColumn } from './vectors.js';
 import type { ColumnKind, ColumnsOf, WritableColumn } from './vectors.js';
 
@@ -28,9 +18,6 @@ export interface OpenOptions {
   /** Folders besides the scratch folder that statements may read from and write to. */
   readonly folders?: readonly string[];
 }
-
-/** Beyond it the engine spills to the scratch folder; its own default is most of the machine, beside our heap. [judgement] */
-const MEMORY_LIMIT = '700MB';
 
 interface Shared {
   readonly instance: DuckDBInstance;
@@ -50,7 +37,7 @@ const OPEN = new Map<string, Shared>();
 export async function openDatabase(options: OpenOptions): Promise<Database> {
   const readOnly = options.readOnly ?? false;
   if (options.path === ':memory:') {
-    const instance = await start(options.path, readOnly, options.folders ?? []);
+    const instance = await startInstance(options.path, readOnly, options.folders ?? []);
     return new Database(
       await instance.connect(),
       undefined,
@@ -65,7 +52,7 @@ export async function openDatabase(options: OpenOptions): Promise<Database> {
   let shared = OPEN.get(path);
   if (shared === undefined) {
     const folders = options.folders ?? [];
-    shared = { instance: await start(path, readOnly, folders), readOnly, folders, users: 0 };
+    shared = { instance: await startInstance(path, readOnly, folders), readOnly, folders, users: 0 };
     OPEN.set(path, shared);
   } else if (shared.readOnly && !readOnly) {
     throw new Bug(`${path} is already open for reading in this process; close it before writing`);
@@ -84,34 +71,6 @@ export async function openDatabase(options: OpenOptions): Promise<Database> {
       held.instance.closeSync();
     },
   );
-}
-
-async function start(path: string, readOnly: boolean, folders: readonly string[]): Promise<DuckDBInstance> {
-  const allowed = [scratchFolder(), ...folders.map((folder) => resolve(folder))];
-  const file = path === ':memory:' ? undefined : path;
-  if (file !== undefined && statSync(file, { throwIfNoEntry: false })?.isDirectory() === true)
-    throw new UserError('a folder stands where the database belongs; move it away or rename it', { file });
-  try {
-    const instance = await DuckDBInstance.create(path, {
-      temp_directory: scratchFolder(),
-      memory_limit: MEMORY_LIMIT,
-      access_mode: readOnly ? 'READ_ONLY' : 'AUTOMATIC',
-      autoinstall_known_extensions: 'false',
-      autoload_known_extensions: 'false',
-    });
-    try {
-      const connection = await instance.connect();
-      await connection.run(`SET allowed_directories = [${allowed.map((name) => quoteText(`${name}/`)).join(', ')}]`);
-      await connection.run('SET enable_external_access = false');
-      connection.closeSync();
-    } catch (error) {
-      instance.closeSync();
-      throw error;
-    }
-    return instance;
-  } catch (error) {
-    throw translateError(error, file);
-  }
 }
 
 /** One connection. Statements run one at a time and their results are materialised: a stream on it could be cut short silently. */

@@ -89,7 +89,7 @@ export function assess(
     readAt(spectrum, pass.period.transverse.p50_s),
   );
   const lnPriority = context.settings.rankBy === 'demand' ? ln(demand_g) : mixtureQuantile(mixture, 0.5, 0);
-  const leading = leadingCase(building, cases, choice, slope_k, context, trace);
+  const leading = leadingCase(building, cases, choice, slope_k, context, trace, pass.models);
   if (typeof leading === 'string') return { id, reason: leading };
   const weak = weakOf(building, cases, context.settings.codeHistory);
   if (trace !== undefined) {

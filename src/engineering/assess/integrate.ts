@@ -27,11 +27,8 @@ const Z84 = 0.994457883209753;
 export interface Pass {
   readonly period: PerDirection<PeriodBand>;
   readonly disagreement: number;
-}
-
-interface SystemModels {
-  readonly longitudinal: PeriodModel;
-  readonly transverse: PeriodModel;
+  /** Of the most likely case. */
+  readonly models: PerDirection<PeriodModel>;
 }
 
 /** One node of the height of one pair of systems. */
@@ -78,6 +75,7 @@ export function integrate(
   const bands: Band[] = [];
   scratch.lentCount = 0;
   let disagreement = 1;
+  let ofLeading: PerDirection<PeriodModel> | undefined;
   const { score } = scratch;
   const add = (
     weight: number,
@@ -108,6 +106,8 @@ export function integrate(
   for (const group of cases.groups) {
     const models = modelsOf(building, group[0]!, context);
     if (models === null) return NO_PERIOD;
+    // the first group is that of the most likely case
+    ofLeading ??= models;
     let groupChance = 0;
     for (const { chance } of group) groupChance += chance;
     const heights = heightNodes(building, models, demandOnly || assessed);
@@ -149,7 +149,7 @@ export function integrate(
       }
     }
   }
-  return { period: periodBands(building, bands, cases, context, scratch), disagreement };
+  return { period: periodBands(building, bands, cases, context, scratch), disagreement, models: ofLeading! };
 }
 
 const MIDDLE = (PERIOD_NODES.z.length - 1) / 2;
@@ -179,7 +179,7 @@ function constantTerm(building: Building, people: People, spectrum: ContextSpect
   return zone + (peopleWeight * ln(people.people_exposed) + importanceWeight * ln(importanceOf(building)));
 }
 
-function modelsOf(building: Building, which: Case, context: AssessContext): SystemModels | null {
+function modelsOf(building: Building, which: Case, context: AssessContext): PerDirection<PeriodModel> | null {
   const longitudinal = periodModel(building, 'longitudinal', which.system, context);
   if (longitudinal === null) return null;
   if (which.system === which.system_transverse && alikeAcross(building, longitudinal, which.system, context))
@@ -189,7 +189,7 @@ function modelsOf(building: Building, which: Case, context: AssessContext): Syst
 }
 
 /** An inferred height is integrated over unless nothing depends on it. */
-function heightNodes(building: Building, models: SystemModels, capacityWithoutHeight: boolean): Nodes {
+function heightNodes(building: Building, models: PerDirection<PeriodModel>, capacityWithoutHeight: boolean): Nodes {
   if (!(building.height_m.sigma > 0)) return ONE_NODE;
   const heightless = ({ formula, stiffnessAt }: PeriodModel): boolean => formula === null && stiffnessAt === null;
   if (capacityWithoutHeight && heightless(models.longitudinal) && heightless(models.transverse)) return ONE_NODE;

@@ -1,6 +1,5 @@
 /** The most likely case worked out at its central values: what the hand calculation shows. */
 import type { Building, DirectionName, PerDirection, System } from '../building.js';
-import { ELASTIC_EQUIVALENT, REDUCTION } from '../capacity/records.js';
 import { DIRECTIONS } from '../direction.js';
 import { apply } from '../formula.js';
 import type { AnyRecord } from '../formula.js';
@@ -11,18 +10,16 @@ import { cite } from '../source.js';
 import { flagWords } from '../spectrum/flags.js';
 import { power } from '../numeric/power.js';
 import type { Trace } from '../trace.js';
-import { directionsAlike, drawingsLevels, importanceOf } from './terms.js';
-import { capacityAtHeight, keptCapacity, massShare } from './capacity.js';
-import type { CapacityAtHeight, Case, Cases } from './case-memory.js';
+import { directionsAlike, importanceOf } from './terms.js';
+import type { Case, Cases } from './case-memory.js';
 import type { EditionId } from './code-history.js';
-import { codeRatio } from './code-ratio.js';
 import { chooseSpectrum } from './choose-spectrum.js';
 import type { SpectrumChoice } from './choose-spectrum.js';
 import { readAt } from './context.js';
 import type { AssessContext, ContextSpectrum } from './context.js';
 import { centralFactor } from './irregularity.js';
 import { peopleOf } from './people.js';
-import { strengthCheck } from './strength-check.js';
+import { capacityOf } from './leading-capacity.js';
 import { NO_PERIOD, alikeAcross, periodAt, periodModel } from './period.js';
 import type { Evidence, PeriodBasis, PeriodModel } from './period.js';
 import { SiteSpectrum, traceOrdinates, tracePlace } from './site-spectrum.js';
@@ -53,7 +50,7 @@ export interface LeadingCase {
   readonly sa_level_2_g: number;
 }
 
-/** The leading case of `building`. */
+/** The leading case of `building`; `found` are its period models where the caller has them already. */
 export function leadingCase(
   building: Building,
   cases: Cases,
@@ -61,6 +58,7 @@ export function leadingCase(
   slope_k: number,
   context: AssessContext,
   trace?: Trace,
+  found?: PerDirection<PeriodModel>,
 ): LeadingCase | string {
   const which = cases.list[0]!;
   if (trace !== undefined) openTrace(building, which, choice, trace);
@@ -88,7 +86,11 @@ export function leadingCase(
     }
     trace?.heading(direction === 'longitudinal' ? 'Longitudinal direction' : 'Transverse direction');
     const system = direction === 'longitudinal' ? which.system : which.system_transverse;
-    const model = periodModel(building, direction, system, context, trace);
+    // written out step by step they are found once more
+    const model =
+      trace === undefined && found !== undefined
+        ? found[direction]
+        : periodModel(building, direction, system, context, trace);
     if (model === null) return NO_PERIOD;
     models[direction] = model;
     const { period_s } = periodAt(model, building.height_m.value, context, trace);
@@ -182,88 +184,9 @@ function readOrdinate(spectrum: ContextSpectrum, period_s: number, trace?: Trace
   return sa_g;
 }
 
-/** Capacity of the case at a period; the likelier level where the drawings do not say (working stress). */
-function capacityOf(
-  building: Building,
-  which: Case,
-  direction: DirectionName,
-  period_s: number,
-  irregularity: number,
-  spectrum: ContextSpectrum,
-  context: AssessContext,
-  trace?: Trace,
-): number {
-  if (building.capacity_sa_g > 0) {
-    trace?.value('capacity_sa_g', building.capacity_sa_g, 'given', 'capacity from a finished assessment');
-    return building.capacity_sa_g * context.capacityFactor;
-  }
-  const { level } = drawingsLevels(building)[0]!;
-  const height_m = building.height_m.value;
-  const check = level === null ? strengthCheck(building, which, direction, height_m, context, trace) : null;
-  if (trace !== undefined) showWay(level !== null, check, trace);
-  const at =
-    check !== null && typeof check !== 'string'
-      ? check
-      : trace === undefined && level === null
-        ? keptCapacity(building, which, direction, height_m, context)
-        : capacityAtHeight(building, which, direction, height_m, level, context, trace);
-  if (trace !== undefined) showCodeRatio(building, which, direction, context, trace);
-  const reduction = apply(REDUCTION, { ductility: at.ductility, period_s, corner_period_s: spectrum.corner_s }, trace);
-  return (
-    apply(
-      ELASTIC_EQUIVALENT,
-      {
-        strength_coefficient: at.strength_coefficient,
-        overstrength: at.overstrength,
-        reduction,
-        irregularity,
-        mass_share: at.checked === 'as it is' ? 1 : massShare(building),
-      },
-      trace,
-    ) * context.capacityFactor
-  );
-}
-
 /** A factor of the priority with its weight as exponent. */
 function weighed(factor: number, weight: number): number {
   return weight === 1 ? factor : power(factor, weight);
-}
-
-/** Shown beside, counted nowhere. */
-function showCodeRatio(
-  building: Building,
-  which: Case,
-  direction: DirectionName,
-  context: AssessContext,
-  trace: Trace,
-): void {
-  if (Number.isNaN(codeRatio(building, which, direction, context))) return;
-  trace.choice({
-    question: 'Plain code ratio',
-    taken: 'shown beside the capacity, not counted',
-    because: 'it leaves out the period of the building, its ductility and today’s spectrum',
-    others: [],
-  });
-  codeRatio(building, which, direction, context, trace);
-}
-
-/** Which of the ways to a capacity was taken, and why not those before it. */
-function showWay(byDrawings: boolean, check: CapacityAtHeight | string | null, trace: Trace): void {
-  const assessment = { what: 'finished assessment', why: 'no assessed capacity on record' };
-  const drawings = { what: "drawings' coefficient", why: 'no design coefficient on record' };
-  const checkWhy = check === null ? 'nothing of the structure on record, or no check wanted by the study' : '';
-  const era = { what: 'code of the era', why: 'a better way comes first' };
-  const byCheck = check !== null && typeof check !== 'string';
-  trace.choice({
-    question: 'Way to the capacity',
-    taken: byDrawings ? "drawings' coefficient" : byCheck ? 'strength check of the first storey' : 'code of the era',
-    because: 'the best of the four ways for which the row has what it takes',
-    others: byDrawings
-      ? [assessment, { what: 'strength check', why: 'a better way comes first' }, era]
-      : byCheck
-        ? [assessment, drawings, era]
-        : [assessment, drawings, { what: 'strength check', why: typeof check === 'string' ? check : checkWhy }],
-  });
 }
 
 /** ln S at a demand and a capacity. */

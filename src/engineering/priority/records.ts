@@ -25,6 +25,16 @@ const slope: Family<
     { name: 'return_period_2_years', kind: 'number', meaning: 'return period of the second level, years' },
   ],
   expression: 'max(from, min(to, ln(return_period_2_years / return_period_1_years) / ln(sa_2_g / sa_1_g)))',
+  // within the bounds they need not be read
+  shownAt: ({ sa_1_g, sa_2_g, return_period_1_years, return_period_2_years }, { from, to }) => {
+    const k = ln(return_period_2_years / return_period_1_years) / ln(sa_2_g / sa_1_g);
+    return k >= from && k <= to
+      ? { expression: 'ln(return_period_2_years / return_period_1_years) / ln(sa_2_g / sa_1_g)', clause: '' }
+      : {
+          expression: 'max(from, min(to, ln(return_period_2_years / return_period_1_years) / ln(sa_2_g / sa_1_g)))',
+          clause: 'kept within its bounds',
+        };
+  },
   evaluate: ({ sa_1_g, sa_2_g, return_period_1_years, return_period_2_years }, { from, to }) =>
     Math.max(from, Math.min(to, ln(return_period_2_years / return_period_1_years) / ln(sa_2_g / sa_1_g))),
 };

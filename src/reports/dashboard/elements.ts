@@ -22,9 +22,12 @@ export function TableRegion({ table, label, id }: { readonly table: DataTable; r
   );
 }
 
+/** A number, perhaps of or to another, perhaps with a unit: a building called "12-7 High Street" is none. */
+const NUMBER = /^[≈−+]?\d[\d.,\s\u202f]*(?:(?:to|of) [−\d.,\s\u202f]+)?(?:%|[a-z²/]{0,7})$/u;
+
 /** Columns that hold numbers stand right. */
 function numeric({ rows }: DataTable, column: number): string | undefined {
-  return rows.length > 0 && rows.every((row) => /^[≈−\d]/.test(row[column] ?? '')) ? 'num' : undefined;
+  return rows.length > 0 && rows.every((row) => NUMBER.test(row[column] ?? '')) ? 'num' : undefined;
 }
 
 /** A titled part of the page that the contents link to. */

@@ -3,6 +3,7 @@ import { formatNumber } from '../../engineering/format.js';
 import type { SurveyPlan } from '../../screening/survey.js';
 import { columnsOf, rendererFor } from '../dashboard/charts/chart.js';
 import type { Chart } from '../dashboard/charts/chart.js';
+import { groundPlan } from '../dashboard/charts/ground-plan.js';
 import { askedWords } from './words.js';
 
 /** Expected wrong places of the list over the cost of the visits. */
@@ -62,17 +63,13 @@ export function visitsMap({ steps }: SurveyPlan): Chart | null {
     return [{ step, lon, lat }];
   });
   if (stops.length === 0) return null;
-  const middle = (values: readonly number[]): number => (Math.min(...values) + Math.max(...values)) / 2;
-  const lat0 = middle(stops.map(({ lat }) => lat));
-  const lon0 = middle(stops.map(({ lon }) => lon));
-  // mean radius of the earth (IUGG): plenty for a walk
-  const degree_m = (6371008.8 * Math.PI) / 180;
-  const rows = stops.map(({ step, lon, lat }) => ({
+  const plan = groundPlan(stops);
+  const rows = stops.map(({ step }, i) => ({
     place: String(step.place),
     id: step.id,
     visit: step.visit,
-    east: (lon - lon0) * degree_m * Math.cos((lat0 * Math.PI) / 180),
-    north: (lat - lat0) * degree_m,
+    east: plan[i]?.east_m ?? NaN,
+    north: plan[i]?.north_m ?? NaN,
   }));
   const reach = Math.max(25, ...rows.flatMap(({ east, north }) => [Math.abs(east), 2 * Math.abs(north)])) * 1.1;
   // one scale both ways

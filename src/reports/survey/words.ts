@@ -15,17 +15,6 @@ export const ASKED: Readonly<Record<Unknown, string>> = {
   drawings: 'design coefficient',
 };
 
-/** Inventory columns that answer each question. */
-export const ANSWERS: Readonly<Record<Unknown, readonly string[]>> = {
-  system: ['system'],
-  year: ['year_built'],
-  height: ['storeys_above', 'height_m'],
-  irregularity: ['soft_storey', 'weak_storey', 'torsion', 'reentrant_corner', 'setback', 'mass_irregularity'],
-  use: ['use'],
-  occupants: ['occupants_peak'],
-  drawings: ['design_base_shear_coefficient', 'design_level'],
-};
-
 export function askedWords({ asks }: Pick<SurveyVisit, 'asks'>): string {
   return asks.map((unknown) => ASKED[unknown]).join(', ');
 }
@@ -57,12 +46,13 @@ export function planSentences(plan: SurveyPlan): readonly string[] {
 }
 
 /** What a survey would do to the list, in a sentence a council understands. */
-export function outlookSentence({ hours, expected_wrong_before: before, expected_wrong_after: after, halving_hours, reach_hours, reach_wrong }: SurveyOutlook): string {
-  if (hours === 0) return 'No visit would change the list: what is unknown at its edge is known already or cannot be seen.';
+export function outlookSentence(outlook: SurveyOutlook): string {
+  const { hours, expected_wrong_before: before, expected_wrong_after: after, halving_hours, least_wrong } = outlook;
+  if (hours === 0)
+    return 'No visit would change the list: what is unknown at its edge is known already or cannot be seen.';
   if (halving_hours !== null) return `${formatNumber(halving_hours, 2)} h of visits would halve that.`;
   const told = `${formatNumber(hours, 2)} h of visits would bring the places expected to be wrong from about ${formatNumber(before, 2)} to about ${formatNumber(after, 2)}`;
-  const further = reach_hours > hours ? `, ${formatNumber(reach_hours, 3)} h to about ${formatNumber(reach_wrong, 2)}` : '';
-  return `${told}${further}; the rest no visit settles: it is the scatter of strength and of the codes themselves, which a detailed assessment finds out.`;
+  return `${told}; with all found out that a visit can find out, about ${formatNumber(least_wrong, 2)} would remain, which take a detailed assessment.`;
 }
 
 /** Where there is something to learn. */

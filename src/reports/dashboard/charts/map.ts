@@ -2,12 +2,11 @@
 import { formatCount, formatNumber, shownValue, unitLabel } from '../../../engineering/format.js';
 import type { PageData } from '../../../engineering/page-contract.js';
 import { buildingLabel, counted, listLength } from '../reading.js';
+import { groundPlan } from './ground-plan.js';
 import { placeNumbers } from './map-numbers.js';
 import { columnsOf, rendererFor } from './chart.js';
 import type { Chart } from './chart.js';
 
-/** Mean radius of the earth (m), IUGG: plenty for a plan of a town. */
-const EARTH_M = 6371008.8;
 const MOST_NUMBERED = 60;
 
 interface Spot {
@@ -21,17 +20,12 @@ function spotsOf({ buildings, display }: PageData): { readonly spots: readonly S
   const placed = Array.from({ length: buildings.shown }, (_, i) => ({ i, lon: buildings.lon[i] ?? NaN, lat: buildings.lat[i] ?? NaN })).filter(
     ({ lon, lat }) => !Number.isNaN(lon) && !Number.isNaN(lat),
   );
-  const centre = (values: readonly number[]): number =>
-    (values.reduce((a, b) => Math.min(a, b), Infinity) + values.reduce((a, b) => Math.max(a, b), -Infinity)) / 2;
-  const lon0 = centre(placed.map(({ lon }) => lon));
-  const lat0 = centre(placed.map(({ lat }) => lat));
-  const degree_m = (EARTH_M * Math.PI) / 180;
-  const narrowing = Math.cos((lat0 * Math.PI) / 180);
-  const wide = placed.some(({ lon, lat }) => Math.max(Math.abs(lon - lon0) * narrowing, Math.abs(lat - lat0)) * degree_m > 3000);
+  const plan = groundPlan(placed);
+  const wide = plan.some(({ east_m, north_m }) => Math.max(Math.abs(east_m), Math.abs(north_m)) > 3000);
   // A town in kilometres; feet stay feet.
   const kilometres = wide && display === 'si';
-  const degree = kilometres ? degree_m / 1000 : shownValue(degree_m, 'm', display);
-  const spots = placed.map(({ i, lon, lat }) => ({ i, east: (lon - lon0) * degree * narrowing, north: (lat - lat0) * degree }));
+  const shown = (metres: number): number => (kilometres ? metres / 1000 : shownValue(metres, 'm', display));
+  const spots = plan.map(({ east_m, north_m }, at) => ({ i: placed[at]?.i ?? -1, east: shown(east_m), north: shown(north_m) }));
   return { spots, unit: kilometres ? 'km' : unitLabel('m', display) };
 }
 

@@ -36,6 +36,7 @@ export function SurveySection({ data: { summary } }: { readonly data: PageData }
       : [
           h('p', null, outlookSentence(survey)),
           h('p', { class: 'quiet' }, `${worthwhileSentence(survey, summary.ranked)} Worth is in units of the priority of the median building; the command survey plans any number of hours, with a walking list and a sheet for the field.`),
+          survey.steps.length === 0 ? null : h('p', { class: 'quiet narrow-only' }, 'The table is wider than this screen: it scrolls sideways.'),
           survey.steps.length === 0 ? null : h(TableRegion, { table: visitsTable(survey), label: 'The first visits of a survey' }),
         ],
   );

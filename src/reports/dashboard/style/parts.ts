@@ -9,6 +9,7 @@ tbody tr:last-child > * { border-bottom: 0; }
 .num { text-align: right; } td.num { white-space: nowrap; }
 th.name { min-width: 11rem; } tbody th.name { font-weight: 400; } th.name a { font-weight: 600; } td.reason { min-width: 12rem; }
 #list-table th, #list-table td { padding-inline: .5rem; }
+#survey td:nth-child(2), #survey td:nth-child(5), #survey td:nth-child(6) { min-width: 10rem; }
 .no-blocks tr > :nth-child(3) { display: none; }
 .scroll.long { max-height: min(80vh, 52rem); } .scroll.long thead th { position: sticky; top: 0; z-index: 1; }
 tr.edge > * { border-bottom: 2px dashed var(--ink); }
