@@ -39,6 +39,7 @@ const ENGINEERING_FLOORS = [
   ['priority'],
   ['results'],
   ['assess'],
+  ['hand-symbols'],
   ['hand'],
   ['methods'],
   ['calc-inputs'],

@@ -150,5 +150,5 @@ describe('estimates in the page', () => {
         '(() => { const d = document.querySelector("dialog"); return d.scrollWidth - d.clientWidth; })()',
       ),
     ).toBe(0);
-  });
+  }, 60_000);
 });

@@ -244,7 +244,7 @@ describe('a study whose level reads a grid', () => {
         const { summary, settings } = await readRun(db, 1);
         for (const { k, how } of summary.slopes) {
           // own arithmetic on what the sentence prints, the slope kept within 1 to 5
-          const [, t2, t1, s2, s1] = /ln\((\d+)\/(\d+)\) \/ ln\(([\d.]+)\/([\d.]+)\)/.exec(how)!.map(Number);
+          const [, t2, t1, s2, s1] = /ln\(([\d.]+) \/ ([\d.]+)\) \/ ln\(([\d.]+) \/ ([\d.]+)\)/.exec(how)!.map(Number);
           expect(k, how).toBeCloseTo(Math.max(1, Math.min(5, Math.log(t2! / t1!) / Math.log(s2! / s1!))), 1);
           // the median lies between the 5th and the 95th percentile, and apart from the ends
           const [, low, high] = /for the middle 90 % of them k would be ([\d.]+) to ([\d.]+)/.exec(how)!.map(Number);

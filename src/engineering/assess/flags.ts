@@ -7,6 +7,7 @@ import type { SpectrumChoice } from './choose-spectrum.js';
 import type { AssessContext } from './context.js';
 import { irregularitiesRead } from './irregularity.js';
 import type { LeadingCase } from './leading.js';
+import { isChecked } from './strength-check.js';
 
 export const FLAGS: Readonly<Record<string, string>> = {
   'system-unknown': 'The lateral system is not known; the table of system chances speaks.',
@@ -30,6 +31,7 @@ export const FLAGS: Readonly<Record<string, string>> = {
   'torsion-read': 'Torsion is read from the wall areas: one wall has most of a direction.',
   'reentrant-corner-read': 'A re-entrant corner is read from the footprint.',
   'setback-read': 'A setback is read from floor area, storeys and footprint.',
+  'strength-check': 'The capacity is that of the columns, walls or braces of the first storey, not that of a code.',
   'design-level-unknown': 'The level of the design coefficient is not stated; both levels count.',
 };
 
@@ -92,6 +94,8 @@ export function flagsOf(
   if (building.years.length === 1 && cases.systemKnown && cases.list.length > 1) flags.push('near-edition-change');
   if (hasNumbers(building))
     for (const name of irregularitiesRead(building, context)) flags.push(`${name.replaceAll('_', '-')}-read`);
+  if (context.settings.rankBy !== 'demand' && isChecked(building, cases.list[0]!, context, leading.governing))
+    flags.push('strength-check');
   if (building.design_base_shear_coefficient > 0 && building.design_level === null) flags.push('design-level-unknown');
   return flags;
 }

@@ -6,7 +6,8 @@ import type { Unknown } from '../priority/survey-value.js';
 import { casesOf } from './cases.js';
 import { slopeFor } from './context.js';
 import type { AssessContext, ContextSpectrum } from './context.js';
-import { byCheck, unknownsOf } from './unknowns.js';
+import { isChecked } from './strength-check.js';
+import { unknownsOf } from './unknowns.js';
 
 export interface SpreadShare {
   readonly what: string;
@@ -44,7 +45,7 @@ export function spreadShares(
   if (rankBy !== 'demand' && !(building.capacity_sa_g > 0)) {
     const k = slopeFor(context, spectrum.name);
     const cases = casesOf(building, context);
-    const checked = typeof cases !== 'string' && cases.list.every((which) => byCheck(building, which, context));
+    const checked = typeof cases !== 'string' && cases.list.every((which) => isChecked(building, which, context));
     const { overstrength, era, strengthCheck } = spreads;
     const variance = checked ? strengthCheck * strengthCheck : overstrength * overstrength + era * era;
     shares.push({

@@ -53,6 +53,18 @@ export function strengthCheck(
   return averageStress(work, CHECK_EDITIONS[wanted.method]);
 }
 
+/** The capacity of a case comes from a strength check: no better way speaks for the building, and its row has what the check needs. */
+export function isChecked(
+  building: Building,
+  which: Case,
+  context: AssessContext,
+  direction: DirectionName = 'longitudinal',
+): boolean {
+  if (building.capacity_sa_g > 0 || building.design_base_shear_coefficient > 0) return false;
+  const check = strengthCheck(building, which, direction, building.height_m.value, context);
+  return check !== null && typeof check !== 'string';
+}
+
 interface Areas {
   readonly columns_m2: number;
   readonly walls_m2: number;

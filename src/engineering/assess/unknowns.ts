@@ -12,7 +12,7 @@ import { integrate } from './integrate.js';
 import { irregularityOf } from './irregularity.js';
 import { peopleOf } from './people.js';
 import { newScratch } from './scratch.js';
-import { strengthCheck } from './strength-check.js';
+import { isChecked } from './strength-check.js';
 import type { Scratch } from './scratch.js';
 
 const shared = newScratch();
@@ -84,15 +84,9 @@ export function unknownsOf(building: Building, context: AssessContext, scratch: 
     add(
       'drawings',
       numbered(edition),
-      byCheck(building, cases.list[0]!, context) ? 0 : slope_k * settings.spreads.eraTable,
+      isChecked(building, cases.list[0]!, context) ? 0 : slope_k * settings.spreads.eraTable,
     );
   return { parts, learnable };
-}
-
-/** The capacity of a case comes from a strength check, not from an era table. */
-export function byCheck(building: Building, which: Case, context: AssessContext): boolean {
-  const check = strengthCheck(building, which, 'longitudinal', building.height_m.value, context);
-  return check !== null && typeof check !== 'string';
 }
 
 /** The nodes of one case at one height, without a soft or weak storey (0) or with one (1). */

@@ -70,9 +70,18 @@ export function reasonTeller(data: PageData): (i: number) => string {
   };
 }
 
+/** What the capacity rests on: the best of the four ways that the row allows. */
+function capacityBasis(data: PageData, i: number): string {
+  const { capacity_sa_g, design_base_shear_coefficient } = data.buildings.inputs.numbers;
+  if ((capacity_sa_g[i] ?? NaN) > 0) return 'finished assessment';
+  if ((design_base_shear_coefficient[i] ?? NaN) > 0) return 'coefficient from the drawings';
+  if (textAt(data, 'flags', i).split(' ').includes('strength-check')) return 'by the areas of its columns, walls or braces';
+  return editionWords(textAt(data, 'case_edition', i));
+}
+
 /** "unreinforced masonry wall, no seismic design", marked where it is only the most likely case. */
 function caseWords(data: PageData, i: number): string {
-  const words = `${plainWords(textAt(data, 'case_system', i))}, ${editionWords(textAt(data, 'case_edition', i))}`;
+  const words = `${plainWords(textAt(data, 'case_system', i))}, ${capacityBasis(data, i)}`;
   const system = data.buildings.inputs.words.system[i] ?? 'unknown';
   return system === 'unknown' ? `most likely ${words}` : words;
 }
