@@ -131,24 +131,28 @@ describe('estimates in the page', () => {
     expect(await table.count()).toBe(0);
   });
 
-  it.each([1280, 390])('gives axe nothing to report and the page nothing to scroll sideways at %d', async (width) => {
-    const page = await open('', width);
-    await page.getByLabel('Buildings whose lateral system is on record as').selectOption('concrete-moment-frame');
-    await page.locator('#class-estimates table.estimates').waitFor();
-    expect(await problems(page)).toEqual([]);
-    expect(await page.evaluate('document.documentElement.scrollWidth')).toBe(width);
-    const sheet = await sheetOf(
-      findIndex((i) => inputs.words.storey_stiffness_longitudinal_kN_per_m[i] !== null),
-      width,
-    );
-    await sheet.evaluate('document.querySelectorAll("details").forEach((details) => { details.open = true; })');
-    expect(await problems(sheet)).toEqual([]);
-    expect(await sheet.evaluate('document.documentElement.scrollWidth')).toBe(width);
-    // wide tables scroll within themselves
-    expect(
-      await sheet.evaluate(
-        '(() => { const d = document.querySelector("dialog"); return d.scrollWidth - d.clientWidth; })()',
-      ),
-    ).toBe(0);
-  }, 60_000);
+  it.each([1280, 390])(
+    'gives axe nothing to report and the page nothing to scroll sideways at %d',
+    async (width) => {
+      const page = await open('', width);
+      await page.getByLabel('Buildings whose lateral system is on record as').selectOption('concrete-moment-frame');
+      await page.locator('#class-estimates table.estimates').waitFor();
+      expect(await problems(page)).toEqual([]);
+      expect(await page.evaluate('document.documentElement.scrollWidth')).toBe(width);
+      const sheet = await sheetOf(
+        findIndex((i) => inputs.words.storey_stiffness_longitudinal_kN_per_m[i] !== null),
+        width,
+      );
+      await sheet.evaluate('document.querySelectorAll("details").forEach((details) => { details.open = true; })');
+      expect(await problems(sheet)).toEqual([]);
+      expect(await sheet.evaluate('document.documentElement.scrollWidth')).toBe(width);
+      // wide tables scroll within themselves
+      expect(
+        await sheet.evaluate(
+          '(() => { const d = document.querySelector("dialog"); return d.scrollWidth - d.clientWidth; })()',
+        ),
+      ).toBe(0);
+    },
+    60_000,
+  );
 });
