@@ -102,6 +102,8 @@ export interface PageSummary {
   readonly ranked: number;
   readonly list_size: number;
   readonly expected_wrong_places: number;
+  /** Holds the number of wrong places with a chance of 90 %; not in runs of earlier versions. */
+  readonly wrong_places_range?: { readonly low: number; readonly high: number } | undefined;
   readonly sure_places: number;
   readonly largest_equal_block: number;
   readonly tie_group_at_edge: { readonly from: number; readonly to: number };

@@ -1,5 +1,9 @@
 /** Every building of an inventory through `assess`, block by block; what the ranking needs is gathered, the rest kept at once. */
 import type { Mixture } from '../engineering/priority/mixture.js';
+import { EDITION_LABELS } from '../engineering/assess/code-history.js';
+import type { AssessSettings } from '../engineering/assess/settings.js';
+import { zoneOf } from '../engineering/assess/shared-load.js';
+import type { SharedErrors, Zone } from '../engineering/priority/shared-errors.js';
 import { SIMULATED_UNDER } from '../engineering/priority/simulate.js';
 import { indexRanges } from '../store/chunks.js';
 import type { Database } from '../store/database.js';
@@ -25,6 +29,8 @@ export interface Assessed {
   readonly people: Float64Array;
   readonly demand: Float64Array;
   readonly weakChance: Float64Array;
+  /** Errors that buildings have in common. */
+  readonly shared: SharedErrors;
   /** How many buildings are not ranked, by reason. */
   readonly reasons: ReadonlyMap<string, number>;
 }
@@ -42,9 +48,10 @@ export async function assessAll(
   count: number,
   assessor: Assessor,
   places: boolean,
+  settings: AssessSettings,
   onProgress?: (done: number) => void,
 ): Promise<Assessed> {
-  const gathering = new Gathering(count);
+  const gathering = new Gathering(count, settings);
   const running = new Set<Promise<void>>();
   // kept in order, whichever thread is first
   let kept: Promise<void> = Promise.resolve();
@@ -82,20 +89,27 @@ class Gathering {
   readonly #people: Float64Array;
   readonly #demand: Float64Array;
   readonly #weakChance: Float64Array;
+  /** Number of the zone of each building, and the zones by name. */
+  readonly #zone: Uint16Array;
+  readonly #zones = new Map<string, Zone>();
+  readonly #settings: AssessSettings;
   readonly #mixtures: Mixture[] = [];
   readonly #flat: FlatArrays[] = [];
   readonly #reasons = new Map<string, number>();
   #count = 0;
 
-  constructor(count: number) {
+  constructor(count: number, settings: AssessSettings) {
     this.#index = new Int32Array(count);
     this.#median = new Float64Array(count);
     this.#people = new Float64Array(count);
     this.#demand = new Float64Array(count);
     this.#weakChance = new Float64Array(count);
+    this.#zone = new Uint16Array(count);
+    this.#settings = settings;
   }
 
-  add(from: number, { ranked, numbers, demand_g, mixtures, texts }: BlockResult): void {
+  add(from: number, result: BlockResult): void {
+    const { ranked, numbers, demand_g, mixtures, texts } = result;
     const lnPriority = numbers['ln_priority']!;
     const exposed = numbers['people_exposed']!;
     const weak = numbers['weak_chance']!;
@@ -108,12 +122,30 @@ class Gathering {
       this.#demand[at] = demand_g[i]!;
       this.#weakChance[at] = weak[row]!;
     }
+    this.#addZones(result);
     this.#count += ranked.length;
     for (const mixture of mixturesOf(mixtures)) this.#mixtures.push(mixture);
     this.#flat.push(mixtures);
     const { words, codes } = texts['not_ranked']!;
     for (const code of codes) {
       if (code !== NONE) this.#reasons.set(words[code]!, (this.#reasons.get(words[code]!) ?? 0) + 1);
+    }
+  }
+
+  /** A building's zone is the spectrum it reads, with its slope. */
+  #addZones({ ranked, numbers, texts }: BlockResult): void {
+    const { words, codes } = texts['spectrum']!;
+    const slope = numbers['slope_k']!;
+    const number = new Int32Array(words.length).fill(-1);
+    for (let i = 0; i < ranked.length; i += 1) {
+      const row = ranked[i]!;
+      const code = codes[row]!;
+      if (number[code]! < 0) {
+        const name = words[code]!;
+        if (!this.#zones.has(name)) this.#zones.set(name, zoneOf(name, slope[row]!, this.#settings));
+        number[code] = [...this.#zones.keys()].indexOf(name);
+      }
+      this.#zone[this.#count + i] = number[code]!;
     }
   }
 
@@ -130,6 +162,11 @@ class Gathering {
       people: this.#people.subarray(0, count),
       demand: this.#demand.subarray(0, count),
       weakChance: this.#weakChance.subarray(0, count),
+      shared: {
+        labels: EDITION_LABELS,
+        zones: [...this.#zones.values()],
+        zone: this.#zone.subarray(0, count),
+      },
       reasons: this.#reasons,
     };
   }

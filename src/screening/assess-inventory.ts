@@ -50,7 +50,7 @@ export async function assessInventory(
   const found = await withSlopes(first, grids, study.ranking.k === 'from-levels', db, inventoryId, pools, count);
   assessor.begin(found.settings, pools, grids);
   report('assessing', 0);
-  const assessed = await assessAll(db, inventoryId, runId, count, assessor, grids.size > 0, (done) => {
+  const assessed = await assessAll(db, inventoryId, runId, count, assessor, grids.size > 0, found.settings, (done) => {
     report('assessing', done / count);
   });
   if (assessed.id.length === 0) throw nothingRanked(assessed, count);

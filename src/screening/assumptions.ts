@@ -181,9 +181,9 @@ export function assumptionsOf(settings: AssessSettings, slopes: readonly SlopeFo
     },
     {
       id: 'shared-spread',
-      statement: "Errors shared by a class or zone are counted as each building's own",
-      value: 'yes',
-      source: 'simplification: chances of single buildings are hardly affected',
+      statement: 'Errors common to all buildings of one code edition (its table) and of one spectrum (site class), σ',
+      value: `${String(spreads.eraTable)} and ${String(spreads.siteClass)}`,
+      source: JUDGEMENT,
     },
     ...irregularityAssumptions(settings),
     {

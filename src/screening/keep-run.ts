@@ -60,6 +60,7 @@ export async function keepRun(
     listSize,
     expectedWrong: figures.expected_wrong_places,
     assessed,
+    ranked: { ...ranked.ranking, mixtures: assessed.mixtures, draws: ranked.draws },
   };
   const survey = await surveyOutlook(db, basis, study);
   assessed.mixtures.length = 0;

@@ -36,12 +36,14 @@ export interface StoredRun {
   readonly settings: AssessSettings;
   readonly summary: StoredSummary;
   readonly rank_by: string;
+  readonly seed: number;
 }
 
 /** A run's record. @throws UserError when there is none of that number. */
 export async function readRun(db: Database, runId: number): Promise<StoredRun> {
   const [row] = await db.rows<Omit<StoredRun, 'settings' | 'summary'> & { settings: string; summary: string }>(
-    `SELECT run_id, made, program, note, title, inventory_id, study_fingerprint, methods_fingerprint, settings, summary, rank_by
+    `SELECT run_id, made, program, note, title, inventory_id, study_fingerprint, methods_fingerprint, settings, summary, rank_by,
+       CAST(seed AS DOUBLE) AS seed
      FROM run WHERE run_id = ?`,
     [runId],
   );

@@ -1,15 +1,21 @@
 /** Ranks the assessed buildings: rank, chance, band and tie group as columns over the whole inventory. */
-import { basisOf, fallingOrder, orderOf, rankAll, relativePriority, tieGroups } from '../engineering/priority/rank.js';
+import { basisOf, commonTo, fallingOrder, orderOf, rankAll, relativePriority } from '../engineering/priority/rank.js';
 import type { Bands, Ranking } from '../engineering/priority/rank.js';
+import { tieGroups } from '../engineering/priority/tie-groups.js';
+import { drawShared, hasShared } from '../engineering/priority/shared.js';
+import type { SharedDraws } from '../engineering/priority/shared.js';
 import { NULL_CODE } from '../store/codes.js';
 import { RANKED_COLUMNS, RESULT_WORDS } from '../store/schema.js';
 import { NULL_I32 } from '../store/vectors.js';
 import type { Assessed } from './assess-all.js';
 import type { Assessor } from './assess-threads.js';
+import { seeFromEdge } from './flat-mixtures.js';
 import type { RankedColumns } from './keep-results.js';
 
 export interface Ranked {
   readonly ranking: Ranking;
+  /** Draws of common errors; null where there are none. */
+  readonly draws: SharedDraws | null;
   /** Median ln S of the portfolio: priority 1. */
   readonly medianOfPortfolio: number;
   readonly columns: RankedColumns;
@@ -17,7 +23,10 @@ export interface Ranked {
 
 const IN_LIST = RESULT_WORDS['in_list']!;
 
-/** Ranks an inventory of `count` buildings; `assessor` works out the chances and bands, in its threads if it has any. */
+/**
+ * Ranks an inventory of `count` buildings; `assessor` works out the chances and bands, in its threads if it has any. The spreads of
+ * `assessed` become those seen from the edge of the list.
+ */
 export async function rankInventory(
   assessed: Assessed,
   count: number,
@@ -25,8 +34,11 @@ export async function rankInventory(
   seed: number,
   assessor: Assessor,
 ): Promise<Ranked> {
-  const { index, id, mixtures, median, people, demand } = assessed;
-  const input = { id, mixtures, median, people };
+  const { index, id, mixtures, median, people, demand, shared } = assessed;
+  const input = { id, mixtures, median, people, shared };
+  const draws = hasShared(shared) ? drawShared(mixtures, shared, listSize, seed) : null;
+  const common = commonTo(input, { draws });
+  if (common !== undefined) seeFromEdge(assessed.flat, common);
   const found = basisBy(assessor, assessed, listSize);
   // meanwhile, in this thread
   const order = orderOf(input);
@@ -35,11 +47,11 @@ export async function rankInventory(
   const { numbers, wholes, words } = columns;
   const medianOfPortfolio = n === 0 ? 0 : median[order[Math.floor((n - 1) / 2)]!]!;
   fillDemandRanks(columns, index, demand);
-  const basis = { order, ...(await found) };
+  const basis = { order, mixtures, draws, ...(await found) };
   const { curve, threshold } = basis;
   const parts = Promise.all(assessed.flat.map((flat) => assessor.bands(flat, { curve, threshold })));
   // and again
-  const groups = tieGroups(order, mixtures);
+  const groups = tieGroups(order, mixtures, common);
   const priority = numbers['priority']!;
   for (let i = 0; i < n; i += 1) priority[index[i]!] = relativePriority(median[i]!, medianOfPortfolio);
   const ranking = rankAll(input, listSize, seed, basis, groups, joined(await parts, n));
@@ -54,7 +66,7 @@ export async function rankInventory(
   const inList = words['in_list']!;
   const [inside, outside] = [IN_LIST.indexOf('yes'), IN_LIST.indexOf('no')];
   for (let i = 0; i < n; i += 1) inList[index[i]!] = ranking.rank[i]! <= listSize ? inside : outside;
-  return { ranking, medianOfPortfolio, columns };
+  return { ranking, draws, medianOfPortfolio, columns };
 }
 
 /** Expected numbers above and threshold, worked out set by set; the sets do not depend on the number of threads. */

@@ -26,6 +26,7 @@ export type StoredSummary = Pick<
   | 'ranked'
   | 'list_size'
   | 'expected_wrong_places'
+  | 'wrong_places_range'
   | 'sure_places'
   | 'largest_equal_block'
   | 'tie_group_at_edge'
@@ -64,6 +65,7 @@ export function rankingFigures(
   | 'ranked'
   | 'list_size'
   | 'expected_wrong_places'
+  | 'wrong_places_range'
   | 'sure_places'
   | 'largest_equal_block'
   | 'tie_group_at_edge'
@@ -87,6 +89,7 @@ export function rankingFigures(
     ranked: n,
     list_size: listSize,
     expected_wrong_places: ranking.expectedWrong,
+    wrong_places_range: { low: ranking.wrongLow, high: ranking.wrongHigh },
     sure_places: sure,
     largest_equal_block: ranking.largestEqualBlock,
     tie_group_at_edge: { from: ranking.order.findIndex(isOfEdge) + 1, to: ranking.order.findLastIndex(isOfEdge) + 1 },

@@ -7,9 +7,10 @@ import { buildingReader } from '../engineering/building-columns.js';
 import type { SurveyVisit } from '../engineering/page-contract.js';
 import type { Candidate, Cost, Limits, PlannedVisit, Visit } from '../engineering/priority/campaign.js';
 import { planCampaign } from '../engineering/priority/campaign.js';
-import { rankBasis } from '../engineering/priority/rank.js';
+import { commonTo, rankBasis } from '../engineering/priority/rank.js';
+import type { RankBasis } from '../engineering/priority/rank.js';
 import type { Edge, Unknown } from '../engineering/priority/survey-value.js';
-import { mostWorth, shareOf, worthOf } from '../engineering/priority/survey-value.js';
+import { mostWorth, seenFromEdge, shareOf, worthOf } from '../engineering/priority/survey-value.js';
 import type { HazardGrids } from '../engineering/spectrum/grid.js';
 import { UserError } from '../errors.js';
 import { indexRanges } from '../store/chunks.js';
@@ -80,7 +81,11 @@ export interface SurveyBasis {
   readonly listSize: number;
   readonly expectedWrong: number;
   readonly assessed: Assessed;
+  /** How they rank: their mixtures as seen from the edge of the list. */
+  readonly ranked: SurveyRanked;
 }
+
+export type SurveyRanked = Pick<RankBasis, 'order' | 'mixtures' | 'threshold' | 'draws'>;
 
 /** Plans the survey of run `runId`. @throws UserError for an unknown run, or a list that holds every building. */
 export async function planSurvey(
@@ -90,10 +95,10 @@ export async function planSurvey(
   report: Report = () => undefined,
 ): Promise<SurveyPlan> {
   const run = await readRun(db, runId);
-  const { list_size: listSize, ranked, buildings: count, expected_wrong_places: expectedWrong } = run.summary;
-  if (ranked <= listSize)
+  const { list_size: listSize, ranked: all, buildings: count, expected_wrong_places: expectedWrong } = run.summary;
+  if (all <= listSize)
     throw new UserError(
-      `the list of run ${String(runId)} holds all ${String(ranked)} ranked buildings: nothing a survey finds out changes it; set ranking.list_size lower`,
+      `the list of run ${String(runId)} holds all ${String(all)} ranked buildings: nothing a survey finds out changes it; set ranking.list_size lower`,
     );
   const { inventory_id: inventoryId, settings } = run;
   const pools = await readPools(db, inventoryId);
@@ -101,28 +106,28 @@ export async function planSurvey(
   report('assessing', 0);
   const assessed = await withAssessor(count, async (assessor) => {
     assessor.begin(settings, pools, grids);
-    return assessAll(db, inventoryId, null, count, assessor, grids.size > 0, (done) => {
+    return assessAll(db, inventoryId, null, count, assessor, grids.size > 0, settings, (done) => {
       report('assessing', done / count);
     });
   });
-  const basis = { runId, inventoryId, settings, grids, pools, count, listSize, expectedWrong, assessed };
+  const ranked = rankBasis(assessed, listSize, run.seed);
+  const basis = { runId, inventoryId, settings, grids, pools, count, listSize, expectedWrong, assessed, ranked };
   return planOn(db, basis, wish, report);
 }
 
 /** Plans a survey for buildings assessed already. */
 export async function planOn(
   db: Database,
-  { runId, inventoryId, settings, grids, pools, count, listSize, expectedWrong, assessed }: SurveyBasis,
+  { runId, inventoryId, settings, grids, pools, count, listSize, expectedWrong, assessed, ranked }: SurveyBasis,
   { visits, limits, cost }: SurveyWish,
   report: Report = () => undefined,
 ): Promise<SurveyPlan> {
   report('weighing', 0);
-  const basis = rankBasis(assessed, listSize);
-  const edge: Edge = {
-    threshold: basis.threshold,
-    unit: assessed.median[basis.order[Math.floor((basis.order.length - 1) / 2)]!]!,
-  };
-  const { chosen, worthVisiting } = mostPromising(assessed, edge);
+  const { order, threshold } = ranked;
+  const common = commonTo(assessed, ranked);
+  const edge: Edge = { threshold, unit: assessed.median[order[Math.floor((order.length - 1) / 2)]!]! };
+  const { chosen, worthVisiting } = mostPromising(assessed, ranked, edge);
+  const placeOf = new Map(Array.from(assessed.index, (index, at) => [index, at] as const));
   const context = compileContext(settings, grids);
   const candidates: Candidate[] = [];
   const shares = new Map<number, ReadonlyMap<Unknown, number>>();
@@ -132,8 +137,9 @@ export async function planOn(
     const { columns } = await readBuildings(db, inventoryId, range, { places: grids.size > 0 });
     const read = buildingReader(columns, pools);
     for (const index of wanted) {
-      const unknowns = unknownsOf(read(index - range.from), context);
-      if (unknowns === null || unknowns.learnable.length === 0) continue;
+      const found = unknownsOf(read(index - range.from), context);
+      if (found === null || found.learnable.length === 0) continue;
+      const unknowns = common === undefined ? found : seenFromEdge(found, common, placeOf.get(index)!);
       candidates.push({ index, worth: worthOf(unknowns, edge) });
       shares.set(index, new Map(unknowns.learnable.map((one) => [one.unknown, shareOf(unknowns, one)])));
     }
@@ -142,7 +148,7 @@ export async function planOn(
   report('planning');
   // the best ranked first: equal values go in the order of the list
   const rankOf = new Int32Array(count);
-  basis.order.forEach((at, place) => (rankOf[assessed.index[at]!] = place + 1));
+  order.forEach((at, place) => (rankOf[assessed.index[at]!] = place + 1));
   candidates.sort((a, b) => rankOf[a.index]! - rankOf[b.index]!);
   const planned = planCampaign(candidates, visits, limits, cost);
   const all = candidates.map(({ worth }) => worth.value.at(-1)!).sort((a, b) => b - a);
@@ -180,7 +186,8 @@ export async function planOn(
 
 /** Indices of the buildings whose S is worth knowing at all, the most promising where there are too many to weigh. */
 function mostPromising(
-  { index, mixtures, median }: Assessed,
+  { index, median }: Assessed,
+  { mixtures }: SurveyRanked,
   edge: Edge,
 ): { readonly chosen: readonly number[]; readonly worthVisiting: number } {
   const most = Float64Array.from(mixtures, (mixture, i) => mostWorth(mixture, median[i]!, edge));

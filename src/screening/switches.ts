@@ -233,7 +233,7 @@ const REASONS: readonly (readonly [RegExp, string])[] = [
     'no publication gives the correction as a rule; the other standards and the ambient formulas stand in for it',
   ],
   [/^period-one-error$/, 'part of how the spread is put together'],
-  [/^shared-spread$/, 'part of how the spread is put together'],
+  [/^shared-spread$/, 'it moves chances and bands, not the order'],
   [/^cracking$/, 'a constant of the stiffness models; their bias is switched as a whole'],
   [/^foundation$/, 'a constant of the stiffness models; their bias is switched as a whole'],
   [/^amplitude$/, 'a constant of the records of measured periods'],

@@ -1,7 +1,6 @@
-import { EDITION_YEARS } from '../engineering/assess/code-history.js';
+import { EDITION_LABELS } from '../engineering/assess/code-history.js';
 import { WEAK_TYPES } from '../engineering/assess/weak.js';
 import { ORIGINS, SYSTEMS } from '../engineering/building.js';
-import { OWN_IDS } from '../engineering/capacity/own-table.js';
 import { COLUMNS } from '../engineering/columns.js';
 import type { InventoryColumn } from '../engineering/columns.js';
 import { RESULT_COLUMNS } from '../engineering/results.js';
@@ -55,7 +54,7 @@ export const RESULT_WORDS: Readonly<Record<string, readonly string[]>> = {
   period_evidence: ['measured', 'formula', 'stiffness', 'formula and stiffness'],
   period_basis: ['best-fit', 'design', 'ambient', 'measured', 'mechanics'],
   case_system: SYSTEMS,
-  case_edition: ['no seismic design', ...Object.keys(EDITION_YEARS), ...OWN_IDS],
+  case_edition: EDITION_LABELS,
   weak_type: WEAK_TYPES.map(({ name }) => name),
 };
 

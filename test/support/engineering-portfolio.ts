@@ -96,8 +96,14 @@ interface DrawnBuilding extends Mutable<Omit<Building, 'height_m' | 'measured_pe
 export interface Drawer {
   /** The building whose inputs are drawn: one object, changed from draw to draw. */
   readonly drawn: Building;
-  /** Draws the inputs anew; yields the factor on the capacity. */
-  readonly draw: () => number;
+  /** Draws the inputs anew; yields the factor on the capacity. `common` are this draw's errors that buildings share. */
+  readonly draw: (common: CommonDraw) => number;
+}
+
+/** Standard normal errors of one draw: of the table of each era, in the order of `context.eras`, and of the site class of the building's zone. */
+export interface CommonDraw {
+  readonly eras: readonly number[];
+  readonly site: number;
 }
 
 /**
@@ -137,7 +143,7 @@ export function drawerOf(original: Building, context: AssessContext, { uniform, 
   const assessed = original.capacity_sa_g > 0;
   // in whole years: those of construction and of the editions are whole, so nothing is lost
   const change = (): number => Math.floor(spreads.editionChange_years * (2 * uniform() - 1));
-  const draw = (): number => {
+  const draw = (common: CommonDraw): number => {
     const built = original.years.length === 0 ? NaN : original.years[Math.floor(uniform() * original.years.length)]!;
     let system = original.system;
     if (system === null) {
@@ -177,10 +183,14 @@ export function drawerOf(original: Building, context: AssessContext, { uniform, 
     drawn.occupants_peak = people.people_exposed * Math.exp(people.sigma * normal());
     if (original.design_base_shear_coefficient > 0 && original.design_level === null)
       drawn.design_level = uniform() < 0.5 ? 'working' : 'strength';
-    if (assessed) return Math.exp(spreads.assessedCapacity * normal());
+    // a demand too small is a capacity too large
+    const site = -spreads.siteClass * common.site;
+    if (assessed) return Math.exp(spreads.assessedCapacity * normal() + site);
     // a coefficient from the drawings does not rest on the era table
-    const table = original.design_base_shear_coefficient > 0 ? 0 : spreads.eraTable;
-    return Math.exp(spreads.overstrength * normal() + spreads.era * normal() + table * normal());
+    const year = retrofitted ? drawn.year_retrofitted : years[0];
+    const era = context.eras.findIndex(({ from, to }) => year >= from && year < to);
+    const table = original.design_base_shear_coefficient > 0 ? 0 : spreads.eraTable * common.eras[era]!;
+    return Math.exp(spreads.overstrength * normal() + spreads.era * normal() + table + site);
   };
   return { drawn, draw };
 }

@@ -28,6 +28,8 @@ export interface Case {
   readonly system_transverse: System;
   /** null: no seismic design. */
   readonly edition: EditionId | null;
+  /** Its number among all editions: what the parts of the distribution are labelled with. */
+  readonly label: number;
   /** Its year; 0 without one. */
   readonly editionYear: number;
   /** 1, or the share of its year's code that a retrofit reached. */

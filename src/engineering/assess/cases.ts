@@ -4,7 +4,7 @@ import { designOf } from './capacity.js';
 import { entryOf, newMap, yearsNumber } from './case-memory.js';
 import type { Case, Cases, Design, EraChances } from './case-memory.js';
 import { matchPrior, storeysClass } from '../prior/system-prior.js';
-import { editionOf, eraChances } from './code-history.js';
+import { editionLabel, editionOf, eraChances } from './code-history.js';
 import type { EditionId } from './code-history.js';
 import type { AssessContext } from './context.js';
 
@@ -102,6 +102,7 @@ function listCases(building: Building, context: AssessContext): Cases | string {
         system,
         system_transverse,
         edition,
+        label: editionLabel(edition),
         editionYear: edition === null ? 0 : editionOf(edition, settings.codeHistory!).year,
         retrofit_level: level,
         strengthened,

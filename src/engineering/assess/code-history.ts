@@ -2,7 +2,7 @@
 import type { System } from '../building.js';
 import type { CodeEdition } from '../capacity/edition.js';
 import { CODE_FAMILIES, EDITIONS, FIRST_FAMILY, OWN_FAMILY, OWN_FAMILY_ID } from '../capacity/families.js';
-import { ownEditions } from '../capacity/own-table.js';
+import { OWN_IDS, ownEditions } from '../capacity/own-table.js';
 import type { CarriedId, CodeFamily, EditionId } from '../capacity/families.js';
 import { SYSTEM_FACTORS } from '../capacity/systems.js';
 import { ASSUMED } from './assumed.js';
@@ -15,6 +15,15 @@ export type { EditionId };
 export const EDITION_YEARS = Object.fromEntries(
   Object.entries(EDITIONS).map(([edition, { year }]) => [edition, year]),
 ) as Readonly<Record<CarriedId, number>>;
+
+/** All editions by label: no seismic design first. */
+export const EDITION_LABELS: readonly string[] = ['no seismic design', ...Object.keys(EDITION_YEARS), ...OWN_IDS];
+
+const LABELS: ReadonlyMap<string, number> = new Map(EDITION_LABELS.map((edition, label) => [edition, label]));
+
+export function editionLabel(edition: EditionId | null): number {
+  return edition === null ? 0 : LABELS.get(edition)!;
+}
 
 /** The family of codes of a history. */
 export function familyOf(history: CodeHistorySettings): CodeFamily {

@@ -3,7 +3,7 @@ import { exp, ln } from '../numeric/elementary.js';
 import type { Building, DirectionName, PerDirection } from '../building.js';
 import { HEIGHT_NODES, ONE_NODE, PERIOD_NODES } from '../numeric/nodes.js';
 import type { Nodes } from '../numeric/nodes.js';
-import { mixtureQuantile } from '../priority/mixture.js';
+import { NO_LABEL, mixtureQuantile } from '../priority/mixture.js';
 import { capacityAtHeight, keptCapacity } from './capacity.js';
 import { entryOf, newMap } from './case-memory.js';
 import type { CapacityAtHeight, Case, Cases } from './case-memory.js';
@@ -86,12 +86,13 @@ export function integrate(
     ductilityB: number,
     lnB: number,
     sdOfCase = sd,
+    label = NO_LABEL,
   ): void => {
     const a = reducedAt(along, ductilityA, spectrum, scratch);
     const nodes = along.sigma > 0 || across.sigma > 0 ? PERIOD_NODES : ONE_NODE;
     const first = nodes === ONE_NODE ? MIDDLE : 0;
     if (across === along && ductilityA === ductilityB)
-      score.addNodes(weight, nodes, a, first, lnA < lnB ? lnA : lnB, slope_k, offset, sdOfCase);
+      score.addNodes(weight, nodes, a, first, lnA < lnB ? lnA : lnB, slope_k, offset, sdOfCase, label);
     else {
       const b = reducedAt(across, ductilityB, spectrum, scratch);
       const { worse } = scratch;
@@ -100,7 +101,7 @@ export function integrate(
         const y = b[j]! - lnB;
         worse[j] = y > x ? y : x;
       }
-      score.addNodes(weight, nodes, worse, first, 0, slope_k, offset, sdOfCase);
+      score.addNodes(weight, nodes, worse, first, 0, slope_k, offset, sdOfCase, label);
     }
   };
   for (const group of cases.groups) {
@@ -134,15 +135,18 @@ export function integrate(
           }
           const a = capacityOf(building, which, 'longitudinal', height_m, level, context);
           const b = alike ? a : capacityOf(building, which, 'transverse', height_m, level, context);
-          const sdOfCase = a.checked === undefined && b.checked === undefined ? sd : sdChecked;
+          const byTable = a.checked === undefined && b.checked === undefined;
+          const sdOfCase = byTable ? sd : sdChecked;
+          // a level known from the drawings, like a strength check, rests on no table
+          const label = byTable && level === null ? which.label : NO_LABEL;
           const { ductility: mu, lnStrength: lnA } = a;
           const { ductility: muB, lnStrength: lnB } = b;
           if (storey < 1) {
-            add(weight * (1 - storey), along, mu, lnA + lnFixed, across, muB, lnB + lnFixed, sdOfCase);
+            add(weight * (1 - storey), along, mu, lnA + lnFixed, across, muB, lnB + lnFixed, sdOfCase, label);
             told?.(which, h, 0);
           }
           if (storey > 0) {
-            add(weight * storey, along, mu, lnA + lnIrregular, across, muB, lnB + lnIrregular, sdOfCase);
+            add(weight * storey, along, mu, lnA + lnIrregular, across, muB, lnB + lnIrregular, sdOfCase, label);
             told?.(which, h, 1);
           }
         }

@@ -63,7 +63,10 @@ export interface Spreads {
   readonly leastMeasured: number;
   readonly unitWeight: number;
   readonly era: number;
+  /** Common to all buildings of an edition. */
   readonly eraTable: number;
+  /** Of ln S_a: the site class of a zone, common to all that read its spectrum. */
+  readonly siteClass: number;
   readonly overstrength: number;
   /** Of a capacity from areas of columns, walls or braces: it stands for era, era table and overstrength together. */
   readonly strengthCheck: number;
@@ -88,6 +91,7 @@ export const SPREADS: Spreads = {
   unitWeight: 0.15,
   era: 0.15,
   eraTable: 0.2,
+  siteClass: 0.2,
   overstrength: 0.3,
   strengthCheck: 0.35,
   assessedCapacity: 0.2,
@@ -178,5 +182,14 @@ export interface AssessSettings {
 /** The settings kept with a run, with what its version did not write yet. */
 export function settingsFromJson(text: string): AssessSettings {
   const stored = JSON.parse(text) as AssessSettings;
-  return { ...stored, assumed: assumedWith(stored.assumed) };
+  return {
+    ...stored,
+    spreads: { ...stored.spreads, siteClass: siteClassOf(stored) },
+    assumed: assumedWith(stored.assumed),
+  };
+}
+
+/** Runs of earlier versions counted no error of the site class. */
+function siteClassOf({ spreads }: { readonly spreads: Partial<Spreads> }): number {
+  return spreads.siteClass ?? 0;
 }

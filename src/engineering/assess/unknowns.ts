@@ -1,6 +1,6 @@
 /** What is not known of a building and could be found out, as it stands in the distribution of its ln S. */
 import type { Building } from '../building.js';
-import { MixtureBuilder, MixturePool } from '../priority/mixture.js';
+import { MixtureBuilder, MixturePool, labelOf } from '../priority/mixture.js';
 import type { Mixture } from '../priority/mixture.js';
 import type { Learnable, Unknowns } from '../priority/survey-value.js';
 import { casesOf } from './cases.js';
@@ -109,13 +109,14 @@ function gathered(
   const weight: number[] = [];
   const mean: number[] = [];
   const sd: number[] = [];
+  const label: number[] = [];
   const cellOf: number[] = [];
   let from = 0;
   cells.forEach(({ to }, cell) => {
     builder.clear();
     let total = 0;
     for (; from < to; from += 1) {
-      builder.add(nodes.weight[from]!, nodes.mean[from]!, nodes.sd[from]!);
+      builder.add(nodes.weight[from]!, nodes.mean[from]!, nodes.sd[from]!, labelOf(nodes, from));
       total += nodes.weight[from]!;
     }
     if (builder.size === 0) return;
@@ -125,6 +126,7 @@ function gathered(
       weight.push(own.weight[i]! * total);
       mean.push(own.mean[i]!);
       sd.push(own.sd[i]!);
+      label.push(labelOf(own, i));
       cellOf.push(cell);
     }
   });
@@ -132,6 +134,7 @@ function gathered(
     weight: Float64Array.from(weight),
     mean: Float64Array.from(mean),
     sd: Float64Array.from(sd),
+    label: Uint8Array.from(label),
     from: 0,
     to: weight.length,
   };

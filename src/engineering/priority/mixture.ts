@@ -5,14 +5,23 @@
 import { exp } from '../numeric/elementary.js';
 import type { Nodes } from '../numeric/nodes.js';
 import { INVERSE_ROOT_TWO_PI, cdfFrom, normalCdf } from '../numeric/normal.js';
+import { foldThinCells, foldThinEnds, sortParts } from './mixture-bins.js';
 
 /** Parts `from` (inclusive) to `to` (exclusive) of arrays that many mixtures share: a million buildings are three arrays a pool block. */
 export interface Mixture {
   readonly weight: Float64Array;
   readonly mean: Float64Array;
   readonly sd: Float64Array;
+  /** The error each part has in common with others, by number, or NO_LABEL; left out: none has any. */
+  readonly label?: Uint8Array | undefined;
   readonly from: number;
   readonly to: number;
+}
+
+export const NO_LABEL = 255;
+
+export function labelOf({ label }: Mixture, part: number): number {
+  return label === undefined ? NO_LABEL : label[part]!;
 }
 
 const BLOCK = 65_536;
@@ -22,6 +31,7 @@ export class MixturePool {
   private weight = new Float64Array(0);
   private mean = new Float64Array(0);
   private sd = new Float64Array(0);
+  private label = new Uint8Array(0);
   private used = 0;
 
   /** Gives the room of all mixtures taken so far again: for a caller that has copied them. */
@@ -30,17 +40,18 @@ export class MixturePool {
   }
 
   /** Room for `parts` parts, to be filled by the caller. */
-  take(parts: number): Mixture {
+  take(parts: number): Mixture & { readonly label: Uint8Array } {
     if (this.used + parts > this.weight.length) {
       const size = Math.max(parts, BLOCK);
       this.weight = new Float64Array(size);
       this.mean = new Float64Array(size);
       this.sd = new Float64Array(size);
+      this.label = new Uint8Array(size);
       this.used = 0;
     }
     const from = this.used;
     this.used += parts;
-    return { weight: this.weight, mean: this.mean, sd: this.sd, from, to: this.used };
+    return { weight: this.weight, mean: this.mean, sd: this.sd, label: this.label, from, to: this.used };
   }
 }
 
@@ -51,27 +62,29 @@ const MOST_BINS = 4_000;
 const BIN_WITHOUT_SD = 0.02;
 const SAME = 1e-12;
 
-/** End bins of less weight are folded into their neighbour. */
-const THIN = 1e-3;
-
-/** Collects (weight, mean, sd) parts and gathers them; reused from building to building. */
+/** Collects (weight, mean, sd, label) parts and gathers those of a label; reused from building to building. */
 export class MixtureBuilder {
   private weight = new Float64Array(256);
   private mean = new Float64Array(256);
   private sd = new Float64Array(256);
+  private label = new Uint8Array(256);
   private count = 0;
   private bins = new Float64Array(64);
+  /** Labels added so far, in order of their first part. */
+  private readonly labels: number[] = [];
 
   clear(): void {
     this.count = 0;
+    this.labels.length = 0;
   }
 
-  add(weight: number, mean: number, sd: number): void {
+  add(weight: number, mean: number, sd: number, label = NO_LABEL): void {
     if (!(weight > 0)) return;
     if (this.count === this.weight.length) this.grow();
     this.weight[this.count] = weight;
     this.mean[this.count] = mean;
     this.sd[this.count] = sd;
+    this.label[this.count] = this.slotOf(label);
     this.count += 1;
   }
 
@@ -88,15 +101,18 @@ export class MixtureBuilder {
     slope: number,
     offset: number,
     sd: number,
+    label: number,
   ): void {
     if (!(weight > 0)) return;
     const n = nodes.z.length;
     while (this.count + n > this.weight.length) this.grow();
-    const { weight: weights, mean, sd: spreads, count } = this;
+    const { weight: weights, mean, sd: spreads, label: slots, count } = this;
+    const slot = this.slotOf(label);
     for (let j = 0; j < n; j += 1) {
       weights[count + j] = weight * nodes.weight[j]!;
       mean[count + j] = slope * (values[first + j]! - less) + offset;
       spreads[count + j] = sd;
+      slots[count + j] = slot;
     }
     this.count = count + n;
   }
@@ -109,12 +125,13 @@ export class MixtureBuilder {
   /** The parts as they were added, in arrays of their own. */
   raw(): Mixture {
     const part = (values: Float64Array): Float64Array => values.slice(0, this.count);
-    return { weight: part(this.weight), mean: part(this.mean), sd: part(this.sd), from: 0, to: this.count };
+    const label = this.label.slice(0, this.count).map((slot) => this.labels[slot]!);
+    return { weight: part(this.weight), mean: part(this.mean), sd: part(this.sd), label, from: 0, to: this.count };
   }
 
   /** The gathered mixture, weights summing to 1, means increasing. @throws Error when nothing was added. */
   gather(pool: MixturePool): Mixture {
-    const { weight, mean, sd, count } = this;
+    const { weight, mean, sd, label, labels, count } = this;
     if (count === 0) throw new Error('an empty mixture');
     let low = Infinity;
     let high = -Infinity;
@@ -130,15 +147,20 @@ export class MixtureBuilder {
     const reach = high - low;
     const width = Math.max(least > 0 ? BIN_OVER_SD * least : BIN_WITHOUT_SD, reach / MOST_BINS);
     const n = Math.floor(reach / width) + 3;
-    if (this.bins.length < 3 * n) this.bins = new Float64Array(3 * n);
-    const bins = this.bins.fill(0, 0, 3 * n);
+    // a bin is a row of `slots` cells, one for each label, of weight, first and second moment
+    const slots = labels.length;
+    const row = 3 * slots;
+    if (this.bins.length < row * n) this.bins = new Float64Array(row * n);
+    const bins = this.bins.fill(0, 0, row * n);
     for (let i = 0; i < count; i += 1) {
       // shared between the two nearest bins, so that a last bit can never move a whole node from one bin to the next
       const d = mean[i]! - low;
+      const slot = 3 * label[i]!;
       if (least === 0 && high - mean[i]! <= SAME) {
-        bins[3 * n - 3]! += weight[i]!;
-        bins[3 * n - 2]! += weight[i]! * d;
-        bins[3 * n - 1]! += weight[i]! * d * d;
+        const last = row * (n - 1) + slot;
+        bins[last]! += weight[i]!;
+        bins[last + 1]! += weight[i]! * d;
+        bins[last + 2]! += weight[i]! * d * d;
         continue;
       }
       const at = d / width;
@@ -146,29 +168,41 @@ export class MixtureBuilder {
       const right = weight[i]! * (at - bin);
       const left = weight[i]! - right;
       const second = d * d + sd[i]! * sd[i]!;
-      bins[3 * bin]! += left;
-      bins[3 * bin + 1]! += left * d;
-      bins[3 * bin + 2]! += left * second;
-      bins[3 * bin + 3]! += right;
-      bins[3 * bin + 4]! += right * d;
-      bins[3 * bin + 5]! += right * second;
+      const here = row * bin + slot;
+      bins[here]! += left;
+      bins[here + 1]! += left * d;
+      bins[here + 2]! += left * second;
+      bins[here + row]! += right;
+      bins[here + row + 1]! += right * d;
+      bins[here + row + 2]! += right * second;
     }
-    if (least > 0) foldThinEnds(bins, n, total);
+    if (least > 0) foldThinEnds(bins, n, slots, total);
+    if (slots > 1) foldThinCells(bins, n, slots, total);
     let filled = 0;
-    for (let b = 0; b < n; b += 1) if (bins[3 * b]! > 0) filled += 1;
+    for (let cell = 0; cell < n * slots; cell += 1) if (bins[3 * cell]! > 0) filled += 1;
     const out = pool.take(filled);
     let o = out.from;
-    for (let b = 0; b < n; b += 1) {
-      const w = bins[3 * b]!;
+    for (let cell = 0; cell < n * slots; cell += 1) {
+      const w = bins[3 * cell]!;
       if (!(w > 0)) continue;
-      const d = bins[3 * b + 1]! / w;
-      const variance = bins[3 * b + 2]! / w - d * d;
+      const d = bins[3 * cell + 1]! / w;
+      const variance = bins[3 * cell + 2]! / w - d * d;
       out.weight[o] = w / total;
       out.mean[o] = low + d;
       out.sd[o] = variance > 1e-18 ? Math.sqrt(variance) : 0;
+      out.label[o] = labels[cell % slots]!;
       o += 1;
     }
+    if (slots > 1) sortParts(out);
     return out;
+  }
+
+  private slotOf(label: number): number {
+    const { labels } = this;
+    // the one before, nearly always
+    if (labels.length > 0 && labels[labels.length - 1] === label) return labels.length - 1;
+    const old = labels.indexOf(label);
+    return old >= 0 ? old : labels.push(label) - 1;
   }
 
   private grow(): void {
@@ -180,31 +214,9 @@ export class MixtureBuilder {
     this.weight = bigger(this.weight);
     this.mean = bigger(this.mean);
     this.sd = bigger(this.sd);
-  }
-}
-
-/**
- * Adds end bins of less weight than THIN to their inner neighbour; mean and variance of the whole stay. Not over an empty bin: a
- * far part folded into the middle would widen it.
- */
-function foldThinEnds(bins: Float64Array, n: number, total: number): void {
-  const thin = THIN * total;
-  let first = 0;
-  let last = n - 1;
-  while (first < last && bins[3 * first]! < thin && bins[3 * first + 3]! > 0) {
-    fold(bins, first, first + 1);
-    first += 1;
-  }
-  while (last > first && bins[3 * last]! < thin && bins[3 * last - 3]! > 0) {
-    fold(bins, last, last - 1);
-    last -= 1;
-  }
-}
-
-function fold(bins: Float64Array, from: number, to: number): void {
-  for (let part = 0; part < 3; part += 1) {
-    bins[3 * to + part]! += bins[3 * from + part]!;
-    bins[3 * from + part] = 0;
+    const label = new Uint8Array(this.label.length * 2);
+    label.set(this.label);
+    this.label = label;
   }
 }
 

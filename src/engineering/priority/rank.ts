@@ -3,13 +3,17 @@
  * Order by median; chance of belonging to the first n; rank band; tie groups; expected wrong places.
  */
 import { exp } from '../numeric/elementary.js';
-import { mixtureCdf, mixtureMoments, mixtureQuantile } from './mixture.js';
+import { mixtureCdf, mixtureQuantile } from './mixture.js';
 import type { Mixture } from './mixture.js';
 import { aboveThreshold, answerOf, countAbove, countFrom, exceedance, sharedChances, threshold } from './exceedance.js';
 import type { AboveThreshold, Exceedance, SetAnswer, SetTask } from './exceedance.js';
-import { beats } from './pairwise.js';
+import { changedMixture, changesOf, drawShared, hasShared } from './shared.js';
+import type { Common, SharedDraws } from './shared.js';
+import { averagedChances, keptOf, wrongVariance } from './shared-chances.js';
+import type { SharedErrors } from './shared-errors.js';
 import { SIMULATED_UNDER, simulate } from './simulate.js';
 import type { Simulated } from './simulate.js';
+import { tieGroups } from './tie-groups.js';
 
 export interface RankInput<Ids extends readonly string[] | Int32Array = readonly string[]> {
   /** Ids; where there are too many to simulate, numbers in their order do. */
@@ -19,6 +23,8 @@ export interface RankInput<Ids extends readonly string[] | Int32Array = readonly
   readonly median: ArrayLike<number>;
   /** Orders buildings of equal median: the larger first. */
   readonly people: ArrayLike<number>;
+  /** Errors that buildings have in common; left out: none. */
+  readonly shared?: SharedErrors | undefined;
 }
 
 export interface Ranking {
@@ -33,12 +39,13 @@ export interface Ranking {
   /** ln S at which the list ends; -Infinity when the list holds every building. */
   readonly threshold: number;
   readonly expectedWrong: number;
+  /** Ends of the range that holds the number of wrong places with a chance of 90 %, whole. */
+  readonly wrongLow: number;
+  readonly wrongHigh: number;
   /** Buildings in the largest block of equal medians. */
   readonly largestEqualBlock: number;
 }
 
-/** The leader of a tie group is told from the first building it beats with this chance [judgement]. */
-const TOLD_APART = 0.8;
 const Z95 = 1.6448536269514722;
 
 /** Medians equal to this many decimals are equal. */
@@ -96,27 +103,39 @@ export function orderOf({ id, median, people }: RankInput<readonly string[] | In
 /** What the chances and bands of every building are read from. */
 export interface RankBasis {
   readonly order: Int32Array;
+  /** Distributions of ln S as seen from the edge of the list: what is common to all has no part in them. */
+  readonly mixtures: readonly Mixture[];
+  /** Draws of the common errors; null where there are none. */
+  readonly draws: SharedDraws | null;
   readonly curve: Exceedance;
   /** ln S at which the list ends; -Infinity when it holds every building. */
   readonly threshold: number;
 }
+
+/** What the bands of single buildings are read from. */
+export type Edge = Pick<RankBasis, 'curve' | 'threshold'>;
 
 /** Expected numbers above and threshold of a list of `listSize` places: yields tasks, takes the answers of all sets of mixtures to each. */
 export function* basisOf(
   mixtures: readonly Mixture[],
   count: number,
   listSize: number,
-): Generator<SetTask, Omit<RankBasis, 'order'>, readonly SetAnswer[]> {
+): Generator<SetTask, Edge, readonly SetAnswer[]> {
   const curve = yield* exceedance(mixtures, count);
   return { curve, threshold: listSize >= count ? -Infinity : yield* threshold(listSize, curve) };
 }
 
-/** The same with the order, of all mixtures as one set. */
-export function rankBasis(input: RankInput<readonly string[] | Int32Array>, listSize: number): RankBasis {
-  const steps = basisOf(input.mixtures, input.id.length, listSize);
+/** The same with the order, of all mixtures as one set; common errors are drawn with `seed`. */
+export function rankBasis(input: RankInput<readonly string[] | Int32Array>, listSize: number, seed: number): RankBasis {
+  const { id, shared } = input;
+  const draws = hasShared(shared) ? drawShared(input.mixtures, shared, listSize, seed) : null;
+  const common = commonTo(input, { draws });
+  const mixtures =
+    common === undefined ? input.mixtures : input.mixtures.map((m, i) => changedMixture(m, changesOf(common, i)));
+  const steps = basisOf(mixtures, id.length, listSize);
   let next = steps.next();
-  while (next.done !== true) next = steps.next([answerOf(input.mixtures, next.value)]);
-  return { order: orderOf(input), ...next.value };
+  while (next.done !== true) next = steps.next([answerOf(mixtures, next.value)]);
+  return { order: orderOf(input), mixtures, draws, ...next.value };
 }
 
 /** Chance and ends of the band of some of the buildings, in closed form; the chances still without those tied at the threshold. */
@@ -126,7 +145,7 @@ export interface Bands extends AboveThreshold {
 }
 
 /** The bands of `mixtures`, all of the buildings or some. */
-export function bandsOf(mixtures: readonly Mixture[], { curve, threshold: x }: Omit<RankBasis, 'order'>): Bands {
+export function bandsOf(mixtures: readonly Mixture[], { curve, threshold: x }: Edge): Bands {
   const rankBest = new Int32Array(mixtures.length);
   const rankWorst = new Int32Array(mixtures.length);
   mixtures.forEach((m, i) => {
@@ -143,25 +162,41 @@ export function rankAll(
   input: RankInput<readonly string[] | Int32Array>,
   listSize: number,
   seed: number,
-  basis: RankBasis = rankBasis(input, listSize),
-  tieGroup: Int32Array = tieGroups(basis.order, input.mixtures),
+  basis: RankBasis = rankBasis(input, listSize, seed),
+  tieGroup: Int32Array = tieGroups(basis.order, basis.mixtures, commonTo(input, basis)),
   bands?: Bands,
 ): Ranking {
   const n = input.id.length;
-  const { order } = basis;
+  const { order, mixtures } = basis;
   const rank = new Int32Array(n);
   order.forEach((building, place) => (rank[building] = place + 1));
-  const { chance, rankBest, rankWorst } =
+  const listed = order.subarray(0, Math.min(listSize, n));
+  const common = commonTo(input, basis);
+  const simulated =
     n < SIMULATED_UNDER
-      ? simulate(Array.from<string | number>(input.id).map(String), input.mixtures, listSize, seed)
-      : closed(bands ?? bandsOf(input.mixtures, basis), listSize);
+      ? simulate(Array.from<string | number>(input.id).map(String), mixtures, listed, listSize, seed, common)
+      : null;
+  const { chance, rankBest, rankWorst } =
+    simulated ?? closed(bands ?? bandsOf(mixtures, basis), mixtures, listSize, common);
   // the rank itself lies in its band, also where equal medians or few buildings would put it a place outside
   for (let i = 0; i < n; i += 1) {
     rankBest[i] = Math.min(rankBest[i]!, rank[i]!);
     rankWorst[i] = Math.max(rankWorst[i]!, rank[i]!);
   }
   let expectedWrong = 0;
-  for (let place = 0; place < Math.min(listSize, n); place += 1) expectedWrong += 1 - chance[order[place]!]!;
+  let doubt = 0;
+  for (const building of listed) {
+    const p = chance[building]!;
+    expectedWrong += 1 - p;
+    doubt += p * (1 - p);
+  }
+  const all = chance.reduce((sum, p) => sum + p * (1 - p), 0);
+  const variance =
+    simulated === null && common !== undefined
+      ? wrongVariance(listed, mixtures, common, all)
+      : doubt * keptOf(doubt, all);
+  const reach = Z95 * Math.sqrt(variance);
+  const within = (wrong: number): number => Math.min(listed.length, Math.max(0, Math.round(wrong)));
   return {
     order,
     rank,
@@ -171,13 +206,34 @@ export function rankAll(
     tieGroup,
     threshold: basis.threshold,
     expectedWrong,
+    wrongLow: simulated?.wrongLow ?? within(expectedWrong - reach),
+    wrongHigh: simulated?.wrongHigh ?? within(expectedWrong + reach),
     largestEqualBlock: largestBlock(order, input.median),
   };
 }
 
-function closed({ rankBest, rankWorst, ...above }: Bands, listSize: number): Simulated {
+/** The common errors with their draws, where there are any. */
+export function commonTo(
+  { shared }: Pick<RankInput, 'shared'>,
+  { draws }: Pick<RankBasis, 'draws'>,
+): Common | undefined {
+  return shared === undefined || draws === null ? undefined : { shared, draws };
+}
+
+function closed(
+  { rankBest, rankWorst, ...above }: Bands,
+  mixtures: readonly Mixture[],
+  listSize: number,
+  common: Common | undefined,
+): Pick<Simulated, 'chance' | 'rankBest' | 'rankWorst'> {
   const n = rankBest.length;
-  return { chance: listSize >= n ? new Float64Array(n).fill(1) : sharedChances(above, listSize), rankBest, rankWorst };
+  if (listSize >= n) return { chance: new Float64Array(n).fill(1), rankBest, rankWorst };
+  const chance = sharedChances(above, listSize);
+  return {
+    chance: common === undefined ? chance : averagedChances(chance, mixtures, common, listSize),
+    rankBest,
+    rankWorst,
+  };
 }
 
 /** Where parts have no spread the best rank counts only those above, the worst those at the same place too. */
@@ -187,41 +243,6 @@ const AT = 1e-9;
 function bandEnd(count: number, own: Mixture, x: number, n: number, at: number): number {
   const others = count - (1 - mixtureCdf(own, x + at));
   return Math.min(n, Math.max(1, Math.round(1 + others)));
-}
-
-/** From its leader down to the first building that the leader beats with a chance of at least 0.80; contiguous. */
-export function tieGroups(order: Int32Array, mixtures: readonly Mixture[]): Int32Array {
-  const group = new Int32Array(order.length);
-  if (order.length === 0) return group;
-  let leader = mixtures[order[0]!]!;
-  let moments = mixtureMoments(leader);
-  let label = 1;
-  for (let place = 0; place < order.length; place += 1) {
-    const other = mixtures[order[place]!]!;
-    if (other !== leader) {
-      const own = mixtureMoments(other);
-      if (toldApart(leader, moments, other, own)) {
-        leader = other;
-        moments = own;
-        label += 1;
-      }
-    }
-    group[order[place]!] = label;
-  }
-  return group;
-}
-
-type Moments = ReturnType<typeof mixtureMoments>;
-
-/** Settled from means and spreads where that is clear, by the whole mixtures otherwise. */
-function toldApart(a: Mixture, p: Moments, b: Mixture, q: Moments): boolean {
-  const spread = Math.sqrt(p.sd * p.sd + q.sd * q.sd);
-  if (spread > 0) {
-    const z = (p.mean - q.mean) / spread;
-    if (z < 0.3) return false;
-    if (z > 2) return true;
-  }
-  return beats(a, b) >= TOLD_APART;
 }
 
 function largestBlock(order: Int32Array, median: ArrayLike<number>): number {

@@ -11,7 +11,9 @@ import { exp, ln } from '../numeric/elementary.js';
 import { LEARNT_NODES, ONE_NODE } from '../numeric/nodes.js';
 import { normalCdf } from '../numeric/normal.js';
 import type { Mixture } from './mixture.js';
-import { mixtureQuantile } from './mixture.js';
+import { NO_LABEL, labelOf, mixtureQuantile } from './mixture.js';
+import { changedMixture, changesOf } from './shared.js';
+import type { Common } from './shared.js';
 
 /** What a survey can find out. */
 export const UNKNOWNS = ['system', 'year', 'height', 'irregularity', 'use', 'occupants', 'drawings'] as const;
@@ -45,6 +47,27 @@ export interface Worth {
   readonly value: Float64Array;
   /** Chance of standing on the wrong side of the edge once the set is learnt; of the empty set: today. */
   readonly wrongOf: (set: number) => number;
+}
+
+/**
+ * `unknowns` of building i as seen from the edge of the list. What drawings tell of the table of an edition keeps no more than the
+ * share of the common errors that moves the building against the edge.
+ */
+export function seenFromEdge({ parts, learnable }: Unknowns, common: Common, i: number): Unknowns {
+  const change = changesOf(common, i);
+  const { eraLoad, siteLoad } = common.shared.zones[common.shared.zone[i]!]!;
+  const era = eraLoad * eraLoad;
+  let heaviest = parts.from;
+  for (let k = parts.from; k < parts.to; k += 1) if (parts.weight[k]! > parts.weight[heaviest]!) heaviest = k;
+  const label = labelOf(parts, heaviest);
+  const all = era + siteLoad * siteLoad;
+  const kept = label === NO_LABEL || !(all > 0) ? 1 : Math.min(1, Math.max(0, change[label]! + era) / all);
+  return {
+    parts: changedMixture(parts, change),
+    learnable: learnable.map((one) =>
+      one.unknown === 'drawings' ? { ...one, tau: Math.sqrt(Math.max(0, one.tau * one.tau - (1 - kept) * era)) } : one,
+    ),
+  };
 }
 
 /** E[max(X - T, 0)] of a lognormal X of expectation m and standard deviation tau of its logarithm; tau 0: X is m. */

@@ -1,6 +1,6 @@
 /** Sentences computed from the data, shared by page and summary. */
 import { formatCount, formatNumber, formatShare } from '../../engineering/format.js';
-import type { AttributeCount, PageData } from '../../engineering/page-contract.js';
+import type { AttributeCount, PageData, PageSummary } from '../../engineering/page-contract.js';
 import { SURE } from '../../screening/summarise.js';
 import { outlookSentence } from '../survey/words.js';
 import { counted, listLength } from './reading.js';
@@ -31,9 +31,16 @@ export function answerSentence(data: PageData): string {
   const wrongly =
     summary.expected_wrong_places < 0.5
       ? 'fewer than one is expected to be wrong'
-      : `about ${formatCount(wrong)} ${wrong === 1 ? 'is' : 'are'} expected to be wrong`;
+      : `about ${formatCount(wrong)}${rangeWords(summary)} ${wrong === 1 ? 'is' : 'are'} expected to be wrong`;
   const sure = summary.sure_places === 0 ? 'none is sure' : `${formatCount(summary.sure_places)} ${summary.sure_places === 1 ? 'is' : 'are'} sure`;
   return `${places === 1 ? 'Of the one building' : `Of the ${formatCount(places)} buildings`} listed, out of ${formatCount(summary.ranked)} ranked, ${sure} and ${wrongly}${unknownClause(summary.attributes)}.`;
+}
+
+/** Runs of earlier versions kept no range. */
+function rangeWords({ wrong_places_range: range }: PageSummary): string {
+  return range === undefined || range.low === range.high
+    ? ''
+    : ` (${formatCount(range.low)} to ${formatCount(range.high)})`;
 }
 
 function unknownClause(attributes: readonly AttributeCount[]): string {

@@ -1,0 +1,126 @@
+/**
+ * Expected numbers of buildings above x, class by class, each class movable as a whole: the edge of a list is found again and again
+ * at the cost of reading tables.
+ */
+import { normalCdf } from '../numeric/normal.js';
+import { NO_LABEL, labelOf } from './mixture.js';
+import type { Mixture } from './mixture.js';
+import type { SharedErrors } from './shared-errors.js';
+
+const POINTS = 512;
+/** Spreads of a class are told apart into so many, evenly in variance. */
+const SPREADS = 12;
+
+/** Parts of one label in one zone: what a draw of the common errors moves together. */
+export interface PartClass {
+  readonly zone: number;
+  readonly label: number;
+}
+
+export class ClassTable {
+  readonly classes: readonly PartClass[];
+  readonly #low: number;
+  readonly #step: number;
+  /** By class: the expected number of its buildings above each point. */
+  readonly #above: readonly Float64Array[];
+
+  /** The spreads of the classes are those without common errors. */
+  constructor(mixtures: readonly Mixture[], { zones, zone }: SharedErrors) {
+    let [low, high, most] = [Infinity, -Infinity, 0];
+    for (const { mean, sd, from, to } of mixtures) {
+      for (let k = from; k < to; k += 1) {
+        if (mean[k]! < low) low = mean[k]!;
+        if (mean[k]! > high) high = mean[k]!;
+        if (sd[k]! > most) most = sd[k]!;
+      }
+    }
+    low -= 5 * most + 1e-6;
+    high += 5 * most + 1e-6;
+    this.#low = low;
+    this.#step = (high - low) / (POINTS - 1);
+    const top = most * most;
+    const ofZones = zones.map(() => new Map<number, Float64Array>());
+    mixtures.forEach((mixture, i) => {
+      const { weight, mean, sd, from, to } = mixture;
+      const byLabel = ofZones[zone[i]!]!;
+      const { eraLoad } = zones[zone[i]!]!;
+      for (let k = from; k < to; k += 1) {
+        const label = labelOf(mixture, k);
+        let count = byLabel.get(label);
+        if (count === undefined) byLabel.set(label, (count = new Float64Array(SPREADS * (POINTS + 1))));
+        const less = label === NO_LABEL ? 0 : eraLoad * eraLoad;
+        const place = (mean[k]! - low) / this.#step;
+        const g = Math.floor(place);
+        const f = place - g;
+        const v = top > 0 ? (Math.max(0, sd[k]! * sd[k]! - less) / top) * (SPREADS - 1) : 0;
+        const s = Math.min(SPREADS - 2, Math.floor(v));
+        const r = v - s;
+        const here = s * (POINTS + 1) + g;
+        const w = weight[k]!;
+        count[here]! += w * (1 - r) * (1 - f);
+        count[here + 1]! += w * (1 - r) * f;
+        count[here + POINTS + 1]! += w * r * (1 - f);
+        count[here + POINTS + 2]! += w * r * f;
+      }
+    });
+    const all = ofZones.flatMap((byLabel, of) => [...byLabel].map(([label, count]) => ({ zone: of, label, count })));
+    this.classes = all.map(({ zone: of, label }) => ({ zone: of, label }));
+    const kernels = Array.from({ length: SPREADS }, (_, s) =>
+      kernelOf(Math.sqrt((top * s) / (SPREADS - 1)) / this.#step),
+    );
+    this.#above = all.map(({ count }) => {
+      const above = new Float64Array(POINTS);
+      kernels.forEach((kernel, s) => {
+        spread(count.subarray(s * (POINTS + 1), s * (POINTS + 1) + POINTS), kernel, above);
+      });
+      return above;
+    });
+  }
+
+  /** x above which `places` buildings are expected when the buildings of class c are moved up by `shift[c]`. */
+  edge(places: number, shift: Float64Array): number {
+    let widest = 0;
+    for (const one of shift) widest = Math.max(widest, Math.abs(one));
+    let low = this.#low - widest;
+    let high = this.#low + this.#step * (POINTS - 1) + widest;
+    // halving a span of some tens to 1e-9
+    for (let pass = 0; pass < 40 && high - low > 1e-9; pass += 1) {
+      const x = 0.5 * (low + high);
+      let sum = 0;
+      for (let c = 0; c < this.#above.length; c += 1) sum += this.#read(c, x - shift[c]!);
+      if (sum > places) low = x;
+      else high = x;
+    }
+    return 0.5 * (low + high);
+  }
+
+  #read(c: number, x: number): number {
+    const above = this.#above[c]!;
+    const place = (x - this.#low) / this.#step;
+    if (place <= 0) return above[0]!;
+    const g = Math.floor(place);
+    if (g >= POINTS - 1) return 0;
+    return above[g]! + (place - g) * (above[g + 1]! - above[g]!);
+  }
+}
+
+/** Weight at a distance of some grid points that counts as above, for a spread of `sd` points. */
+function kernelOf(sd: number): Float64Array {
+  const reach = Math.ceil(6 * sd);
+  return Float64Array.from({ length: 2 * reach + 1 }, (_, i) => {
+    const k = i - reach;
+    return sd > 0 ? normalCdf(k / sd) : k > 0 ? 1 : k < 0 ? 0 : 0.5;
+  });
+}
+
+/** Adds to `above` how many of `counts`, spread by `kernel`, stand above each point. */
+function spread(counts: Float64Array, kernel: Float64Array, above: Float64Array): void {
+  const reach = (kernel.length - 1) / 2;
+  for (let j = 0; j < counts.length; j += 1) {
+    const count = counts[j]!;
+    if (count === 0) continue;
+    for (let i = 0; i <= j - reach - 1; i += 1) above[i]! += count;
+    const to = Math.min(counts.length - 1, j + reach);
+    for (let i = Math.max(0, j - reach); i <= to; i += 1) above[i]! += count * kernel[j - i + reach]!;
+  }
+}
