@@ -79,6 +79,71 @@ export interface SurveyOutlook {
   readonly steps: readonly SurveyVisit[];
 }
 
+/** One assumption switched, and what is left of the list. */
+export interface SwitchTold {
+  readonly assumption: string;
+  readonly statement: string;
+  readonly from: string;
+  readonly to: string;
+  /** How the value was come by, in a word. */
+  readonly mark: string;
+  /** Buildings on the list before and after the switch, and places of the list. */
+  readonly overlap: number;
+  readonly places: number;
+  readonly tau_b: number | null;
+}
+
+/** What the list hangs on. */
+export interface SensitivityOutlook {
+  readonly rankings: number;
+  /** Switches that there are in all. */
+  readonly of_rankings: number;
+  readonly places: number;
+  /** Only every manyth building was ranked again; null: all were. */
+  readonly sample: { readonly every: number; readonly buildings: number } | null;
+  /** Ids that stay on the list whatever is switched, by rank. */
+  readonly always: readonly string[];
+  /** The largest effects first. */
+  readonly switches: readonly SwitchTold[];
+}
+
+/** An assessment that the money of a study buys. */
+export interface AssessmentBought {
+  readonly id: string;
+  readonly name: string | null;
+  readonly group: string | null;
+  readonly rank: number | null;
+  readonly chance: number | null;
+  readonly cost: number;
+  /** The study says it must be among them. */
+  readonly must: boolean;
+}
+
+/** What the money of a study buys. */
+export interface BudgetOutlook {
+  /** What assessing every building on the list costs. */
+  readonly list_cost: number;
+  readonly currency: string | null;
+  readonly cost_source: 'study' | 'judgement';
+  /** Why the choice could not be made, or null. */
+  readonly problem: string | null;
+  /** Null where the study names no money. */
+  readonly plan: {
+    readonly money: number;
+    readonly spent: number;
+    readonly left: number;
+    /** Share of the best possible worth that is missed at most. */
+    readonly gap: number;
+    readonly count: number;
+    readonly of_list: number;
+    readonly on_list: number;
+    readonly mobilisation: number;
+    readonly excluded: number;
+    /** The first by rank. */
+    readonly chosen: readonly AssessmentBought[];
+  } | null;
+}
+
 /** The ordinates of a hazard grid over the ranked buildings that read it. */
 export interface GridSpread {
   readonly spectrum: string;
@@ -120,6 +185,9 @@ export interface PageSummary {
   readonly cautions: readonly string[];
   /** Left out where none was planned with the run. */
   readonly survey?: SurveyOutlook | null;
+  /** What the study's money buys, and what the list hangs on; not in runs of earlier versions, null for large inventories. */
+  readonly budget?: BudgetOutlook | null | undefined;
+  readonly sensitivity?: SensitivityOutlook | null | undefined;
   /** Slope of the hazard curve per spectrum of the ranking level. */
   readonly slopes: readonly { readonly spectrum: string; readonly k: number; readonly how: string }[];
   /** Grids that the first two levels read; none in runs made before there were any. */

@@ -1,4 +1,5 @@
 /** The assessments that a sum of money buys out of a kept run of a study, as plain data and as a table for a spreadsheet. */
+import { UserError } from '../errors.js';
 import { chosenRun, withStudyDatabase } from '../runs/open.js';
 import type { RunChoice } from '../runs/open.js';
 import { budgetOfRun } from '../screening/budget-plan.js';
@@ -14,16 +15,19 @@ export interface BudgetStudyOptions extends Pick<RunChoice, 'run'> {
 /**
  * Chooses the assessments that `money` buys out of a kept run of the study at `path`, the newest when none is named: the largest sum of
  * chance × priority within the money, by the costs, musts, must-nots and batches of the study's section `budget` as it stands now.
- * @param money a sum in the study's currency, over 0, at most 1e12.
+ * @param money a sum in the study's currency, over 0, at most 1e12; that of the study's budget when left out.
  * @returns plain data; `bound` is what no choice within the money exceeds, `gap` how far below it this one is at most.
  * @throws UserError for money that is no sum, a building on the study's lists that the run does not have, and musts that cost more than the money.
  * @example
  * const { chosen, spent, gap } = await budgetStudy('study.yaml', 180_000);
  */
-export async function budgetStudy(path: string, money: number, options: BudgetStudyOptions = {}): Promise<BudgetPlan> {
+export async function budgetStudy(path: string, money?: number, options: BudgetStudyOptions = {}): Promise<BudgetPlan> {
   const plan = await withStudyDatabase(path, async (db, loaded) => {
     const { run } = await chosenRun(db, options);
-    return budgetOfRun(db, loaded, run, money);
+    const sum = money ?? loaded.study.budget?.money;
+    if (sum === undefined)
+      throw new UserError('no sum of money: give one with --money, or as money in the budget of the study');
+    return budgetOfRun(db, loaded, run, sum);
   });
   if (options.csv !== undefined) await writeNamed(options.csv, budgetCsv(plan), '--csv');
   return plan;

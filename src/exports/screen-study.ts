@@ -42,7 +42,7 @@ export async function screenStudy(path: string, options: ScreenStudyOptions = {}
   const db = await openStudyDatabase(loaded, false, [folder]);
   try {
     options.onOpen?.(db);
-    const outcome = await screen(db, loaded, { ...options, made: options.made ?? new Date() });
+    const outcome = await screen(db, loaded, { ...options, outlook: true, made: options.made ?? new Date() });
     options.onProgress?.({ step: 'writing reports', share: NaN });
     const { files, data } = await writeReports(db, outcome.runId, folder, options.units ?? 'si');
     return { ...outcome, data, files, rejected: rejectedShare(loaded, outcome.taken) };

@@ -9,6 +9,7 @@ import { provenanceChart } from './dashboard/charts/provenance.js';
 import { rankedChart } from './dashboard/charts/ranked.js';
 import { spectrumChart } from './dashboard/charts/spectrum.js';
 import { packPage } from './dashboard/pack.js';
+import { BudgetSection, SensitivitySection } from './dashboard/sections/decide.js';
 import { MapSection, OriginsSection, PeriodsSection } from './dashboard/sections/figures.js';
 import { ListSection } from './dashboard/sections/list.js';
 import { AllSection, AssumptionsSection, CautionsSection, Foot, InventorySection } from './dashboard/sections/records.js';
@@ -48,6 +49,8 @@ export function renderDashboard(data: PageData, pageScript: string): string {
         h(MapSection, { chart: map }),
         h(OriginsSection, { chart: provenance }),
         h(SurveySection, { data }),
+        h(BudgetSection, { data }),
+        h(SensitivitySection, { data }),
         h(AllSection, { data }),
         h(InventorySection, { data }),
         h(AssumptionsSection, { data }),

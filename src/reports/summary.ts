@@ -5,6 +5,8 @@ import { answerNotes, answerSentence, attributeTotal, decisiveAttributes, LEVEL_
 import { capacityWords, demandPlaces, governingPeriod, listLength, numberAt } from './dashboard/reading.js';
 import { middleSentence, reasonTeller } from './dashboard/reasons.js';
 import { visitsTable } from './dashboard/sections/survey.js';
+import type { DataTable } from './dashboard/charts/chart.js';
+import { budgetSentences, budgetTable, sensitivitySentences, switchesTable } from './decide/words.js';
 import { madeAt } from './made-at.js';
 import { markdownTable, markdownText } from './markdown.js';
 import { outlookSentence, worthwhileSentence } from './survey/words.js';
@@ -24,6 +26,7 @@ export function renderSummary(data: PageData): string {
     '## The list',
     listPart(data),
     ...surveyPart(data),
+    ...decidePart(data),
     '## Where the rows went',
     markdownTable(['Rows', 'Number'], [...summary.account.map(({ title, rows }) => [markdownText(title), formatCount(rows)]), ['All rows read', formatCount(summary.rows_in)]], [1]),
     '## Where the numbers came from',
@@ -93,6 +96,19 @@ function surveyPart({ summary: { survey, ranked } }: PageData): readonly string[
     '## What to find out next',
     [outlookSentence(survey), worthwhileSentence(survey, ranked)].filter((text) => text !== '').join(' '),
     ...(rows.length === 0 ? [] : [markdownTable(head, rows.map((row) => row.map(markdownText)), [0, 2, 6, 7, 8])]),
+  ];
+}
+
+/** What the money buys, and what the list hangs on; nothing in runs of earlier versions. */
+function decidePart({ summary: { budget, sensitivity } }: PageData): readonly string[] {
+  const part = (title: string, sentences: readonly string[], table: DataTable | null, right: readonly number[]): readonly string[] => [
+    title,
+    sentences.map(markdownText).join(' '),
+    ...(table === null ? [] : [markdownTable(table.head.map(markdownText), table.rows.map((row) => row.map(markdownText)), right)]),
+  ];
+  return [
+    ...(budget == null ? [] : part('## What the money buys', budgetSentences(budget), budgetTable(budget), [2, 3, 4])),
+    ...(sensitivity == null ? [] : part('## What the list hangs on', sensitivitySentences(sensitivity), switchesTable(sensitivity), [2, 3])),
   ];
 }
 

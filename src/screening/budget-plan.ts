@@ -89,11 +89,7 @@ export interface BudgetPlan {
 export async function budgetOfRun(db: Database, loaded: LoadedStudy, run: number, money: number): Promise<BudgetPlan> {
   if (!(money > 0 && money <= MOST_MONEY))
     throw new UserError(`expected a sum over 0, at most ${String(MOST_MONEY)}; got ${String(money)}`, { key: 'money' });
-  const [about] = await db.rows<{ inventory_id: string; buildings: number; ranked: number; list_size: number }>(
-    'SELECT inventory_id, buildings, ranked, list_size FROM run WHERE run_id = ?',
-    [run],
-  );
-  if (about === undefined) throw new UserError(`there is no run ${String(run)}; swaymark runs lists them`);
+  const about = await aboutRun(db, run);
   const inventory = Number(
     await db.value('SELECT inventory_number FROM inventory WHERE inventory_id = ?', [about.inventory_id]),
   );
@@ -132,6 +128,41 @@ export async function budgetOfRun(db: Database, loaded: LoadedStudy, run: number
     unlikely: chosen.filter((at) => !must(at) && columns.chance[at]! < UNLIKELY).length,
     cheapest: cheapestOf(items, mobilisation),
   };
+}
+
+/** What assessing every building on the list of run `run` costs by the costs of the study; mobilisations are left out. */
+export async function costOfList(
+  db: Database,
+  { study }: LoadedStudy,
+  run: number,
+): Promise<{
+  readonly list_cost: number;
+  readonly currency: string | null;
+  readonly cost_source: 'study' | 'judgement';
+}> {
+  const { inventory_id, buildings, list_size } = await aboutRun(db, run);
+  const inventory = Number(
+    await db.value('SELECT inventory_number FROM inventory WHERE inventory_id = ?', [inventory_id]),
+  );
+  const { cost, currency }: Partial<BudgetStudy> = study.budget ?? {};
+  const columns = await readBudgetColumns(db, run, inventory, buildings, cost ?? COST_DEFAULTS);
+  let sum = 0;
+  for (let at = 0; at < columns.count; at += 1)
+    if (place(columns.rank[at]!) <= list_size) sum += coins(columns.cost[at]!);
+  return {
+    list_cost: sum / COINS,
+    currency: currency ?? null,
+    cost_source: cost === undefined ? 'judgement' : 'study',
+  };
+}
+
+async function aboutRun(db: Database, run: number) {
+  const [about] = await db.rows<{ inventory_id: string; buildings: number; ranked: number; list_size: number }>(
+    'SELECT inventory_id, buildings, ranked, list_size FROM run WHERE run_id = ?',
+    [run],
+  );
+  if (about === undefined) throw new UserError(`there is no run ${String(run)}; swaymark runs lists them`);
+  return about;
 }
 
 /** The rank, behind all others where there is none. */

@@ -9,12 +9,14 @@ import { assessInventory, withAssessor } from './assess-inventory.js';
 import type { Report } from './assess-inventory.js';
 import { assumptionsOf } from './assumptions.js';
 import { methodsFingerprint } from './fingerprints.js';
+import { budgetOutlook } from './budget-outlook.js';
 import { gridSpreads } from './grid-spreads.js';
 import { keepRanked } from './keep-results.js';
 import { readPools } from './read-buildings.js';
 import { keepGrids } from './kept-grids.js';
 import { accountLines, attributeCounts, rankingFigures } from './summarise.js';
 import type { StoredSummary } from './summarise.js';
+import { sensitivityOutlook } from './sensitivity-outlook.js';
 import { surveyOutlook } from './survey-outlook.js';
 import { PROGRAM } from './version.js';
 
@@ -22,6 +24,8 @@ export interface KeepOptions {
   /** When the run is made; the caller owns the clock. */
   readonly made: Date;
   readonly note?: string;
+  /** Tell with the run what the study's money buys and what the list hangs on. */
+  readonly outlook?: boolean;
 }
 
 export interface ScreenOutcome {
@@ -67,13 +71,14 @@ export async function keepRun(
   assessed.flat.length = 0;
   report('keeping');
   const account = { ...taken.account, ...(await rankedRows(db, taken.inventoryId, count, assessed)) };
-  const summary: StoredSummary = {
+  const register = assumptionsOf(settings, slopes);
+  const early: StoredSummary = {
     rows_in: taken.rowsIn,
     buildings: count,
     ...figures,
     account: accountLines(account),
     attributes: attributeCounts(taken.attributes),
-    assumptions: assumptionsOf(settings, slopes),
+    assumptions: register,
     slopes,
     survey,
     ...(loaded.grids.size === 0 ? {} : { grids: await gridSpreads(settings, loaded.grids, db, taken, assessed.index) }),
@@ -89,7 +94,7 @@ export async function keepRun(
     methodsFingerprint(),
     JSON.stringify(settings),
     loaded.text,
-    JSON.stringify(summary),
+    JSON.stringify(early),
     count,
     assessed.id.length,
     listSize,
@@ -98,6 +103,19 @@ export async function keepRun(
   ]);
   await keepGrids(db, runId, settings, loaded.grids);
   await keepRanked(db, runId, count, ranked.columns);
+  if (options.outlook !== true) return { runId, taken, summary: early };
+  report('outlook');
+  const { grids } = loaded;
+  const summary: StoredSummary = {
+    ...early,
+    budget: await budgetOutlook(db, loaded, runId, count),
+    sensitivity: await sensitivityOutlook(
+      db,
+      { run: runId, inventoryId, settings, grids, pools, buildings: count, listSize, register },
+      figures.ranked,
+    ),
+  };
+  await db.run('UPDATE run SET summary = ? WHERE run_id = ?', [JSON.stringify(summary), runId]);
   return { runId, taken, summary };
 }
 

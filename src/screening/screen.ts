@@ -5,17 +5,12 @@ import { openDatabase } from '../store/database.js';
 import type { Database } from '../store/database.js';
 import { prepareSchema, schemaState } from '../store/schema.js';
 import type { LoadedStudy } from '../study/load.js';
+import type { ScreenProgress } from './progress.js';
 import { keepRun } from './keep-run.js';
 import type { KeepOptions, ScreenOutcome } from './keep-run.js';
 import { settingsOf } from './settings.js';
 
 export type { ScreenOutcome } from './keep-run.js';
-
-export interface ScreenProgress {
-  readonly step: string;
-  /** Share done of a step that can tell, else NaN. */
-  readonly share: number;
-}
 
 export interface ScreenOptions extends KeepOptions {
   readonly onProgress?: (progress: ScreenProgress) => void;

@@ -18,7 +18,7 @@ import { readGrids } from './kept-grids.js';
 import { Blocks, orderBy, positions } from './order-by.js';
 import type { Order } from './order-by.js';
 import { readIds, readPools } from './read-buildings.js';
-import type { ScreenProgress } from './screen.js';
+import type { ScreenProgress } from './progress.js';
 import { withSlopes } from './slopes.js';
 import type { Mark, Switch } from './switch.js';
 import { markOf, notSwitched, switchesOf } from './switches.js';
@@ -81,6 +81,18 @@ export interface Sensitivity {
   readonly outside: readonly HeldPlace[];
 }
 
+/** What is ranked again. */
+export interface SensitivityBasis {
+  readonly run: number;
+  readonly inventoryId: string;
+  readonly settings: AssessSettings;
+  readonly grids: HazardGrids;
+  readonly pools: YearPools;
+  readonly buildings: number;
+  readonly listSize: number;
+  readonly register: readonly Assumption[];
+}
+
 /** The switch whose duration tells that of all. */
 const TELLING = 2;
 
@@ -92,13 +104,22 @@ export async function sensitivityOf(
 ): Promise<Sensitivity> {
   const { inventory_id: inventoryId, settings, summary } = await readRun(db, runId);
   const { buildings, list_size: listSize, assumptions: register } = summary;
-  const all = switchesOf(settings);
-  const switches = chosen(all, register, options.only);
+  const pools = await readPools(db, inventoryId);
+  const grids = await readGrids(db, settings);
+  const basis = { run: runId, inventoryId, settings, grids, pools, buildings, listSize, register };
+  return sensitivityOn(db, basis, chosen(switchesOf(settings), register, options.only), options);
+}
+
+/** Makes the `switches` one at a time. @throws UserError for a bad sample. */
+export async function sensitivityOn(
+  db: Database,
+  { run, inventoryId, settings, grids, pools, buildings, listSize, register }: SensitivityBasis,
+  switches: readonly Switch[],
+  options: Omit<SensitivityOptions, 'only'> = {},
+): Promise<Sensitivity> {
   const every = stepFor(buildings, options.sample);
   const looked = Math.ceil(buildings / every);
   const places = every === 1 ? listSize : Math.max(1, Math.round((listSize * looked) / buildings));
-  const pools = await readPools(db, inventoryId);
-  const grids = await readGrids(db, settings);
   const source = new Blocks(db, inventoryId, buildings, every, grids.size > 0);
   const report = (step: string, share: number): void => options.onProgress?.({ step, share });
   return withAssessor(looked, async (assessor) => {
@@ -122,14 +143,14 @@ export async function sensitivityOf(
       effects.push(await effectOf(db, inventoryId, base, now, one, register, places, every));
     }
     return {
-      run: runId,
+      run,
       buildings,
       ranked: base.ranked,
       places: Math.min(places, base.ranked),
       sample: every === 1 ? null : { every, buildings: looked, list_size: listSize },
       rankings: switches.length,
       switches: effects.sort(byEffect),
-      not_switched: notSwitched(register, all),
+      not_switched: notSwitched(register, switchesOf(settings)),
       ...(await heldPlaces(db, inventoryId, base, held, switches.length, places, every)),
     };
   });

@@ -37,6 +37,8 @@ export type StoredSummary = Pick<
   | 'assumptions'
   | 'slopes'
   | 'survey'
+  | 'budget'
+  | 'sensitivity'
   | 'grids'
 >;
 

@@ -8,7 +8,7 @@ import { listChange, ranksOfRun } from './list-changes.js';
 import type { ListChange } from './list-changes.js';
 import { gridsOn, refuseIntake, settingsOn } from './refresh.js';
 import type { BaseRun } from './refresh.js';
-import type { ScreenProgress } from './screen.js';
+import type { ScreenProgress } from './progress.js';
 import { rankingFigures } from './summarise.js';
 
 export interface SweptValue extends ListChange {

@@ -93,12 +93,7 @@ function historySwitches(settings: AssessSettings): readonly Switch[] {
     history === null
       ? []
       : [
-          {
-            assumption: 'code-history',
-            to: 'no seismic design ever',
-            settings: { ...settings, codeHistory: null },
-          },
-          ...[-10, 10].map((years) => ({
+          ...[10, -10].map((years) => ({
             assumption: 'code-history',
             to: `enforced ${String(Math.abs(years))} years ${years < 0 ? 'earlier' : 'later'}`,
             settings: {
@@ -109,6 +104,11 @@ function historySwitches(settings: AssessSettings): readonly Switch[] {
               },
             },
           })),
+          {
+            assumption: 'code-history',
+            to: 'no seismic design ever',
+            settings: { ...settings, codeHistory: null },
+          },
           ...[0, 5]
             .filter((lag) => lag !== history.adoption_lag_years)
             .map((adoption_lag_years) => ({

@@ -16,6 +16,9 @@ export const COST_DEFAULTS = { fixed: 5000, per_m2: 2, least: 6000 } as const;
 export const LEAST_CHANCE = 0.05;
 
 export const BudgetSchema = strict({
+  money: number({ from: 0.01, to: 1e12 })
+    .exactOptional()
+    .describe('The sum there is for assessments: every run then says what it buys.'),
   currency: text().exactOptional().describe('The word behind amounts of money.'),
   cost: strict({
     fixed: money('Cost of an assessment whatever the size.').default(COST_DEFAULTS.fixed),

@@ -2,6 +2,7 @@ import { relative } from 'node:path';
 import { formatCount, formatNumber, formatShare } from '../../engineering/format.js';
 import { EXIT } from '../../errors.js';
 import { budgetStudy } from '../../exports/budget-study.js';
+import { amount } from '../../reports/decide/words.js';
 import type { BudgetBuilding, BudgetPlan } from '../../screening/budget-plan.js';
 import { findStudy } from '../find-study.js';
 import { printJson, printLines, terminalColumns } from '../output/print.js';
@@ -10,7 +11,7 @@ import { table } from '../output/table.js';
 import { clean, wrap } from '../output/text.js';
 
 export interface BudgetCommandOptions {
-  readonly money: number;
+  readonly money?: number;
   readonly study?: string;
   readonly run?: number;
   readonly csv?: string;
@@ -27,13 +28,6 @@ export async function budget(options: BudgetCommandOptions): Promise<number> {
   if (options.json) printJson(plan);
   else printLines(lines(plan, csv, terminalColumns()));
   return plan.chosen.length === 0 ? EXIT.findings : EXIT.clean;
-}
-
-/** "178,400 crowns"; hundredths only where there are any. */
-function amount(value: number, currency: string | null): string {
-  const whole = Math.round(value) === value;
-  const text = whole ? formatCount(value) : `${formatCount(Math.trunc(value))}.${value.toFixed(2).slice(-2)}`;
-  return currency === null ? text : `${text} ${currency}`;
 }
 
 const counted = (count: number, one: string, many: string): string =>
@@ -67,7 +61,7 @@ function bought(plan: BudgetPlan): string[] {
   const best =
     value >= bound
       ? 'No choice within the money is worth more: all that may be chosen is.'
-      : `At most ${gap < 0.001 ? 'less than 0.1 %' : formatPercent(gap)} of the best possible worth is missed: no choice within the money is worth more than ${formatNumber(bound, 5)}, this one is worth ${formatNumber(value, 5)} (sum of chance of belonging × priority).`;
+      : `${gap < 0.001 ? 'Less than 0.1 %' : `At most ${formatPercent(gap)}`} of the best possible worth is missed: no choice within the money is worth more than ${formatNumber(bound, 5)}, this one is worth ${formatNumber(value, 5)} (sum of chance of belonging × priority).`;
   return [
     `${counted(chosen.length, 'assessment', 'assessments')} out of run ${String(run)} for ${amount(spent, currency)}; of ${amount(money, currency)} there ${left === 1 ? 'is' : 'are'} ${amount(left, null)} left.`,
     `${formatCount(of_list)} of the ${counted(on_list, 'building', 'buildings')} on the list ${of_list === 1 ? 'is' : 'are'} among them. ${best}`,

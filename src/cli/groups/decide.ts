@@ -56,7 +56,7 @@ export function addDecisionCommands(program: Command, keep: Keep): void {
     .description(
       "Chooses out of a kept run the buildings to assess for a sum of money: the largest sum of chance of belonging to the list × priority. Costs, buildings that must or must not be among them, and blocks that cost a mobilisation once stand in the study's section budget. Says how far from the best possible the choice is at most. Keeps nothing.",
     )
-    .requiredOption('--money <sum>', 'the sum, a plain number', money)
+    .option('--money <sum>', "the sum, a plain number (default: the study's budget.money)", money)
     .addOption(study())
     .addOption(run())
     .option('--csv <file>', 'write the choice as a table')

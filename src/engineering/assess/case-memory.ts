@@ -107,8 +107,13 @@ export function yearsNumber(years: readonly number[], memory: CaseMemory): numbe
   return -memory.poolCount;
 }
 
+interface Memory<K, V> {
+  readonly get: (key: K) => V | undefined;
+  readonly set: (key: K, value: V) => unknown;
+}
+
 /** The entry of `key`, made when missing. */
-export function entryOf<K, V>(map: Map<K, V>, key: K, make: () => V): V {
+export function entryOf<K, V>(map: Memory<K, V>, key: K, make: () => V): V {
   let found = map.get(key);
   if (found === undefined) map.set(key, (found = make()));
   return found;

@@ -5,7 +5,7 @@ import type { AnyRecord, Inputs } from '../formula.js';
 import { candidates, periodFormula } from '../period/choose.js';
 import { priorClasses } from '../prior/system-prior.js';
 import type { PriorClasses } from '../prior/system-prior.js';
-import type { System } from '../building.js';
+import type { Building, System } from '../building.js';
 import { SYSTEMS } from '../building.js';
 import type { CompiledSpectrum } from '../spectrum/compiled.js';
 import { ordinate, scaled } from '../spectrum/compiled.js';
@@ -21,6 +21,7 @@ import { newCaseMemory } from './case-memory.js';
 import type { CaseMemory } from './case-memory.js';
 import { newCurveMemory } from './curve-memory.js';
 import type { CurveMemory } from './curve-memory.js';
+import type { PeriodModel } from './period-model.js';
 import type { AssessSettings } from './settings.js';
 
 export interface ContextSpectrum {
@@ -76,7 +77,12 @@ export interface AssessContext {
   /** Cases and demands found so far; they speed up and change nothing. */
   readonly caseMemory: CaseMemory;
   readonly curveMemory: CurveMemory;
+  /** Evidence found for buildings that are assessed again and again with the same settings of periods and spreads; null: none is kept. */
+  readonly periodMemory: PeriodMemory | null;
 }
+
+/** By building, then direction and system. */
+export type PeriodMemory = WeakMap<Building, Map<string, PeriodModel | null>>;
 
 /** Median record-to-record dispersion in the closed form of the mean annual rate [from memory]. */
 const RECORD_TO_RECORD = 0.4;
@@ -88,10 +94,15 @@ function slopeOf(settings: AssessSettings, spectrum: string): number {
 const NO_GRIDS: HazardGrids = new Map();
 
 /**
- * Compiles spectra, picks formulas and lays out eras; `grids` are those the settings name by their fingerprints.
+ * Compiles spectra, picks formulas and lays out eras; `grids` are those the settings name by their fingerprints. A `periodMemory` is
+ * for contexts that agree in the settings of periods and in spreads.
  * @throws RangeError for spectrum parameters out of range.
  */
-export function compileContext(settings: AssessSettings, grids: HazardGrids = NO_GRIDS): AssessContext {
+export function compileContext(
+  settings: AssessSettings,
+  grids: HazardGrids = NO_GRIDS,
+  periodMemory: PeriodMemory | null = null,
+): AssessContext {
   const assumed = assumedWith(settings.assumed);
   const spectra: Record<string, ContextSpectrum> = {};
   for (const [name, { return_period_years, ...definition }] of Object.entries(settings.spectra)) {
@@ -128,6 +139,7 @@ export function compileContext(settings: AssessSettings, grids: HazardGrids = NO
     priorClasses: priorClasses(settings.systemPrior),
     caseMemory: newCaseMemory(),
     curveMemory: newCurveMemory(),
+    periodMemory,
   };
 }
 

@@ -8,49 +8,39 @@ import type { AnyRecord, Inputs } from '../formula.js';
 import { exp, ln } from '../numeric/elementary.js';
 import { inputNames, toStrongShaking } from '../period/choose.js';
 import type { Trace } from '../trace.js';
+import { entryOf, newMap } from './case-memory.js';
 import { COMBINED_PERIOD } from './combine.js';
 import type { AssessContext } from './context.js';
 import { chosenFormula, measured, routePeriods, stiffnessPeriod, strongPeriod } from './evidence.js';
 import type { MeasuredPeriod } from './evidence.js';
+import type { PeriodModel } from './period-model.js';
 import { formulaInputs } from './formula-inputs.js';
 
 /** Why a building has no period. */
 export const NO_PERIOD = 'no method gives a period: those the study leaves on need what is not on record';
 
-export type Evidence = 'measured' | 'formula' | 'stiffness' | 'formula and stiffness';
-/** What the counted formula was fitted to, or the kind of evidence where none counts. */
-export type PeriodBasis = 'design' | 'best-fit' | 'ambient' | 'measured' | 'mechanics';
-
-/** What is known of the period before the height is fixed. */
-export interface PeriodModel {
-  readonly evidence: Evidence;
-  readonly basis: PeriodBasis;
-  readonly formula: AnyRecord | null;
-  /** Inputs of the formula at a height; null: the height alone. */
-  readonly inputsAt: ((height_m: number) => Inputs) | null;
-  /** The record that lengthens a formula of small amplitude; null where it speaks of strong shaking. */
-  readonly strengthened: AnyRecord | null;
-  /** Measured or stiffness period at the height of record, NaN when there is none. */
-  readonly period_s: number;
-  /** The stiffness period at another height, where it depends on it and the height is uncertain; else null. */
-  readonly stiffnessAt: ((height_m: number) => number) | null;
-  /** Spread of ln T of that period. */
-  readonly sigma: number;
-  /** Spread of ln T of the shared input (mass), added once after combining. */
-  readonly sharedSigma: number;
-  /** Ids of the measured record and the stiffness route that count, else null. */
-  readonly measuredId: string | null;
-  readonly routeId: string | null;
-  /** The route that counts rests on assumed values. */
-  readonly assumed: boolean;
-  /** Other estimates (s) that the counted ones are checked against. */
-  readonly checks: readonly number[];
-}
+export type { Evidence, PeriodBasis, PeriodModel } from './period-model.js';
 
 const SWAY_FORMULA = 'en1998-1-2004/period/gravity-sway';
 
 /** The evidence for the period of one direction. Null when nothing speaks: all methods switched off, or a formula that the row cannot feed. */
 export function periodModel(
+  building: Building,
+  direction: DirectionName,
+  system: System,
+  context: AssessContext,
+  trace?: Trace,
+): PeriodModel | null {
+  if (trace !== undefined || context.periodMemory === null)
+    return newModel(building, direction, system, context, trace);
+  const ofBuilding = entryOf(context.periodMemory, building, newMap<string, PeriodModel | null>);
+  const key = `${direction} ${system}`;
+  let found = ofBuilding.get(key);
+  if (found === undefined) ofBuilding.set(key, (found = newModel(building, direction, system, context)));
+  return found;
+}
+
+function newModel(
   building: Building,
   direction: DirectionName,
   system: System,

@@ -20,6 +20,9 @@ export interface PartClass {
 export class ClassTable {
   readonly classes: readonly PartClass[];
   readonly #low: number;
+  readonly #high: number;
+  /** The edge with no class moved, for the one number of places that is asked for. */
+  #unmoved: number | null = null;
   readonly #step: number;
   /** By class: the expected number of its buildings above each point. */
   readonly #above: readonly Float64Array[];
@@ -37,6 +40,7 @@ export class ClassTable {
     low -= 5 * most + 1e-6;
     high += 5 * most + 1e-6;
     this.#low = low;
+    this.#high = high;
     this.#step = (high - low) / (POINTS - 1);
     const top = most * most;
     const ofZones = zones.map(() => new Map<number, Float64Array>());
@@ -77,14 +81,21 @@ export class ClassTable {
     });
   }
 
-  /** x above which `places` buildings are expected when the buildings of class c are moved up by `shift[c]`. */
+  /** x above which `places` buildings are expected when the buildings of class c are moved up by `shift[c]`; to 1e-7. */
   edge(places: number, shift: Float64Array): number {
-    let widest = 0;
-    for (const one of shift) widest = Math.max(widest, Math.abs(one));
-    let low = this.#low - widest;
-    let high = this.#low + this.#step * (POINTS - 1) + widest;
-    // halving a span of some tens to 1e-9
-    for (let pass = 0; pass < 40 && high - low > 1e-9; pass += 1) {
+    this.#unmoved ??= this.#between(places, new Float64Array(shift.length), this.#low, this.#high);
+    let [least, most] = [Infinity, -Infinity];
+    for (const one of shift) {
+      if (one < least) least = one;
+      if (one > most) most = one;
+    }
+    // it moves no farther than the classes do
+    return this.#between(places, shift, this.#unmoved + least, this.#unmoved + most);
+  }
+
+  #between(places: number, shift: Float64Array, from: number, to: number): number {
+    let [low, high] = [from, to];
+    while (high - low > 1e-7) {
       const x = 0.5 * (low + high);
       let sum = 0;
       for (let c = 0; c < this.#above.length; c += 1) sum += this.#read(c, x - shift[c]!);

@@ -1,55 +1,34 @@
 /** Chances of buildings given the draws of their common errors: averages over the draws, and what they do to a count. */
 import { exp } from '../numeric/elementary.js';
-import { INVERSE_ROOT_TWO_PI, cdfFrom } from '../numeric/normal.js';
+import { INVERSE_ROOT_TWO_PI, cdfFrom, normalCdf } from '../numeric/normal.js';
 import { NO_LABEL, labelOf } from './mixture.js';
 import type { Mixture } from './mixture.js';
 import { changedSpread, toOwn } from './shared.js';
-import type { Common, SharedDraws } from './shared.js';
+import type { Common } from './shared.js';
 
-/** Chance that building i stands above the edge of draw d, and how fast it grows where the edge falls. */
-function chanceGiven(
-  mixtures: readonly Mixture[],
-  common: Common,
-  i: number,
-  d: number,
-): { readonly chance: number; readonly slope: number } {
-  const { shared, draws } = common;
-  const zone = shared.zone[i]!;
-  const { eraLoad, siteLoad } = shared.zones[zone]!;
-  const mixture = mixtures[i]!;
-  const { weight, mean, sd, from, to } = mixture;
-  const edge = draws.edge[d]! - siteLoad * draws.ofZone[zone]![d]!;
-  let chance = 0;
-  let slope = 0;
-  for (let k = from; k < to; k += 1) {
-    const label = labelOf(mixture, k);
-    const x = label === NO_LABEL ? edge : edge - eraLoad * draws.ofLabel[label]![d]!;
-    const own = changedSpread(sd[k]!, toOwn(common, i, label));
-    const w = weight[k]!;
-    if (own > 0) {
-      const u = (mean[k]! - x) / own;
-      const e = exp(-0.5 * u * u);
-      chance += w * cdfFrom(u, e);
-      slope += (w * INVERSE_ROOT_TWO_PI * e) / own;
-    } else if (mean[k]! > x) chance += w;
-  }
-  return { chance, slope };
-}
-
-/** Some of the draws, in whole pairs of one and its negative. */
-function someDraws({ edge }: SharedDraws, count: number): readonly number[] {
-  const every = Math.max(1, Math.ceil(edge.length / count));
-  return Array.from({ length: Math.ceil(edge.length / 2 / every) }, (_, i) => [
-    2 * i * every,
-    2 * i * every + 1,
-  ]).flat();
-}
-
-/** Parts of mixtures looked at in all draws together. */
-const MOST_PARTS = 12_000_000;
-const LEAST_DRAWS = 64;
+/** Where the edge stands for the parts of each class: its middle positions over the draws, equally likely. */
+const NODES = 64;
+/** Parts of mixtures looked at at every position. */
+const MOST_PARTS = 200_000;
 /** Below this chance, or above 1 less it, a building is left as it is. */
 const CONTESTED = 1e-5;
+
+/** Edge of draw d as the parts of a label in a zone see it: less the errors they have in common. */
+function edgeSeen({ shared, draws }: Common, zone: number, label: number, d: number): number {
+  const { eraLoad, siteLoad } = shared.zones[zone]!;
+  const ofEra = label === NO_LABEL ? 0 : eraLoad * draws.ofLabel[label]![d]!;
+  return draws.edge[d]! - siteLoad * draws.ofZone[zone]![d]! - ofEra;
+}
+
+/** The positions of the edge for one class, gathered from the sorted draws into `NODES` means. */
+function nodesOf(common: Common, zone: number, label: number): Float64Array {
+  const seen = common.draws.edge.map((_, d) => edgeSeen(common, zone, label, d)).sort();
+  const each = seen.length / NODES;
+  return Float64Array.from({ length: NODES }, (_, node) => {
+    const some = seen.subarray(Math.round(node * each), Math.round((node + 1) * each));
+    return some.reduce((sum, x) => sum + x, 0) / some.length;
+  });
+}
 
 /**
  * The `chance` of each building to be among the first `places`, from its variance seen from the edge, worked out anew as the average
@@ -63,27 +42,42 @@ export function averagedChances(
 ): Float64Array {
   const contested = Array.from(chance.keys()).filter((i) => chance[i]! > CONTESTED && chance[i]! < 1 - CONTESTED);
   const parts = contested.reduce((sum, i) => sum + mixtures[i]!.to - mixtures[i]!.from, 0);
-  if (contested.length === 0 || MOST_PARTS / parts < LEAST_DRAWS) return chance;
-  const draws = someDraws(common.draws, MOST_PARTS / parts);
+  if (contested.length === 0 || parts > MOST_PARTS) return chance;
+  const nodes = new Map<number, Float64Array>();
+  const nodesFor = (zone: number, label: number): Float64Array => {
+    const key = zone * (NO_LABEL + 1) + label;
+    let found = nodes.get(key);
+    if (found === undefined) nodes.set(key, (found = nodesOf(common, zone, label)));
+    return found;
+  };
   const average = new Float64Array(contested.length);
+  /** How fast the chance grows where the edge falls. */
   const slope = new Float64Array(contested.length);
   contested.forEach((i, at) => {
-    for (const d of draws) {
-      const given = chanceGiven(mixtures, common, i, d);
-      average[at]! += given.chance / draws.length;
-      slope[at]! += given.slope / draws.length;
+    const mixture = mixtures[i]!;
+    const { weight, mean, sd, from, to } = mixture;
+    for (let k = from; k < to; k += 1) {
+      const label = labelOf(mixture, k);
+      const own = changedSpread(sd[k]!, toOwn(common, i, label));
+      const w = weight[k]! / NODES;
+      for (const x of nodesFor(common.shared.zone[i]!, label)) {
+        if (own > 0) {
+          const u = (mean[k]! - x) / own;
+          const e = exp(-0.5 * u * u);
+          average[at]! += w * cdfFrom(u, e);
+          slope[at]! += (w * INVERSE_ROOT_TWO_PI * e) / own;
+        } else if (mean[k]! > x) average[at]! += w;
+      }
     }
   });
   // the edges, read from tables, moved together by what makes the chances sum to the places left
-  let left = places;
-  chance.forEach((p) => (left -= p));
-  for (const i of contested) left += chance[i]!;
-  let missing = left;
+  let missing = places;
   let growth = 0;
-  for (let at = 0; at < average.length; at += 1) {
-    missing -= average[at]!;
+  for (const p of chance) missing -= p;
+  contested.forEach((i, at) => {
+    missing += chance[i]! - average[at]!;
     growth += slope[at]!;
-  }
+  });
   const move = growth > 0 ? missing / growth : 0;
   const out = chance.slice();
   contested.forEach((i, at) => {
@@ -92,8 +86,8 @@ export function averagedChances(
   return out;
 }
 
-/** Draws in the variance of a count: enough for its first digits. */
-const MOST_CHANCES = 200_000;
+/** Chances in the variance of a count: enough for its first digits. */
+const MOST_CHANCES = 40_000;
 
 /**
  * Variance of the number of wrong places among the buildings `listed`, whose `mixtures` are seen from the edge. Given a draw of the
@@ -105,7 +99,12 @@ export function wrongVariance(
   common: Common,
   all: number,
 ): number {
-  const draws = someDraws(common.draws, MOST_CHANCES / listed.length);
+  const { length } = common.draws.edge;
+  // whole pairs of a draw and its negative
+  const every = 2 * Math.max(1, Math.ceil((length * listed.length) / MOST_CHANCES / 2));
+  const draws = Array.from({ length: length / 2 }, (_, pair) => pair)
+    .filter((pair) => (2 * pair) % every === 0)
+    .flatMap((pair) => [2 * pair, 2 * pair + 1]);
   let within = 0;
   let sum = 0;
   let squares = 0;
@@ -113,7 +112,7 @@ export function wrongVariance(
     let wrong = 0;
     let variance = 0;
     for (let place = 0; place < listed.length; place += 1) {
-      const { chance } = chanceGiven(mixtures, common, listed[place]!, d);
+      const chance = chanceGiven(mixtures, common, listed[place]!, d);
       variance += chance * (1 - chance);
       wrong += 1 - chance;
     }
@@ -128,4 +127,18 @@ export function wrongVariance(
 /** What the given number of places leaves of the variance of the number of those on the list: one in is one out. */
 export function keptOf(variance: number, all: number): number {
   return all > 0 ? Math.max(0, 1 - variance / all) : 0;
+}
+
+/** Chance that building i stands above the edge of draw d. */
+function chanceGiven(mixtures: readonly Mixture[], common: Common, i: number, d: number): number {
+  const mixture = mixtures[i]!;
+  const { weight, mean, sd, from, to } = mixture;
+  let chance = 0;
+  for (let k = from; k < to; k += 1) {
+    const label = labelOf(mixture, k);
+    const own = changedSpread(sd[k]!, toOwn(common, i, label));
+    const gap = mean[k]! - edgeSeen(common, common.shared.zone[i]!, label, d);
+    chance += weight[k]! * (own > 0 ? normalCdf(gap / own) : gap > 0 ? 1 : 0);
+  }
+  return chance;
 }

@@ -47,11 +47,15 @@ export function drawShared(
   places: number,
   seed: number,
 ): SharedDraws {
-  const ofLabel = shared.labels.map((name) => standardDraws(`edition ${name}`, seed));
+  const table = new ClassTable(mixtures, shared);
+  const used = new Set(table.classes.map(({ label }) => label));
+  // an edition that no part stands for is not drawn
+  const ofLabel = shared.labels.map((name, label) =>
+    used.has(label) ? standardDraws(`edition ${name}`, seed) : new Float64Array(0),
+  );
   const ofZone = shared.zones.map(({ name }) => standardDraws(`zone ${name}`, seed));
   const edge = new Float64Array(2 * PAIRS);
   if (places < mixtures.length) {
-    const table = new ClassTable(mixtures, shared);
     const shift = new Float64Array(table.classes.length);
     for (let d = 0; d < edge.length; d += 1) {
       table.classes.forEach(({ zone, label }, c) => {
@@ -103,7 +107,8 @@ function changeOf(
       return squares / draws;
     };
     const change = new Float64Array(NO_LABEL + 1);
-    for (let label = 0; label < ofLabel.length; label += 1) change[label] = variance(label) - eraLoad * eraLoad;
+    for (let label = 0; label < ofLabel.length; label += 1)
+      if (ofLabel[label]!.length > 0) change[label] = variance(label) - eraLoad * eraLoad;
     change[NO_LABEL] = variance(NO_LABEL);
     return change;
   });

@@ -71,11 +71,16 @@ export function simulate(
   const isListed = new Uint8Array(n);
   for (const building of listed) isListed[building] = 1;
   const wrong = new Uint32Array(listed.length + 1);
-  const labelKeys = common?.shared.labels.map((name) => hashText(`edition ${name}`)) ?? [];
+  // an edition that no part stands for is not drawn
+  const labelKeys =
+    common?.shared.labels.map((name, l) =>
+      common.draws.ofLabel[l]!.length > 0 ? hashText(`edition ${name}`) : null,
+    ) ?? [];
   const zoneKeys = common?.shared.zones.map(({ name }) => hashText(`zone ${name}`)) ?? [];
   const z = { ofLabel: new Float64Array(labelKeys.length), ofZone: new Float64Array(zoneKeys.length) };
-  const fill = (out: Float64Array, of: readonly number[], d: number): void => {
+  const fill = (out: Float64Array, of: readonly (number | null)[], d: number): void => {
     of.forEach((key, f) => {
+      if (key === null) return;
       philox(d, 0, key, 0, seed, 0x5eee, words);
       out[f] = normalQuantile((words[0]! + 0.5) / 4294967296);
     });
