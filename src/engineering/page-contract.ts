@@ -156,6 +156,92 @@ export interface GridSpread {
   readonly high_g: readonly number[];
 }
 
+/** A main building with the wings and additions joined to it. */
+export interface Site {
+  /** Of its main building. */
+  readonly id: string;
+  readonly name: string | null;
+  readonly buildings: number;
+  readonly ranked: number;
+  /** Null where none is ranked, as the two that follow. */
+  readonly best_rank: number | null;
+  /** Chance that at least one member belongs to the list. */
+  readonly chance: number | null;
+  readonly expected_in_list: number | null;
+  /** People present on average in the members of which it is known; null where it is known of none. */
+  readonly people_exposed: number | null;
+  /** By rank, those not ranked last; of a very large site the first. */
+  readonly members: readonly SiteMember[];
+}
+
+export interface SiteMember {
+  readonly id: string;
+  readonly name: string | null;
+  readonly rank: number | null;
+  readonly chance: number | null;
+  /** Why it is not ranked. */
+  readonly not_ranked: string | null;
+}
+
+/** Sites of two buildings or more, those likeliest to have one in the list first. */
+export interface PageSites {
+  /** Of the whole inventory, with the buildings that belong to them. */
+  readonly all: number;
+  readonly buildings: number;
+  /** Those of the shown buildings. */
+  readonly sites: readonly Site[];
+}
+
+/** The gap between two neighbours against what they may sway together. */
+export interface GapPair {
+  readonly id_a: string;
+  readonly id_b: string;
+  readonly name_a: string | null;
+  readonly name_b: string | null;
+  /** Null: not ranked. */
+  readonly rank_a: number | null;
+  readonly rank_b: number | null;
+  readonly gap_m: number;
+  /** In the table of neighbours, or measured between the footprints. */
+  readonly gap_from: 'given' | 'measured';
+  readonly floors_aligned: 'yes' | 'no' | null;
+  /** By the root of the squares, of which 0.7 where floors are at one level. */
+  readonly needed_m: number;
+  readonly double_difference_m: number;
+  readonly by_height_m: number;
+  /** One is half as tall again as the other, or more. */
+  readonly much_taller: boolean;
+}
+
+/** What of a pair travels to the page. */
+export const GAP_COLUMNS = [
+  'id_a',
+  'id_b',
+  'gap_m',
+  'gap_from',
+  'floors_aligned',
+  'needed_m',
+  'double_difference_m',
+  'by_height_m',
+  'much_taller',
+] as const satisfies readonly (keyof GapPair)[];
+
+export interface PageGaps {
+  /** Worked for every building, or in a large inventory for those of the list alone. */
+  readonly of: 'all' | 'list';
+  /** Of the list, where it is long, the first so many; null: all that `of` says. */
+  readonly first: number | null;
+  /** False where outlines overlap in such masses that pairs are missing. */
+  readonly complete: boolean;
+  /** Pairs passed over because both have the same outline. */
+  readonly alike: number;
+  /** Pairs of which one building cannot be worked, so that what they need is not known. */
+  readonly unknown: number;
+  /** All others within reach, those that lack most first; of which `short` are short by what both sway or by the height rule. */
+  readonly pairs: readonly GapPair[];
+  readonly short: number;
+}
+
 export interface PageSummary {
   readonly title: string;
   readonly run: string;
@@ -207,6 +293,8 @@ export interface PageBuildings {
   readonly name: readonly (string | null)[];
   readonly group: readonly (string | null)[];
   readonly part_of: readonly (string | null)[];
+  /** Place of its site in the list of sites; null: it stands by itself. */
+  readonly site: readonly (number | null)[];
   readonly lon: readonly (number | null)[];
   readonly lat: readonly (number | null)[];
   readonly heritage: readonly (string | null)[];
@@ -219,6 +307,9 @@ export interface PageData {
   readonly summary: PageSummary;
   readonly settings: AssessSettings;
   readonly buildings: PageBuildings;
+  readonly sites: PageSites;
+  /** Null where neither footprints nor a table of neighbours tell of any gap. */
+  readonly gaps: PageGaps | null;
   /** What the shown buildings read of the study's grids, by fingerprint. */
   readonly grids: Readonly<Record<string, CarriedGrid>>;
   readonly display: 'si' | 'us';

@@ -21,6 +21,7 @@ import { rejectedShare } from './check-study.js';
 import { writeReports } from './reports.js';
 import type { ScreenedStudy } from './screen-study.js';
 import { replaceFile } from './replace-file.js';
+import { spareInputs } from './spare-inputs.js';
 import { prepareFolder } from './write-set.js';
 
 /** A grid of hazard whose file is gone is the one kept with the run. */
@@ -84,6 +85,7 @@ export async function refreshStudy(path: string, options: RefreshStudyOptions = 
   requireDatabase(own);
   const folder =
     options.reports === false ? null : prepareFolder(options.output ?? resolve(own.folder, loaded.study.output));
+  if (folder !== null) spareInputs(own, folder);
   const db = await openStudyDatabase(own, false, folder === null ? [] : [folder]);
   try {
     options.onOpen?.(db);

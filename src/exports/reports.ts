@@ -1,5 +1,6 @@
 /** Everything a run writes into the study's output folder. */
 import { writeFile } from 'node:fs/promises';
+import { join } from 'node:path';
 import type { Display } from '../engineering/format.js';
 import type { PageData } from '../engineering/page-contract.js';
 import { renderDashboard } from '../reports/dashboard.js';
@@ -8,13 +9,30 @@ import { renderSummary } from '../reports/summary.js';
 import { gridRejectsSql } from '../screening/grid-rejects.js';
 import { pageDataOf, readRun } from '../screening/page-data.js';
 import type { Database } from '../store/database.js';
+import { GAPS_BEGIN, gapsCsv } from './gaps.js';
 import { writeRankingCsv, writeRankingParquet } from './ranking.js';
 import { writeRejectsCsv } from './rejects.js';
+import { SITES_BEGIN, writeSitesCsv } from './sites.js';
+import { removeOwn } from './remove-own.js';
 import { writeSet } from './write-set.js';
 import type { FileSource } from './write-set.js';
 
-/** The files a run writes. */
-export const REPORT_FILES = ['dashboard.html', 'summary.md', 'ranking.csv', 'ranking.parquet', 'rejects.csv'] as const;
+/** The files a run writes; the last two only where there is something to tell. */
+export const REPORT_FILES = [
+  'dashboard.html',
+  'summary.md',
+  'ranking.csv',
+  'ranking.parquet',
+  'rejects.csv',
+  'sites.csv',
+  'gaps.csv',
+] as const;
+
+/** How a file begins that an earlier run left and this one has nothing for: it would be taken for this run's. */
+const LEFT_BEHIND: Readonly<Partial<Record<(typeof REPORT_FILES)[number], string>>> = {
+  'sites.csv': SITES_BEGIN,
+  'gaps.csv': GAPS_BEGIN,
+};
 
 export interface Written {
   /** Paths of the files, the dashboard first. */
@@ -24,7 +42,7 @@ export interface Written {
 }
 
 /**
- * Writes dashboard.html, ranking.csv, ranking.parquet, rejects.csv and summary.md of a kept run into `folder`, all or none.
+ * Writes dashboard.html, summary.md and the tables of a kept run into `folder`, all or none.
  * @param folder as `prepareFolder` returned it, and open to `db`.
  */
 export async function writeReports(
@@ -57,7 +75,14 @@ export async function writeReports(
       const rejects = gridRejectsSql(await readRun(db, runId));
       await db.beside((other) => writeRejectsCsv(other, inventory, path, rejects));
     },
+    'sites.csv': (path) => db.beside(async (other) => writeSitesCsv(other, await readRun(other, runId), path)),
+    'gaps.csv': async (path) => {
+      const text = gapsCsv(await data);
+      return text === null ? false : writeFile(path, text);
+    },
   };
   const files = await writeSet(folder, sources);
+  for (const [name, begin] of Object.entries(LEFT_BEHIND))
+    if (!files.includes(join(folder, name))) removeOwn(join(folder, name), begin);
   return { files, data: await data };
 }

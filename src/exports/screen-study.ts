@@ -8,6 +8,7 @@ import type { Database } from '../store/database.js';
 import { loadStudy } from '../study/load.js';
 import { writeReports } from './reports.js';
 import { rejectedShare } from './check-study.js';
+import { spareInputs } from './spare-inputs.js';
 import { prepareFolder } from './write-set.js';
 
 export interface ScreenStudyOptions extends Omit<ScreenOptions, 'made'> {
@@ -39,6 +40,7 @@ export interface ScreenedStudy extends ScreenOutcome {
 export async function screenStudy(path: string, options: ScreenStudyOptions = {}): Promise<ScreenedStudy> {
   const loaded = await loadStudy(path);
   const folder = prepareFolder(options.output ?? resolve(loaded.folder, loaded.study.output));
+  spareInputs(loaded, folder);
   const db = await openStudyDatabase(loaded, false, [folder]);
   try {
     options.onOpen?.(db);

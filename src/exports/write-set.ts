@@ -5,8 +5,8 @@ import { join } from 'node:path';
 import { allDone } from './all-done.js';
 import { Bug, UserError } from '../errors.js';
 
-/** Text to write, or a function that writes to the path it is given. */
-export type FileSource = string | ((path: string) => Promise<void>);
+/** Text to write, or a function that writes to the path it is given; one that resolves to false has nothing to write. */
+export type FileSource = string | ((path: string) => Promise<unknown>);
 
 const TEMPORARY = /^\.swaymark-(\d+)-.*\.part$/;
 
@@ -66,13 +66,16 @@ export async function writeSet(
   try {
     for (const name of names)
       if (name.includes('/') || name.includes('\\')) throw new Bug(`writeSet: ${name} is not a file name`);
+    const empty = new Set<string>();
     await allDone(
-      Object.entries(files).map(([name, source]) =>
-        typeof source === 'string' ? writeFile(temporary(name), source) : source(temporary(name)),
-      ),
+      Object.entries(files).map(async ([name, source]) => {
+        if (typeof source === 'string') await writeFile(temporary(name), source);
+        else if ((await source(temporary(name))) === false) empty.add(name);
+      }),
     );
-    for (const name of names) renameSync(temporary(name), join(folder, name));
-    return names.map((name) => join(folder, name));
+    const written = names.filter((name) => !empty.has(name));
+    for (const name of written) renameSync(temporary(name), join(folder, name));
+    return written.map((name) => join(folder, name));
   } catch (error) {
     for (const name of names) rmSync(temporary(name), { force: true });
     throw mended(error, folder);

@@ -80,6 +80,30 @@ export const CHECKS = {
     'coordinates equal to five decimals and the same floor area',
     'both kept; look whether they are one building',
   ),
+  mainUnknown: check(
+    'unknown-main-building',
+    'part_of',
+    'part_of names no building of the inventory',
+    'the building stands by itself; give the identifier of its main building',
+  ),
+  partOfItself: check(
+    'part-of-itself',
+    'part_of',
+    'part_of names the building itself',
+    'taken as a main building; leave its own cell blank',
+  ),
+  partOfPart: check(
+    'part-of-a-part',
+    'part_of',
+    'part_of names a building that is itself part of another',
+    'counted to the site where the chain ends; name the main building',
+  ),
+  partOfCircle: check(
+    'part-of-in-a-circle',
+    'part_of',
+    'following part_of leads back to the building',
+    'taken together as one site; leave the cell of the main building blank',
+  ),
   storeysDisagree: check(
     'storeys-disagree',
     'storeys_above',

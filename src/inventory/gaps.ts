@@ -31,15 +31,43 @@ interface Box {
   readonly north: number;
 }
 
+export interface Measured {
+  /** In the order of their places. */
+  readonly gaps: readonly Gap[];
+  /** False where so many outlines overlap that the work was broken off: pairs are missing. */
+  readonly complete: boolean;
+  /** Pairs passed over because both have one and the same outline: a parcel or a building told twice has no gap to itself. */
+  readonly alike: number;
+}
+
+export interface MeasureOptions {
+  /** Pairs count only where one of the two is wanted; all are when left out. */
+  readonly wanted?: (place: number) => boolean;
+  /** Work allowed: about one for each pair of walls compared, 20 ns. */
+  readonly steps?: number;
+}
+
+/** Work of looking a neighbour up in a cell, in walls compared. */
+const LOOK = 8;
+
 /** Every pair of footprints (WKT polygons in degrees; null: none) no further apart than `reach_m`, in order of their places. */
 export function gapsWithin(footprints: readonly (string | null)[], reach_m: number): readonly Gap[] {
+  return measureGaps(footprints, reach_m).gaps;
+}
+
+/** The same, with what was left out. */
+export function measureGaps(
+  footprints: readonly (string | null)[],
+  reach_m: number,
+  { wanted = () => true, steps = Infinity }: MeasureOptions = {},
+): Measured {
   const rings = footprints.map((text) => (text === null ? undefined : readRings(text)?.[0]));
   const boxes = rings.map((ring) => {
     const box = ring === undefined ? undefined : boxOf(ring);
     return box !== undefined && isBuilding(box) ? box : undefined;
   });
   const found = boxes.filter((box) => box !== undefined);
-  if (found.length < 2) return [];
+  if (found.length < 2) return { gaps: [], complete: true, alike: 0 };
   // cells need no exact ground: one scale for all, and the reach is widened where a degree is shorter than in the middle
   const { east_m, north_m } = groundScale(found.reduce((sum, { south }) => sum + south, 0) / found.length);
   const cells = new Map<string, number[]>();
@@ -50,15 +78,29 @@ export function gapsWithin(footprints: readonly (string | null)[], reach_m: numb
     Math.floor((north * north_m + margin_m) / CELL_M),
   ];
   const gaps: Gap[] = [];
-  boxes.forEach((box, b) => {
-    if (box === undefined) return;
+  let left = steps;
+  let alike = 0;
+  for (let b = 0; b < boxes.length && left > 0; b += 1) {
+    const box = boxes[b];
+    if (box === undefined) continue;
     const near = new Set<number>();
     const stretch = MARGIN * Math.min(MOST_STRETCH, Math.max(1, east_m / groundScale(box.south).east_m));
     const [x0, x1, y0, y1] = cellsOf(box, reach_m * stretch);
+    const isWanted = wanted(b);
     for (let x = x0; x <= x1; x += 1)
-      for (let y = y0; y <= y1; y += 1) for (const a of cells.get(`${String(x)} ${String(y)}`) ?? []) near.add(a);
+      for (let y = y0; y <= y1; y += 1) {
+        const list = cells.get(`${String(x)} ${String(y)}`) ?? [];
+        left -= LOOK * (1 + list.length);
+        for (const a of list) if (isWanted || wanted(a)) near.add(a);
+      }
     for (const a of [...near].sort((one, other) => one - other)) {
-      const gap_m = gapBetween(rings[a]!, rings[b]!, reach_m);
+      if (footprints[a] === footprints[b]) {
+        alike += 1;
+        continue;
+      }
+      if (left <= 0) break;
+      const { gap_m, work } = gapBetween(rings[a]!, rings[b]!, reach_m);
+      left -= work;
       if (gap_m <= reach_m) gaps.push({ a, b, gap_m });
     }
     const [u0, u1, v0, v1] = cellsOf(box, 0);
@@ -68,9 +110,10 @@ export function gapsWithin(footprints: readonly (string | null)[], reach_m: numb
         const list = cells.get(key);
         if (list === undefined) cells.set(key, [b]);
         else list.push(b);
+        left -= LOOK;
       }
-  });
-  return gaps.sort((one, other) => one.a - other.a || one.b - other.b);
+  }
+  return { gaps: gaps.sort((one, other) => one.a - other.a || one.b - other.b), complete: left > 0, alike };
 }
 
 function isBuilding({ west, east, south, north }: Box): boolean {
@@ -90,8 +133,14 @@ function boxOf(ring: readonly Point[]): Box {
   return box;
 }
 
-/** Gap between two rings in degrees; Infinity where their boxes are further apart than `reach_m`. */
-function gapBetween(first: readonly Point[], second: readonly Point[], reach_m: number): number {
+interface Between {
+  readonly gap_m: number;
+  /** Walls compared. */
+  readonly work: number;
+}
+
+/** Gap between two rings in degrees; Infinity where they are further apart than `reach_m`. */
+function gapBetween(first: readonly Point[], second: readonly Point[], reach_m: number): Between {
   const [lon, lat] = first[0]!;
   const { east_m, north_m } = groundScale(lat);
   const flat = (ring: readonly Point[]): readonly Point[] =>
@@ -99,20 +148,48 @@ function gapBetween(first: readonly Point[], second: readonly Point[], reach_m: 
   const a = flat(first);
   const b = flat(second);
   const [p, q] = [boxOf(a), boxOf(b)];
-  if (Math.max(p.west - q.east, q.west - p.east, p.south - q.north, q.south - p.north) > reach_m) return Infinity;
-  if (isInside(a[0]!, b) || isInside(b[0]!, a)) return 0;
+  const work = a.length + b.length;
+  if (Math.max(p.west - q.east, q.west - p.east, p.south - q.north, q.south - p.north) > reach_m)
+    return { gap_m: Infinity, work };
+  if (isInside(a[0]!, b) || isInside(b[0]!, a)) return { gap_m: 0, work };
+  // what comes within reach lies within the other's box widened by it
+  const ofA = wallsWithin(a, q, reach_m);
+  const ofB = wallsWithin(b, p, reach_m);
   let least = Infinity;
-  for (let i = 0; i < a.length; i += 1) {
+  for (const i of ofA) {
     const a1 = a[i]!;
     const a2 = a[(i + 1) % a.length]!;
-    for (let j = 0; j < b.length; j += 1) {
+    for (const j of ofB) {
       const b1 = b[j]!;
       const b2 = b[(j + 1) % b.length]!;
-      if (isCrossing(a1, a2, b1, b2)) return 0;
-      least = Math.min(least, toSegment(a1, b1, b2), toSegment(b1, a1, a2));
+      if (isCrossing(a1, a2, b1, b2)) return { gap_m: 0, work: work + ofA.length * ofB.length };
+      least = Math.min(
+        least,
+        toSegment(a1, b1, b2),
+        toSegment(a2, b1, b2),
+        toSegment(b1, a1, a2),
+        toSegment(b2, a1, a2),
+      );
     }
   }
-  return least;
+  return { gap_m: least, work: work + ofA.length * ofB.length };
+}
+
+/** Which walls of a ring, by their first corner, touch a box widened by `margin_m`. */
+function wallsWithin(ring: readonly Point[], { west, east, south, north }: Box, margin_m: number): readonly number[] {
+  const walls: number[] = [];
+  for (let i = 0; i < ring.length; i += 1) {
+    const [ax, ay] = ring[i]!;
+    const [bx, by] = ring[(i + 1) % ring.length]!;
+    if (
+      Math.max(ax, bx) >= west - margin_m &&
+      Math.min(ax, bx) <= east + margin_m &&
+      Math.max(ay, by) >= south - margin_m &&
+      Math.min(ay, by) <= north + margin_m
+    )
+      walls.push(i);
+  }
+  return walls;
 }
 
 function toSegment([x, y]: Point, [ax, ay]: Point, [bx, by]: Point): number {

@@ -21,6 +21,7 @@ import { inferSizes } from './infer.js';
 import type { IntakeStudy } from './intake-study.js';
 import { inspectNeighbours, takeInNeighbours } from './neighbours.js';
 import { noteListLengths } from './list-lengths.js';
+import { notePartOf } from './part-of.js';
 import { readPlans } from './plans.js';
 import { makeYearPools, storeYearPools } from './pools.js';
 import { readCells } from './read.js';
@@ -32,7 +33,7 @@ import { openTable } from './table.js';
 import type { Table } from './table.js';
 
 /** Goes into the fingerprint: an intake that reads differently is another inventory. */
-const INTAKE_VERSION = 5;
+const INTAKE_VERSION = 6;
 
 export interface TakenIn {
   readonly inventoryId: string;
@@ -128,6 +129,7 @@ async function takeTable(
     await noteColumn(db, { ...check, action }, shown, `the median height per storey is ${shown} m`);
   }
   await noteNearTwins(db, mapping);
+  await notePartOf(db, mapping);
   await makeYearPools(db, mapping);
   if (pairs !== undefined) {
     await begin();

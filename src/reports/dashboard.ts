@@ -11,8 +11,10 @@ import { spectrumChart } from './dashboard/charts/spectrum.js';
 import { packPage } from './dashboard/pack.js';
 import { BudgetSection, SensitivitySection } from './dashboard/sections/decide.js';
 import { MapSection, OriginsSection, PeriodsSection } from './dashboard/sections/figures.js';
+import { GapsSection } from './dashboard/sections/gaps.js';
 import { ListSection } from './dashboard/sections/list.js';
 import { AllSection, AssumptionsSection, CautionsSection, Foot, InventorySection } from './dashboard/sections/records.js';
+import { SitesSection } from './dashboard/sections/sites.js';
 import { SurveySection } from './dashboard/sections/survey.js';
 import { Top } from './dashboard/sections/top.js';
 import { BASE_STYLE } from './dashboard/style/base.js';
@@ -48,6 +50,8 @@ export function renderDashboard(data: PageData, pageScript: string): string {
         h(PeriodsSection, { data, spectrum, heights }),
         h(MapSection, { chart: map }),
         h(OriginsSection, { chart: provenance }),
+        h(SitesSection, { data }),
+        h(GapsSection, { data }),
         h(SurveySection, { data }),
         h(BudgetSection, { data }),
         h(SensitivitySection, { data }),

@@ -9,6 +9,8 @@ import type { DataTable } from './dashboard/charts/chart.js';
 import { budgetSentences, budgetTable, sensitivitySentences, switchesTable } from './decide/words.js';
 import { madeAt } from './made-at.js';
 import { markdownTable, markdownText } from './markdown.js';
+import { gapsPart } from './gaps/words.js';
+import { sitesPart } from './sites/summary-part.js';
 import { outlookSentence, worthwhileSentence } from './survey/words.js';
 
 /** Longest list printed in full; the rest stands in ranking.csv. */
@@ -25,6 +27,8 @@ export function renderSummary(data: PageData): string {
     ...answerNotes(data).map((note) => markdownText(note)),
     '## The list',
     listPart(data),
+    ...sitesPart(data),
+    ...gapsPart(data),
     ...surveyPart(data),
     ...decidePart(data),
     '## Where the rows went',

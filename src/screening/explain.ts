@@ -8,6 +8,7 @@ import { buildingAt } from '../engineering/building-columns.js';
 import type { Display } from '../engineering/format.js';
 import { handSteps } from '../engineering/hand.js';
 import type { HandStep } from '../engineering/hand.js';
+import type { Site } from '../engineering/page-contract.js';
 import { RESULT_COLUMNS } from '../engineering/results.js';
 import { Trace } from '../engineering/trace.js';
 import { Bug, UserError, showValue } from '../errors.js';
@@ -18,6 +19,7 @@ import { neighboursOf } from './neighbours.js';
 import { readRun } from './page-data.js';
 import type { StoredRun } from './page-data.js';
 import { readBuildings, readPools } from './read-buildings.js';
+import { siteOfBuilding } from './sites.js';
 import { PROGRAM } from './version.js';
 
 export interface Explanation {
@@ -25,6 +27,8 @@ export interface Explanation {
   readonly building: Building;
   readonly name: string | null;
   readonly group: string | null;
+  /** The main building and wings it belongs to, with all members; null where it stands by itself. */
+  readonly site: Site | null;
   readonly result: Assessment | NotRanked;
   readonly steps: readonly HandStep[];
   /** Every column of results.ts as stored. */
@@ -65,6 +69,7 @@ export async function explainBuilding(db: Database, runId: number, id: string, d
     building,
     name: found.name,
     group: found.group,
+    site: await siteOfBuilding(db, run, at),
     result,
     steps: handSteps(trace, display),
     stored: values,

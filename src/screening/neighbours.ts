@@ -7,7 +7,7 @@ import type { Database } from '../store/database.js';
 import { readBuildings, readPools } from './read-buildings.js';
 
 /** Gaps wider than this need no look [judgement]: more than two 20-storey buildings ask for by the height rule. */
-const REACH_M = 2;
+export const REACH_M = 2;
 /** Degrees around a building in which the place of a neighbour may stand: about 220 m to the north. */
 const AROUND = 0.002;
 
@@ -57,7 +57,7 @@ export async function neighboursOf(
   const pools = await readPools(db, inventoryId);
   const neighbours: FoundNeighbour[] = [];
   for (const [other, neighbour] of [...found].sort(([a, x], [b, y]) => x.gap_m - y.gap_m || a - b)) {
-    const { columns } = await readBuildings(db, inventoryId, { from: other, to: other + 1 });
+    const { columns } = await readBuildings(db, inventoryId, { from: other, to: other + 1 }, { places: true });
     neighbours.push({ ...neighbour, building: buildingAt(columns, 0, pools) });
   }
   return neighbours;

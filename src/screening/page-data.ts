@@ -3,6 +3,7 @@ import { BUILDING_NUMBERS, BUILDING_WORDS } from '../engineering/building-column
 import type { BuildingColumns } from '../engineering/building-columns.js';
 import { textInDisplay } from '../engineering/format.js';
 import type { Display } from '../engineering/format.js';
+import { compileContext } from '../engineering/assess/context.js';
 import { settingsFromJson } from '../engineering/assess/settings.js';
 import type { AssessSettings } from '../engineering/assess/settings.js';
 import type { PageData } from '../engineering/page-contract.js';
@@ -15,11 +16,13 @@ import { RANKED_COLUMNS } from '../store/schema.js';
 import { quoteName } from '../store/sql.js';
 import type { ColumnKind } from '../store/vectors.js';
 import { CAUTIONS } from './assumptions.js';
+import { gapsOf } from './gaps.js';
 import { gridRejects } from './grid-rejects.js';
 import { readGrids } from './kept-grids.js';
 import { STRUCTURE_SPEC, knowsStructure, readPools } from './read-buildings.js';
 import { findingCounts } from './summarise.js';
 import type { StoredSummary } from './summarise.js';
+import { pageSites } from './sites.js';
 
 /** Buildings a page carries at most: beyond it the first ranks, and ranking.csv holds all. */
 export const SHOWN_AT_MOST = 20_000;
@@ -91,6 +94,7 @@ export async function pageDataOf(db: Database, runId: number, display: Display):
     resultSpec,
     [runId],
   );
+  const { sites, siteOf } = await pageSites(db, run);
   await db.run('DROP TABLE page_place');
   const read = { ...ofBuildings, ...ofResults } as unknown as Readonly<
     Record<string, readonly (string | null)[] | Float64Array>
@@ -142,6 +146,7 @@ export async function pageDataOf(db: Database, runId: number, display: Display):
       name: texts('name'),
       group: texts('group'),
       part_of: texts('part_of'),
+      site: siteOf,
       lon: numbers('lon'),
       lat: numbers('lat'),
       heritage: texts('heritage'),
@@ -150,6 +155,8 @@ export async function pageDataOf(db: Database, runId: number, display: Display):
         RESULT_COLUMNS.map(({ name, kind }) => [name, kind === 'text' ? texts(`r_${name}`) : numbers(`r_${name}`)]),
       ),
     },
+    sites,
+    gaps: await gapsOf(db, run, run.summary.list_size, () => compileContext(run.settings, grids)),
     grids: Object.fromEntries([...grids].map(([name, grid]) => [name, cropped(grid, place.lon, place.lat)])),
     display,
   };

@@ -67,6 +67,8 @@ export interface ReadOptions {
   readonly ids?: boolean;
   /** Read where they stand too. */
   readonly places?: boolean;
+  /** Only the buildings whose index stands in this temporary table of one column `building_index`. */
+  readonly among?: string;
 }
 
 /** The buildings of one range of indices, in their order. */
@@ -74,11 +76,11 @@ export async function readBuildings(
   db: Database,
   inventoryId: string,
   { from, to }: IndexRange,
-  { every = 1, ids = true, places = false }: ReadOptions = {},
+  { every = 1, ids = true, places = false, among }: ReadOptions = {},
 ): Promise<BuildingBlock> {
   const number = await db.value('SELECT inventory_number FROM inventory WHERE inventory_id = ?', [inventoryId]);
   if (typeof number !== 'number') throw new Bug(`inventory ${inventoryId} is not in the database`);
-  const where = `WHERE inventory_number = ? AND building_index >= ? AND building_index < ? ${every > 1 ? `AND building_index % ${String(Math.trunc(every))} = 0` : ''}`;
+  const where = `WHERE inventory_number = ? AND building_index >= ? AND building_index < ? ${every > 1 ? `AND building_index % ${String(Math.trunc(every))} = 0` : ''} ${among === undefined ? '' : `AND building_index IN (SELECT building_index FROM ${quoteName(among)})`}`;
   const spec: Readonly<Record<string, ColumnKind>> = {
     ...CORE_SPEC,
     ...(ids ? { id: 'text' } : {}),

@@ -172,6 +172,15 @@ export class Database {
 
   /** Appends rows to `table`; one array per column of the table, in the table's order, all of one length. */
   async append(table: string, columns: readonly WritableColumn[]): Promise<void> {
+    await this.#append(table, null, columns);
+  }
+
+  /** The same to a temporary table; in a database open for reading the other way is refused even there. */
+  async appendTemporary(table: string, columns: readonly WritableColumn[]): Promise<void> {
+    await this.#append(table, 'temp', columns);
+  }
+
+  async #append(table: string, catalog: 'temp' | null, columns: readonly WritableColumn[]): Promise<void> {
     const rows = columns[0]?.length ?? 0;
     if (columns.some((column) => column.length !== rows)) throw new Bug(`append to ${table}: columns differ in length`);
     const types = columns.map((column) => {
@@ -180,7 +189,7 @@ export class Database {
       return 'codes' in column ? ENUM(column.words) : VARCHAR;
     });
     try {
-      const appender = await this.#connection.createAppender(table);
+      const appender = await this.#connection.createAppender(table, null, catalog);
       for (let from = 0; from < rows; from += 2048) {
         const chunk = DuckDBDataChunk.create(types, Math.min(2048, rows - from));
         columns.forEach((column, index) => {

@@ -7,6 +7,7 @@ import { pathToFileURL } from 'node:url';
 import { chromium } from 'playwright-core';
 import type { Browser, Page } from 'playwright-core';
 import { afterAll, afterEach, beforeAll, describe, expect, inject, it } from 'vitest';
+import { formatNumber } from '../../src/engineering/format.js';
 import { LIKELY_WEAK } from '../../src/engineering/results.js';
 import { readPageScript, renderDashboard } from '../../src/reports/dashboard.js';
 import { HOSTILE_NAME, pageData } from '../support/page-data.js';
@@ -156,6 +157,54 @@ describe('renderDashboard', () => {
       await page.locator('#make-hand').click();
       expect(await page.locator('.agrees').textContent()).toMatch(/The two are identical|not ranked/);
     }
+  });
+
+  it('leads from one building of a site to the others', async () => {
+    const page = await open();
+    const [site] = data.sites.sites;
+    const ids = site!.members.map(({ id }) => id);
+    expect(await page.locator('#sites-table tbody tr').count()).toBe(1);
+    expect(await page.locator('#sites-table td.members a').allTextContents()).toEqual(ids);
+    await page.locator('#sites-table td.members a').nth(1).click();
+    const others = page.locator('#site-members li');
+    await others.first().waitFor();
+    expect(await others.locator('a').allTextContents()).toEqual(ids.filter((_, at) => at !== 1));
+    expect(await others.first().textContent()).toContain(`: rank ${String(site!.members[0]!.rank)}, chance `);
+    await others.locator('a').last().click();
+    await page.locator('#sheet-title', { hasText: ids.at(-1)! }).waitFor();
+    await page.goto(`${address}#building=${data.buildings.inputs.id[0]!}`);
+    await page.locator('#sheet-title', { hasText: data.buildings.inputs.id[0]! }).waitFor();
+    expect(await page.locator('#site-members').count()).toBe(0);
+  });
+
+  it('tells short gaps, and in a sheet all neighbours with what is needed', async () => {
+    const page = await open();
+    const { pairs, short } = data.gaps!;
+    expect(await page.locator('#gaps-table tbody tr').count()).toBe(short);
+    await page.locator('#gaps-table tbody td a').first().click();
+    const rows = page.locator('#neighbours-table tbody tr');
+    await rows.first().waitFor();
+    const own = pairs[0]!.id_b;
+    const theirs = pairs.filter(({ id_a, id_b }) => id_a === own || id_b === own);
+    expect(await rows.count()).toBe(theirs.length);
+    expect(await rows.first().locator('td').allTextContents()).toEqual([
+      '0',
+      formatNumber(pairs[0]!.needed_m, 2),
+      'root of the squares',
+      formatNumber(pairs[0]!.double_difference_m, 2),
+      formatNumber(pairs[0]!.by_height_m, 2),
+      expect.stringContaining('not at one level'),
+      'short, by the height rule too',
+    ]);
+    await rows.first().locator('a').click();
+    await page.locator('#sheet-title', { hasText: pairs[0]!.id_a }).waitFor();
+    const wide = pairs.at(-1)!.id_b;
+    await page.goto(`${address}#building=${wide}`);
+    await page.locator('#sheet-title', { hasText: wide }).waitFor();
+    expect(await rows.last().locator('td').last().textContent()).toBe('wide enough');
+    const alone = data.buildings.inputs.id[20]!;
+    await page.goto(`${address}#building=${alone}`);
+    await page.getByText('No neighbour within 2.0 m is known.').waitFor();
   });
 
   it('opens a sheet from the list and from a mark of a chart', async () => {

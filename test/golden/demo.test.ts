@@ -27,7 +27,7 @@ function alike(a: string, b: string): boolean {
 }
 
 describe('the committed demo reports', () => {
-  it.each(['ranking.csv', 'rejects.csv'])('%s says what the demo gives today', (name) => {
+  it.each(['ranking.csv', 'rejects.csv', 'sites.csv', 'gaps.csv'])('%s says what the demo gives today', (name) => {
     const [now, then] = [table(fresh, name), table(committed, name)];
     expect(now.length).toBe(then.length);
     now.forEach((row, i) => {

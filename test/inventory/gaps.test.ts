@@ -1,5 +1,5 @@
 import { describe, expect, it } from 'vitest';
-import { gapsWithin } from '../../src/inventory/gaps.js';
+import { gapsWithin, measureGaps } from '../../src/inventory/gaps.js';
 import { random } from '../support/engineering-random.js';
 
 // WGS 84 at 35° (from memory of a printed table): a degree is 91,288 m to the east and 110,941 m to the north.
@@ -51,5 +51,65 @@ describe('gapsWithin', () => {
     );
     expect(grid.length).toBeGreaterThan(100);
     expect(grid).toEqual(each);
+  });
+
+  it('finds the nearest corners of outlines with many, as comparing all with all does', () => {
+    const { uniform } = random(8);
+    const ring = (x: number, y: number): (readonly [number, number])[] =>
+      Array.from({ length: 40 }, (_, i) => {
+        const r = 8 + 2 * uniform();
+        return [x + r * Math.cos((i * Math.PI) / 20), y + r * Math.sin((i * Math.PI) / 20)] as const;
+      });
+    const wkt = (points: readonly (readonly [number, number])[]): string =>
+      `POLYGON ((${[...points, points[0]!].map(([x, y]) => `${String(-40 + x / EAST)} ${String(35 + y / NORTH)}`).join(', ')}))`;
+    // each corner of the one against each wall of the other, both ways
+    const toWalls = ([x, y]: readonly [number, number], of: readonly (readonly [number, number])[]): number =>
+      Math.min(
+        ...of.map(([ax, ay], i) => {
+          const [bx, by] = of[(i + 1) % of.length]!;
+          const [dx, dy] = [bx - ax, by - ay];
+          const t = Math.min(1, Math.max(0, ((x - ax) * dx + (y - ay) * dy) / (dx * dx + dy * dy)));
+          return Math.hypot(ax + t * dx - x, ay + t * dy - y);
+        }),
+      );
+    for (let round = 0; round < 40; round += 1) {
+      const [one, other] = [ring(0, 0), ring(21 + 2 * uniform(), 4 * uniform())];
+      const least = Math.min(...one.map((at) => toWalls(at, other)), ...other.map((at) => toWalls(at, one)));
+      expect(gapsWithin([wkt(one), wkt(other)], 6)[0]!.gap_m).toBeCloseTo(least, 3);
+    }
+  });
+});
+
+describe('measureGaps', () => {
+  const row = Array.from({ length: 30 }, (_, i) => box(10.5 * i, 0, 10, 8));
+
+  it('counts only pairs with a wanted one', () => {
+    const { gaps, complete } = measureGaps(row, 1, { wanted: (place) => place === 7 });
+    expect(gaps.map(({ a, b }) => [a, b])).toEqual([
+      [6, 7],
+      [7, 8],
+    ]);
+    expect(complete).toBe(true);
+  });
+
+  it('passes over buildings of one and the same outline', () => {
+    const found = measureGaps([row[0]!, row[1]!, row[0]!, row[0]!], 1);
+    expect(found.alike).toBe(3);
+    expect(found.gaps.map(({ a, b }) => [a, b])).toEqual([
+      [0, 1],
+      [1, 2],
+      [1, 3],
+    ]);
+  });
+
+  it('breaks off where outlines lie upon one another in masses, and says so', () => {
+    const heap = Array.from({ length: 3000 }, (_, i) => box(0.001 * i, 0, 20, 10));
+    const began = performance.now();
+    const found = measureGaps(heap, 1, { steps: 200_000 });
+    expect(found.complete).toBe(false);
+    expect(found.gaps.length).toBeGreaterThan(0);
+    // all 4.5 million pairs would be found 0 m apart
+    expect(found.gaps.length).toBeLessThan(50_000);
+    expect(performance.now() - began).toBeLessThan(3000);
   });
 });

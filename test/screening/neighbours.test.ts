@@ -28,6 +28,8 @@ describe('neighboursOf', () => {
     ]);
     expect(found.map(({ gap_m }) => gap_m)).toEqual([0.1, expect.closeTo(0.3, 3), expect.closeTo(0.8, 3)]);
     expect(found.map(({ how }) => how.slice(0, 8))).toEqual(['given in', 'measured', 'measured']);
+    // they know where they stand, as a spectrum on a grid asks
+    expect(found[1]!.building.lon).toBeCloseTo(27.8 / 111_320, 9);
     expect(await neighboursOf(db, inventoryId, 3, 'D')).toEqual([]);
   });
 });

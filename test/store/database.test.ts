@@ -116,6 +116,16 @@ describe('Database', () => {
     db.close();
   });
 
+  it('appends to temporary tables of a database open for reading', async () => {
+    const path = join(folder, 'reading.duckdb');
+    (await openDatabase({ path })).close();
+    const db = await openDatabase({ path, readOnly: true });
+    await db.run('CREATE TEMP TABLE t (a INTEGER)');
+    await db.appendTemporary('t', [Int32Array.of(3, 4)]);
+    expect(await db.value('SELECT sum(a) FROM t')).toBe(7);
+    db.close();
+  });
+
   it('appends arrays and reads the same back', async () => {
     const db = await openDatabase({ path: ':memory:' });
     await db.run('CREATE TABLE t (a DOUBLE, b INTEGER, c VARCHAR)');

@@ -3,11 +3,20 @@ import { buildingAt, BUILDING_NUMBERS, BUILDING_WORDS } from '../../src/engineer
 import type { BuildingColumns } from '../../src/engineering/building-columns.js';
 import { assess, isRanked } from '../../src/engineering/assess/assess.js';
 import type { Assessment, NotRanked } from '../../src/engineering/assess/assess.js';
+import { closenessOf, swayOf } from '../../src/engineering/assess/neighbours.js';
 import { compileContext } from '../../src/engineering/assess/context.js';
 import { IRREGULARITY, SPREADS } from '../../src/engineering/assess/settings.js';
 import type { AssessSettings } from '../../src/engineering/assess/settings.js';
 import { normalCdf } from '../../src/engineering/numeric/normal.js';
-import type { PageBuildings, PageData, PageSummary } from '../../src/engineering/page-contract.js';
+import type {
+  GapPair,
+  PageBuildings,
+  PageData,
+  PageGaps,
+  PageSummary,
+  Site,
+} from '../../src/engineering/page-contract.js';
+import { siteFigures } from '../../src/engineering/priority/sites.js';
 import { RESULT_COLUMNS } from '../../src/engineering/results.js';
 import { SURE } from '../../src/screening/summarise.js';
 
@@ -245,7 +254,8 @@ export function pageData({
     pools,
     name: text('name'),
     group: text('group'),
-    part_of: rows.map(() => null),
+    part_of: rows.map((_, i) => (SITE.slice(1).includes(i) ? (rows[SITE[0]!]?.['id'] as string) : null)),
+    site: rows.map((_, i) => (hasSite(rows.length) && SITE.includes(i) ? 0 : null)),
     lon: place('lon'),
     lat: place('lat'),
     heritage: text('heritage'),
@@ -256,8 +266,84 @@ export function pageData({
     summary: summaryOf(rows, results, ranked.length, listSize),
     settings: SETTINGS,
     buildings,
+    sites: hasSite(rows.length) ? { all: 1, buildings: SITE.length, sites: [siteOf(rows, results)] } : NO_SITES,
+    gaps: gapsOfRows(rows, results, (i) => swayOf(buildingAt(buildings.inputs, i, pools), context)),
     grids: {},
     display,
+  };
+}
+
+/** Places of neighbours, gap, what the table says of floors; the last is wide enough. */
+const PAIRS = [
+  [0, 1, 0, 'no'],
+  [0, 4, 0.01, null],
+  [4, 9, 0.02, 'yes'],
+  [9, 12, 1.9, null],
+] as const;
+
+function gapsOfRows(
+  rows: readonly Row[],
+  results: readonly Row[],
+  sway: (i: number) => ReturnType<typeof swayOf>,
+): PageGaps {
+  const pairs = PAIRS.filter(([, b]) => b < rows.length).flatMap(([a, b, gap_m, floors_aligned]): GapPair[] => {
+    const [one, other] = [sway(a), sway(b)];
+    if (one === null || other === null) return [];
+    const found = closenessOf(one, other, { gap_m, floors_aligned, how: 'given' });
+    const name = (i: number): string | null => rows[i]?.['name'] as string | null;
+    const rank = (i: number): number | null => results[i]?.['rank'] as number | null;
+    return [
+      {
+        id_a: one.id,
+        id_b: other.id,
+        name_a: name(a),
+        name_b: name(b),
+        rank_a: rank(a),
+        rank_b: rank(b),
+        gap_m,
+        gap_from: 'given',
+        floors_aligned,
+        needed_m: found.needed_m,
+        double_difference_m: found.double_difference_m,
+        by_height_m: found.by_height_m,
+        much_taller: found.muchTaller,
+      },
+    ];
+  });
+  const short = pairs.filter(({ gap_m, needed_m, by_height_m }) => gap_m < needed_m || gap_m < by_height_m).length;
+  return { of: 'all', first: null, complete: true, alike: 0, unknown: 0, pairs, short };
+}
+
+/** Places of a main building and what is joined to it, the last of them not ranked in sixty. */
+const SITE: readonly number[] = [4, 9, 30, 59];
+const NO_SITES = { all: 0, buildings: 0, sites: [] };
+const hasSite = (count: number): boolean => count > SITE.at(-1)!;
+
+function siteOf(rows: readonly Row[], results: readonly Row[]): Site {
+  const take = (name: string): number[] => SITE.map((i) => (results[i]?.[name] ?? NaN) as number);
+  const { ranked, bestRank, chance, expected, people } = siteFigures(
+    { rank: take('rank'), chance: take('chance'), people: take('people_exposed') },
+    0,
+    SITE.length,
+  );
+  const members = SITE.map((i) => ({
+    id: rows[i]?.['id'] as string,
+    name: rows[i]?.['name'] as string | null,
+    rank: results[i]?.['rank'] as number | null,
+    chance: results[i]?.['chance'] as number | null,
+    not_ranked: results[i]?.['not_ranked'] as string | null,
+  }));
+  const { id, name } = members[0]!;
+  return {
+    id,
+    name,
+    buildings: SITE.length,
+    ranked,
+    best_rank: bestRank,
+    chance,
+    expected_in_list: expected,
+    people_exposed: people,
+    members,
   };
 }
 

@@ -8,6 +8,8 @@ import type { Fact } from './facts.js';
 import { inputFacts, placeSentences, resultFacts } from './facts.js';
 import { estimatesMaker } from '../estimates/building.js';
 import { handMaker } from './hand.js';
+import { neighbourParts } from './neighbours.js';
+import { siteParts } from './site.js';
 
 /** Wires the dialog and returns the function that opens the sheet of building `i`. */
 export function startSheet(p: Portfolio): (i: number) => void {
@@ -103,10 +105,12 @@ function sheetOf(
     facts(identity),
     el('h3', {}, 'Place in the ranking'),
     ...placeSentences(p, i).map((sentence) => el('p', {}, sentence)),
+    ...siteParts(p, i),
     ...(warnings.length === 0
       ? []
       : [el('h3', {}, 'What to know'), el('ul', { class: 'plain' }, ...warnings.map((text) => el('li', {}, text)))]),
     ...(ranked ? [el('h3', {}, 'Period, demand, capacity'), facts(resultFacts(p, i))] : []),
+    ...neighbourParts(p, i),
     el('h3', {}, 'What it rests on'),
     facts(inputFacts(p, i)),
     el('h3', {}, 'Estimates of the period'),

@@ -40,7 +40,7 @@ export function addStudyCommands(program: Command, keep: Keep): void {
     .command('screen')
     .summary('rank the buildings, keep the run, write the reports')
     .description(
-      'Takes in the inventory, assesses and ranks every building, keeps the run in study.duckdb and writes dashboard.html, ranking.csv, ranking.parquet, rejects.csv and summary.md.',
+      'Takes in the inventory, assesses and ranks every building, keeps the run in study.duckdb and writes dashboard.html, summary.md, ranking.csv, ranking.parquet and rejects.csv; where there are sites of several buildings, sites.csv; where neighbours stand too close, gaps.csv.',
     )
     .argument('<study>', 'the study file')
     .option('--note <text>', 'a note kept with the run', '')

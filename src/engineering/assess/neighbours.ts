@@ -45,11 +45,29 @@ export interface Neighbour {
 /** What a gap falls short of, none of it where it is wide enough. */
 export interface Closeness {
   readonly gap_m: number;
+  /** By the root of the squares, of which 0.7 where floors are at one level. */
   readonly needed_m: number;
+  /** By the double difference: never more than the root of the squares. */
+  readonly double_difference_m: number;
+  /** By height alone. */
+  readonly by_height_m: number;
   readonly short: boolean;
   readonly shortByHeight: boolean;
+  /** One is half as tall again as the other, or more. */
+  readonly muchTaller: boolean;
   /** Reasons that make striking worse. */
   readonly worse: readonly string[];
+}
+
+/** What the needed gap is, in words. */
+export function neededWords(floors_aligned: Neighbour['floors_aligned']): string {
+  return floors_aligned === 'yes' ? '0.7 of the root of the squares, floors at one level' : 'root of the squares';
+}
+
+/** Whether floors are at one level, in words. */
+export function floorsWords(floors_aligned: Neighbour['floors_aligned']): string {
+  if (floors_aligned === null) return 'not known';
+  return floors_aligned === 'yes' ? 'at one level' : 'not at one level';
 }
 
 const DAMPING = 0.05;
@@ -85,17 +103,16 @@ export function closenessOf(
   const needed_m = apply(aligned ? GAP_ALIGNED : GAP_SRSS, both, trace);
   const periods = { damping_1: DAMPING, damping_2: DAMPING, period_1_s: one.period_s, period_2_s: other.period_s };
   const correlation = Math.min(1, apply(GAP_CORRELATION, periods, trace));
-  apply(GAP_DOUBLE_DIFFERENCE, { ...both, correlation }, trace);
+  const double_difference_m = apply(GAP_DOUBLE_DIFFERENCE, { ...both, correlation }, trace);
   const byHeight = apply(
     GAP_BY_HEIGHT[seismicity(Math.max(one.plateau_g, other.plateau_g))],
     { shorter_height_m },
     trace,
   );
+  const muchTaller = Math.max(one.height_m, other.height_m) >= MUCH_TALLER * shorter_height_m;
   const worse = [
     ...(floors_aligned === 'no' ? ['floors not at one level: a slab may strike columns at mid-height'] : []),
-    ...(Math.max(one.height_m, other.height_m) >= MUCH_TALLER * shorter_height_m
-      ? ['one is half as tall again as the other']
-      : []),
+    ...(muchTaller ? ['one is half as tall again as the other'] : []),
   ];
   const short = gap_m < needed_m;
   trace?.choice({
@@ -111,5 +128,14 @@ export function closenessOf(
   });
   for (const what of worse)
     trace?.value('makes striking worse', what, 'computed', 'guidance of New Zealand and the US, from memory');
-  return { gap_m, needed_m, short, shortByHeight: gap_m < byHeight, worse };
+  return {
+    gap_m,
+    needed_m,
+    double_difference_m,
+    by_height_m: byHeight,
+    short,
+    shortByHeight: gap_m < byHeight,
+    muchTaller,
+    worse,
+  };
 }

@@ -50,8 +50,20 @@ export interface WallFrameMode {
 /** Steps of the height for the integrals of the shape (Simpson). */
 const STEPS = 2000;
 
+/** Modes by ratio: an inventory asks for a few ratios over and over, and each costs thousands of exponentials. */
+const KEPT = new Map<number, WallFrameMode>();
+const MOST_KEPT = 64;
+
 /** The fundamental mode of wall with frame: root, participation, effective mass, drift. */
 export function wallFrameMode(alpha: number): WallFrameMode {
+  const kept = KEPT.get(alpha);
+  if (kept !== undefined) return kept;
+  const mode = workedMode(alpha);
+  if (KEPT.size < MOST_KEPT) KEPT.set(alpha, mode);
+  return mode;
+}
+
+function workedMode(alpha: number): WallFrameMode {
   const gamma = wallFrameRoot(alpha);
   const beta = Math.sqrt(gamma * gamma + alpha * alpha);
   const e = exp(-beta);

@@ -3,6 +3,7 @@
  * Unknown numbers travel as null. The page's unpack.ts is the other half; a test sends data through both.
  */
 import { BUILDING_NUMBERS, BUILDING_WORDS } from '../../engineering/building-columns.js';
+import { GAP_COLUMNS } from '../../engineering/page-contract.js';
 import type { PageData } from '../../engineering/page-contract.js';
 import { RESULT_COLUMNS } from '../../engineering/results.js';
 import { STRUCTURE_NUMBERS, STRUCTURE_WORDS } from '../../engineering/structure-columns.js';
@@ -47,6 +48,19 @@ export function packColumn(values: ArrayLike<Cell>, digits?: number): Packed {
   return [1, [...placeOf.keys()], places];
 }
 
+/** Pairs with a shown building, by column, without the names, which the page has. */
+function packGaps({ gaps, buildings }: PageData): unknown {
+  if (gaps === null) return null;
+  const shown = new Set(buildings.inputs.id);
+  const pairs = gaps.pairs.filter(({ id_a, id_b }) => shown.has(id_a) || shown.has(id_b));
+  const column = (name: (typeof GAP_COLUMNS)[number]): Packed =>
+    packColumn(
+      pairs.map((pair) => (name === 'much_taller' ? Number(pair[name]) : pair[name])),
+      4,
+    );
+  return { ...gaps, pairs: Object.fromEntries(GAP_COLUMNS.map((name) => [name, column(name)])) };
+}
+
 /** Page data with every column packed. */
 export function packPage(data: PageData): unknown {
   const { buildings } = data;
@@ -54,6 +68,7 @@ export function packPage(data: PageData): unknown {
   const { structure } = inputs;
   return {
     ...data,
+    gaps: packGaps(data),
     buildings: {
       shown: buildings.shown,
       all: buildings.all,
@@ -74,6 +89,7 @@ export function packPage(data: PageData): unknown {
       name: packColumn(buildings.name),
       group: packColumn(buildings.group),
       part_of: packColumn(buildings.part_of),
+      site: packColumn(buildings.site),
       heritage: packColumn(buildings.heritage),
       first_row: packColumn(buildings.first_row),
       results: Object.fromEntries(

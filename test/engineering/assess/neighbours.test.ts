@@ -29,6 +29,15 @@ describe('closenessOf', () => {
     expect(closenessOf(a, b, { ...GAP, gap_m: 0.151 })).toMatchObject({ short: false, shortByHeight: false });
   });
 
+  it('hands over what each rule asks', () => {
+    // one period, one damping: the motions are alike, and only the difference of the two is needed: 0.12 − 0.09
+    const found = closenessOf(sway('A', 10, 0.12), sway('B', 10, 0.09), GAP);
+    expect(found.double_difference_m).toBeCloseTo(0.03, 12);
+    expect(found.by_height_m).toBeCloseTo(0.15, 12);
+    expect(found.muchTaller).toBe(false);
+    expect(closenessOf(sway('A', 15, 0.12), sway('B', 10, 0.09), GAP).muchTaller).toBe(true);
+  });
+
   it('takes the sway at the height of the shorter, and says what makes it worse', () => {
     const found = closenessOf(sway('A', 20, 0.24), sway('B', 10, 0.09), { ...GAP, floors_aligned: 'no' });
     expect(found.needed_m).toBeCloseTo(0.15, 12);

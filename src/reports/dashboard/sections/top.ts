@@ -11,12 +11,21 @@ const CONTENTS: readonly (readonly [string, string])[] = [
   ['periods', 'Spectrum and periods'],
   ['places', 'Map'],
   ['origins', 'Where the numbers came from'],
+  ['sites', 'Sites'],
+  ['gaps', 'Short gaps'],
   ['survey', 'What to find out next'],
+  ['budget', 'What the money buys'],
+  ['sensitivity', 'What the list hangs on'],
   ['all', 'All buildings'],
   ['inventory', 'State of the inventory'],
   ['assumptions', 'Assumptions'],
   ['cautions', 'Cautions'],
 ];
+
+/** Sections that stand only where there is something to tell. */
+function isThere(id: string, data: PageData): boolean {
+  return id === 'sites' ? data.sites.all > 0 : id !== 'gaps' || data.gaps !== null;
+}
 
 export function Top({ data }: { readonly data: PageData }): ComponentChild {
   const { summary } = data;
@@ -43,6 +52,6 @@ export function Top({ data }: { readonly data: PageData }): ComponentChild {
         h('p', { class: 'quiet' }, h('a', { href: '#cautions' }, 'All cautions')),
       ),
     ),
-    h('nav', { class: 'contents', 'aria-label': 'Contents' }, h('ul', null, CONTENTS.map(([id, title]) => h('li', null, h('a', { href: `#${id}` }, title))))),
+    h('nav', { class: 'contents', 'aria-label': 'Contents' }, h('ul', null, CONTENTS.filter(([id]) => isThere(id, data)).map(([id, title]) => h('li', null, h('a', { href: `#${id}` }, title))))),
   );
 }
