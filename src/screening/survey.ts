@@ -7,10 +7,12 @@ import { buildingReader } from '../engineering/building-columns.js';
 import type { SurveyVisit } from '../engineering/page-contract.js';
 import type { Candidate, Cost, Limits, PlannedVisit, Visit } from '../engineering/priority/campaign.js';
 import { planCampaign } from '../engineering/priority/campaign.js';
+import type { Mixture } from '../engineering/priority/mixture.js';
 import { commonTo, rankBasis } from '../engineering/priority/rank.js';
 import type { RankBasis } from '../engineering/priority/rank.js';
 import type { Edge, Unknown } from '../engineering/priority/survey-value.js';
-import { mostWorth, seenFromEdge, shareOf, worthOf } from '../engineering/priority/survey-value.js';
+import { KNOWN_CHANCE, edgeOf, mostWorth, shareOf, worthOf } from '../engineering/priority/survey-value.js';
+import { seenFromEdge } from '../engineering/priority/unknowns-from-edge.js';
 import type { HazardGrids } from '../engineering/spectrum/grid.js';
 import { UserError } from '../errors.js';
 import { indexRanges } from '../store/chunks.js';
@@ -123,10 +125,10 @@ export async function planOn(
   report: Report = () => undefined,
 ): Promise<SurveyPlan> {
   report('weighing', 0);
-  const { order, threshold } = ranked;
+  const { order, mixtures } = ranked;
   const common = commonTo(assessed, ranked);
-  const edge: Edge = { threshold, unit: assessed.median[order[Math.floor((order.length - 1) / 2)]!]! };
-  const { chosen, worthVisiting } = mostPromising(assessed, ranked, edge);
+  const edge = edgeOf(ranked, { median: assessed.median, mixtures }, listSize);
+  const { chosen, worthVisiting } = mostPromising(assessed.index, mixtures, edge);
   const placeOf = new Map(Array.from(assessed.index, (index, at) => [index, at] as const));
   const context = compileContext(settings, grids);
   const candidates: Candidate[] = [];
@@ -171,10 +173,7 @@ export async function planOn(
     money: planned.at(-1)?.money ?? 0,
     expected_wrong_before: expectedWrong,
     expected_wrong_after: steps.at(-1)?.expected_wrong_places ?? expectedWrong,
-    expected_wrong_least: Math.max(
-      0,
-      expectedWrong - 0.5 * sumOf(candidates, ({ worth }) => worth.wrongOf(0) - worth.wrongOf(worth.value.length - 1)),
-    ),
+    expected_wrong_least: leastWrong(candidates, expectedWrong),
     ranked: assessed.id.length,
     worth_visiting: worthVisiting,
     weighed: candidates.length,
@@ -184,13 +183,22 @@ export async function planOn(
   };
 }
 
+/** Wrong places with everything known of the candidates that a visit finds out: the list then ends at its threshold. */
+function leastWrong(candidates: readonly Candidate[], today: number): number {
+  const mended = sumOf(
+    candidates,
+    ({ worth: { wrongOf, value } }) => wrongOf(0, KNOWN_CHANCE) - wrongOf(value.length - 1, KNOWN_CHANCE),
+  );
+  return Math.max(0, today - 0.5 * mended);
+}
+
 /** Indices of the buildings whose S is worth knowing at all, the most promising where there are too many to weigh. */
 function mostPromising(
-  { index, median }: Assessed,
-  { mixtures }: SurveyRanked,
+  index: Int32Array,
+  mixtures: readonly Mixture[],
   edge: Edge,
 ): { readonly chosen: readonly number[]; readonly worthVisiting: number } {
-  const most = Float64Array.from(mixtures, (mixture, i) => mostWorth(mixture, median[i]!, edge));
+  const most = Float64Array.from(mixtures, (mixture) => mostWorth(mixture, edge));
   const largest = most.reduce((a, b) => Math.max(a, b), 0);
   const promising = Array.from(most.keys()).filter((i) => most[i]! > NOTHING * largest);
   const chosen = promising

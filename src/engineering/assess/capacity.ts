@@ -52,6 +52,20 @@ function hasNoRow(
   return year >= (familyOf(history).noRowFrom[system] ?? Infinity) || hasRow?.(system) === false;
 }
 
+/** True where the case was designed for earthquakes in a direction at least, so that its drawings can state a coefficient. */
+export function isDesigned(
+  {
+    system,
+    system_transverse,
+    edition,
+    strengthened,
+  }: Pick<Case, 'system' | 'system_transverse' | 'edition' | 'strengthened'>,
+  { settings: { codeHistory } }: AssessContext,
+): boolean {
+  if (edition === null) return false;
+  return [system, system_transverse].some((one) => !hasNoRow(one, edition, strengthened, codeHistory));
+}
+
 /** The memory of capacities that all cases of a system, an edition and a level of retrofit share. */
 export function designOf(
   system: System,

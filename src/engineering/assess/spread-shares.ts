@@ -7,7 +7,7 @@ import { casesOf } from './cases.js';
 import { slopeFor } from './context.js';
 import type { AssessContext, ContextSpectrum } from './context.js';
 import { isChecked } from './strength-check.js';
-import { unknownsOf } from './unknowns.js';
+import { designedShare, unknownsOf } from './unknowns.js';
 
 export interface SpreadShare {
   readonly what: string;
@@ -46,8 +46,13 @@ export function spreadShares(
     const k = slopeFor(context, spectrum.name);
     const cases = casesOf(building, context);
     const checked = typeof cases !== 'string' && cases.list.every((which) => isChecked(building, which, context));
-    const { overstrength, era, strengthCheck } = spreads;
-    const variance = checked ? strengthCheck * strengthCheck : overstrength * overstrength + era * era;
+    const { overstrength, era, eraTable, strengthCheck } = spreads;
+    // where nothing was designed for earthquakes no drawing settles what the least strength is worth
+    const undesigned =
+      typeof cases === 'string' || building.design_base_shear_coefficient > 0 ? 0 : 1 - designedShare(cases, context);
+    const variance = checked
+      ? strengthCheck * strengthCheck
+      : overstrength * overstrength + era * era + undesigned * eraTable * eraTable;
     shares.push({
       what: checked ? 'the strength check itself' : 'strength beyond what a code asks, and scatter within an era',
       share: Math.min(1, (k * k * variance) / (sd * sd)),

@@ -4,7 +4,8 @@ import { MixtureBuilder, MixturePool, labelOf } from '../priority/mixture.js';
 import type { Mixture } from '../priority/mixture.js';
 import type { Learnable, Unknowns } from '../priority/survey-value.js';
 import { casesOf } from './cases.js';
-import type { Case } from './case-memory.js';
+import { isDesigned } from './capacity.js';
+import type { Case, Cases } from './case-memory.js';
 import { chooseSpectrum } from './choose-spectrum.js';
 import { slopeFor } from './context.js';
 import type { AssessContext } from './context.js';
@@ -80,13 +81,21 @@ export function unknownsOf(building: Building, context: AssessContext, scratch: 
   if (settings.rankBy === 'people') addPeople(building, context, people.sigma, add);
   // drawings settle what era tables and the years around a change of edition leave open
   const byDrawings = !(building.capacity_sa_g > 0) && !(building.design_base_shear_coefficient > 0);
-  if (settings.rankBy !== 'demand' && byDrawings)
-    add(
-      'drawings',
-      numbered(edition),
-      isChecked(building, cases.list[0]!, context) ? 0 : slope_k * settings.spreads.eraTable,
-    );
+  if (settings.rankBy !== 'demand' && byDrawings) {
+    const { eraTable } = settings.spreads;
+    const learnt = isChecked(building, cases.list[0]!, context)
+      ? 0
+      : eraTable * eraTable * designedShare(cases, context);
+    add('drawings', numbered(edition), slope_k * Math.sqrt(learnt));
+  }
   return { parts, learnable };
+}
+
+/** Chance that the building was designed for earthquakes: the drawings of others state no coefficient, and nothing takes their table's doubt away. */
+export function designedShare({ list }: Cases, context: AssessContext): number {
+  let share = 0;
+  for (const which of list) if (isDesigned(which, context)) share += which.chance;
+  return Math.min(share, 1);
 }
 
 /** The nodes of one case at one height, without a soft or weak storey (0) or with one (1). */
@@ -151,7 +160,9 @@ function addPeople(
   const counted = occupants_peak >= 0;
   const rooted = (variance: number): number => Math.sqrt(Math.max(variance, 0));
   const ofArea = counted ? 0 : area.sigma * area.sigma;
-  const knownUse = Math.min(sigma, rooted(spreads.peopleKnownUse * spreads.peopleKnownUse + ofArea));
+  // people that are counted leave the hours open, which the use tells
+  const own = counted ? spreads.peopleCounted : spreads.peopleKnownUse;
+  const knownUse = Math.min(sigma, rooted(own * own + ofArea));
   if (use === 'unknown') add('use', null, rooted(sigma * sigma - knownUse * knownUse));
   if (!counted) add('occupants', null, rooted(knownUse * knownUse - spreads.peopleCounted * spreads.peopleCounted));
 }

@@ -1,19 +1,18 @@
 /**
  * What it is worth to learn of a building before the list is drawn up.
  *
- * Two actions: the building is on the list or not. On it, it is worth its S, and takes the place of one worth the threshold T. What is
+ * Two actions: the building is on the list or not. On it, it is worth its S, and takes the place of one worth the cut T. What is
  * learnt changes the expectation of S; learning is worth E[max(E[S | learnt], T)] less max(E[S], T): the expected value of partial
- * perfect information. S is scaled for each building so that its expectation is its median, by which the list is drawn up. For a
- * lognormal S of which a share of the variance is learnt this is m Φ(d1) - T Φ(d2) - max(m - T, 0) with m the median
- * (Raiffa and Schlaifer 1961, from memory; the closed form of an option on a lognormal).
+ * perfect information. The list is drawn up by medians: S counts as the median that is left once everything a survey can find out is
+ * known, so that the spread nobody can find out weighs in no class of buildings more than in another. For a lognormal S of which τ can
+ * be learnt this is m Φ(d1) - T Φ(d2) - max(m - T, 0) with m the median times exp(τ²/2) (Raiffa and Schlaifer 1961, from memory; the
+ * closed form of an option on a lognormal).
  */
 import { exp, ln } from '../numeric/elementary.js';
 import { LEARNT_NODES, ONE_NODE } from '../numeric/nodes.js';
 import { normalCdf } from '../numeric/normal.js';
+import { mixtureCdf } from './mixture.js';
 import type { Mixture } from './mixture.js';
-import { NO_LABEL, labelOf, mixtureQuantile } from './mixture.js';
-import { changedMixture, changesOf } from './shared.js';
-import type { Common } from './shared.js';
 
 /** What a survey can find out. */
 export const UNKNOWNS = ['system', 'year', 'height', 'irregularity', 'use', 'occupants', 'drawings'] as const;
@@ -34,40 +33,59 @@ export interface Unknowns {
   readonly learnable: readonly Learnable[];
 }
 
-/** The edge of the list: ln S at which it ends, and the ln S that counts as 1. */
+/** The edge of the list in ln S. */
 export interface Edge {
+  /** Where the true list ends: above it a building belongs. */
   readonly threshold: number;
+  /** What a building must exceed to take another's place. */
+  readonly cut: number;
+  /** Chance of belonging of the building whose place it takes. */
+  readonly chance: number;
+  /** What counts as 1. */
   readonly unit: number;
 }
+
+/**
+ * The edge of a list of `listSize` that does not hold all, from the `order` by `median` and the threshold. Today the list ends at the median
+ * of its last building, which lies below the threshold: each median has lost its spread. The more is learnt the farther the medians
+ * spread, and with everything known the list ends at the threshold. Cut and chance are taken halfway [judgement: in simulated worlds such
+ * a plan mends as much as with either end or more, and keeps its promises].
+ */
+export function edgeOf(
+  { order, threshold }: { readonly order: ArrayLike<number>; readonly threshold: number },
+  { median, mixtures }: { readonly median: ArrayLike<number>; readonly mixtures: readonly Mixture[] },
+  listSize: number,
+): Edge {
+  const at = (place: number): number => median[order[place]!]!;
+  const today = 0.5 * (at(listSize - 1) + at(listSize));
+  const reach = Math.max(1, Math.round(NEAR * listSize));
+  const [from, to] = [Math.max(0, listSize - reach), Math.min(order.length, listSize + reach)];
+  let chance = 0;
+  for (let place = from; place < to; place += 1)
+    chance += (1 - mixtureCdf(mixtures[order[place]!]!, threshold)) / (to - from);
+  return {
+    threshold,
+    cut: 0.5 * (today + threshold),
+    chance: 0.5 * (chance + KNOWN_CHANCE),
+    unit: at(Math.floor((order.length - 1) / 2)),
+  };
+}
+
+/** Chance of belonging at the threshold itself, where the list ends when everything is known. */
+export const KNOWN_CHANCE = 0.5;
+/** Places either side of the end of the list, as a share of it, over which the chance of belonging there is averaged. */
+const NEAR = 0.1;
 
 /** What every set of unknowns is worth; set s holds unknown i where bit i of s is 1. */
 export interface Worth {
   readonly unknowns: readonly Unknown[];
   /** Value of learning the set, in units of S; 0 for the empty one. */
   readonly value: Float64Array;
-  /** Chance of standing on the wrong side of the edge once the set is learnt; of the empty set: today. */
-  readonly wrongOf: (set: number) => number;
-}
-
-/**
- * `unknowns` of building i as seen from the edge of the list. What drawings tell of the table of an edition keeps no more than the
- * share of the common errors that moves the building against the edge.
- */
-export function seenFromEdge({ parts, learnable }: Unknowns, common: Common, i: number): Unknowns {
-  const change = changesOf(common, i);
-  const { eraLoad, siteLoad } = common.shared.zones[common.shared.zone[i]!]!;
-  const era = eraLoad * eraLoad;
-  let heaviest = parts.from;
-  for (let k = parts.from; k < parts.to; k += 1) if (parts.weight[k]! > parts.weight[heaviest]!) heaviest = k;
-  const label = labelOf(parts, heaviest);
-  const all = era + siteLoad * siteLoad;
-  const kept = label === NO_LABEL || !(all > 0) ? 1 : Math.min(1, Math.max(0, change[label]! + era) / all);
-  return {
-    parts: changedMixture(parts, change),
-    learnable: learnable.map((one) =>
-      one.unknown === 'drawings' ? { ...one, tau: Math.sqrt(Math.max(0, one.tau * one.tau - (1 - kept) * era)) } : one,
-    ),
-  };
+  /**
+   * Twice the places that are wrong through the building once the set is learnt, as a building wrongly in and one wrongly out are one wrong
+   * place; of the empty set: today. Where who takes its place belongs with the chance ½: its chance of standing on the wrong side.
+   */
+  readonly wrongOf: (set: number, chance?: number) => number;
 }
 
 /** E[max(X - T, 0)] of a lognormal X of expectation m and standard deviation tau of its logarithm; tau 0: X is m. */
@@ -79,39 +97,33 @@ export function expectedExcess(m: number, tau: number, t: number): number {
   return m * normalCdf(d1) - t * normalCdf(d1 - tau);
 }
 
-/** What learning everything there is to learn of S itself would be worth: no survey is worth more. */
-export function mostWorth(mixture: Mixture, median: number, { threshold, unit }: Edge): number {
-  const t = exp(threshold - unit);
-  const m = exp(median - unit);
-  let mean = 0;
-  for (let i = mixture.from; i < mixture.to; i += 1) mean += meanOf(mixture, i, unit);
-  let excess = 0;
-  for (let i = mixture.from; i < mixture.to; i += 1) {
-    const weight = mixture.weight[i]!;
-    excess += weight * expectedExcess((meanOf(mixture, i, unit) / weight / mean) * m, mixture.sd[i]!, t);
+/**
+ * No survey of the building is worth more. S itself is learnt, and on which side of what a survey leaves open it counts is not known here:
+ * at most as its expectation where it might come onto the list, at least as its median where it might leave it.
+ */
+export function mostWorth({ weight, mean, sd, from, to }: Mixture, { cut, unit }: Edge): number {
+  const t = exp(cut - unit);
+  let enters = 0;
+  let leaves = t;
+  for (let i = from; i < to; i += 1) {
+    const m = exp(mean[i]! - unit);
+    enters += weight[i]! * expectedExcess(m * exp(0.5 * sd[i]! * sd[i]!), sd[i]!, t);
+    // what it lacks is what it exceeds by, less the difference
+    leaves += weight[i]! * (expectedExcess(m, sd[i]!, t) - m);
   }
-  return Math.max(excess - Math.max(m - t, 0), 0);
-}
-
-/** Weight times E[S] of one part. */
-function meanOf({ weight, mean, sd }: Mixture, i: number, unit: number): number {
-  return weight[i]! * exp(mean[i]! - unit + 0.5 * sd[i]! * sd[i]!);
+  return Math.max(Math.min(enters, leaves), 0);
 }
 
 /** The worth of every set of what may be learnt of a building. */
-export function worthOf({ parts, learnable }: Unknowns, { threshold, unit }: Edge): Worth {
+export function worthOf({ parts, learnable }: Unknowns, { threshold, cut, chance, unit }: Edge): Worth {
   const n = parts.to - parts.from;
-  const t = exp(threshold - unit);
-  const m = exp(mixtureQuantile(parts, 0.5, 0) - unit);
-  const worths = Float64Array.from({ length: n }, (_, i) => meanOf(parts, parts.from + i, unit));
-  const scale = m / worths.reduce((sum, value) => sum + value, 0);
+  const t = exp(cut - unit);
   const weights = parts.weight.slice(parts.from, parts.to);
   const total = weights.reduce((sum, value) => sum + value, 0);
-  for (let i = 0; i < n; i += 1) {
-    worths[i]! *= scale;
-    weights[i]! /= total;
-  }
+  for (let i = 0; i < n; i += 1) weights[i]! /= total;
   const sets = 1 << learnable.length;
+  const worths = worthsOf(parts, weights, learnt(n, learnable, sets - 1), unit);
+  const m = worths.reduce((sum, value) => sum + value, 0);
   const value = new Float64Array(sets);
   for (let set = 1; set < sets; set += 1) {
     const { classes, of, tau } = learnt(n, learnable, set);
@@ -131,11 +143,29 @@ export function worthOf({ parts, learnable }: Unknowns, { threshold, unit }: Edg
   return {
     unknowns: learnable.map(({ unknown }) => unknown),
     value,
-    wrongOf: (set) => {
-      if (Number.isNaN(wrong[set]!)) wrong[set] = wrongWith(parts, weights, learnt(n, learnable, set), threshold);
+    wrongOf: (set, other = chance) => {
+      const found = (): number => wrongWith(parts, weights, learnt(n, learnable, set), threshold, other);
+      if (other !== chance) return found();
+      if (Number.isNaN(wrong[set]!)) wrong[set] = found();
       return wrong[set]!;
     },
   };
+}
+
+/** Weight times S of each part, as it counts: the median left in its class once everything is learnt, its expectation over what is learnt of all alike. */
+function worthsOf(
+  { mean, from }: Mixture,
+  weights: Float64Array,
+  { classes, of, tau }: Learnt,
+  unit: number,
+): Float64Array {
+  const weight = new Float64Array(classes);
+  const sum = new Float64Array(classes);
+  weights.forEach((w, i) => {
+    weight[of[i]!]! += w;
+    sum[of[i]!]! += w * mean[from + i]!;
+  });
+  return weights.map((w, i) => w * exp(sum[of[i]!]! / weight[of[i]!]! - unit + 0.5 * tau * tau));
 }
 
 interface Learnt {
@@ -165,8 +195,17 @@ function learnt(n: number, learnable: readonly Learnable[], set: number): Learnt
   return { classes, of, tau: Math.sqrt(variance) };
 }
 
-/** Weight of the wrong side of the edge: in every class, and at every value of what is learnt besides, the lesser side is wrong. */
-function wrongWith(parts: Mixture, weights: Float64Array, { classes, of, tau }: Learnt, threshold: number): number {
+/**
+ * Weight of the wrong side of the edge: in every class, and at every value of what is learnt besides, the lesser loss is taken. On the list
+ * a building that does not belong costs the `chance` of the one it keeps out, off it one that belongs the chance that the other does not.
+ */
+function wrongWith(
+  parts: Mixture,
+  weights: Float64Array,
+  { classes, of, tau }: Learnt,
+  threshold: number,
+  chance: number,
+): number {
   const { z, weight: nodeWeight } = tau > 0 ? LEARNT_NODES : ONE_NODE;
   let wrong = 0;
   for (let j = 0; j < z.length; j += 1) {
@@ -179,7 +218,8 @@ function wrongWith(parts: Mixture, weights: Float64Array, { classes, of, tau }: 
       all[of[i]!]! += weights[i]!;
       above[of[i]!]! += weights[i]! * (left > 0 ? normalCdf(d / left) : d > 0 ? 1 : 0);
     }
-    for (let c = 0; c < classes; c += 1) wrong += nodeWeight[j]! * Math.min(above[c]!, all[c]! - above[c]!);
+    for (let c = 0; c < classes; c += 1)
+      wrong += 2 * nodeWeight[j]! * Math.min((1 - chance) * above[c]!, chance * (all[c]! - above[c]!));
   }
   return wrong;
 }

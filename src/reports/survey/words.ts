@@ -51,8 +51,11 @@ export function outlookSentence(outlook: SurveyOutlook): string {
   if (hours === 0)
     return 'No visit would change the list: what is unknown at its edge is known already or cannot be seen.';
   if (halving_hours !== null) return `${formatNumber(halving_hours, 2)} h of visits would halve that.`;
-  const told = `${formatNumber(hours, 2)} h of visits would bring the places expected to be wrong from about ${formatNumber(before, 2)} to about ${formatNumber(after, 2)}`;
-  return `${told}; with all found out that a visit can find out, about ${formatNumber(least_wrong, 2)} would remain, which take a detailed assessment.`;
+  const [reached, least] = [formatNumber(after, 2), formatNumber(least_wrong, 2)];
+  if (reached === least)
+    return `${formatNumber(hours, 2)} h of visits would bring the places expected to be wrong from about ${formatNumber(before, 2)} to about ${reached}, about as far as visits can; the rest take a detailed assessment.`;
+  const told = `${formatNumber(hours, 2)} h of visits would bring the places expected to be wrong from about ${formatNumber(before, 2)} to about ${reached}`;
+  return `${told}; with all found out that a visit can find out, about ${least} would remain, which take a detailed assessment.`;
 }
 
 /** Where there is something to learn. */

@@ -99,6 +99,16 @@ describe('unknownsOf', () => {
     expect(found({ ...known, capacity_sa_g: 0.5 }).learnable).toEqual([]);
   });
 
+  it('looks for no coefficient in the drawings of what was designed for no earthquake', () => {
+    const old = building({ ...NO_IRREGULARITY, system: 'concrete-moment-frame', years: [1930], occupants_peak: 100 });
+    expect(found(old).learnable).toEqual([]);
+    const tau = (years: readonly number[]): number =>
+      found({ ...old, years }).learnable.find(({ unknown }) => unknown === 'drawings')!.tau;
+    // by hand: k 2.5 on a spread of the table of 0.2, and half of its variance where half of the years are before any code
+    expect(tau([1985])).toBeCloseTo(0.5, 12);
+    expect(tau([1930, 1985])).toBeCloseTo(0.5 * Math.sqrt(0.5), 12);
+  });
+
   it('names what is not on record', () => {
     const blank = building({
       system: null,
@@ -159,5 +169,14 @@ describe('unknownsOf', () => {
     const before = assessed(one).sd;
     const after = assessed({ ...one, use: 'other' }).sd;
     expect(tau * tau).toBeCloseTo(before * before - after * after, 6);
+  });
+
+  it('takes off with the use the doubt of its hours where the people are counted', () => {
+    const one = building({ system: 'timber-light-frame', use: 'unknown', occupants_peak: 40, years: [1950] });
+    const tau = found(one).learnable.find(({ unknown }) => unknown === 'use')!.tau;
+    expect(tau * tau).toBeCloseTo(assessed(one).sd ** 2 - assessed({ ...one, use: 'other' }).sd ** 2, 6);
+    expect(found({ ...one, occupied_hours_per_week: 50 }).learnable.some(({ unknown }) => unknown === 'use')).toBe(
+      false,
+    );
   });
 });

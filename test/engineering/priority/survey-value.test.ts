@@ -1,15 +1,15 @@
 import { describe, expect, it } from 'vitest';
 import type { Mixture } from '../../../src/engineering/priority/mixture.js';
-import { mixtureQuantile } from '../../../src/engineering/priority/mixture.js';
 import {
   UNKNOWNS,
+  edgeOf,
   expectedExcess,
   mostWorth,
   shareOf,
   worthAt,
   worthOf,
 } from '../../../src/engineering/priority/survey-value.js';
-import type { Learnable, Unknowns } from '../../../src/engineering/priority/survey-value.js';
+import type { Edge, Learnable, Unknowns } from '../../../src/engineering/priority/survey-value.js';
 import { random } from '../../support/engineering-random.js';
 
 const normal = (mean: number, sd: number): Mixture => ({
@@ -19,6 +19,8 @@ const normal = (mean: number, sd: number): Mixture => ({
   from: 0,
   to: 1,
 });
+
+const edgeAt = (threshold: number): Edge => ({ threshold, cut: threshold, chance: 0.5, unit: 0 });
 
 /** One normal of which the share `share` of the variance can be learnt. */
 const oneNormal = (mean: number, sd: number, share: number): Unknowns => ({
@@ -70,7 +72,7 @@ describe('worthOf', () => {
     [0.5, 0.9, 0.2, 0.289, 0.269],
     [1.0, 0.6, 0.8, 0.048, 0.033],
   ])('gives the chances of error of the sheet for δ %s, s %s, share %s', (delta, sd, share, now, after) => {
-    const { wrongOf } = worthOf(oneNormal(delta, sd, share), { threshold: 0, unit: 0 });
+    const { wrongOf } = worthOf(oneNormal(delta, sd, share), edgeAt(0));
     expect(wrongOf(0)).toBeCloseTo(now, 3);
     // the sheet's own two differ by 0.001
     expect(Math.abs(wrongOf(1) - after)).toBeLessThan(0.0015);
@@ -79,7 +81,7 @@ describe('worthOf', () => {
   it('halves the chance of error at the edge as arccos says', () => {
     // two normals of correlation √share have opposite signs with chance arccos(√share)/π (Sheppard 1899)
     for (const share of [0.2, 0.5, 0.9]) {
-      const { wrongOf } = worthOf(oneNormal(0, 0.8, share), { threshold: 0, unit: 0 });
+      const { wrongOf } = worthOf(oneNormal(0, 0.8, share), edgeAt(0));
       // the lesser of two chances has a kink, which 33 nodes meet to 0.006
       expect(Math.abs(wrongOf(1) - Math.acos(Math.sqrt(share)) / Math.PI)).toBeLessThan(0.006);
     }
@@ -88,12 +90,13 @@ describe('worthOf', () => {
   it.each([1, 2, 3, 4, 5])('agrees with a nested simulation, world %s', (seed) => {
     const unknowns = invented(seed);
     const { parts, learnable } = unknowns;
-    const edge = { threshold: 0.9, unit: 0 };
+    const edge = edgeAt(0.9);
     const worth = worthOf(unknowns, edge);
     const source = random(1000 + seed);
     const T = Math.exp(edge.threshold);
-    const median = Math.exp(mixtureQuantile(parts, 0.5, 0));
-    const mean = parts.weight.reduce((sum, w, i) => sum + w * Math.exp(parts.mean[i]! + 0.5 * parts.sd[i]! ** 2), 0);
+    // what no survey finds out is left out: S counts as the median once all is learnt; no two parts are alike in all that may be
+    const most = Math.sqrt(learnable.reduce((sum, one) => sum + one.tau ** 2, 0));
+    const mean = parts.weight.reduce((sum, w, i) => sum + w * Math.exp(parts.mean[i]! + 0.5 * most ** 2), 0);
     const pick = (chances: readonly number[]): number => {
       let left = source.uniform();
       return Math.max(
@@ -119,14 +122,14 @@ describe('worthOf', () => {
         let sum = 0;
         for (let inner = 0; inner < INNER; inner += 1) {
           const i = pick(alike.map((w) => w / all));
-          const rest = Math.sqrt(parts.sd[i]! ** 2 - tau * tau);
+          const rest = Math.sqrt(most ** 2 - tau * tau);
           sum += Math.exp(parts.mean[i]! + shift + rest * source.normal());
         }
-        const one = Math.max(((sum / INNER) * median) / mean, T);
+        const one = Math.max(sum / INNER, T);
         gain += one;
         squares += one * one;
       }
-      const found = gain / OUTER - Math.max(median, T);
+      const found = gain / OUTER - Math.max(mean, T);
       const error = Math.sqrt((squares / OUTER - (gain / OUTER) ** 2) / OUTER);
       // the inner mean is itself noisy, which lifts the larger of two a little
       expect(Math.abs(found - worth.value[set]!), `set ${String(set)}`).toBeLessThan(4 * error + 0.02);
@@ -135,7 +138,7 @@ describe('worthOf', () => {
 
   it('is never below 0, never less for a larger set, and nothing for nothing', () => {
     for (let seed = 1; seed <= 200; seed += 1) {
-      const { value, wrongOf } = worthOf(invented(seed), { threshold: -1 + (seed % 30) / 10, unit: 0 });
+      const { value, wrongOf } = worthOf(invented(seed), edgeAt(-1 + (seed % 30) / 10));
       expect(value[0]).toBe(0);
       for (let set = 0; set < value.length; set += 1) {
         for (let bit = 0; bit < 5; bit += 1) {
@@ -150,10 +153,9 @@ describe('worthOf', () => {
   it('never exceeds what knowing S itself is worth, and vanishes far from the edge', () => {
     for (let seed = 1; seed <= 100; seed += 1) {
       const { parts, learnable } = invented(seed);
-      const median = mixtureQuantile(parts, 0.5, 0);
       for (const threshold of [-6, -1, 0, 1, 2, 9]) {
-        const edge = { threshold, unit: 0 };
-        const most = mostWorth(parts, median, edge);
+        const edge = edgeAt(threshold);
+        const most = mostWorth(parts, edge);
         const { value } = worthOf({ parts, learnable }, edge);
         expect(value.at(-1)!).toBeLessThanOrEqual(most + 1e-9);
         if (Math.abs(threshold) > 5) expect(value.at(-1)!).toBeLessThan(0.02);
@@ -171,14 +173,64 @@ describe('worthOf', () => {
       to: 2,
     };
     const learnable: Learnable[] = [{ unknown: 'system', values: Int32Array.of(0, 1), tau: 0 }];
-    const { value, wrongOf } = worthOf({ parts, learnable }, { threshold: Math.log(2), unit: 0 });
-    const median = Math.exp(mixtureQuantile(parts, 0.5, 0));
-    // scaled so that the expectation, 2, is the median
-    const [low, high] = [1 * (median / 2), 3 * (median / 2)];
-    const byHand = 0.5 * Math.max(low, 2) + 0.5 * Math.max(high, 2) - Math.max(median, 2);
-    expect(value[1]).toBeCloseTo(byHand, 9);
+    const { value, wrongOf } = worthOf({ parts, learnable }, edgeAt(Math.log(2)));
+    expect(value[1]).toBeCloseTo(0.5, 9);
     expect(wrongOf(1)).toBeCloseTo(0, 9);
     expect(wrongOf(0)).toBeCloseTo(0.5, 9);
+  });
+
+  it('sends somebody to a building that one of its systems would put on the list, however wide the rest of its spread', () => {
+    // by hand: with chance 0.2 its median is 2.5 and the edge at 1; then it gains 2.5 - 1, and with chance 0.8 nothing
+    for (const sd of [0.1, 1.3]) {
+      const parts: Mixture = {
+        weight: Float64Array.of(0.8, 0.2),
+        mean: Float64Array.of(Math.log(0.1), Math.log(2.5)),
+        sd: Float64Array.of(sd, sd),
+        from: 0,
+        to: 2,
+      };
+      const learnable: Learnable[] = [{ unknown: 'system', values: Int32Array.of(0, 1), tau: 0 }];
+      const { value } = worthOf({ parts, learnable }, edgeAt(0));
+      expect(value[1]).toBeCloseTo(0.2 * 1.5, 9);
+    }
+  });
+});
+
+describe('edgeOf', () => {
+  it('lies halfway from where the list ends today to where it would end if all were known', () => {
+    // two places: today the list ends between 4 and 3, by hand 3.5; the median building is the third, of 3; one either side of the end
+    // stands two of its spreads below the threshold, Φ(-2) = 0.02275 (tables), the other four
+    const order = [4, 1, 2, 0, 3];
+    const median = [2, 4, 3, 1, 5];
+    const mixtures = median.map((value) => normal(value, value === 4 ? 0.25 : 0.375));
+    const edge = edgeOf({ order, threshold: 4.5 }, { median, mixtures }, 2);
+    expect(edge).toMatchObject({ threshold: 4.5, cut: 4, unit: 3 });
+    expect(edge.chance).toBeCloseTo(0.5 * (0.5 * (0.02275 + 0.00003) + 0.5), 4);
+  });
+
+  it('takes the lesser loss against the chance of the building whose place it takes', () => {
+    // point masses: above with chance 0.3, the other belongs with 0.2; by hand off the list 0.3 × 0.8, on it 0.7 × 0.2; a place counts twice
+    const parts: Mixture = {
+      weight: Float64Array.of(0.3, 0.7),
+      mean: Float64Array.of(1, -1),
+      sd: Float64Array.of(1e-9, 1e-9),
+      from: 0,
+      to: 2,
+    };
+    const learnable: Learnable[] = [{ unknown: 'system', values: Int32Array.of(0, 1), tau: 0 }];
+    const { wrongOf } = worthOf({ parts, learnable }, { ...edgeAt(0), chance: 0.2 });
+    expect(wrongOf(0)).toBeCloseTo(2 * 0.7 * 0.2, 12);
+    expect(wrongOf(0, 0.5)).toBeCloseTo(0.3, 12);
+    expect(wrongOf(0, 0.4)).toBeCloseTo(2 * 0.3 * 0.6, 12);
+    expect(wrongOf(1)).toBeCloseTo(0, 12);
+  });
+
+  it('weighs by the cut, and tells who belongs by the threshold', () => {
+    const unknowns = invented(3);
+    const worth = worthOf(unknowns, { ...edgeAt(1.5), cut: 0.5 });
+    expect(worth.value).toEqual(worthOf(unknowns, edgeAt(0.5)).value);
+    expect(worth.value).not.toEqual(worthOf(unknowns, edgeAt(1.5)).value);
+    for (const set of [0, 1, 31]) expect(worth.wrongOf(set)).toBe(worthOf(unknowns, edgeAt(1.5)).wrongOf(set));
   });
 });
 
@@ -195,7 +247,7 @@ describe('expectedExcess', () => {
 
 describe('worthAt', () => {
   it('runs from nothing to everything, and learns the stated share of the variance', () => {
-    const worth = worthOf(invented(7), { threshold: 1, unit: 0 });
+    const worth = worthOf(invented(7), edgeAt(1));
     expect(worthAt(worth, () => 0).value).toBe(0);
     expect(worthAt(worth, () => 1).value).toBeCloseTo(worth.value.at(-1)!, 12);
     const half = worthAt(worth, () => 0.5).value;
