@@ -1,15 +1,12 @@
 /** The assumptions register and the cautions that every report carries. */
-import { assumedWith } from '../engineering/assess/assumed.js';
-import { NO_IRREGULARITY_CHANCES } from '../engineering/assess/settings.js';
-import type { AssessSettings } from '../engineering/assess/settings.js';
+import { ASSUMED, assumedWith } from '../engineering/assess/assumed.js';
+import type { Assumed } from '../engineering/assess/assumed.js';
+import { NO_IRREGULARITY_CHANCES, SPREADS } from '../engineering/assess/settings.js';
+import type { AssessSettings, Spreads } from '../engineering/assess/settings.js';
 import { IRREGULARITY_EDITIONS } from '../engineering/irregularity/editions.js';
-import { compileContext } from '../engineering/assess/context.js';
 import { standardNote, standardRead } from '../engineering/period/choose.js';
 import type { Assumption } from '../engineering/page-contract.js';
-import { HAZARD_GRID } from '../engineering/spectrum/grid.js';
-import { VS30_TABLES } from '../engineering/site/vs30.js';
-import { cite } from '../engineering/source.js';
-import { flagWords } from '../engineering/spectrum/flags.js';
+import { spectrumAssumptions } from './assumptions-spectra.js';
 import type { SlopeFound } from './slopes.js';
 
 const JUDGEMENT = 'judgement';
@@ -17,9 +14,14 @@ const JUDGEMENT = 'judgement';
 /** What a run assumed, each with its value and source. */
 export function assumptionsOf(settings: AssessSettings, slopes: readonly SlopeFound[]): readonly Assumption[] {
   const { spreads, period, codeHistory } = settings;
-  const { ductility, leastCoefficient, overstrength, retrofitLevel, peopleWeight, importanceWeight } = assumedWith(
-    settings.assumed,
-  );
+  const assumed = assumedWith(settings.assumed);
+  const { ductility, leastCoefficient, overstrength, retrofitLevel, peopleWeight, importanceWeight } = assumed;
+  const same = (a: unknown, b: unknown): boolean => JSON.stringify(a) === JSON.stringify(b);
+  /** Judgement, unless the study states another value. */
+  const bySpread = (...names: readonly (keyof Spreads)[]): string =>
+    names.every((name) => spreads[name] === SPREADS[name]) ? JUDGEMENT : 'study';
+  const byAssumed = (name: keyof Assumed): string => (same(assumed[name], ASSUMED[name]) ? JUDGEMENT : 'study');
+  const either = (...sources: readonly string[]): string => (sources.includes('study') ? 'study' : JUDGEMENT);
   const read = standardRead(period.standard, period.basis);
   const list: Assumption[] = [
     {
@@ -57,7 +59,7 @@ export function assumptionsOf(settings: AssessSettings, slopes: readonly SlopeFo
       id: 'period-spread',
       statement: 'Method error of a height formula, σ of ln T',
       value: String(spreads.heightFormula),
-      source: JUDGEMENT,
+      source: bySpread('heightFormula'),
     },
     {
       id: 'period-one-error',
@@ -69,13 +71,13 @@ export function assumptionsOf(settings: AssessSettings, slopes: readonly SlopeFo
       id: 'stiffness-spread',
       statement: 'Method error of a period from given storey stiffness, σ of ln T',
       value: String(spreads.storeyStiffness),
-      source: JUDGEMENT,
+      source: bySpread('storeyStiffness'),
     },
     {
       id: 'stiffness-models-spread',
       statement: 'Method error of a period from sections or braces, from walls, from sway under gravity, σ of ln T',
       value: `${String(spreads.storeySections)}, ${String(spreads.storeyWalls)}, ${String(spreads.storeySway)}`,
-      source: JUDGEMENT,
+      source: bySpread('storeySections', 'storeyWalls', 'storeySway'),
     },
     {
       id: 'cracking',
@@ -140,13 +142,13 @@ export function assumptionsOf(settings: AssessSettings, slopes: readonly SlopeFo
       id: 'edition-change',
       statement: 'Within this many years of a change both editions count',
       value: String(spreads.editionChange_years),
-      source: JUDGEMENT,
+      source: bySpread('editionChange_years'),
     },
     {
       id: 'retrofit-level',
       statement: "Share of its year's code that a retrofit reached, where the row does not say",
       value: String(retrofitLevel),
-      source: JUDGEMENT,
+      source: byAssumed('retrofitLevel'),
     },
     {
       id: 'reductions',
@@ -154,12 +156,17 @@ export function assumptionsOf(settings: AssessSettings, slopes: readonly SlopeFo
       value: 'registers of engineering/capacity',
       source: 'from memory of the editions',
     },
-    { id: 'floor', statement: 'Least strength coefficient', value: String(leastCoefficient), source: JUDGEMENT },
+    {
+      id: 'floor',
+      statement: 'Least strength coefficient',
+      value: String(leastCoefficient),
+      source: byAssumed('leastCoefficient'),
+    },
     {
       id: 'overstrength',
       statement: 'Overstrength Ω, and σ of its logarithm',
       value: `${overstrength.toFixed(1)}; ${String(spreads.overstrength)}`,
-      source: JUDGEMENT,
+      source: either(byAssumed('overstrength'), bySpread('overstrength')),
     },
     {
       id: 'strength-check',
@@ -171,19 +178,19 @@ export function assumptionsOf(settings: AssessSettings, slopes: readonly SlopeFo
       id: 'ductility',
       statement: 'Ductility by detailing class: none, before, after, special',
       value: `${ductility.brittle.toFixed(1)} or ${ductility.none.toFixed(1)}; ${ductility.before.toFixed(1)}; ${ductility.after.toFixed(1)}; ${ductility.special.toFixed(1)}`,
-      source: JUDGEMENT,
+      source: byAssumed('ductility'),
     },
     {
       id: 'era-spread',
       statement: 'Spread of the era table and of the building within its era, σ',
       value: `${String(spreads.eraTable)} and ${String(spreads.era)}`,
-      source: JUDGEMENT,
+      source: bySpread('era', 'eraTable'),
     },
     {
       id: 'shared-spread',
       statement: 'Errors common to all buildings of one code edition (its table) and of one spectrum (site class), σ',
       value: `${String(spreads.eraTable)} and ${String(spreads.siteClass)}`,
-      source: JUDGEMENT,
+      source: bySpread('eraTable', 'siteClass'),
     },
     ...irregularityAssumptions(settings),
     {
@@ -199,13 +206,19 @@ export function assumptionsOf(settings: AssessSettings, slopes: readonly SlopeFo
       id: 'people',
       statement: 'People from floor area, density and hours of use; σ of ln E',
       value: `${String(spreads.peopleKnownUse)}, ${String(spreads.peopleUnknownUse)} with the use unknown, ${String(spreads.peopleCounted)} when counted`,
-      source: 'densities from memory, hours and spreads judgement',
+      source:
+        either(byAssumed('uses'), bySpread('peopleKnownUse', 'peopleUnknownUse', 'peopleCounted')) === 'study'
+          ? 'study; what it leaves out from memory or judgement'
+          : 'densities from memory, hours and spreads judgement',
     },
     {
       id: 'people-weight',
       statement: 'Exponent of the people exposed in the priority',
       value: String(peopleWeight),
-      source: 'judgement: annual rate of demand over capacity, times people',
+      source:
+        byAssumed('peopleWeight') === 'study'
+          ? 'policy of the study'
+          : 'judgement: annual rate of demand over capacity, times people',
     },
     {
       id: 'importance',
@@ -246,39 +259,6 @@ function irregularityAssumptions({ irregularity }: AssessSettings): readonly Ass
       value: IRREGULARITY_EDITIONS[irregularity.edition].title,
       source: 'study',
     },
-  ];
-}
-
-/** What the spectra that some level reads say about their parameters, and by which table a velocity becomes a site class. */
-function spectrumAssumptions(settings: AssessSettings): readonly Assumption[] {
-  const { levels } = settings;
-  const read = new Set(levels.flatMap(({ spectra, otherwise }) => [...Object.values(spectra), otherwise]));
-  const codes = new Set(levels.flatMap(({ classes }) => (classes === undefined ? [] : [classes])));
-  return [
-    ...[...codes].map((code) => ({
-      id: `site-class-${code}`,
-      statement: 'Site class from the shear-wave velocity of the upper 30 m; the class on record where there is none',
-      value: code,
-      source: `${VS30_TABLES[code].source}, ${VS30_TABLES[code].verified === 'memory' ? 'from memory' : 'restated'}`,
-    })),
-    ...Object.entries(settings.spectra)
-      .filter(([name, { code }]) => code === HAZARD_GRID && read.has(name))
-      .map(([name, entry]) => ({
-        id: `hazard-grid-${name}`,
-        statement: `Each building reads its own spectrum from the grid ${name}: bilinear in ln S_a between the four nodes around it, ${entry['interpolation'] === 'log-log' ? 'log-log' : 'linear'} between periods; one k for all of it, as for a zone`,
-        value: String(entry['file']),
-        source: `file of the study (${String(entry['read'])}); contents ${String(entry['grid'])}`,
-      })),
-    ...Object.values(compileContext(settings).spectra)
-      .filter(({ name }) => read.has(name))
-      .flatMap(({ name, compiled, record }) =>
-        flagWords(compiled).map((statement, i) => ({
-          id: `spectrum-${name}-${String(i + 1)}`,
-          statement,
-          value: name,
-          source: cite(record.source),
-        })),
-      ),
   ];
 }
 

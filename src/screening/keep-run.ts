@@ -24,7 +24,7 @@ export interface KeepOptions {
   /** When the run is made; the caller owns the clock. */
   readonly made: Date;
   readonly note?: string;
-  /** Tell with the run what the study's money buys and what the list hangs on. */
+  /** Tell with the run what a week of visits would do, what the study's money buys and what the list hangs on. */
   readonly outlook?: boolean;
 }
 
@@ -66,7 +66,7 @@ export async function keepRun(
     assessed,
     ranked: { ...ranked.ranking, mixtures: assessed.mixtures, draws: ranked.draws },
   };
-  const survey = await surveyOutlook(db, basis, study);
+  const survey = options.outlook === true ? await surveyOutlook(db, basis, study) : null;
   assessed.mixtures.length = 0;
   assessed.flat.length = 0;
   report('keeping');

@@ -1,7 +1,5 @@
 /** From the study file to the settings an assessment runs on. */
 import { resolve } from 'node:path';
-import { ASSUMED } from '../engineering/assess/assumed.js';
-import { SPREADS } from '../engineering/assess/settings.js';
 import type { AssessSettings, CodeHistorySettings, LevelSettings } from '../engineering/assess/settings.js';
 import { OWN_FAMILY_ID } from '../engineering/capacity/families.js';
 import { SPECTRUM_REGISTER } from '../engineering/spectrum/definition.js';
@@ -9,6 +7,7 @@ import { findMethod } from '../engineering/methods.js';
 import { STIFFNESS_ROUTES } from '../engineering/stiffness/routes.js';
 import { UserError, showValue } from '../errors.js';
 import { loadPrior } from '../study/prior.js';
+import { assumedOf, spreadsOf } from '../study/assumed-schema.js';
 import type { LoadedStudy } from '../study/load.js';
 import type { Level, Study } from '../study/schema.js';
 
@@ -94,8 +93,8 @@ export async function settingsOf(
     rankBy: study.ranking.rank_by,
     slope: typeof study.ranking.k === 'number' ? study.ranking.k : ASSUMED_SLOPE,
     slopeSource: typeof study.ranking.k === 'number' ? 'stated' : 'assumed',
-    spreads: SPREADS,
-    assumed: ASSUMED,
+    spreads: spreadsOf(study.spreads),
+    assumed: assumedOf(study),
     irregularity: study.irregularity,
   };
 }

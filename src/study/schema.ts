@@ -6,6 +6,7 @@ import { STRENGTH_CHECKS } from '../engineering/assess/settings.js';
 import { BASES, PERIOD_STANDARDS } from '../engineering/period/choose.js';
 import { VS30_TABLES } from '../engineering/site/vs30.js';
 import { showValue } from '../errors.js';
+import { CapacitySchema, PeopleSchema, SpreadsSchema } from './assumed-schema.js';
 import { BudgetSchema } from './budget-schema.js';
 import { CodeHistorySchema } from './code-editions.js';
 import { expected, list, mapping, number, strict, text, whole, word } from './fields.js';
@@ -151,6 +152,11 @@ export const StudySchema = strict({
   system_prior: text('the path of a file')
     .exactOptional()
     .describe('Table of chances of the lateral system by use, storeys and year; needed where systems are unknown.'),
+  capacity: CapacitySchema.prefault({}).describe('What capacities rest on besides the codes.'),
+  people: PeopleSchema.prefault({}).describe('People by use, and how much they weigh.'),
+  spreads: SpreadsSchema.prefault({}).describe(
+    'The one register of spreads, in natural logarithms [defaults judgement].',
+  ),
   irregularity: IrregularitySchema.prefault({}).describe('Irregularities: limits, factors, chances.'),
   ranking: RankingSchema.prefault({}).describe('What the list is ordered by, and how long it is.'),
   survey: SurveySchema.prefault({}).describe('What visits cost and find out, for planning a survey.'),

@@ -14,6 +14,7 @@ import type { AssessSettings } from '../../src/engineering/assess/settings.js';
 import { zoneOf } from '../../src/engineering/assess/shared-load.js';
 import type { Building } from '../../src/engineering/building.js';
 import { rankAll } from '../../src/engineering/priority/rank.js';
+import type { Ranking } from '../../src/engineering/priority/rank.js';
 import { drawerOf, inventedPortfolio } from '../support/engineering-portfolio.js';
 import type { CommonDraw } from '../support/engineering-portfolio.js';
 import { random } from '../support/engineering-random.js';
@@ -25,30 +26,35 @@ const BLOCK = 100;
 /** Draws that every building takes part in. */
 const LATER = 1_000;
 
-const DRAWS = Number(process.env['SWAYMARK_MONTE_CARLO_DRAWS'] ?? 10_000);
+/** The allowance is for 10,000; fewer draws scatter more. */
+const AGREED = 10_000;
+const DRAWS = Number(process.env['SWAYMARK_MONTE_CARLO_DRAWS'] ?? 4_000);
 
 interface Portfolio {
   readonly title: string;
   readonly buildings: number;
   readonly list: number;
   readonly settings: AssessSettings;
+  /** Ends of rank bands agree to this share of the portfolio [measured]: far from the edge of the list common errors move ranks otherwise than at it. */
+  readonly bands: number;
 }
 
 const PORTFOLIOS: readonly Portfolio[] = [
-  { title: 'of 600 buildings', buildings: 600, list: 40, settings: SETTINGS },
+  { title: 'of 600 buildings', buildings: 600, list: 40, settings: SETTINGS, bands: 0.08 },
   {
     title: 'of 400 with strongly shared errors',
     buildings: 400,
     list: 40,
     settings: { ...SETTINGS, spreads: { ...SETTINGS.spreads, eraTable: 0.5, siteClass: 0.4 } },
+    bands: 0.12,
   },
-  { title: 'of 150, which are ranked by simulation', buildings: 150, list: 20, settings: SETTINGS },
+  { title: 'of 150, which are ranked by simulation', buildings: 150, list: 20, settings: SETTINGS, bands: 0.035 },
 ];
 
 /** Of the chances of a portfolio that is simulated. */
 const SIMULATED_DRAWS = 20_000;
 
-function closedForm(results: readonly Assessment[], list: number, settings: AssessSettings): Float64Array {
+function closedForm(results: readonly Assessment[], list: number, settings: AssessSettings): Ranking {
   const zones = new Map(results.map(({ spectrum, slope_k }) => [spectrum, zoneOf(spectrum, slope_k, settings)]));
   return rankAll(
     {
@@ -64,7 +70,7 @@ function closedForm(results: readonly Assessment[], list: number, settings: Asse
     },
     list,
     1,
-  ).chance;
+  );
 }
 
 /** The errors of `draws` draws: of each era, and of each zone. */
@@ -84,16 +90,35 @@ function assessed(
   return result;
 }
 
+/** Where `value` stands last in the rising `values`. */
+function lastAt(values: Float64Array, value: number): number {
+  let low = 0;
+  let high = values.length - 1;
+  while (low < high) {
+    const middle = (low + high + 1) >> 1;
+    if (values[middle]! <= value) low = middle;
+    else high = middle - 1;
+  }
+  return low;
+}
+
+function quantile(counts: Uint32Array, q: number): number {
+  const all = counts.reduce((sum, count) => sum + count, 0);
+  let seen = 0;
+  return counts.findIndex((count) => (seen += count) >= q * all);
+}
+
 describe('assess and rankAll', () => {
   it.each(PORTFOLIOS)(
     'agree with drawing the inputs of a portfolio $title and assessing again',
     { timeout: 600_000 },
-    ({ buildings, list, settings }) => {
+    ({ buildings, list, settings, bands }) => {
       const source = random(20_260_101);
       const portfolio = inventedPortfolio(buildings, source);
       const context = compileContext(settings);
       const results = portfolio.map((one) => assessed(one, context, undefined));
-      const chance = closedForm(results, list, settings);
+      const { chance, rankBest, rankWorst } = closedForm(results, list, settings);
+      const ranks = Array.from({ length: buildings }, () => new Uint32Array(buildings + 1));
       const drawers = portfolio.map((one) => drawerOf(one, context, source));
       const zones = [...new Set(results.map(({ spectrum }) => spectrum))];
       const common = commonDraws(DRAWS, context.eras.length, zones, source);
@@ -124,12 +149,17 @@ describe('assess and rankAll', () => {
         for (const row of score) {
           const edge = largestAbove(row, list, work);
           for (const i of alive) if (row[i]! >= edge) inside[i]! += 1;
+          if (done >= LATER) continue;
+          work.set(row);
+          work.sort();
+          for (const i of alive) ranks[i]![buildings - lastAt(work, row[i]!)]! += 1;
         }
       }
       let beyond = 0;
       let largest = 0;
       let squares = 0;
       let counted = 0;
+      let widest = 0;
       for (let i = 0; i < buildings; i += 1) {
         const p = chance[i]!;
         const gap = Math.abs(inside[i]! / draws[i]! - p);
@@ -140,16 +170,21 @@ describe('assess and rankAll', () => {
           squares += (gap / error) ** 2;
           counted += 1;
         }
+        if (p > 0.01) {
+          const ends = [rankBest[i]! - quantile(ranks[i]!, 0.05), rankWorst[i]! - quantile(ranks[i]!, 0.95)];
+          widest = Math.max(widest, ...ends.map((end) => Math.abs(end) / buildings));
+        }
         largest = Math.max(largest, gap);
       }
       // about 1 when nothing but chance parts the two
       const meanSquare = squares / counted;
-      const figures = { beyond, largest, meanSquare, counted };
+      const figures = { beyond, largest, meanSquare, counted, widest };
       if (process.env['SWAYMARK_SHOW'] !== undefined) process.stdout.write(`${JSON.stringify(figures)}\n`);
       expect(beyond, JSON.stringify(figures)).toBeLessThanOrEqual(0.01 * buildings);
-      expect(largest, JSON.stringify(figures)).toBeLessThanOrEqual(0.02);
+      expect(largest, JSON.stringify(figures)).toBeLessThanOrEqual(0.02 * Math.sqrt(Math.max(1, AGREED / DRAWS)));
       // a gap of half a standard error throughout would show as 1.25
       expect(meanSquare, JSON.stringify(figures)).toBeLessThanOrEqual(1.25);
+      expect(widest, JSON.stringify(figures)).toBeLessThanOrEqual(bands);
     },
   );
 });

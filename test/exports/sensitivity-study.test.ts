@@ -79,6 +79,8 @@ describe('sensitivityStudy', () => {
     ['rank-by', 'ratio', 'ranking.rank_by', 'ratio'],
     ['adoption-lag', '5', 'code_history.adoption_lag_years', 5],
     ['hold-plateau', 'no', 'hazard.hold_plateau', false],
+    ['overstrength', 'Ω 3.0', 'capacity.overstrength', 3],
+    ['period-spread', '0.45', 'spreads.height_formula', 0.45],
   ] as const)('finds for %s to %s the list that a refresh with %s = %s finds', async (assumption, to, key, value) => {
     const { list } = await refreshStudy(path, { run: 1, set: [{ path: key, value }], made: MADE, reports: false });
     const one = effect(found, assumption, to);

@@ -4,10 +4,14 @@ import type { Estimate } from '../../src/engineering/assess/estimate.js';
 import { DIRECTIONS } from '../../src/engineering/direction.js';
 import { explainBuilding } from '../../src/screening/explain.js';
 import { periodClass, periodSheet } from '../../src/screening/period-sheet.js';
+import { STRUCTURE_SPEC } from '../../src/screening/read-buildings.js';
 import { openStudyDatabase, screen } from '../../src/screening/screen.js';
 import type { Database } from '../../src/store/database.js';
 import { loadStudy } from '../../src/study/load.js';
 import { MADE, demoCopy } from '../support/study-folder.js';
+
+/** Rows that know anything of their structure know one of these. */
+const STRUCTURE = Object.keys(STRUCTURE_SPEC).map((name) => `CAST(b."${name}" AS VARCHAR)`);
 
 let db: Database;
 let runId: number;
@@ -34,7 +38,7 @@ describe('periodSheet', () => {
       const rows = await db.rows<{ id: string }>(
         `SELECT b.id FROM result r JOIN run USING (run_id)
          JOIN building b ON b.inventory_id = run.inventory_id AND b.building_index = r.building_index
-         WHERE r.run_id = ? AND r.rank IS NOT NULL ORDER BY b.id`,
+         WHERE r.run_id = ? AND r.rank IS NOT NULL AND coalesce(${STRUCTURE.join(', ')}) IS NOT NULL ORDER BY b.id`,
         [runId],
       );
       let known = 0;

@@ -16,6 +16,7 @@ import { readAt, slopeFor } from './context.js';
 import type { AssessContext } from './context.js';
 import { demandsOf } from './demands.js';
 import { flagsOf } from './flags.js';
+import { irregularitiesRead } from './irregularity.js';
 import { integrate } from './integrate.js';
 import type { PeriodBand } from './integrate.js';
 import { closeTrace } from './close-trace.js';
@@ -91,7 +92,9 @@ export function assess(
   const lnPriority = context.settings.rankBy === 'demand' ? ln(demand_g) : mixtureQuantile(mixture, 0.5, 0);
   const leading = leadingCase(building, cases, choice, slope_k, context, trace, pass.models);
   if (typeof leading === 'string') return { id, reason: leading };
-  const weak = weakOf(building, cases, context.settings.codeHistory);
+  const read = irregularitiesRead(building, context);
+  const isSoft = building.soft_storey === 'yes' || read.includes('soft_storey');
+  const weak = weakOf(cases, isSoft, context.settings.codeHistory);
   if (trace !== undefined) {
     demandsOf(building, cases, choice, leading, context, trace);
     closeTrace(trace, { building, cases, choice, slope_k, context, mixture, lnPriority, sd: moments.sd });
@@ -110,6 +113,6 @@ export function assess(
     spectrum: spectrum.name,
     weakType: weak.name,
     weakChance: weak.chance,
-    flags: flagsOf(building, cases, choice, leading, pass.disagreement, context),
+    flags: flagsOf(building, cases, choice, leading, pass.disagreement, read, context),
   };
 }

@@ -5,7 +5,6 @@ import { siteCloseness } from '../site/closeness.js';
 import type { Cases } from './case-memory.js';
 import type { SpectrumChoice } from './choose-spectrum.js';
 import type { AssessContext } from './context.js';
-import { irregularitiesRead } from './irregularity.js';
 import type { LeadingCase } from './leading.js';
 import { isChecked } from './strength-check.js';
 
@@ -51,29 +50,14 @@ function closestToSite({ directions }: LeadingCase, { structure }: Building): (t
   return BY_CLOSENESS.find((closeness) => found.includes(closeness)) ?? null;
 }
 
-/** True where an irregularity may be read from numbers: most rows have none of them. */
-function hasNumbers({
-  first_storey_height_m,
-  reentrant_projection,
-  structure,
-  storey_stiffness_kN_per_m,
-}: Building): boolean {
-  return (
-    first_storey_height_m > 0 ||
-    reentrant_projection >= 0 ||
-    structure !== null ||
-    storey_stiffness_kN_per_m.longitudinal !== null ||
-    storey_stiffness_kN_per_m.transverse !== null
-  );
-}
-
-/** Codes of the flags that apply, in the order of FLAGS. */
+/** Codes of the flags that apply, in the order of FLAGS; `read` are the irregularities read from numbers. */
 export function flagsOf(
   building: Building,
   cases: Cases,
   { spectrum, byDefault, classFlag }: SpectrumChoice,
   leading: LeadingCase,
   disagreement: number,
+  read: readonly string[],
   context: AssessContext,
 ): readonly string[] {
   const flags: string[] = [];
@@ -92,8 +76,7 @@ export function flagsOf(
   const site = closestToSite(leading, building);
   if (site !== null) flags.push(SITE_FLAGS[site]);
   if (building.years.length === 1 && cases.systemKnown && cases.list.length > 1) flags.push('near-edition-change');
-  if (hasNumbers(building))
-    for (const name of irregularitiesRead(building, context)) flags.push(`${name.replaceAll('_', '-')}-read`);
+  for (const name of read) flags.push(`${name.replaceAll('_', '-')}-read`);
   if (context.settings.rankBy !== 'demand' && isChecked(building, cases.list[0]!, context, leading.governing))
     flags.push('strength-check');
   if (building.design_base_shear_coefficient > 0 && building.design_level === null) flags.push('design-level-unknown');

@@ -1,7 +1,6 @@
 /**
  * Structural types known to be weak, flagged whatever the rank. Dates are those of the family of codes (capacity/families.ts), or of the study.
  */
-import type { Building } from '../building.js';
 import type { Case, Cases } from './case-memory.js';
 import { familyOf } from './code-history.js';
 import type { CodeHistorySettings } from './settings.js';
@@ -52,8 +51,8 @@ function isWelded(year: number, history: CodeHistorySettings | null): boolean {
   );
 }
 
-/** The weak type of a case, or null. */
-export function weakTypeOf(building: Building, which: Case, history: CodeHistorySettings | null): string | null {
+/** The weak type of a case, or null; `isSoft`: the first storey is soft, by a flag of the row or by its numbers. */
+export function weakTypeOf(which: Case, isSoft: boolean, history: CodeHistorySettings | null): string | null {
   const year = which.editionYear;
   switch (which.system) {
     case 'unreinforced-masonry-wall':
@@ -68,7 +67,7 @@ export function weakTypeOf(building: Building, which: Case, history: CodeHistory
       return isWelded(year, history) ? 'welded-steel-frame' : null;
     case 'timber-light-frame':
     case 'timber-post-and-beam':
-      return building.soft_storey === 'yes' ? 'open-front-timber' : null;
+      return isSoft ? 'open-front-timber' : null;
     case 'precast-tilt-up-wall':
       return year < dateOf('tilt_up_before', history) ? 'tilt-up-before-wall-anchors' : null;
     case 'precast-concrete-frame':
@@ -80,18 +79,18 @@ export function weakTypeOf(building: Building, which: Case, history: CodeHistory
 
 /** The most likely weak type over the cases, and the chance of any. */
 export function weakOf(
-  building: Building,
   cases: Cases,
+  isSoft: boolean,
   history: CodeHistorySettings | null,
 ): { readonly name: string | null; readonly chance: number } {
   if (cases.list.length === 1) {
-    const only = weakTypeOf(building, cases.list[0]!, history);
+    const only = weakTypeOf(cases.list[0]!, isSoft, history);
     return { name: only, chance: only === null ? 0 : 1 };
   }
   const chances = new Map<string, number>();
   let chance = 0;
   for (const which of cases.list) {
-    const name = weakTypeOf(building, which, history);
+    const name = weakTypeOf(which, isSoft, history);
     if (name === null) continue;
     chance += which.chance;
     chances.set(name, (chances.get(name) ?? 0) + which.chance);

@@ -7,7 +7,7 @@ import type { Use } from '../building.js';
 export interface UseValues {
   readonly people_per_m2: number;
   readonly hours_per_week: number;
-  readonly verified: 'memory' | 'judgement';
+  readonly verified: 'memory' | 'judgement' | 'study';
 }
 
 export const USE_VALUES: Readonly<Record<Use, UseValues>> = {

@@ -6,8 +6,8 @@ import type { Mixture } from './mixture.js';
 import { changedSpread, toOwn } from './shared.js';
 import type { Common } from './shared.js';
 
-/** Where the edge stands for the parts of each class: its middle positions over the draws, equally likely. */
-const NODES = 64;
+/** Draws gathered into one position of the edge; fewer towards the ends, down to one: small chances hang on the ends. */
+const EACH = 64;
 /** Parts of mixtures looked at at every position. */
 const MOST_PARTS = 200_000;
 /** Below this chance, or above 1 less it, a building is left as it is. */
@@ -20,14 +20,30 @@ function edgeSeen({ shared, draws }: Common, zone: number, label: number, d: num
   return draws.edge[d]! - siteLoad * draws.ofZone[zone]![d]! - ofEra;
 }
 
-/** The positions of the edge for one class, gathered from the sorted draws into `NODES` means. */
-function nodesOf(common: Common, zone: number, label: number): Float64Array {
+/** Positions of the edge, with the share of the draws that stand there. */
+interface Nodes {
+  readonly at: Float64Array;
+  readonly share: Float64Array;
+}
+
+/** How many draws each position stands for, from the lowest to the highest. */
+function sizesOf(draws: number): readonly number[] {
+  const sizes: number[] = [];
+  for (let left = draws / 2, size = 1; left > 0; left -= sizes.at(-1)!, size = Math.min(EACH, 2 * size))
+    sizes.push(Math.min(size, left));
+  return [...sizes, ...[...sizes].reverse()];
+}
+
+/** The positions of the edge for one class: means of its sorted draws. */
+function nodesOf(common: Common, zone: number, label: number): Nodes {
   const seen = common.draws.edge.map((_, d) => edgeSeen(common, zone, label, d)).sort();
-  const each = seen.length / NODES;
-  return Float64Array.from({ length: NODES }, (_, node) => {
-    const some = seen.subarray(Math.round(node * each), Math.round((node + 1) * each));
-    return some.reduce((sum, x) => sum + x, 0) / some.length;
+  const sizes = sizesOf(seen.length);
+  let from = 0;
+  const at = Float64Array.from(sizes, (size) => {
+    const some = seen.subarray(from, (from += size));
+    return some.reduce((sum, x) => sum + x, 0) / size;
   });
+  return { at, share: Float64Array.from(sizes, (size) => size / seen.length) };
 }
 
 /**
@@ -43,8 +59,8 @@ export function averagedChances(
   const contested = Array.from(chance.keys()).filter((i) => chance[i]! > CONTESTED && chance[i]! < 1 - CONTESTED);
   const parts = contested.reduce((sum, i) => sum + mixtures[i]!.to - mixtures[i]!.from, 0);
   if (contested.length === 0 || parts > MOST_PARTS) return chance;
-  const nodes = new Map<number, Float64Array>();
-  const nodesFor = (zone: number, label: number): Float64Array => {
+  const nodes = new Map<number, Nodes>();
+  const nodesFor = (zone: number, label: number): Nodes => {
     const key = zone * (NO_LABEL + 1) + label;
     let found = nodes.get(key);
     if (found === undefined) nodes.set(key, (found = nodesOf(common, zone, label)));
@@ -59,8 +75,10 @@ export function averagedChances(
     for (let k = from; k < to; k += 1) {
       const label = labelOf(mixture, k);
       const own = changedSpread(sd[k]!, toOwn(common, i, label));
-      const w = weight[k]! / NODES;
-      for (const x of nodesFor(common.shared.zone[i]!, label)) {
+      const { at: positions, share } = nodesFor(common.shared.zone[i]!, label);
+      for (let n = 0; n < positions.length; n += 1) {
+        const w = weight[k]! * share[n]!;
+        const x = positions[n]!;
         if (own > 0) {
           const u = (mean[k]! - x) / own;
           const e = exp(-0.5 * u * u);

@@ -1,10 +1,11 @@
 import { describe, expect, it } from 'vitest';
+import { assess, isRanked } from '../../../src/engineering/assess/assess.js';
 import { casesOf } from '../../../src/engineering/assess/cases.js';
 import { compileContext } from '../../../src/engineering/assess/context.js';
 import type { CodeHistorySettings } from '../../../src/engineering/assess/settings.js';
 import { weakOf } from '../../../src/engineering/assess/weak.js';
-import type { System } from '../../../src/engineering/building.js';
-import { building } from '../../support/engineering-building.js';
+import type { Building, System } from '../../../src/engineering/building.js';
+import { building, given } from '../../support/engineering-building.js';
 import { codeHistory } from '../../support/code-histories.js';
 import { SETTINGS } from '../../support/engineering-settings.js';
 
@@ -13,7 +14,7 @@ function weak(history: CodeHistorySettings | null, system: System, year: number)
   const one = building({ system, years: [year] });
   const cases = casesOf(one, context);
   if (typeof cases === 'string') throw new Error(cases);
-  return weakOf(one, cases, history).name;
+  return weakOf(cases, false, history).name;
 }
 
 describe('weakOf', () => {
@@ -49,6 +50,21 @@ describe('weakOf', () => {
     expect(weak(own, 'steel-moment-frame', 1985)).toBe('welded-steel-frame');
     const greek = codeHistory('greece', { weak_types: { welded_from: 1980, welded_before: 1990 } });
     expect(weak(greek, 'steel-moment-frame', 1991)).toBe('welded-steel-frame');
+  });
+
+  it('knows timber with a soft first storey by a flag of the row, or by its numbers', () => {
+    // ASCE/SEI 7-16 Table 12.3-2: under 0.7 of the stiffness above; two storeys, the first with 0.3 of the second
+    const context = compileContext(SETTINGS);
+    const timber = (change: Partial<Building>): string | null => {
+      const found = assess(building({ system: 'timber-light-frame', years: [1960], ...change }), context);
+      if (!isRanked(found)) throw new Error(found.reason);
+      return found.weakType;
+    };
+    const stiffness = { longitudinal: [30_000, 100_000], transverse: [90_000, 100_000] };
+    expect(timber({})).toBeNull();
+    expect(timber({ soft_storey: 'yes' })).toBe('open-front-timber');
+    expect(timber({ storeys: given(2), storey_stiffness_kN_per_m: stiffness })).toBe('open-front-timber');
+    expect(timber({ storeys: given(2), storey_stiffness_kN_per_m: stiffness, soft_storey: 'no' })).toBeNull();
   });
 
   it('takes every building for old where there is no code history', () => {
