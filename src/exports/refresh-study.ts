@@ -91,7 +91,11 @@ export async function refreshStudy(path: string, options: RefreshStudyOptions = 
     options.onOpen?.(db);
     const { run } = await chosenRun(db, options);
     const base = await baseRun(db, own, run);
-    const outcome = await refresh(db, base, loaded, { ...options, outlook: true, made: options.made ?? new Date() });
+    const outcome = await refresh(db, base, loaded, {
+      ...options,
+      outlook: options.reports !== false,
+      made: options.made ?? new Date(),
+    });
     const written = write ? replaceFile(own.file, own.text, loaded.text) : null;
     const { buildings } = outcome.taken;
     const list = await listChange(
