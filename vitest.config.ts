@@ -18,6 +18,9 @@ export default defineConfig({
         extends: true,
         test: {
           name: 'unit',
+          globalSetup: ['test/support/temporary-setup.ts'],
+          // As below; what must not be shared (working folders, environment) no test changes.
+          isolate: false,
           include: ['test/**/*.test.ts'],
           exclude: ['test/browser/**', 'test/engineering/**', 'test/reference/**', 'test/fixtures/**'],
         },
@@ -36,7 +39,7 @@ export default defineConfig({
         test: {
           name: 'browser',
           include: ['test/browser/**/*.test.ts'],
-          globalSetup: ['test/support/chromium-setup.ts'],
+          globalSetup: ['test/support/chromium-setup.ts', 'test/support/temporary-setup.ts'],
         },
       },
     ],

@@ -1,26 +1,16 @@
 /** An intake of a small table written to a folder of its own, in a database in memory. */
-import { mkdtempSync, rmSync, writeFileSync } from 'node:fs';
-import { tmpdir } from 'node:os';
+import { mkdtempSync, writeFileSync } from 'node:fs';
 import { join } from 'node:path';
-import { afterAll } from 'vitest';
 import type { IntakeStudy } from '../../src/inventory/intake-study.js';
 import { takeIn } from '../../src/inventory/take-in.js';
 import type { TakenIn } from '../../src/inventory/take-in.js';
 import { openDatabase } from '../../src/store/database.js';
 import type { Database } from '../../src/store/database.js';
 import { prepareSchema } from '../../src/store/schema.js';
-
-const made: string[] = [];
-const open: Database[] = [];
-afterAll(() => {
-  for (const db of open) db.close();
-  for (const folder of made) rmSync(folder, { recursive: true, force: true });
-});
+import { testRoot } from './test-root.js';
 
 export function tempFolder(): string {
-  const folder = mkdtempSync(join(tmpdir(), 'swaymark-test-'));
-  made.push(folder);
-  return folder;
+  return mkdtempSync(join(testRoot(), 'intake-'));
 }
 
 export function writeTable(content: string | Buffer, name = 'inventory.csv'): string {
@@ -60,9 +50,9 @@ export interface Intake {
   readonly findings: readonly Finding[];
 }
 
+/** Open to the end of the tests. */
 export async function memoryDatabase(): Promise<Database> {
   const db = await openDatabase({ path: ':memory:' });
-  open.push(db);
   await prepareSchema(db);
   return db;
 }

@@ -1,21 +1,13 @@
-/** A copy of the demo in a folder of its own, removed when the test file ends. */
-import { cpSync, mkdtempSync, readFileSync, rmSync, writeFileSync } from 'node:fs';
-import { tmpdir } from 'node:os';
+/** A copy of the demo in a folder of its own, removed when all tests have ended. */
+import { cpSync, mkdtempSync, readFileSync, writeFileSync } from 'node:fs';
 import { join } from 'node:path';
-import { afterAll } from 'vitest';
-
-const made: string[] = [];
-
-afterAll(() => {
-  for (const folder of made) rmSync(folder, { recursive: true, force: true });
-});
+import { testRoot } from './test-root.js';
 
 /** Path of the copy's study.yaml; `change` may rewrite the inventory's text or the study's. */
 export function demoCopy(
   change: { inventory?: (text: string) => string; study?: (text: string) => string } = {},
 ): string {
-  const folder = mkdtempSync(join(tmpdir(), 'swaymark-test-'));
-  made.push(folder);
+  const folder = mkdtempSync(join(testRoot(), 'study-'));
   for (const name of ['inventory.csv', 'neighbours.csv', 'system-prior.csv', 'study.yaml']) {
     cpSync(join('data-demo', name), join(folder, name));
   }
