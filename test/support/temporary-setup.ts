@@ -3,10 +3,13 @@ import { mkdtempSync, rmSync } from 'node:fs';
 import { tmpdir } from 'node:os';
 import { join } from 'node:path';
 
-export default function setup(): () => void {
-  const root = mkdtempSync(join(tmpdir(), 'swaymark-tests-'));
+let root: string | undefined;
+
+export function setup(): void {
+  root = mkdtempSync(join(tmpdir(), 'swaymark-tests-'));
   process.env['SWAYMARK_TEST_ROOT'] = root;
-  return () => {
-    rmSync(root, { recursive: true, force: true });
-  };
+}
+
+export function teardown(): void {
+  if (root !== undefined) rmSync(root, { recursive: true, force: true });
 }
