@@ -1,18 +1,22 @@
 /** Intake and data quality of a study's inventory, without keeping anything. */
+import { statSync } from 'node:fs';
 import { chooseSpectrum } from '../engineering/assess/choose-spectrum.js';
 import { compileContext } from '../engineering/assess/context.js';
 import { noPlaceReason, outsideReason } from '../engineering/assess/site-spectrum.js';
 import { buildingReader } from '../engineering/building-columns.js';
 import type { AccountLine, AttributeCount, FindingCount } from '../engineering/page-contract.js';
+import type { Answer } from '../inventory/answers.js';
+import { currentAnswers } from '../inventory/kept-answers.js';
 import { takeIn } from '../inventory/take-in.js';
 import type { TakenIn } from '../inventory/take-in.js';
 import { readBuildings } from '../screening/read-buildings.js';
+import { databasePath } from '../screening/screen.js';
 import { settingsOf } from '../screening/settings.js';
 import { accountLines, attributeCounts, findingCounts } from '../screening/summarise.js';
 import { indexRanges } from '../store/chunks.js';
 import { openDatabase } from '../store/database.js';
 import type { Database } from '../store/database.js';
-import { prepareSchema } from '../store/schema.js';
+import { prepareSchema, schemaState } from '../store/schema.js';
 import { loadStudy } from '../study/load.js';
 import type { LoadedStudy } from '../study/load.js';
 import { writeRejectsCsv } from './rejects.js';
@@ -88,15 +92,32 @@ export function rejectedShare(
   return { share, limit, over: share > limit };
 }
 
+/** The answers of surveys that the next screening will lay over the inventory: read without bringing an earlier database up to date. */
+async function answersOf(loaded: LoadedStudy): Promise<readonly Answer[]> {
+  const path = databasePath(loaded);
+  // one that was only begun is empty
+  if ((statSync(path, { throwIfNoEntry: false })?.size ?? 0) === 0) return [];
+  const db = await openDatabase({ path, readOnly: true, folders: [loaded.folder] });
+  try {
+    // refuses that of a newer program
+    await schemaState(db);
+    return await currentAnswers(db);
+  } finally {
+    db.close();
+  }
+}
+
 /**
- * Takes the inventory of the study at `path` into memory and says what became of its rows and values; nothing is kept.
- * @throws UserError for a fault in the study, the file, its header or the mapping.
+ * Takes the inventory of the study at `path` into memory, with the answers of surveys laid over it as `screen` would, and says what became
+ * of its rows and values; nothing is kept.
+ * @throws UserError for a fault in the study, the file, its header or the mapping, or a database of the study that cannot be read.
  * @example
  * const { account, findings, rejected } = await checkStudy('study.yaml');
  */
 export async function checkStudy(path: string, options: CheckOptions = {}): Promise<CheckedStudy> {
   const loaded = await loadStudy(path);
   const folder = options.output === undefined ? undefined : prepareFolder(options.output);
+  const answers = await answersOf(loaded);
   const db = await openDatabase({
     path: ':memory:',
     folders: [loaded.folder, ...(folder === undefined ? [] : [folder])],
@@ -113,6 +134,7 @@ export async function checkStudy(path: string, options: CheckOptions = {}): Prom
           options.onProgress?.({ step, share: NaN });
         },
         begin,
+        answers,
       ),
     );
     const { inventoryId } = taken;

@@ -9,22 +9,30 @@ import type { Database } from '../store/database.js';
 import { readText } from '../study/read-text.js';
 import type { Study } from '../study/schema.js';
 
-/** What is written where nothing was asked or found out. */
-const NOTHING = new Set(['', '-', '–', '—', '?']);
+/** What is written where nothing was asked or looked for. */
+const NOTHING = new Set(['', '-', '–', '—']);
+/** What is written where the visit looked and could not find out. */
+const NOT_FOUND = /^(?:\?|not found)$/i;
+/** The same, unless the study has a meaning for it. */
+const UNKNOWN = 'unknown';
 const MOST_ROWS = 1_000_000;
 
 export interface TakenAnswers {
   readonly answers: number;
+  /** With an answer, or with something not found. */
   readonly buildings: number;
-  /** How many of each column. */
+  /** How many answers of each column. */
   readonly columns: Readonly<Record<string, number>>;
+  /** How many cells of each column say that it was looked for and not found. */
+  readonly not_found: Readonly<Record<string, number>>;
 }
 
 interface Given {
   readonly row: number;
   readonly id: string;
   readonly column: string;
-  readonly cell: string;
+  /** Null: looked for, not found. */
+  readonly cell: string | null;
   readonly visit: string | null;
   readonly surveyor: string | null;
   readonly surveyed_on: string | null;
@@ -33,8 +41,10 @@ interface Given {
 
 /**
  * Takes the answers of the sheet `file` into the database of the study at `path`; the next screening uses them, the owner's inventory stays as
- * it is. Columns are those of the sheet of `survey --csv`; blank cells and dashes answer nothing. All or nothing.
- * @throws UserError with every cell that cannot be read, a row without an id or with one the newest run does not hold, an unknown column.
+ * it is. Columns are those of the sheet of `survey --csv`; blank cells and dashes say nothing, `?` or `not found` that the visit looked
+ * and could not find out: plans then no longer count on that kind of visit for it. All or nothing.
+ * @throws UserError with every cell that cannot be read, a row without an id or with one the newest run does not hold, something not found
+ * without a kind of visit that the study knows, an unknown column.
  * @example
  * const { answers } = await takeAnswers('study.yaml', 'field.csv', new Date());
  */
@@ -55,12 +65,23 @@ export async function takeAnswers(path: string, file: string, taken: Date): Prom
         given.map(({ surveyed_on }) => surveyed_on),
         given.map(({ remark }) => remark),
         given.map(() => taken.toISOString()),
+        given.map(() => null),
       ]);
     });
-    const columns: Record<string, number> = {};
-    for (const { column } of given) columns[column] = (columns[column] ?? 0) + 1;
-    return { answers: given.length, buildings: new Set(given.map(({ id }) => id)).size, columns };
+    const answers = given.filter(({ cell }) => cell !== null);
+    return {
+      answers: answers.length,
+      buildings: new Set(given.map(({ id }) => id)).size,
+      columns: countColumns(answers),
+      not_found: countColumns(given.filter(({ cell }) => cell === null)),
+    };
   });
+}
+
+function countColumns(given: readonly Given[]): Readonly<Record<string, number>> {
+  const columns: Record<string, number> = {};
+  for (const { column } of given) columns[column] = (columns[column] ?? 0) + 1;
+  return columns;
 }
 
 function readSheet(text: string, file: string, study: Study): readonly Given[] {
@@ -81,41 +102,81 @@ function readSheet(text: string, file: string, study: Study): readonly Given[] {
   const problems: Problem[] = [];
   const given: Given[] = [];
   rows.slice(1).forEach((cells, i) => {
-    const row = i + 2;
-    const cellOf = (name: string): string | null => {
-      // a cell that was guarded against formulas comes back with its apostrophe
-      const cell = (cells[at(name)] ?? '').trim().replace(/^'(?=[=+@-])/, '');
-      return at(name) < 0 || NOTHING.has(cell) ? null : cell;
-    };
-    const id = cellOf('id');
-    for (const name of asked) {
-      const cell = cellOf(name);
-      if (cell === null) continue;
-      const place = { file, row, columnName: name };
-      if (id === null) {
-        problems.push({ place: { file, row, columnName: 'id' }, message: 'an answer without the id of a building' });
-        return;
-      }
-      const column = findColumn(name);
-      const read = column === undefined ? { wrong: 'no such column' } : readAnswer(column, cell, study);
-      if (typeof read === 'object') problems.push({ place, message: read.wrong });
-      else
-        given.push({
-          row,
-          id,
-          column: name,
-          cell,
-          visit: cellOf('visit'),
-          surveyor: cellOf('surveyor'),
-          surveyed_on: cellOf('surveyed_on'),
-          remark: cellOf('remark'),
-        });
-    }
+    const found = readRow(i + 2, { cellOf: (name) => cells[at(name)] ?? '', asked, file, study });
+    given.push(...found.given);
+    problems.push(...found.problems);
   });
   if (problems.length > 0) throw UserError.of(problems);
   if (given.length === 0)
     throw new UserError('the sheet answers nothing: every cell is blank or holds a dash', { file });
   return given;
+}
+
+interface SheetRow {
+  readonly cellOf: (name: string) => string;
+  /** Columns of the sheet that answer something. */
+  readonly asked: readonly string[];
+  readonly file: string;
+  readonly study: Study;
+}
+
+function readRow(
+  row: number,
+  { cellOf, asked, file, study }: SheetRow,
+): { readonly given: readonly Given[]; readonly problems: readonly Problem[] } {
+  const written = (name: string): string | null => {
+    // a cell that was guarded against formulas comes back with its apostrophe
+    const cell = cellOf(name)
+      .trim()
+      .replace(/^'(?=[=+@-])/, '');
+    return NOTHING.has(cell) ? null : cell;
+  };
+  const about = (name: string): string | null => (written(name) === '?' ? null : written(name));
+  const answered = asked.flatMap((column) => {
+    const cell = written(column);
+    return cell === null ? [] : [{ column, cell }];
+  });
+  if (answered.length === 0) return { given: [], problems: [] };
+  const id = about('id');
+  if (id === null)
+    return {
+      given: [],
+      problems: [{ place: { file, row, columnName: 'id' }, message: 'an answer without the id of a building' }],
+    };
+  const visit = visitCalled(about('visit'), study);
+  const rest = { surveyor: about('surveyor'), surveyed_on: about('surveyed_on'), remark: about('remark') };
+  const given: Given[] = [];
+  const problems: Problem[] = [];
+  for (const { column, cell } of answered) {
+    const read = readFound(column, cell, study);
+    if (typeof read === 'object' && read !== null) {
+      problems.push({ place: { file, row, columnName: column }, message: read.wrong });
+      continue;
+    }
+    given.push({ row, id, column, cell: read === null ? null : cell, visit: visit ?? about('visit'), ...rest });
+  }
+  const missing = given.find((one) => one.cell === null);
+  if (missing !== undefined && visit === undefined)
+    problems.push({
+      place: { file, row, columnName: 'visit' },
+      message: `${missing.column} is ${showValue(written(missing.column))}, looked for and not found, and ${missing.visit === null ? 'no kind of visit is named' : `${showValue(missing.visit)} is no kind of visit of the study`}: name the one that looked (${Object.keys(study.survey.visits).join(', ')}), or leave cells blank where nobody looked`,
+    });
+  return { given, problems };
+}
+
+/** A cell as it will be read; null where it says that it could not be found out. */
+function readFound(name: string, cell: string, study: Study): ReturnType<typeof readAnswer> | null {
+  if (NOT_FOUND.test(cell.replace(/\s+/g, ' '))) return null;
+  const column = findColumn(name);
+  const read = column === undefined ? { wrong: 'no such column' } : readAnswer(column, cell, study);
+  // a word for what is not known: it must not take the place of what the owner wrote
+  return read === UNKNOWN || (typeof read === 'object' && cell.toLowerCase() === UNKNOWN) ? null : read;
+}
+
+/** The study's name of a kind of visit, whichever case it is written in. */
+function visitCalled(written: string | null, { survey }: Study): string | undefined {
+  const names = Object.keys(survey.visits);
+  return names.find((name) => name === written) ?? names.find((name) => name.toLowerCase() === written?.toLowerCase());
 }
 
 function recordsOf(text: string, file: string): readonly (readonly string[])[] {

@@ -31,7 +31,7 @@ export const ANSWERS: Readonly<Record<Unknown, readonly string[]>> = {
 /** Every column that answers something. */
 export const ANSWER_COLUMNS: readonly string[] = Object.values(ANSWERS).flat();
 
-/** One answer as it is kept. */
+/** One answer that counts, as it is kept. */
 export interface Answer {
   readonly id: string;
   readonly column_name: string;
@@ -65,17 +65,6 @@ export function readAnswer(
 function answerColumn(column: InventoryColumn): MappedColumn {
   const stored = column.unit === undefined ? undefined : findUnit(column.unit);
   return { column, theirs: 'survey', position: -1, unit: stored, stored };
-}
-
-/** The answers that count: of several to one question the last. */
-export async function currentAnswers(db: Database): Promise<readonly Answer[]> {
-  if ((await db.value("SELECT count(*) FROM information_schema.tables WHERE table_name = 'survey_answer'")) === 0)
-    return [];
-  return db.rows<Answer>(
-    `SELECT id, column_name, last(cell ORDER BY answer) AS cell, last(visit ORDER BY answer) AS visit,
-       last(surveyor ORDER BY answer) AS surveyor, last(surveyed_on ORDER BY answer) AS surveyed_on
-     FROM survey_answer GROUP BY id, column_name ORDER BY id, column_name`,
-  );
 }
 
 /** Stands for the answers in the fingerprint of an inventory; null where there are none. */

@@ -5,7 +5,7 @@ import type { Database } from '../store/database.js';
 import { canonicalJson } from '../study/fingerprint.js';
 import { readAccount, storeAccount } from './account.js';
 import type { RowAccount } from './account.js';
-import { answersFingerprint, currentAnswers, layAnswers } from './answers.js';
+import { answersFingerprint, layAnswers } from './answers.js';
 import type { Answer } from './answers.js';
 import { countAttributes } from './attributes.js';
 import type { Attributes } from './attributes.js';
@@ -19,6 +19,7 @@ import { mapHeader } from './header.js';
 import type { Mapping } from './header.js';
 import { inferSizes } from './infer.js';
 import type { IntakeStudy } from './intake-study.js';
+import { currentAnswers } from './kept-answers.js';
 import { inspectNeighbours, takeInNeighbours } from './neighbours.js';
 import { noteListLengths } from './list-lengths.js';
 import { notePartOf } from './part-of.js';
@@ -50,7 +51,7 @@ export type IntakeStep = 'opening' | 'reading' | 'casting' | 'checking' | 'stori
 
 /**
  * Takes an inventory into the database, inside the caller's transaction, which `begin` begins where it has not yet; paths are
- * relative to `folder`.
+ * relative to `folder`. `found` are the answers of surveys laid over it; those that `db` keeps when left out.
  * @throws UserError when the file, its header or the mapping is at fault, or no row is a building.
  */
 export async function takeIn(
@@ -59,12 +60,13 @@ export async function takeIn(
   folder: string,
   progress: (step: IntakeStep) => void = () => undefined,
   begin: () => Promise<void> = () => Promise.resolve(),
+  found?: readonly Answer[],
 ): Promise<TakenIn> {
   progress('opening');
   const path = at(folder, study.inventory.file);
   const source = inspectSource(path, study.inventory.encoding);
   const pairs = study.neighbours === undefined ? undefined : inspectNeighbours(at(folder, study.neighbours.file));
-  const answers = await currentAnswers(db);
+  const answers = found ?? (await currentAnswers(db));
   const inventoryId = fingerprint(source, pairs, study, answers);
   if ((await db.value('SELECT count(*) FROM inventory WHERE inventory_id = ?', [inventoryId])) === 1)
     return readTaken(db, inventoryId);

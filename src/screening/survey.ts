@@ -6,7 +6,7 @@ import type { YearPools } from '../engineering/building-columns.js';
 import { buildingReader } from '../engineering/building-columns.js';
 import type { SurveyVisit } from '../engineering/page-contract.js';
 import type { Candidate, Cost, Limits, PlannedVisit, Visit } from '../engineering/priority/campaign.js';
-import { planCampaign } from '../engineering/priority/campaign.js';
+import { planCampaign, withinReach } from '../engineering/priority/campaign.js';
 import type { Mixture } from '../engineering/priority/mixture.js';
 import { commonTo, rankBasis } from '../engineering/priority/rank.js';
 import type { RankBasis } from '../engineering/priority/rank.js';
@@ -15,6 +15,7 @@ import { KNOWN_CHANCE, edgeOf, mostWorth, shareOf, worthOf } from '../engineerin
 import { seenFromEdge } from '../engineering/priority/unknowns-from-edge.js';
 import type { HazardGrids } from '../engineering/spectrum/grid.js';
 import { UserError } from '../errors.js';
+import { failedVisits } from '../inventory/kept-answers.js';
 import { indexRanges } from '../store/chunks.js';
 import type { Database } from '../store/database.js';
 import { assessAll } from './assess-all.js';
@@ -57,7 +58,7 @@ export interface SurveyPlan {
   readonly money: number;
   readonly expected_wrong_before: number;
   readonly expected_wrong_after: number;
-  /** Were everything known of the weighed buildings that a visit can find out. */
+  /** Were everything known of the weighed buildings that a visit can still find out. */
   readonly expected_wrong_least: number;
   /** Ranked buildings; those of which something could be learnt that matters; those weighed one by one. */
   readonly ranked: number;
@@ -65,7 +66,9 @@ export interface SurveyPlan {
   readonly weighed: number;
   /** Only those that could be worth most were weighed. */
   readonly capped: boolean;
-  /** Value of every unknown of every weighed building together, and how many buildings hold 80 % of it. */
+  /** Weighed buildings at which a visit failed to find something out: that kind of visit is not counted on for it again. */
+  readonly failed_at: number;
+  /** Value of all that visits can still find out of every weighed building together, and how many buildings hold 80 % of it. */
   readonly value_of_all: number;
   readonly buildings_of_80_percent: number;
 }
@@ -131,6 +134,7 @@ export async function planOn(
   const { chosen, worthVisiting } = mostPromising(assessed.index, mixtures, edge);
   const placeOf = new Map(Array.from(assessed.index, (index, at) => [index, at] as const));
   const context = compileContext(settings, grids);
+  const failed = await failedVisits(db, inventoryId);
   const candidates: Candidate[] = [];
   const shares = new Map<number, ReadonlyMap<Unknown, number>>();
   for (const range of indexRanges(count, BLOCK)) {
@@ -142,7 +146,7 @@ export async function planOn(
       const found = unknownsOf(read(index - range.from), context);
       if (found === null || found.learnable.length === 0) continue;
       const unknowns = common === undefined ? found : seenFromEdge(found, common, placeOf.get(index)!);
-      candidates.push({ index, worth: worthOf(unknowns, edge) });
+      candidates.push({ index, worth: worthOf(unknowns, edge), failed: failed.get(index) });
       shares.set(index, new Map(unknowns.learnable.map((one) => [one.unknown, shareOf(unknowns, one)])));
     }
     report('weighing', range.to / count);
@@ -153,7 +157,7 @@ export async function planOn(
   order.forEach((at, place) => (rankOf[assessed.index[at]!] = place + 1));
   candidates.sort((a, b) => rankOf[a.index]! - rankOf[b.index]!);
   const planned = planCampaign(candidates, visits, limits, cost);
-  const all = candidates.map(({ worth }) => worth.value.at(-1)!).sort((a, b) => b - a);
+  const all = candidates.map((one) => one.worth.value[withinReach(one, visits)]!).sort((a, b) => b - a);
   const valueOfAll = all.reduce((sum, value) => sum + value, 0);
   let wrong = expectedWrong;
   const named = await namesOf(db, inventoryId, [...new Set(planned.map(({ index }) => index))]);
@@ -173,21 +177,22 @@ export async function planOn(
     money: planned.at(-1)?.money ?? 0,
     expected_wrong_before: expectedWrong,
     expected_wrong_after: steps.at(-1)?.expected_wrong_places ?? expectedWrong,
-    expected_wrong_least: leastWrong(candidates, expectedWrong),
+    expected_wrong_least: leastWrong(candidates, visits, expectedWrong),
     ranked: assessed.id.length,
     worth_visiting: worthVisiting,
     weighed: candidates.length,
     capped: worthVisiting > MOST_CANDIDATES,
+    failed_at: candidates.filter((one) => one.failed !== undefined).length,
     value_of_all: valueOfAll,
     buildings_of_80_percent: holding(all, 0.8 * valueOfAll),
   };
 }
 
-/** Wrong places with everything known of the candidates that a visit finds out: the list then ends at its threshold. */
-function leastWrong(candidates: readonly Candidate[], today: number): number {
+/** Wrong places with everything known of the candidates that a visit can still find out: the list then ends at its threshold. */
+function leastWrong(candidates: readonly Candidate[], visits: readonly Visit[], today: number): number {
   const mended = sumOf(
     candidates,
-    ({ worth: { wrongOf, value } }) => wrongOf(0, KNOWN_CHANCE) - wrongOf(value.length - 1, KNOWN_CHANCE),
+    (one) => one.worth.wrongOf(0, KNOWN_CHANCE) - one.worth.wrongOf(withinReach(one, visits), KNOWN_CHANCE),
   );
   return Math.max(0, today - 0.5 * mended);
 }

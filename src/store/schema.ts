@@ -114,8 +114,9 @@ export const MIGRATIONS: readonly Migration[] = [
       'CREATE TABLE hazard_grid (grid_number INTEGER PRIMARY KEY, grid_id VARCHAR NOT NULL, axes VARCHAR NOT NULL)',
       'CREATE TABLE hazard_ordinate (grid_number INTEGER NOT NULL, place INTEGER NOT NULL, period INTEGER NOT NULL, sa_g DOUBLE NOT NULL)',
       'CREATE TABLE run_grid (run_id INTEGER NOT NULL, grid_number INTEGER NOT NULL)',
-      // What surveys have found out, cell by cell as it was written down; of two answers to one question the later counts.
-      'CREATE TABLE survey_answer (answer INTEGER NOT NULL, id VARCHAR NOT NULL, column_name VARCHAR NOT NULL, cell VARCHAR NOT NULL, visit VARCHAR, surveyor VARCHAR, surveyed_on VARCHAR, remark VARCHAR, taken VARCHAR NOT NULL)',
+      // What surveys have found out, cell by cell as it was written down, NULL where it could not be found out; of two answers to one
+      // question the later counts. What is withdrawn stays, with the time of that.
+      'CREATE TABLE survey_answer (answer INTEGER NOT NULL, id VARCHAR NOT NULL, column_name VARCHAR NOT NULL, cell VARCHAR, visit VARCHAR, surveyor VARCHAR, surveyed_on VARCHAR, remark VARCHAR, taken VARCHAR NOT NULL, withdrawn VARCHAR)',
       `ALTER TABLE result_assessed ALTER COLUMN "case_edition" SET DATA TYPE ENUM ('no seismic design', 'ubc-1927', 'ubc-1935',
       'ubc-1949', 'ubc-1961', 'ubc-1976', 'ubc-1988', 'ubc-1997', 'asce7-2002', 'japan-1924', 'japan-1950', 'japan-1981',
       'nz-1935', 'nz-1955', 'nz-1965', 'nz-1976', 'nz-2004', 'italy-1909', 'italy-1935', 'italy-1975', 'italy-2003',

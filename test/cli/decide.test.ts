@@ -1,6 +1,7 @@
 import { existsSync, readFileSync, writeFileSync } from 'node:fs';
 import { join } from 'node:path';
-import { afterAll, beforeAll, describe, expect, it } from 'vitest';
+import { afterAll, beforeAll, describe, expect, it, vi } from 'vitest';
+import { answersJob } from '../../src/cli/commands/survey-answers.js';
 import { SMALL_STUDY, buildCommand, scratch, swaymark, writeSmallStudy } from '../support/cli.js';
 
 const small = scratch();
@@ -58,6 +59,57 @@ describe('budget', () => {
     expect(unknown.code).toBe(2);
     expect(unknown.err).toMatch(/^study\.yaml:\d+:\d+ budget\.include\.1\.id: run 1 has no building "A9"/);
     writeFileSync(study, SMALL_STUDY);
+  });
+});
+
+/** What a job on answers prints; a process of its own for each would take longer than all of them. */
+async function inside(options: Parameters<typeof answersJob>[0]): Promise<string> {
+  const written = vi.spyOn(process.stdout, 'write').mockReturnValue(true);
+  try {
+    expect(await answersJob({ ...options, study })?.()).toBe(0);
+    return written.mock.calls.map(([text]) => String(text)).join('');
+  } finally {
+    written.mockRestore();
+  }
+}
+
+describe('survey', () => {
+  it('takes answers and what was not found, lists them and withdraws them', async () => {
+    writeFileSync(
+      join(small.folder, 'back.csv'),
+      'id,visit,surveyor,system,height_m\nA1,street,"N.\u202e",timber-light-frame,?\n',
+    );
+    const taken = await inside({ take: join(small.folder, 'back.csv') });
+    expectPlain(taken);
+    expect(taken.replaceAll('\n', ' ')).toMatch(
+      /1 answer for 1 building taken: system \(1\)\. 1 cell says that it could not be found out: height_m \(1\)\./,
+    );
+    const listed = await inside({ answers: true });
+    expectPlain(listed);
+    expect(listed).toMatch(/^A1 +system +timber-light-frame +street .*yes$/m);
+    expect(listed).toMatch(/^A1 +height_m +not found +street .*yes$/m);
+    const gone = run('survey', '--withdraw', 'A1', '--question', 'system');
+    expect([gone.code, gone.err]).toEqual([0, '']);
+    expectPlain(gone.out);
+    expect(gone.out).toContain('lateral system (system): timber-light-frame, street visit');
+    const rest = JSON.parse(await inside({ withdraw: 'A1', json: true })) as Record<string, unknown>[];
+    expect(rest).toMatchObject([{ id: 'A1', question: 'height', column: 'height_m', cell: null, counts: false }]);
+    const again = run('survey', '--withdraw', 'A1');
+    expect([again.code, again.out]).toEqual([2, '']);
+    expect(again.err).toMatch(/^--withdraw: all that is held for "A1" was withdrawn before/);
+  });
+
+  it('refuses options that do not go together', () => {
+    for (const [options, message] of [
+      [{ question: 'system' }, '--question says which answers for a building are withdrawn; name it: --withdraw <id>'],
+      [{ withdraw: 'A1', answers: true }, '--answers lists answers and does nothing else; leave out --withdraw'],
+      [
+        { take: 'back.csv', hours: 4, csv: 'x.csv' },
+        '--take brings answers back and does nothing else; leave out --hours, --csv',
+      ],
+    ] as const)
+      expect(() => answersJob(options), message).toThrow(message);
+    expect(answersJob({ hours: 4 })).toBe(null);
   });
 });
 

@@ -1,31 +1,48 @@
 import { readFileSync, writeFileSync } from 'node:fs';
 import { dirname, join } from 'node:path';
 import { describe, expect, it } from 'vitest';
+import { checkStudy } from '../../src/exports/check-study.js';
+import type { CheckedStudy } from '../../src/exports/check-study.js';
+import { listAnswers, withdrawAnswers } from '../../src/exports/held-answers.js';
 import { takeAnswers } from '../../src/exports/take-answers.js';
 import { fieldSheet } from '../../src/exports/survey-study.js';
 import { openStudyDatabase, screen } from '../../src/screening/screen.js';
+import type { ScreenOutcome } from '../../src/screening/screen.js';
+import { findingCounts } from '../../src/screening/summarise.js';
 import { planSurvey } from '../../src/screening/survey.js';
 import { visitsOf } from '../../src/screening/survey-outlook.js';
 import { loadStudy } from '../../src/study/load.js';
 import { MADE, demoCopy } from '../support/study-folder.js';
 
+type Summary = ScreenOutcome['summary'];
 type Row = Record<string, string | number | null>;
 
 /** Screens the study at `path` and gives the buildings asked for as they are kept. */
 async function screened(
   path: string,
   ids: readonly string[],
-): Promise<{ readonly rows: Row[]; readonly inventory: string }> {
+): Promise<{
+  readonly rows: Row[];
+  readonly inventory: string;
+  readonly told: Pick<CheckedStudy, 'attributes' | 'findings'>;
+  readonly survey: Summary['survey'];
+}> {
   const loaded = await loadStudy(path);
   const db = await openStudyDatabase(loaded);
   try {
-    const { taken } = await screen(db, loaded, { made: MADE });
+    const { taken, summary } = await screen(db, loaded, { made: MADE });
     const rows = await db.rows<Row>(
       `SELECT id, CAST(system AS VARCHAR) AS system, system_origin, storeys_above, storeys_above_origin, height_m, height_m_origin,
          occupants_peak, year_built, findings FROM building WHERE inventory_id = ? AND id IN (${ids.map((id) => `'${id}'`).join(', ')}) ORDER BY id`,
       [taken.inventoryId],
     );
-    return { rows, inventory: taken.inventoryId };
+    const findings = await findingCounts(db, taken.inventoryId);
+    return {
+      rows,
+      inventory: taken.inventoryId,
+      told: { attributes: summary.attributes, findings },
+      survey: summary.survey,
+    };
   } finally {
     db.close();
   }
@@ -70,6 +87,7 @@ describe('takeAnswers', () => {
         answers: 4,
         buildings: 2,
         columns: { system: 1, height_m: 1, storeys_above: 1, occupants_peak: 1 },
+        not_found: { storeys_above: 1 },
       });
       const after = await screened(path, ['BH-006', 'BH-024']);
       expect(after.inventory).not.toBe(before.inventory);
@@ -88,9 +106,9 @@ describe('takeAnswers', () => {
       // what was not asked stays as it was
       expect(after.rows[0]?.['year_built']).toBe(before.rows[0]?.['year_built']);
       expect(Number(after.rows[0]?.['findings'])).toBe(Number(before.rows[0]?.['findings']) + 1);
-      // the same answers again are the same inventory, a later one counts instead
-      await takeAnswers(path, sheet(path, 'id,occupants_peak\nBH-024,30\n'), MADE);
-      expect((await screened(path, ['BH-024'])).rows[0]).toMatchObject({ occupants_peak: 30, storeys_above: 3 });
+      // what was not found leaves no trace in the inventory
+      expect(after.rows[0]?.['storeys_above']).toBe(before.rows[0]?.['storeys_above']);
+      expect(after.rows[0]?.['storeys_above_origin']).toBe(before.rows[0]?.['storeys_above_origin']);
     },
   );
 
@@ -118,6 +136,105 @@ describe('takeAnswers', () => {
     },
   );
 
+  it(
+    'withdraws answers for a building or a question and keeps them on record; check reads what screen will',
+    { timeout: 120_000 },
+    async () => {
+      const path = small();
+      const before = await screened(path, ['L1', 'L2']);
+      const given =
+        'id,visit,surveyor,surveyed_on,system,storeys_above,height_m,occupants_peak\nL1,street,N. N.,2026-12-03,timber-light-frame,4,?,25\nL2,street,,,concrete-shear-wall,,,\n';
+      await takeAnswers(path, sheet(path, given), MADE);
+      await takeAnswers(path, sheet(path, 'id,visit,system\nL1,desk,concrete-shear-wall\n'), MADE);
+      const stated = async (): Promise<unknown> =>
+        (await listAnswers(path)).map((one) => [
+          one.id,
+          one.column,
+          one.cell,
+          one.visit,
+          one.withdrawn !== null,
+          one.counts,
+        ]);
+      expect(await stated()).toEqual([
+        ['L1', 'system', 'timber-light-frame', 'street', false, false],
+        ['L1', 'storeys_above', '4', 'street', false, true],
+        ['L1', 'height_m', null, 'street', false, true],
+        ['L1', 'occupants_peak', '25', 'street', false, true],
+        ['L1', 'system', 'concrete-shear-wall', 'desk', false, true],
+        ['L2', 'system', 'concrete-shear-wall', 'street', false, true],
+      ]);
+
+      // check tells of the inventory that the next screening sees, out of a database that it only reads
+      const database = join(dirname(path), 'study.duckdb');
+      const bytes = readFileSync(database);
+      const checked = await checkStudy(path);
+      expect(readFileSync(database).equals(bytes)).toBe(true);
+      const answered = await screened(path, ['L1', 'L2']);
+      expect(answered.inventory).not.toBe(before.inventory);
+      expect({ attributes: checked.attributes, findings: checked.findings }).toEqual(answered.told);
+      expect(checked.findings.find(({ code }) => code === 'survey-answer')).toMatchObject({ count: 4 });
+      expect(checked.attributes.find(({ attribute }) => attribute === 'system')).toMatchObject({
+        given: 2,
+        unknown: 0,
+      });
+      expect(answered.rows[0]).toMatchObject({ system: 'concrete-shear-wall', storeys_above: 4, occupants_peak: 25 });
+
+      // one question: both answers to it go, and nothing else
+      const gone = await withdrawAnswers(path, { id: 'L1', question: 'system' }, MADE);
+      expect(gone.map(({ cell, withdrawn }) => [cell, withdrawn])).toEqual([
+        ['timber-light-frame', MADE.toISOString()],
+        ['concrete-shear-wall', MADE.toISOString()],
+      ]);
+      const less = await checkStudy(path);
+      expect(less.attributes.find(({ attribute }) => attribute === 'system')).toMatchObject({ given: 1, unknown: 1 });
+      expect(less.findings.find(({ code }) => code === 'survey-answer')).toMatchObject({ count: 3 });
+      const withdraw = (id: string, question?: string): Promise<unknown> =>
+        withdrawAnswers(path, { id, question }, new Date('2027-01-01T00:00:00Z'));
+      for (const [id, question, key, message] of [
+        [
+          'L3',
+          undefined,
+          '--withdraw',
+          'no answers are held for "L3" (did you mean "L1"?); `swaymark survey --answers`',
+        ],
+        ['L1', 'colour', '--question', '"colour" is nothing that surveys answer; known: system, year'],
+        ['L2', 'occupants', '--question', 'nothing is held on "occupants" for "L2"; there is something on: system'],
+        ['L1', 'system', '--withdraw', 'what is held on "system" for "L1" was withdrawn before, on 2026-06-11'],
+      ] as const)
+        await expect(withdraw(id, question)).rejects.toMatchObject({
+          place: { key },
+          message: expect.stringContaining(message) as string,
+        });
+      // all answers: the owner's cells are read again, and it is the inventory of before; of two columns of a question one may be named
+      expect(((await withdraw('L1', 'storeys_above')) as unknown[]).length).toBe(1);
+      await withdraw('L1', 'occupants');
+      await withdraw('L2');
+      const spellings =
+        'id,visit,system,use,soft_storey,year_built\nL2,desk,?,Not  Found,,\nL2,street,unknown,–,,Unknown\n';
+      expect(await takeAnswers(path, sheet(path, spellings), MADE)).toEqual({
+        answers: 0,
+        buildings: 1,
+        columns: {},
+        not_found: { system: 2, use: 1, year_built: 1 },
+      });
+      const after = await screened(path, ['L1', 'L2']);
+      expect({ ...after, survey: null }).toEqual({ ...before, survey: null });
+      // but the week of visits told with the run no longer counts on those that failed
+      const asks = ({ survey }: typeof after, id: string, visit: string): readonly string[] =>
+        survey?.steps.find((step) => step.id === id && step.visit === visit)?.asks ?? [];
+      expect(asks(before, 'L1', 'street')).toEqual(['system', 'height', 'irregularity', 'use']);
+      expect(asks(after, 'L1', 'street')).toEqual(['system', 'irregularity', 'use']);
+      expect(asks(after, 'L1', 'drawings')).toContain('height');
+      expect(asks(before, 'L2', 'desk')).toEqual(expect.arrayContaining(['system', 'use']));
+      expect(asks(after, 'L2', 'desk')).not.toEqual(expect.arrayContaining(['system']));
+      expect(asks(after, 'L2', 'desk')).not.toEqual(expect.arrayContaining(['use']));
+      // the rest of L1 is what could not be found out
+      expect(((await withdraw('L1')) as unknown[]).length).toBe(1);
+      await expect(withdraw('L1')).rejects.toThrow('all that is held for "L1" was withdrawn before, on 2027-01-01');
+      expect(await stated()).toHaveLength(10);
+    },
+  );
+
   it('says of every cell what is wrong, and takes nothing', { timeout: 60_000 }, async () => {
     const path = small();
     await screened(path, ['L1']);
@@ -138,6 +255,19 @@ describe('takeAnswers', () => {
     await expect(of('id,colour\nL1,red\n')).rejects.toThrow('none of the columns that answer something');
     await expect(of('name,system\nL1,x\n')).rejects.toThrow('no column id');
     await expect(of('id,system\nL1,–\n')).rejects.toThrow('answers nothing');
+    await expect(of('id,system,use,visit\nL1,?,?,\nL1,?,,aerial\n')).rejects.toMatchObject({
+      problems: [
+        {
+          place: { row: 2, columnName: 'visit' },
+          message:
+            'system is "?", looked for and not found, and no kind of visit is named: name the one that looked (desk, street, drawings), or leave cells blank where nobody looked',
+        },
+        {
+          place: { row: 3, columnName: 'visit' },
+          message: expect.stringContaining('"aerial" is no kind of visit of the study') as string,
+        },
+      ],
+    });
     const loaded = await loadStudy(path);
     const db = await openStudyDatabase(loaded);
     expect(await db.value('SELECT count(*) FROM survey_answer')).toBe(0);

@@ -1,4 +1,9 @@
+import { writeFileSync } from 'node:fs';
+import { dirname, join } from 'node:path';
 import { describe, expect, it } from 'vitest';
+import { withdrawAnswers } from '../../src/exports/held-answers.js';
+import { takeAnswers } from '../../src/exports/take-answers.js';
+import { failedVisits } from '../../src/inventory/kept-answers.js';
 import { fieldSheet } from '../../src/exports/survey-study.js';
 import { walksOf } from '../../src/reports/survey/walk.js';
 import { openStudyDatabase, screen } from '../../src/screening/screen.js';
@@ -12,10 +17,11 @@ describe('planSurvey', () => {
     'plans visits worth their cost within the hours, and says what they do to the list',
     { timeout: 60_000 },
     async () => {
-      const loaded = await loadStudy(demoCopy());
+      const path = demoCopy();
+      const loaded = await loadStudy(path);
       const db = await openStudyDatabase(loaded);
       try {
-        const { runId, summary } = await screen(db, loaded, { made: MADE });
+        const { runId, summary, taken } = await screen(db, loaded, { made: MADE });
         const visits = visitsOf(loaded.study);
         const wish = { visits, limits: { hours: 30, money: Infinity }, cost: 'hours' as const };
         const plan = await planSurvey(db, runId, wish);
@@ -55,6 +61,52 @@ describe('planSurvey', () => {
           if (asks.includes('system')) expect([null, 'unknown']).toContain(system);
           if (asks.includes('year')) expect(year).toBeNull();
         }
+
+        // a visit that looked for a system and found none: another kind of visit goes for it, that one does not go again
+        const missed = plan.steps.find(({ visit, asks }) => visit === 'street' && asks.includes('system'))!;
+        const take = (row: string): Promise<unknown> => {
+          const file = join(dirname(path), 'back.csv');
+          writeFileSync(file, `id,visit,system\n${missed.id},${row}\n`);
+          return takeAnswers(path, file, MADE);
+        };
+        const asked = ({ steps }: typeof plan, visit: string): boolean =>
+          steps.some((one) => one.id === missed.id && one.visit === visit && one.asks.includes('system'));
+        await take('Street,?');
+        const without = await planSurvey(db, runId, { ...wish, limits: { hours: 200, money: Infinity } });
+        expect([plan.failed_at, without.failed_at]).toEqual([0, 1]);
+        expect(asked(without, 'street')).toBe(false);
+        expect(asked(without, 'desk') || asked(without, 'drawings')).toBe(true);
+        expect(
+          without.steps.some(
+            ({ id, visit, asks }) => id !== missed.id && visit === 'street' && asks.includes('system'),
+          ),
+        ).toBe(true);
+        // what no visit can find out is counted on by nobody
+        await take('desk,not found');
+        await take('drawings,NOT FOUND');
+        const never = await planSurvey(db, runId, wish);
+        expect(never.steps.some(({ id, asks }) => id === missed.id && asks.includes('system'))).toBe(false);
+        expect(never.expected_wrong_least).toBeGreaterThan(plan.expected_wrong_least);
+        expect(never.value_of_all).toBeLessThan(plan.value_of_all);
+        // an answer taken later by any visit supersedes all of them; a failure after it stands for itself; withdrawn, none counts
+        const { inventoryId } = taken;
+        const failed = async (): Promise<unknown> =>
+          [...(await failedVisits(db, inventoryId)).values()].map((visits) =>
+            [...visits].map(([visit, of]) => [visit, ...of]),
+          );
+        expect(await failed()).toEqual([
+          [
+            ['desk', 'system'],
+            ['drawings', 'system'],
+            ['street', 'system'],
+          ],
+        ]);
+        await take('desk,concrete-shear-wall');
+        expect(await failed()).toEqual([]);
+        await take('street,?');
+        expect(await failed()).toEqual([[['street', 'system']]]);
+        await withdrawAnswers(path, { id: missed.id, question: 'system' }, MADE);
+        expect(await failed()).toEqual([]);
       } finally {
         db.close();
       }

@@ -4,6 +4,7 @@ import { join } from 'node:path';
 import { COLUMNS } from '../../src/engineering/columns.js';
 import { RESULT_COLUMNS } from '../../src/engineering/results.js';
 import { UserError } from '../../src/errors.js';
+import { checkStudy } from '../../src/exports/check-study.js';
 import { explainBuilding } from '../../src/screening/explain.js';
 import { openStudyDatabase, screen } from '../../src/screening/screen.js';
 import { openDatabase } from '../../src/store/database.js';
@@ -128,6 +129,11 @@ describe('MIGRATIONS', () => {
 describe('prepareSchema', () => {
   it('brings a file of version 1 to today on opening, for reading too, with its run as it was', async () => {
     const old = v1();
+    // check looks into it for answers of surveys and leaves it as it is
+    expect((await checkStudy(old.study)).buildings).toBe(IDS.length);
+    const untouched = await openDatabase({ path: old.file, readOnly: true });
+    expect(await schemaVersion(untouched)).toBe(1);
+    untouched.close();
     for (const readOnly of [true, false]) {
       const db = await openStudyDatabase(await loadStudy(old.study), readOnly);
       expect(await schemaVersion(db)).toBe(LATEST);

@@ -1,9 +1,8 @@
 import { relative } from 'node:path';
 import { formatNumber } from '../../engineering/format.js';
-import { EXIT, UserError } from '../../errors.js';
+import { EXIT } from '../../errors.js';
 import { surveyStudy } from '../../exports/survey-study.js';
 import type { PlannedSurvey } from '../../exports/survey-study.js';
-import { takeAnswers } from '../../exports/take-answers.js';
 import { askedWords, planSentences, reasonWord } from '../../reports/survey/words.js';
 import { findStudy } from '../find-study.js';
 import { printJson, printLines, terminalColumns } from '../output/print.js';
@@ -11,29 +10,22 @@ import { progressLine } from '../output/progress.js';
 import { styled } from '../output/style.js';
 import { table } from '../output/table.js';
 import { clean, wrap } from '../output/text.js';
+import type { AnswersCommandOptions } from './survey-answers.js';
 
-export interface SurveyCommandOptions {
-  readonly take?: string;
-  readonly hours?: number;
-  readonly money?: number;
-  readonly study?: string;
-  readonly run?: number;
-  readonly csv?: string;
-  readonly output?: string;
+export interface SurveyCommandOptions extends AnswersCommandOptions {
   readonly page: boolean;
-  readonly json?: true;
 }
 
 /** Visits shown; the sheet and the JSON have all. */
 const SHOWN = 25;
 
 /** `swaymark survey`: which building to visit next, for what. */
-export async function survey({ json, study, take, ...wish }: SurveyCommandOptions): Promise<number> {
-  if (take !== undefined) return takeBack(findStudy(study), take, wish, json);
+export async function survey(options: SurveyCommandOptions): Promise<number> {
+  const { json, study, hours, money, run, csv, output, page } = options;
   const progress = progressLine();
   try {
     const planned = await surveyStudy(findStudy(study), {
-      ...wish,
+      ...{ hours, money, run, csv, output, page },
       report: (step, share = NaN) => {
         progress.update({ step, share });
       },
@@ -106,34 +98,4 @@ function lines({ plan, csv, page }: PlannedSurvey, columns: number): string[] {
       columns,
     ),
   ];
-}
-
-/** `swaymark survey --take`: the sheet that was filled in. */
-async function takeBack(
-  study: string,
-  file: string,
-  { hours, money, run, csv }: Pick<SurveyCommandOptions, 'hours' | 'money' | 'run' | 'csv'>,
-  json: true | undefined,
-): Promise<number> {
-  const beside = Object.entries({ hours, money, run, csv }).flatMap(([name, value]) =>
-    value === undefined ? [] : [`--${name}`],
-  );
-  if (beside.length > 0)
-    throw new UserError(`--take brings answers back and plans nothing; leave out ${beside.join(', ')}`);
-  const taken = await takeAnswers(study, file, new Date());
-  if (json) printJson(taken);
-  else {
-    const columns = Object.entries(taken.columns).map(([name, count]) => `${name} (${String(count)})`);
-    printLines([
-      ...wrap(
-        `${String(taken.answers)} ${taken.answers === 1 ? 'answer' : 'answers'} for ${String(taken.buildings)} ${taken.buildings === 1 ? 'building' : 'buildings'} taken: ${columns.join(', ')}.`,
-        terminalColumns(),
-      ),
-      ...wrap(
-        'They are kept in study.duckdb beside the inventory, whose file stays as it is; `swaymark screen` ranks with them.',
-        terminalColumns(),
-      ),
-    ]);
-  }
-  return EXIT.clean;
 }

@@ -38,6 +38,9 @@ export function addDecisionCommands(program: Command, keep: Keep): void {
     .option('--output <folder>', 'folder of the page (default: that of the reports)')
     .option('--no-page', 'write no page')
     .option('--take <file>', 'bring the answers of a filled-in sheet back into the study')
+    .option('--answers', 'list the answers that the study holds')
+    .option('--withdraw <id>', 'withdraw the answers for a building')
+    .option('--question <name>', 'withdraw those to one question alone: system, height, height_m, …')
     .addOption(json())
     .addHelpText(
       'after',
@@ -45,10 +48,14 @@ export function addDecisionCommands(program: Command, keep: Keep): void {
         'swaymark survey --hours 16',
         'swaymark survey --hours 40 --csv field.csv',
         'swaymark survey --take field.csv',
+        'swaymark survey --answers',
+        'swaymark survey --withdraw BH-012 --question system',
       ),
     )
     .action(async (options: SurveyCommandOptions) => {
-      keep(await (await import('../commands/survey.js')).survey(options));
+      // what plans loads all that draws its page: answers need none of it
+      const job = (await import('../commands/survey-answers.js')).answersJob(options);
+      keep(await (job === null ? (await import('../commands/survey.js')).survey(options) : job()));
     });
   program
     .command('budget')

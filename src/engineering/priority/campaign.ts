@@ -12,9 +12,14 @@ export interface Visit {
   readonly finds: Partial<Readonly<Record<Unknown, number>>>;
 }
 
+/** Unknowns that visits made already, by their names, could not find out. */
+export type Failed = ReadonlyMap<string, ReadonlySet<Unknown>>;
+
 export interface Candidate {
   readonly index: number;
   readonly worth: Worth;
+  /** Such a visit is not counted on for them again; others may still find them out. */
+  readonly failed?: Failed | undefined;
 }
 
 export interface Limits {
@@ -130,12 +135,26 @@ function fits({ hours, money }: Visit, left: Limits): boolean {
   return hours <= most(left.hours) && money <= most(left.money);
 }
 
-function asked({ candidate: { worth }, found }: State, { finds }: Visit): readonly Unknown[] {
-  return worth.unknowns.filter((unknown) => (finds[unknown] ?? 0) > 0 && (found.get(unknown) ?? 0) < 1);
+/** Which of its unknowns some visit may find out, as a set of its worth. */
+export function withinReach(candidate: Candidate, visits: readonly Visit[]): number {
+  return candidate.worth.unknowns.reduce(
+    (set, unknown, bit) => (visits.some((visit) => chanceOf(candidate, visit, unknown) > 0) ? set | (1 << bit) : set),
+    0,
+  );
 }
 
-function foundWith({ found }: State, { finds }: Visit, unknown: Unknown): number {
-  return 1 - (1 - (found.get(unknown) ?? 0)) * (1 - (finds[unknown] ?? 0));
+function chanceOf({ failed }: Candidate, { name, finds }: Visit, unknown: Unknown): number {
+  return failed?.get(name)?.has(unknown) ? 0 : (finds[unknown] ?? 0);
+}
+
+function asked({ candidate, found }: State, visit: Visit): readonly Unknown[] {
+  return candidate.worth.unknowns.filter(
+    (unknown) => chanceOf(candidate, visit, unknown) > 0 && (found.get(unknown) ?? 0) < 1,
+  );
+}
+
+function foundWith({ candidate, found }: State, visit: Visit, unknown: Unknown): number {
+  return 1 - (1 - (found.get(unknown) ?? 0)) * (1 - chanceOf(candidate, visit, unknown));
 }
 
 function bestStep(state: State, visits: readonly Visit[], left: Limits, cost: Cost, least: number): Step | null {

@@ -39,6 +39,11 @@ export function planSentences(plan: SurveyPlan): readonly string[] {
   return [
     `${String(steps.length)} ${steps.length === 1 ? 'visit' : 'visits'} to ${String(buildings)} ${buildings === 1 ? 'building' : 'buildings'}, ${cost}: of the ${String(list_size)} places about ${formatNumber(expected_wrong_before, 2)} are expected to be wrong now, about ${formatNumber(expected_wrong_after, 2)} once all visits are made.`,
     `Of ${String(plan.ranked)} ranked buildings ${String(plan.worth_visiting)} are worth any visit at all; ${String(plan.buildings_of_80_percent)} hold 80 % of what there is to learn. Far from the edge of the list nothing found out would change it, however poor the record.`,
+    ...(plan.failed_at === 0
+      ? []
+      : [
+          `At ${plan.failed_at === 1 ? 'one building' : `${formatCount(plan.failed_at)} buildings`} a visit has looked for something and not found it; such a visit is not counted on for it again.`,
+        ]),
     ...(plan.capped
       ? [`The ${String(plan.weighed)} that could be worth most were weighed one by one.`]
       : []),

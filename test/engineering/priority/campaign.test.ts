@@ -1,5 +1,5 @@
 import { describe, expect, it } from 'vitest';
-import { planCampaign } from '../../../src/engineering/priority/campaign.js';
+import { planCampaign, withinReach } from '../../../src/engineering/priority/campaign.js';
 import type { Candidate, Visit } from '../../../src/engineering/priority/campaign.js';
 import type { Worth } from '../../../src/engineering/priority/survey-value.js';
 import { random } from '../../support/engineering-random.js';
@@ -55,6 +55,40 @@ describe('planCampaign', () => {
     const total = plan.reduce((sum, { value }) => sum + value, 0);
     expect(plan.map(({ visit, value }) => [visit.name, value])).toEqual([['drawings', 3]]);
     expect(total).toBeCloseTo(3, 12);
+  });
+
+  it('does not count on a visit that failed to find an unknown out at that building, but on others and elsewhere', () => {
+    const drawings: Visit = { name: 'drawings', hours: 4, money: 400, finds: { system: 1, year: 1 } };
+    const failed = new Map([['street', new Set(['system'] as const)]]);
+    const candidates: Candidate[] = [
+      { index: 0, worth: adding(2, 1), failed },
+      { index: 1, worth: adding(2, 1) },
+    ];
+    const made = (visits: readonly Visit[]) =>
+      planCampaign(candidates, visits, free, 'hours').map(({ index, visit, asks, value }) => [
+        index,
+        visit.name,
+        asks.join(' '),
+        value,
+      ]);
+    expect(made([STREET])).toEqual([[1, 'street', 'system', 2]]);
+    // building 0 keeps its desk visit, and its system is worth 2 of the 4 h of drawings
+    expect(made([STREET, DESK, drawings])).toEqual([
+      [1, 'street', 'system', 2],
+      [0, 'desk', 'year', 1],
+      [1, 'desk', 'year', 1],
+      [0, 'drawings', 'system', 2],
+    ]);
+    // a visit that failed on one thing of two still goes for the other
+    const both: Visit = { name: 'street', hours: 0.5, money: 50, finds: { system: 1, year: 1 } };
+    expect(made([both])).toEqual([
+      [1, 'street', 'system year', 3],
+      [0, 'street', 'year', 1],
+    ]);
+    // sets of system (1) and year (2) that can still be found out
+    expect(candidates.map((one) => withinReach(one, [STREET]))).toEqual([0, 1]);
+    expect(candidates.map((one) => withinReach(one, [STREET, DESK]))).toEqual([2, 3]);
+    expect(withinReach(candidates[0]!, [drawings])).toBe(3);
   });
 
   it('is never better served by another order of the same number of visits, where values add', () => {
