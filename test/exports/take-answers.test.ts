@@ -30,7 +30,7 @@ async function screened(
   const loaded = await loadStudy(path);
   const db = await openStudyDatabase(loaded);
   try {
-    const { taken, summary } = await screen(db, loaded, { made: MADE });
+    const { taken, summary } = await screen(db, loaded, { made: MADE, outlook: true });
     const rows = await db.rows<Row>(
       `SELECT id, CAST(system AS VARCHAR) AS system, system_origin, storeys_above, storeys_above_origin, height_m, height_m_origin,
          occupants_peak, year_built, findings FROM building WHERE inventory_id = ? AND id IN (${ids.map((id) => `'${id}'`).join(', ')}) ORDER BY id`,

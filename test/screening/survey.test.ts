@@ -21,7 +21,7 @@ describe('planSurvey', () => {
       const loaded = await loadStudy(path);
       const db = await openStudyDatabase(loaded);
       try {
-        const { runId, summary, taken } = await screen(db, loaded, { made: MADE });
+        const { runId, summary, taken } = await screen(db, loaded, { made: MADE, outlook: true });
         const visits = visitsOf(loaded.study);
         const wish = { visits, limits: { hours: 30, money: Infinity }, cost: 'hours' as const };
         const plan = await planSurvey(db, runId, wish);
@@ -117,7 +117,7 @@ describe('planSurvey', () => {
     const loaded = await loadStudy(demoCopy({ study: (text) => text.replace(/list_size: \d+/, 'list_size: 500') }));
     const db = await openStudyDatabase(loaded);
     try {
-      const { runId, summary } = await screen(db, loaded, { made: MADE });
+      const { runId, summary } = await screen(db, loaded, { made: MADE, outlook: true });
       expect(summary.survey).toBeNull();
       const wish = { visits: visitsOf(loaded.study), limits: { hours: 8, money: Infinity }, cost: 'hours' as const };
       await expect(planSurvey(db, runId, wish)).rejects.toThrow('holds all 227 ranked buildings');
