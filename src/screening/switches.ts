@@ -201,7 +201,8 @@ function peopleSwitches(settings: AssessSettings): readonly Switch[] {
       'as registered',
       spreading(settings, ['peopleKnownUse', 'peopleUnknownUse', 'peopleCounted'], 1.5),
     ),
-    ...[0, 0.5]
+    // the milder one first: it is the one told with a run, and without people the study asks another question
+    ...[0.5, 0]
       .filter((weight) => weight !== peopleWeight)
       .map((weight) => ({
         assumption: 'people-weight',
@@ -220,7 +221,8 @@ function peopleSwitches(settings: AssessSettings): readonly Switch[] {
 
 /** The mark of a source in the register's words. */
 export function markOf(source: string): Mark {
-  if (source.includes('judgement')) return 'judgement';
+  // a slope that no second level gave
+  if (source.includes('judgement') || source === 'assumed') return 'judgement';
   if (source.includes('memory')) return 'memory';
   if (source === 'two levels') return 'two levels';
   return /^study|^stated|policy/.test(source) ? 'study' : 'restated';

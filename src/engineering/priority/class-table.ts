@@ -43,15 +43,15 @@ export class ClassTable {
     this.#high = high;
     this.#step = (high - low) / (POINTS - 1);
     const top = most * most;
-    const ofZones = zones.map(() => new Map<number, Float64Array>());
+    // by label: looked up for every part
+    const ofZones = zones.map(() => new Array<Float64Array | undefined>(NO_LABEL + 1).fill(undefined));
     mixtures.forEach((mixture, i) => {
       const { weight, mean, sd, from, to } = mixture;
       const byLabel = ofZones[zone[i]!]!;
       const { eraLoad } = zones[zone[i]!]!;
       for (let k = from; k < to; k += 1) {
         const label = labelOf(mixture, k);
-        let count = byLabel.get(label);
-        if (count === undefined) byLabel.set(label, (count = new Float64Array(SPREADS * (POINTS + 1))));
+        const count = (byLabel[label] ??= new Float64Array(SPREADS * (POINTS + 1)));
         const less = label === NO_LABEL ? 0 : eraLoad * eraLoad;
         const place = (mean[k]! - low) / this.#step;
         const g = Math.floor(place);
@@ -67,7 +67,9 @@ export class ClassTable {
         count[here + POINTS + 2]! += w * r * f;
       }
     });
-    const all = ofZones.flatMap((byLabel, of) => [...byLabel].map(([label, count]) => ({ zone: of, label, count })));
+    const all = ofZones.flatMap((byLabel, of) =>
+      byLabel.flatMap((count, label) => (count === undefined ? [] : [{ zone: of, label, count }])),
+    );
     this.classes = all.map(({ zone: of, label }) => ({ zone: of, label }));
     const kernels = Array.from({ length: SPREADS }, (_, s) =>
       kernelOf(Math.sqrt((top * s) / (SPREADS - 1)) / this.#step),
