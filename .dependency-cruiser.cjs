@@ -44,6 +44,7 @@ const ENGINEERING_FLOORS = [
   ['methods'],
   ['calc-inputs'],
   ['calc'],
+  ['page-outlook'],
   ['page-contract'],
 ];
 
