@@ -1,4 +1,5 @@
 /** Answers of a survey, from the sheet that was filled in into the study's database. */
+import type { HeldAnswer } from '../inventory/kept-answers.js';
 import { CsvError, parse } from 'csv-parse/sync';
 import { findColumn } from '../engineering/columns.js';
 import { UserError, showValue } from '../errors.js';
@@ -27,16 +28,8 @@ export interface TakenAnswers {
   readonly not_found: Readonly<Record<string, number>>;
 }
 
-interface Given {
+interface Given extends Pick<HeldAnswer, 'id' | 'column' | 'cell' | 'visit' | 'surveyor' | 'surveyed_on' | 'remark'> {
   readonly row: number;
-  readonly id: string;
-  readonly column: string;
-  /** Null: looked for, not found. */
-  readonly cell: string | null;
-  readonly visit: string | null;
-  readonly surveyor: string | null;
-  readonly surveyed_on: string | null;
-  readonly remark: string | null;
 }
 
 /**

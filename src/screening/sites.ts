@@ -87,16 +87,8 @@ export async function laySites(db: Database, { run_id, inventory_id }: RunOf): P
   return { sites: mains.length, buildings: member.rowCount };
 }
 
-interface SiteRow {
+interface SiteRow extends Omit<Site, 'members'> {
   readonly place: number;
-  readonly id: string;
-  readonly name: string | null;
-  readonly buildings: number;
-  readonly ranked: number;
-  readonly best_rank: number | null;
-  readonly chance: number | null;
-  readonly expected_in_list: number | null;
-  readonly people_exposed: number | null;
 }
 
 /** The sites laid whose place stands in the table `places`, with their first members; in their order. */
