@@ -36,6 +36,9 @@ export interface SurveyOutlook {
   readonly least_wrong: number;
   readonly worth_visiting: number;
   readonly buildings_of_80_percent: number;
+  /** Buildings with answers that the run does not count, and such of which it counts answers that were withdrawn; left out where there are none. */
+  readonly answered_at?: number;
+  readonly withdrawn_at?: number;
   /** The first visits. */
   readonly steps: readonly SurveyVisit[];
 }

@@ -3,8 +3,9 @@ import { UNKNOWNS } from '../engineering/priority/survey-value.js';
 import type { Unknown } from '../engineering/priority/survey-value.js';
 import { UserError, showValue } from '../errors.js';
 import { ANSWERS, ANSWER_COLUMNS } from '../inventory/answers.js';
-import { heldAnswers, markWithdrawn } from '../inventory/kept-answers.js';
+import { answersSince, heldAnswers, markWithdrawn } from '../inventory/kept-answers.js';
 import type { HeldAnswer } from '../inventory/kept-answers.js';
+import { listRuns } from '../runs/history.js';
 import { changeStudyDatabase, withStudyDatabase } from '../runs/open.js';
 import { nearest, suggest } from '../study/nearest.js';
 
@@ -23,6 +24,22 @@ export interface WithdrawChoice {
  */
 export async function listAnswers(path: string): Promise<readonly HeldAnswer[]> {
   return withStudyDatabase(path, (db) => heldAnswers(db));
+}
+
+/**
+ * At how many buildings of the study at `path` answers have come in that its newest run does not count, and at how many it counts answers
+ * that were withdrawn; null where no run is kept.
+ * @throws UserError for a study without a database.
+ */
+export async function answersSinceRun(
+  path: string,
+): Promise<{ readonly run: number; readonly answered_at: number; readonly withdrawn_at: number } | null> {
+  return withStudyDatabase(path, async (db) => {
+    const newest = (await listRuns(db)).at(-1);
+    if (newest === undefined) return null;
+    const { answered, withdrawn } = await answersSince(db, newest.fingerprints.inventory);
+    return { run: newest.run, answered_at: answered.size, withdrawn_at: withdrawn };
+  });
 }
 
 /**

@@ -70,6 +70,42 @@ export async function failedVisits(db: Database, inventoryId: string): Promise<R
   return failed;
 }
 
+/** What has become of the answers since an inventory was taken in. */
+export interface AnswersSince {
+  /** Questions with an answer that the inventory does not hold, by the index of the building; none of its questions may be settled by it. */
+  readonly answered: ReadonlyMap<number, ReadonlySet<Unknown>>;
+  /** Buildings of which the inventory holds an answer that was withdrawn. */
+  readonly withdrawn: number;
+}
+
+/** Says how the coefficient beside it is meant: alone it settles nothing. */
+const SETTLES_NOTHING = 'design_level';
+
+/**
+ * What has come in and what was withdrawn since inventory `inventoryId` was taken in. Its notes say which answers were laid over it: the
+ * times of runs do not, as a refresh is made later from an inventory of before, and an answer taken twice is no news.
+ */
+export async function answersSince(db: Database, inventoryId: string): Promise<AnswersSince> {
+  const answered = new Map<number, Set<Unknown>>();
+  if (!(await holdsAny(db))) return { answered, withdrawn: 0 };
+  // cells of findings are cut (inventory/findings.ts)
+  const laid = `(SELECT id, column_name, value FROM finding WHERE inventory_id = ? AND code = 'survey-answer')`;
+  const now = `(SELECT id, column_name, left(cell, 200) AS value FROM ${HELD} WHERE counts AND cell IS NOT NULL)`;
+  const fresh = await db.rows<{ index: number; name: string }>(
+    `SELECT b.building_index AS index, n.column_name AS name FROM ${now} n ANTI JOIN ${laid} l USING (id, column_name, value)
+     JOIN building b ON b.id = n.id AND b.inventory_id = ? ORDER BY ALL`,
+    [inventoryId, inventoryId],
+  );
+  for (const { index, name } of fresh) {
+    const questions = answered.get(index) ?? new Set();
+    answered.set(index, name === SETTLES_NOTHING ? questions : questions.add(questionOf(name)));
+  }
+  const withdrawn = await db.value(`SELECT count(DISTINCT id) FROM ${laid} ANTI JOIN ${now} USING (id, column_name)`, [
+    inventoryId,
+  ]);
+  return { answered, withdrawn: Number(withdrawn) };
+}
+
 /** All that was taken, building by building, withdrawn or not; of one building where `id` is given. */
 export async function heldAnswers(db: Database, id?: string): Promise<readonly HeldAnswer[]> {
   const rows = await db.rows<Omit<HeldAnswer, 'question'>>(

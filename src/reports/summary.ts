@@ -11,7 +11,7 @@ import { madeAt } from './made-at.js';
 import { markdownTable, markdownText } from './markdown.js';
 import { gapsPart } from './gaps/words.js';
 import { sitesPart } from './sites/summary-part.js';
-import { outlookSentence, worthwhileSentence } from './survey/words.js';
+import { outlookSentence, sinceSentences, worthwhileSentence } from './survey/words.js';
 
 /** Longest list printed in full; the rest stands in ranking.csv. */
 const MOST_PLACES = 60;
@@ -93,12 +93,12 @@ function listPart(data: PageData): string {
 }
 
 /** The first visits of a survey; nothing where none was planned. */
-function surveyPart({ summary: { survey, ranked } }: PageData): readonly string[] {
+function surveyPart({ summary: { run, survey, ranked } }: PageData): readonly string[] {
   if (survey == null) return [];
   const { head, rows } = visitsTable(survey);
   return [
     '## What to find out next',
-    [outlookSentence(survey), worthwhileSentence(survey, ranked)].filter((text) => text !== '').join(' '),
+    [outlookSentence(survey), worthwhileSentence(survey, ranked), ...sinceSentences(run, survey)].filter((text) => text !== '').join(' '),
     ...(rows.length === 0 ? [] : [markdownTable(head, rows.map((row) => row.map(markdownText)), [0, 2, 6, 7, 8])]),
   ];
 }

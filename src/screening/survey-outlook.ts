@@ -48,6 +48,9 @@ export async function surveyOutlook(
     least_wrong: plan.expected_wrong_least,
     worth_visiting: plan.worth_visiting,
     buildings_of_80_percent: plan.buildings_of_80_percent,
+    // only a refresh stands on an inventory of before
+    ...(plan.answered_at === 0 ? {} : { answered_at: plan.answered_at }),
+    ...(plan.withdrawn_at === 0 ? {} : { withdrawn_at: plan.withdrawn_at }),
     steps: week.slice(0, TOLD),
   };
 }

@@ -6,7 +6,7 @@ import type { YearPools } from '../engineering/building-columns.js';
 import { buildingReader } from '../engineering/building-columns.js';
 import type { SurveyVisit } from '../engineering/page-contract.js';
 import type { Candidate, Cost, Limits, PlannedVisit, Visit } from '../engineering/priority/campaign.js';
-import { planCampaign, withinReach } from '../engineering/priority/campaign.js';
+import { knownSet, planCampaign, withinReach } from '../engineering/priority/campaign.js';
 import type { Mixture } from '../engineering/priority/mixture.js';
 import { commonTo, rankBasis } from '../engineering/priority/rank.js';
 import type { RankBasis } from '../engineering/priority/rank.js';
@@ -15,7 +15,7 @@ import { KNOWN_CHANCE, edgeOf, mostWorth, shareOf, worthOf } from '../engineerin
 import { seenFromEdge } from '../engineering/priority/unknowns-from-edge.js';
 import type { HazardGrids } from '../engineering/spectrum/grid.js';
 import { UserError } from '../errors.js';
-import { failedVisits } from '../inventory/kept-answers.js';
+import { answersSince, failedVisits } from '../inventory/kept-answers.js';
 import { indexRanges } from '../store/chunks.js';
 import type { Database } from '../store/database.js';
 import { assessAll } from './assess-all.js';
@@ -68,6 +68,10 @@ export interface SurveyPlan {
   readonly capped: boolean;
   /** Weighed buildings at which a visit failed to find something out: that kind of visit is not counted on for it again. */
   readonly failed_at: number;
+  /** Buildings with answers that the run does not count yet: what they settle is not asked for. The next screening counts them. */
+  readonly answered_at: number;
+  /** Buildings of which the run counts answers that were withdrawn: the plan takes them as known still. */
+  readonly withdrawn_at: number;
   /** Value of all that visits can still find out of every weighed building together, and how many buildings hold 80 % of it. */
   readonly value_of_all: number;
   readonly buildings_of_80_percent: number;
@@ -135,6 +139,7 @@ export async function planOn(
   const placeOf = new Map(Array.from(assessed.index, (index, at) => [index, at] as const));
   const context = compileContext(settings, grids);
   const failed = await failedVisits(db, inventoryId);
+  const { answered, withdrawn } = await answersSince(db, inventoryId);
   const candidates: Candidate[] = [];
   const shares = new Map<number, ReadonlyMap<Unknown, number>>();
   for (const range of indexRanges(count, BLOCK)) {
@@ -146,7 +151,7 @@ export async function planOn(
       const found = unknownsOf(read(index - range.from), context);
       if (found === null || found.learnable.length === 0) continue;
       const unknowns = common === undefined ? found : seenFromEdge(found, common, placeOf.get(index)!);
-      candidates.push({ index, worth: worthOf(unknowns, edge), failed: failed.get(index) });
+      candidates.push({ index, worth: worthOf(unknowns, edge), failed: failed.get(index), known: answered.get(index) });
       shares.set(index, new Map(unknowns.learnable.map((one) => [one.unknown, shareOf(unknowns, one)])));
     }
     report('weighing', range.to / count);
@@ -157,7 +162,7 @@ export async function planOn(
   order.forEach((at, place) => (rankOf[assessed.index[at]!] = place + 1));
   candidates.sort((a, b) => rankOf[a.index]! - rankOf[b.index]!);
   const planned = planCampaign(candidates, visits, limits, cost);
-  const all = candidates.map((one) => one.worth.value[withinReach(one, visits)]!).sort((a, b) => b - a);
+  const all = candidates.map((one) => valueLeft(one, visits)).sort((a, b) => b - a);
   const valueOfAll = all.reduce((sum, value) => sum + value, 0);
   let wrong = expectedWrong;
   const named = await namesOf(db, inventoryId, [...new Set(planned.map(({ index }) => index))]);
@@ -183,16 +188,25 @@ export async function planOn(
     weighed: candidates.length,
     capped: worthVisiting > MOST_CANDIDATES,
     failed_at: candidates.filter((one) => one.failed !== undefined).length,
+    answered_at: answered.size,
+    withdrawn_at: withdrawn,
     value_of_all: valueOfAll,
     buildings_of_80_percent: holding(all, 0.8 * valueOfAll),
   };
+}
+
+/** Value of all that visits can still find out of a building. */
+function valueLeft(one: Candidate, visits: readonly Visit[]): number {
+  const { value } = one.worth;
+  // rounding alone may take it below
+  return Math.max(0, value[withinReach(one, visits)]! - value[knownSet(one)]!);
 }
 
 /** Wrong places with everything known of the candidates that a visit can still find out: the list then ends at its threshold. */
 function leastWrong(candidates: readonly Candidate[], visits: readonly Visit[], today: number): number {
   const mended = sumOf(
     candidates,
-    (one) => one.worth.wrongOf(0, KNOWN_CHANCE) - one.worth.wrongOf(withinReach(one, visits), KNOWN_CHANCE),
+    (one) => one.worth.wrongOf(knownSet(one), KNOWN_CHANCE) - one.worth.wrongOf(withinReach(one, visits), KNOWN_CHANCE),
   );
   return Math.max(0, today - 0.5 * mended);
 }

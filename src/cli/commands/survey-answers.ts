@@ -1,9 +1,9 @@
 import { EXIT, UserError, showValue } from '../../errors.js';
-import { listAnswers, withdrawAnswers } from '../../exports/held-answers.js';
+import { answersSinceRun, listAnswers, withdrawAnswers } from '../../exports/held-answers.js';
 import { takeAnswers } from '../../exports/take-answers.js';
 import type { TakenAnswers } from '../../exports/take-answers.js';
 import type { HeldAnswer } from '../../inventory/kept-answers.js';
-import { ASKED } from '../../reports/survey/words.js';
+import { ASKED, sinceSentences } from '../../reports/survey/words.js';
 import { findStudy } from '../find-study.js';
 import { printJson, printLines, terminalColumns } from '../output/print.js';
 import { table } from '../output/table.js';
@@ -88,11 +88,15 @@ function takenSentences({ answers, buildings, columns, not_found }: TakenAnswers
 async function listed(study: string, json: true | undefined): Promise<number> {
   const held = await listAnswers(study);
   if (json) printJson(held);
-  else printLines(listLines(held, terminalColumns()));
+  else {
+    const since = await answersSinceRun(study);
+    const told = since === null ? [] : sinceSentences(String(since.run), since);
+    printLines(listLines(held, told, terminalColumns()));
+  }
   return EXIT.clean;
 }
 
-function listLines(held: readonly HeldAnswer[], columns: number): string[] {
+function listLines(held: readonly HeldAnswer[], told: readonly string[], columns: number): string[] {
   if (held.length === 0) return wrap('This study holds no answers; `swaymark survey --take` brings them in.', columns);
   return [
     ...table(
@@ -117,7 +121,9 @@ function listLines(held: readonly HeldAnswer[], columns: number): string[] {
       columns,
     ),
     '',
-    ...wrap('`swaymark survey --withdraw <id>` withdraws what does not hold.', columns),
+    ...[...told, '`swaymark survey --withdraw <id>` withdraws what does not hold.'].flatMap((text) =>
+      wrap(text, columns),
+    ),
   ];
 }
 

@@ -20,6 +20,8 @@ export interface Candidate {
   readonly worth: Worth;
   /** Such a visit is not counted on for them again; others may still find them out. */
   readonly failed?: Failed | undefined;
+  /** What has been found out since the building was assessed: nobody asks for it, and visits are worth what they add to it. */
+  readonly known?: ReadonlySet<Unknown> | undefined;
 }
 
 export interface Limits {
@@ -53,7 +55,7 @@ const NOTHING = 1e-6;
 interface State {
   readonly candidate: Candidate;
   readonly taken: Set<string>;
-  /** Chance that each unknown is found out by the visits planned. */
+  /** Chance that each unknown is found out by the visits planned; what is known is. */
   readonly found: Map<Unknown, number>;
   value: number;
   /** NaN before the first visit. */
@@ -81,8 +83,8 @@ export function planCampaign(
   const states: State[] = candidates.map((candidate) => ({
     candidate,
     taken: new Set(),
-    found: new Map(),
-    value: 0,
+    found: new Map([...(candidate.known ?? [])].map((unknown) => [unknown, 1])),
+    value: candidate.worth.value[knownSet(candidate)]!,
     wrong: NaN,
     next: null,
   }));
@@ -114,7 +116,7 @@ export function planCampaign(
       valuePerCost: ratio,
       hours: limits.hours === Infinity ? sum(planned, 'hours') + visit.hours : limits.hours - left.hours,
       money: limits.money === Infinity ? sum(planned, 'money') + visit.money : limits.money - left.money,
-      wrongBefore: Number.isNaN(best.wrong) ? best.candidate.worth.wrongOf(0) : best.wrong,
+      wrongBefore: Number.isNaN(best.wrong) ? best.candidate.worth.wrongOf(knownSet(best.candidate)) : best.wrong,
       wrongAfter: wrong,
     });
     for (const unknown of asked(best, visit)) best.found.set(unknown, foundWith(best, visit, unknown));
@@ -135,12 +137,19 @@ function fits({ hours, money }: Visit, left: Limits): boolean {
   return hours <= most(left.hours) && money <= most(left.money);
 }
 
-/** Which of its unknowns some visit may find out, as a set of its worth. */
+/** Which of its unknowns are known by now, as a set of its worth. */
+export function knownSet({ worth, known }: Candidate): number {
+  return setOf(worth, (unknown) => known?.has(unknown) === true);
+}
+
+/** Which of its unknowns are known by now, or some visit may find out, as a set of its worth. */
 export function withinReach(candidate: Candidate, visits: readonly Visit[]): number {
-  return candidate.worth.unknowns.reduce(
-    (set, unknown, bit) => (visits.some((visit) => chanceOf(candidate, visit, unknown) > 0) ? set | (1 << bit) : set),
-    0,
-  );
+  const found = (unknown: Unknown): boolean => visits.some((visit) => chanceOf(candidate, visit, unknown) > 0);
+  return knownSet(candidate) | setOf(candidate.worth, found);
+}
+
+function setOf({ unknowns }: Worth, has: (unknown: Unknown) => boolean): number {
+  return unknowns.reduce((set, unknown, bit) => (has(unknown) ? set | (1 << bit) : set), 0);
 }
 
 function chanceOf({ failed }: Candidate, { name, finds }: Visit, unknown: Unknown): number {

@@ -31,13 +31,16 @@ export function reasonWord({ asks, shares }: Pick<SurveyVisit, 'asks' | 'shares'
 /** What the whole plan does to the list. */
 export function planSentences(plan: SurveyPlan): readonly string[] {
   const { steps, buildings, hours, money, expected_wrong_before, expected_wrong_after, list_size } = plan;
+  const since = sinceSentences(String(plan.run), plan);
   if (steps.length === 0)
     return [
       'No visit that fits is worth anything: what is unknown at the edge of the list would not change it, or is known already.',
+      ...since,
     ];
   const cost = [`${formatNumber(hours, 3)} h`, ...(money > 0 ? [`${formatNumber(money, 4)} in money`] : [])].join(', ');
   return [
     `${String(steps.length)} ${steps.length === 1 ? 'visit' : 'visits'} to ${String(buildings)} ${buildings === 1 ? 'building' : 'buildings'}, ${cost}: of the ${String(list_size)} places about ${formatNumber(expected_wrong_before, 2)} are expected to be wrong now, about ${formatNumber(expected_wrong_after, 2)} once all visits are made.`,
+    ...since,
     `Of ${String(plan.ranked)} ranked buildings ${String(plan.worth_visiting)} are worth any visit at all; ${String(plan.buildings_of_80_percent)} hold 80 % of what there is to learn. Far from the edge of the list nothing found out would change it, however poor the record.`,
     ...(plan.failed_at === 0
       ? []
@@ -47,6 +50,26 @@ export function planSentences(plan: SurveyPlan): readonly string[] {
     ...(plan.capped
       ? [`The ${String(plan.weighed)} that could be worth most were weighed one by one.`]
       : []),
+  ];
+}
+
+/** What has become of answers that the run does not know of; one sentence each, none where there is nothing. */
+export function sinceSentences(
+  run: string,
+  { answered_at = 0, withdrawn_at = 0 }: Partial<Pick<SurveyPlan, 'answered_at' | 'withdrawn_at'>>,
+): readonly string[] {
+  const at = (count: number): string => `At ${count === 1 ? 'one building' : `${formatCount(count)} buildings`}`;
+  return [
+    ...(answered_at === 0
+      ? []
+      : [
+          `${at(answered_at)} answers have come in that run ${run} does not count yet: what they settle is not asked for; run swaymark screen to count them in.`,
+        ]),
+    ...(withdrawn_at === 0
+      ? []
+      : [
+          `${at(withdrawn_at)} answers that run ${run} counts were withdrawn since, and are taken as known still; run swaymark screen to count without them.`,
+        ]),
   ];
 }
 

@@ -1,5 +1,5 @@
 import { describe, expect, it } from 'vitest';
-import { planCampaign, withinReach } from '../../../src/engineering/priority/campaign.js';
+import { knownSet, planCampaign, withinReach } from '../../../src/engineering/priority/campaign.js';
 import type { Candidate, Visit } from '../../../src/engineering/priority/campaign.js';
 import type { Worth } from '../../../src/engineering/priority/survey-value.js';
 import { random } from '../../support/engineering-random.js';
@@ -89,6 +89,30 @@ describe('planCampaign', () => {
     expect(candidates.map((one) => withinReach(one, [STREET]))).toEqual([0, 1]);
     expect(candidates.map((one) => withinReach(one, [STREET, DESK]))).toEqual([2, 3]);
     expect(withinReach(candidates[0]!, [drawings])).toBe(3);
+  });
+
+  it('asks for nothing that is known by now, and weighs visits by what they add to it', () => {
+    const drawings: Visit = { name: 'drawings', hours: 4, money: 400, finds: { system: 1, year: 1 } };
+    // values that do not add: of a building whose system is known its year is worth 0.5, not 1
+    const worth: Worth = { ...adding(2, 1), value: Float64Array.of(0, 2, 1, 2.5) };
+    const candidates: Candidate[] = [
+      { index: 0, worth, known: new Set(['system']) },
+      { index: 1, worth: adding(9, 9), known: new Set(['system', 'year']) },
+    ];
+    expect(
+      planCampaign(candidates, [STREET, DESK, drawings], free, 'hours').map((one) => [
+        one.index,
+        one.visit.name,
+        one.asks,
+        one.value,
+        // known from the start: 0.3 of the sets' chances, then both 0.1
+        one.wrongBefore,
+        one.wrongAfter,
+      ]),
+    ).toEqual([[0, 'desk', ['year'], 0.5, 0.3, 0.1]]);
+    expect(candidates.map(knownSet)).toEqual([1, 3]);
+    expect(candidates.map((one) => withinReach(one, [STREET]))).toEqual([1, 3]);
+    expect(withinReach(candidates[0]!, [DESK])).toBe(3);
   });
 
   it('is never better served by another order of the same number of visits, where values add', () => {

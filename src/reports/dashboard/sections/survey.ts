@@ -3,7 +3,7 @@ import { h } from 'preact';
 import type { ComponentChild } from 'preact';
 import { formatCount, formatNumber } from '../../../engineering/format.js';
 import type { PageData, SurveyOutlook } from '../../../engineering/page-contract.js';
-import { askedWords, outlookSentence, reasonWord, worthwhileSentence } from '../../survey/words.js';
+import { askedWords, outlookSentence, reasonWord, sinceSentences, worthwhileSentence } from '../../survey/words.js';
 import type { DataTable } from '../charts/chart.js';
 import { Section, TableRegion } from '../elements.js';
 
@@ -35,6 +35,7 @@ export function SurveySection({ data: { summary } }: { readonly data: PageData }
       ? h('p', null, 'No survey was planned with this run: the inventory is large, or the list holds every building. The command survey plans one.')
       : [
           h('p', null, outlookSentence(survey)),
+          ...sinceSentences(summary.run, survey).map((sentence) => h('p', null, sentence)),
           h('p', { class: 'quiet' }, `${worthwhileSentence(survey, summary.ranked)} Worth is in units of the priority of the median building; the command survey plans any number of hours, with a walking list and a sheet for the field.`),
           survey.steps.length === 0 ? null : h('p', { class: 'quiet narrow-only' }, 'The table is wider than this screen: it scrolls sideways.'),
           survey.steps.length === 0 ? null : h(TableRegion, { table: visitsTable(survey), label: 'The first visits of a survey' }),
