@@ -67,7 +67,7 @@ export { deleteStudyRuns, planStudyDeletion } from './exports/delete-runs.js';
 export type { StudyDeletion } from './exports/delete-runs.js';
 export type { Deletion, InventoryEntry } from './runs/delete.js';
 export type { ListedBuilding, RunChanges, RunSheet, SettingDifference } from './runs/sheet.js';
-export type { RunChoice } from './runs/open.js';
+export type { FolderRun, RunChoice } from './runs/open.js';
 export { latestRun, listRuns, runById } from './runs/history.js';
 export type { RunEntry } from './runs/history.js';
 export type { Explanation } from './screening/explain.js';

@@ -146,9 +146,9 @@ export function handSteps(trace: Trace, display: Display): readonly HandStep[] {
           ...blank,
           kind: 'choice',
           title: step.question,
-          symbolic: step.taken,
-          source: step.because,
-          details: step.others.map(({ what, why }) => `not ${what}: ${why}`),
+          symbolic: textInDisplay(step.taken, display),
+          source: textInDisplay(step.because, display),
+          details: step.others.map(({ what, why }) => `not ${what}: ${textInDisplay(why, display)}`),
         };
       case 'formula':
         return formulaStep(step, display);

@@ -23,7 +23,7 @@ export interface BudgetStudyOptions extends Pick<RunChoice, 'run'> {
  */
 export async function budgetStudy(path: string, money?: number, options: BudgetStudyOptions = {}): Promise<BudgetPlan> {
   const plan = await withStudyDatabase(path, async (db, loaded) => {
-    const { run } = await chosenRun(db, options);
+    const { run } = await chosenRun(db, loaded, options);
     const sum = money ?? loaded.study.budget?.money;
     if (sum === undefined)
       throw new UserError('no sum of money: give one with --money, or as money in the budget of the study');

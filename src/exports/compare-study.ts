@@ -3,7 +3,7 @@ import { basename, resolve } from 'node:path';
 import { UserError } from '../errors.js';
 import { renderComparison } from '../reports/compare.js';
 import { readPageScript } from '../reports/page-script.js';
-import { listRuns, latestRun, runById } from '../runs/history.js';
+import { latestOwnRun, ownRuns, runById } from '../runs/history.js';
 import { withStudyDatabase } from '../runs/open.js';
 import { compareRuns } from '../screening/compare-runs.js';
 import type { Comparison, CompareOptions } from '../screening/compare-runs.js';
@@ -47,8 +47,8 @@ export async function compareStudy(path: string, options: CompareStudyOptions = 
   const apart = other !== null && databasePath(other) !== databasePath(loaded) ? other : null;
   const compared = await withStudyDatabase(path, (db) =>
     apart === null
-      ? compareIn(db, db, other !== null, options)
-      : withStudyDatabase(apart.file, (otherDb) => compareIn(db, otherDb, true, options)),
+      ? compareIn({ db, loaded }, { db, loaded: other ?? loaded }, options)
+      : withStudyDatabase(apart.file, (otherDb) => compareIn({ db, loaded }, { db: otherDb, loaded: apart }, options)),
   );
   if (options.page === false) return { comparison: compared, page: null };
   const folder = prepareFolder(options.output ?? resolve(loaded.folder, loaded.study.output));
@@ -57,29 +57,33 @@ export async function compareStudy(path: string, options: CompareStudyOptions = 
   return { comparison: compared, page: resolve(folder, name) };
 }
 
-async function compareIn(
-  db: Database,
-  otherDb: Database,
-  apart: boolean,
-  { before, after, most }: CompareStudyOptions,
-): Promise<Comparison> {
-  const later: RunOf = { db: otherDb, runId: await chosen(otherDb, after) };
+interface Side {
+  readonly db: Database;
+  readonly loaded: LoadedStudy;
+}
+
+async function compareIn(from: Side, to: Side, { before, after, most }: CompareStudyOptions): Promise<Comparison> {
+  const later: RunOf = { db: to.db, runId: await chosen(to, after) };
+  const isOneStudy = from.loaded === to.loaded;
   const earlier: RunOf = {
-    db,
-    runId: before === undefined && !apart ? await runBefore(db, later.runId) : await chosen(db, before),
+    db: from.db,
+    runId: before === undefined && isOneStudy ? await runBefore(from, later.runId) : await chosen(from, before),
   };
   return compareRuns(earlier, later, most === undefined ? {} : { most });
 }
 
-async function chosen(db: Database, run: number | undefined): Promise<number> {
-  return (run === undefined ? await latestRun(db) : await runById(db, run)).run;
+async function chosen({ db, loaded }: Side, run: number | undefined): Promise<number> {
+  return (run === undefined ? await latestOwnRun(db, loaded) : await runById(db, run)).run;
 }
 
-/** The newest run before `run`. */
-async function runBefore(db: Database, run: number): Promise<number> {
-  const earlier = (await listRuns(db)).filter((entry) => entry.run < run).at(-1);
+/** The newest run of the study before `run`. */
+async function runBefore({ db, loaded }: Side, run: number): Promise<number> {
+  const earlier = (await ownRuns(db, loaded)).findLast((entry) => entry.run < run);
   if (earlier === undefined)
-    throw new UserError(`there is no run before run ${String(run)}: a comparison takes two`, { file: db.file });
+    throw new UserError(
+      `this study has no run before run ${String(run)}: a comparison takes two; \`swaymark runs\` lists those that can be named by their numbers`,
+      { file: db.file },
+    );
   return earlier.run;
 }
 

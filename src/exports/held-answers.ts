@@ -5,7 +5,7 @@ import { UserError, showValue } from '../errors.js';
 import { ANSWERS, ANSWER_COLUMNS } from '../inventory/answers.js';
 import { answersSince, heldAnswers, markWithdrawn } from '../inventory/kept-answers.js';
 import type { HeldAnswer } from '../inventory/kept-answers.js';
-import { listRuns } from '../runs/history.js';
+import { isOwnRun, listRuns } from '../runs/history.js';
 import { changeStudyDatabase, withStudyDatabase } from '../runs/open.js';
 import { nearest, suggest } from '../study/nearest.js';
 
@@ -34,8 +34,8 @@ export async function listAnswers(path: string): Promise<readonly HeldAnswer[]> 
 export async function answersSinceRun(
   path: string,
 ): Promise<{ readonly run: number; readonly answered_at: number; readonly withdrawn_at: number } | null> {
-  return withStudyDatabase(path, async (db) => {
-    const newest = (await listRuns(db)).at(-1);
+  return withStudyDatabase(path, async (db, loaded) => {
+    const newest = (await listRuns(db)).findLast((run) => isOwnRun(run, loaded));
     if (newest === undefined) return null;
     const { answered, withdrawn } = await answersSince(db, newest.fingerprints.inventory);
     return { run: newest.run, answered_at: answered.size, withdrawn_at: withdrawn };

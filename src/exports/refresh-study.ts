@@ -89,7 +89,7 @@ export async function refreshStudy(path: string, options: RefreshStudyOptions = 
   const db = await openStudyDatabase(own, false, folder === null ? [] : [folder]);
   try {
     options.onOpen?.(db);
-    const { run } = await chosenRun(db, options);
+    const { run } = await chosenRun(db, own, options);
     const base = await baseRun(db, own, run);
     const outcome = await refresh(db, base, loaded, {
       ...options,
@@ -151,7 +151,7 @@ export async function sweepStudy(
   }
   return withStudyDatabase(path, async (db) => {
     options.onOpen?.(db);
-    const { run } = await chosenRun(db, options);
+    const { run } = await chosenRun(db, own, options);
     const base = await baseRun(db, own, run);
     return { base: run, path: range.path, values: await sweep(db, base, studies, options.onProgress) };
   });

@@ -24,9 +24,9 @@ export interface SensitivityStudyOptions extends SensitivityOptions, Pick<RunCho
  * const { switches, always } = await sensitivityStudy('study.yaml', { only: ['slope', 'system-prior'] });
  */
 export async function sensitivityStudy(path: string, options: SensitivityStudyOptions = {}): Promise<Sensitivity> {
-  const found = await withStudyDatabase(path, async (db) => {
+  const found = await withStudyDatabase(path, async (db, loaded) => {
     options.onOpen?.(db);
-    const { run } = await chosenRun(db, options);
+    const { run } = await chosenRun(db, loaded, options);
     return sensitivityOf(db, run, options);
   });
   if (options.csv !== undefined) await writeNamed(options.csv, sensitivityCsv(found), '--csv');

@@ -1,11 +1,13 @@
 /** The survey of a study planned, its page, and its sheet for the field. */
 import { resolve } from 'node:path';
-import type { Cost } from '../engineering/priority/campaign.js';
+import { fits } from '../engineering/priority/campaign.js';
+import type { Cost, Limits, Visit } from '../engineering/priority/campaign.js';
+import { formatNumber } from '../engineering/format.js';
 import { UserError } from '../errors.js';
 import { ANSWERS, ANSWER_COLUMNS } from '../inventory/answers.js';
 import { readPageScript } from '../reports/page-script.js';
 import { renderSurvey } from '../reports/survey.js';
-import { askedWords, reasonWord } from '../reports/survey/words.js';
+import { askedWords, reasonWord, visitWord } from '../reports/survey/words.js';
 import { chosenRun, withStudyDatabase } from '../runs/open.js';
 import type { Report } from '../screening/assess-inventory.js';
 import { visitsOf } from '../screening/survey-outlook.js';
@@ -34,6 +36,8 @@ export interface SurveyChoice {
 
 export interface PlannedSurvey {
   readonly plan: SurveyPlan;
+  /** Kinds of visit that do not fit into the hours and the money even once. */
+  readonly tooLarge: readonly Visit[];
   /** Path of the sheet, or null. */
   readonly csv: string | null;
   /** Path of the page, or null. */
@@ -43,7 +47,7 @@ export interface PlannedSurvey {
 /**
  * Plans the visits to make next for the study at `path`: always the one that is worth most for an hour (or for money, where only that is
  * limited) until hours and money are spent. Writes survey-<run>.html into the study's folder of reports, unless told not to.
- * @throws UserError when neither is limited, for a study without runs, an unknown run, or money that no visit costs.
+ * @throws UserError when neither is limited, for a study without runs, an unknown run, money that no visit costs, or hours or money that no visit fits into.
  * @example
  * const { plan } = await surveyStudy('study.yaml', { hours: 16 });
  */
@@ -54,23 +58,39 @@ export async function surveyStudy(
   if (hours === Infinity && money === Infinity)
     throw new UserError('a survey is planned within hours or money: say how many, for instance --hours 16');
   const cost: Cost = hours === Infinity ? 'money' : 'hours';
-  const plan = await withStudyDatabase(path, async (db, { study, file }) => {
+  const limits = { hours, money };
+  const { plan, tooLarge } = await withStudyDatabase(path, async (db, loaded) => {
+    const { study, file } = loaded;
     const visits = visitsOf(study);
     if (cost === 'money' && visits.every((visit) => visit.money === 0))
       throw new UserError('no visit costs money in this study: set survey.money_per_hour or the money of a visit', {
         file,
         key: 'survey',
       });
-    const { run: runId } = await chosenRun(db, { run });
-    return planSurvey(db, runId, { visits, limits: { hours, money }, cost }, report);
+    const { run: runId } = await chosenRun(db, loaded, { run });
+    const tooLarge = visits.filter((visit) => !fits(visit, limits));
+    if (tooLarge.length === visits.length) throw noneFits(visits, limits, cost, file);
+    return { plan: await planSurvey(db, runId, { visits, limits, cost }, report), tooLarge };
   });
   const sheet = csv === undefined ? null : await writeNamed(csv, fieldSheet(plan), '--csv');
-  if (!page) return { plan, csv: sheet, page: null };
+  if (!page) return { plan, tooLarge, csv: sheet, page: null };
   const { study, folder } = await loadStudyAlone(path);
   const into = prepareFolder(output ?? resolve(folder, study.output));
   const name = `survey-${String(plan.run)}.html`;
-  await writeSet(into, { [name]: renderSurvey(study.title, plan, readPageScript()) });
-  return { plan, csv: sheet, page: resolve(into, name) };
+  await writeSet(into, { [name]: renderSurvey(study.title, plan, readPageScript(), tooLarge) });
+  return { plan, tooLarge, csv: sheet, page: resolve(into, name) };
+}
+
+function noneFits(visits: readonly Visit[], { hours, money }: Limits, cost: Cost, file: string): UserError {
+  const cheapest = visits.reduce((a, b) => (b[cost] < a[cost] ? b : a));
+  const given = [
+    ...(hours === Infinity ? [] : [`${formatNumber(hours, 3)} h`]),
+    ...(money === Infinity ? [] : [`${formatNumber(money, 4)} in money`]),
+  ];
+  return new UserError(
+    `no visit fits into ${given.join(' and ')}; the cheapest is ${visitWord(cheapest)}: give more, or change the visits`,
+    { file, key: 'survey.visits' },
+  );
 }
 
 const HEAD = ['place', 'id', 'name', 'group', 'lon', 'lat', 'rank', 'visit', 'find out', 'because'] as const;

@@ -1,14 +1,17 @@
 /** Answers of a survey, from the sheet that was filled in into the study's database. */
-import type { HeldAnswer } from '../inventory/kept-answers.js';
 import { CsvError, parse } from 'csv-parse/sync';
 import { findColumn } from '../engineering/columns.js';
 import { UserError, showValue } from '../errors.js';
 import type { Problem } from '../errors.js';
 import { ANSWER_COLUMNS, readAnswer } from '../inventory/answers.js';
+import { heldAnswers } from '../inventory/kept-answers.js';
+import type { HeldAnswer } from '../inventory/kept-answers.js';
 import { changeStudyDatabase, chosenRun } from '../runs/open.js';
 import type { Database } from '../store/database.js';
+import type { LoadedStudy } from '../study/load.js';
 import { readText } from '../study/read-text.js';
 import type { Study } from '../study/schema.js';
+import { isCalendarDate } from './sheet-date.js';
 
 /** What is written where nothing was asked or looked for. */
 const NOTHING = new Set(['', '-', '–', '—']);
@@ -26,6 +29,10 @@ export interface TakenAnswers {
   readonly columns: Readonly<Record<string, number>>;
   /** How many cells of each column say that it was looked for and not found. */
   readonly not_found: Readonly<Record<string, number>>;
+  /** Cells that stood in a sheet taken before, with the same visit, surveyor, date and remark: they are on record and not taken again. */
+  readonly on_record: number;
+  /** Those of them after which another answer came in, which counts in their place. */
+  readonly answered_later: number;
 }
 
 interface Given extends Pick<HeldAnswer, 'id' | 'column' | 'cell' | 'visit' | 'surveyor' | 'surveyed_on' | 'remark'> {
@@ -35,7 +42,8 @@ interface Given extends Pick<HeldAnswer, 'id' | 'column' | 'cell' | 'visit' | 's
 /**
  * Takes the answers of the sheet `file` into the database of the study at `path`; the next screening uses them, the owner's inventory stays as
  * it is. Columns are those of the sheet of `survey --csv`; blank cells and dashes say nothing, `?` or `not found` that the visit looked
- * and could not find out: plans then no longer count on that kind of visit for it. All or nothing.
+ * and could not find out: plans then no longer count on that kind of visit for it. What a sheet taken before has said in the same words is
+ * not taken twice. All or nothing.
  * @throws UserError with every cell that cannot be read, a row without an id or with one the newest run does not hold, something not found
  * without a kind of visit that the study knows, an unknown column.
  * @example
@@ -43,32 +51,61 @@ interface Given extends Pick<HeldAnswer, 'id' | 'column' | 'cell' | 'visit' | 's
  */
 export async function takeAnswers(path: string, file: string, taken: Date): Promise<TakenAnswers> {
   const text = await readText(file, 'the sheet of answers');
-  return changeStudyDatabase(path, async (db, { study }) => {
-    const given = readSheet(text, file, study);
-    await refuseStrangers(db, given, file);
-    const first = Number(await db.value('SELECT coalesce(max(answer), 0) + 1 FROM survey_answer'));
-    await db.transaction(async () => {
-      await db.append('survey_answer', [
-        Int32Array.from(given, (_, at) => first + at),
-        given.map(({ id }) => id),
-        given.map(({ column }) => column),
-        given.map(({ cell }) => cell),
-        given.map(({ visit }) => visit),
-        given.map(({ surveyor }) => surveyor),
-        given.map(({ surveyed_on }) => surveyed_on),
-        given.map(({ remark }) => remark),
-        given.map(() => taken.toISOString()),
-        given.map(() => null),
-      ]);
-    });
+  return changeStudyDatabase(path, async (db, loaded) => {
+    const { study } = loaded;
+    const sheet = readSheet(text, file, study);
+    await refuseStrangers(db, loaded, sheet, file);
+    const { fresh: given, known } = apart(sheet, await heldAnswers(db));
+    if (given.length > 0) await keepAnswers(db, given, taken);
     const answers = given.filter(({ cell }) => cell !== null);
     return {
       answers: answers.length,
       buildings: new Set(given.map(({ id }) => id)).size,
       columns: countColumns(answers),
       not_found: countColumns(given.filter(({ cell }) => cell === null)),
+      on_record: sheet.length - given.length,
+      answered_later: known.filter(({ counts }) => !counts).length,
     };
   });
+}
+
+async function keepAnswers(db: Database, given: readonly Given[], taken: Date): Promise<void> {
+  const first = Number(await db.value('SELECT coalesce(max(answer), 0) + 1 FROM survey_answer'));
+  await db.transaction(async () => {
+    await db.append('survey_answer', [
+      Int32Array.from(given, (_, at) => first + at),
+      given.map(({ id }) => id),
+      given.map(({ column }) => column),
+      given.map(({ cell }) => cell),
+      given.map(({ visit }) => visit),
+      given.map(({ surveyor }) => surveyor),
+      given.map(({ surveyed_on }) => surveyed_on),
+      given.map(({ remark }) => remark),
+      given.map(() => taken.toISOString()),
+      given.map(() => null),
+    ]);
+  });
+}
+
+/** What a sheet brings that is not on record, and what is; withdrawn answers may be brought again. */
+function apart(
+  sheet: readonly Given[],
+  held: readonly HeldAnswer[],
+): { readonly fresh: readonly Given[]; readonly known: readonly HeldAnswer[] } {
+  const key = ({ id, column, cell, visit, surveyor, surveyed_on, remark }: Omit<Given, 'row'>): string =>
+    JSON.stringify([id, column, cell, visit, surveyor, surveyed_on, remark]);
+  const standing = new Map<string, HeldAnswer | null>();
+  // a failure that an answer has taken the place of may come about again: it takes no answer away
+  for (const one of held) if (one.counts || (one.withdrawn === null && one.cell !== null)) standing.set(key(one), one);
+  const known: HeldAnswer[] = [];
+  const fresh = sheet.filter((one) => {
+    const found = standing.get(key(one));
+    // null: the row stands twice in the sheet
+    if (found === undefined) standing.set(key(one), null);
+    else if (found !== null) known.push(found);
+    return found === undefined;
+  });
+  return { fresh, known };
 }
 
 function countColumns(given: readonly Given[]): Readonly<Record<string, number>> {
@@ -140,6 +177,11 @@ function readRow(
   const rest = { surveyor: about('surveyor'), surveyed_on: about('surveyed_on'), remark: about('remark') };
   const given: Given[] = [];
   const problems: Problem[] = [];
+  if (rest.surveyed_on !== null && !isCalendarDate(rest.surveyed_on))
+    problems.push({
+      place: { file, row, columnName: 'surveyed_on' },
+      message: `${showValue(rest.surveyed_on)} is no day of the calendar; write it like 2026-12-03, or leave the cell blank`,
+    });
   for (const { column, cell } of answered) {
     const read = readFound(column, cell, study);
     if (typeof read === 'object' && read !== null) {
@@ -189,8 +231,13 @@ function recordsOf(text: string, file: string): readonly (readonly string[])[] {
 }
 
 /** Answers for buildings that the newest run does not hold are a slip of the pen. */
-async function refuseStrangers(db: Database, given: readonly Given[], file: string): Promise<void> {
-  const { fingerprints } = await chosenRun(db, {});
+async function refuseStrangers(
+  db: Database,
+  loaded: LoadedStudy,
+  given: readonly Given[],
+  file: string,
+): Promise<void> {
+  const { fingerprints } = await chosenRun(db, loaded, {});
   const known = new Set(
     (await db.rows<{ id: string }>('SELECT id FROM building WHERE inventory_id = ?', [fingerprints.inventory])).map(
       ({ id }) => id,

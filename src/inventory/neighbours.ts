@@ -51,7 +51,7 @@ export async function takeInNeighbours(db: Database, source: Source, inventoryId
           row: cells.row[at] ?? 0,
           column: 'gap_m',
           value: text,
-          code: 'not-a-number',
+          code: read.note?.code ?? 'not-a-number',
           message: read.note?.message ?? 'not a gap in m',
         });
     });

@@ -13,9 +13,12 @@ export interface Plans {
   readonly reentrant_projection: Float64Array;
   readonly reentrant_area_share: Float64Array;
   readonly footprint_area_m2: Float64Array;
+  /** Some footprint could not be read. */
+  readonly hasUnreadable: boolean;
 }
 
-const UNREADABLE = {
+/** Finding of a footprint that is none: it is not kept as one. */
+export const UNREADABLE = {
   code: 'not-a-polygon',
   column: 'footprint',
   test: 'not a WKT POLYGON in degrees',
@@ -26,7 +29,7 @@ const UNREADABLE = {
 export function readPlans(sizes: Sizes, notes: BuildingNotes): Plans {
   const rows = sizes.rowCount;
   const take = (given: Float64Array | undefined): Float64Array => given?.slice() ?? new Float64Array(rows).fill(NaN);
-  const plans: Plans = {
+  const plans = {
     length_m: take(sizes.plan_length_m),
     width_m: take(sizes.plan_width_m),
     area_m2: new Float64Array(rows),
@@ -35,6 +38,7 @@ export function readPlans(sizes: Sizes, notes: BuildingNotes): Plans {
     reentrant_projection: take(sizes.reentrant_projection),
     reentrant_area_share: take(sizes.reentrant_area_share),
     footprint_area_m2: take(sizes.footprint_area_m2),
+    hasUnreadable: false,
   };
   const fill = (array: Float64Array, at: number, value: number): void => {
     if (Number.isNaN(array[at])) array[at] = value;
@@ -55,6 +59,7 @@ export function readPlans(sizes: Sizes, notes: BuildingNotes): Plans {
       fill(plans.reentrant_area_share, at, found.reentrant_area_share);
       fill(plans.footprint_area_m2, at, found.area_m2);
     } else if (text !== null) {
+      plans.hasUnreadable = true;
       const message = 'the footprint is not a polygon of longitudes and latitudes: POLYGON ((lon lat, lon lat, …))';
       notes.add(UNREADABLE, sizes.first_row[at] ?? 0, text.slice(0, 200), message);
     }

@@ -6,6 +6,8 @@ import type { Unit } from '../engineering/units.js';
 import { showValue } from '../errors.js';
 import { BLANK } from '../study/inventory-schema.js';
 import { foldWord, readNumberCell } from './cell.js';
+import { columnDirection, otherWay, readHeaderName, withoutDirection } from './header-name.js';
+import type { HeaderName } from './header-name.js';
 import { medianOf } from './median.js';
 
 export interface ProposedColumn {
@@ -24,30 +26,35 @@ export interface Proposal {
   readonly unused: readonly string[];
 }
 
-interface HeaderWords {
-  readonly words: string;
-  readonly unit: Unit | undefined;
+/** More than any likeness scores. */
+const OWN_NAME = 1000;
+
+interface Score {
+  readonly score: number;
+  /** What it would score if it did not name the other direction: whatever scores less has only a part of the name. */
+  readonly refused: number;
 }
 
-/** `Height (ft)`, `height_ft`, `BldgHeight` → words and unit. */
-function readHeaderName(name: string): HeaderWords {
-  const bracket = /[([]([^)\]]+)[)\]]/.exec(name);
-  const spaced = name
-    .replace(/[([][^)\]]*[)\]]/, ' ')
-    .replaceAll(/(\p{Ll})(\p{Lu})/gu, '$1 $2')
-    .replaceAll(/[_./-]+/g, ' ');
-  const words = foldWord(spaced);
-  const inBracket = bracket?.[1] === undefined ? undefined : findUnit(bracket[1]);
-  const last = /^(.+) (ft2|ft|feet|sq ?ft|sqft|sf|m2|sqm|sq m|m|metres?|meters?|kn|kip|s|g)$/.exec(words);
-  if (inBracket !== undefined || last === null) return { words, unit: inBracket };
-  return { words: last[1] ?? words, unit: findUnit(last[2] ?? '') };
+const NONE: Score = { score: 0, refused: 0 };
+
+function score(column: InventoryColumn, { words, unit, direction, own }: HeaderName): Score {
+  if (own !== undefined)
+    return own === column ? { score: OWN_NAME + Number(unit?.id === column.unit), refused: 0 } : NONE;
+  if (unit !== undefined && unit.dimension !== column.dimension) return NONE;
+  const wanted = columnDirection(column);
+  const hints = [...column.hints, column.title.toLowerCase(), foldWord(column.name.replaceAll('_', ' '))];
+  const asWritten = likeness(words, hints);
+  if (wanted === undefined || direction === undefined) return { score: asWritten, refused: 0 };
+  // `brace areas across` is what `brace area` is, across.
+  const shared = [...hints, ...(otherWay(column)?.hints ?? [])].map(withoutDirection);
+  const alike = Math.max(asWritten, likeness(withoutDirection(words), shared));
+  return direction === wanted ? { score: alike, refused: 0 } : { score: 0, refused: alike };
 }
 
-function score(column: InventoryColumn, { words, unit }: HeaderWords): number {
-  if (unit !== undefined && unit.dimension !== column.dimension) return 0;
+function likeness(words: string, hints: readonly string[]): number {
   const joined = words.replaceAll(' ', '');
   let best = 0;
-  for (const hint of [...column.hints, column.title.toLowerCase(), foldWord(column.name.replaceAll('_', ' '))]) {
+  for (const hint of hints) {
     if (words === hint || joined === hint.replaceAll(' ', '')) best = Math.max(best, 100 + hint.length);
     else if (hint.length > 2 && ` ${words} `.includes(` ${hint} `)) best = Math.max(best, 40 + hint.length);
     else if (hint.length > 4 && joined.includes(hint.replaceAll(' ', ''))) best = Math.max(best, 20 + hint.length);
@@ -65,9 +72,12 @@ export function proposeMapping(
   decimal = '.',
 ): Proposal {
   const names = header.map(readHeaderName);
-  const pairs = COLUMNS.flatMap((column) =>
-    names.map((name, position) => ({ column, position, score: header[position] === '' ? 0 : score(column, name) })),
-  ).filter((pair) => pair.score > 0);
+  const scored = COLUMNS.flatMap((column) =>
+    names.map((name, position) => ({ column, position, ...(header[position] === '' ? NONE : score(column, name)) })),
+  );
+  const refused = new Float64Array(names.length);
+  for (const pair of scored) refused[pair.position] = Math.max(refused[pair.position] ?? 0, pair.refused);
+  const pairs = scored.filter((pair) => pair.score > 0 && pair.score >= (refused[pair.position] ?? 0));
   pairs.sort((a, b) => b.score - a.score || a.position - b.position);
   const chosen = new Map<InventoryColumn, number>();
   const taken = new Set<number>();
@@ -92,7 +102,16 @@ export function proposeMapping(
     const position = chosen.get(column);
     const theirs = position === undefined ? undefined : header[position];
     if (position === undefined || theirs === undefined) return [];
-    return [{ ours: column.name, theirs, ...unitOf(column, names[position]?.unit, numbersOf) }];
+    const { unit, question } = unitOf(column, names[position]?.unit, numbersOf);
+    const asked = [question, directionQuestion(column, names[position])].filter((one) => one !== undefined);
+    return [
+      {
+        ours: column.name,
+        theirs,
+        ...(unit === undefined ? {} : { unit }),
+        ...(asked.length === 0 ? {} : { question: asked.join(' And ') }),
+      },
+    ];
   });
   // Each column once, as the best of ours it resembles; not where another column holds that already.
   const asked = new Map<number, InventoryColumn>();
@@ -165,6 +184,12 @@ function unitOf(
   }
   const others = column.dimension === 'area' ? 'm2 or ft2' : column.dimension === 'length' ? 'm or ft' : 'another';
   return { unit: column.unit, question: `the header names no unit; ${others}?` };
+}
+
+/** A name like `wall area` may mean either direction. */
+function directionQuestion({ name }: InventoryColumn, header: HeaderName | undefined): string | undefined {
+  if (!name.includes('longitudinal') || header?.direction !== undefined) return undefined;
+  return 'the header names no direction; longitudinal?';
 }
 
 function questionsOf(

@@ -9,6 +9,7 @@ import type { Readings } from './cells.js';
 import type { Contradictions } from './contradictions.js';
 import type { Inferred } from './infer.js';
 import type { Mapping } from './header.js';
+import { UNREADABLE } from './plans.js';
 import type { Plans } from './plans.js';
 import type { Sizes } from './sizes.js';
 
@@ -51,6 +52,7 @@ export async function storeBuildings(
     if (name === 'id') return id;
     if (name === 'status') return orElse('status', 'in-use');
     if (name === 'use') return orElse('use', 'unknown');
+    if (name === 'footprint' && parts.plans.hasUnreadable) return readableFootprint(given(name), key);
     return given(name);
   };
   const typed = COLUMNS.map((column) => ({ ...column, sql: `CAST(${value(column.name)} AS ${columnType(column)})` }));
@@ -123,6 +125,11 @@ export async function storeBuildings(
   );
 }
 
+/** The cell, but where a finding says that it is no polygon. */
+function readableFootprint(cell: string, key: string): string {
+  return `CASE WHEN ${key} NOT IN (SELECT "row" FROM intake_finding WHERE code = ${quoteText(UNREADABLE.code)} AND "row" IS NOT NULL) THEN ${cell} END`;
+}
+
 function typeOf(name: string): string {
   const column = findColumn(name);
   if (column === undefined) throw new Bug(`no column ${name}`);
@@ -142,7 +149,7 @@ function sourceOf(mapping: Mapping, readings: Readings) {
 
 /** Plan sides and coordinates where they are not simply those of the file: read from footprints, or left off the map. */
 function plannedColumns(mapping: Mapping, { plans, sizes }: BuildingParts): ReadonlyMap<string, Float64Array> {
-  const { length_m, width_m, area_m2: _, ...rest } = plans;
+  const { length_m, width_m, area_m2: _, hasUnreadable: __, ...rest } = plans;
   const values = { plan_length_m: length_m, plan_width_m: width_m, ...rest };
   const planned = new Map<string, Float64Array>();
   for (const name of PLANNED) {

@@ -2,6 +2,7 @@
 import { Fragment, h } from 'preact';
 import type { ComponentChild } from 'preact';
 import { formatNumber } from '../engineering/format.js';
+import type { Visit } from '../engineering/priority/campaign.js';
 import type { SurveyPlan } from '../screening/survey.js';
 import { compileChart } from './dashboard/charts/compile.js';
 import { Section, TableRegion } from './dashboard/elements.js';
@@ -13,7 +14,7 @@ import { renderPage } from './page.js';
 import { gainChart, visitsMap } from './survey/charts.js';
 import { walksOf } from './survey/walk.js';
 import type { BlockWalk } from './survey/walk.js';
-import { ASKED, planSentences, reasonWord } from './survey/words.js';
+import { ASKED, perCostWord, planSentences, reasonWord } from './survey/words.js';
 
 const CAUTIONS: readonly string[] = [
   'What a visit finds out firms up an order for further assessment; it is no statement on the safety of any building.',
@@ -32,8 +33,9 @@ const WALK_STYLE = `
  * A survey plan as the text of an HTML file.
  * @param title of the study
  * @param pageScript the built client (`readPageScript()`)
+ * @param tooLarge kinds of visit that do not fit even once
  */
-export function renderSurvey(title: string, plan: SurveyPlan, pageScript: string): string {
+export function renderSurvey(title: string, plan: SurveyPlan, pageScript: string, tooLarge: readonly Visit[] = []): string {
   const charts = plan.steps.length === 0 ? [] : [gainChart(plan), visitsMap(plan)].filter((chart) => chart !== null);
   const walks = walksOf(plan.steps);
   const body = h(
@@ -48,7 +50,7 @@ export function renderSurvey(title: string, plan: SurveyPlan, pageScript: string
         { class: 'top' },
         h('p', { class: 'kicker' }, 'Survey next'),
         h('h1', null, `What to find out next: ${title}`),
-        planSentences(plan).map((sentence, i) => h('p', i === 0 ? { class: 'answer' } : null, sentence)),
+        planSentences(plan, tooLarge).map((sentence, i) => h('p', i === 0 ? { class: 'answer' } : null, sentence)),
       ),
       h(
         'main',
@@ -145,7 +147,7 @@ function Order({ plan: { steps, cost } }: { readonly plan: SurveyPlan }): Compon
       step.visit,
       reasonWord(step),
       formatNumber(step.value, 3),
-      formatNumber(step.value_per_cost, 3),
+      perCostWord(step),
       formatNumber(step.hours_so_far, 3),
       formatNumber(step.expected_wrong_places, 3),
     ]),

@@ -1,6 +1,13 @@
-/** The runs a study's database keeps. */
-import { Bug, UserError } from '../errors.js';
+/**
+ * The runs that the database of a folder keeps, and which of them are a study's: several study files of one folder share it. A run is of the
+ * file it was made with, by name, whatever has been edited in it since. Where no name was kept, or that file is gone (renamed), it is
+ * of the study that has its title.
+ */
+import { existsSync } from 'node:fs';
+import { basename, join } from 'node:path';
+import { Bug, UserError, showValue } from '../errors.js';
 import type { Database } from '../store/database.js';
+import type { LoadedStudy } from '../study/load.js';
 
 /** A run as a list shows it. */
 export interface RunEntry {
@@ -10,6 +17,8 @@ export interface RunEntry {
   readonly program: string;
   readonly note: string;
   readonly title: string;
+  /** Name of the study file it was made with; null where an earlier program kept none. */
+  readonly study_file: string | null;
   readonly buildings: number;
   readonly ranked: number;
   readonly list_size: number;
@@ -29,7 +38,7 @@ const NO_RUNS = 'this study has no run yet; run `swaymark screen` first';
 export async function listRuns(db: Database): Promise<readonly RunEntry[]> {
   if ((await db.value("SELECT count(*) FROM information_schema.tables WHERE table_name = 'run'")) === 0) return [];
   const rows = await db.rows<Row>(
-    `SELECT run_id AS run, made, program, note, title, buildings, ranked, list_size, rank_by, study_fingerprint, inventory_id, methods_fingerprint
+    `SELECT run_id AS run, made, program, note, title, json_extract_string(summary, '$.study_file') AS study_file, buildings, ranked, list_size, rank_by, study_fingerprint, inventory_id, methods_fingerprint
      FROM run ORDER BY run_id`,
   );
   return rows.map(({ study_fingerprint, inventory_id, methods_fingerprint, ...run }) => ({
@@ -38,10 +47,42 @@ export async function listRuns(db: Database): Promise<readonly RunEntry[]> {
   }));
 }
 
-/** The newest run. @throws UserError when there is none. */
+/** The newest run, of whichever study. @throws UserError when there is none. */
 export async function latestRun(db: Database): Promise<RunEntry> {
   const newest = (await listRuns(db)).at(-1);
   if (newest === undefined) throw new UserError(NO_RUNS, { file: db.file });
+  return newest;
+}
+
+/** Whether `run` is of the study `loaded`. */
+export function isOwnRun({ study_file, title }: RunEntry, { file, folder, study }: LoadedStudy): boolean {
+  if (study_file === basename(file)) return true;
+  return title === study.title && (study_file === null || !existsSync(join(folder, study_file)));
+}
+
+/** Whether two runs are of one study, as far as they tell themselves. */
+export function areOfOneStudy(a: RunEntry, b: RunEntry): boolean {
+  return a.study_file === null || b.study_file === null ? a.title === b.title : a.study_file === b.study_file;
+}
+
+/** The runs of the study `loaded`, oldest first. @throws UserError when there is none, saying whose are there. */
+export async function ownRuns(db: Database, loaded: LoadedStudy): Promise<readonly RunEntry[]> {
+  const runs = await listRuns(db);
+  const own = runs.filter((run) => isOwnRun(run, loaded));
+  if (own.length > 0) return own;
+  const newest = runs.at(-1);
+  if (newest === undefined) throw new UserError(NO_RUNS, { file: db.file });
+  const others = [...new Set(runs.map(({ study_file, title }) => study_file ?? `a study called ${showValue(title)}`))];
+  throw new UserError(
+    `no run was made with this study: the runs kept in its folder are of ${others.join(', ')} (the newest: run ${String(newest.run)}); run \`swaymark screen\` with this file first, or name one of them with --run`,
+    { file: loaded.file },
+  );
+}
+
+/** The newest run of the study `loaded`. @throws UserError when there is none, saying whose are there. */
+export async function latestOwnRun(db: Database, loaded: LoadedStudy): Promise<RunEntry> {
+  const newest = (await ownRuns(db, loaded)).at(-1);
+  if (newest === undefined) throw new Bug('a study with runs has no newest');
   return newest;
 }
 

@@ -13,12 +13,12 @@ import { databasePath, openStudyDatabase } from '../screening/screen.js';
 import type { Database } from '../store/database.js';
 import { loadStudyAlone } from '../study/load.js';
 import type { LoadedStudy } from '../study/load.js';
-import { latestRun, listRuns, runById, writeNote } from './history.js';
+import { isOwnRun, latestOwnRun, listRuns, runById, writeNote } from './history.js';
 import type { RunEntry } from './history.js';
 import { runSheet } from './sheet.js';
 import type { RunSheet } from './sheet.js';
 
-/** Which run is meant; the newest when left out. Units of what is shown; SI when left out. */
+/** Which run is meant; the newest of the study when left out. Units of what is shown; SI when left out. */
 export interface RunChoice {
   readonly run?: number | undefined;
   readonly units?: Display;
@@ -62,19 +62,27 @@ export async function changeStudyDatabase<T>(
   }
 }
 
-/** The chosen run of an open database. @throws UserError when there is none. */
-export async function chosenRun(db: Database, { run }: RunChoice): Promise<RunEntry> {
-  return run === undefined ? latestRun(db) : runById(db, run);
+/** The chosen run of the open database of `loaded`; by number it may be of another study of the folder. @throws UserError when there is none. */
+export async function chosenRun(db: Database, loaded: LoadedStudy, { run }: RunChoice): Promise<RunEntry> {
+  return run === undefined ? latestOwnRun(db, loaded) : runById(db, run);
+}
+
+/** A run in the list of a study's folder. */
+export interface FolderRun extends RunEntry {
+  /** Made with this study; another study file of the folder otherwise. */
+  readonly own: boolean;
 }
 
 /**
- * The runs of the study at `path`, oldest first.
+ * The runs kept in the folder of the study at `path`, oldest first, those of its other study files too.
  * @throws UserError when the study cannot be read or has no database yet.
  * @example
  * for (const { run, made, note } of await listStudyRuns('study.yaml')) report(run, made, note);
  */
-export async function listStudyRuns(path: string): Promise<readonly RunEntry[]> {
-  return withStudyDatabase(path, listRuns);
+export async function listStudyRuns(path: string): Promise<readonly FolderRun[]> {
+  return withStudyDatabase(path, async (db, loaded) =>
+    (await listRuns(db)).map((run) => ({ ...run, own: isOwnRun(run, loaded) })),
+  );
 }
 
 /**
@@ -104,8 +112,8 @@ export async function noteRun(path: string, run: number, note: string): Promise<
  * const { steps, stored } = await explain('study.yaml', 'BH-012', { units: 'us' });
  */
 export async function explain(path: string, id: string, options: RunChoice = {}): Promise<Explanation> {
-  return withStudyDatabase(path, async (db) => {
-    const { run } = await chosenRun(db, options);
+  return withStudyDatabase(path, async (db, loaded) => {
+    const { run } = await chosenRun(db, loaded, options);
     return explainBuilding(db, run, id, options.units ?? 'si');
   });
 }
@@ -117,8 +125,8 @@ export async function explain(path: string, id: string, options: RunChoice = {})
  * const html = renderDashboard(await pageDataOfStudy('study.yaml'), readPageScript());
  */
 export async function pageDataOfStudy(path: string, options: RunChoice = {}): Promise<PageData> {
-  return withStudyDatabase(path, async (db) => {
-    const { run } = await chosenRun(db, options);
+  return withStudyDatabase(path, async (db, loaded) => {
+    const { run } = await chosenRun(db, loaded, options);
     return pageDataOf(db, run, options.units ?? 'si');
   });
 }
@@ -134,8 +142,8 @@ export async function periods(
   id: string,
   options: RunChoice & { readonly system?: System } = {},
 ): Promise<PeriodSheet> {
-  return withStudyDatabase(path, async (db) => {
-    const { run } = await chosenRun(db, options);
+  return withStudyDatabase(path, async (db, loaded) => {
+    const { run } = await chosenRun(db, loaded, options);
     return periodSheet(db, run, id, options.system);
   });
 }
@@ -151,8 +159,8 @@ export async function periodsOfClass(
   system: System,
   options: RunChoice & { readonly group?: string } = {},
 ): Promise<PeriodClass> {
-  return withStudyDatabase(path, async (db) => {
-    const { run } = await chosenRun(db, options);
+  return withStudyDatabase(path, async (db, loaded) => {
+    const { run } = await chosenRun(db, loaded, options);
     return periodClass(db, run, system, options.group);
   });
 }

@@ -8,7 +8,7 @@ import { changesBetween } from '../study/changes.js';
 import { studyFromText } from '../study/load.js';
 import type { Study } from '../study/schema.js';
 import { dotted } from '../study/problems.js';
-import { listRuns, runById } from './history.js';
+import { areOfOneStudy, listRuns, runById } from './history.js';
 import type { RunEntry } from './history.js';
 
 /** A place of a run's list. */
@@ -34,14 +34,14 @@ export interface SettingDifference {
 
 /** How a run differs from the one before it. */
 export interface RunChanges {
-  /** The run before. */
+  /** The run before: of the same study where there is one. */
   readonly run: number;
   /** What the study file says otherwise, by the paths of `refresh --set`; null when this version does not read one of the two. */
   readonly study: readonly SettingDifference[] | null;
   /** What the assessment was told otherwise, by the paths of the kept settings: also what the files named by the study say. */
   readonly settings: readonly SettingDifference[];
-  /** Which of the fingerprints and the program are others. */
-  readonly others: readonly ('inventory' | 'methods' | 'program')[];
+  /** Which of the study file, the fingerprints and the program are others. */
+  readonly others: readonly ('study file' | 'inventory' | 'methods' | 'program')[];
 }
 
 /** Everything kept about a run besides its results. */
@@ -75,7 +75,9 @@ export async function runSheet(db: Database, id: number): Promise<RunSheet> {
   );
   if (inventory === undefined) throw new Bug(`run ${String(id)} has no inventory`);
   const { account, expected_wrong_places, sure_places } = stored.summary;
-  const before = (await listRuns(db)).findLast(({ run }) => run < id);
+  // The one before of the same study; where that has none, of whichever study of the folder.
+  const earlier = (await listRuns(db)).filter(({ run }) => run < id);
+  const before = earlier.findLast((run) => areOfOneStudy(run, entry)) ?? earlier.at(-1);
   return {
     ...entry,
     seed: Number(await db.value('SELECT seed FROM run WHERE run_id = ?', [id])),
@@ -104,6 +106,7 @@ async function changesFrom(db: Database, before: RunEntry, now: RunEntry, stored
   const [was, is] = [await keptStudy(db, before.run), await keptStudy(db, now.run)];
   const { settings } = await readRun(db, before.run);
   const others = {
+    'study file': !areOfOneStudy(before, now),
     inventory: before.fingerprints.inventory !== now.fingerprints.inventory,
     methods: before.fingerprints.methods !== now.fingerprints.methods,
     program: before.program !== now.program,
@@ -112,7 +115,7 @@ async function changesFrom(db: Database, before: RunEntry, now: RunEntry, stored
     run: before.run,
     study: was === null || is === null ? null : changed(was, is),
     settings: changed(settings, stored.settings),
-    others: (['inventory', 'methods', 'program'] as const).filter((name) => others[name]),
+    others: (['study file', 'inventory', 'methods', 'program'] as const).filter((name) => others[name]),
   };
 }
 

@@ -1,4 +1,5 @@
 /** The last part of a screening or a refreshing: assess and rank the buildings of an inventory, keep results and run. */
+import { basename } from 'node:path';
 import type { AssessSettings } from '../engineering/assess/settings.js';
 import type { TakenIn } from '../inventory/take-in.js';
 import type { Database } from '../store/database.js';
@@ -94,7 +95,7 @@ export async function keepRun(
     methodsFingerprint(),
     JSON.stringify(settings),
     loaded.text,
-    JSON.stringify(early),
+    keptSummary(loaded, early),
     count,
     assessed.id.length,
     listSize,
@@ -115,8 +116,13 @@ export async function keepRun(
       figures.ranked,
     ),
   };
-  await db.run('UPDATE run SET summary = ? WHERE run_id = ?', [JSON.stringify(summary), runId]);
+  await db.run('UPDATE run SET summary = ? WHERE run_id = ?', [keptSummary(loaded, summary), runId]);
   return { runId, taken, summary };
+}
+
+/** The summary as text, with the name of the study file: what tells the runs of one study from those of others in its folder. */
+function keptSummary({ file }: LoadedStudy, summary: StoredSummary): string {
+  return JSON.stringify({ study_file: basename(file), ...summary });
 }
 
 /** One more than every run there is or was: a deleted run's number stands on its reports, and would be taken for the new one. */

@@ -33,6 +33,8 @@ export interface StoredRun {
   readonly program: string;
   readonly note: string;
   readonly title: string;
+  /** Name of the study file; null where an earlier program kept none. */
+  readonly study_file: string | null;
   readonly inventory_id: string;
   readonly study_fingerprint: string;
   readonly methods_fingerprint: string;
@@ -44,18 +46,17 @@ export interface StoredRun {
 
 /** A run's record. @throws UserError when there is none of that number. */
 export async function readRun(db: Database, runId: number): Promise<StoredRun> {
-  const [row] = await db.rows<Omit<StoredRun, 'settings' | 'summary'> & { settings: string; summary: string }>(
+  const [row] = await db.rows<
+    Omit<StoredRun, 'settings' | 'summary' | 'study_file'> & { settings: string; summary: string }
+  >(
     `SELECT run_id, made, program, note, title, inventory_id, study_fingerprint, methods_fingerprint, settings, summary, rank_by,
        CAST(seed AS DOUBLE) AS seed
      FROM run WHERE run_id = ?`,
     [runId],
   );
   if (row === undefined) throw new UserError(`there is no run ${String(runId)}; swaymark runs lists them`);
-  return {
-    ...row,
-    settings: settingsFromJson(row.settings),
-    summary: JSON.parse(row.summary) as StoredSummary,
-  };
+  const { study_file = null, ...summary } = JSON.parse(row.summary) as StoredSummary & { study_file?: string };
+  return { ...row, study_file, settings: settingsFromJson(row.settings), summary };
 }
 
 const KIND: Readonly<Record<string, ColumnKind>> = { number: 'f64', whole: 'i32', text: 'text' };

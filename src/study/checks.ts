@@ -6,9 +6,11 @@ import { VS30_TABLES } from '../engineering/site/vs30.js';
 import { HAZARD_GRID } from '../engineering/spectrum/grid.js';
 import { SPECTRUM_REGISTER } from '../engineering/spectrum/definition.js';
 import { showValue } from '../errors.js';
+import { checkEditions } from './code-editions.js';
 import { suggest } from './nearest.js';
 import { checkOwnTable } from './own-table.js';
 import type { Finding } from './problems.js';
+import { checkVisits } from './survey-schema.js';
 
 type Step = string | number;
 
@@ -19,7 +21,9 @@ export function crossCheck(study: unknown): Finding[] {
     ...checkLevels(study),
     ...checkSlope(study),
     ...checkWords(study),
+    ...checkVisits(at(study, 'survey')),
     ...checkBudget(study),
+    ...checkEditions(at(study, 'code_history')),
     ...checkOwnTable(at(study, 'code_history')),
   ];
 }

@@ -6,7 +6,9 @@ import type { CarriedFamily } from '../engineering/capacity/families.js';
 import { showValue } from '../errors.js';
 import { EDITION_FIELDS } from './edition-fields.js';
 import { expected, number, strict, text, whole } from './fields.js';
+import { nearest, suggest } from './nearest.js';
 import { ownTableFields } from './own-table.js';
+import type { Finding } from './problems.js';
 
 /** Ids of the code editions a study may list, family by family, oldest first. */
 export const CODE_EDITIONS: readonly string[] = Object.values(EDITION_FIELDS).flatMap((fields) => Object.keys(fields));
@@ -44,14 +46,44 @@ const common = {
 };
 
 const EDITIONS_HINT = 'Only the editions the place used, each with its own hazard inputs.';
+const HISTORY_KEYS = 'place, family, seismic_design_enforced_from and editions below it (docs/code-histories.md)';
+
+function wantedEditions(ids: readonly string[]): string {
+  return (
+    `the editions the place used, at least one of ${ids.join(', ')}, each with its hazard inputs; ` +
+    'where seismic design was never required, one of them and seismic_design_enforced_from after the last building'
+  );
+}
 
 function history<Id extends CarriedFamily>(family: Id) {
   const editions: (typeof EDITION_FIELDS)[Id] = EDITION_FIELDS[family];
   return strict({
     ...common,
     family: z.literal(family).describe(`Family of codes. ${CODE_FAMILIES[family].title}.`),
-    editions: strict(optional(editions)).describe(EDITIONS_HINT),
+    editions: strict(optional(editions), {
+      wanted: wantedEditions(Object.keys(editions)),
+      unknown: unknownEdition,
+    }).describe(EDITIONS_HINT),
   });
+}
+
+/** No edition at all, of the raw value of `code_history`: every building would count as not designed, without a word. */
+export function checkEditions(history: unknown): Finding[] {
+  const { family, editions } = (history ?? {}) as { readonly family?: unknown; readonly editions?: unknown };
+  const fields = Object.entries(EDITION_FIELDS).find(([name]) => name === family)?.[1];
+  const isEmpty = typeof editions === 'object' && editions !== null && Object.keys(editions).length === 0;
+  if (fields === undefined || !isEmpty || Array.isArray(editions)) return [];
+  const message = `expected ${wantedEditions(Object.keys(fields))}; got none`;
+  return [{ path: ['code_history', 'editions'], message }];
+}
+
+/** Buildings after an edition that is not carried are read by the one before it. */
+function unknownEdition(key: string, known: readonly string[]): string {
+  const year = (id: string): number => Number(/\d{4}$/.exec(id)?.[0] ?? NaN);
+  const code = (id: string): string => id.replace(/\d{4}$/, '');
+  const before = known.findLast((id) => code(id) === code(key) && year(id) < year(key));
+  if (nearest(key, known) !== undefined || before === undefined) return suggest(key, known);
+  return `; known: ${known.join(', ')}; the last before ${String(year(key))} is ${before}`;
 }
 
 const known = [...FAMILY_IDS, OWN_FAMILY_ID].join(', ');
@@ -75,7 +107,7 @@ export const CodeHistorySchema = z.discriminatedUnion(
   ],
   {
     error: (issue) => {
-      if (issue.code !== 'invalid_union') return expected('keys and values below it')(issue);
+      if (issue.code !== 'invalid_union') return expected(HISTORY_KEYS)(issue);
       const { family } = issue.input as { readonly family?: unknown };
       if (family === undefined) return `missing; expected one of ${known}`;
       return typeof family === 'string'

@@ -15,16 +15,43 @@ export function expected(what: string): Complaint {
   };
 }
 
+interface StrictWords {
+  /** What is wanted where the mapping is missing or something else; the keys it cannot do without when left out. */
+  readonly wanted?: string;
+  /** The end of the message about a key it does not know; the nearest known one when left out. */
+  readonly unknown?: (key: string, known: readonly string[]) => string;
+}
+
 /** A mapping that refuses keys it does not know, naming the nearest one. Several unknown keys give one line each. */
-export function strict<T extends z.core.$ZodLooseShape>(shape: T): z.ZodObject<T, z.core.$strict> {
+export function strict<T extends z.core.$ZodLooseShape>(
+  shape: T,
+  words: StrictWords = {},
+): z.ZodObject<T, z.core.$strict> {
   const known = Object.keys(shape);
-  const wrong = expected('keys and values below it');
+  const { unknown = suggest } = words;
   return z.strictObject(shape, {
     error: (issue) =>
       issue.code === 'unrecognized_keys'
-        ? issue.keys.map((key) => `unknown key${suggest(key, known)}`).join('\n')
-        : wrong(issue),
+        ? issue.keys.map((key) => `unknown key${unknown(key, known)}`).join('\n')
+        : expected(words.wanted ?? keysBelow(shape))(issue),
   });
+}
+
+/** `place, family and editions below it`: the keys that have no default, else the first few there are. */
+function keysBelow(shape: z.core.$ZodLooseShape): string {
+  const needed = Object.keys(shape).filter((key) => {
+    const field = shape[key] as z.core.$ZodType | undefined;
+    return field !== undefined && !z.safeParse(field, undefined).success;
+  });
+  if (needed.length > 0) return `${inWords(needed)} below it`;
+  const some = Object.keys(shape);
+  return some.length === 0
+    ? '{}'
+    : `keys and values below it (${some.slice(0, 8).join(', ')}${some.length > 8 ? ', …' : ''}), or {}`;
+}
+
+function inWords(names: readonly string[]): string {
+  return names.length < 2 ? names.join('') : `${names.slice(0, -1).join(', ')} and ${names.at(-1) ?? ''}`;
 }
 
 /** Text that is not blank. Numbers are refused, since `007` would already have become 7. */

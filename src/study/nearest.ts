@@ -1,4 +1,5 @@
 const FARTHEST_SHARE = 0.4;
+const YEAR = /(?<!\d)(?:1[89]|20)\d\d(?!\d)/;
 
 /** The one of `known` that `word` was most likely meant to be, or undefined when none is close (at most 40 % of its letters differ). */
 export function nearest(word: string, known: readonly string[]): string | undefined {
@@ -9,7 +10,12 @@ export function nearest(word: string, known: readonly string[]): string | undefi
 export function nearestFew(word: string, known: readonly string[], most: number): readonly string[] {
   const folded = word.toLowerCase();
   const limit = Math.max(1, Math.floor(FARTHEST_SHARE * word.length)) + 1;
+  // Another year is another edition, not a slip.
+  const year = YEAR.exec(word)?.[0];
+  const isOfThatYear = (candidate: string): boolean =>
+    year === undefined || (YEAR.exec(candidate)?.[0] ?? year) === year;
   return known
+    .filter(isOfThatYear)
     .map((candidate) => ({ candidate, distance: editDistance(folded, candidate.toLowerCase(), limit) }))
     .filter(({ distance }) => distance < limit)
     .sort((a, b) => a.distance - b.distance)

@@ -3,6 +3,7 @@ import type { z } from 'zod';
 import { UNKNOWNS } from '../engineering/priority/survey-value.js';
 import type { Unknown } from '../engineering/priority/survey-value.js';
 import { mapping, number, strict, text } from './fields.js';
+import type { Finding } from './problems.js';
 
 const finds = Object.fromEntries(
   UNKNOWNS.map((unknown) => [
@@ -12,7 +13,9 @@ const finds = Object.fromEntries(
 ) as Readonly<Record<Unknown, z.ZodExactOptional<z.ZodNumber>>>;
 
 const VisitSchema = strict({
-  hours: number({ from: 0, to: 1000 }).describe('Hours a visit to one building takes, the way there included.'),
+  hours: number({ from: 0, to: 1000 }).describe(
+    'Hours a visit to one building takes, the way there included; 0 only where it costs money.',
+  ),
   money: number({ from: 0, to: 1e9 }).default(0).describe("What it costs, in the study's currency."),
   finds: strict(finds).describe('What it finds out, each with the chance that it does.'),
 });
@@ -29,6 +32,35 @@ export const USUAL_VISITS = {
     finds: { system: 0.95, year: 0.95, height: 0.98, irregularity: 0.9, drawings: 0.9 },
   },
 };
+
+/**
+ * Visits that cost nothing or find nothing out, of the raw value of `survey`: worth is weighed by hours or money, and without either it
+ * would be without end.
+ */
+export function checkVisits(survey: unknown): Finding[] {
+  return Object.entries(mappingOf(mappingOf(survey)['visits'])).flatMap(([name, visit]) => {
+    const { hours, money = 0, finds } = mappingOf(visit);
+    const path = ['survey', 'visits', name];
+    const found = Object.values(mappingOf(finds));
+    return [
+      ...(hours === 0 && money === 0
+        ? [
+            {
+              path: [...path, 'hours'],
+              message: 'expected hours over 0, or money over 0 beside them, got 0: a visit costs something',
+            },
+          ]
+        : []),
+      ...(finds !== undefined && finds !== null && found.every((chance) => chance === 0)
+        ? [{ path: [...path, 'finds'], message: 'expected a chance over 0 of finding something out, got none' }]
+        : []),
+    ];
+  });
+}
+
+function mappingOf(value: unknown): Readonly<Record<string, unknown>> {
+  return typeof value === 'object' && value !== null && !Array.isArray(value) ? { ...value } : {};
+}
 
 export const SurveySchema = strict({
   visits: mapping(text(), VisitSchema, 'kinds of visit by name, each with hours, money and finds', 1)

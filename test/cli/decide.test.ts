@@ -46,6 +46,19 @@ describe('budget', () => {
     writeFileSync(study, SMALL_STUDY);
   });
 
+  it('says why no choice is worth more', () => {
+    const said = (section: string, money: string): string => {
+      writeFileSync(study, `${SMALL_STUDY}${section}`);
+      return run('budget', '--money', money).out.replaceAll(/\s+/g, ' ');
+    };
+    const must = 'budget: {cost: {fixed: 1000, per_m2: 0, least: 0}, include: [{id: A3, reason: asked for}]}\n';
+    expect(said(must, '1000')).toContain('What must be among them leaves no money for any other.');
+    expect(said(must, '1500')).toContain('What must be among them leaves 500, too little for any other.');
+    expect(said(must, '9000')).toContain('all that may be chosen is.');
+    expect(said(must.replace('include', 'exclude'), '9000')).toContain('all that may be chosen is.');
+    writeFileSync(study, SMALL_STUDY);
+  });
+
   it('ends with 1 where the money buys nothing and with 2 where something is to be mended', () => {
     const nothing = run('budget', '--money', '10');
     expect([nothing.code, nothing.err]).toEqual([1, '']);
@@ -131,6 +144,11 @@ describe('sensitivity', () => {
     const { code, out, err } = run('sensitivity', '--csv', 'switches.csv');
     expect([code, err]).toEqual([0, '']);
     expectPlain(out);
+    // every id as --only takes it
+    for (const { assumption } of (
+      JSON.parse(run('sensitivity', '--json').out) as { switches: { assumption: string }[] }
+    ).switches)
+      expect(out).toMatch(new RegExp(`^${assumption}  `, 'm'));
     expect(out).toMatch(/^system-prior +none .*uniform: all alike +study +2 of 2 +1\.000$/m);
     expect(out).toMatch(/On the list whatever is switched|On the list, and in how many/);
     expect(out).toMatch(/^ {2}cracking: a constant/m);

@@ -88,6 +88,8 @@ describe('takeAnswers', () => {
         buildings: 2,
         columns: { system: 1, height_m: 1, storeys_above: 1, occupants_peak: 1 },
         not_found: { storeys_above: 1 },
+        on_record: 0,
+        answered_later: 0,
       });
       const after = await screened(path, ['BH-006', 'BH-024']);
       expect(after.inventory).not.toBe(before.inventory);
@@ -216,6 +218,8 @@ describe('takeAnswers', () => {
         buildings: 1,
         columns: {},
         not_found: { system: 2, use: 1, year_built: 1 },
+        on_record: 0,
+        answered_later: 0,
       });
       const after = await screened(path, ['L1', 'L2']);
       expect({ ...after, survey: null }).toEqual({ ...before, survey: null });
@@ -272,6 +276,48 @@ describe('takeAnswers', () => {
     const db = await openStudyDatabase(loaded);
     expect(await db.value('SELECT count(*) FROM survey_answer')).toBe(0);
     db.close();
+  });
+
+  it('takes no sheet twice, but again what was withdrawn', { timeout: 60_000 }, async () => {
+    const path = small();
+    await screened(path, ['L1']);
+    const take = (text: string): ReturnType<typeof takeAnswers> => takeAnswers(path, sheet(path, text), MADE);
+    const head = 'id,system,year_built,use,visit,surveyor,surveyed_on\n';
+    const first = `${head}L1,concrete-shear-wall,1961,?,street,N. N.,2026-12-03\nL2,–,1970,,street,N. N.,2026-12-03\n`;
+    expect(await take(first)).toMatchObject({ answers: 3, not_found: { use: 1 }, on_record: 0 });
+    expect(await take(first)).toEqual({
+      answers: 0,
+      buildings: 0,
+      columns: {},
+      not_found: {},
+      on_record: 4,
+      answered_later: 0,
+    });
+    expect(await listAnswers(path)).toHaveLength(4);
+    // another day is another answer, the sheet before it is old news, and a row that stands twice counts once
+    const later = `${head}L1,–,1962,,street,N. N.,2026-12-04\nL1,–,1962,,street,N. N.,2026-12-04\n`;
+    expect(await take(later)).toMatchObject({ answers: 1, on_record: 1 });
+    expect(await take(first)).toMatchObject({ answers: 0, on_record: 4, answered_later: 1 });
+    const counting = async (): Promise<unknown> =>
+      (await listAnswers(path))
+        .filter(({ counts, column }) => counts && column === 'year_built')
+        .map(({ cell }) => cell);
+    expect(await counting()).toEqual(['1962', '1970']);
+    await withdrawAnswers(path, { id: 'L1' }, MADE);
+    expect(await take(first)).toMatchObject({ answers: 2, not_found: { use: 1 }, on_record: 1 });
+    expect(await counting()).toEqual(['1961', '1970']);
+  });
+
+  it('refuses a day that no calendar has', { timeout: 60_000 }, async () => {
+    const path = small();
+    await screened(path, ['L1']);
+    await expect(
+      takeAnswers(path, sheet(path, 'id,system,surveyed_on\nL1,timber-light-frame,31/31/2020\n'), MADE),
+    ).rejects.toMatchObject({
+      place: { row: 2, columnName: 'surveyed_on' },
+      message: '"31/31/2020" is no day of the calendar; write it like 2026-12-03, or leave the cell blank',
+    });
+    expect(await listAnswers(path)).toEqual([]);
   });
 
   it('takes the sheet that a plan wrote, filled in', { timeout: 60_000 }, async () => {

@@ -1,5 +1,6 @@
 import { fileURLToPath } from 'node:url';
 import { describe, expect, it } from 'vitest';
+import { COLUMNS } from '../../src/engineering/columns.js';
 import { proposeMapping } from '../../src/inventory/propose-mapping.js';
 import { proposeStudy } from '../../src/inventory/propose-study.js';
 import type { UserError } from '../../src/errors.js';
@@ -59,6 +60,72 @@ describe('proposeMapping', () => {
     });
   });
 
+  it('takes its own names as they are, with the unit they name, whatever the order', () => {
+    const own = COLUMNS.map(({ name }) => name);
+    const expected = Object.fromEntries(
+      COLUMNS.map(({ name, unit }) => [name, unit === undefined ? name : `${name} in ${unit}`]),
+    );
+    for (const header of [own, own.toReversed(), own.map((name) => name.toUpperCase())]) {
+      const asked = proposeMapping(header, []);
+      expect(Object.keys(mapped(header)), header[0]).toEqual(own);
+      expect(asked.unused).toEqual([]);
+      expect(asked.columns.filter(({ question }) => question !== undefined)).toEqual([]);
+    }
+    expect(mapped(own.toReversed())).toEqual(expected);
+    // Each alone: nothing else may claim it.
+    for (const [name, value] of Object.entries(expected)) expect(mapped([name])).toEqual({ [name]: value });
+  });
+
+  it('takes its own names without a unit, and with another', () => {
+    expect(mapped(['wall_areas_transverse', 'brace_area_transverse_ft2', 'Concrete strength (psi)'])).toEqual({
+      wall_areas_transverse_m2: 'wall_areas_transverse in m2',
+      brace_area_transverse_m2: 'brace_area_transverse_ft2 in ft2',
+      concrete_strength_MPa: 'Concrete strength (psi) in psi',
+    });
+    const { columns } = proposeMapping(['id', 'wall_areas_longitudinal'], []);
+    expect(columns[1]?.question).toBe('the header names no unit; m2 or ft2?');
+  });
+
+  it.each(['transverse first', 'longitudinal first'])('never takes one direction for the other, %s', (order) => {
+    const pairs = [
+      ['wall_areas_longitudinal_m2', 'wall_areas_transverse_m2', 'wall_areas'],
+      ['Brace areas along (m2)', 'Brace areas across (m2)', 'brace_area'],
+      ['WallLengthX', 'WallLengthY', 'wall_lengths'],
+      ['measured period long.', 'measured period trans.', 'measured_period'],
+      ['infilllengthlongitudinal', 'infilllengthtransverse', 'infill_length'],
+      ['Storey stiffness (x)', 'Storey stiffness (y)', 'storey_stiffness'],
+    ] as const;
+    const header = pairs.flatMap(([x, y]) => (order === 'transverse first' ? [y, x] : [x, y]));
+    const found = proposeMapping(header, []);
+    for (const [x, y, name] of pairs) {
+      const of = (direction: string): string | undefined =>
+        found.columns.find(({ ours }) => ours.startsWith(`${name}_${direction}`))?.theirs;
+      expect([of('longitudinal'), of('transverse')], name).toEqual([x, y]);
+    }
+    expect(found.unused).toEqual([]);
+    // One direction alone leaves the other empty.
+    for (const [, y, name] of pairs)
+      expect(mapped([y])[`${name}_longitudinal_m2`] ?? mapped([y])[`${name}_longitudinal_m`], y).toBeUndefined();
+    expect(mapped(['system_transverse'])).toEqual({ system_transverse: 'system_transverse' });
+    expect(mapped(['Structure across', 'Structure'])).toEqual({
+      system: 'Structure',
+      system_transverse: 'Structure across',
+    });
+    expect(mapped(['Column depth across', 'Length across', 'Wall area x and y'])).toEqual({});
+  });
+
+  it('asks where a name tells no direction', () => {
+    const { columns } = proposeMapping(['Wall area (m2)'], []);
+    expect(columns).toEqual([
+      {
+        ours: 'wall_areas_longitudinal_m2',
+        theirs: 'Wall area (m2)',
+        unit: 'm2',
+        question: 'the header names no direction; longitudinal?',
+      },
+    ]);
+  });
+
   it('finds feet by the data, as a question', () => {
     const rows = Array.from({ length: 9 }, (_, i) => [`A${i}`, String(1 + i), String((1 + i) * 11)]);
     const proposal = proposeMapping(['id', 'Storeys', 'Height'], rows);
@@ -113,6 +180,7 @@ describe('proposeStudy', () => {
     } catch (error) {
       problems = (error as UserError).problems.map(({ place }) => place.key ?? '');
     }
+    expect(problems).toContain('code_history.editions');
     // All that is wrong with it is what the owner has to say.
     expect(problems.length).toBeGreaterThan(0);
     expect(problems.filter((key) => !/^(hazard|code_history)/.test(key))).toEqual([]);

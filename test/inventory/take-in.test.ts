@@ -304,6 +304,10 @@ describe('takeIn', () => {
     expect(floor_area_m2).toBeCloseTo(3 * 44.53 * 11.06, -1);
     expect([floor_area_m2_origin, lon]).toEqual(['inferred', 0.0002]);
     expect(codes(intake)).toEqual(['not-a-polygon']);
+    // what is no footprint counts as none
+    expect(building(intake, 'B')).toMatchObject({ footprint: null, storeys_above: 2 });
+    expect(building(intake, 'A')).toMatchObject({ footprint: expect.stringContaining('POLYGON') as string });
+    expect(intake.taken.attributes['footprint']).toEqual({ given: 1, inferred: 0, default: 0, unknown: 1 });
   });
 
   it('measures re-entrant corners of footprints, and keeps what the row says of them', async () => {
@@ -323,13 +327,24 @@ describe('takeIn', () => {
 
   it('reads neighbours and notes pairs that name no building', async () => {
     const file = writeTable(`${HEADER}A,3,,,,\nB,2,,,,\n`);
-    const pairs = writeTable('id_a,id_b,gap_m,floors_aligned\nA,B,0.05,yes\nA,C,1,\nB,A,wide,maybe\n', 'pairs.csv');
+    const pairs = writeTable(
+      'id_a,id_b,gap_m,floors_aligned\nA,B,0.05,yes\nA,C,1,\nB,A,wide,maybe\nB,A,-0.3,\nB,A,1e9,no\n',
+      'pairs.csv',
+    );
     const intake = await intakeOf({ ...studyOf(file, { columns: COLUMNS }), neighbours: { file: pairs } });
     expect(await intake.db.rows('SELECT id_a, id_b, gap_m, floors_aligned FROM neighbour')).toEqual([
       { id_a: 'A', id_b: 'B', gap_m: 0.05, floors_aligned: 'yes' },
       { id_a: 'B', id_b: 'A', gap_m: null, floors_aligned: null },
+      { id_a: 'B', id_b: 'A', gap_m: null, floors_aligned: null },
+      { id_a: 'B', id_b: 'A', gap_m: null, floors_aligned: 'no' },
     ]);
-    expect(codes(intake)).toEqual(['not-a-number', 'unknown-neighbour', 'unknown-word']);
+    expect(codes(intake)).toEqual([
+      'not-a-number',
+      'outside-limits',
+      'outside-limits',
+      'unknown-neighbour',
+      'unknown-word',
+    ]);
   });
 
   it('does nothing for an inventory it already holds, and takes a changed one as another', async () => {

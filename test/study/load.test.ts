@@ -48,6 +48,62 @@ describe('studyFromText', () => {
     expect(placeOf(['inventory', 'merge_rows_by'])).toMatchObject({ line: 3, column: 1 });
   });
 
+  it('refuses a code history without editions: every building would count as not designed', () => {
+    const wanted =
+      'the editions the place used, at least one of ubc-1927, ubc-1935, ubc-1949, ubc-1961, ubc-1976, ubc-1988, ubc-1997, asce7-2002, ' +
+      'each with its hazard inputs; where seismic design was never required, one of them and seismic_design_enforced_from after the last building';
+    const editions = / {2}editions:\n(?: {4}.*\n)+/.exec(SAMPLE)?.[0] ?? '';
+    expect(changed(editions, '  editions: {}\n')).toEqual([
+      `study.yaml:23:13 code_history.editions: expected ${wanted}; got none`,
+    ]);
+    expect(changed(editions, '  editions:\n')).toEqual([
+      `study.yaml:23:3 code_history.editions: expected ${wanted}, got nothing`,
+    ]);
+    expect(changed(editions, '')).toEqual([`study.yaml:19:1 code_history.editions: missing; expected ${wanted}`]);
+  });
+
+  it('says which keys are wanted where a mapping is missing', () => {
+    const history = SAMPLE.slice(SAMPLE.indexOf('code_history:'));
+    expect(changed(history, '')).toEqual([
+      'study.yaml:1:1 code_history: missing; expected place, family, seismic_design_enforced_from and editions below it (docs/code-histories.md)',
+    ]);
+    expect(changed('ubc-1949: {zone: 3}', 'ubc-1949:')).toEqual([
+      'study.yaml:24:5 code_history.editions.ubc-1949: expected zone below it, got nothing',
+    ]);
+    expect(complaints('title: A\n').filter((line) => line.includes(' hazard'))).toEqual([
+      'study.yaml:1:1 hazard: missing; expected spectra and levels below it',
+    ]);
+    expect(complaints(`${SAMPLE}ranking:\n`)).toEqual([
+      expect.stringContaining('ranking: expected keys and values below it (rank_by, list_size, k), or {}, got nothing'),
+    ]);
+  });
+
+  it('refuses a visit that costs nothing, and one that finds nothing out', () => {
+    const visits = (visit: string): string[] => complaints(`${SAMPLE}survey:\n  visits:\n    drone: ${visit}\n`);
+    const line = SAMPLE.split('\n').length + 2;
+    expect(visits('{hours: 0, finds: {system: 0.5}}')).toEqual([
+      `study.yaml:${String(line)}:20 survey.visits.drone.hours: expected hours over 0, or money over 0 beside them, got 0: a visit costs something`,
+    ]);
+    expect(visits('{hours: 0, money: 0, finds: {}}')).toEqual([
+      expect.stringContaining('survey.visits.drone.hours: '),
+      `study.yaml:${String(line)}:40 survey.visits.drone.finds: expected a chance over 0 of finding something out, got none`,
+    ]);
+    expect(visits('{hours: 0, money: 90, finds: {system: 0.5}}')).toEqual([]);
+    expect(visits('{hours: 0.1, finds: {system: 0.5, year: 0}}')).toEqual([]);
+  });
+
+  it('takes no edition for one of another year, and says which was in force', () => {
+    expect(
+      changed(
+        / {2}family: us-ubc-asce7[^]*zone_factor: 0.4, nv: 1.0}\n/.exec(SAMPLE)?.[0] ?? '?',
+        '  family: new-zealand\n  seismic_design_enforced_from: 1936\n  editions: {nz-1992: {}, nz_1976: {zone: A}}\n',
+      ),
+    ).toEqual([
+      'study.yaml:23:14 code_history.editions.nz-1992: unknown key; known: nz-1935, nz-1955, nz-1965, nz-1976, nz-2004; the last before 1992 is nz-1976',
+      'study.yaml:23:27 code_history.editions.nz_1976: unknown key (did you mean "nz-1976"?)',
+    ]);
+  });
+
   it('reports everything at once, in the order of the file', () => {
     const bad = `title: 7
 inventory:
@@ -118,7 +174,7 @@ seed: -1
       'study.yaml:29:3 code_history.place: expected text, got nothing',
       'study.yaml:32:22 code_history.editions.ubc-1949.zone: expected a zone: 1, 2 or 3, got 4',
       'study.yaml:33:5 code_history.editions.ubc-1976.site_factor: missing; expected a number 1 to 2',
-      'study.yaml:34:5 code_history.editions.ubc-1999: unknown key (did you mean "ubc-1949"?)',
+      'study.yaml:34:5 code_history.editions.ubc-1999: unknown key; known: ubc-1927, ubc-1935, ubc-1949, ubc-1961, ubc-1976, ubc-1988, ubc-1997, asce7-2002; the last before 1999 is ubc-1997',
       'study.yaml:35:20 code_history.detailing_from.concrete-frame: unknown key (did you mean "concrete-wall-frame"?)',
       'study.yaml:36:22 ranking.list_size: expected a whole number >= 1, got 2.5',
       'study.yaml:36:30 ranking.k: expected from-levels or a number 1 to 5, got 9',

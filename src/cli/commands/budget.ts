@@ -60,7 +60,7 @@ function bought(plan: BudgetPlan): string[] {
   const { run, money, spent, left, currency, chosen, of_list, on_list, gap, bound, value, unlikely } = plan;
   const best =
     value >= bound
-      ? 'No choice within the money is worth more: all that may be chosen is.'
+      ? provenWords(plan)
       : `${gap < 0.001 ? 'Less than 0.1 %' : `At most ${formatPercent(gap)}`} of the best possible worth is missed: no choice within the money is worth more than ${formatNumber(bound, 5)}, this one is worth ${formatNumber(value, 5)} (sum of chance of belonging × priority).`;
   return [
     `${counted(chosen.length, 'assessment', 'assessments')} out of run ${String(run)} for ${amount(spent, currency)}; of ${amount(money, currency)} there ${left === 1 ? 'is' : 'are'} ${amount(left, null)} left.`,
@@ -71,6 +71,18 @@ function bought(plan: BudgetPlan): string[] {
           `${counted(unlikely, 'building', 'buildings')} among them ${unlikely === 1 ? 'belongs' : 'belong'} to the list with a chance below 5 %: more money buys little.`,
         ]),
   ];
+}
+
+/** Why no choice is worth more: the musts leave nothing, or all is chosen that may be. */
+function provenWords({ chosen, overrides, ranked, left, currency }: BudgetPlan): string {
+  const musts = new Set(overrides.filter(({ what }) => what === 'include').map(({ id }) => id));
+  const isRanked = ({ rank }: BudgetBuilding): boolean => rank !== null;
+  const mayBe = ranked - overrides.filter((one) => one.what === 'exclude' && isRanked(one)).length;
+  if (chosen.filter(isRanked).length === mayBe)
+    return 'No choice within the money is worth more: all that may be chosen is.';
+  if (chosen.length > 0 && chosen.every(({ id }) => musts.has(id)))
+    return `What must be among them leaves ${left === 0 ? 'no money' : `${amount(left, currency)}, too little`} for any other.`;
+  return 'No choice within the money is worth more.';
 }
 
 function formatPercent(share: number): string {

@@ -18,10 +18,10 @@ interface Options {
 /** `swaymark review`: a sheet for an independent check by hand. */
 export async function review(options: Options): Promise<number> {
   const columns = terminalColumns();
-  await withStudyDatabase(findStudy(options.study), async (db, { folder, study }) => {
-    const { run } = await chosenRun(db, options);
+  await withStudyDatabase(findStudy(options.study), async (db, loaded) => {
+    const { run } = await chosenRun(db, loaded, options);
     const sheet = await reviewSheet(db, run, options.sample, options.units);
-    const output = prepareFolder(options.output ?? resolve(folder, study.output));
+    const output = prepareFolder(options.output ?? resolve(loaded.folder, loaded.study.output));
     const [path = ''] = await writeSet(output, { 'review.csv': sheet.csv });
     printLines([
       ...wrap(`${sheet.drawn}.`, columns),

@@ -1,7 +1,7 @@
 import { formatCount, formatShare } from '../../engineering/format.js';
 import { EXIT, showValue } from '../../errors.js';
 import { listStudyRuns, noteRun, showRun } from '../../runs/open.js';
-import type { RunEntry } from '../../runs/history.js';
+import type { FolderRun } from '../../runs/open.js';
 import type { RunChanges, RunSheet, SettingDifference } from '../../runs/sheet.js';
 import { findStudy } from '../find-study.js';
 import { printJson, printLines, terminalColumns } from '../output/print.js';
@@ -32,11 +32,13 @@ export async function runs(options: RunsOptions): Promise<number> {
   return EXIT.clean;
 }
 
-function listLines(kept: readonly RunEntry[], columns: number): string[] {
+function listLines(kept: readonly FolderRun[], columns: number): string[] {
   if (kept.length === 0) return ['This study has no run; swaymark screen makes one.'];
+  const others = kept.some(({ own }) => !own);
   const head = [
     { title: 'Run', right: true },
     { title: 'Made (UTC)', spare: 1 },
+    ...(others ? [{ title: 'Study file', shrinkTo: 10 }] : []),
     { title: 'Title', shrinkTo: 12, spare: 6 },
     { title: 'Buildings', right: true, spare: 5 },
     { title: 'Ranked', right: true, spare: 3 },
@@ -51,6 +53,7 @@ function listLines(kept: readonly RunEntry[], columns: number): string[] {
     kept.map((run) => [
       String(run.run),
       minuteOf(run.made),
+      ...(others ? [run.study_file ?? 'not kept'] : []),
       run.title,
       formatCount(run.buildings),
       formatCount(run.ranked),
@@ -68,7 +71,18 @@ function listLines(kept: readonly RunEntry[], columns: number): string[] {
       const note = clean(kept[at]?.note ?? '');
       return note === '' ? [line] : [line, ...wrap(note, columns, indent)];
     }),
+    ...(others ? ['', ...wrap(folderSentence(kept), columns)] : []),
   ];
+}
+
+/** Which run commands take where study files share a folder. */
+function folderSentence(kept: readonly FolderRun[]): string {
+  const newest = kept.findLast(({ own }) => own);
+  const rule =
+    'A run is of the study file it was made with; one of another file of the folder is taken where --run names it';
+  return newest === undefined
+    ? `None of them was made with this study. ${rule}.`
+    : `Commands take run ${String(newest.run)}, the newest of this study. ${rule}.`;
 }
 
 /** `swaymark runs show`: everything kept about a run. */
@@ -84,7 +98,7 @@ function sheetLines(sheet: RunSheet, columns: number): string[] {
   const facts: readonly (readonly [string, string])[] = [
     ['Made', `${minuteOf(sheet.made)} UTC by ${sheet.program}`],
     ['Note', sheet.note === '' ? 'none' : sheet.note],
-    ['Study', fingerprints.study],
+    ['Study', `${fingerprints.study}${sheet.study_file === null ? '' : `, ${sheet.study_file}`}`],
     ['Inventory', `${fingerprints.inventory}, ${inventory.file} in ${inventory.encoding}`],
     ['Methods', fingerprints.methods],
     ['Ranked', `${formatCount(sheet.ranked)}, not ranked ${formatCount(sheet.not_ranked)}`],
@@ -133,9 +147,7 @@ function listBlock({ list }: RunSheet, columns: number): string[] {
 
 function changeLines({ run }: RunSheet, before: RunChanges, columns: number): string[] {
   const base = String(before.run);
-  const others = before.others.map(
-    (name) => ({ inventory: 'inventory', methods: 'methods', program: 'program' })[name],
-  );
+  const { others } = before;
   const lines =
     others.length === 0 ? [] : [...wrap(`Against run ${base}: another ${others.join(', another ')}.`, columns)];
   // What the study's file says is what `refresh --set` knows; the settings tell where only a file it names, or nothing of it, differs.

@@ -72,9 +72,10 @@ function lines(found: Sensitivity, csv: string | undefined, columns: number): st
     '',
     ...table(
       [
-        { title: 'Assumption', shrinkTo: 13 },
-        { title: 'Was', shrinkTo: 6 },
-        { title: 'Switched to', shrinkTo: 24 },
+        // whole: it is what --only takes
+        { title: 'Assumption' },
+        { title: 'Was', shrinkTo: 5, spare: 1 },
+        { title: 'Switched to', shrinkTo: 19 },
         { title: 'Mark' },
         { title: 'Overlap', right: true },
         { title: 'Tau-b', right: true },

@@ -62,7 +62,14 @@ async function takeBack(study: string, file: string, json: true | undefined): Pr
   return EXIT.clean;
 }
 
-function takenSentences({ answers, buildings, columns, not_found }: TakenAnswers): readonly string[] {
+function takenSentences({
+  answers,
+  buildings,
+  columns,
+  not_found,
+  on_record,
+  answered_later,
+}: TakenAnswers): readonly string[] {
   const missing = Object.values(not_found).reduce((sum, count) => sum + count, 0);
   const named = (counts: Readonly<Record<string, number>>): string =>
     Object.entries(counts)
@@ -76,6 +83,12 @@ function takenSentences({ answers, buildings, columns, not_found }: TakenAnswers
       : [
           `${counted(missing, 'cell', 'cells')}${answers === 0 ? ` ${where}` : ''} ${missing === 1 ? 'says' : 'say'} that it could not be found out: ${named(not_found)}. \`swaymark survey\` no longer counts on that kind of visit for it; others may still find it out.`,
         ]),
+    ...(on_record === 0
+      ? []
+      : [
+          `${counted(on_record, 'cell is', 'cells are')} on record already, with the same visit, surveyor, date and remark, and ${on_record === 1 ? 'is' : 'are'} not taken again${answered_later === 0 ? '' : `; ${String(answered_later)} of them ${answered_later === 1 ? 'was' : 'were'} answered later, and the later answer counts`}.`,
+        ]),
+    ...(answers === 0 && missing === 0 ? ['Nothing new is taken.'] : []),
     ...(answers === 0
       ? []
       : [

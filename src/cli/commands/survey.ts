@@ -3,7 +3,7 @@ import { formatNumber } from '../../engineering/format.js';
 import { EXIT } from '../../errors.js';
 import { surveyStudy } from '../../exports/survey-study.js';
 import type { PlannedSurvey } from '../../exports/survey-study.js';
-import { askedWords, planSentences, reasonWord } from '../../reports/survey/words.js';
+import { askedWords, perCostWord, planSentences, reasonWord } from '../../reports/survey/words.js';
 import { findStudy } from '../find-study.js';
 import { printJson, printLines, terminalColumns } from '../output/print.js';
 import { progressLine } from '../output/progress.js';
@@ -39,12 +39,12 @@ export async function survey(options: SurveyCommandOptions): Promise<number> {
   }
 }
 
-function lines({ plan, csv, page }: PlannedSurvey, columns: number): string[] {
+function lines({ plan, tooLarge, csv, page }: PlannedSurvey, columns: number): string[] {
   const { steps, cost } = plan;
   const money = plan.money > 0;
   return [
     styled('bold', `Survey for run ${String(plan.run)}`),
-    ...planSentences(plan).flatMap((text) => wrap(text, columns)),
+    ...planSentences(plan, tooLarge).flatMap((text) => wrap(text, columns)),
     '',
     ...(steps.length === 0
       ? []
@@ -69,7 +69,7 @@ function lines({ plan, csv, page }: PlannedSurvey, columns: number): string[] {
                 String(step.rank),
                 step.visit,
                 askedWords(step),
-                formatNumber(step.value_per_cost, 3),
+                perCostWord(step),
                 formatNumber(step.hours_so_far, 3),
                 ...(money ? [formatNumber(step.money_so_far, 4)] : []),
                 formatNumber(step.expected_wrong_places, 2),

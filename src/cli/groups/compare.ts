@@ -12,7 +12,7 @@ export function addCompareCommand(program: Command, keep: Keep): void {
       'Compares two runs: who entered and left the list, how alike the orders are, and each move explained: the parts of its change of ln S, its own change against those of the others, what differs in data, settings and methods. Writes a page with the before-and-after picture.',
     )
     .argument('[before]', 'the earlier run (default: the one before the later)', wholeNumber)
-    .argument('[after]', 'the later run (default: the newest)', wholeNumber)
+    .argument('[after]', 'the later run (default: the newest of the study)', wholeNumber)
     .addOption(study())
     .option('--other-study <file>', 'the study file of the later run, where it is of another study')
     .option('--most <number>', 'other large moves explained besides those of the lists', wholeNumber, 20)

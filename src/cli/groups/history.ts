@@ -9,7 +9,7 @@ export function addHistoryCommands(program: Command, keep: Keep): void {
     .command('runs')
     .summary('the runs kept for a study: list, show, note, delete')
     .description(
-      'Lists the runs kept in study.duckdb with their notes and fingerprints; or shows, notes or deletes some.',
+      'Lists the runs kept in study.duckdb with their notes and fingerprints; or shows, notes or deletes some. Study files of one folder share it: a run is of the file it was made with, by its name, also when that was edited since.',
     )
     .enablePositionalOptions()
     .helpCommand('help [command]', 'print help for a command')

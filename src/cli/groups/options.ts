@@ -57,7 +57,8 @@ export const units = (): Option =>
 export const json = (): Option => new Option('--json', 'print JSON');
 export const study = (): Option =>
   new Option('--study <file>', 'the study file (default: study.yaml, or the only .yaml file here)');
-export const run = (): Option => new Option('--run <number>', 'the run (default: the newest)').argParser(wholeNumber);
+export const run = (): Option =>
+  new Option('--run <number>', 'the run (default: the newest of the study)').argParser(wholeNumber);
 
 export function examples(...lines: readonly string[]): string {
   return `\n${styled('bold', lines.length > 1 ? 'Examples:' : 'Example:')}\n${lines.map((line) => `  ${line}`).join('\n')}`;

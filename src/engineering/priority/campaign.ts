@@ -131,7 +131,8 @@ function sum(planned: readonly PlannedVisit[], what: Cost): number {
   return planned.at(-1)?.[what] ?? 0;
 }
 
-function fits({ hours, money }: Visit, left: Limits): boolean {
+/** Whether one visit fits into what is left. */
+export function fits({ hours, money }: Visit, left: Limits): boolean {
   // a sum of visits that fills the limit exactly must not fail by its last digit
   const most = (limit: number): number => limit + 1e-9 * (1 + Math.abs(limit));
   return hours <= most(left.hours) && money <= most(left.money);

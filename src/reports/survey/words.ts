@@ -1,6 +1,7 @@
 /** A survey in words: what is asked, why, and what it does to the list. */
 import { formatCount, formatNumber, formatShare } from '../../engineering/format.js';
 import type { Unknown } from '../../engineering/priority/survey-value.js';
+import type { Visit } from '../../engineering/priority/campaign.js';
 import type { SurveyOutlook, SurveyVisit } from '../../engineering/page-contract.js';
 import type { SurveyPlan } from '../../screening/survey.js';
 
@@ -28,13 +29,26 @@ export function reasonWord({ asks, shares }: Pick<SurveyVisit, 'asks' | 'shares'
     : `${ASKED[unknown]} ${unknown === 'occupants' ? 'not counted' : unknown === 'height' ? 'inferred' : 'unknown'}: ${formatShare(share)} of the spread`;
 }
 
-/** What the whole plan does to the list. */
-export function planSentences(plan: SurveyPlan): readonly string[] {
+/** Worth for an hour, or for money; a dash where the visit costs nothing of it. */
+export function perCostWord({ value, value_per_cost }: Pick<SurveyVisit, 'value' | 'value_per_cost'>): string {
+  return value_per_cost * 1e-6 > value ? '–' : formatNumber(value_per_cost, 3);
+}
+
+/** "street (0.4 h)", "drawings (4 h, 160 in money)". */
+export function visitWord({ name, hours, money }: Visit): string {
+  const cost = [...(hours > 0 ? [`${formatNumber(hours, 3)} h`] : []), ...(money > 0 ? [`${formatNumber(money, 4)} in money`] : [])];
+  return `${name} (${cost.join(', ')})`;
+}
+
+/** What the whole plan does to the list. `tooLarge`: kinds of visit that do not fit into hours and money even once. */
+export function planSentences(plan: SurveyPlan, tooLarge: readonly Visit[] = []): readonly string[] {
   const { steps, buildings, hours, money, expected_wrong_before, expected_wrong_after, list_size } = plan;
   const since = sinceSentences(String(plan.run), plan);
   if (steps.length === 0)
     return [
-      'No visit that fits is worth anything: what is unknown at the edge of the list would not change it, or is known already.',
+      tooLarge.length === 0
+        ? 'No visit that fits is worth anything: what is unknown at the edge of the list would not change it, or is known already.'
+        : `No visit that fits is worth anything; what does not fit into the hours or the money: ${tooLarge.map(visitWord).join(', ')}.`,
       ...since,
     ];
   const cost = [`${formatNumber(hours, 3)} h`, ...(money > 0 ? [`${formatNumber(money, 4)} in money`] : [])].join(', ');

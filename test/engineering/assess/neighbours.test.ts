@@ -3,6 +3,7 @@ import { describe, expect, it } from 'vitest';
 import { compileContext } from '../../../src/engineering/assess/context.js';
 import { closenessOf, swayOf } from '../../../src/engineering/assess/neighbours.js';
 import type { Sway } from '../../../src/engineering/assess/neighbours.js';
+import { handSteps } from '../../../src/engineering/hand.js';
 import { Trace } from '../../../src/engineering/trace.js';
 import { building, given } from '../../support/engineering-building.js';
 import { SETTINGS } from '../../support/engineering-settings.js';
@@ -53,6 +54,23 @@ describe('closenessOf', () => {
       'jeng-kasai-maison-1992/separation/correlation',
       'jeng-kasai-maison-1992/separation/double-difference',
       'asce41-17/separation/by-height-high',
+    ]);
+  });
+});
+
+describe('handSteps', () => {
+  it('says gaps in the units shown: 0.12 m are 0.394 ft, 0.15 m 0.492 ft (0.3048 m a foot, by definition)', () => {
+    const trace = new Trace();
+    closenessOf(sway('A', 10, 0.12), sway('B', 10, 0.09), GAP, trace);
+    const words = (display: 'si' | 'us'): unknown =>
+      handSteps(trace, display)
+        .filter(({ kind }) => kind === 'choice')
+        .map(({ symbolic, source }) => [symbolic, source]);
+    expect(words('si')).toEqual([
+      ['short: 0.120 m where 0.150 m are needed', 'short by the height rule too (0.150 m)'],
+    ]);
+    expect(words('us')).toEqual([
+      ['short: 0.394 ft where 0.492 ft are needed', 'short by the height rule too (0.492 ft)'],
     ]);
   });
 });

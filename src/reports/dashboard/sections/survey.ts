@@ -3,7 +3,7 @@ import { h } from 'preact';
 import type { ComponentChild } from 'preact';
 import { formatCount, formatNumber } from '../../../engineering/format.js';
 import type { PageData, SurveyOutlook } from '../../../engineering/page-contract.js';
-import { askedWords, outlookSentence, reasonWord, sinceSentences, worthwhileSentence } from '../../survey/words.js';
+import { askedWords, outlookSentence, perCostWord, reasonWord, sinceSentences, worthwhileSentence } from '../../survey/words.js';
 import type { DataTable } from '../charts/chart.js';
 import { Section, TableRegion } from '../elements.js';
 
@@ -19,7 +19,7 @@ export function visitsTable({ steps, visits }: SurveyOutlook): DataTable {
       step.visit,
       askedWords(step),
       reasonWord(step),
-      formatNumber(step.value_per_cost, 3),
+      perCostWord(step),
       formatNumber(step.hours_so_far, 3),
       formatNumber(step.expected_wrong_places, 3),
     ]),
