@@ -92,6 +92,8 @@ export interface Structure {
   readonly infill_thickness_m: number;
   /** Solid panels of the first storey together. */
   readonly infill_length_m: PerDirection<number>;
+  /** Floor and roof decks in the owner's word: `flexible` is read; null: not known. */
+  readonly diaphragm: string | null;
   readonly concrete_strength_MPa: number;
   /** Share of the height that is of steel or timber. */
   readonly steel_height_share: number;

@@ -46,6 +46,11 @@ const SYMBOLS: Readonly<Record<string, string>> = {
   strength_coefficient: 'C_s',
   design_base_shear_coefficient: 'C_d',
   mass_share: 'α₁',
+  modifier_ms: 'M_s',
+  modification_c: 'C_mod',
+  average_stress_MPa: 'τ',
+  area_m2: 'A_v',
+  yield_MPa: 'F_y',
   code_reduction: 'R_code',
   retrofit_level: 'r',
   irregularity: 'ι',
@@ -209,7 +214,15 @@ const SYMBOLS: Readonly<Record<string, string>> = {
 export const symbol = (name: string): string => SYMBOLS[name] ?? name;
 
 /** C_t is the trade's symbol for the coefficient of a period formula; any other coefficient is a plain c. */
+const inFamily = (name: string, familyId: string): string | undefined => {
+  if (name === 'coefficient') return familyId.startsWith('period/') ? undefined : 'c';
+  // the share of ASCE/SEI 41 by system, beside that of the capacity by storeys: two numbers of one sheet
+  if (name === 'mass_share') return familyId.startsWith('demand/') ? 'C_m' : undefined;
+  return undefined;
+};
+
+/** The symbol of a quantity in the formulas of a family. */
 export const symbolIn =
   (familyId: string) =>
   (name: string): string =>
-    name === 'coefficient' && !familyId.startsWith('period/') ? 'c' : symbol(name);
+    inFamily(name, familyId) ?? symbol(name);

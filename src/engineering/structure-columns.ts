@@ -27,7 +27,16 @@ export const STRUCTURE_WORDS = [
   'wall_areas_transverse_m2',
   'wall_lengths_longitudinal_m',
   'wall_lengths_transverse_m',
+  'diaphragm',
 ] as const;
+
+/** Says nothing of a structure by itself: many inventories have it, and it is read beside the others alone. */
+const BESIDE = 'diaphragm';
+/** The columns of which one at least must be filled for a row to have a `Structure`. */
+export const STRUCTURE_KNOWN_BY: readonly string[] = [
+  ...STRUCTURE_NUMBERS,
+  ...STRUCTURE_WORDS.filter((name) => name !== BESIDE),
+];
 
 type StructureNumber = (typeof STRUCTURE_NUMBERS)[number];
 type StructureWord = (typeof STRUCTURE_WORDS)[number];
@@ -46,7 +55,7 @@ export function numbersOf(text: string | null): readonly number[] | null {
 /** Reads rows of the columns as Structures; null for a row that knows none of it. */
 export function structureReader({ numbers, words }: StructureColumns): (i: number) => Structure | null {
   const numberColumns = STRUCTURE_NUMBERS.map((name) => numbers[name]);
-  const wordColumns = STRUCTURE_WORDS.map((name) => words[name]);
+  const wordColumns = STRUCTURE_WORDS.filter((name) => name !== BESIDE).map((name) => words[name]);
   const isKnown = (i: number): boolean => {
     for (const column of numberColumns) if (!Number.isNaN(column[i]!)) return true;
     for (const column of wordColumns) if (column[i]! !== null) return true;
@@ -85,6 +94,7 @@ export function structureReader({ numbers, words }: StructureColumns): (i: numbe
         longitudinal: number('infill_length_longitudinal_m'),
         transverse: number('infill_length_transverse_m'),
       },
+      diaphragm: words.diaphragm[i]!,
       concrete_strength_MPa: number('concrete_strength_MPa'),
       steel_height_share: number('steel_height_share'),
       vs30_mps: number('vs30_mps'),

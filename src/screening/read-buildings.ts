@@ -1,7 +1,7 @@
 /** Buildings of an inventory out of the database, by column. */
 import { BUILDING_NUMBERS, BUILDING_WORDS } from '../engineering/building-columns.js';
 import type { BuildingColumns, YearPools } from '../engineering/building-columns.js';
-import { STRUCTURE_NUMBERS, STRUCTURE_WORDS } from '../engineering/structure-columns.js';
+import { STRUCTURE_KNOWN_BY, STRUCTURE_NUMBERS, STRUCTURE_WORDS } from '../engineering/structure-columns.js';
 import { Bug } from '../errors.js';
 import { EXTRA_COLUMNS, FILLED_ATTRIBUTES } from '../store/schema.js';
 import { quoteName } from '../store/sql.js';
@@ -50,7 +50,7 @@ export async function knowsStructure(db: Database, inventoryId: string): Promise
   const text = await db.value('SELECT attributes FROM inventory WHERE inventory_id = ?', [inventoryId]);
   if (typeof text !== 'string') return false;
   const counts = JSON.parse(text) as Readonly<Record<string, { readonly given: number }>>;
-  return Object.keys(STRUCTURE_SPEC).some((name) => (counts[name]?.given ?? 0) > 0);
+  return STRUCTURE_KNOWN_BY.some((name) => (counts[name]?.given ?? 0) > 0);
 }
 
 export interface BuildingBlock {

@@ -5,7 +5,7 @@ import { METHODS } from '../../src/engineering/methods.js';
 import { openDatabase } from '../../src/store/database.js';
 import { REFERENCE_CASES } from '../reference/cases.js';
 import type { ReferenceCase } from '../reference/case.js';
-import { measure } from '../support/engineering-measure.js';
+import { caseInputs, measure } from '../support/engineering-measure.js';
 
 /** How the answer was come by; only the last is a number we worked out ourselves. */
 export type Kind = 'printed' | 'restated' | 'memory' | 'own arithmetic';
@@ -116,7 +116,8 @@ function changed(record: AnyRecord, name: string, value: number): AnyRecord {
   return { ...record, constants: { ...(record.constants as object), [name]: value * 1.01 } };
 }
 
-function fails(record: AnyRecord, { inputs, expected, tolerance }: ReferenceCase): boolean {
-  const value = applyAny(record, inputs);
+function fails(record: AnyRecord, reference: ReferenceCase): boolean {
+  const { expected, tolerance } = reference;
+  const value = applyAny(record, caseInputs(reference));
   return !(Math.abs(value - expected) <= tolerance * (1 + 1e-9) + 1e-15);
 }

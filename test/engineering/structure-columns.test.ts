@@ -1,6 +1,11 @@
 import { describe, expect, it } from 'vitest';
 import { findColumn } from '../../src/engineering/columns.js';
-import { STRUCTURE_NUMBERS, STRUCTURE_WORDS, structureReader } from '../../src/engineering/structure-columns.js';
+import {
+  STRUCTURE_KNOWN_BY,
+  STRUCTURE_NUMBERS,
+  STRUCTURE_WORDS,
+  structureReader,
+} from '../../src/engineering/structure-columns.js';
 import type { StructureColumns } from '../../src/engineering/structure-columns.js';
 
 /** Two rows: the first knows nothing, the second what is given. */
@@ -24,6 +29,12 @@ describe('structureReader', () => {
       vs30_mps: 240,
       column_width_m: NaN,
     });
+  });
+
+  it('reads the diaphragm beside other facts, and makes nothing of it alone', () => {
+    expect(structureReader(columns({ diaphragm: 'flexible' }))(1)).toBeNull();
+    expect(structureReader(columns({ diaphragm: 'flexible', column_count: 12 }))(1)?.diaphragm).toBe('flexible');
+    expect(STRUCTURE_KNOWN_BY).not.toContain('diaphragm');
   });
 
   it('finds a row whose only fact is a word', () => {

@@ -17,14 +17,20 @@ const sheet97 = (id: string, period_s: number, printed: number): ReferenceCase =
 });
 
 const EARLY: readonly ReferenceCase[] = [
-  {
-    id: 'ubc-1927-firm',
+  ...(
+    [
+      ['firm', 0.075],
+      ['soft', 0.1],
+    ] as const
+  ).map(([soil, expected]): ReferenceCase => ({
+    id: `ubc-1927-${soil}`,
     method: 'ubc-1927/base-shear/static',
-    inputs: { coefficient: 0.075 },
-    ...exactly(0.075),
-    source: 'UBC 1927 appendix, firm ground: 0.075',
+    inputs: {},
+    edition: { id: 'ubc-1927', stated: { soil } },
+    ...exactly(expected),
+    source: 'data sheet 11.4: UBC 1927 appendix, 0.075 on firm and 0.10 on soft ground',
     mark: 'memory',
-  },
+  })),
   {
     id: 'SD-57-5',
     method: 'ubc-1949/base-shear/static',
@@ -127,6 +133,15 @@ const EARLY: readonly ReferenceCase[] = [
     mark: 'own arithmetic',
   })),
   {
+    id: 'ubc-1988-wall',
+    method: 'ubc-1988/base-shear/static',
+    inputs: { zone_factor: 0.4, site_factor: 1.2, reduction_r: 6, period_s: 0.3 },
+    expected: 0.18,
+    tolerance: half(2),
+    source: 'data sheet 11.4: 0.18 in the highest zone at R_w 6',
+    mark: 'memory',
+  },
+  {
     id: 'ubc-1988-frame',
     method: 'ubc-1988/base-shear/static',
     inputs: { zone_factor: 0.4, site_factor: 1.2, reduction_r: 8, period_s: 0.5 },
@@ -141,6 +156,15 @@ const LATE: readonly ReferenceCase[] = [
   sheet97('SD-52-30-4', 1.03, 0.037),
   sheet97('SD-52-30-5', 0.1, 0.096),
   sheet97('SD-52-30-6', 3, 0.028),
+  {
+    id: 'ubc-1997-stiff',
+    method: UBC97,
+    inputs: { ca_g: 0.44, cv_g: 0.64, zone_floor: 0.32, reduction_r: 8.5, period_s: 0.3 },
+    expected: 0.13,
+    tolerance: half(2),
+    source: 'data sheet 11.4: about 0.13 in the highest zone at R 8.5',
+    mark: 'memory',
+  },
   {
     id: 'ubc-1997-zone-4',
     method: UBC97,

@@ -1,4 +1,5 @@
 /** A number from outside the program that a record must reproduce. */
+import type { CarriedId } from '../../src/engineering/capacity/families.js';
 import type { Inputs } from '../../src/engineering/formula.js';
 
 export interface ReferenceCase {
@@ -7,6 +8,8 @@ export interface ReferenceCase {
   readonly method: string;
   /** In our names and SI units. */
   readonly inputs: Inputs;
+  /** An edition of a code reads the record, with what a study states for the place: the inputs are those it gives it. */
+  readonly edition?: { readonly id: CarriedId; readonly stated: unknown };
   readonly expected: number;
   /** Half of the last printed digit unless `note` says why it is more. */
   readonly tolerance: number;

@@ -46,6 +46,14 @@ const SHEAR: readonly ReferenceCase[] = [
     mark: 'own arithmetic',
   })),
   {
+    id: 'SP-27-importance',
+    method: 'nbc-2005/base-shear/importance',
+    inputs: { base_shear_coefficient: 0.09, importance_factor: 1.5 },
+    ...exactly(0.135),
+    source: 'base shear calculation sheet, IS 1893, 7-storey school: A_h 0.135 with I 1.5',
+    mark: 'restated',
+  },
+  {
     id: 'elastic-shear',
     method: 'asce41-17/base-shear/elastic',
     inputs: { sa_g: 0.8, mass_share: 0.9 },
@@ -71,6 +79,23 @@ const DISPLACEMENT: readonly ReferenceCase[] = [
     inputs: { sa_g: 1, mass_share: 0.9, yield_coefficient: 0.225 },
     ...exactly(4),
     source: '1 × 0.9 over 0.225',
+    mark: 'own arithmetic',
+  },
+  {
+    id: 'yield-coefficient',
+    method: 'swaymark/displacement/yield-coefficient',
+    inputs: { strength_coefficient: 0.14, overstrength: 2, irregularity: 0.7 },
+    ...exactly(0.196),
+    source: '0.14 × 2 × 0.7',
+    mark: 'own arithmetic',
+  },
+  {
+    id: 'yield-coefficient-of-check',
+    method: 'swaymark/displacement/yield-coefficient-of-check',
+    // two storeys: M_s 3.0, C 1.2; 2 m² of wall at 100 psi (0.6894757 MPa) under 6894.757 kN
+    inputs: { strength_coefficient: (3 * 0.2) / 1.2, modification_c: 1.2, modifier_ms: 3, irregularity: 0.9 },
+    ...exactly(0.18),
+    source: '689.4757 × 2/6894.757 = 0.2, times 0.9',
     mark: 'own arithmetic',
   },
   c1('SD-49', 4, 0.6, 1.1389, 'public script, site class D: a = 60, T = 0.6 s, μ 4, C_m 1'),

@@ -1,4 +1,5 @@
 /** Design coefficients of the codes outside the United States. Those without a printed answer are the stated formula worked by hand. */
+import type { CarriedId } from '../../src/engineering/capacity/families.js';
 import type { Inputs } from '../../src/engineering/formula.js';
 import { exactly, half } from './case.js';
 import type { ReferenceCase } from './case.js';
@@ -15,6 +16,19 @@ const rows = (method: string, mark: ReferenceCase['mark'], list: readonly Row[])
     tolerance: half(digits),
     source,
     mark,
+  }));
+
+type Zone = readonly [id: string, edition: CarriedId, stated: unknown, expected: number, source: string];
+/** Rows by what a study states of a place: the table of the edition gives the record its number. */
+const byPlace = (method: string, list: readonly Zone[]): readonly ReferenceCase[] =>
+  list.map(([id, edition, stated, expected, source]) => ({
+    id,
+    method,
+    inputs: {},
+    edition: { id: edition, stated },
+    ...exactly(expected),
+    source,
+    mark: 'memory',
   }));
 
 const JAPAN: readonly ReferenceCase[] = [
@@ -121,8 +135,9 @@ const ITALY: readonly ReferenceCase[] = [
   ...rows('italy-1909/base-shear/static', 'own arithmetic', [
     ['italy-1909-four', { storeys: 4 }, 0.114583, 6, '(1/12 + 3/8)/4'],
   ]),
-  ...rows('italy-1935/base-shear/static', 'memory', [
-    ['italy-1935-1', { coefficient: 0.1 }, 0.1, 9, '1935: 0.10 in category I'],
+  ...byPlace('italy-1935/base-shear/static', [
+    ['italy-1935-1', 'italy-1935', { category: 1 }, 0.1, 'data sheet 11.4: 0.10 in category I'],
+    ['italy-1935-2', 'italy-1935', { category: 2 }, 0.07, 'data sheet 11.4: 0.07 in category II'],
   ]),
   ...rows('italy-1975/base-shear/static', 'restated', [
     ['italy-1975-1', { seismicity_degree: 12, period_s: 0.5 }, 0.1, 9, '(S − 2)/100: 0.10 in category 1'],
@@ -164,9 +179,24 @@ const ITALY: readonly ReferenceCase[] = [
 ];
 
 const GREECE: readonly ReferenceCase[] = [
-  ...rows('greece-1959/base-shear/static', 'memory', [
-    ['greece-1959-ii-medium', { coefficient: 0.08 }, 0.08, 9, 'ε of zone II on medium ground'],
-  ]),
+  ...byPlace(
+    'greece-1959/base-shear/static',
+    (
+      [
+        ['I', [0.04, 0.06, 0.08]],
+        ['II', [0.06, 0.08, 0.12]],
+        ['III', [0.08, 0.12, 0.16]],
+      ] as const
+    ).flatMap(([zone, row]) =>
+      (['firm', 'medium', 'soft'] as const).map((ground, i): Zone => [
+        `greece-1959-${zone}-${ground}`,
+        'greece-1959',
+        { zone, ground },
+        row[i]!,
+        'data sheet 11.4: ε by zone on firm, medium and soft ground',
+      ]),
+    ),
+  ),
   ...rows('greece-1995/base-shear/static', 'own arithmetic', [
     [
       'greece-1995-plateau',
@@ -193,9 +223,13 @@ const GREECE: readonly ReferenceCase[] = [
 ];
 
 const TURKEY: readonly ReferenceCase[] = [
-  ...rows('turkey-1949/base-shear/static', 'memory', [
-    ['turkey-1968-1', { coefficient: 0.06 }, 0.06, 9, 'C_0 of 1968 in zone 1'],
-  ]),
+  ...byPlace(
+    'turkey-1949/base-shear/static',
+    [0.06, 0.04, 0.02].map((expected, i): Zone => {
+      const zone = i + 1;
+      return [`turkey-1968-${String(zone)}`, 'turkey-1968', { zone }, expected, 'data sheet 11.4: C_0 of 1968 by zone'];
+    }),
+  ),
   ...rows('turkey-1975/base-shear/static', 'own arithmetic', [
     [
       'turkey-1975-stiff',

@@ -84,6 +84,7 @@ export const structure = (fields: Partial<Structure>): Structure => ({
   brace_area_m2: { longitudinal: NaN, transverse: NaN },
   infill_thickness_m: NaN,
   infill_length_m: { longitudinal: NaN, transverse: NaN },
+  diaphragm: null,
   concrete_strength_MPa: NaN,
   steel_height_share: NaN,
   vs30_mps: NaN,

@@ -110,6 +110,7 @@ const RANGES: Readonly<Record<string, fc.Arbitrary<number>>> = {
   sa_nw_g: between(0.01, 4),
   sa_ne_g: between(0.01, 4),
   design_base_shear_coefficient: between(0, 0.5),
+  base_shear_coefficient: between(0.01, 0.5),
   level_factor: fc.constantFrom(1, 1.4),
   overstrength: between(1, 4),
   code_reduction: between(1, 12),

@@ -1,7 +1,12 @@
 /** One measure of a reference case: the pass-or-fail test and the table of accuracies print the same numbers. */
+import type { CodeEdition } from '../../src/engineering/capacity/edition.js';
+import { EDITIONS } from '../../src/engineering/capacity/families.js';
 import { applyAny } from '../../src/engineering/formula.js';
+import type { Inputs } from '../../src/engineering/formula.js';
 import { findMethod } from '../../src/engineering/methods.js';
+import { Trace } from '../../src/engineering/trace.js';
 import type { ReferenceCase } from '../reference/case.js';
+import { building } from './engineering-building.js';
 
 export interface Measurement {
   readonly id: string;
@@ -15,11 +20,29 @@ export interface Measurement {
   readonly ok: boolean;
 }
 
+/** Inputs of the record in a case. @throws Error where the edition of the case does not read the record. */
+export function caseInputs({ id, method, inputs, edition }: ReferenceCase): Inputs {
+  if (edition === undefined) return inputs;
+  const one = building();
+  const facts = {
+    building: one,
+    direction: 'longitudinal',
+    system: one.system!,
+    height_m: 14,
+    ductile: false,
+  } as const;
+  const trace = new Trace();
+  (EDITIONS[edition.id] as CodeEdition).design(facts, edition.stated, trace);
+  const step = trace.steps.find((found) => found.kind === 'formula' && found.record.id === method);
+  if (step?.kind !== 'formula') throw new Error(`${edition.id} of ${id} does not read ${method}`);
+  return step.inputs;
+}
+
 /** Evaluates the record at the case's inputs. @throws Error for a record that is not in the register. */
 export function measure(reference: ReferenceCase): Measurement {
   const method = findMethod(reference.method);
   if (method === undefined) throw new Error(`no record ${reference.method}`);
-  const value = applyAny(method, reference.inputs);
+  const value = applyAny(method, caseInputs(reference));
   const difference = value - reference.expected;
   return {
     id: reference.id,

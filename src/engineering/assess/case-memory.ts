@@ -12,6 +12,8 @@ export interface CapacityAtHeight {
   readonly lnStrength: number;
   /** It comes from a strength check: a capacity to be taken as it is, or a strength to which ductility and share of mass still come. */
   readonly checked?: 'as it is' | 'with ductility';
+  /** What a check taken as it is multiplied its strength by (M_s) and divided it by (C). */
+  readonly checkFactors?: { readonly modifier_ms: number; readonly modification_c: number };
 }
 
 /** The capacities of a system designed to an edition, already found: all cases of the two share them. */

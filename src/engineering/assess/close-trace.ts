@@ -9,6 +9,7 @@ import type { AssessContext } from './context.js';
 import { REGULAR, irregularityOf, storeyChanceOf } from './irregularity.js';
 import { leadingCase, scoreOf } from './leading.js';
 import { spreadShares } from './spread-shares.js';
+import { drawingsLevels, levelNotStated } from './terms.js';
 
 interface Closing {
   readonly building: Building;
@@ -33,18 +34,26 @@ export function closeTrace(trace: Trace, closing: Closing): void {
     cases.prior === null
       ? 'system given; era by year of construction, lag and enforcement'
       : `system chances: ${cases.prior}`;
-  cases.list.slice(0, SHOWN).forEach((which, i) => {
+  const shown = shownCases(closing);
+  shown.slice(0, SHOWN).forEach((one, i) => {
     trace.value(
-      `case ${String(i + 1)} of ${String(cases.list.length)}`,
-      caseWords(which, closing),
+      `case ${String(i + 1)} of ${String(shown.length)}`,
+      caseWords(one, closing),
       cases.systemKnown ? 'given' : 'prior',
       why,
     );
   });
-  if (cases.list.length > SHOWN) {
-    const rest = cases.list.slice(SHOWN).reduce((sum, { chance }) => sum + chance, 0);
-    trace.value('further cases', String(cases.list.length - SHOWN), 'prior', `together ${formatShare(rest)}`);
+  if (shown.length > SHOWN) {
+    const rest = shown.slice(SHOWN).reduce((sum, { chance }) => sum + chance, 0);
+    trace.value('further cases', String(shown.length - SHOWN), 'prior', `together ${formatShare(rest)}`);
   }
+  if (shown.length > cases.list.length)
+    trace.value(
+      "level of the drawings' coefficient",
+      'working stress 50 %, strength 50 %',
+      'prior',
+      'the drawings do not say: every case counts twice, once at either level',
+    );
   irregularWords(trace, closing);
   for (let i = mixture.from; i < mixture.to; i += 1) {
     trace.value(
@@ -98,10 +107,37 @@ function irregularWords(trace: Trace, { building, cases, slope_k, context }: Clo
   );
 }
 
+/** A case as it is written out: at one level of the drawings' coefficient, where the drawings do not say which. */
+interface ShownCase {
+  readonly which: Case;
+  readonly building: Building;
+  readonly level: string;
+  readonly chance: number;
+}
+
+/** All cases, by falling chance; twice as many where the level of the drawings' coefficient is open. */
+function shownCases({ building, cases, context }: Closing): readonly ShownCase[] {
+  const open = context.settings.rankBy !== 'demand' && levelNotStated(building);
+  return cases.list.flatMap((which): readonly ShownCase[] =>
+    open
+      ? (['working', 'strength'] as const).map((design_level, i) => ({
+          which,
+          building: { ...building, design_level },
+          level: ['; coefficient at working stress', '; coefficient at strength level'][i]!,
+          chance: which.chance * drawingsLevels(building)[i]!.chance,
+        }))
+      : [{ which, building, level: '', chance: which.chance }],
+  );
+}
+
 /** One case at its central values. */
-function caseWords(which: Case, { building, cases, choice, slope_k, context }: Closing): string {
-  const name = `${which.system}${which.system_transverse === which.system ? '' : ` / ${which.system_transverse}`}, ${which.edition ?? 'no seismic design'}`;
-  const share = `chance ${formatShare(which.chance)}`;
+function caseWords(
+  { which, building, level, chance }: ShownCase,
+  { cases, choice, slope_k, context }: Closing,
+): string {
+  const systems = `${which.system}${which.system_transverse === which.system ? '' : ` / ${which.system_transverse}`}`;
+  const name = `${systems}, ${which.edition ?? 'no seismic design'}${level}`;
+  const share = `chance ${formatShare(chance)}`;
   const worked = leadingCase(building, { ...cases, list: [which] }, choice, slope_k, context);
   if (typeof worked === 'string') return `${name}: ${share}`;
   const score = scoreOf(building, worked.sa_g, worked.capacity_g, slope_k, choice.spectrum, context);

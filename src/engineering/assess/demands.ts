@@ -3,10 +3,9 @@
  * central values when a person looks at a building; no part of the priority and of the pass over all buildings.
  */
 import type { Building, DirectionName, PerDirection, System } from '../building.js';
-import { SYSTEM_FACTORS } from '../capacity/systems.js';
-import { BASE_SHEAR_ASCE7, BASE_SHEAR_ELASTIC, massFactorOf } from '../demand/base-shear.js';
+import { BASE_SHEAR_ELASTIC, massFactorOf } from '../demand/base-shear.js';
 import { ROOF_DISPLACEMENT, STOREY_DRIFT, driftMark } from '../demand/drift.js';
-import { C1, C2, STRENGTH_RATIO } from '../demand/inelastic.js';
+import { C1, C2, STRENGTH_RATIO, YIELD_COEFFICIENT, YIELD_OF_CHECK } from '../demand/inelastic.js';
 import { SPECTRAL_DISPLACEMENT } from '../demand/records.js';
 import { DIRECTIONS } from '../direction.js';
 import { formatShare } from '../format.js';
@@ -15,13 +14,13 @@ import type { AnyRecord } from '../formula.js';
 import { DRIFT_FACTOR, FIRST_STOREY_SHARE, PARTICIPATION } from '../stiffness/chain-shape.js';
 import { WALL_FRAME_RECORDS } from '../stiffness/wall-frame.js';
 import type { Trace } from '../trace.js';
-import { capacityAtHeight } from './capacity.js';
-import type { Cases } from './case-memory.js';
+import type { Case, Cases } from './case-memory.js';
 import type { SpectrumChoice } from './choose-spectrum.js';
+import { codeShear } from './code-shear.js';
 import type { AssessContext } from './context.js';
 import { centralFactor, softFirstStorey } from './irregularity.js';
 import type { LeadingCase } from './leading.js';
-import { drawingsLevels, importanceOf } from './terms.js';
+import { strengthOf } from './leading-capacity.js';
 
 export interface DirectionDemand {
   readonly period_s: number;
@@ -94,7 +93,8 @@ function demandOf(
   const storeys = Math.min(MOST_STOREYS, Math.max(1, Math.round(building.storeys.value)));
   const mass_share = massFactorOf(system, storeys, period_s);
   apply(BASE_SHEAR_ELASTIC, { sa_g, mass_share }, trace);
-  codeShear(building, system, choice, period_s, trace);
+  if (trace !== undefined)
+    codeShear({ building, system, storeys, spectrum: choice.spectrum, period_s, context, trace });
   const sd_m = apply(SPECTRAL_DISPLACEMENT, { sa_g, period_s }, trace);
   let c1 = 1;
   let c2 = 1;
@@ -102,13 +102,11 @@ function demandOf(
     trace?.choice({
       question: 'Inelastic displacement',
       taken: 'as the elastic one',
-      because: 'a finished assessment gives a capacity, not a strength',
+      because: 'a finished assessment gives one capacity, which cannot be split into strength and ductility',
       others: [],
     });
   else {
-    const { level } = drawingsLevels(building)[0]!;
-    const at = capacityAtHeight(building, which, direction, height_m, level, context);
-    const yield_coefficient = at.strength_coefficient * at.overstrength * centralFactor(building, which, context);
+    const yield_coefficient = yieldCoefficient(building, which, direction, context, trace);
     const strength_ratio = apply(STRENGTH_RATIO, { sa_g, mass_share, yield_coefficient }, trace);
     c1 = apply(C1, { strength_ratio, site_factor_a: siteFactor(building, trace), period_s }, trace);
     c2 = apply(C2, { strength_ratio, period_s }, trace);
@@ -126,32 +124,29 @@ function demandOf(
   return { period_s, roof_displacement_m, drift_ratio, passed };
 }
 
-const formatDrift = (ratio: number): string => `${String(Number((ratio * 100).toFixed(2)))} %`;
-
-/** Today's design base shear where the spectrum is of ASCE/SEI 7 and so names what the formula asks. */
-function codeShear(
+/** c_y of the capacity that ranks, by whichever way that was come by. */
+function yieldCoefficient(
   building: Building,
-  system: System,
-  { spectrum }: SpectrumChoice,
-  period_s: number,
+  which: Case,
+  direction: DirectionName,
+  context: AssessContext,
   trace?: Trace,
-): void {
-  const { sds_g, sd1_g, tl_s } = spectrum.inputs;
-  if (!spectrum.record.id.startsWith('asce7') || typeof sds_g !== 'number' || typeof sd1_g !== 'number') return;
-  apply(
-    BASE_SHEAR_ASCE7,
-    {
-      sds_g,
-      sd1_g,
-      tl_s: typeof tl_s === 'number' ? tl_s : 8,
-      near_fault_s1_g: 0,
-      reduction_r: SYSTEM_FACTORS[system].r2002,
-      importance_factor: importanceOf(building),
-      period_s,
-    },
-    trace,
-  );
+): number {
+  const { at, way } = strengthOf(building, which, direction, context);
+  trace?.choice({
+    question: 'Strength behind the inelastic displacement',
+    taken: way,
+    because: 'the capacity of the hand calculation above, before ductility and mass share',
+    others: [],
+  });
+  const irregularity = centralFactor(building, which, context);
+  const { strength_coefficient, overstrength, checkFactors } = at;
+  if (checkFactors !== undefined)
+    return apply(YIELD_OF_CHECK, { strength_coefficient, ...checkFactors, irregularity }, trace);
+  return apply(YIELD_COEFFICIENT, { strength_coefficient, overstrength, irregularity }, trace);
 }
+
+const formatDrift = (ratio: number): string => `${String(Number((ratio * 100).toFixed(2)))} %`;
 
 /** a of C1 by site class: 130 (A, B), 90 (C), 60 (D and softer, and where it is not known: the larger displacement). */
 function siteFactor({ site_class }: Building, trace?: Trace): number {

@@ -104,14 +104,26 @@ const KINDS: Partial<Readonly<Record<System, Kind>>> = {
   'steel-buckling-restrained-braced-frame': 'braces',
 };
 
+/** Checks that ASCE 41 has and this program does not make. */
+const NOT_MADE: Partial<Readonly<Record<System, string>>> = {
+  'timber-light-frame':
+    'ASCE 41 checks timber walls by the force on a metre of their length, which goes with their sheathing; no column tells the sheathing, and this program does not make the check',
+};
+/** The one word of the column that is read. */
+const FLEXIBLE = 'flexible';
+
 function averageStress(
   { route, areas, weight_kN, storeys }: Work,
   ms: (typeof CHECK_EDITIONS)[keyof typeof CHECK_EDITIONS],
 ): CapacityAtHeight | string {
   const { building, system, trace } = route;
   const kind = KINDS[system];
-  if (kind === undefined) return `ASCE 41 has no average-stress check of strength for ${system}`;
-  const cOf = (row: keyof typeof CHECK_C): number => CHECK_C[row][Math.min(storeys, 4) - 1]!;
+  if (kind === undefined) return NOT_MADE[system] ?? `this program makes no average-stress check of ${system}`;
+  const isFlexible = building.structure!.diaphragm?.trim().toLowerCase() === FLEXIBLE;
+  if (isFlexible)
+    trace?.value('diaphragm', FLEXIBLE, 'given', 'modification factor C of 1.0 whatever the system and the storeys');
+  const cOf = (row: keyof typeof CHECK_C): number =>
+    CHECK_C[isFlexible ? 'unreinforced' : row][Math.min(storeys, 4) - 1]!;
   const missing = `the row has no area of ${kind === 'columns' || kind === 'braces' ? kind : 'walls'} along the force`;
   if (kind === 'braces') {
     const bay_length_m = building.structure!.bay_length_m;
@@ -119,9 +131,10 @@ function averageStress(
     if (!(bay_length_m > 0)) return 'the row has no bay length, so the slope of the braces is not known';
     trace?.value('yield_MPa', BRACE_YIELD_MPA, 'default', 'yield strength of structural steel [memory]');
     const { first_m } = storeyHeights(route);
-    const inputs = { modifier_ms: ms.braces, yield_MPa: BRACE_YIELD_MPA, area_m2: areas.braces_m2, bay_length_m };
-    const rest = { storey_height_m: first_m, modification_c: cOf('wall'), weight_kN };
-    return asItIs(apply(BRACE_STRESS, { ...inputs, ...rest }, trace), building);
+    const factors = { modifier_ms: ms.braces, modification_c: cOf('wall') };
+    const inputs = { yield_MPa: BRACE_YIELD_MPA, area_m2: areas.braces_m2, bay_length_m };
+    const rest = { storey_height_m: first_m, weight_kN };
+    return asItIs(apply(BRACE_STRESS, { ...factors, ...inputs, ...rest }, trace), factors, building);
   }
   const area_m2 = kind === 'columns' ? areas.columns_m2 : areas.walls_m2;
   if (!(area_m2 > 0)) return missing;
@@ -133,8 +146,8 @@ function averageStress(
         : apply(CONCRETE_STRESS, { concrete_strength_MPa: knownStrength(building, 0) }, trace);
   const modifier_ms = kind === 'columns' ? ms.columns : kind === 'unreinforced masonry' ? ms.unreinforced : ms.walls;
   const modification_c = cOf(kind === 'columns' ? 'frame' : kind === 'unreinforced masonry' ? 'unreinforced' : 'wall');
-  const shear = { modifier_ms, average_stress_MPa, area_m2, modification_c, weight_kN };
-  return asItIs(apply(AVERAGE_SHEAR, shear, trace), building);
+  const factors = { modifier_ms, modification_c };
+  return asItIs(apply(AVERAGE_SHEAR, { ...factors, average_stress_MPa, area_m2, weight_kN }, trace), factors, building);
 }
 
 function knownStrength({ structure }: Building, otherwise: number): number {
@@ -142,14 +155,19 @@ function knownStrength({ structure }: Building, otherwise: number): number {
   return given > 0 ? given : otherwise;
 }
 
-/** A capacity to which nothing is applied but irregularities: the share of mass that the integration divides by is put back. */
-function asItIs(capacity_sa_g: number, building: Building): CapacityAtHeight {
+/** A capacity to which neither overstrength nor ductility nor mass share is applied, irregularities alone: the share of mass that the integration divides by is put back. */
+function asItIs(
+  capacity_sa_g: number,
+  checkFactors: NonNullable<CapacityAtHeight['checkFactors']>,
+  building: Building,
+): CapacityAtHeight {
   return {
     strength_coefficient: capacity_sa_g,
     overstrength: 1,
     ductility: 1,
     lnStrength: ln(capacity_sa_g * massShare(building)),
     checked: 'as it is',
+    checkFactors,
   };
 }
 

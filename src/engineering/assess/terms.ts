@@ -33,6 +33,11 @@ export function drawingsLevels(
   return building.design_level === 'strength' ? AT_STRENGTH : EITHER_LEVEL;
 }
 
+/** True where the drawings' coefficient gives the capacity and may be at either level. */
+export function levelNotStated(building: Building): boolean {
+  return !(building.capacity_sa_g > 0) && drawingsLevels(building) === EITHER_LEVEL;
+}
+
 /** True where nothing tells the two directions apart: one system, nothing measured or given per direction, no plan dimension in the era's formula. */
 export function directionsAlike(building: Building, which: Case): boolean {
   if (which.system !== which.system_transverse) return false;

@@ -103,6 +103,9 @@ export const NZ_DUCTILITY = bySystem(1.25, {
   'timber-light-frame': 3,
 });
 
+/** S_p of NZS 1170.5 4.4 at a ductility, from memory. */
+export const performanceOf = (ductility: number): number => Math.max(0.7, 1.3 - 0.3 * ductility);
+
 const ZONE_SHARES: Readonly<Record<NewZealandZone, number>> = { A: 1, B: 5 / 6, C: 2 / 3 };
 
 const period = (which: string) => recordOf(OCEANIA_NEPAL_PERIODS, `nzs1170-5-2004/period/${which}`);
@@ -200,7 +203,7 @@ export const NEW_ZEALAND_EDITIONS: EditionTable<NewZealandEdition> = {
       const site = { site_class, zone_factor, return_factor: 1, distance_km, site_period_s: 1.5 };
       const sa_g = applyAny(STATIC, { ...site, period_s }, trace);
       const ductility = NZ_DUCTILITY[system];
-      const performance_factor = Math.max(0.7, 1.3 - 0.3 * ductility);
+      const performance_factor = performanceOf(ductility);
       const action = { sa_g, performance_factor, ductility, zone_factor, return_factor: 1, period_s };
       return {
         coefficient: applyAny(ACTION, action, trace),

@@ -81,7 +81,7 @@ export const AVERAGE_SHEAR = make(
   {
     source: asce('4.4.3.2, 4.4.3.3 solved for S_a'),
     verified: 'memory',
-    note: 'Nothing else is applied: no overstrength, no ductility, no share of mass. The factor n_c/(n_c − n_f) of columns is left out.',
+    note: 'No overstrength, no ductility, no share of mass is applied; irregularities multiply it as they do every capacity, below. The factor n_c/(n_c − n_f) of columns is left out.',
   },
 );
 
@@ -269,7 +269,7 @@ export const CHECK_EDITIONS = {
   'asce41-17': { walls: 3, unreinforced: 1.25, columns: 2, braces: 3 },
   'asce41-13': { walls: 4, unreinforced: 1.5, columns: 2, braces: 3 },
 } as const;
-/** C of the base shear by storeys, 1 to 4 and more. */
+/** C of the base shear by storeys, 1 to 4 and more; the last row holds for flexible diaphragms too, whatever the system. */
 export const CHECK_C = {
   frame: [1.3, 1.1, 1, 1],
   wall: [1.4, 1.2, 1.1, 1],

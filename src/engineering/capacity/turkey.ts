@@ -135,7 +135,7 @@ export const TURKISH_R = bySystem(2.5, {
   'timber-light-frame': 4,
 });
 /** D of 2018, from memory: 3 where R is 7 or more, 2.5 at 5 and 6, 2 to 1.5 below. */
-const overstrengthOf = (reduction: number): number => (reduction >= 7 ? 3 : reduction >= 5 ? 2.5 : 1.5);
+export const overstrengthOf = (reduction: number): number => (reduction >= 7 ? 3 : reduction >= 5 ? 2.5 : 1.5);
 
 const CONSTANTS: Readonly<Record<number, readonly [number, number]>> = {
   1: [0.1, 0.4],

@@ -16,7 +16,8 @@ const asce: Family<AsceInput, { readonly share: number; readonly least: number }
   id: 'demand/base-shear-asce7',
   yields: 'base_shear_coefficient',
   unit: null,
-  symbol: 'C_s',
+  // the standard calls it C_s, which on a sheet is the strength coefficient of the capacity
+  symbol: 'V/W',
   inputs: [
     { name: 'sds_g', kind: 'number', unit: 'g', meaning: 'S_DS' },
     { name: 'sd1_g', kind: 'number', unit: 'g', meaning: 'S_D1' },
@@ -34,6 +35,11 @@ const asce: Family<AsceInput, { readonly share: number; readonly least: number }
   ],
   expression:
     'max(min(sds_g, sd1_g / period_s * min(1, tl_s / period_s)) * importance_factor / reduction_r, share * sds_g * importance_factor, least, 0.5 * near_fault_s1_g * importance_factor / reduction_r)',
+  // a floor that is not evaluated, or does not apply, is not shown as if it were
+  shownAt: ({ near_fault_s1_g }) => ({
+    expression: `max(min(sds_g, sd1_g / period_s * min(1, tl_s / period_s)) * importance_factor / reduction_r, share * sds_g * importance_factor, least${near_fault_s1_g > 0 ? ', 0.5 * near_fault_s1_g * importance_factor / reduction_r' : ''})`,
+    clause: near_fault_s1_g > 0 ? 'with the floor near faults' : 'without the floor near faults',
+  }),
   evaluate: ({ sds_g, sd1_g, tl_s, near_fault_s1_g, reduction_r, importance_factor, period_s }, { share, least }) =>
     Math.max(
       (Math.min(sds_g, (sd1_g / period_s) * Math.min(1, tl_s / period_s)) * importance_factor) / reduction_r,
@@ -81,7 +87,7 @@ const en: Family<EnInput, { readonly lambda: number }> = {
 function hasLambda({ period_s, corner_period_s, storeys }: EnInput): boolean {
   return storeys > 2 && period_s <= 2 * corner_period_s;
 }
-const BASE_SHEAR_EN1998 = record({
+export const BASE_SHEAR_EN1998 = record({
   id: 'en1998-1-2004/base-shear/lateral-force',
   title: 'Base shear over weight, lateral force method',
   family: en,
@@ -133,4 +139,39 @@ export const BASE_SHEAR_ELASTIC = record({
   limits: [],
 });
 
-export const BASE_SHEAR_RECORDS: readonly AnyRecord[] = [BASE_SHEAR_ASCE7, BASE_SHEAR_EN1998, BASE_SHEAR_ELASTIC];
+interface ImportantInput {
+  readonly base_shear_coefficient: number;
+  readonly importance_factor: number;
+}
+const important: Family<ImportantInput, Record<never, number>> = {
+  id: 'demand/base-shear-importance',
+  yields: 'base_shear_coefficient',
+  unit: null,
+  symbol: 'V/W',
+  inputs: [
+    { name: 'base_shear_coefficient', kind: 'number', meaning: 'base shear over weight with an importance of 1' },
+    { name: 'importance_factor', kind: 'number', above: 0, to: 3, meaning: 'importance factor of the building' },
+  ],
+  expression: 'base_shear_coefficient * importance_factor',
+  evaluate: ({ base_shear_coefficient, importance_factor }) => base_shear_coefficient * importance_factor,
+};
+export const BASE_SHEAR_IMPORTANCE = record({
+  id: 'nbc-2005/base-shear/importance',
+  title: 'Base shear over weight with the importance of the building',
+  family: important,
+  constants: {},
+  source: {
+    standard: 'NBC and IS 1893',
+    edition: 'from 2005 and 2002',
+    clause: '4.1.8.11, 6.4.2: I multiplies force and bounds alike',
+  },
+  verified: 'memory',
+  limits: [],
+});
+
+export const BASE_SHEAR_RECORDS: readonly AnyRecord[] = [
+  BASE_SHEAR_ASCE7,
+  BASE_SHEAR_EN1998,
+  BASE_SHEAR_ELASTIC,
+  BASE_SHEAR_IMPORTANCE,
+];

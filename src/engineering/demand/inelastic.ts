@@ -38,6 +38,75 @@ export const STRENGTH_RATIO = record({
   limits: [],
 });
 
+interface YieldInput {
+  readonly strength_coefficient: number;
+  readonly overstrength: number;
+  readonly irregularity: number;
+}
+const IRREGULARITY: InputSpec = {
+  name: 'irregularity',
+  kind: 'number',
+  meaning: 'product of the irregularity factors',
+};
+const yields: Family<YieldInput, Record<never, number>> = {
+  id: 'demand/yield-coefficient',
+  yields: 'yield_coefficient',
+  unit: null,
+  symbol: 'c_y',
+  inputs: [
+    { name: 'strength_coefficient', kind: 'number', meaning: 'strength coefficient of the capacity that ranks' },
+    { name: 'overstrength', kind: 'number', meaning: 'overstrength' },
+    IRREGULARITY,
+  ],
+  expression: 'strength_coefficient * overstrength * irregularity',
+  evaluate: ({ strength_coefficient, overstrength, irregularity }) =>
+    strength_coefficient * overstrength * irregularity,
+};
+export const YIELD_COEFFICIENT = record({
+  id: 'swaymark/displacement/yield-coefficient',
+  title: 'Strength over weight, of the capacity that ranks',
+  family: yields,
+  constants: {},
+  source: { standard: 'Swaymark', edition: '', clause: 'the capacity without R_μ and mass share' },
+  verified: 'judgement',
+  limits: [],
+});
+
+interface CheckedInput {
+  readonly strength_coefficient: number;
+  readonly modification_c: number;
+  readonly modifier_ms: number;
+  readonly irregularity: number;
+}
+const checked: Family<CheckedInput, Record<never, number>> = {
+  id: 'demand/yield-coefficient-checked',
+  yields: 'yield_coefficient',
+  unit: null,
+  symbol: 'c_y',
+  inputs: [
+    { name: 'strength_coefficient', kind: 'number', meaning: 'S_a at which the strength check is met, in g' },
+    { name: 'modification_c', kind: 'number', meaning: 'modification factor C of the base shear' },
+    { name: 'modifier_ms', kind: 'number', above: 0, to: 100, meaning: 'system modification factor M_s' },
+    IRREGULARITY,
+  ],
+  expression: 'strength_coefficient * modification_c / modifier_ms * irregularity',
+  evaluate: ({ strength_coefficient, modification_c, modifier_ms, irregularity }) =>
+    ((strength_coefficient * modification_c) / modifier_ms) * irregularity,
+};
+export const YIELD_OF_CHECK = record({
+  id: 'swaymark/displacement/yield-coefficient-of-check',
+  title: 'Strength over weight, of the strength check that ranks',
+  family: checked,
+  constants: {},
+  source: {
+    standard: 'Swaymark',
+    edition: '',
+    clause: 'average stress times area over weight: the check without M_s and C',
+  },
+  verified: 'judgement',
+  limits: [],
+});
+
 interface C1Input {
   readonly strength_ratio: number;
   readonly site_factor_a: number;
@@ -157,4 +226,11 @@ const C1_EARLIER = record({
   note: 'Not to be mixed with the C₁ of ASCE/SEI 41-17. The optional cap of 1.5 is not applied.',
 });
 
-export const INELASTIC_RECORDS: readonly AnyRecord[] = [STRENGTH_RATIO, C1, C2, C1_EARLIER];
+export const INELASTIC_RECORDS: readonly AnyRecord[] = [
+  STRENGTH_RATIO,
+  YIELD_COEFFICIENT,
+  YIELD_OF_CHECK,
+  C1,
+  C2,
+  C1_EARLIER,
+];

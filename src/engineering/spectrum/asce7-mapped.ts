@@ -1,6 +1,6 @@
 /** ASCE/SEI 7-05, 7-10 and 7-16: the two-period spectrum from the mapped S_S and S_1 and the site class. */
 import { apply, record } from '../formula.js';
-import type { InputSpec } from '../formula.js';
+import type { Inputs, InputSpec } from '../formula.js';
 import { compileTwoPeriod } from './asce7.js';
 import { classesOf, LONG_FACTOR, S1_ARGUMENT, SHORT_FACTOR, SS_ARGUMENT } from './asce7-factors.js';
 import type { Edition } from './asce7-factors.js';
@@ -21,25 +21,50 @@ interface MappedInput {
   readonly period_s: number;
 }
 
+const EDITIONS = ['05', '10', '16'] as const;
+const mappedId = (edition: Edition): string => `asce7-${edition}/spectrum/two-period`;
+
 /** From this S_1 on the cells of classes D and E are starred (g). */
 const STARRED_FROM_G = 0.2;
 
-function compileMapped(edition: Edition, input: Omit<MappedInput, 'period_s'>): CompiledSpectrum {
-  const { ss_g, s1_g, site_class, tl_s, shaking, supplement_3 } = input;
+type MappedSite = Omit<MappedInput, 'period_s'>;
+
+/** S_M1 is raised by half (Supplement 3), or would have to be. */
+function starredState(edition: Edition, { s1_g, site_class, supplement_3 }: MappedSite): 'raised' | 'starred' | null {
+  if (edition !== '16' || s1_g < STARRED_FROM_G || !['D', 'E', 'default'].includes(site_class)) return null;
+  return supplement_3 === 'not-applied' ? 'starred' : 'raised';
+}
+
+/** S_DS and S_D1 of the design shaking, or S_MS and S_M1 with `share` 1, in g. */
+function ordinatesOf(edition: Edition, site: MappedSite, share: number) {
+  const { ss_g, s1_g, site_class } = site;
   const fa = apply(SHORT_FACTOR[edition], { ss_g, site_class });
   const fv = apply(LONG_FACTOR[edition], { s1_g, site_class });
-  const starred = edition === '16' && s1_g >= STARRED_FROM_G && ['D', 'E', 'default'].includes(site_class);
-  const raised = starred && supplement_3 !== 'not-applied';
-  const share = shaking === 'maximum-considered' ? 1 : 2 / 3;
-  const text = shaking === 'maximum-considered' ? '' : '2 / 3 * ';
-  const names = { short: `${text}fa * ss_g`, one: `${text}fv * s1_g${raised ? ' * 1.5' : ''}` };
+  const raise = starredState(edition, site) === 'raised' ? 1.5 : 1;
   // 2/3 of the rounded-free product, in the order of the clauses
-  const sds_g = share * (fa * ss_g);
-  const sd1_g = share * (fv * s1_g * (raised ? 1.5 : 1));
+  return { fa, fv, sds_g: share * (fa * ss_g), sd1_g: share * (fv * s1_g * raise) };
+}
+
+/** What the base shear reads of a mapped spectrum: S_DS and S_D1 of the design shaking, whichever shaking the spectrum is of; null for other records. */
+export function mappedDesignValues(
+  recordId: string,
+  inputs: Inputs,
+): { readonly fa: number; readonly fv: number; readonly sds_g: number; readonly sd1_g: number } | null {
+  const edition = EDITIONS.find((one) => recordId === mappedId(one));
+  return edition === undefined ? null : ordinatesOf(edition, inputs as unknown as MappedSite, 2 / 3);
+}
+
+function compileMapped(edition: Edition, input: MappedSite): CompiledSpectrum {
+  const { site_class, tl_s, shaking } = input;
+  const state = starredState(edition, input);
+  const maximum = shaking === 'maximum-considered';
+  const { fa, fv, sds_g, sd1_g } = ordinatesOf(edition, input, maximum ? 1 : 2 / 3);
+  const text = maximum ? '' : '2 / 3 * ';
+  const names = { short: `${text}fa * ss_g`, one: `${text}fv * s1_g${state === 'raised' ? ' * 1.5' : ''}` };
   const flags = [
     ...(site_class === 'default' ? ['default-site-class'] : []),
     ...(site_class === 'B-unmeasured' ? ['rock-unmeasured'] : []),
-    ...(raised ? ['supplement-3'] : starred ? ['site-specific-required'] : []),
+    ...(state === 'raised' ? ['supplement-3'] : state === 'starred' ? ['site-specific-required'] : []),
   ];
   return { ...compileTwoPeriod({ sds_g, sd1_g, tl_s }, names), quantities: { fa, fv }, flags };
 }
@@ -59,7 +84,7 @@ const CLAUSES: Readonly<Record<Edition, string>> = {
 };
 
 function mappedCode(edition: Edition): SpectrumCode {
-  const compile = (input: Omit<MappedInput, 'period_s'>): CompiledSpectrum => compileMapped(edition, input);
+  const compile = (input: MappedSite): CompiledSpectrum => compileMapped(edition, input);
   const family: SpectrumFamily<MappedInput> = {
     id: `spectrum/asce7-${edition}-mapped`,
     yields: 'sa_g',
@@ -92,7 +117,7 @@ function mappedCode(edition: Edition): SpectrumCode {
     code: `asce7-${edition}-two-period`,
     title: `ASCE 7-${edition} two-period spectrum from S_S, S_1 and site class`,
     record: record({
-      id: `asce7-${edition}/spectrum/two-period`,
+      id: mappedId(edition),
       title: 'Two-period spectrum from the mapped values and the site class',
       family,
       constants: {},
@@ -108,4 +133,4 @@ function mappedCode(edition: Edition): SpectrumCode {
   };
 }
 
-export const ASCE7_MAPPED_CODES: readonly SpectrumCode[] = (['05', '10', '16'] as const).map(mappedCode);
+export const ASCE7_MAPPED_CODES: readonly SpectrumCode[] = EDITIONS.map(mappedCode);

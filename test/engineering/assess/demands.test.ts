@@ -8,15 +8,21 @@ import { demandsOf } from '../../../src/engineering/assess/demands.js';
 import type { DirectionDemand } from '../../../src/engineering/assess/demands.js';
 import type { Building } from '../../../src/engineering/building.js';
 import { Trace } from '../../../src/engineering/trace.js';
-import { NO_IRREGULARITY, building, given } from '../../support/engineering-building.js';
+import { NO_IRREGULARITY, building, given, structure } from '../../support/engineering-building.js';
 import { SETTINGS } from '../../support/engineering-settings.js';
 
-const context = compileContext(SETTINGS);
+const CONTEXT = compileContext(SETTINGS);
 
 /** Demand along the building, and the last value of each record in the trace. */
-function worked(fields: Partial<Building>): {
+function worked(
+  fields: Partial<Building>,
+  context = CONTEXT,
+): {
   readonly demand: DirectionDemand;
+  /** The same without a trace. */
+  readonly plain: DirectionDemand;
   readonly values: ReadonlyMap<string, number>;
+  readonly choices: ReadonlyMap<string, string>;
 } {
   const one = building({ ...NO_IRREGULARITY, ...fields });
   const result = assess(one, context);
@@ -28,7 +34,11 @@ function worked(fields: Partial<Building>): {
   const values = new Map(
     trace.steps.flatMap((step) => (step.kind === 'formula' ? [[step.record.id, step.value] as const] : [])),
   );
-  return { demand, values };
+  const choices = new Map(
+    trace.steps.flatMap((step) => (step.kind === 'choice' ? [[step.question, step.taken] as const] : [])),
+  );
+  const plain = demandsOf(one, cases, choice, result.leading, context).longitudinal;
+  return { demand, plain, values, choices };
 }
 
 describe('demandsOf', () => {
@@ -91,6 +101,48 @@ describe('demandsOf', () => {
     });
     expect(frail.demand.drift_ratio).toBeGreaterThan(0.01);
     expect(frail.demand.passed).toBe('collapse prevention');
+  });
+
+  describe('strength behind the inelastic displacement', () => {
+    const CY = 'swaymark/displacement/yield-coefficient';
+    const drawings = { design_base_shear_coefficient: 0.15, design_level: 'strength' as const };
+    const columns = structure({ column_count: 24, column_width_m: 0.4, column_depth_m: 0.4 });
+    const checked = { structure: columns, seismic_weight_kN: 7200 };
+
+    it('is that of the drawings, with a step of its own', () => {
+      const { values, choices } = worked(drawings);
+      // Ω 2 [judgement]
+      expect(values.get(CY)).toBeCloseTo(0.15 * 2, 12);
+      expect(choices.get('Strength behind the inelastic displacement')).toBe("drawings' coefficient");
+    });
+
+    it('is that of the strength check where the check gives the capacity', () => {
+      const byCheck = compileContext({ ...SETTINGS, strengthCheck: { method: 'asce41-17', timeIndex: 1 } });
+      const { demand, values, choices } = worked(checked, byCheck);
+      // average stress 100 psi on 3.84 m² under 7200 kN: what the check counts on, without M_s and C
+      const strength = (689.4757293 * 3.84) / 7200;
+      expect(values.get(`${CY}-of-check`)).toBeCloseTo(strength, 9);
+      expect(values.has(CY)).toBe(false);
+      expect(choices.get('Strength behind the inelastic displacement')).toBe('strength check of the first storey');
+      const sa = Math.min(1, 0.6 / demand.period_s);
+      expect(values.get('asce41-17/displacement/strength-ratio')).toBeCloseTo((sa * 0.9) / strength, 6);
+      // better ways come first, as in the ranking
+      expect(worked({ ...checked, ...drawings }, byCheck).values.get(CY)).toBeCloseTo(0.3, 12);
+    });
+
+    it('is the index of the Japanese first level times T', () => {
+      const japan = compileContext({ ...SETTINGS, strengthCheck: { method: 'japan-first-level', timeIndex: 0.9 } });
+      // columns alone, 13.5 MPa: 5/5 × 1.0 × 1.0 MPa × 3.84 m² × 13.5/20 over 7200 kN; depth 0.4 m, 3.5 m clear: slender, 0.7
+      const { values } = worked(checked, japan);
+      expect(values.get(CY)).toBeCloseTo((0.7 * 3840 * 0.675 * 0.9) / 7200, 9);
+    });
+
+    it('is that of the era where nothing better is known, as it sways without a trace too', () => {
+      const { demand, values, choices, plain } = worked({});
+      expect(choices.get('Strength behind the inelastic displacement')).toBe('code of the era');
+      expect(values.get(CY)).toBeCloseTo((0.05 / 0.4 ** (1 / 3)) * 1.4 * 2, 10);
+      expect(plain).toEqual(demand);
+    });
   });
 
   it('leaves the elastic displacement where a finished assessment gives no strength', () => {

@@ -6,7 +6,7 @@ import type { StrengthCheckSettings } from '../../../src/engineering/assess/sett
 import { NO_IRREGULARITY_CHANCES, SPREADS } from '../../../src/engineering/assess/settings.js';
 import type { Building, Structure } from '../../../src/engineering/building.js';
 import { Trace } from '../../../src/engineering/trace.js';
-import { building, given, structure } from '../../support/engineering-building.js';
+import { NO_IRREGULARITY, building, given, structure } from '../../support/engineering-building.js';
 import { SETTINGS } from '../../support/engineering-settings.js';
 
 type Method = StrengthCheckSettings['method'];
@@ -61,6 +61,62 @@ describe('strengthCheck', () => {
     expect(brick.leading.capacity_g).toBeCloseTo((1.25 * 30 * 6.894757293 * 20) / 7200, 9);
   });
 
+  it('takes C as 1.0 where the diaphragms are flexible', () => {
+    // data sheet 11.1a: flexible diaphragms 1.0; one storey of walls otherwise 1.4, of columns 1.3, of braces 1.4
+    const ratio = (fields: Partial<Building>, diaphragm: string | null): number => {
+      const at = (word: string | null): number =>
+        assessed('asce41-17', {
+          ...fields,
+          storeys: given(1),
+          height_m: given(5),
+          structure: { ...fields.structure!, diaphragm: word },
+        }).leading.capacity_g;
+      return at(diaphragm) / at(null);
+    };
+    const tiltUp = { ...walls(2, 2), system: 'precast-tilt-up-wall' as const };
+    expect(ratio(tiltUp, 'flexible')).toBeCloseTo(1.4, 9);
+    expect(ratio(tiltUp, ' Flexible ')).toBeCloseTo(1.4, 9);
+    expect(ratio(tiltUp, 'rigid')).toBe(1);
+    expect(ratio(tiltUp, 'quite flexible, they say')).toBe(1);
+    expect(ratio(FRAME, 'flexible')).toBeCloseTo(1.3, 9);
+    expect(ratio({ ...walls(20, 20), system: 'unreinforced-masonry-wall' }, 'flexible')).toBe(1);
+    const braced = { brace_area_m2: { longitudinal: 0.02, transverse: 0.02 }, bay_length_m: 4 };
+    const steel = { system: 'steel-concentric-braced-frame' as const, seismic_weight_kN: 7200 };
+    expect(ratio({ ...steel, structure: structure(braced) }, 'flexible')).toBeCloseTo(1.4, 9);
+  });
+
+  it('is multiplied by the factor of irregularities, given or by chance, as every capacity but an assessed one', () => {
+    const context = compileContext({
+      ...SETTINGS,
+      rankBy: 'ratio',
+      strengthCheck: { method: 'asce41-17', timeIndex: 1 },
+    });
+    const at = (fields: Partial<Building>): Assessment => {
+      const result = assess(building({ ...FRAME, ...fields }), context);
+      if (!isRanked(result)) throw new Error(result.reason);
+      return result;
+    };
+    const regular = at(NO_IRREGULARITY);
+    expect(at({ ...NO_IRREGULARITY, torsion: 'yes' }).leading.capacity_g).toBeCloseTo(
+      0.8 * regular.leading.capacity_g,
+      9,
+    );
+    // a blank: the mixture by its chance, so the median lies above that of a regular building
+    expect(at({ ...NO_IRREGULARITY, torsion: null }).lnPriority).toBeGreaterThan(regular.lnPriority + 0.01);
+    expect(at({ torsion: 'yes', capacity_sa_g: 0.4 }).leading.capacity_g).toBe(0.4);
+  });
+
+  it('says that a check of timber exists and is not made', () => {
+    const trace = new Trace();
+    assessed('asce41-17', { ...walls(2, 2), system: 'timber-light-frame' }, trace);
+    // data sheet 11.1c: wood 1,000, 700, 100 plf
+    expect(choiceOf(trace, 'Way to the capacity')).toMatchObject({
+      others: expect.arrayContaining([
+        { what: 'strength check', why: expect.stringContaining('does not make the check') as unknown },
+      ]) as unknown,
+    });
+  });
+
   it('governs in the direction with fewer walls', () => {
     const { leading } = assessed('asce41-17', walls(6, 2));
     expect(leading.directions.longitudinal.capacity_g / leading.directions.transverse.capacity_g).toBeCloseTo(3, 9);
@@ -105,7 +161,7 @@ describe('strengthCheck', () => {
     expect(choiceOf(none, 'Way to the capacity')).toMatchObject({
       taken: 'code of the era',
       others: expect.arrayContaining([
-        { what: 'strength check', why: 'ASCE 41 has no average-stress check of strength for steel-moment-frame' },
+        { what: 'strength check', why: 'this program makes no average-stress check of steel-moment-frame' },
       ]) as unknown,
     });
   });

@@ -113,6 +113,60 @@ describe('rankAll', () => {
     });
   });
 
+  // sanity test (viii) of the data sheet of ranking
+  it('agrees with drawing mixtures at 2,000 buildings: at most 1 % beyond three standard errors, none by 0.02', () => {
+    const [count, listSize, draws] = [2000, 150, 10_000];
+    const mixtures = randomMixtures(count, random(21));
+    const { chance } = rankAll(rankInput(mixtures), listSize, 1);
+    const source = random(22);
+    const inside = new Float64Array(count);
+    const score = new Float64Array(count);
+    const work = new Float64Array(count);
+    for (let d = 0; d < draws; d += 1) {
+      for (let i = 0; i < count; i += 1) {
+        const { weight, mean, sd, to } = mixtures[i]!;
+        let part = 0;
+        for (let left = source.uniform(); part < to - 1 && left >= weight[part]!; part += 1) left -= weight[part]!;
+        score[i] = mean[part]! + sd[part]! * source.normal();
+      }
+      const edge = largestAbove(score, listSize, work);
+      for (let i = 0; i < count; i += 1) if (score[i]! >= edge) inside[i]! += 1;
+    }
+    let beyond = 0;
+    let widest = 0;
+    chance.forEach((p, i) => {
+      const gap = Math.abs(inside[i]! / draws - p);
+      widest = Math.max(widest, gap);
+      // under one draw the standard error says nothing
+      if (gap > 3 * Math.sqrt((p * (1 - p)) / draws) + 1 / draws) beyond += 1;
+    });
+    expect(sum(inside)).toBe(draws * listSize);
+    expect(beyond).toBeLessThanOrEqual(0.01 * count);
+    expect(widest).toBeLessThan(0.02);
+  });
+
+  // sanity test (ix); that a duplicated row raises a flag: test/inventory/take-in.test.ts
+  it.each([
+    [40, 12, [5, 14]],
+    [400, 30, [0, 5, 29, 60, 140]],
+  ] as const)('loses at most one place to a row that stands twice among %i', (count, listSize, places) => {
+    const mixtures = randomMixtures(count, random(31));
+    const once = rankAll(rankInput(mixtures), listSize, 1);
+    // simulated under 200: to the noise of 20,000 draws
+    const noise = count < 200 ? 0.02 : 1e-9;
+    for (const place of places) {
+      const twin = once.order[place]!;
+      const { chance } = rankAll(rankInput([...mixtures, mixtures[twin]!]), listSize, 1);
+      const others = (list: Float64Array): number => sum(list.slice(0, count)) - list[twin]!;
+      const lost = others(once.chance) - others(chance);
+      expect(lost).toBeGreaterThanOrEqual(-noise);
+      expect(lost).toBeLessThanOrEqual(1 + noise);
+      // the two share what one had and what it takes from the others, and nobody gains
+      expect(Math.abs(chance[count]! - chance[twin]!)).toBeLessThanOrEqual(noise);
+      for (let i = 0; i < count; i += 1) expect(chance[i]! - once.chance[i]!).toBeLessThanOrEqual(noise);
+    }
+  });
+
   it('puts the rank of nearly every building inside its band', () => {
     const ranking = rankAll(rankInput(randomMixtures(800, random(6))), 80, 1);
     let outside = 0;
