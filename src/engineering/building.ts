@@ -49,7 +49,8 @@ export type Status = (typeof STATUSES)[number];
 export const AMPLITUDES = ['ambient', 'forced', 'strong'] as const;
 export type Amplitude = (typeof AMPLITUDES)[number];
 
-export const DESIGN_LEVELS = ['working', 'strength'] as const;
+/** Level of a design coefficient; none: the drawings show no design for earthquakes, and there is no coefficient. */
+export const DESIGN_LEVELS = ['working', 'strength', 'none'] as const;
 export type DesignLevel = (typeof DESIGN_LEVELS)[number];
 
 export type YesNo = 'yes' | 'no';

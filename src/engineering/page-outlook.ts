@@ -34,11 +34,12 @@ export interface SurveyOutlook {
   readonly reach_wrong: number;
   /** Wrong places were everything found out that a visit can. */
   readonly least_wrong: number;
-  readonly worth_visiting: number;
+  /** How many buildings hold 80 % and 99 % of the value of all that visits can find out. */
   readonly buildings_of_80_percent: number;
   /** Buildings with answers that the run does not count, and such of which it counts answers that were withdrawn; left out where there are none. */
   readonly answered_at?: number;
   readonly withdrawn_at?: number;
+  readonly buildings_of_99_percent: number;
   /** The first visits. */
   readonly steps: readonly SurveyVisit[];
 }

@@ -46,11 +46,11 @@ export async function surveyOutlook(
     reach_hours: plan.hours,
     reach_wrong: plan.expected_wrong_after,
     least_wrong: plan.expected_wrong_least,
-    worth_visiting: plan.worth_visiting,
     buildings_of_80_percent: plan.buildings_of_80_percent,
     // only a refresh stands on an inventory of before
     ...(plan.answered_at === 0 ? {} : { answered_at: plan.answered_at }),
     ...(plan.withdrawn_at === 0 ? {} : { withdrawn_at: plan.withdrawn_at }),
+    buildings_of_99_percent: plan.buildings_of_99_percent,
     steps: week.slice(0, TOLD),
   };
 }

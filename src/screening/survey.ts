@@ -60,9 +60,8 @@ export interface SurveyPlan {
   readonly expected_wrong_after: number;
   /** Were everything known of the weighed buildings that a visit can still find out. */
   readonly expected_wrong_least: number;
-  /** Ranked buildings; those of which something could be learnt that matters; those weighed one by one. */
+  /** Ranked buildings; those weighed one by one. */
   readonly ranked: number;
-  readonly worth_visiting: number;
   readonly weighed: number;
   /** Only those that could be worth most were weighed. */
   readonly capped: boolean;
@@ -72,9 +71,10 @@ export interface SurveyPlan {
   readonly answered_at: number;
   /** Buildings of which the run counts answers that were withdrawn: the plan takes them as known still. */
   readonly withdrawn_at: number;
-  /** Value of all that visits can still find out of every weighed building together, and how many buildings hold 80 % of it. */
+  /** Value of all that visits can still find out of every weighed building together, and how many buildings hold 80 % and 99 % of it. */
   readonly value_of_all: number;
   readonly buildings_of_80_percent: number;
+  readonly buildings_of_99_percent: number;
 }
 
 /** What a plan stands on. */
@@ -135,7 +135,7 @@ export async function planOn(
   const { order, mixtures } = ranked;
   const common = commonTo(assessed, ranked);
   const edge = edgeOf(ranked, { median: assessed.median, mixtures }, listSize);
-  const { chosen, worthVisiting } = mostPromising(assessed.index, mixtures, edge);
+  const { chosen, capped } = mostPromising(assessed.index, mixtures, edge);
   const placeOf = new Map(Array.from(assessed.index, (index, at) => [index, at] as const));
   const context = compileContext(settings, grids);
   const failed = await failedVisits(db, inventoryId);
@@ -184,14 +184,14 @@ export async function planOn(
     expected_wrong_after: steps.at(-1)?.expected_wrong_places ?? expectedWrong,
     expected_wrong_least: leastWrong(candidates, visits, expectedWrong),
     ranked: assessed.id.length,
-    worth_visiting: worthVisiting,
     weighed: candidates.length,
-    capped: worthVisiting > MOST_CANDIDATES,
+    capped,
     failed_at: candidates.filter((one) => one.failed !== undefined).length,
     answered_at: answered.size,
     withdrawn_at: withdrawn,
     value_of_all: valueOfAll,
     buildings_of_80_percent: holding(all, 0.8 * valueOfAll),
+    buildings_of_99_percent: holding(all, 0.99 * valueOfAll),
   };
 }
 
@@ -216,7 +216,7 @@ function mostPromising(
   index: Int32Array,
   mixtures: readonly Mixture[],
   edge: Edge,
-): { readonly chosen: readonly number[]; readonly worthVisiting: number } {
+): { readonly chosen: readonly number[]; readonly capped: boolean } {
   const most = Float64Array.from(mixtures, (mixture) => mostWorth(mixture, edge));
   const largest = most.reduce((a, b) => Math.max(a, b), 0);
   const promising = Array.from(most.keys()).filter((i) => most[i]! > NOTHING * largest);
@@ -225,7 +225,8 @@ function mostPromising(
     .slice(0, MOST_CANDIDATES)
     .map((i) => index[i]!)
     .sort((a, b) => a - b);
-  return { chosen, worthVisiting: promising.length };
+  // the bound is loose: what a survey of these is worth is told only once they are weighed
+  return { chosen, capped: promising.length > chosen.length };
 }
 
 function sumOf<T>(list: readonly T[], of: (one: T) => number): number {

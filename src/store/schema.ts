@@ -133,6 +133,13 @@ export const MIGRATIONS: readonly Migration[] = [
       (name) => `ALTER TABLE building_extra ADD COLUMN "${name}" DOUBLE`,
     ),
   },
+  {
+    version: 4,
+    statements: [
+      // Drawings that show no design for earthquakes.
+      `ALTER TABLE building_extra ALTER COLUMN "design_level" SET DATA TYPE ENUM ('working', 'strength', 'none')`,
+    ],
+  },
 ];
 
 /**

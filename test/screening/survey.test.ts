@@ -5,6 +5,7 @@ import { withdrawAnswers } from '../../src/exports/held-answers.js';
 import { takeAnswers } from '../../src/exports/take-answers.js';
 import { failedVisits } from '../../src/inventory/kept-answers.js';
 import { fieldSheet } from '../../src/exports/survey-study.js';
+import { worthwhileSentence } from '../../src/reports/survey/words.js';
 import { walksOf } from '../../src/reports/survey/walk.js';
 import { openStudyDatabase, screen } from '../../src/screening/screen.js';
 import { planSurvey } from '../../src/screening/survey.js';
@@ -52,6 +53,13 @@ describe('planSurvey', () => {
         const longer = await planSurvey(db, runId, { ...wish, limits: { hours: 200, money: Infinity } });
         expect(longer.steps[0]).toEqual(survey?.steps[0]);
         expect(survey?.reach_wrong).toBe(longer.expected_wrong_after);
+        // what nearly all of the worth hangs on is a part of the inventory, not whatever a loose bound lets through
+        expect(plan.buildings_of_80_percent).toBeLessThan(plan.buildings_of_99_percent);
+        expect(plan.buildings_of_99_percent).toBeLessThan(plan.weighed);
+        expect(survey?.buildings_of_99_percent).toBe(plan.buildings_of_99_percent);
+        expect(worthwhileSentence(survey!, plan.ranked)).toBe(
+          `Of 227 ranked buildings ${String(plan.buildings_of_80_percent)} hold 80 % of what visits can find out that matters to the list, ${String(plan.buildings_of_99_percent)} hold 99 %.`,
+        );
         // what is on record is asked of nobody
         const known = await db.rows<{ id: string; system: string | null; year: number | null }>(
           'SELECT id, CAST(system AS VARCHAR) AS system, year_built AS year FROM building',

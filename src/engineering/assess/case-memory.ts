@@ -48,7 +48,7 @@ export interface Cases {
   /** The same by pair of systems, in order of first appearance: what depends on the system alone is worked once. */
   readonly groups: readonly (readonly Case[])[];
   readonly systemKnown: boolean;
-  /** Label of the prior group used, for the trace. */
+  /** Labels of the prior groups used, for the trace. */
   readonly prior: string | null;
 }
 
@@ -63,16 +63,18 @@ export interface Irregularity {
   /** Mean and variance of ln of the factor of the others. */
   readonly lnRest: number;
   readonly varianceRest: number;
+  /** Two states of the others with their chances, as far from the mean of ln of their factor as keeps mean, variance and skewness; none where all is known. */
+  readonly statesRest: readonly { readonly chance: number; readonly ln: number }[];
   /** The whole factor at its central value, without a soft or weak storey and with one. */
   readonly central: readonly [number, number];
 }
 
 export interface CaseMemory {
   readonly cases: Map<string, Cases | string>;
-  /** By system and years, for the common building: one system in both directions, no retrofit. */
+  /** By system and year, for the common building: one system in both directions, no retrofit. */
   readonly known: Map<System, Map<number, Cases | string>>;
-  /** The same with the system not known: by use, class of storeys and years. */
-  readonly unknown: Map<Use | null, Map<number, Map<number, Cases | string>>>;
+  /** The same with system or year not known: by system, use, class of storeys and years. */
+  readonly byPrior: Map<System | null, Map<Use | null, Map<number, Map<number, Cases | string>>>>;
   /** Number of each pool of years: one array for all who share it. */
   readonly pools: WeakMap<readonly number[], number>;
   readonly eras: Map<number, EraChances>;
@@ -88,7 +90,7 @@ export function newCaseMemory(): CaseMemory {
   return {
     cases: new Map(),
     known: new Map(),
-    unknown: new Map(),
+    byPrior: new Map(),
     pools: new WeakMap(),
     eras: new Map(),
     designs: new Map(),

@@ -1,7 +1,8 @@
 /** The discrete unknowns of a building: system and era, each combination with its chance. */
-import type { Building, System } from '../building.js';
+import type { Building, System, Use } from '../building.js';
 import { designOf } from './capacity.js';
 import { entryOf, newMap, yearsNumber } from './case-memory.js';
+import { isUndesigned } from './terms.js';
 import type { Case, Cases, Design, EraChances } from './case-memory.js';
 import { matchPrior, storeysClass } from '../prior/system-prior.js';
 import { editionLabel, editionOf, eraChances } from './code-history.js';
@@ -13,20 +14,22 @@ export function casesOf(building: Building, context: AssessContext): Cases | str
   const { years, system } = building;
   const kept = context.caseMemory;
   const number = yearsNumber(years, kept);
-  if (building.system_transverse === null && !(building.year_retrofitted > 0)) {
+  const undesigned = isUndesigned(building);
+  // with both known the table of system chances says nothing
+  const known = system !== null && years.length === 1;
+  if (building.system_transverse === null && !(building.year_retrofitted > 0) && !undesigned) {
     const { priorClasses } = context;
-    const byYears =
-      system !== null
-        ? entryOf(kept.known, system, newMap<number, Cases | string>)
-        : entryOf(
-            entryOf(
-              kept.unknown,
-              priorClasses.uses.has(building.use) ? building.use : null,
-              newMap<number, Map<number, Cases | string>>,
-            ),
-            storeysClass(priorClasses, building.storeys.value),
-            newMap<number, Cases | string>,
-          );
+    const byYears = known
+      ? entryOf(kept.known, system, newMap<number, Cases | string>)
+      : entryOf(
+          entryOf(
+            entryOf(kept.byPrior, system, newMap<Use | null, Map<number, Map<number, Cases | string>>>),
+            priorClasses.uses.has(building.use) ? building.use : null,
+            newMap<number, Map<number, Cases | string>>,
+          ),
+          storeysClass(priorClasses, building.storeys.value),
+          newMap<number, Cases | string>,
+        );
     let found = byYears.get(number);
     if (found === undefined) {
       found = listCases(building, context);
@@ -39,10 +42,8 @@ export function casesOf(building: Building, context: AssessContext): Cases | str
   }
   const strengthened =
     building.year_retrofitted > 0 ? `|${String(building.year_retrofitted)}|${String(building.retrofit_level)}` : '';
-  const key =
-    system === null
-      ? `${String(number)}||${building.system_transverse ?? ''}|${building.use}|${String(building.storeys.value)}${strengthened}`
-      : `${String(number)}|${system}|${building.system_transverse ?? ''}${strengthened}`;
+  const byPrior = known ? '' : `|${building.use}|${String(building.storeys.value)}`;
+  const key = `${String(number)}|${system ?? ''}|${building.system_transverse ?? ''}|${String(undesigned)}${byPrior}${strengthened}`;
   const old = kept.cases.get(key);
   if (old !== undefined) return old;
   const made = listCases(building, context);
@@ -71,8 +72,11 @@ function listCases(building: Building, context: AssessContext): Cases | string {
   const spread = years.length > 0 ? years : [NaN];
   // The system goes with the year of construction, not with the year of a retrofit.
   const systemYears = built.length > 0 ? built : [NaN];
-  for (const year of spread) {
-    const eraList = erasOf(year, context);
+  const { weights, prior } = yearWeights(building, spread, strengthened, context);
+  if (prior !== null) priors.add(prior);
+  const undesigned = isUndesigned(building) && !strengthened;
+  for (const [at, year] of spread.entries()) {
+    const eraList = undesigned ? UNDESIGNED : erasOf(year, context);
     for (const systemYear of strengthened ? systemYears : [year]) {
       let systems: readonly { readonly system: System; readonly chance: number }[];
       if (known !== null) systems = [{ system: known, chance: 1 }];
@@ -83,7 +87,7 @@ function listCases(building: Building, context: AssessContext): Cases | string {
         priors.add(group.label);
         systems = group.chances;
       }
-      const share = 1 / spread.length / (strengthened ? systemYears.length : 1);
+      const share = weights[at]! / (strengthened ? systemYears.length : 1);
       for (const { system, chance } of systems) {
         const byEdition = entryOf(found, system, newMap<EditionId | null, number>);
         for (const { era, chance: eraChance } of eraList)
@@ -125,6 +129,42 @@ function listCases(building: Building, context: AssessContext): Cases | string {
 
 function keyOf({ system, edition }: Case): string {
   return `${system}|${edition ?? ''}`;
+}
+
+const UNDESIGNED: EraChances = [{ era: { edition: null, from: -Infinity, to: Infinity }, chance: 1 }];
+
+/**
+ * Chances of the years that a building may be of, equally likely by themselves. What is known of it speaks for some of them: its system by
+ * the chance of that system in each year, drawings without a design for earthquakes by the chance of none (Bayes). What fits no year tells
+ * nothing of it. `prior` names the rows of the table that were read.
+ */
+function yearWeights(
+  building: Building,
+  years: readonly number[],
+  strengthened: boolean,
+  context: AssessContext,
+): { readonly weights: readonly number[]; readonly prior: string | null } {
+  const even = years.map(() => 1 / years.length);
+  if (strengthened || years.length === 1) return { weights: even, prior: null };
+  const { systemPrior } = context.settings;
+  const { system, use, storeys } = building;
+  const read =
+    system === null || systemPrior === null
+      ? []
+      : years.map((year) => matchPrior(systemPrior, use, storeys.value, year));
+  const groups = read.filter((group) => group !== null);
+  // a table with a gap among the years does not tell them apart
+  const ofSystem = (at: number): number =>
+    groups.length < years.length ? 1 : (groups[at]!.chances.find((one) => one.system === system)?.chance ?? 0);
+  const ofNone = (year: number): number =>
+    isUndesigned(building)
+      ? erasOf(year, context).reduce((sum, { era, chance }) => (era.edition === null ? sum + chance : sum), 0)
+      : 1;
+  const weighed = years.map((year, at) => ofSystem(at) * ofNone(year));
+  const total = weighed.reduce((sum, weight) => sum + weight, 0);
+  if (!(total > 0)) return { weights: even, prior: null };
+  const labels = new Set(groups.map(({ label }) => label));
+  return { weights: weighed.map((weight) => weight / total), prior: labels.size < 2 ? null : [...labels].join('; ') };
 }
 
 /** The eras of a year with their chances; of an unknown year (NaN) all alike. */

@@ -33,7 +33,9 @@ export function closeTrace(trace: Trace, closing: Closing): void {
   const why =
     cases.prior === null
       ? 'system given; era by year of construction, lag and enforcement'
-      : `system chances: ${cases.prior}`;
+      : cases.systemKnown
+        ? `system given; years of like buildings by its chance in each: ${cases.prior}`
+        : `system chances: ${cases.prior}`;
   const shown = shownCases(closing);
   shown.slice(0, SHOWN).forEach((one, i) => {
     trace.value(

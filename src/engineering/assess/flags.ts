@@ -7,6 +7,7 @@ import type { SpectrumChoice } from './choose-spectrum.js';
 import type { AssessContext } from './context.js';
 import type { LeadingCase } from './leading.js';
 import { isChecked } from './strength-check.js';
+import { isUndesigned } from './terms.js';
 
 export const FLAGS: Readonly<Record<string, string>> = {
   'system-unknown': 'The lateral system is not known; the table of system chances speaks.',
@@ -31,6 +32,7 @@ export const FLAGS: Readonly<Record<string, string>> = {
   'reentrant-corner-read': 'A re-entrant corner is read from the footprint.',
   'setback-read': 'A setback is read from floor area, storeys and footprint.',
   'strength-check': 'The capacity is that of the columns, walls or braces of the first storey, not that of a code.',
+  'not-designed': 'The drawings show no design for earthquakes.',
   'design-level-unknown': 'The level of the design coefficient is not stated; both levels count.',
 };
 
@@ -79,6 +81,8 @@ export function flagsOf(
   for (const name of read) flags.push(`${name.replaceAll('_', '-')}-read`);
   if (context.settings.rankBy !== 'demand' && isChecked(building, cases.list[0]!, context, leading.governing))
     flags.push('strength-check');
-  if (building.design_base_shear_coefficient > 0 && building.design_level === null) flags.push('design-level-unknown');
+  if (isUndesigned(building)) flags.push('not-designed');
+  const { design_base_shear_coefficient: coefficient, design_level: level } = building;
+  if (coefficient > 0 && (level === null || level === 'none')) flags.push('design-level-unknown');
   return flags;
 }

@@ -33,6 +33,7 @@ export const REGULAR: Irregularity = {
   lnStorey: 0,
   lnRest: 0,
   varianceRest: 0,
+  statesRest: [],
   central: [1, 1],
 };
 
@@ -88,11 +89,35 @@ function gathered(building: Building, rules: IrregularityRules | null, settings:
     lnStorey: ln(factors.soft_or_weak_storey),
     lnRest: ln(apply(IRREGULARITY_FACTOR, inputs)),
     varianceRest: sigma * sigma,
+    statesRest: twoStates(sigma * sigma, thirdMoment(inputs)),
     central: [
       apply(IRREGULARITY_FACTOR, inputs),
       apply(IRREGULARITY_FACTOR, { ...inputs, storey_factor: factors.soft_or_weak_storey }),
     ],
   };
+}
+
+/** Third central moment of ln of the factor of all but the storey: of independent yes or no the moments add up. */
+function thirdMoment(inputs: FactorInput): number {
+  const of = (factor: number, p: number): number => p * (1 - p) * (1 - 2 * p) * ln(factor) ** 3;
+  return (
+    of(inputs.torsion_factor, inputs.torsion_chance) +
+    of(inputs.reentrant_factor, inputs.reentrant_chance) +
+    of(inputs.setback_factor, inputs.setback_chance) +
+    of(inputs.mass_factor, inputs.mass_chance)
+  );
+}
+
+/** The two values and their chances that have mean 0, the variance and the third moment. */
+function twoStates(variance: number, third: number): Irregularity['statesRest'] {
+  if (!(variance > 0)) return [];
+  const half = third / (2 * variance);
+  const reach = Math.sqrt(half * half + variance);
+  const [low, high] = [half - reach, half + reach];
+  return [
+    { chance: high / (high - low), ln: low },
+    { chance: -low / (high - low), ln: high },
+  ];
 }
 
 const chanceOf = (state: State, prior: number): number => (state === UNKNOWN ? prior : state);

@@ -24,6 +24,11 @@ const EITHER_LEVEL: Levels = [
   { level: 1, chance: 0.5 },
 ];
 
+/** True where the drawings show that nothing was designed for earthquakes. */
+export function isUndesigned({ design_level, design_base_shear_coefficient: coefficient }: Building): boolean {
+  return design_level === 'none' && !(coefficient > 0);
+}
+
 /** Level of the drawings' coefficient: as stated, both alike when not stated; null when there is none. */
 export function drawingsLevels(
   building: Building,

@@ -5,15 +5,16 @@ import type { Mixture } from '../priority/mixture.js';
 import type { Learnable, Unknowns } from '../priority/survey-value.js';
 import { casesOf } from './cases.js';
 import { isDesigned } from './capacity.js';
-import type { Case, Cases } from './case-memory.js';
+import type { Case, Cases, Irregularity } from './case-memory.js';
 import { chooseSpectrum } from './choose-spectrum.js';
 import { slopeFor } from './context.js';
 import type { AssessContext } from './context.js';
 import { integrate } from './integrate.js';
-import { irregularityOf } from './irregularity.js';
+import { REGULAR, irregularityOf } from './irregularity.js';
 import { peopleOf } from './people.js';
 import { newScratch } from './scratch.js';
 import { isChecked } from './strength-check.js';
+import { isUndesigned } from './terms.js';
 import type { Scratch } from './scratch.js';
 
 const shared = newScratch();
@@ -42,20 +43,23 @@ export function unknownsOf(building: Building, context: AssessContext, scratch: 
     },
   );
   if (typeof pass === 'string') return null;
-  const { parts, cells, cellOf } = gathered(scratch.score.raw(), told);
-  const numbered = (valueOf: (cell: Cell) => string | number): Int32Array | null => {
+  const open = settings.rankBy !== 'demand' && !(building.capacity_sa_g > 0);
+  const irregularity = open ? irregularityOf(building, context) : REGULAR;
+  const { parts, cellOf, stateOf } = withStates(gathered(scratch.score.raw(), told), irregularity, slope_k);
+  const numbered = (valueOf: (cell: Cell, state: number) => string | number): Int32Array | null => {
     const numbers = new Map<string | number, number>();
-    const ofCell = cells.map((cell) => {
-      const value = valueOf(cell);
+    const values = Int32Array.from(cellOf, (cell, i) => {
+      const value = valueOf(told[cell]!, stateOf[i]!);
       const number = numbers.get(value) ?? numbers.size;
       numbers.set(value, number);
       return number;
     });
-    return numbers.size > 1 ? cellOf.map((cell) => ofCell[cell]!) : null;
+    return numbers.size > 1 ? values : null;
   };
   const learnable: Learnable[] = [];
-  const add = (unknown: Learnable['unknown'], values: Int32Array | null, tau: number): void => {
-    if (values !== null || tau > 0) learnable.push({ unknown, values, tau });
+  const add = (unknown: Learnable['unknown'], values: Int32Array | null, tau: Learnable['tau']): void => {
+    const takes = typeof tau === 'number' ? tau > 0 : tau.some((one) => one > 0);
+    if (values !== null || takes) learnable.push({ unknown, values, tau });
   };
   const edition = ({ which }: Cell): string => which.edition ?? '';
   if (building.system === null)
@@ -71,27 +75,30 @@ export function unknownsOf(building: Building, context: AssessContext, scratch: 
       numbered(({ heightNode }) => heightNode),
       0,
     );
-  // a soft or weak storey parts the cells; the other irregularities are gathered in their spread
-  if (settings.rankBy !== 'demand' && !(building.capacity_sa_g > 0))
+  if (open)
     add(
       'irregularity',
-      numbered(({ storey }) => storey),
-      slope_k * Math.sqrt(irregularityOf(building, context).varianceRest),
+      numbered(({ storey }, state) => 2 * storey + state),
+      0,
     );
-  if (settings.rankBy === 'people') addPeople(building, context, people.sigma, add);
+  if (settings.rankBy === 'people') addPeople(building, context, people.sigma, learnable);
   // drawings settle what era tables and the years around a change of edition leave open
-  const byDrawings = !(building.capacity_sa_g > 0) && !(building.design_base_shear_coefficient > 0);
-  if (settings.rankBy !== 'demand' && byDrawings) {
-    const { eraTable } = settings.spreads;
-    const learnt = isChecked(building, cases.list[0]!, context)
-      ? 0
-      : eraTable * eraTable * designedShare(cases, context);
-    add('drawings', numbered(edition), slope_k * Math.sqrt(learnt));
+  const drawn = building.design_base_shear_coefficient > 0 || isUndesigned(building);
+  if (open && !drawn) {
+    const tau = slope_k * settings.spreads.eraTable;
+    const takes = told.map(({ which }) =>
+      isDesigned(which, context) && !isChecked(building, which, context) ? tau : 0,
+    );
+    add(
+      'drawings',
+      numbered(edition),
+      Float64Array.from(cellOf, (cell) => takes[cell]!),
+    );
   }
   return { parts, learnable };
 }
 
-/** Chance that the building was designed for earthquakes: the drawings of others state no coefficient, and nothing takes their table's doubt away. */
+/** Chance that the building was designed for earthquakes: the drawings of others state no coefficient, and their table's doubt stays. */
 export function designedShare({ list }: Cases, context: AssessContext): number {
   let share = 0;
   for (const which of list) if (isDesigned(which, context)) share += which.chance;
@@ -110,11 +117,14 @@ interface Cell {
 const builder = new MixtureBuilder();
 const pool = new MixturePool();
 
+/** Parts of the distribution, and of each the cell it is of. */
+interface Parted {
+  readonly parts: Mixture & { readonly label: Uint8Array };
+  readonly cellOf: Int32Array;
+}
+
 /** The nodes gathered within each cell, cells apart: the error of the period is no unknown that a survey finds out. */
-function gathered(
-  nodes: Mixture,
-  cells: readonly Cell[],
-): { readonly parts: Mixture; readonly cells: readonly Cell[]; readonly cellOf: Int32Array } {
+function gathered(nodes: Mixture, cells: readonly Cell[]): Parted {
   const weight: number[] = [];
   const mean: number[] = [];
   const sd: number[] = [];
@@ -147,22 +157,59 @@ function gathered(
     from: 0,
     to: weight.length,
   };
-  return { parts, cells, cellOf: Int32Array.from(cellOf) };
+  return { parts, cellOf: Int32Array.from(cellOf) };
 }
 
-/** People: the use where it is not known, then a count where there is none. */
+/** A soft or weak storey parts the cells; the other irregularities, gathered in the spread until here, part them once more by two states. */
+function withStates(
+  { parts, cellOf }: Parted,
+  { statesRest, varianceRest }: Irregularity,
+  slope_k: number,
+): Parted & { readonly stateOf: Int32Array } {
+  if (statesRest.length === 0) return { parts, cellOf, stateOf: new Int32Array(cellOf.length) };
+  const n = cellOf.length;
+  const stateOf = Int32Array.from({ length: 2 * n }, (_, at) => (at < n ? 0 : 1));
+  const variance = slope_k * slope_k * varianceRest;
+  const twice = (valueOf: (i: number, state: (typeof statesRest)[number]) => number): Float64Array =>
+    Float64Array.from(stateOf, (state, at) => valueOf(at - state * n, statesRest[state]!));
+  return {
+    parts: {
+      weight: twice((i, { chance }) => parts.weight[i]! * chance),
+      // a capacity times a factor divides S by its k-th power
+      mean: twice((i, state) => parts.mean[i]! - slope_k * state.ln),
+      sd: twice((i) => Math.sqrt(Math.max(parts.sd[i]! * parts.sd[i]! - variance, 0))),
+      label: Uint8Array.from(stateOf, (state, at) => parts.label[at - state * n]!),
+      from: 0,
+      to: 2 * n,
+    },
+    cellOf: Int32Array.from(stateOf, (state, at) => cellOf[at - state * n]!),
+    stateOf,
+  };
+}
+
+/**
+ * People: their count, and the use where it is not known, which tells how many there are and for how long. Where neither is known each
+ * tells part of the same: a count leaves the hours open, the use the count.
+ */
 function addPeople(
-  { use, occupants_peak, floor_area_m2: area }: Building,
-  { settings: { spreads } }: AssessContext,
+  { use, occupants_peak, occupied_hours_per_week: hours, floor_area_m2: area }: Building,
+  { settings: { spreads }, assumed: { peopleWeight } }: AssessContext,
   sigma: number,
-  add: (unknown: Learnable['unknown'], values: null, tau: number) => void,
+  learnable: Learnable[],
 ): void {
   const counted = occupants_peak >= 0;
-  const rooted = (variance: number): number => Math.sqrt(Math.max(variance, 0));
-  const ofArea = counted ? 0 : area.sigma * area.sigma;
-  // people that are counted leave the hours open, which the use tells
-  const own = counted ? spreads.peopleCounted : spreads.peopleKnownUse;
-  const knownUse = Math.min(sigma, rooted(own * own + ofArea));
-  if (use === 'unknown') add('use', null, rooted(sigma * sigma - knownUse * knownUse));
-  if (!counted) add('occupants', null, rooted(knownUse * knownUse - spreads.peopleCounted * spreads.peopleCounted));
+  const square = (x: number): number => x * x;
+  // in ln S people count by their weight
+  const rooted = (variance: number): number => peopleWeight * Math.sqrt(Math.max(variance, 0));
+  // with everything known; with the use alone; with a count alone
+  const least = square(spreads.peopleCounted);
+  const withUse = counted ? least : square(spreads.peopleKnownUse) + square(area.sigma);
+  const withCount = use === 'unknown' && !(hours >= 0) ? square(spreads.peopleKnownUse) : least;
+  const known = use !== 'unknown';
+  const tauOfUse = rooted(sigma * sigma - withUse);
+  if (!known && tauOfUse > 0) learnable.push({ unknown: 'use', values: null, tau: tauOfUse });
+  const tau = rooted(sigma * sigma - withCount);
+  if (counted || !(tau > 0)) return;
+  const count = { unknown: 'occupants', values: null, tau } as const;
+  learnable.push(known ? count : { ...count, beside: { unknown: 'use', tau: rooted(withUse - least) } });
 }

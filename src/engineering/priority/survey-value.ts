@@ -23,8 +23,10 @@ export interface Learnable {
   readonly unknown: Unknown;
   /** Per part of the distribution the value it holds, as a number; null where the unknown moves all parts alike. */
   readonly values: Int32Array | null;
-  /** Standard deviation of ln S that learning it takes off every part. */
-  readonly tau: number;
+  /** Standard deviation of ln S that learning it takes off every part, or each part. */
+  readonly tau: number | Float64Array;
+  /** What it takes off besides where `unknown` is learnt too, which tells part of the same. */
+  readonly beside?: { readonly unknown: Unknown; readonly tau: number };
 }
 
 /** A building before the survey: its parts, those of different unknowns apart, and what may be learnt. */
@@ -126,16 +128,19 @@ export function worthOf({ parts, learnable }: Unknowns, { threshold, cut, chance
   const m = worths.reduce((sum, value) => sum + value, 0);
   const value = new Float64Array(sets);
   for (let set = 1; set < sets; set += 1) {
-    const { classes, of, tau } = learnt(n, learnable, set);
+    const { classes, of, variance } = learnt(n, learnable, set);
     const weight = new Float64Array(classes);
     const worth = new Float64Array(classes);
+    const spread = new Float64Array(classes);
     for (let i = 0; i < n; i += 1) {
       weight[of[i]!]! += weights[i]!;
       worth[of[i]!]! += worths[i]!;
+      spread[of[i]!]! += weights[i]! * variance[i]!;
     }
     let excess = 0;
     for (let c = 0; c < classes; c += 1)
-      if (weight[c]! > 0) excess += weight[c]! * expectedExcess(worth[c]! / weight[c]!, tau, t);
+      if (weight[c]! > 0)
+        excess += weight[c]! * expectedExcess(worth[c]! / weight[c]!, Math.sqrt(spread[c]! / weight[c]!), t);
     // rounding alone may take it below
     value[set] = Math.max(excess - Math.max(m - t, 0), 0);
   }
@@ -152,11 +157,11 @@ export function worthOf({ parts, learnable }: Unknowns, { threshold, cut, chance
   };
 }
 
-/** Weight times S of each part, as it counts: the median left in its class once everything is learnt, its expectation over what is learnt of all alike. */
+/** Weight times S of each part, as it counts: the median left in its class once everything is learnt, its expectation over what is learnt besides. */
 function worthsOf(
   { mean, from }: Mixture,
   weights: Float64Array,
-  { classes, of, tau }: Learnt,
+  { classes, of, variance }: Learnt,
   unit: number,
 ): Float64Array {
   const weight = new Float64Array(classes);
@@ -165,7 +170,7 @@ function worthsOf(
     weight[of[i]!]! += w;
     sum[of[i]!]! += w * mean[from + i]!;
   });
-  return weights.map((w, i) => w * exp(sum[of[i]!]! / weight[of[i]!]! - unit + 0.5 * tau * tau));
+  return weights.map((w, i) => w * exp(sum[of[i]!]! / weight[of[i]!]! - unit + 0.5 * variance[i]!));
 }
 
 interface Learnt {
@@ -173,17 +178,21 @@ interface Learnt {
   readonly classes: number;
   /** Class of each part. */
   readonly of: Int32Array;
-  /** What is learnt of every part alike. */
-  readonly tau: number;
+  /** Of each part the variance that is learnt besides its class. */
+  readonly variance: Float64Array;
 }
 
 function learnt(n: number, learnable: readonly Learnable[], set: number): Learnt {
   const of = new Int32Array(n);
+  const variance = new Float64Array(n);
   let classes = 1;
-  let variance = 0;
-  learnable.forEach(({ values, tau }, bit) => {
-    if (((set >> bit) & 1) === 0) return;
-    variance += tau * tau;
+  const isLearnt = (bit: number): boolean => ((set >> bit) & 1) === 1;
+  learnable.forEach(({ values, tau, beside }, bit) => {
+    if (!isLearnt(bit)) return;
+    const both = beside !== undefined && learnable.some((one, at) => one.unknown === beside.unknown && isLearnt(at));
+    const takes = both ? beside.tau : tau;
+    if (typeof takes !== 'number') for (let i = 0; i < n; i += 1) variance[i]! += takes[i]! * takes[i]!;
+    else if (takes > 0) for (let i = 0; i < n; i += 1) variance[i]! += takes * takes;
     if (values === null) return;
     let most = 0;
     for (let i = 0; i < n; i += 1) {
@@ -192,7 +201,7 @@ function learnt(n: number, learnable: readonly Learnable[], set: number): Learnt
     }
     classes *= most + 1;
   });
-  return { classes, of, tau: Math.sqrt(variance) };
+  return { classes, of, variance };
 }
 
 /**
@@ -202,19 +211,20 @@ function learnt(n: number, learnable: readonly Learnable[], set: number): Learnt
 function wrongWith(
   parts: Mixture,
   weights: Float64Array,
-  { classes, of, tau }: Learnt,
+  { classes, of, variance }: Learnt,
   threshold: number,
   chance: number,
 ): number {
-  const { z, weight: nodeWeight } = tau > 0 ? LEARNT_NODES : ONE_NODE;
+  const tau = variance.map(Math.sqrt);
+  const { z, weight: nodeWeight } = tau.some((one) => one > 0) ? LEARNT_NODES : ONE_NODE;
   let wrong = 0;
   for (let j = 0; j < z.length; j += 1) {
     const above = new Float64Array(classes);
     const all = new Float64Array(classes);
     for (let i = 0; i < weights.length; i += 1) {
       const at = parts.from + i;
-      const left = Math.sqrt(Math.max(parts.sd[at]! * parts.sd[at]! - tau * tau, 0));
-      const d = parts.mean[at]! + tau * z[j]! - threshold;
+      const left = Math.sqrt(Math.max(parts.sd[at]! * parts.sd[at]! - variance[i]!, 0));
+      const d = parts.mean[at]! + tau[i]! * z[j]! - threshold;
       all[of[i]!]! += weights[i]!;
       above[of[i]!]! += weights[i]! * (left > 0 ? normalCdf(d / left) : d > 0 ? 1 : 0);
     }
@@ -264,7 +274,7 @@ function eachSet(
 /** Share of the variance of ln S that learning one unknown would take away on average. */
 export function shareOf({ parts }: Unknowns, learnable: Learnable): number {
   const n = parts.to - parts.from;
-  const { classes, of, tau } = learnt(n, [learnable], 1);
+  const { classes, of, variance: learntOf } = learnt(n, [learnable], 1);
   const weight = new Float64Array(classes);
   const mean = new Float64Array(classes);
   let all = 0;
@@ -281,7 +291,8 @@ export function shareOf({ parts }: Unknowns, learnable: Learnable): number {
   let variance = 0;
   for (let i = parts.from; i < parts.to; i += 1)
     variance += (parts.weight[i]! / all) * (square(parts.mean[i]! - middle) + square(parts.sd[i]!));
-  let between = tau * tau;
+  let between = 0;
+  for (let i = 0; i < n; i += 1) between += (parts.weight[parts.from + i]! / all) * learntOf[i]!;
   for (let c = 0; c < classes; c += 1)
     if (weight[c]! > 0) between += (weight[c]! / all) * square(mean[c]! / weight[c]! - middle);
   return variance > 0 ? between / variance : 0;

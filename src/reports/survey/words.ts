@@ -55,14 +55,14 @@ export function planSentences(plan: SurveyPlan, tooLarge: readonly Visit[] = [])
   return [
     `${String(steps.length)} ${steps.length === 1 ? 'visit' : 'visits'} to ${String(buildings)} ${buildings === 1 ? 'building' : 'buildings'}, ${cost}: of the ${String(list_size)} places about ${formatNumber(expected_wrong_before, 2)} are expected to be wrong now, about ${formatNumber(expected_wrong_after, 2)} once all visits are made.`,
     ...since,
-    `Of ${String(plan.ranked)} ranked buildings ${String(plan.worth_visiting)} are worth any visit at all; ${String(plan.buildings_of_80_percent)} hold 80 % of what there is to learn. Far from the edge of the list nothing found out would change it, however poor the record.`,
+    `${heldSentence(plan, plan.ranked)} Far from the edge of the list hardly anything found out would change it, however poor the record.`,
     ...(plan.failed_at === 0
       ? []
       : [
           `At ${plan.failed_at === 1 ? 'one building' : `${formatCount(plan.failed_at)} buildings`} a visit has looked for something and not found it; such a visit is not counted on for it again.`,
         ]),
     ...(plan.capped
-      ? [`The ${String(plan.weighed)} that could be worth most were weighed one by one.`]
+      ? [`The ${formatCount(plan.weighed)} that could be worth most were weighed one by one.`]
       : []),
   ];
 }
@@ -100,9 +100,14 @@ export function outlookSentence(outlook: SurveyOutlook): string {
   return `${told}; with all found out that a visit can find out, about ${least} would remain, which take a detailed assessment.`;
 }
 
-/** Where there is something to learn. */
-export function worthwhileSentence({ worth_visiting, buildings_of_80_percent, expected_wrong_before }: SurveyOutlook, ranked: number): string {
-  return expected_wrong_before > 0 && worth_visiting > 0
-    ? `Of ${formatCount(ranked)} ranked buildings ${formatCount(worth_visiting)} are worth any visit at all, and ${formatCount(buildings_of_80_percent)} hold 80 % of what there is to learn.`
-    : '';
+/** Where there is something to learn; empty where there is nothing. */
+export function worthwhileSentence(outlook: SurveyOutlook, ranked: number): string {
+  return outlook.expected_wrong_before > 0 && outlook.buildings_of_80_percent > 0 ? heldSentence(outlook, ranked) : '';
+}
+
+type Held = Pick<SurveyOutlook, 'buildings_of_80_percent' | 'buildings_of_99_percent'>;
+
+function heldSentence({ buildings_of_80_percent: most, buildings_of_99_percent: nearlyAll }: Held, ranked: number): string {
+  const nearly = nearlyAll > most ? `, ${formatCount(nearlyAll)} hold 99 %` : '';
+  return `Of ${formatCount(ranked)} ranked buildings ${formatCount(most)} ${most === 1 ? 'holds' : 'hold'} 80 % of what visits can find out that matters to the list${nearly}.`;
 }

@@ -44,13 +44,14 @@ export function laid(building: Building, truth: Truth, found: Found): Building {
     // a world without uses: a word of the same people and hours, the people by the area
     made.use = truth.use === 'unknown' ? 'other' : truth.use;
     made.floor_area_m2 = { ...made.floor_area_m2, value: made.floor_area_m2.value * truth.useFactor };
+    if (truth.use === 'unknown') made.occupied_hours_per_week = truth.hours;
   }
   if (hasFound(found, 'occupants') && !(building.occupants_peak >= 0) && truth.occupants_peak > 0)
     made.occupants_peak = Math.max(1, Math.round(truth.occupants_peak));
   const drawn = building.capacity_sa_g > 0 || building.design_base_shear_coefficient > 0;
-  if (hasFound(found, 'drawings') && truth.coefficient !== null && !drawn) {
-    made.design_base_shear_coefficient = truth.coefficient.value;
-    made.design_level = truth.coefficient.level;
+  if (hasFound(found, 'drawings') && !drawn) {
+    made.design_base_shear_coefficient = truth.coefficient?.value ?? NaN;
+    made.design_level = truth.coefficient?.level ?? 'none';
   }
   return made;
 }

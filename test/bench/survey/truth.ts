@@ -1,5 +1,6 @@
 /** The true attributes of a building in a world, and its true ln S: worked out by `assess` with every spread at 0. */
 import { assess, isRanked } from '../../../src/engineering/assess/assess.js';
+import { isDesigned } from '../../../src/engineering/assess/capacity.js';
 import { casesOf } from '../../../src/engineering/assess/cases.js';
 import { detailingOf, editionOf } from '../../../src/engineering/assess/code-history.js';
 import type { EditionId } from '../../../src/engineering/assess/code-history.js';
@@ -31,8 +32,9 @@ export interface Truth {
   readonly height_m: number;
   readonly flags: Readonly<Record<Name, YesNo>>;
   readonly use: Use;
-  /** Where the world gives no use, what knowing it does to the people. */
+  /** Where the world gives no use, what knowing it does to the people, and the hours a week that they are there. */
   readonly useFactor: number;
+  readonly hours: number;
   readonly occupants_peak: number;
   /** As the drawings state it; null where nothing was designed for earthquakes. */
   readonly coefficient: { readonly value: number; readonly level: DesignLevel } | null;
@@ -94,8 +96,9 @@ export function truthOf(building: Building, world: World, { believed, certain }:
   };
   const cases = casesOf(known, certain);
   if (typeof cases === 'string') throw new Error(cases);
-  const { edition } = cases.list[0]!;
-  const capacity = capacityOf(building, isChecked(known, cases.list[0]!, certain), edition, world, believed, draws);
+  const [which] = cases.list;
+  const edition = which!.edition;
+  const capacity = capacityOf(building, isChecked(known, which!, certain), edition, world, believed, draws);
   certain.capacityFactor = capacity.factor;
   scratch.pool.restart();
   const result = assess(drawn, certain, undefined, scratch);
@@ -108,7 +111,8 @@ export function truthOf(building: Building, world: World, { believed, certain }:
     flags,
     use,
     ...people,
-    coefficient: coefficientOf(known, system, edition, capacity.table, certain),
+    // a code that gives the system no row leaves no coefficient in its drawings
+    coefficient: isDesigned(which!, certain) ? coefficientOf(known, system, edition, capacity.table, certain) : null,
   };
 }
 
@@ -138,14 +142,17 @@ function sizeOf(
 
 /** Year of construction, and the year whose code it was designed (or strengthened) to, a few years either side. */
 function yearsOf(
-  { years, year_retrofitted }: Building,
-  { years: shift, spread }: World,
+  building: Building,
+  world: World,
   { eras, settings }: AssessContext,
   { uniform }: Draws,
 ): { readonly built: number; readonly design: number; readonly strengthened: boolean } {
+  const { years, year_retrofitted } = building;
+  const { years: shift, spread } = world;
   const change = Math.floor(spread * settings.spreads.editionChange_years * (2 * uniform('design year') - 1));
   const known = years.length === 1;
-  const built = years.length === 0 ? NaN : pick(years, uniform('year')) + (known ? 0 : shift);
+  const shares = yearShares(building, world, settings);
+  const built = years.length === 0 ? NaN : years[pickShare(shares, uniform('year'))]! + (known ? 0 : shift);
   const strengthened = year_retrofitted > 0 && (years.length === 0 || year_retrofitted >= Math.min(...years));
   if (strengthened) return { built, design: year_retrofitted + change, strengthened };
   if (years.length > 0) return { built, design: built + change, strengthened };
@@ -154,6 +161,32 @@ function yearsOf(
   const { from, to } = pick(eras, uniform('year'));
   const inside = Number.isFinite(from) ? (Number.isFinite(to) ? Math.floor(0.5 * (from + to)) : from + 10) : to - 20;
   return { built: inside, design: inside, strengthened };
+}
+
+/** How likely each year of a pool is for a building whose system is known: as likely as that system in the year. */
+function yearShares(
+  { years, system, use, storeys }: Building,
+  world: World,
+  { systemPrior }: AssessSettings,
+): number[] {
+  const even = years.map(() => 1);
+  if (system === null || systemPrior === null || years.length < 2) return even;
+  const shares = years.map((year) => {
+    const row = matchPrior(systemPrior, use, storeys.value, year)?.chances.find((one) => one.system === system);
+    return row === undefined ? 0 : world.systemShare(system, row.chance);
+  });
+  return shares.some((share) => share > 0) ? shares : even;
+}
+
+/** Where `uniform` falls among `shares`. */
+function pickShare(shares: readonly number[], uniform: number): number {
+  let left = uniform * shares.reduce((sum, share) => sum + share, 0);
+  let i = 0;
+  while (i < shares.length - 1 && left >= shares[i]!) {
+    left -= shares[i]!;
+    i += 1;
+  }
+  return i;
 }
 
 function systemOf(
@@ -172,13 +205,7 @@ function systemOf(
     matchPrior(prior, building.use, building.storeys.value, building.years[0] ?? NaN);
   if (group === null) throw new Error(`${building.id}: no row of the table of system chances fits`);
   const shares = group.chances.map(({ system, chance }) => world.systemShare(system, chance));
-  let left = uniform('system') * shares.reduce((sum, share) => sum + share, 0);
-  let i = 0;
-  while (i < shares.length - 1 && left >= shares[i]!) {
-    left -= shares[i]!;
-    i += 1;
-  }
-  return group.chances[i]!.system;
+  return group.chances[pickShare(shares, uniform('system'))]!.system;
 }
 
 function flagsOf(
@@ -209,28 +236,33 @@ function peopleOf(
   world: World,
   { settings: { spreads, rankBy }, assumed }: AssessContext,
   { normal }: Draws,
-): Pick<Truth, 'useFactor' | 'occupants_peak'> & { readonly people_exposed: number } {
-  if (rankBy !== 'people') return { useFactor: 1, occupants_peak: NaN, people_exposed: 1 };
+): Pick<Truth, 'useFactor' | 'hours' | 'occupants_peak'> & { readonly people_exposed: number } {
+  if (rankBy !== 'people') return { useFactor: 1, hours: NaN, occupants_peak: NaN, people_exposed: 1 };
   const { people_per_m2, hours_per_week } = assumed.uses[use];
   const counted = building.occupants_peak >= 0;
   const stated = building.occupied_hours_per_week >= 0;
   const left = world.spread * normal('hours');
-  const hours = stated ? building.occupied_hours_per_week : hours_per_week;
   const { peopleKnownUse, peopleUnknownUse, peopleCounted } = spreads;
   const useOpen = use === 'unknown';
+  const ofPeak = rooted(peopleKnownUse * peopleKnownUse - peopleCounted * peopleCounted);
+  // a count leaves the hours open that the use would tell, the use leaves the count open: what both tell is the rest
+  const ofHours = useOpen && !stated ? ofPeak : 0;
+  const usual = stated ? building.occupied_hours_per_week : hours_per_week;
+  const hours = usual * Math.exp(ofHours * normal('hours of the use'));
   const least = (people: number): number => Math.max(0.1, people);
   if (counted) {
-    const sigma = useOpen && !stated ? peopleKnownUse : peopleCounted;
-    const people_exposed = least((building.occupants_peak * hours) / 168) * Math.exp(sigma * left);
-    return { useFactor: 1, occupants_peak: building.occupants_peak, people_exposed };
+    const people_exposed = least((building.occupants_peak * hours) / 168) * Math.exp(peopleCounted * left);
+    return { useFactor: 1, hours, occupants_peak: building.occupants_peak, people_exposed };
   }
-  const ofUse = useOpen ? rooted(peopleUnknownUse * peopleUnknownUse - peopleKnownUse * peopleKnownUse) : 0;
+  const ofUse = useOpen
+    ? rooted(peopleUnknownUse * peopleUnknownUse - peopleKnownUse * peopleKnownUse - ofHours * ofHours)
+    : 0;
   const useFactor = Math.exp(ofUse * normal('people of the use'));
-  const ofPeak = rooted(peopleKnownUse * peopleKnownUse - peopleCounted * peopleCounted);
   const density = people_per_m2 * Math.exp(world.spread * ofPeak * normal('density'));
   const occupants_peak = building.floor_area_m2.value * areaFactor * density * useFactor;
   return {
     useFactor,
+    hours,
     occupants_peak,
     people_exposed: least((occupants_peak * hours) / 168) * Math.exp(peopleCounted * left),
   };

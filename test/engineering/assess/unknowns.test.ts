@@ -2,6 +2,7 @@ import { describe, expect, it } from 'vitest';
 import { assess, isRanked } from '../../../src/engineering/assess/assess.js';
 import { casesOf } from '../../../src/engineering/assess/cases.js';
 import { compileContext } from '../../../src/engineering/assess/context.js';
+import { IRREGULARITY } from '../../../src/engineering/assess/settings.js';
 import { unknownsOf } from '../../../src/engineering/assess/unknowns.js';
 import type { Building } from '../../../src/engineering/building.js';
 import { mixtureMoments } from '../../../src/engineering/priority/mixture.js';
@@ -102,11 +103,26 @@ describe('unknownsOf', () => {
   it('looks for no coefficient in the drawings of what was designed for no earthquake', () => {
     const old = building({ ...NO_IRREGULARITY, system: 'concrete-moment-frame', years: [1930], occupants_peak: 100 });
     expect(found(old).learnable).toEqual([]);
-    const tau = (years: readonly number[]): number =>
-      found({ ...old, years }).learnable.find(({ unknown }) => unknown === 'drawings')!.tau;
-    // by hand: k 2.5 on a spread of the table of 0.2, and half of its variance where half of the years are before any code
-    expect(tau([1985])).toBeCloseTo(0.5, 12);
-    expect(tau([1930, 1985])).toBeCloseTo(0.5 * Math.sqrt(0.5), 12);
+    const weights = (years: readonly number[]): [number, number][] => {
+      const { parts, learnable } = found({ ...old, years });
+      const { tau } = learnable.find(({ unknown }) => unknown === 'drawings')!;
+      const by = new Map<number, number>();
+      parts.weight.forEach((weight, i) => {
+        const one = (tau as Float64Array)[i]!;
+        by.set(one, (by.get(one) ?? 0) + weight);
+      });
+      return [...by];
+    };
+    // by hand: k 2.5 on a spread of the table of 0.2, off the parts of the years under a code, and off no part of those before any; of the
+    // settings' table of system chances the earlier year has twice the chance of this one (0.4 and 0.2)
+    expect(weights([1985])).toEqual([[0.5, expect.closeTo(1, 12)]]);
+    expect(weights([1930, 1985]).sort(([a], [b]) => a - b)).toEqual([
+      [0, expect.closeTo(2 / 3, 12)],
+      [0.5, expect.closeTo(1 / 3, 12)],
+    ]);
+    // drawings that show no such design settle it
+    const shown = { ...old, years: [1930, 1985], design_level: 'none' } as const;
+    expect(found(shown).learnable.map(({ unknown }) => unknown)).not.toContain('drawings');
   });
 
   it('names what is not on record', () => {
@@ -129,28 +145,54 @@ describe('unknownsOf', () => {
     ]);
   });
 
-  it('tells a soft or weak storey apart, and takes the other irregularities off the spread', () => {
+  it('tells a soft or weak storey apart, and two states of the other irregularities', () => {
     const blank = building({ system: 'concrete-moment-frame', years: [1958] });
-    const unknowns = found(blank);
-    const { tau } = unknowns.learnable.find(({ unknown }) => unknown === 'irregularity')!;
-    const none = classMoments(unknowns, 'irregularity', 0);
-    const some = classMoments(unknowns, 'irregularity', 1);
+    const { parts, learnable } = found(blank);
+    const { values, tau } = learnable.find(({ unknown }) => unknown === 'irregularity')!;
+    expect(tau).toBe(0);
+    const without = parts.weight.map((weight, i) => (values![i]! % 2 === 0 ? weight : 0));
+    const storey = (value: 0 | 1) => {
+      const own = found(blank);
+      const storeys = values!.map((one) => one % 2);
+      return classMoments(
+        { ...own, learnable: [{ unknown: 'irregularity', values: storeys, tau: 0 }] },
+        'irregularity',
+        value,
+      );
+    };
+    const [none, some] = [storey(0), storey(1)];
     // chances of a soft and of a weak storey of a frame, from the settings: 1 - 0.85 × 0.9
     expect(some.chance).toBeCloseTo(0.235, 12);
+    expect(without.reduce((sum, weight) => sum + weight, 0)).toBeCloseTo(0.765, 12);
     expect(some.mean - none.mean).toBeCloseTo(-2.5 * Math.log(0.7), 10);
     const storeyKnown = { ...blank, soft_storey: 'no', weak_storey: 'no' } as const;
     const open = assessed(storeyKnown);
-    const shut = assessed({
-      ...NO_IRREGULARITY,
-      ...storeyKnown,
-      torsion: 'no',
-      reentrant_corner: 'no',
-      setback: 'no',
-      mass_irregularity: 'no',
-    });
     expect(none.mean).toBeCloseTo(open.mean, 8);
     expect(none.sd).toBeCloseTo(open.sd, 8);
-    expect(tau * tau).toBeCloseTo(open.sd ** 2 - shut.sd ** 2, 8);
+    // mean, variance and third moment of the four others by all their 16 combinations, from the settings' chances and factors
+    const { chances, factors } = IRREGULARITY;
+    const others = [
+      [chances.torsion, factors.torsion],
+      [chances.reentrant_corner, factors.reentrant_corner],
+      [chances.setback, factors.setback],
+      [chances.mass_irregularity, factors.mass_irregularity],
+    ] as const;
+    let combinations = [[1, 0]] as [number, number][];
+    for (const [chance, factor] of others)
+      combinations = combinations.flatMap(([p, x]): [number, number][] => [
+        [p * chance, x - 2.5 * Math.log(factor)],
+        [p * (1 - chance), x],
+      ]);
+    const central = (states: readonly (readonly [number, number])[], power: number): number => {
+      const mean = states.reduce((sum, [p, x]) => sum + p * x, 0);
+      return states.reduce((sum, [p, x]) => sum + p * (x - mean) ** power, 0);
+    };
+    // numbered as they come: without and with a storey in the one state, then in the other
+    const states = [0, 2].map((value) => {
+      const { chance, mean } = classMoments({ parts, learnable }, 'irregularity', value);
+      return [chance / 0.765, mean] as const;
+    });
+    for (const power of [2, 3]) expect(central(states, power)).toBeCloseTo(central(combinations, power), 10);
   });
 
   it('asks for no irregularity where the row answers all six, or the building is assessed', () => {
@@ -165,7 +207,7 @@ describe('unknownsOf', () => {
   it('takes off with the use what knowing it takes off the assessment', () => {
     const one = building({ system: 'timber-light-frame', use: 'unknown', floor_area_m2: given(500), years: [1950] });
     const { learnable } = found(one);
-    const tau = learnable.find(({ unknown }) => unknown === 'use')!.tau;
+    const tau = Number(learnable.find(({ unknown }) => unknown === 'use')!.tau);
     const before = assessed(one).sd;
     const after = assessed({ ...one, use: 'other' }).sd;
     expect(tau * tau).toBeCloseTo(before * before - after * after, 6);
@@ -173,7 +215,7 @@ describe('unknownsOf', () => {
 
   it('takes off with the use the doubt of its hours where the people are counted', () => {
     const one = building({ system: 'timber-light-frame', use: 'unknown', occupants_peak: 40, years: [1950] });
-    const tau = found(one).learnable.find(({ unknown }) => unknown === 'use')!.tau;
+    const tau = Number(found(one).learnable.find(({ unknown }) => unknown === 'use')!.tau);
     expect(tau * tau).toBeCloseTo(assessed(one).sd ** 2 - assessed({ ...one, use: 'other' }).sd ** 2, 6);
     expect(found({ ...one, occupied_hours_per_week: 50 }).learnable.some(({ unknown }) => unknown === 'use')).toBe(
       false,
