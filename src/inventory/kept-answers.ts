@@ -78,8 +78,9 @@ export interface AnswersSince {
   readonly withdrawn: number;
 }
 
-/** Says how the coefficient beside it is meant: alone it settles nothing. */
-const SETTLES_NOTHING = 'design_level';
+/** Says how the coefficient beside it is meant: alone it settles nothing, but where it says that there is none. */
+const LEVEL = 'design_level';
+const NONE = 'none';
 
 /**
  * What has come in and what was withdrawn since inventory `inventoryId` was taken in. Its notes say which answers were laid over it: the
@@ -91,14 +92,15 @@ export async function answersSince(db: Database, inventoryId: string): Promise<A
   // cells of findings are cut (inventory/findings.ts)
   const laid = `(SELECT id, column_name, value FROM finding WHERE inventory_id = ? AND code = 'survey-answer')`;
   const now = `(SELECT id, column_name, left(cell, 200) AS value FROM ${HELD} WHERE counts AND cell IS NOT NULL)`;
-  const fresh = await db.rows<{ index: number; name: string }>(
-    `SELECT b.building_index AS index, n.column_name AS name FROM ${now} n ANTI JOIN ${laid} l USING (id, column_name, value)
+  const fresh = await db.rows<{ index: number; name: string; value: string }>(
+    `SELECT b.building_index AS index, n.column_name AS name, n.value FROM ${now} n ANTI JOIN ${laid} l USING (id, column_name, value)
      JOIN building b ON b.id = n.id AND b.inventory_id = ? ORDER BY ALL`,
     [inventoryId, inventoryId],
   );
-  for (const { index, name } of fresh) {
+  for (const { index, name, value } of fresh) {
     const questions = answered.get(index) ?? new Set();
-    answered.set(index, name === SETTLES_NOTHING ? questions : questions.add(questionOf(name)));
+    const settlesNothing = name === LEVEL && value.trim().toLowerCase() !== NONE;
+    answered.set(index, settlesNothing ? questions : questions.add(questionOf(name)));
   }
   const withdrawn = await db.value(`SELECT count(DISTINCT id) FROM ${laid} ANTI JOIN ${now} USING (id, column_name)`, [
     inventoryId,

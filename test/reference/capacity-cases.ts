@@ -69,6 +69,14 @@ const CAPACITY: readonly ReferenceCase[] = [
     mark: 'own arithmetic',
   },
   {
+    id: 'reduction-before',
+    method: 'swaymark/capacity/reduction-before',
+    inputs: { first_reduction: 3.9, ductility_share: 0.5, level_factor: 1.4 },
+    ...exactly(2.73),
+    source: '3.9/2 × 1.4',
+    mark: 'own arithmetic',
+  },
+  {
     id: 'SP-53-form',
     method: 'n2/capacity/reduction',
     inputs: { ductility: 2, period_s: 0.4, corner_period_s: 0.7 },

@@ -114,6 +114,8 @@ const RANGES: Readonly<Record<string, fc.Arbitrary<number>>> = {
   level_factor: fc.constantFrom(1, 1.4),
   overstrength: between(1, 4),
   code_reduction: between(1, 12),
+  first_reduction: between(1, 8),
+  ductility_share: between(0.4, 1),
   capacity_sa_g: between(0.02, 3),
   strength_coefficient: between(0.01, 1),
   reduction: between(1, 6),

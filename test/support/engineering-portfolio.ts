@@ -106,6 +106,29 @@ export interface CommonDraw {
   readonly site: number;
 }
 
+/** How likely each year is for a building that was not strengthened and whose system is known: as likely as that system in the year. */
+function yearShares(one: Building, { settings: { systemPrior } }: AssessContext): number[] {
+  const { years, system, use, storeys } = one;
+  const even = years.map(() => 1);
+  if (system === null || one.year_retrofitted > 0 || systemPrior === null) return even;
+  const shares = years.map(
+    (year) =>
+      matchPrior(systemPrior, use, storeys.value, year)!.chances.find((row) => row.system === system)?.chance ?? 0,
+  );
+  return shares.some((share) => share > 0) ? shares : even;
+}
+
+/** Where `uniform` falls among `shares`. */
+function pickShare(shares: readonly number[], uniform: number): number {
+  let left = uniform * shares.reduce((sum, share) => sum + share, 0);
+  let i = 0;
+  while (i < shares.length - 1 && left >= shares[i]!) {
+    left -= shares[i]!;
+    i += 1;
+  }
+  return i;
+}
+
 /**
  * Draws the unknown inputs of `original` from what the study says of them: year (pool, then either side of it), system of the
  * prior row that fits, irregularities by the chances of that system, height, period by the evidence at that height and system with
@@ -143,18 +166,19 @@ export function drawerOf(original: Building, context: AssessContext, { uniform, 
   const assessed = original.capacity_sa_g > 0;
   // in whole years: those of construction and of the editions are whole, so nothing is lost
   const change = (): number => Math.floor(spreads.editionChange_years * (2 * uniform() - 1));
+  const shares = yearShares(original, context);
   const draw = (common: CommonDraw): number => {
-    const built = original.years.length === 0 ? NaN : original.years[Math.floor(uniform() * original.years.length)]!;
+    const built = original.years.length === 0 ? NaN : original.years[pickShare(shares, uniform())]!;
     let system = original.system;
     if (system === null) {
       const row = matchPrior(systemPrior!, original.use, original.storeys.value, built)!.chances;
-      let left = uniform();
-      let i = 0;
-      while (i < row.length - 1 && left >= row[i]!.chance) {
-        left -= row[i]!.chance;
-        i += 1;
-      }
-      system = row[i]!.system;
+      system =
+        row[
+          pickShare(
+            row.map(({ chance }) => chance),
+            uniform(),
+          )
+        ]!.system;
     }
     if (retrofitted) {
       years[0] = built;

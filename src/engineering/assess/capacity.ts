@@ -3,17 +3,18 @@ import type { Building, DirectionName, System } from '../building.js';
 import { NOT_DESIGNED } from '../capacity/edition.js';
 import type { CodeEdition, DesignFacts, EraDesign } from '../capacity/edition.js';
 import type { CarriedId } from '../capacity/families.js';
-import { DUCTILITY_KEPT, OVERSTRENGTH_KEPT } from '../capacity/records.js';
+import { DUCTILITY_KEPT, OVERSTRENGTH_KEPT, REDUCTION_BEFORE } from '../capacity/records.js';
 import { apply } from '../formula.js';
 import { cite } from '../source.js';
 import type { Verified } from '../source.js';
 import type { Trace } from '../trace.js';
-import { detailingOf, ductilityOf, editionOf, familyOf } from './code-history.js';
-import type { EditionId } from './code-history.js';
+import { detailingOf, ductilityOf, editionOf, firstReduction } from './code-history.js';
+import type { Detailing, EditionId } from './code-history.js';
 import { ln } from '../numeric/elementary.js';
 import { entryOf } from './case-memory.js';
 import type { CapacityAtHeight, Case, Design } from './case-memory.js';
 import type { AssessContext } from './context.js';
+import { hasNoRow, rowOf } from './edition-rows.js';
 import type { CodeHistorySettings } from './settings.js';
 
 const MARKS: Readonly<Record<Verified, string>> = {
@@ -40,32 +41,6 @@ function eraDesign(edition: EditionId, facts: DesignFacts, context: AssessContex
   return (row as CodeEdition).design(facts, stated, trace);
 }
 
-/** True where the edition knows no such system, so that it counts as not designed. */
-function hasNoRow(
-  system: System,
-  edition: EditionId | null,
-  strengthened: boolean,
-  history: CodeHistorySettings | null,
-): boolean {
-  if (edition === null || strengthened || history === null) return false;
-  const { year, hasRow } = editionOf(edition, history);
-  return year >= (familyOf(history).noRowFrom[system] ?? Infinity) || hasRow?.(system) === false;
-}
-
-/** True where the case was designed for earthquakes in a direction at least, so that its drawings can state a coefficient. */
-export function isDesigned(
-  {
-    system,
-    system_transverse,
-    edition,
-    strengthened,
-  }: Pick<Case, 'system' | 'system_transverse' | 'edition' | 'strengthened'>,
-  { settings: { codeHistory } }: AssessContext,
-): boolean {
-  if (edition === null) return false;
-  return [system, system_transverse].some((one) => !hasNoRow(one, edition, strengthened, codeHistory));
-}
-
 /** The memory of capacities that all cases of a system, an edition and a level of retrofit share. */
 export function designOf(
   system: System,
@@ -77,7 +52,7 @@ export function designOf(
   const key = `${system}|${String(edition)}|${String(retrofit_level)}|${String(strengthened)}`;
   return entryOf(caseMemory.designs, key, () => ({
     dependsOn:
-      edition === null || hasNoRow(system, edition, strengthened, settings.codeHistory)
+      edition === null || hasNoRow(system, edition, settings.codeHistory)
         ? 'nothing'
         : editionOf(edition, settings.codeHistory!).dependsOn(system),
     found: new Map(),
@@ -118,14 +93,16 @@ export function keptCapacity(
   height_m: number,
   context: AssessContext,
 ): CapacityAtHeight {
+  // few are strengthened, and what they had before counts too: nothing of theirs is kept
+  if (which.strengthened) return capacityAtHeight(building, which, direction, height_m, null, context);
   const design = which.design[direction];
   const { dependsOn: needs, found } = design;
   if (needs === 'more') {
     design.last =
       design.last === null
-        ? capacityAtHeight(building, which, direction, height_m, null, context)
+        ? capacityOfCase(building, which, direction, height_m, null, context)
         : againAtHeight(building, which, direction, height_m, design.last, context);
-    return design.last;
+    return atLeastUndesigned(design.last, which, direction, context);
   }
   const key = needs === 'height' ? height_m : needs === 'storeys' ? building.storeys.value : 0;
   let capacity = found.get(key);
@@ -138,7 +115,8 @@ export function keptCapacity(
 }
 
 /**
- * Strength and ductility of a case in a direction, at a height. `levelFactor` overrides the level of a drawings' coefficient.
+ * Strength and ductility of a case in a direction, at a height. `levelFactor` overrides the level of a drawings' coefficient. A retrofit takes
+ * nothing away: where the code of its construction asked for more, that counts.
  * Not for buildings with an assessed capacity.
  */
 export function capacityAtHeight(
@@ -150,34 +128,102 @@ export function capacityAtHeight(
   context: AssessContext,
   trace?: Trace,
 ): CapacityAtHeight {
+  const { builtTo } = which;
+  if (drawingsLevel !== null)
+    return capacityOfCase(building, which, direction, height_m, drawingsLevel, context, trace);
+  const of = (one: Case, step?: Trace): CapacityAtHeight =>
+    atLeastUndesigned(
+      capacityOfCase(building, one, direction, height_m, null, context, step),
+      one,
+      direction,
+      context,
+      step,
+    );
+  if (builtTo === null) return of(which, trace);
+  const before = { ...which, edition: builtTo.edition, strengthened: false, retrofit_level: 1, builtTo: null };
+  const own = of(before);
+  const retrofit = of(which);
+  const isLess = elastic(retrofit) < elastic(own);
+  if (trace === undefined) return isLess ? own : retrofit;
+  const names = {
+    own: `${builtTo.edition ?? 'no seismic design'} of its construction`,
+    retrofit: `${which.edition ?? 'no seismic design'} of the retrofit`,
+  };
+  trace.choice({
+    question: 'Construction or retrofit',
+    taken: isLess ? names.own : names.retrofit,
+    because: 'the larger strength × ductility: a retrofit takes nothing away [judgement]',
+    others: [{ what: isLess ? names.retrofit : names.own, why: 'asked for less' }],
+  });
+  return of(isLess ? before : which, trace);
+}
+
+/** What tells two capacities of one system apart, whatever its period. */
+function elastic({ lnStrength, ductility }: CapacityAtHeight): number {
+  return lnStrength + ln(ductility);
+}
+
+/** `found`, its ductility no less than gives what the system has with no design for earthquakes: a design takes nothing away [judgement]. */
+function atLeastUndesigned(
+  found: CapacityAtHeight,
+  which: Case,
+  direction: DirectionName,
+  { assumed, strength }: AssessContext,
+  trace?: Trace,
+): CapacityAtHeight {
+  const { edition, strengthened } = which;
+  if (edition === null || strengthened) return found;
+  const system = direction === 'longitudinal' ? which.system : which.system_transverse;
+  const none = strength.constants.floor_g * assumed.overstrength * ductilityOf(system, 'none', assumed.ductility);
+  const ductility = none / (found.strength_coefficient * found.overstrength);
+  if (ductility <= found.ductility) return found;
+  trace?.choice({
+    question: 'Less than without a design',
+    taken: `μ = ${String(ductility)}`,
+    because: 'a design takes nothing away: as much as if nothing had been designed [judgement]',
+    others: [],
+  });
+  return { ...found, ductility };
+}
+
+function capacityOfCase(
+  building: Building,
+  which: Case,
+  direction: DirectionName,
+  height_m: number,
+  drawingsLevel: number | null,
+  context: AssessContext,
+  trace?: Trace,
+): CapacityAtHeight {
   const system = direction === 'longitudinal' ? which.system : which.system_transverse;
   const history = context.settings.codeHistory;
-  const detailing = history === null ? 'none' : detailingOf(system, which.edition, history);
-  const ductility = ductilityOf(system, detailing, context.assumed.ductility);
+  const detailing = history === null ? 'none' : detailingOfCase(system, which, history);
+  const ofClass = ductilityOf(system, detailing, context.assumed.ductility);
   trace?.choice({
     question: 'Detailing and ductility',
-    taken: `μ = ${String(ductility)}`,
+    taken: `μ = ${String(ofClass)}`,
     because: `${system}, ${which.edition === null ? 'no seismic design' : `designed to ${which.edition}`}: detailing class "${detailing}" [judgement]`,
     others: [],
   });
-  const noRow = hasNoRow(system, which.edition, which.strengthened, history);
-  if (noRow) {
+  const row = rowOf(system, which, history);
+  if (row !== system) {
     trace?.choice({
       question: 'Design coefficient of the era',
-      taken: 'none: counts as not designed',
-      because: `${String(which.edition)} gives ${system} no row of its own [judgement]`,
+      taken: row === null ? 'none: counts as not designed' : `that of ${row}`,
+      because: `${String(which.edition)} gives ${system} no row of its own${row === null ? '' : '; what strengthens it is reinforced'} [judgement]`,
       others: [],
     });
   }
   let design =
-    which.edition === null || noRow
+    which.edition === null || row === null
       ? NOT_DESIGNED
       : eraDesign(
           which.edition,
-          { building, direction, system, height_m, ductile: detailing === 'after' || detailing === 'special' },
+          { building, direction, system: row, height_m, ductile: detailing === 'after' || detailing === 'special' },
           context,
           trace,
         );
+  const designed = design;
   if (drawingsLevel !== null) {
     trace?.value('design_base_shear_coefficient', building.design_base_shear_coefficient, 'given', 'from the drawings');
     design = {
@@ -196,21 +242,44 @@ export function capacityAtHeight(
     trace,
   );
   const { overstrength: assumedOverstrength } = context.assumed;
-  if (!Number.isFinite(design.reduction))
+  if (!Number.isFinite(design.reduction)) {
+    const first =
+      designed === NOT_DESIGNED || history === null
+        ? null
+        : firstReduction(system, detailing, history, context.assumed.ductility);
     return {
       strength_coefficient,
       overstrength: assumedOverstrength,
-      ductility,
       lnStrength: ln(strength_coefficient * assumedOverstrength),
+      ductility:
+        first === null
+          ? ofClass
+          : apply(
+              DUCTILITY_KEPT,
+              {
+                ductility: ofClass,
+                overstrength: assumedOverstrength,
+                code_reduction: apply(REDUCTION_BEFORE, { ...first, level_factor: design.levelFactor }, trace),
+                level_factor: design.levelFactor,
+              },
+              trace,
+            ),
     };
+  }
   const bounds = { code_reduction: design.reduction, level_factor: design.levelFactor };
   const overstrength = apply(OVERSTRENGTH_KEPT, { overstrength: assumedOverstrength, ...bounds }, trace);
   return {
     strength_coefficient,
     overstrength,
     lnStrength: ln(strength_coefficient * overstrength),
-    ductility: apply(DUCTILITY_KEPT, { ductility, overstrength, ...bounds }, trace),
+    ductility: apply(DUCTILITY_KEPT, { ductility: ofClass, overstrength, ...bounds }, trace),
   };
+}
+
+/** Detailing class of a case: a retrofit makes no building one of the special systems. */
+function detailingOfCase(system: System, { edition, strengthened }: Case, history: CodeHistorySettings): Detailing {
+  const detailing = detailingOf(system, edition, history);
+  return strengthened && detailing === 'special' ? 'after' : detailing;
 }
 
 /** Share of the mass in the first mode: 1 up to two storeys, 0.85 above (EN 1998-1 4.3.3.2.2 λ). */

@@ -97,6 +97,7 @@ function listCases(building: Building, context: AssessContext): Cases | string {
   }
   const design = (system: System, edition: EditionId | null): Design =>
     designOf(system, edition, level, strengthened, context);
+  const builtTo = strengthened ? editionOfYears(built, context) : null;
   const list: Case[] = [];
   for (const [system, byEdition] of found) {
     const system_transverse = building.system_transverse ?? system;
@@ -110,6 +111,7 @@ function listCases(building: Building, context: AssessContext): Cases | string {
         editionYear: edition === null ? 0 : editionOf(edition, settings.codeHistory!).year,
         retrofit_level: level,
         strengthened,
+        builtTo,
         chance,
         design: {
           longitudinal,
@@ -129,6 +131,15 @@ function listCases(building: Building, context: AssessContext): Cases | string {
 
 function keyOf({ system, edition }: Case): string {
   return `${system}|${edition ?? ''}`;
+}
+
+/** The likeliest edition of a year that is known; null where it is not. */
+function editionOfYears(years: readonly number[], context: AssessContext): Case['builtTo'] {
+  if (years.length !== 1) return null;
+  const [first, ...others] = erasOf(years[0]!, context);
+  if (first === undefined) return null;
+  const { edition } = others.reduce((best, one) => (one.chance > best.chance ? one : best), first).era;
+  return { edition, year: edition === null ? 0 : editionOf(edition, context.settings.codeHistory!).year };
 }
 
 const UNDESIGNED: EraChances = [{ era: { edition: null, from: -Infinity, to: Infinity }, chance: 1 }];

@@ -93,13 +93,34 @@ export type Detailing = 'none' | 'before' | 'after' | 'special';
 
 /** Detailing class of a system designed to an edition (null: no seismic design). */
 export function detailingOf(system: System, edition: EditionId | null, history: CodeHistorySettings): Detailing {
-  if (edition === null) return 'none';
+  return edition === null ? 'none' : detailingIn(editionOf(edition, history).year, system, history);
+}
+
+function detailingIn(year: number, system: System, history: CodeHistorySettings): Detailing {
   const { detailingFrom, specialFrom } = familyOf(history);
   const factors = SYSTEM_FACTORS[system];
   const from = history.detailing_from?.[system] ?? (factors.neverDuctile ? Infinity : detailingFrom);
-  const { year } = editionOf(edition, history);
   if (year < from) return 'before';
   return factors.special && year >= (specialFrom ?? Infinity) ? 'special' : 'after';
+}
+
+/**
+ * The reduction at strength level of the first edition of the family that knew one, and which share of the ductility it counted on a
+ * detailing class has, 1 at most; null where none is known.
+ */
+export function firstReduction(
+  system: System,
+  detailing: Detailing,
+  history: CodeHistorySettings,
+  ductilities: Ductilities = ASSUMED.ductility,
+): { readonly first_reduction: number; readonly ductility_share: number } | null {
+  const first = familyOf(history).firstReduction;
+  if (first === null) return null;
+  const counted = ductilityOf(system, detailingIn(first.year, system, history), ductilities);
+  return {
+    first_reduction: first.of(system),
+    ductility_share: Math.min(1, ductilityOf(system, detailing, ductilities) / counted),
+  };
 }
 
 /** Displacement ductility of a detailing class [judgement]. */

@@ -32,6 +32,7 @@ export function codeRatio(
     editionYear: editionOf(latest.edition, context.settings.codeHistory!).year,
     retrofit_level: 1,
     strengthened: false,
+    builtTo: null,
     design: { longitudinal: design(system), transverse: design(system_transverse) },
   };
   const strength_today = keptCapacity(building, today, direction, height_m, context).strength_coefficient;

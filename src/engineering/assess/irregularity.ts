@@ -99,7 +99,10 @@ function gathered(building: Building, rules: IrregularityRules | null, settings:
 
 /** Third central moment of ln of the factor of all but the storey: of independent yes or no the moments add up. */
 function thirdMoment(inputs: FactorInput): number {
-  const of = (factor: number, p: number): number => p * (1 - p) * (1 - 2 * p) * ln(factor) ** 3;
+  const of = (factor: number, p: number): number => {
+    const x = ln(factor);
+    return p * (1 - p) * (1 - 2 * p) * x * x * x;
+  };
   return (
     of(inputs.torsion_factor, inputs.torsion_chance) +
     of(inputs.reentrant_factor, inputs.reentrant_chance) +

@@ -4,7 +4,7 @@ import { MixtureBuilder, MixturePool, labelOf } from '../priority/mixture.js';
 import type { Mixture } from '../priority/mixture.js';
 import type { Learnable, Unknowns } from '../priority/survey-value.js';
 import { casesOf } from './cases.js';
-import { isDesigned } from './capacity.js';
+import { isDesigned } from './edition-rows.js';
 import type { Case, Cases, Irregularity } from './case-memory.js';
 import { chooseSpectrum } from './choose-spectrum.js';
 import { slopeFor } from './context.js';

@@ -53,7 +53,9 @@ function isWelded(year: number, history: CodeHistorySettings | null): boolean {
 
 /** The weak type of a case, or null; `isSoft`: the first storey is soft, by a flag of the row or by its numbers. */
 export function weakTypeOf(which: Case, isSoft: boolean, history: CodeHistorySettings | null): string | null {
-  const year = which.editionYear;
+  // a retrofit to less than its year's code leaves the building of its type
+  const year =
+    which.strengthened && which.retrofit_level < 1 && which.builtTo !== null ? which.builtTo.year : which.editionYear;
   switch (which.system) {
     case 'unreinforced-masonry-wall':
       return 'unreinforced-masonry';

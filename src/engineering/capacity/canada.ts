@@ -36,6 +36,9 @@ export const CANADA_1975 = coefficientRecord(
   },
 );
 
+/** U of NBC 1990: what it takes off the elastic force besides R. */
+export const NBC_CALIBRATION = 0.6;
+
 export const CANADA_1990 = coefficientRecord(
   'nbc-1990/base-shear/static',
   'Base shear over weight U v S F/R, NBC 1990 and 1995',
@@ -65,7 +68,7 @@ export const CANADA_1990 = coefficientRecord(
     verified: 'memory',
     note: 'U = 0.6; F S at most 3.0, or 4.2 where the acceleration zone is above the velocity zone; importance 1. Strength level.',
   },
-  { calibration: 0.6 },
+  { calibration: NBC_CALIBRATION },
 );
 
 export const CANADA_2005 = coefficientRecord(
@@ -206,7 +209,11 @@ export const CANADIAN_EDITIONS: EditionTable<CanadianEdition> = {
       const plateau = PLATEAUS[acceleration_zone];
       const inputs = { velocity_ratio, plateau, foundation_factor, reduction_r, period_s };
       // V = U V_e/R: the force is V_e divided by R/U
-      return { coefficient: apply(CANADA_1990, inputs, trace), levelFactor: 1, reduction: reduction_r / 0.6 };
+      return {
+        coefficient: apply(CANADA_1990, inputs, trace),
+        levelFactor: 1,
+        reduction: reduction_r / NBC_CALIBRATION,
+      };
     },
   },
   'canada-2005': {

@@ -2,17 +2,18 @@
 import type { System } from '../building.js';
 import type { AnyRecord } from '../formula.js';
 import type { Verified } from '../source.js';
-import { CANADA_RECORDS, CANADIAN_EDITIONS, NBC_K, NBC_R, NBC_RD_RO } from './canada.js';
+import { CANADA_RECORDS, CANADIAN_EDITIONS, NBC_CALIBRATION, NBC_K, NBC_R, NBC_RD_RO } from './canada.js';
 import type { CodeEdition } from './edition.js';
 import { EDITION_RECORDS } from './editions.js';
 import { GREECE_RECORDS, GREEK_COEFFICIENTS, GREEK_EDITIONS, GREEK_Q } from './greece.js';
-import { INDIAN_EDITIONS, INDIAN_K, INDIAN_R, INDIA_RECORDS } from './india.js';
+import { INDIAN_EDITIONS, INDIAN_K, INDIAN_R, INDIA_RECORDS, LOAD_FACTOR } from './india.js';
 import { ITALIAN_EDITIONS, ITALY_RECORDS, MEDIUM_Q } from './italy.js';
 import { JAPANESE_EDITIONS, JAPAN_DS, JAPAN_RECORDS } from './japan.js';
 import { NEW_ZEALAND_EDITIONS, NEW_ZEALAND_RECORDS, NZ_DUCTILITY, NZ_M, NZ_S } from './new-zealand.js';
 import { OWN_TABLE_RECORDS } from './own-table.js';
 import type { OwnId } from './own-table.js';
 import type { EditionInputs } from './stated.js';
+import { WORKING_TO_STRENGTH } from './records.js';
 import { SYSTEM_FACTORS } from './systems.js';
 import { TURKEY_RECORDS, TURKISH_EDITIONS, TURKISH_K, TURKISH_R } from './turkey.js';
 import { US_EDITIONS } from './us.js';
@@ -45,7 +46,18 @@ export interface CodeFamily {
   readonly specialFrom: number | null;
   /** Systems to which an edition from that year on gives no row: such a building counts as not designed [judgement]. */
   readonly noRowFrom: Partial<Readonly<Record<System, number>>>;
+  /**
+   * The first edition that reduces the elastic force by a factor of its own, and that factor at the level of strength, for the detailing it
+   * asked. Editions before it stated a coefficient alone: they are not credited with more [judgement]. null: none is known.
+   */
+  readonly firstReduction: { readonly year: number; readonly of: (system: System) => number } | null;
 }
+
+/**
+ * What codes asked of unreinforced masonry tells of its wall areas, not that anybody worked them out: it counts as not designed, in every
+ * edition [judgement].
+ */
+const NO_UNREINFORCED_MASONRY = { 'unreinforced-masonry-wall': -Infinity } as const;
 
 /** Where nothing else is known tilt-up walls and precast frames go by the detailing date, and welded steel is not flagged [judgement]. */
 const byDetailing = (year: number): WeakDates => ({
@@ -72,6 +84,7 @@ export const CODE_FAMILIES = {
     },
     specialFrom: 1997,
     noRowFrom: { 'unreinforced-masonry-wall': SYSTEM_FACTORS['unreinforced-masonry-wall'].noRowFrom ?? Infinity },
+    firstReduction: { year: 1961, of: (system) => 8 / SYSTEM_FACTORS[system].k[0] / WORKING_TO_STRENGTH },
   },
   japan: {
     title: 'Japan',
@@ -81,7 +94,8 @@ export const CODE_FAMILIES = {
     detailingVerified: 'restated',
     weak: byDetailing(1981),
     specialFrom: null,
-    noRowFrom: {},
+    noRowFrom: NO_UNREINFORCED_MASONRY,
+    firstReduction: { year: 1981, of: (system) => 1 / JAPAN_DS[system] },
   },
   'new-zealand': {
     title: 'New Zealand',
@@ -90,8 +104,10 @@ export const CODE_FAMILIES = {
     detailingSource: 'NZS 4203:1976 and the ductile detailing that came with it',
     detailingVerified: 'memory',
     weak: byDetailing(1976),
-    specialFrom: null,
-    noRowFrom: {},
+    // capacity design came with it
+    specialFrom: 1976,
+    noRowFrom: NO_UNREINFORCED_MASONRY,
+    firstReduction: { year: 1976, of: (system) => 4 / (NZ_S[system] * NZ_M[system]) },
   },
   italy: {
     title: 'Italy',
@@ -101,7 +117,8 @@ export const CODE_FAMILIES = {
     detailingVerified: 'memory',
     weak: byDetailing(2003),
     specialFrom: null,
-    noRowFrom: {},
+    noRowFrom: NO_UNREINFORCED_MASONRY,
+    firstReduction: { year: 2003, of: (system) => MEDIUM_Q[system] },
   },
   greece: {
     title: 'Greece',
@@ -111,7 +128,8 @@ export const CODE_FAMILIES = {
     detailingVerified: 'memory',
     weak: byDetailing(1985),
     specialFrom: null,
-    noRowFrom: {},
+    noRowFrom: NO_UNREINFORCED_MASONRY,
+    firstReduction: { year: 1995, of: (system) => GREEK_Q[system] },
   },
   turkey: {
     title: 'Türkiye',
@@ -121,7 +139,8 @@ export const CODE_FAMILIES = {
     detailingVerified: 'memory',
     weak: byDetailing(1998),
     specialFrom: null,
-    noRowFrom: {},
+    noRowFrom: NO_UNREINFORCED_MASONRY,
+    firstReduction: { year: 1998, of: (system) => TURKISH_R[system] },
   },
   india: {
     title: 'India: IS 1893',
@@ -131,7 +150,8 @@ export const CODE_FAMILIES = {
     detailingVerified: 'memory',
     weak: byDetailing(1993),
     specialFrom: null,
-    noRowFrom: {},
+    noRowFrom: NO_UNREINFORCED_MASONRY,
+    firstReduction: { year: 2002, of: (system) => INDIAN_R[system] / LOAD_FACTOR },
   },
   canada: {
     title: 'Canada: National Building Code',
@@ -141,7 +161,8 @@ export const CODE_FAMILIES = {
     detailingVerified: 'memory',
     weak: byDetailing(1975),
     specialFrom: null,
-    noRowFrom: {},
+    noRowFrom: NO_UNREINFORCED_MASONRY,
+    firstReduction: { year: 1990, of: (system) => NBC_R[system] / NBC_CALIBRATION },
   },
 } as const satisfies Readonly<Record<string, CodeFamily>>;
 
@@ -160,6 +181,7 @@ export const OWN_FAMILY: CodeFamily = {
   weak: byDetailing(Infinity),
   specialFrom: null,
   noRowFrom: {},
+  firstReduction: null,
 };
 /** Read where settings kept with an earlier run name no family: there was one. */
 export const FIRST_FAMILY: FamilyId = 'us-ubc-asce7';

@@ -100,7 +100,7 @@ function periodOf_s(edition: '2002' | '2016', facts: DesignFacts, trace?: Trace)
 }
 
 /** The limit-state combination multiplies the earthquake force by 1.5 [memory]. */
-const LOAD_FACTOR = 1.5;
+export const LOAD_FACTOR = 1.5;
 
 const spectral = (edition: '2002' | '2016'): CodeEdition<StatedFor<'india-2002'>> => ({
   year: Number(edition),

@@ -99,6 +99,41 @@ const ductilityFamily: Family<
     Math.max(Math.min(ductility, code_reduction / (level_factor * overstrength)), 1),
 };
 
+const reductionBeforeFamily: Family<
+  { readonly first_reduction: number; readonly ductility_share: number; readonly level_factor: number },
+  Record<never, number>
+> = {
+  id: 'capacity/reduction-before',
+  yields: 'code_reduction',
+  unit: null,
+  symbol: 'R_0',
+  inputs: [
+    {
+      name: 'first_reduction',
+      kind: 'number',
+      meaning: 'reduction, at strength level, of the first edition of the family that knew one',
+    },
+    {
+      name: 'ductility_share',
+      kind: 'number',
+      meaning: 'ductility of the detailing class over that of the detailing which this edition asked, 1 at most',
+    },
+    { name: 'level_factor', kind: 'number', meaning: '1.4 from working stress to strength, else 1' },
+  ],
+  expression: 'first_reduction * ductility_share * level_factor',
+  evaluate: ({ first_reduction, ductility_share, level_factor }) => first_reduction * ductility_share * level_factor,
+};
+
+export const REDUCTION_BEFORE = record({
+  id: 'swaymark/capacity/reduction-before',
+  title: 'Reduction of an edition that knew none: that of the first which did, by the share of its ductility',
+  family: reductionBeforeFamily,
+  constants: {},
+  source: judged('a reduction goes with the detailing that is asked for it [judgement]'),
+  verified: 'judgement',
+  limits: [],
+});
+
 export const DUCTILITY_KEPT = record({
   id: 'swaymark/capacity/ductility-kept',
   title: "Ductility, so that level, overstrength and ductility never exceed the edition's own reduction",
@@ -179,6 +214,7 @@ export const CAPACITY_RECORDS: readonly AnyRecord[] = [
   STRENGTH,
   OVERSTRENGTH_KEPT,
   DUCTILITY_KEPT,
+  REDUCTION_BEFORE,
   REDUCTION,
   ELASTIC_EQUIVALENT,
 ];

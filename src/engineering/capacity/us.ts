@@ -58,6 +58,13 @@ const row = <Stated>(
   design: CodeEdition<Stated>['design'],
 ): CodeEdition<Stated> => ({ year, title, source, verified, dependsOn, design });
 
+/** The same of an edition that tells systems apart. */
+const bySystems = <Stated>(...given: Parameters<typeof row<Stated>>): CodeEdition<Stated> => ({
+  ...row(...given),
+  verified: 'memory',
+  note: 'Formula restated; what it gave each system (K, R_w, R) is from memory.',
+});
+
 export type UsEdition =
   'ubc-1927' | 'ubc-1935' | 'ubc-1949' | 'ubc-1961' | 'ubc-1976' | 'ubc-1988' | 'ubc-1997' | 'asce7-2002';
 
@@ -72,23 +79,23 @@ export const US_EDITIONS: EditionTable<UsEdition> = {
     const zone_share = ZONE_SHARES[zone] ?? 0;
     return working(apply(UBC_1949, { zone_share, storeys: building.storeys.value }, trace), Infinity);
   }),
-  'ubc-1961': row(1961, UBC_1961, byPlan, (facts, { zone_factor }, trace) => {
+  'ubc-1961': bySystems(1961, UBC_1961, byPlan, (facts, { zone_factor }, trace) => {
     const structure_factor = structureFactor(facts);
     const period_s = pastPeriod_s(facts, trace);
     return working(apply(UBC_1961, { zone_factor, structure_factor, period_s }, trace), 8 / structure_factor);
   }),
-  'ubc-1976': row(1976, UBC_1976, byPlan, (facts, { zone_factor, site_factor }, trace) => {
+  'ubc-1976': bySystems(1976, UBC_1976, byPlan, (facts, { zone_factor, site_factor }, trace) => {
     const structure_factor = structureFactor(facts);
     const period_s = pastPeriod_s(facts, trace);
     const coefficient = apply(UBC_1976, { zone_factor, structure_factor, site_factor, period_s }, trace);
     return working(coefficient, 8 / structure_factor);
   }),
-  'ubc-1988': row(1988, UBC_1988, height, ({ system, height_m }, { zone_factor, site_factor }, trace) => {
+  'ubc-1988': bySystems(1988, UBC_1988, height, ({ system, height_m }, { zone_factor, site_factor }, trace) => {
     const { periodClass, rw } = SYSTEM_FACTORS[system];
     const period_s = applyAny(PERIOD_1988[periodClass], { height_m }, trace);
     return working(apply(UBC_1988, { zone_factor, site_factor, reduction_r: rw, period_s }, trace), rw);
   }),
-  'ubc-1997': row(1997, UBC_1997, height, ({ system, height_m }, { ca_g, cv_g, zone_factor, nv }, trace) => {
+  'ubc-1997': bySystems(1997, UBC_1997, height, ({ system, height_m }, { ca_g, cv_g, zone_factor, nv }, trace) => {
     const { periodClass, r1997 } = SYSTEM_FACTORS[system];
     const period_s = applyAny(PERIOD_1988[periodClass], { height_m }, trace);
     const zone_floor = zone_factor >= 0.4 ? 0.8 * zone_factor * nv : 0;
@@ -96,7 +103,7 @@ export const US_EDITIONS: EditionTable<UsEdition> = {
     return { coefficient, levelFactor: 1, reduction: r1997 };
   }),
   // In print in 2000 as the International Building Code, which names it.
-  'asce7-2002': row(2000, ASCE7_2002, height, ({ system, height_m }, { sds_g, sd1_g, s1_g }, trace) => {
+  'asce7-2002': bySystems(2000, ASCE7_2002, height, ({ system, height_m }, { sds_g, sd1_g, s1_g }, trace) => {
     const { periodClass, r2002 } = SYSTEM_FACTORS[system];
     const period_s = applyAny(PERIOD_2002[periodClass], { height_m }, trace);
     const near_fault_s1_g = s1_g >= 0.6 ? s1_g : 0;

@@ -1,6 +1,6 @@
 /** The true attributes of a building in a world, and its true ln S: worked out by `assess` with every spread at 0. */
 import { assess, isRanked } from '../../../src/engineering/assess/assess.js';
-import { isDesigned } from '../../../src/engineering/assess/capacity.js';
+import { isDesigned } from '../../../src/engineering/assess/edition-rows.js';
 import { casesOf } from '../../../src/engineering/assess/cases.js';
 import { detailingOf, editionOf } from '../../../src/engineering/assess/code-history.js';
 import type { EditionId } from '../../../src/engineering/assess/code-history.js';
