@@ -45,8 +45,8 @@ export interface PlannedSurvey {
 }
 
 /**
- * Plans the visits to make next for the study at `path`: always the one that is worth most for an hour (or for money, where only that is
- * limited) until hours and money are spent. Writes survey-<run>.html into the study's folder of reports, unless told not to.
+ * Plans the visits to make next for the study at `path`: always the one that is worth most for an hour, or for money, or for both where both are
+ * limited and that is worth more in all, until hours and money are spent. Writes survey-<run>.html into the study's folder of reports, unless told not to.
  * @throws UserError when neither is limited, for a study without runs, an unknown run, money that no visit costs, or hours or money that no visit fits into.
  * @example
  * const { plan } = await surveyStudy('study.yaml', { hours: 16 });
@@ -57,20 +57,19 @@ export async function surveyStudy(
 ): Promise<PlannedSurvey> {
   if (hours === Infinity && money === Infinity)
     throw new UserError('a survey is planned within hours or money: say how many, for instance --hours 16');
-  const cost: Cost = hours === Infinity ? 'money' : 'hours';
   const limits = { hours, money };
   const { plan, tooLarge } = await withStudyDatabase(path, async (db, loaded) => {
     const { study, file } = loaded;
     const visits = visitsOf(study);
-    if (cost === 'money' && visits.every((visit) => visit.money === 0))
+    if (money < Infinity && visits.every((visit) => visit.money === 0))
       throw new UserError('no visit costs money in this study: set survey.money_per_hour or the money of a visit', {
         file,
         key: 'survey',
       });
     const { run: runId } = await chosenRun(db, loaded, { run });
     const tooLarge = visits.filter((visit) => !fits(visit, limits));
-    if (tooLarge.length === visits.length) throw noneFits(visits, limits, cost, file);
-    return { plan: await planSurvey(db, runId, { visits, limits, cost }, report), tooLarge };
+    if (tooLarge.length === visits.length) throw noneFits(visits, limits, file);
+    return { plan: await planSurvey(db, runId, { visits, limits }, report), tooLarge };
   });
   const sheet = csv === undefined ? null : await writeNamed(csv, fieldSheet(plan), '--csv');
   if (!page) return { plan, tooLarge, csv: sheet, page: null };
@@ -81,7 +80,8 @@ export async function surveyStudy(
   return { plan, tooLarge, csv: sheet, page: resolve(into, name) };
 }
 
-function noneFits(visits: readonly Visit[], { hours, money }: Limits, cost: Cost, file: string): UserError {
+function noneFits(visits: readonly Visit[], { hours, money }: Limits, file: string): UserError {
+  const cost = hours === Infinity ? 'money' : 'hours';
   const cheapest = visits.reduce((a, b) => (b[cost] < a[cost] ? b : a));
   const given = [
     ...(hours === Infinity ? [] : [`${formatNumber(hours, 3)} h`]),

@@ -139,7 +139,7 @@ function Walk({ walk: { block, stops, hours } }: { readonly walk: BlockWalk }): 
 function Order({ plan: { steps, cost } }: { readonly plan: SurveyPlan }): ComponentChild {
   const table = {
     caption: 'Visits in the order of their worth for their cost',
-    head: ['Visit', 'Building', 'Rank', 'Kind', 'Because', 'Worth', cost === 'hours' ? 'Worth per hour' : 'Worth per money', 'Hours so far', 'Expected wrong places'],
+    head: ['Visit', 'Building', 'Rank', 'Kind', 'Because', 'Worth', { hours: 'Worth per hour', money: 'Worth per money', both: 'Worth per % of hours and money' }[cost], 'Hours so far', 'Expected wrong places'],
     rows: steps.map((step) => [
       String(step.place),
       step.name === null ? step.id : `${step.id} ${step.name}`,

@@ -33,7 +33,7 @@ export async function surveyOutlook(
 ): Promise<SurveyOutlook | null> {
   if (basis.count > MOST_BUILDINGS || basis.assessed.id.length <= basis.listSize) return null;
   const limits = { hours: REACH_H, money: Infinity };
-  const plan = await planOn(db, basis, { visits: visitsOf(study), limits, cost: 'hours' });
+  const plan = await planOn(db, basis, { visits: visitsOf(study), limits });
   const half = 0.5 * plan.expected_wrong_before;
   const week = plan.steps.filter(({ hours_so_far }) => hours_so_far <= WEEK_H + 1e-9);
   return {

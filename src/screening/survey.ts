@@ -6,7 +6,7 @@ import type { YearPools } from '../engineering/building-columns.js';
 import { buildingReader } from '../engineering/building-columns.js';
 import type { SurveyVisit } from '../engineering/page-contract.js';
 import type { Candidate, Cost, Limits, PlannedVisit, Visit } from '../engineering/priority/campaign.js';
-import { knownSet, planCampaign, withinReach } from '../engineering/priority/campaign.js';
+import { knownSet, bestCampaign, withinReach } from '../engineering/priority/campaign.js';
 import type { Mixture } from '../engineering/priority/mixture.js';
 import { commonTo, rankBasis } from '../engineering/priority/rank.js';
 import type { RankBasis } from '../engineering/priority/rank.js';
@@ -35,8 +35,6 @@ const BLOCK = 65_536;
 export interface SurveyWish {
   readonly visits: readonly Visit[];
   readonly limits: Limits;
-  /** What visits are weighed by. */
-  readonly cost: Cost;
 }
 
 /** One visit of the plan, with where its building stands and what it costs. */
@@ -51,6 +49,7 @@ export interface SurveyStep extends SurveyVisit {
 export interface SurveyPlan {
   readonly run: number;
   readonly list_size: number;
+  /** What its visits are weighed by. */
   readonly cost: Cost;
   readonly steps: readonly SurveyStep[];
   readonly buildings: number;
@@ -128,7 +127,7 @@ export async function planSurvey(
 export async function planOn(
   db: Database,
   { runId, inventoryId, settings, grids, pools, count, listSize, expectedWrong, assessed, ranked }: SurveyBasis,
-  { visits, limits, cost }: SurveyWish,
+  { visits, limits }: SurveyWish,
   report: Report = () => undefined,
 ): Promise<SurveyPlan> {
   report('weighing', 0);
@@ -161,7 +160,7 @@ export async function planOn(
   const rankOf = new Int32Array(count);
   order.forEach((at, place) => (rankOf[assessed.index[at]!] = place + 1));
   candidates.sort((a, b) => rankOf[a.index]! - rankOf[b.index]!);
-  const planned = planCampaign(candidates, visits, limits, cost);
+  const { cost, planned } = bestCampaign(candidates, visits, limits);
   const all = candidates.map((one) => valueLeft(one, visits)).sort((a, b) => b - a);
   const valueOfAll = all.reduce((sum, value) => sum + value, 0);
   let wrong = expectedWrong;

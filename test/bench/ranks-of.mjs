@@ -51,7 +51,7 @@ try {
   const expectedWrong = ranking.expectedWrong;
   const basis = { runId: 1, inventoryId, settings, grids, pools, count, listSize, expectedWrong, assessed };
   basis.ranked = { ...ranking, mixtures, draws };
-  const wish = { visits: visitsOf(study), limits: { hours: 40, money: Infinity }, cost: 'hours' };
+  const wish = { visits: visitsOf(study), limits: { hours: 40, money: Infinity } };
   const plan = await timed('plan of 40 h, its most promising weighed', () => planOn(db, basis, wish));
   const digests = { worth: digest(bytesOf(worth)), plan: digest(JSON.stringify(plan)) };
   for (const kind of ['numbers', 'wholes', 'words'])

@@ -328,7 +328,6 @@ describe('takeAnswers', () => {
     const plan = await planSurvey(db, runId, {
       visits: visitsOf(loaded.study),
       limits: { hours: 10, money: Infinity },
-      cost: 'hours',
     });
     db.close();
     const [head = '', ...lines] = fieldSheet(plan).replace('\ufeff', '').trimEnd().split('\r\n');

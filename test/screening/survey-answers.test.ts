@@ -51,7 +51,6 @@ describe('planSurvey, between answers and the next screening', () => {
     planSurvey(db, run, {
       visits: visitsOf(loaded.study),
       limits: { hours: 200, money: Infinity },
-      cost: 'hours',
     });
   const askedAt = ({ steps }: SurveyPlan, id: string): readonly string[] => [
     ...new Set(steps.filter((step) => step.id === id).flatMap(({ asks }) => asks)),

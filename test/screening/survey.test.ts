@@ -24,7 +24,7 @@ describe('planSurvey', () => {
       try {
         const { runId, summary, taken } = await screen(db, loaded, { made: MADE, outlook: true });
         const visits = visitsOf(loaded.study);
-        const wish = { visits, limits: { hours: 30, money: Infinity }, cost: 'hours' as const };
+        const wish = { visits, limits: { hours: 30, money: Infinity } };
         const plan = await planSurvey(db, runId, wish);
         expect(plan.steps.length).toBeGreaterThan(10);
         expect(plan.hours).toBeLessThanOrEqual(30 + 1e-9);
@@ -127,7 +127,7 @@ describe('planSurvey', () => {
     try {
       const { runId, summary } = await screen(db, loaded, { made: MADE, outlook: true });
       expect(summary.survey).toBeNull();
-      const wish = { visits: visitsOf(loaded.study), limits: { hours: 8, money: Infinity }, cost: 'hours' as const };
+      const wish = { visits: visitsOf(loaded.study), limits: { hours: 8, money: Infinity } };
       await expect(planSurvey(db, runId, wish)).rejects.toThrow('holds all 227 ranked buildings');
     } finally {
       db.close();

@@ -56,7 +56,7 @@ function lines({ plan, tooLarge, csv, page }: PlannedSurvey, columns: number): s
               { title: 'Rank', right: true },
               { title: 'Visit', shrinkTo: 6 },
               { title: 'Find out', shrinkTo: 14 },
-              { title: cost === 'hours' ? 'Worth/h' : 'Worth/money', right: true, spare: 1 },
+              { title: { hours: 'Worth/h', money: 'Worth/money', both: 'Worth/% spent' }[cost], right: true, spare: 1 },
               { title: 'Hours', right: true },
               ...(money ? [{ title: 'Money', right: true }] : []),
               { title: 'Wrong', right: true },

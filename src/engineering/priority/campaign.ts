@@ -30,8 +30,8 @@ export interface Limits {
   readonly money: number;
 }
 
-/** What visits are weighed by. */
-export type Cost = 'hours' | 'money';
+/** What visits are weighed by; both: by the share of hours and of money they take, added up, in per cent. */
+export type Cost = 'hours' | 'money' | 'both';
 
 export interface PlannedVisit {
   readonly index: number;
@@ -70,6 +70,25 @@ interface Step {
 }
 
 /**
+ * The best of the plans there are within `limits`: weighed by what is limited; where both are, by either and by both, and the plan that is
+ * worth most in all is taken, so that more hours never make it worth less than the money alone would buy.
+ */
+export function bestCampaign(
+  candidates: readonly Candidate[],
+  visits: readonly Visit[],
+  limits: Limits,
+): { readonly cost: Cost; readonly planned: readonly PlannedVisit[] } {
+  const isLimited = (what: 'hours' | 'money'): boolean => limits[what] < Infinity;
+  const costs: readonly Cost[] =
+    isLimited('hours') && isLimited('money') ? ['hours', 'money', 'both'] : isLimited('money') ? ['money'] : ['hours'];
+  const plans = costs.map((cost) => {
+    const planned = planCampaign(candidates, visits, limits, cost);
+    return { cost, planned, value: planned.reduce((sum, { value }) => sum + value, 0) };
+  });
+  return plans.reduce((best, plan) => (plan.value > best.value * (1 + 1e-9) ? plan : best));
+}
+
+/**
  * Plans visits until neither hours nor money allow another that is worth anything. Equal ratios go in the order of the candidates,
  * then of the visits. A visit that no longer fits is passed over for one that does.
  */
@@ -93,13 +112,14 @@ export function planCampaign(
     const all = state.candidate.worth.value.at(-1)!;
     if (all > largest) largest = all;
   }
-  for (const state of states) state.next = bestStep(state, visits, left, cost, NOTHING * largest);
+  const take = (state: State): Step | null =>
+    bestStep(state, visits, left, (visit) => costOf(visit, limits, cost), NOTHING * largest);
+  for (const state of states) state.next = take(state);
   const planned: PlannedVisit[] = [];
   for (;;) {
     let best: State | null = null;
     for (const state of states) {
-      if (state.next !== null && !fits(state.next.visit, left))
-        state.next = bestStep(state, visits, left, cost, NOTHING * largest);
+      if (state.next !== null && !fits(state.next.visit, left)) state.next = take(state);
       if (state.next !== null && (best?.next == null || state.next.ratio > best.next.ratio)) best = state;
     }
     if (best?.next == null) return planned;
@@ -123,11 +143,11 @@ export function planCampaign(
     best.taken.add(visit.name);
     best.value = value;
     best.wrong = wrong;
-    best.next = bestStep(best, visits, left, cost, NOTHING * largest);
+    best.next = take(best);
   }
 }
 
-function sum(planned: readonly PlannedVisit[], what: Cost): number {
+function sum(planned: readonly PlannedVisit[], what: 'hours' | 'money'): number {
   return planned.at(-1)?.[what] ?? 0;
 }
 
@@ -167,14 +187,27 @@ function foundWith({ candidate, found }: State, visit: Visit, unknown: Unknown):
   return 1 - (1 - (found.get(unknown) ?? 0)) * (1 - chanceOf(candidate, visit, unknown));
 }
 
-function bestStep(state: State, visits: readonly Visit[], left: Limits, cost: Cost, least: number): Step | null {
+/** What of it counts as the cost of a visit. */
+function costOf({ hours, money }: Visit, limits: Limits, cost: Cost): number {
+  if (cost !== 'both') return cost === 'hours' ? hours : money;
+  const share = (what: number, limit: number): number => (limit > 0 ? what / limit : what > 0 ? Infinity : 0);
+  return 100 * (share(hours, limits.hours) + share(money, limits.money));
+}
+
+function bestStep(
+  state: State,
+  visits: readonly Visit[],
+  left: Limits,
+  costOfVisit: (visit: Visit) => number,
+  least: number,
+): Step | null {
   let best: Step | null = null;
   for (const visit of visits) {
     if (state.taken.has(visit.name) || !fits(visit, left) || asked(state, visit).length === 0) continue;
     const value = valueAt(state.candidate.worth, (unknown) => foundWith(state, visit, unknown));
     const gain = value - state.value;
     if (!(gain > least)) continue;
-    const ratio = gain / Math.max(visit[cost], 1e-9);
+    const ratio = gain / Math.max(costOfVisit(visit), 1e-9);
     if (best === null || ratio > best.ratio) best = { visit, value, ratio };
   }
   return best;

@@ -9,11 +9,11 @@ import { askedWords } from './words.js';
 /** Expected wrong places of the list over the cost of the visits. */
 export function gainChart(plan: SurveyPlan): Chart {
   const { steps, cost, expected_wrong_before, expected_wrong_after } = plan;
-  const unit = cost === 'hours' ? 'h' : 'money';
+  const unit = cost !== 'money' ? 'h' : 'money';
   const rows = [
     { spent: 0, wrong: expected_wrong_before },
     ...steps.map((step) => ({
-      spent: cost === 'hours' ? step.hours_so_far : step.money_so_far,
+      spent: cost !== 'money' ? step.hours_so_far : step.money_so_far,
       wrong: step.expected_wrong_places,
     })),
   ];
@@ -23,7 +23,7 @@ export function gainChart(plan: SurveyPlan): Chart {
     sentence: `From about ${formatNumber(expected_wrong_before, 2)} to about ${formatNumber(expected_wrong_after, 2)} places expected to be wrong, over ${formatNumber(rows.at(-1)?.spent ?? 0, 3)} ${unit} of visits in the order of the plan.`,
     table: {
       caption: 'Expected wrong places after each visit',
-      head: ['Visit', cost === 'hours' ? 'Hours so far' : 'Money so far', 'Expected wrong places'],
+      head: ['Visit', cost !== 'money' ? 'Hours so far' : 'Money so far', 'Expected wrong places'],
       rows: rows.map(({ spent, wrong }, i) => [String(i), formatNumber(spent, 3), formatNumber(wrong, 3)]),
     },
     data: { gain: columnsOf(rows) },
@@ -40,7 +40,7 @@ export function gainChart(plan: SurveyPlan): Chart {
         x: {
           field: 'spent',
           type: 'quantitative',
-          title: cost === 'hours' ? 'Hours of visits' : 'Money for visits',
+          title: cost !== 'money' ? 'Hours of visits' : 'Money for visits',
         },
         y: {
           field: 'wrong',

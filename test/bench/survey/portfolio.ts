@@ -71,7 +71,7 @@ export async function portfolioOf(path: string, hours: number): Promise<Portfoli
     const { runId, taken } = await screen(db, loaded, { made: MADE });
     const { settings, summary } = await readRun(db, runId);
     const visits = visitsOf(loaded.study);
-    const plan = await planSurvey(db, runId, { visits, limits: { hours, money: Infinity }, cost: 'hours' });
+    const plan = await planSurvey(db, runId, { visits, limits: { hours, money: Infinity } });
     const contexts = contextsOf(settings, loaded.grids);
     const pools = await readPools(db, taken.inventoryId);
     const { columns, rows, notRanked } = await readBuildings(

@@ -1,5 +1,5 @@
 import { describe, expect, it } from 'vitest';
-import { knownSet, planCampaign, withinReach } from '../../../src/engineering/priority/campaign.js';
+import { bestCampaign, knownSet, planCampaign, withinReach } from '../../../src/engineering/priority/campaign.js';
 import type { Candidate, Visit } from '../../../src/engineering/priority/campaign.js';
 import type { Worth } from '../../../src/engineering/priority/survey-value.js';
 import { random } from '../../support/engineering-random.js';
@@ -14,6 +14,36 @@ const adding = (system: number, year: number): Worth => ({
 const STREET: Visit = { name: 'street', hours: 0.5, money: 50, finds: { system: 1 } };
 const DESK: Visit = { name: 'desk', hours: 1, money: 20, finds: { year: 1 } };
 const free = { hours: Infinity, money: Infinity };
+
+describe('bestCampaign', () => {
+  const worthOf = (planned: readonly { readonly value: number }[]): number =>
+    planned.reduce((sum, { value }) => sum + value, 0);
+  const drawings: Visit = { name: 'drawings', hours: 0.5, money: 400, finds: { system: 1, year: 1 } };
+  const many: Candidate[] = Array.from({ length: 12 }, (_, index) => ({ index, worth: adding(1 + 0.1 * index, 1) }));
+
+  it('weighs by what is limited', () => {
+    expect(bestCampaign(many, [STREET, drawings], { hours: 3, money: Infinity }).cost).toBe('hours');
+    expect(bestCampaign(many, [STREET, drawings], { hours: Infinity, money: 500 }).cost).toBe('money');
+  });
+
+  it('is worth no less with hours beside the money than the money alone buys, nor with money beside the hours', () => {
+    for (const money of [100, 430, 1000, 2500])
+      for (const hours of [1, 2, 4, 1000]) {
+        const both = worthOf(bestCampaign(many, [STREET, drawings], { hours, money }).planned);
+        const byHours = planCampaign(many, [STREET, drawings], { hours, money }, 'hours');
+        const byMoney = planCampaign(many, [STREET, drawings], { hours, money }, 'money');
+        expect(both).toBeGreaterThanOrEqual(Math.max(worthOf(byHours), worthOf(byMoney)) * (1 - 1e-9));
+        if (hours === 1000)
+          expect(both).toBeGreaterThanOrEqual(
+            worthOf(bestCampaign(many, [STREET, drawings], { hours: Infinity, money }).planned) * (1 - 1e-9),
+          );
+      }
+    // by hours alone the dear visit wins and the money is gone after two: 2.2 + 2.3; for the money ten street visits are worth far more
+    const wealthy = bestCampaign(many, [STREET, drawings], { hours: 1000, money: 900 });
+    expect(wealthy.cost).not.toBe('hours');
+    expect(wealthy.planned.at(-1)!.money).toBeLessThanOrEqual(900);
+  });
+});
 
 describe('planCampaign', () => {
   it('takes the visits in the order of value for cost and stops at the limit', () => {
