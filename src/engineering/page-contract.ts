@@ -1,5 +1,6 @@
 /** What the dashboard page carries: filled by screening, drawn by reports, read by the page's script. */
 import type { AssessSettings } from './assess/settings.js';
+import type { SpreadShare } from './assess/spread-shares.js';
 import type { BuildingColumns, YearPools } from './building-columns.js';
 import type { BudgetOutlook, SensitivityOutlook, SurveyOutlook } from './page-outlook.js';
 import type { CarriedGrid } from './spectrum/grid-carry.js';
@@ -169,6 +170,8 @@ export interface PageSummary {
   readonly cautions: readonly string[];
   /** Left out where none was planned with the run. */
   readonly survey?: SurveyOutlook | null;
+  /** Of each listed building, the first place first, what its priority is most uncertain by, and of what a visit can find out; left out where none was asked. */
+  readonly doubts?: readonly (readonly SpreadShare[])[] | undefined;
   /** What the study's money buys, and what the list hangs on; not in runs of earlier versions, null for large inventories. */
   readonly budget?: BudgetOutlook | null | undefined;
   readonly sensitivity?: SensitivityOutlook | null | undefined;

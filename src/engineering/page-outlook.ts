@@ -12,6 +12,8 @@ export interface SurveyVisit {
   readonly asks: readonly Unknown[];
   /** Share of the building's spread (variance of ln S) that each unknown it asks for stands for. */
   readonly shares: readonly number[];
+  /** A visit planned before this one asks the building for it too: it is for what that one does not find. */
+  readonly again?: boolean;
   /** In units of the priority of the median building. */
   readonly value: number;
   readonly value_per_cost: number;

@@ -3,7 +3,7 @@ import { formatCount, formatNumber, formatShare } from '../engineering/format.js
 import type { PageData } from '../engineering/page-contract.js';
 import { answerNotes, answerSentence, attributeTotal, decisiveAttributes, LEVEL_OF_WORK, orderSentence, slopeSentence } from './dashboard/answers.js';
 import { capacityWords, demandPlaces, governingPeriod, listLength, numberAt } from './dashboard/reading.js';
-import { middleSentence, reasonTeller } from './dashboard/reasons.js';
+import { doubtWords, middleSentence, reasonTeller, tellsDoubts } from './dashboard/reasons.js';
 import { visitsTable } from './dashboard/sections/survey.js';
 import type { DataTable } from './dashboard/charts/chart.js';
 import { budgetSentences, budgetTable, sensitivitySentences, switchesTable } from './decide/words.js';
@@ -81,12 +81,14 @@ function listPart(data: PageData): string {
       formatNumber(numberAt(data, 'sa_g', i), 3),
       capacityWords(data, i),
       reason(i),
+      ...(tellsDoubts(data) ? [doubtWords(data, i)] : []),
     ];
   });
-  const head = ['Rank', 'Id', 'Name', 'Block', 'Chance', 'Band of rank', 'Tie group', 'Rank by demand', 'T (s)', 'S_a (g)', 'Capacity (g)', 'Main reason'];
+  const head = ['Rank', 'Id', 'Name', 'Block', 'Chance', 'Band of rank', 'Tie group', 'Rank by demand', 'T (s)', 'S_a (g)', 'Capacity (g)', 'Main reason', ...(tellsDoubts(data) ? ['Uncertain because'] : [])];
   const notes = [
     'Chance: that the building truly belongs to the list. Band: where its true rank lies, 5 to 95 %. T: median period in the governing direction. S_a and capacity: of the most likely case.',
     middleSentence(data),
+    ...(tellsDoubts(data) ? ['Uncertain because: the largest share of the spread of its priority (the variance of ln S), and the largest that a visit can find out.'] : []),
     ...(shown < places ? [`The first ${formatCount(shown)} of ${formatCount(places)} places; all of them stand in ranking.csv.`] : []),
   ];
   return [markdownTable(head.map(markdownText), rows, [0, 4, 5, 6, 7, 8, 9, 10]), ...notes.map((note) => note.replaceAll('_', '\\_'))].join('\n\n');

@@ -11,6 +11,7 @@ import type { Report } from './assess-inventory.js';
 import { assumptionsOf } from './assumptions.js';
 import { methodsFingerprint } from './fingerprints.js';
 import { budgetOutlook } from './budget-outlook.js';
+import { doubtsOutlook } from './doubts-outlook.js';
 import { gridSpreads } from './grid-spreads.js';
 import { keepRanked } from './keep-results.js';
 import { readPools } from './read-buildings.js';
@@ -68,6 +69,7 @@ export async function keepRun(
     ranked: { ...ranked.ranking, mixtures: assessed.mixtures, draws: ranked.draws },
   };
   const survey = options.outlook === true ? await surveyOutlook(db, basis, study) : null;
+  const doubts = options.outlook === true ? await doubtsOutlook(db, basis) : null;
   assessed.mixtures.length = 0;
   assessed.flat.length = 0;
   report('keeping');
@@ -82,6 +84,7 @@ export async function keepRun(
     assumptions: register,
     slopes,
     survey,
+    ...(doubts === null ? {} : { doubts }),
     ...(loaded.grids.size === 0 ? {} : { grids: await gridSpreads(settings, loaded.grids, db, taken, assessed.index) }),
   };
   await db.run('INSERT INTO run VALUES (?, ?, ?, ?, ?, ?, ?, ?, ?, ?, ?, ?, ?, ?, ?, ?)', [

@@ -37,6 +37,7 @@ export type StoredSummary = Pick<
   | 'assumptions'
   | 'slopes'
   | 'survey'
+  | 'doubts'
   | 'budget'
   | 'sensitivity'
   | 'grids'

@@ -169,7 +169,7 @@ export async function planOn(
     // a building wrongly in and one wrongly out are one wrong place
     wrong -= 0.5 * (one.wrongBefore - one.wrongAfter);
     const building = { ...named.get(one.index)!, rank: rankOf[one.index]! };
-    return stepOf(one, i, building, shares.get(one.index)!, Math.max(wrong, 0));
+    return stepOf(one, i, planned.slice(0, i), building, shares.get(one.index)!, Math.max(wrong, 0));
   });
   return {
     run: runId,
@@ -259,18 +259,23 @@ async function namesOf(
 }
 
 function stepOf(
-  { visit, asks, value, valuePerCost, hours, money }: PlannedVisit,
+  { index, visit, asks, value, valuePerCost, hours, money }: PlannedVisit,
   i: number,
+  before: readonly PlannedVisit[],
   named: Named & Pick<SurveyStep, 'rank'>,
   shares: ReadonlyMap<Unknown, number>,
   wrong: number,
 ): SurveyStep {
+  const largest = Math.max(...asks.map((unknown) => shares.get(unknown)!));
+  const reason = asks.find((unknown) => shares.get(unknown) === largest)!;
+  const isAgain = before.some((one) => one.index === index && one.asks.includes(reason));
   return {
     place: i + 1,
     ...named,
     visit: visit.name,
     asks,
     shares: asks.map((unknown) => shares.get(unknown)!),
+    ...(isAgain ? { again: true } : {}),
     value,
     value_per_cost: valuePerCost,
     hours: visit.hours,

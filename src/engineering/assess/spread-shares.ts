@@ -2,9 +2,10 @@
 import type { Building } from '../building.js';
 import { mixtureMoments } from '../priority/mixture.js';
 import { shareOf } from '../priority/survey-value.js';
-import type { Unknown } from '../priority/survey-value.js';
+import type { Unknown, Unknowns } from '../priority/survey-value.js';
 import { casesOf } from './cases.js';
 import { slopeFor } from './context.js';
+import { peopleOf } from './people.js';
 import type { AssessContext, ContextSpectrum } from './context.js';
 import { isChecked } from './strength-check.js';
 import { designedShare, unknownsOf } from './unknowns.js';
@@ -36,14 +37,16 @@ export function spreadShares(
   if (unknowns === null) return null;
   const { sd } = mixtureMoments(unknowns.parts);
   if (!(sd > 0)) return null;
-  const shares: SpreadShare[] = unknowns.learnable.map((one) => ({
-    what: WORDS[one.unknown],
-    share: shareOf(unknowns, one),
-    learnable: true,
-  }));
+  const shares = learnableShares(unknowns);
   const { spreads, rankBy } = context.settings;
+  const add = (what: string, variance: number): void => {
+    if (variance > 1e-12) shares.push({ what, share: Math.min(1, variance / (sd * sd)), learnable: false });
+  };
+  const k = slopeFor(context, spectrum.name);
+  if (rankBy === 'people') add('people and their hours, however well known', peopleLeft(building, unknowns, context));
+  if (rankBy !== 'demand' && building.capacity_sa_g > 0)
+    add('the finished assessment itself', k * k * spreads.assessedCapacity * spreads.assessedCapacity);
   if (rankBy !== 'demand' && !(building.capacity_sa_g > 0)) {
-    const k = slopeFor(context, spectrum.name);
     const cases = casesOf(building, context);
     const checked = typeof cases !== 'string' && cases.list.every((which) => isChecked(building, which, context));
     const { overstrength, era, eraTable, strengthCheck } = spreads;
@@ -53,18 +56,45 @@ export function spreadShares(
     const variance = checked
       ? strengthCheck * strengthCheck
       : overstrength * overstrength + era * era + undesigned * eraTable * eraTable;
-    shares.push({
-      what: checked ? 'the strength check itself' : 'strength beyond what a code asks, and scatter within an era',
-      share: Math.min(1, (k * k * variance) / (sd * sd)),
-      learnable: false,
-    });
+    add(checked ? 'the strength check itself' : 'strength as built, beyond what its code asked', k * k * variance);
   }
   const rest = 1 - shares.reduce((sum, { share }) => sum + share, 0);
-  if (rest > 0)
+  const together = unknowns.learnable.filter(({ values }) => values !== null).length > 1;
+  if (rest > 1e-9)
     shares.push({
-      what: 'the period, the people that remain uncertain, and what the unknowns do together',
+      what: together ? 'the error of the period, and what the unknowns do together' : 'the error of the period',
       share: rest,
       learnable: false,
     });
   return shares.sort((a, b) => b.share - a.share);
+}
+
+/** Of each unknown; where neither use nor people are known the two tell part of the same and stand together. */
+function learnableShares(unknowns: Unknowns): SpreadShare[] {
+  const { learnable } = unknowns;
+  const count = learnable.find(({ beside }) => beside !== undefined);
+  const shareWithUse = (): number =>
+    learnable
+      .filter((one) => one === count || one.unknown === count?.beside?.unknown)
+      .reduce((sum, one) => sum + shareOf(unknowns, one === count ? { ...one, tau: one.beside!.tau } : one), 0);
+  return learnable.flatMap((one): SpreadShare[] => {
+    if (count !== undefined && one.unknown === count.beside!.unknown) return [];
+    return one === count
+      ? [{ what: 'use and people unknown', share: shareWithUse(), learnable: true }]
+      : [{ what: WORDS[one.unknown], share: shareOf(unknowns, one), learnable: true }];
+  });
+}
+
+/** Variance of ln S that is left of the people once all is found out of them that a visit can. */
+function peopleLeft(building: Building, { learnable }: Unknowns, context: AssessContext): number {
+  const people = peopleOf(building, context);
+  if (typeof people === 'string') return 0;
+  const sigma = context.assumed.peopleWeight * people.sigma;
+  let left = sigma * sigma;
+  for (const { unknown, tau, beside } of learnable) {
+    if (unknown !== 'use' && unknown !== 'occupants') continue;
+    const takes = Number(beside?.tau ?? tau);
+    left -= takes * takes;
+  }
+  return Math.max(left, 0);
 }

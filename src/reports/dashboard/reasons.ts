@@ -1,5 +1,5 @@
 /** The main reason for a place: the terms of ln S that lift a building most above the middle of the portfolio. */
-import { editionWords, formatNumber, formatQuantity, plainWords } from '../../engineering/format.js';
+import { editionWords, formatNumber, formatQuantity, formatShare, plainWords } from '../../engineering/format.js';
 import type { PageData } from '../../engineering/page-contract.js';
 import { middle, numberAt, rankedShown, textAt } from './reading.js';
 
@@ -84,4 +84,14 @@ function caseWords(data: PageData, i: number): string {
   const words = `${plainWords(textAt(data, 'case_system', i))}, ${capacityBasis(data, i)}`;
   const system = data.buildings.inputs.words.system[i] ?? 'unknown';
   return system === 'unknown' ? `most likely ${words}` : words;
+}
+
+/** What the place of listed building i is most uncertain by; empty where the run did not tell. */
+export function doubtWords({ summary: { doubts } }: PageData, i: number): string {
+  return (doubts?.[i] ?? []).map(({ what, share }, at) => `${at === 0 ? '' : 'for a visit: '}${what}: ${formatShare(share)}`).join('; ');
+}
+
+/** True where the run told it of any. */
+export function tellsDoubts({ summary: { doubts } }: PageData): boolean {
+  return doubts?.some((doubt) => doubt.length > 0) === true;
 }

@@ -21,12 +21,12 @@ export function askedWords({ asks }: Pick<SurveyVisit, 'asks'>): string {
 }
 
 /** "lateral system unknown: 61 % of the spread", the largest unknown of those asked for. */
-export function reasonWord({ asks, shares }: Pick<SurveyVisit, 'asks' | 'shares'>): string {
+export function reasonWord({ asks, shares, again }: Pick<SurveyVisit, 'asks' | 'shares' | 'again'>): string {
   const share = Math.max(...shares);
   const unknown = asks[shares.indexOf(share)];
   return unknown === undefined
     ? ''
-    : `${ASKED[unknown]} ${unknown === 'occupants' ? 'not counted' : unknown === 'height' ? 'inferred' : 'unknown'}: ${formatShare(share)} of the spread`;
+    : `${ASKED[unknown]} ${unknown === 'occupants' ? 'not counted' : unknown === 'height' ? 'inferred' : 'unknown'}: ${formatShare(share)} of the spread${again === true ? ', where a visit before has not found it' : ''}`;
 }
 
 /** Worth for an hour, or for money; a dash where the visit costs nothing of it. */

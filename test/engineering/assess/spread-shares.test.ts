@@ -36,14 +36,37 @@ describe('spreadShares', () => {
     expect(seen).toBeGreaterThan(40);
   });
 
-  it('blames the use where nothing but the use is unknown, by as much as knowing it takes off', () => {
-    const one = building({ use: 'unknown', floor_area_m2: given(500), years: [1990], occupants_peak: NaN });
-    const found = sharesOf(one).find(({ what }) => what === 'use unknown');
+  // of people counted and not, with the use unknown: by as much as knowing it, or both, takes off
+  it.each([
+    ['use unknown', { occupants_peak: 40 }, { use: 'other' }],
+    ['use and people unknown', { occupants_peak: NaN }, { use: 'other', occupants_peak: 40 }],
+    ['people not counted', { use: 'office', occupants_peak: NaN }, { occupants_peak: 40 }],
+  ] as const)('blames %s by as much as knowing takes off', (what, unknown, known) => {
+    const one = building({ use: 'unknown', floor_area_m2: given(500), years: [1990], ...unknown });
+    const found = sharesOf(one).find((share) => share.what === what);
     const before = assess(one, context);
-    const after = assess({ ...one, use: 'other' }, context);
+    const after = assess({ ...one, ...known }, context);
     if (!isRanked(before) || !isRanked(after)) throw new Error('not ranked');
     expect(found?.share).toBeCloseTo(1 - (after.lnPrioritySd / before.lnPrioritySd) ** 2, 6);
     expect(found?.learnable).toBe(true);
+  });
+
+  it('names what a finished assessment leaves open, and the people, each by its own spread', () => {
+    const one = building({ capacity_sa_g: 0.4, use: 'office', occupants_peak: 100, years: [1990] });
+    const result = assess(one, context);
+    if (!isRanked(result)) throw new Error('not ranked');
+    const shares = new Map(sharesOf(one).map(({ what, share }) => [what, share]));
+    const { assessedCapacity, peopleCounted } = SETTINGS.spreads;
+    // k 2.5 of the settings
+    expect(shares.get('the finished assessment itself')).toBeCloseTo(
+      (2.5 * assessedCapacity) ** 2 / result.lnPrioritySd ** 2,
+      9,
+    );
+    expect(shares.get('people and their hours, however well known')).toBeCloseTo(
+      peopleCounted ** 2 / result.lnPrioritySd ** 2,
+      9,
+    );
+    expect([...shares.keys()]).toContain('the error of the period');
   });
 
   it('stands in the hand calculation, with what a visit could find out', () => {

@@ -6,7 +6,7 @@ import type { PageData } from '../../../engineering/page-contract.js';
 import type { Chart } from '../charts/chart.js';
 import { Section } from '../elements.js';
 import { capacityWords, demandPlaces, governingPeriod, listLength, numberAt } from '../reading.js';
-import { middleSentence, reasonTeller } from '../reasons.js';
+import { doubtWords, middleSentence, reasonTeller, tellsDoubts } from '../reasons.js';
 import { ChartFigure } from './chart-figure.js';
 
 /** From so many places on the list scrolls in its own region. */
@@ -25,6 +25,8 @@ const HEAD: readonly (readonly [string, string])[] = [
   ['Capacity (g)', 'num'],
   ['Main reason', 'reason'],
 ];
+
+const DOUBT = ['Uncertain because', 'reason'] as const;
 
 /** Link that opens the sheet of building `id`. */
 export function sheetAddress(id: string): string {
@@ -48,22 +50,24 @@ function Row({ data, i, reason, last }: { data: PageData; i: number; reason: str
     formatNumber(numberAt(data, 'sa_g', i), 3),
     capacityWords(data, i),
     reason,
+    ...(tellsDoubts(data) ? [doubtWords(data, i)] : []),
   ];
   return h(
     'tr',
     last ? { class: 'edge' } : null,
-    cells.map((cell, c) => (c === 1 ? h('th', { scope: 'row', class: 'name' }, cell) : h('td', { class: HEAD[c]?.[1] || undefined }, cell))),
+    cells.map((cell, c) => (c === 1 ? h('th', { scope: 'row', class: 'name' }, cell) : h('td', { class: (HEAD[c] ?? DOUBT)[1] || undefined }, cell))),
   );
 }
 
 export function ListSection({ data, chart }: { readonly data: PageData; readonly chart: Chart }): ComponentChild {
   const listed = listLength(data);
   const reason = reasonTeller(data);
+  const head = tellsDoubts(data) ? [...HEAD, DOUBT] : HEAD;
   const caption = 'Chance: that the building truly belongs to the list; band: where its true rank lies, 5 to 95 %; T: median period in the governing direction; Sₐ and capacity: of the most likely case.';
   return h(
     Section,
     { id: 'list', title: `The list: the first ${formatCount(listed)} for detailed assessment` },
-    h('p', { class: 'quiet' }, `${caption} ${middleSentence(data)}`),
+    h('p', { class: 'quiet' }, `${caption} ${middleSentence(data)}${tellsDoubts(data) ? ' Uncertain because: the largest share of the spread of its priority (the variance of ln S), and the largest that a visit can find out.' : ''}`),
     h('p', { class: 'quiet narrow-only' }, 'The list is wider than this screen: it scrolls sideways.'),
     h(
       'div',
@@ -72,7 +76,7 @@ export function ListSection({ data, chart }: { readonly data: PageData; readonly
         'table',
         { id: 'list-table', class: data.buildings.group.some((group) => group !== null) ? undefined : 'no-blocks' },
         h('caption', { class: 'unseen' }, 'The list, first place first'),
-        h('thead', null, h('tr', null, HEAD.map(([title, kind]) => h('th', { scope: 'col', class: kind || undefined }, title)))),
+        h('thead', null, h('tr', null, head.map(([title, kind]) => h('th', { scope: 'col', class: kind || undefined }, title)))),
         h('tbody', null, Array.from({ length: listed }, (_, i) => h(Row, { data, i, reason: reason(i), last: i === listed - 1 }))),
       ),
     ),
