@@ -68,8 +68,10 @@ export interface SensitivityOutlook {
   readonly places: number;
   /** Only every manyth building was ranked again; null: all were. */
   readonly sample: { readonly every: number; readonly buildings: number } | null;
-  /** Ids that stay on the list whatever is switched, by rank. */
+  /** Ids that stay on the list whichever of these is switched, by rank. */
   readonly always: readonly string[];
+  /** How many of the places are safe from other weights of slope, people and importance; left out where people do not count. */
+  readonly weights?: { readonly draws: number; readonly safe: number; readonly safe_share: number; readonly places: number };
   /** The largest effects first. */
   readonly switches: readonly SwitchTold[];
 }

@@ -115,7 +115,7 @@ export async function keepRun(
     budget: await budgetOutlook(db, loaded, runId, count),
     sensitivity: await sensitivityOutlook(
       db,
-      { run: runId, inventoryId, settings, grids, pools, buildings: count, listSize, register },
+      { run: runId, inventoryId, settings, grids, pools, buildings: count, listSize, register, seed: study.seed },
       figures.ranked,
     ),
   };

@@ -3,6 +3,7 @@ import type { SensitivityOutlook } from '../engineering/page-contract.js';
 import type { Database } from '../store/database.js';
 import { sensitivityOn } from './sensitivity.js';
 import type { SensitivityBasis } from './sensitivity.js';
+import type { WeightSpace } from './weights.js';
 import type { Switch } from './switch.js';
 import { switchesOf } from './switches.js';
 
@@ -28,12 +29,17 @@ export async function sensitivityOutlook(
     places: found.places,
     sample: found.sample === null ? null : { every: found.sample.every, buildings: found.sample.buildings },
     always: found.always.map(({ id }) => id),
+    ...(found.weights === null ? {} : { weights: weightsTold(found.weights) }),
     switches: found.switches
       .slice(0, TOLD)
       .map(({ assumption, statement, from, to, mark, overlap, places_before: places, tau_b }) => ({
         ...{ assumption, statement, from, to, mark, overlap, places, tau_b },
       })),
   };
+}
+
+function weightsTold({ draws, safe, safe_share, places }: WeightSpace): NonNullable<SensitivityOutlook['weights']> {
+  return { draws, safe, safe_share, places };
 }
 
 /** The first switch of every assumption: what is ranked by is the study's question, not an assumption of the answer. */

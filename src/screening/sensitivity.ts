@@ -20,6 +20,8 @@ import type { Order } from './order-by.js';
 import { readIds, readPools } from './read-buildings.js';
 import type { ScreenProgress } from './progress.js';
 import { withSlopes } from './slopes.js';
+import { weightSpace } from './weights.js';
+import type { WeightSpace } from './weights.js';
 import type { Mark, Switch } from './switch.js';
 import { markOf, notSwitched, switchesOf } from './switches.js';
 import type { NotSwitched } from './switches.js';
@@ -79,6 +81,8 @@ export interface Sensitivity {
   readonly sometimes: readonly HeldPlace[];
   /** Not on the list by the run's assumptions, but in some of the rankings; the most often held first. */
   readonly outside: readonly HeldPlace[];
+  /** What weightings of slope, people and importance together do; null where people do not count. */
+  readonly weights: WeightSpace | null;
 }
 
 /** What is ranked again. */
@@ -91,6 +95,7 @@ export interface SensitivityBasis {
   readonly buildings: number;
   readonly listSize: number;
   readonly register: readonly Assumption[];
+  readonly seed: number;
 }
 
 /** The switch whose duration tells that of all. */
@@ -102,18 +107,18 @@ export async function sensitivityOf(
   runId: number,
   options: SensitivityOptions = {},
 ): Promise<Sensitivity> {
-  const { inventory_id: inventoryId, settings, summary } = await readRun(db, runId);
+  const { inventory_id: inventoryId, settings, summary, seed } = await readRun(db, runId);
   const { buildings, list_size: listSize, assumptions: register } = summary;
   const pools = await readPools(db, inventoryId);
   const grids = await readGrids(db, settings);
-  const basis = { run: runId, inventoryId, settings, grids, pools, buildings, listSize, register };
+  const basis = { run: runId, inventoryId, settings, grids, pools, buildings, listSize, register, seed };
   return sensitivityOn(db, basis, chosen(switchesOf(settings), register, options.only), options);
 }
 
 /** Makes the `switches` one at a time. @throws UserError for a bad sample. */
 export async function sensitivityOn(
   db: Database,
-  { run, inventoryId, settings, grids, pools, buildings, listSize, register }: SensitivityBasis,
+  { run, inventoryId, settings, grids, pools, buildings, listSize, register, seed }: SensitivityBasis,
   switches: readonly Switch[],
   options: Omit<SensitivityOptions, 'only'> = {},
 ): Promise<Sensitivity> {
@@ -152,6 +157,7 @@ export async function sensitivityOn(
       switches: effects.sort(byEffect),
       not_switched: notSwitched(register, switchesOf(settings)),
       ...(await heldPlaces(db, inventoryId, base, held, switches.length, places, every)),
+      weights: await weightSpace(db, run, settings, seed, places, every),
     };
   });
 }

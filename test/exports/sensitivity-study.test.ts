@@ -104,6 +104,22 @@ describe('sensitivityStudy', () => {
     await expect(sensitivityStudy(path, { only: ['floor'], sample: 1 })).rejects.toThrow(/2 buildings at least/);
   });
 
+  it('weighs slope, people and importance together', async () => {
+    const { weights } = found;
+    expect(weights).toMatchObject({ draws: 1_000, people: [0, 1], importance: [0, 2], places: 20 });
+    expect(weights!.listed.map(({ rank }) => rank)).toEqual(Array.from({ length: 20 }, (_, i) => i + 1));
+    const all = [...weights!.listed, ...weights!.outside];
+    // every weighting has a list of as many places; buildings alike at its edge are on it together
+    const sum = all.reduce((total, { share }) => total + share, 0);
+    expect(sum).toBeGreaterThan(20 - 1e-6);
+    expect(sum).toBeLessThan(20.5);
+    expect(weights!.safe).toBe(weights!.listed.filter(({ share }) => share > 0.95 - 1e-9).length);
+    expect(weights!.outside.every(({ rank, share }) => rank > 20 && share > 0)).toBe(true);
+    // by demand over capacity alone there is nothing to weigh
+    const ratio = await screened({ study: (text) => text.replace('rank_by: people', 'rank_by: ratio') });
+    expect((await sensitivityStudy(ratio, { only: ['floor'] })).weights).toBeNull();
+  }, 60_000);
+
   it('ranks a systematic sample and says so', async () => {
     const sampled = await sensitivityStudy(path, { run: 1, only: ['floor'], sample: 80 });
     expect(sampled.sample).toMatchObject({ every: 3, list_size: 20 });

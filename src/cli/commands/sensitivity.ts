@@ -1,8 +1,9 @@
 import { relative } from 'node:path';
-import { formatCount, formatNumber } from '../../engineering/format.js';
+import { formatCount, formatNumber, formatShare } from '../../engineering/format.js';
 import { EXIT } from '../../errors.js';
 import { sensitivityStudy } from '../../exports/sensitivity-study.js';
 import type { HeldPlace, Sensitivity, SwitchEffect } from '../../screening/sensitivity.js';
+import type { WeighedPlace, WeightSpace } from '../../screening/weights.js';
 import { findStudy } from '../find-study.js';
 import { interruptible } from '../interrupt.js';
 import { printError, printJson, printLines, terminalColumns } from '../output/print.js';
@@ -90,6 +91,7 @@ function lines(found: Sensitivity, csv: string | undefined, columns: number): st
     ),
     '',
     ...placeLines(found, columns),
+    ...weightLines(found, columns),
     ...leftLines(found, columns),
     ...(csv === undefined ? [] : [`Written: ${clean(relative(process.cwd(), csv) || csv)}`, '']),
     ...wrap('An order for further assessment, not a statement on the safety of any building.', columns),
@@ -97,7 +99,7 @@ function lines(found: Sensitivity, csv: string | undefined, columns: number): st
 }
 
 function headSentence({ run, rankings, places, always }: Sensitivity): string {
-  return `Run ${String(run)} ranked again with ${formatCount(rankings)} ${rankings === 1 ? 'assumption' : 'assumptions'} switched, one at a time: ${formatCount(always.length)} of the ${formatCount(places)} on the list stay whatever is switched.`;
+  return `Run ${String(run)} ranked again with ${formatCount(rankings)} ${rankings === 1 ? 'assumption' : 'assumptions'} switched, one at a time: ${formatCount(always.length)} of the ${formatCount(places)} on the list stay whichever of them is switched.`;
 }
 
 function sampleSentence({ sample, buildings, places }: Sensitivity): string {
@@ -123,10 +125,40 @@ function placeLines({ always, sometimes, outside, rankings }: Sensitivity, colum
   };
   const counted = ({ id, held }: HeldPlace): string => `${id} ${formatCount(held)}`;
   return [
-    ...named('On the list whatever is switched', always, ({ id }) => id),
+    ...named('On the list whichever is switched', always, ({ id }) => id),
     ...named(`On the list, and in how many of the ${formatCount(rankings)} it stays`, sometimes, counted),
     ...named(`Not on the list, and in how many of the ${formatCount(rankings)} it enters`, outside, counted),
   ];
+}
+
+function weightLines({ weights }: Sensitivity, columns: number): string[] {
+  if (weights === null) return [];
+  const { listed, outside } = weights;
+  const counted = ({ id, share }: WeighedPlace): string => `${id} ${formatShare(share)}`;
+  const list = (title: string, places: readonly WeighedPlace[]): string[] => {
+    if (places.length === 0) return [];
+    const more = places.length > NAMED ? ` and ${formatCount(places.length - NAMED)} more` : '';
+    return [
+      ...wrap(title, columns),
+      ...wrap(clean(`${places.slice(0, NAMED).map(counted).join(', ')}${more}`), columns, '  '),
+    ];
+  };
+  return [
+    styled('bold', 'Weights together'),
+    ...wrap(weightSentence(weights), columns),
+    ...list(
+      'Listed, and in how many of the weightings:',
+      listed.filter(({ share }) => share < 1),
+    ),
+    ...list('Not listed, and in how many they enter:', outside),
+    '',
+  ];
+}
+
+function weightSentence({ draws, people, importance, slope, safe, safe_share, places }: WeightSpace): string {
+  const range = ([low, high]: readonly [number, number]): string =>
+    low === high ? 'as read' : `${formatNumber(low, 2)} to ${formatNumber(high, 2)}`;
+  return `${formatCount(draws)} weightings, exponent of the people ${range(people)}, of the importance ${range(importance)}, slope ${range(slope)}, drawn evenly: ${formatCount(safe)} of the ${formatCount(places)} on the list are on it in ${formatShare(safe_share)} of them or more.`;
 }
 
 function leftLines({ not_switched }: Sensitivity, columns: number): string[] {

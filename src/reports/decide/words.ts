@@ -52,13 +52,16 @@ export function budgetTable({ plan, currency }: BudgetOutlook): DataTable | null
 
 /** How much of the list stays, and what moves it most. */
 export function sensitivitySentences(found: SensitivityOutlook): readonly string[] {
-  const { rankings, of_rankings, places, sample, always, switches } = found;
+  const { rankings, of_rankings, places, sample, always, switches, weights } = found;
   const first = switches[0];
   const whole = sample === null ? `the ${formatCount(places)} on the list` : `the ${formatCount(places)} that stand for the list in a sample of ${formatCount(sample.buildings)} buildings`;
   const named = always.length === 0 || always.length > MOST_NAMED ? '' : `: ${always.join(', ')}`;
   return [
-    `With ${counted(rankings, 'assumption', 'assumptions')} switched, one at a time, ${always.length === 0 ? 'none' : formatCount(always.length)} of ${whole} ${always.length === 1 ? 'stays' : 'stay'} on it whatever is switched${named}.`,
+    `With ${counted(rankings, 'assumption', 'assumptions')} switched, one at a time, ${always.length === 0 ? 'none' : formatCount(always.length)} of ${whole} ${always.length === 1 ? 'stays' : 'stay'} on it whichever of these is switched${named}.`,
     ...(first === undefined ? [] : [`What moves it most: ${first.statement.replace(/\.$/, '')}, ${first.to}: ${formatCount(first.overlap)} of ${formatCount(first.places)} stay.`]),
+    ...(weights === undefined
+      ? []
+      : [`With slope, people and importance weighed otherwise, all at once, ${formatCount(weights.safe)} of the ${formatCount(weights.places)} keep their place in ${formatShare(weights.safe_share)} of ${formatCount(weights.draws)} weightings or more.`]),
     `The command sensitivity makes all ${formatCount(of_rankings)} switches${sample === null ? '' : ' on every building'}.`,
   ];
 }

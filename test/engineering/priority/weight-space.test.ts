@@ -1,0 +1,57 @@
+import { describe, expect, it } from 'vitest';
+import { assumedWith } from '../../../src/engineering/assess/assumed.js';
+import { assess, isRanked } from '../../../src/engineering/assess/assess.js';
+import { compileContext } from '../../../src/engineering/assess/context.js';
+import { acceptability } from '../../../src/engineering/priority/weight-space.js';
+import { inventedPortfolio } from '../../support/engineering-portfolio.js';
+import { random } from '../../support/engineering-random.js';
+import { SETTINGS } from '../../support/engineering-settings.js';
+
+const one = { people: 1, importance: 1 };
+const fixed = { slope: [1, 1], people: [1, 1], importance: [1, 1] } as const;
+
+describe('acceptability', () => {
+  it('is the list itself where no weight is open', () => {
+    const lnPriority = Float64Array.of(3, 1, 2, 5, 4);
+    const terms = { lnPriority, lnPeople: Float64Array.of(1, 2, 0, 1, 3), lnImportance: new Float64Array(5) };
+    const share = acceptability(terms, one, fixed, 2, 50, 1);
+    expect(Array.from(share, (value) => Math.round(value * 1e9) / 1e9)).toEqual([0, 0, 0, 1, 1]);
+  });
+
+  it('finds the share of the range on either side of where two orders cross', () => {
+    // of the first ln of demand over capacity is 1 and people count nothing; of the second it is 0 and ln of people 4: the second leads from
+    // an exponent of 1/4 on
+    const terms = {
+      lnPriority: Float64Array.of(1, 4),
+      lnPeople: Float64Array.of(0, 4),
+      lnImportance: new Float64Array(2),
+    };
+    const share = acceptability(terms, one, { ...fixed, people: [0, 1] }, 1, 4_000, 7);
+    // three standard errors of a chance of 1/4 in 4,000 draws
+    expect(Math.abs(share[0]! - 0.25)).toBeLessThan(0.021);
+    expect(share[0]! + share[1]!).toBeCloseTo(1, 9);
+    // a slope twice as steep doubles what stands against the people
+    const steep = acceptability(terms, one, { ...fixed, slope: [2, 2], people: [0, 1] }, 1, 4_000, 7);
+    expect(Math.abs(steep[0]! - 0.5)).toBeLessThan(0.024);
+  });
+
+  it('moves priorities as assessing again by other exponents does', () => {
+    const context = compileContext(SETTINGS);
+    const again = compileContext({
+      ...SETTINGS,
+      assumed: { ...assumedWith(undefined), peopleWeight: 0.4, importanceWeight: 1.7 },
+    });
+    let seen = 0;
+    for (const building of inventedPortfolio(100, random(9))) {
+      const before = assess(building, context);
+      const after = assess(building, again);
+      if (!isRanked(before) || !isRanked(after)) continue;
+      seen += 1;
+      const importance = building.importance_factor > 0 ? building.importance_factor : 1;
+      const moved = before.lnPriority - 0.6 * Math.log(before.people_exposed) + 0.7 * Math.log(importance);
+      // the median of a mixture is not that of its parts: their spread has changed
+      expect(Math.abs(after.lnPriority - moved)).toBeLessThan(0.12);
+    }
+    expect(seen).toBeGreaterThan(90);
+  });
+});
