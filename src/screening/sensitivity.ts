@@ -81,7 +81,7 @@ export interface Sensitivity {
   readonly sometimes: readonly HeldPlace[];
   /** Not on the list by the run's assumptions, but in some of the rankings; the most often held first. */
   readonly outside: readonly HeldPlace[];
-  /** What weightings of slope, people and importance together do; null where people do not count. */
+  /** What weightings of slope, people and importance together do, in the whole inventory; null where people do not count. */
   readonly weights: WeightSpace | null;
 }
 
@@ -157,7 +157,8 @@ export async function sensitivityOn(
       switches: effects.sort(byEffect),
       not_switched: notSwitched(register, switchesOf(settings)),
       ...(await heldPlaces(db, inventoryId, base, held, switches.length, places, every)),
-      weights: await weightSpace(db, run, settings, seed, places, every),
+      // cheap beside one ranking: of all buildings, sample or not
+      weights: await weightSpace(db, run, settings, seed, listSize),
     };
   });
 }

@@ -42,22 +42,21 @@ export interface WeightSpace {
   readonly outside: readonly WeighedPlace[];
 }
 
-/** Null where people do not count: then there is nothing to weigh. Every `every`th building of the inventory alone, with a list of `places`. */
+/** Null where people do not count: then there is nothing to weigh. The list has `places`. */
 export async function weightSpace(
   db: Database,
   run: number,
   settings: AssessSettings,
   seed: number,
   places: number,
-  every: number,
 ): Promise<WeightSpace | null> {
   if (settings.rankBy !== 'people') return null;
   const rows = await db.columns(
     `SELECT r.ln_priority AS priority, r.people_exposed AS people, coalesce(b.importance_factor, 1) AS importance, b.building_index AS at, r.rank AS place
      FROM result r JOIN run u ON u.run_id = r.run_id JOIN building b ON b.inventory_id = u.inventory_id AND b.building_index = r.building_index
-     WHERE r.run_id = ? AND r.rank IS NOT NULL AND b.building_index % ? = 0 ORDER BY r.rank`,
+     WHERE r.run_id = ? AND r.rank IS NOT NULL ORDER BY r.rank`,
     { priority: 'f64', people: 'f64', importance: 'f64', at: 'i32', place: 'i32' },
-    [run, every],
+    [run],
   );
   const n = rows.priority.length;
   const { peopleWeight, importanceWeight } = assumedWith(settings.assumed);
