@@ -84,11 +84,11 @@ function listPart(data: PageData): string {
       ...(tellsDoubts(data) ? [doubtWords(data, i)] : []),
     ];
   });
-  const head = ['Rank', 'Id', 'Name', 'Block', 'Chance', 'Band of rank', 'Tie group', 'Rank by demand', 'T (s)', 'S_a (g)', 'Capacity (g)', 'Main reason', ...(tellsDoubts(data) ? ['Uncertain because'] : [])];
+  const head = ['Rank', 'Id', 'Name', 'Block', 'Chance', 'Band of rank', 'Tie group', 'Rank by demand', 'T (s)', 'S_a (g)', 'Capacity (g)', 'Main reason', ...(tellsDoubts(data) ? ['Uncertain by'] : [])];
   const notes = [
     'Chance: that the building truly belongs to the list. Band: where its true rank lies, 5 to 95 %. T: median period in the governing direction. S_a and capacity: of the most likely case.',
     middleSentence(data),
-    ...(tellsDoubts(data) ? ['Uncertain because: the largest share of the spread of its priority (the variance of ln S), and the largest that a visit can find out.'] : []),
+    ...(tellsDoubts(data) ? ['Uncertain by: the largest share of the spread of its priority (the variance of ln S), then the largest that a visit can find out; strength is that as built, beyond what a code asked.'] : []),
     ...(shown < places ? [`The first ${formatCount(shown)} of ${formatCount(places)} places; all of them stand in ranking.csv.`] : []),
   ];
   return [markdownTable(head.map(markdownText), rows, [0, 4, 5, 6, 7, 8, 9, 10]), ...notes.map((note) => note.replaceAll('_', '\\_'))].join('\n\n');

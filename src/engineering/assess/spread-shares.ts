@@ -12,19 +12,21 @@ import { designedShare, unknownsOf } from './unknowns.js';
 
 export interface SpreadShare {
   readonly what: string;
+  /** The same in a word. */
+  readonly word: string;
   readonly share: number;
   /** A visit can find it out. */
   readonly learnable: boolean;
 }
 
-const WORDS: Readonly<Record<Unknown, string>> = {
-  system: 'lateral system unknown',
-  year: 'year of construction unknown',
-  height: 'height inferred',
-  irregularity: 'irregularities not on record',
-  use: 'use unknown',
-  occupants: 'people not counted',
-  drawings: 'no drawings: the era’s table speaks',
+const WORDS: Readonly<Record<Unknown, readonly [what: string, word: string]>> = {
+  system: ['lateral system unknown', 'system'],
+  year: ['year of construction unknown', 'year'],
+  height: ['height inferred', 'height'],
+  irregularity: ['irregularities not on record', 'irregularities'],
+  use: ['use unknown', 'use'],
+  occupants: ['people not counted', 'people'],
+  drawings: ['no drawings: the era’s table speaks', 'drawings'],
 };
 
 /** The shares of `building`; null where it cannot be ranked or there is no spread. What the unknowns do together stands with the rest. */
@@ -39,13 +41,14 @@ export function spreadShares(
   if (!(sd > 0)) return null;
   const shares = learnableShares(unknowns);
   const { spreads, rankBy } = context.settings;
-  const add = (what: string, variance: number): void => {
-    if (variance > 1e-12) shares.push({ what, share: Math.min(1, variance / (sd * sd)), learnable: false });
+  const add = (what: string, word: string, variance: number): void => {
+    if (variance > 1e-12) shares.push({ what, word, share: Math.min(1, variance / (sd * sd)), learnable: false });
   };
   const k = slopeFor(context, spectrum.name);
-  if (rankBy === 'people') add('people and their hours, however well known', peopleLeft(building, unknowns, context));
+  if (rankBy === 'people')
+    add('people and their hours, however well known', 'people', peopleLeft(building, unknowns, context));
   if (rankBy !== 'demand' && building.capacity_sa_g > 0)
-    add('the finished assessment itself', k * k * spreads.assessedCapacity * spreads.assessedCapacity);
+    add('the finished assessment itself', 'assessment', k * k * spreads.assessedCapacity * spreads.assessedCapacity);
   if (rankBy !== 'demand' && !(building.capacity_sa_g > 0)) {
     const cases = casesOf(building, context);
     const checked = typeof cases !== 'string' && cases.list.every((which) => isChecked(building, which, context));
@@ -56,13 +59,18 @@ export function spreadShares(
     const variance = checked
       ? strengthCheck * strengthCheck
       : overstrength * overstrength + era * era + undesigned * eraTable * eraTable;
-    add(checked ? 'the strength check itself' : 'strength as built, beyond what its code asked', k * k * variance);
+    add(
+      checked ? 'the strength check itself' : 'strength as built, beyond what its code asked',
+      'strength',
+      k * k * variance,
+    );
   }
   const rest = 1 - shares.reduce((sum, { share }) => sum + share, 0);
   const together = unknowns.learnable.filter(({ values }) => values !== null).length > 1;
   if (rest > 1e-9)
     shares.push({
       what: together ? 'the error of the period, and what the unknowns do together' : 'the error of the period',
+      word: 'period',
       share: rest,
       learnable: false,
     });
@@ -80,8 +88,8 @@ function learnableShares(unknowns: Unknowns): SpreadShare[] {
   return learnable.flatMap((one): SpreadShare[] => {
     if (count !== undefined && one.unknown === count.beside!.unknown) return [];
     return one === count
-      ? [{ what: 'use and people unknown', share: shareWithUse(), learnable: true }]
-      : [{ what: WORDS[one.unknown], share: shareOf(unknowns, one), learnable: true }];
+      ? [{ what: 'use and people unknown', word: 'use and people', share: shareWithUse(), learnable: true }]
+      : [{ what: WORDS[one.unknown][0], word: WORDS[one.unknown][1], share: shareOf(unknowns, one), learnable: true }];
   });
 }
 

@@ -88,7 +88,7 @@ function caseWords(data: PageData, i: number): string {
 
 /** What the place of listed building i is most uncertain by; empty where the run did not tell. */
 export function doubtWords({ summary: { doubts } }: PageData, i: number): string {
-  return (doubts?.[i] ?? []).map(({ what, share }, at) => `${at === 0 ? '' : 'for a visit: '}${what}: ${formatShare(share)}`).join('; ');
+  return (doubts?.[i] ?? []).map(({ word, share }) => `${word} ${formatShare(share)}`).join(', ');
 }
 
 /** True where the run told it of any. */

@@ -26,7 +26,7 @@ const HEAD: readonly (readonly [string, string])[] = [
   ['Main reason', 'reason'],
 ];
 
-const DOUBT = ['Uncertain because', 'reason'] as const;
+const DOUBT = ['Uncertain by', ''] as const;
 
 /** Link that opens the sheet of building `id`. */
 export function sheetAddress(id: string): string {
@@ -50,7 +50,7 @@ function Row({ data, i, reason, last }: { data: PageData; i: number; reason: str
     formatNumber(numberAt(data, 'sa_g', i), 3),
     capacityWords(data, i),
     reason,
-    ...(tellsDoubts(data) ? [doubtWords(data, i)] : []),
+    ...(tellsDoubts(data) ? [doubtWords(data, i).replaceAll(' %', '\u00a0%')] : []),
   ];
   return h(
     'tr',
@@ -67,7 +67,7 @@ export function ListSection({ data, chart }: { readonly data: PageData; readonly
   return h(
     Section,
     { id: 'list', title: `The list: the first ${formatCount(listed)} for detailed assessment` },
-    h('p', { class: 'quiet' }, `${caption} ${middleSentence(data)}${tellsDoubts(data) ? ' Uncertain because: the largest share of the spread of its priority (the variance of ln S), and the largest that a visit can find out.' : ''}`),
+    h('p', { class: 'quiet' }, `${caption} ${middleSentence(data)}${tellsDoubts(data) ? ' Uncertain by: the largest share of the spread of its priority (the variance of ln S), then the largest that a visit can find out; strength is that as built, beyond what a code asked.' : ''}`),
     h('p', { class: 'quiet narrow-only' }, 'The list is wider than this screen: it scrolls sideways.'),
     h(
       'div',

@@ -7,7 +7,7 @@ th, td { padding: .38rem .7rem; text-align: left; vertical-align: top; border-bo
 th { font-weight: 600; } thead th { background: var(--panel); border-bottom: 1px solid var(--ink-soft); vertical-align: bottom; }
 tbody tr:last-child > * { border-bottom: 0; }
 .num { text-align: right; } td.num { white-space: nowrap; }
-th.name { min-width: 11rem; } tbody th.name { font-weight: 400; } th.name a, td.name a { font-weight: 600; } td.name { min-width: 10rem; } td.reason { min-width: 12rem; }
+th.name { min-width: 9rem; } tbody th.name { font-weight: 400; } th.name a, td.name a { font-weight: 600; } td.name { min-width: 10rem; } td.reason { min-width: 10rem; }
 #list-table th, #list-table td { padding-inline: .5rem; }
 #survey td:nth-child(2), #survey td:nth-child(5), #survey td:nth-child(6) { min-width: 10rem; }
 ul.bare { list-style: none; margin: 0; padding: 0; } td.members { min-width: 17rem; }
