@@ -71,7 +71,12 @@ export interface SensitivityOutlook {
   /** Ids that stay on the list whichever of these is switched, by rank. */
   readonly always: readonly string[];
   /** How many of the places are safe from other weights of slope, people and importance; left out where people do not count. */
-  readonly weights?: { readonly draws: number; readonly safe: number; readonly safe_share: number; readonly places: number };
+  readonly weights?: {
+    readonly draws: number;
+    readonly safe: number;
+    readonly safe_share: number;
+    readonly places: number;
+  };
   /** The largest effects first. */
   readonly switches: readonly SwitchTold[];
 }

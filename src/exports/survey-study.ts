@@ -1,7 +1,7 @@
 /** The survey of a study planned, its page, and its sheet for the field. */
 import { resolve } from 'node:path';
 import { fits } from '../engineering/priority/campaign.js';
-import type { Cost, Limits, Visit } from '../engineering/priority/campaign.js';
+import type { Limits, Visit } from '../engineering/priority/campaign.js';
 import { formatNumber } from '../engineering/format.js';
 import { UserError } from '../errors.js';
 import { ANSWERS, ANSWER_COLUMNS } from '../inventory/answers.js';
