@@ -170,7 +170,8 @@ describe('swaymark screen', () => {
     expect(first.code).toBe(0);
     const reports = join(demo.folder, 'reports');
     const before = readdirSync(reports).map((name) => [name, readFileSync(join(reports, name)).length]);
-    for (const pause of [150, 400, 700]) {
+    // moments throughout a run are in kill.test.ts
+    for (const pause of [400]) {
       const running = startSwaymark(['screen', 'study.yaml', '--output', 'reports'], demo.folder);
       await new Promise((resolve) => setTimeout(resolve, pause));
       running.kill('SIGKILL');

@@ -5,7 +5,7 @@ import { openDatabase } from '../../src/store/database.js';
 import { PRIOR, STUDY, writeInventory } from '../bench/inventory.mjs';
 import { buildCommand, scratch, startSwaymark, swaymark } from '../support/cli.js';
 
-const ROWS = 3_000;
+const ROWS = 1_200;
 const REPORTS = ['dashboard.html', 'ranking.csv', 'ranking.parquet', 'rejects.csv', 'summary.md'];
 const { folder, remove } = scratch();
 

@@ -215,19 +215,27 @@ function wrongWith(
   threshold: number,
   chance: number,
 ): number {
+  const n = weights.length;
   const tau = variance.map(Math.sqrt);
-  const { z, weight: nodeWeight } = tau.some((one) => one > 0) ? LEARNT_NODES : ONE_NODE;
+  const left = new Float64Array(n);
+  const weightAbove = (i: number, d: number): number =>
+    weights[i]! * (left[i]! > 0 ? normalCdf(d / left[i]!) : d > 0 ? 1 : 0);
+  const all = new Float64Array(classes);
+  // parts of which nothing is learnt besides their class are the same at every node
+  const still = new Float64Array(classes);
+  const moving: number[] = [];
+  for (let i = 0; i < n; i += 1) {
+    const at = parts.from + i;
+    all[of[i]!]! += weights[i]!;
+    left[i] = Math.sqrt(Math.max(parts.sd[at]! * parts.sd[at]! - variance[i]!, 0));
+    if (tau[i]! > 0) moving.push(i);
+    else still[of[i]!]! += weightAbove(i, parts.mean[at]! - threshold);
+  }
+  const { z, weight: nodeWeight } = moving.length > 0 ? LEARNT_NODES : ONE_NODE;
   let wrong = 0;
   for (let j = 0; j < z.length; j += 1) {
-    const above = new Float64Array(classes);
-    const all = new Float64Array(classes);
-    for (let i = 0; i < weights.length; i += 1) {
-      const at = parts.from + i;
-      const left = Math.sqrt(Math.max(parts.sd[at]! * parts.sd[at]! - variance[i]!, 0));
-      const d = parts.mean[at]! + tau[i]! * z[j]! - threshold;
-      all[of[i]!]! += weights[i]!;
-      above[of[i]!]! += weights[i]! * (left > 0 ? normalCdf(d / left) : d > 0 ? 1 : 0);
-    }
+    const above = still.slice();
+    for (const i of moving) above[of[i]!]! += weightAbove(i, parts.mean[parts.from + i]! + tau[i]! * z[j]! - threshold);
     for (let c = 0; c < classes; c += 1)
       wrong += 2 * nodeWeight[j]! * Math.min((1 - chance) * above[c]!, chance * (all[c]! - above[c]!));
   }
