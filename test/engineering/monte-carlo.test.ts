@@ -28,7 +28,7 @@ const LATER = 1_000;
 
 /** The allowance is for 10,000; fewer draws scatter more. */
 const AGREED = 10_000;
-const DRAWS = Number(process.env['SWAYMARK_MONTE_CARLO_DRAWS'] ?? 2_000);
+const DRAWS = Number(process.env['SWAYMARK_MONTE_CARLO_DRAWS'] ?? 2_500);
 
 interface Portfolio {
   readonly title: string;
