@@ -14,6 +14,8 @@ import { prepareFolder } from './write-set.js';
 export interface ScreenStudyOptions extends Omit<ScreenOptions, 'made'> {
   /** When the run is made; now when left out. */
   readonly made?: Date;
+  /** false: nothing is told with the run of visits, money and assumptions, which takes as long as the rest of a small inventory. */
+  readonly outlook?: boolean;
   /** Units of the reports; SI when left out. */
   readonly units?: Display;
   /** Folder of the reports; the study's own, beside the study file, when left out. */
@@ -44,7 +46,11 @@ export async function screenStudy(path: string, options: ScreenStudyOptions = {}
   const db = await openStudyDatabase(loaded, false, [folder]);
   try {
     options.onOpen?.(db);
-    const outcome = await screen(db, loaded, { ...options, outlook: true, made: options.made ?? new Date() });
+    const outcome = await screen(db, loaded, {
+      ...options,
+      outlook: options.outlook ?? true,
+      made: options.made ?? new Date(),
+    });
     options.onProgress?.({ step: 'writing reports', share: NaN });
     const { files, data } = await writeReports(db, outcome.runId, folder, options.units ?? 'si');
     return { ...outcome, data, files, rejected: rejectedShare(loaded, outcome.taken) };

@@ -15,7 +15,7 @@ describe('the dashboard of a study with hazard grids', () => {
   const path = gridCopy(TWO_GRIDS, { 'h475.csv': gridCsv(rising(1)), 'h2475.csv': gridCsv(rising(1.8)) });
 
   beforeAll(async () => {
-    await screenStudy(path, { made: MADE });
+    await screenStudy(path, { made: MADE, outlook: false });
     browser = await chromium.launch({
       executablePath: inject('chromiumPath'),
       args: ['--no-sandbox', '--disable-gpu'],

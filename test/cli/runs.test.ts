@@ -15,7 +15,7 @@ const widest = (out: string): number => Math.max(...out.split('\n').map((line) =
 beforeAll(async () => {
   buildCommand();
   writeSmallStudy(place.folder);
-  for (const note of ['', NOTE, HOSTILE.terminal]) await screenStudy(study, { note });
+  for (const note of ['', NOTE, HOSTILE.terminal]) await screenStudy(study, { note, outlook: false });
 }, 300_000);
 afterAll(() => {
   place.remove();

@@ -52,7 +52,7 @@ beforeAll(async () => {
   writeFileSync(join(place.folder, 'houses.csv'), `${TABLE}\n`);
   writeFileSync(join(place.folder, 'pairs.csv'), PAIRS);
   writeFileSync(study, text);
-  screened = await screenStudy(study, { made: MADE });
+  screened = await screenStudy(study, { made: MADE, outlook: false });
   pairs = screened.data.gaps?.pairs ?? [];
 }, 120_000);
 afterAll(() => {
@@ -151,7 +151,7 @@ describe('the gaps of a run', () => {
     // the same buildings without outlines and pairs: the same ranks, and no gap
     writeFileSync(join(place.folder, 'houses.csv'), `${TABLE.replaceAll(/"POLYGON[^"]*"/g, '')}\n`);
     writeFileSync(study, text.replace('neighbours: {file: pairs.csv}\n', ''));
-    const { data } = await screenStudy(study, { made: MADE });
+    const { data } = await screenStudy(study, { made: MADE, outlook: false });
     expect(data.gaps).toBeNull();
     expect(existsSync(out('gaps.csv'))).toBe(false);
     expect(readFileSync(out('summary.md'), 'utf8')).not.toContain('Gaps to neighbours');

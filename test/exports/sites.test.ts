@@ -36,7 +36,7 @@ beforeAll(async () => {
   buildCommand();
   writeFileSync(join(place.folder, 'houses.csv'), `${[HEAD, ...ROWS].join('\n')}\n`);
   writeFileSync(study, withPart);
-  screened = await screenStudy(study, { made: MADE });
+  screened = await screenStudy(study, { made: MADE, outlook: false });
 }, 120_000);
 afterAll(() => {
   place.remove();
@@ -114,7 +114,7 @@ describe('the sites of a run', () => {
       join(place.folder, 'houses.csv'),
       `${[HEAD, ...ROWS].join('\n').replaceAll(/,(?:M1|M2|M9|W1),/g, ',,')}\n`,
     );
-    const { data, files } = await screenStudy(study, { made: MADE });
+    const { data, files } = await screenStudy(study, { made: MADE, outlook: false });
     expect(data.sites).toEqual({ all: 0, buildings: 0, sites: [] });
     expect(files.map((file) => file.endsWith('sites.csv'))).not.toContain(true);
     expect(existsSync(out('sites.csv'))).toBe(false);

@@ -21,6 +21,7 @@ type Row = Record<string, string | number | null>;
 async function screened(
   path: string,
   ids: readonly string[],
+  outlook = true,
 ): Promise<{
   readonly rows: Row[];
   readonly inventory: string;
@@ -30,7 +31,7 @@ async function screened(
   const loaded = await loadStudy(path);
   const db = await openStudyDatabase(loaded);
   try {
-    const { taken, summary } = await screen(db, loaded, { made: MADE, outlook: true });
+    const { taken, summary } = await screen(db, loaded, { made: MADE, outlook });
     const rows = await db.rows<Row>(
       `SELECT id, CAST(system AS VARCHAR) AS system, system_origin, storeys_above, storeys_above_origin, height_m, height_m_origin,
          occupants_peak, year_built, findings FROM building WHERE inventory_id = ? AND id IN (${ids.map((id) => `'${id}'`).join(', ')}) ORDER BY id`,
@@ -78,7 +79,7 @@ describe('takeAnswers', () => {
     async () => {
       const path = demoCopy();
       const inventory = readFileSync(join(dirname(path), 'inventory.csv'), 'utf8');
-      const before = await screened(path, ['BH-006', 'BH-024']);
+      const before = await screened(path, ['BH-006', 'BH-024'], false);
       const file = sheet(
         path,
         '\ufeffid,system,height_m,storeys_above,occupants_peak,visit,surveyor,surveyed_on\r\nBH-006,concrete shear wall,–,?,,street,N. N.,2026-12-03\r\nBH-024,–,41 ft,3,12,street,N. N.,2026-12-03\r\n',
@@ -91,7 +92,7 @@ describe('takeAnswers', () => {
         on_record: 0,
         answered_later: 0,
       });
-      const after = await screened(path, ['BH-006', 'BH-024']);
+      const after = await screened(path, ['BH-006', 'BH-024'], false);
       expect(after.inventory).not.toBe(before.inventory);
       expect(readFileSync(join(dirname(path), 'inventory.csv'), 'utf8')).toBe(inventory);
       expect(before.rows[0]).toMatchObject({ id: 'BH-006', system_origin: 'unknown' });
