@@ -9,6 +9,7 @@ import { matchPrior } from '../../src/engineering/prior/system-prior.js';
 import { storeyHeight } from '../../src/engineering/prior/storey-height.js';
 import { building, given, inferred } from './engineering-building.js';
 import type { Random } from './engineering-random.js';
+import { pickShare } from './engineering-select.js';
 
 const USES: readonly Use[] = ['residential', 'office', 'school', 'hospital', 'retail', 'unknown'];
 const CHANGE_YEARS = [1952, 1963, 1978, 1990, 1999, 2002];
@@ -116,17 +117,6 @@ function yearShares(one: Building, { settings: { systemPrior } }: AssessContext)
       matchPrior(systemPrior, use, storeys.value, year)!.chances.find((row) => row.system === system)?.chance ?? 0,
   );
   return shares.some((share) => share > 0) ? shares : even;
-}
-
-/** Where `uniform` falls among `shares`. */
-function pickShare(shares: readonly number[], uniform: number): number {
-  let left = uniform * shares.reduce((sum, share) => sum + share, 0);
-  let i = 0;
-  while (i < shares.length - 1 && left >= shares[i]!) {
-    left -= shares[i]!;
-    i += 1;
-  }
-  return i;
 }
 
 /**

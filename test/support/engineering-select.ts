@@ -25,3 +25,14 @@ export function largestAbove(values: Float64Array, n: number, work: Float64Array
   }
   return work[k]!;
 }
+
+/** Where `uniform` falls among `shares`. */
+export function pickShare(shares: readonly number[], uniform: number): number {
+  let left = uniform * shares.reduce((sum, share) => sum + share, 0);
+  let i = 0;
+  while (i < shares.length - 1 && left >= shares[i]!) {
+    left -= shares[i]!;
+    i += 1;
+  }
+  return i;
+}

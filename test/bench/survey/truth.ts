@@ -19,6 +19,7 @@ import type { CarriedId } from '../../../src/engineering/capacity/families.js';
 import { IRREGULARITY_EDITIONS } from '../../../src/engineering/irregularity/editions.js';
 import { matchPrior } from '../../../src/engineering/prior/system-prior.js';
 import type { HazardGrids } from '../../../src/engineering/spectrum/grid.js';
+import { pickShare } from '../../support/engineering-select.js';
 import { drawsOf } from './draws.js';
 import type { Draws } from './draws.js';
 import type { World } from './world.js';
@@ -176,17 +177,6 @@ function yearShares(
     return row === undefined ? 0 : world.systemShare(system, row.chance);
   });
   return shares.some((share) => share > 0) ? shares : even;
-}
-
-/** Where `uniform` falls among `shares`. */
-function pickShare(shares: readonly number[], uniform: number): number {
-  let left = uniform * shares.reduce((sum, share) => sum + share, 0);
-  let i = 0;
-  while (i < shares.length - 1 && left >= shares[i]!) {
-    left -= shares[i]!;
-    i += 1;
-  }
-  return i;
 }
 
 function systemOf(
