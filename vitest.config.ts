@@ -38,6 +38,7 @@ export default defineConfig({
         extends: true,
         test: {
           name: 'browser',
+          isolate: false,
           include: ['test/browser/**/*.test.ts'],
           globalSetup: ['test/support/chromium-setup.ts', 'test/support/temporary-setup.ts'],
         },

@@ -3,7 +3,7 @@
 // With --if-stale it returns at once when nothing it builds from is newer than the last build. With --js esbuild takes the types off instead of
 // tsc: no declarations, and a tenth of the wait, for who only wants to run it.
 import { spawnSync } from 'node:child_process';
-import { chmodSync, existsSync, readdirSync, rmSync, statSync, utimesSync, writeFileSync } from 'node:fs';
+import { chmodSync, existsSync, readFileSync, readdirSync, rmSync, statSync, utimesSync, writeFileSync } from 'node:fs';
 import { createRequire } from 'node:module';
 import { dirname, join } from 'node:path';
 import { fileURLToPath } from 'node:url';
@@ -13,6 +13,8 @@ const root = dirname(dirname(fileURLToPath(import.meta.url)));
 const src = join(root, 'src');
 const dist = join(root, 'dist');
 const stamp = join(dist, '.stamp');
+/** What the command loads from its package: a binary, and what only writing pages and pictures needs. */
+const NOT_BUNDLED = ['@duckdb/node-bindings', 'vega', 'vega-lite', 'vega-interpreter'];
 
 /** @param {string} folder */
 function everythingUnder(folder) {
@@ -68,6 +70,28 @@ async function transpile() {
   rmSync(join(dist, 'index.d.ts'), { force: true });
 }
 
+/** The licence of a package: a file of its own, or the last part of what is to be read first. @param {string} folder */
+function licenceOf(folder) {
+  const files = readdirSync(join(root, folder));
+  const own = files.find((name) => /^licen[cs]e/i.test(name));
+  const text = readFileSync(
+    join(root, folder, own ?? files.find((name) => /^readme/i.test(name)) ?? 'package.json'),
+    'utf8',
+  );
+  const from = own === undefined ? text.search(/^#+ licen[cs]e/im) : 0;
+  if (from < 0) throw new Error(`${folder} has no licence beside it`);
+  return text.slice(from).trim();
+}
+
+/** Those of the packages that went into the command, beside it. @param {string[]} inputs */
+function writeLicences(inputs) {
+  const packages = new Set(inputs.flatMap((path) => path.match(/^.*node_modules\/(?:@[^/]+\/)?[^/]+/)?.[0] ?? []));
+  const texts = [...packages]
+    .sort()
+    .map((folder) => `${folder.slice(folder.lastIndexOf('node_modules/') + 13)}\n\n${licenceOf(folder)}\n`);
+  writeFileSync(join(dist, 'cli', 'LICENCES.txt'), texts.join('\n----\n\n'));
+}
+
 async function main() {
   if (process.argv.includes('--if-stale') && !isStale()) return;
   const started = new Date();
@@ -95,9 +119,9 @@ async function main() {
   removeOrphans();
   const command = join(dist, 'cli', 'main.js');
   if (existsSync(command)) {
-    // A few hundred small modules take a third of a second to load one by one. The parts stand where files beside them are looked for
+    // A few hundred small modules take a third of a second to load one by one, those of the packages as much again. The parts stand where files beside them are looked for
     // from: `./assess-worker.js` and `../browser/page.js`.
-    await build({
+    const { metafile } = await build({
       entryPoints: { 'cli/main': command },
       outdir: dist,
       allowOverwrite: true,
@@ -107,12 +131,18 @@ async function main() {
       platform: 'node',
       format: 'esm',
       target: 'node20',
-      packages: 'external',
+      external: NOT_BUNDLED,
+      // what is required at run time inside a package written for the older kind of modules
+      banner: {
+        js: "import { createRequire as requireFrom } from 'node:module'; const require = requireFrom(import.meta.url);",
+      },
+      metafile: true,
       charset: 'utf8',
       legalComments: 'none',
       logLevel: 'warning',
     });
     chmodSync(command, 0o755);
+    writeLicences(Object.keys(metafile.inputs));
   }
   // The stamp carries the time the build began: a file saved while it ran is built next time.
   writeFileSync(stamp, `${started.toISOString()}\n`);

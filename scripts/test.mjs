@@ -57,7 +57,7 @@ function check(title, command, ...args) {
 }
 
 await check('build', process.execPath, 'scripts/build.mjs', '--if-stale');
-// The linter takes as long as all others together: they go beside it.
+// The linter takes as long as all others together: they go beside it, and the tests after them too.
 const lint = check('lint', bin('eslint'), '--max-warnings', '0', '.');
 await check('format', bin('prettier'), '--check', '.', '--log-level', 'warn');
 await check('types', bin('tsc'), '-p', 'tsconfig.json');
@@ -68,7 +68,6 @@ await check('import floors', bin('depcruise'), '--config', '.dependency-cruiser.
 await check('start-up imports', bin('depcruise'), '--config', '.dependency-cruiser-startup.cjs', 'src');
 await check('unused code', bin('knip'), '--no-progress');
 if (existsSync(join(root, 'src', 'cli', 'main.ts'))) await check('package', bin('publint'), '--strict');
-await lint;
 
 let chromiumProblem = '';
 const hasChromium = await step('Chromium', () => {
@@ -99,6 +98,8 @@ const status = await new Promise((resolve) => {
   vitest.on('error', () => resolve(1));
   vitest.on('close', (code) => resolve(code ?? 1));
 });
+
+await lint;
 
 const counts = existsSync(countsFile) ? JSON.parse(readFileSync(countsFile, 'utf8')) : { passed: 0, failed: 0 };
 rmSync(scratch, { recursive: true, force: true });

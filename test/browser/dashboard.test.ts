@@ -4,28 +4,21 @@ import { createRequire } from 'node:module';
 import { tmpdir } from 'node:os';
 import { join } from 'node:path';
 import { pathToFileURL } from 'node:url';
-import { chromium } from 'playwright-core';
-import type { Browser, Page } from 'playwright-core';
-import { afterAll, afterEach, beforeAll, describe, expect, inject, it } from 'vitest';
+import type { Page } from 'playwright-core';
+import { afterAll, afterEach, beforeAll, describe, expect, it } from 'vitest';
 import { formatNumber } from '../../src/engineering/format.js';
 import { LIKELY_WEAK } from '../../src/engineering/results.js';
 import { readPageScript, renderDashboard } from '../../src/reports/dashboard.js';
 import { HOSTILE_NAME, pageData } from '../support/page-data.js';
+import { Pages } from '../support/pages.js';
+import type { View } from '../support/pages.js';
 
 const axeSource = readFileSync(createRequire(import.meta.url).resolve('axe-core/axe.min.js'), 'utf8');
-
-interface Scheme {
-  readonly width?: number;
-  readonly colorScheme?: 'light' | 'dark';
-}
 
 describe('renderDashboard', () => {
   const folder = mkdtempSync(join(tmpdir(), 'swaymark-page-'));
   const data = pageData({ listSize: 20 });
-  let browser: Browser;
-  /** Console messages, errors and requests other than the page itself: all of them unwanted. */
-  const noise: string[] = [];
-  const opened: Page[] = [];
+  let pages: Pages;
 
   const write = (name: string, options: Parameters<typeof pageData>[0]): string => {
     const file = join(folder, name);
@@ -36,47 +29,20 @@ describe('renderDashboard', () => {
 
   beforeAll(async () => {
     address = write('dashboard.html', { listSize: 20 });
-    browser = await chromium.launch({
-      executablePath: inject('chromiumPath'),
-      args: [
-        '--no-sandbox',
-        '--disable-gpu',
-        '--disable-quic',
-        '--no-first-run',
-        '--disable-background-networking',
-        '--disable-component-update',
-        '--disable-sync',
-      ],
-    });
+    pages = await Pages.launch();
   });
 
   afterAll(async () => {
-    await browser.close();
+    await pages.end();
     rmSync(folder, { recursive: true, force: true });
   });
 
   afterEach(async () => {
-    await Promise.all(opened.splice(0).map((page) => page.close()));
-    expect(noise.splice(0)).toEqual([]);
+    await pages.closeOpened();
+    expect(pages.noise.splice(0)).toEqual([]);
   });
 
-  async function open(url = address, { width = 1280, colorScheme = 'light' }: Scheme = {}): Promise<Page> {
-    const page = await browser.newPage({ viewport: { width, height: 900 }, colorScheme });
-    opened.push(page);
-    page.on('console', (message) => noise.push(`console: ${message.text()}`));
-    page.on('pageerror', (error) => noise.push(`error: ${error.message}`));
-    page.on('dialog', (dialog) => {
-      noise.push(`dialog: ${dialog.message()}`);
-      void dialog.dismiss();
-    });
-    page.on('request', (request) => {
-      if (!request.isNavigationRequest()) noise.push(`request: ${request.url()}`);
-    });
-    await page.goto(url);
-    // The policy of the page forbids waiting by a script of ours, so the waiting is done from here.
-    await expect.poll(() => page.locator('.chart:not([data-drawn])').count(), { timeout: 15_000 }).toBe(0);
-    return page;
-  }
+  const open = (url = address, view: View = {}): Promise<Page> => pages.open(url, view);
 
   const cells = (page: Page, column: number): Promise<string[]> =>
     page.locator(`#all-table tbody tr:not(.spacer) > :nth-child(${String(column)})`).allTextContents();
@@ -151,7 +117,7 @@ describe('renderDashboard', () => {
 
   it('works out what the run stored', async () => {
     const page = await open();
-    for (const id of data.buildings.inputs.id.filter((_, i) => i % 2 === 0)) {
+    for (const id of data.buildings.inputs.id.filter((_, i) => i % 3 === 0)) {
       await page.goto(`${address}#building=${id}`);
       await page.locator('#sheet-title', { hasText: id }).waitFor();
       await page.locator('#make-hand').click();

@@ -1,38 +1,30 @@
 /** The dashboard of a run whose level reads a grid, in Chromium. */
 import { dirname, join } from 'node:path';
 import { pathToFileURL } from 'node:url';
-import { chromium } from 'playwright-core';
-import type { Browser, Page } from 'playwright-core';
-import { afterAll, beforeAll, describe, expect, inject, it } from 'vitest';
+import type { Page } from 'playwright-core';
+import { afterAll, beforeAll, describe, expect, it } from 'vitest';
 import { screenStudy } from '../../src/exports/screen-study.js';
 import { TWO_GRIDS, gridCopy, gridCsv, rising } from '../support/hazard-grid.js';
+import { Pages } from '../support/pages.js';
 import { MADE } from '../support/study-folder.js';
 
 describe('the dashboard of a study with hazard grids', () => {
-  let browser: Browser;
+  let pages: Pages;
   let page: Page;
-  const noise: string[] = [];
   const path = gridCopy(TWO_GRIDS, { 'h475.csv': gridCsv(rising(1)), 'h2475.csv': gridCsv(rising(1.8)) });
 
   beforeAll(async () => {
     await screenStudy(path, { made: MADE, outlook: false });
-    browser = await chromium.launch({
-      executablePath: inject('chromiumPath'),
-      args: ['--no-sandbox', '--disable-gpu'],
-    });
-    page = await browser.newPage({ viewport: { width: 1280, height: 900 } });
-    page.on('console', (message) => noise.push(message.text()));
-    page.on('pageerror', (error) => noise.push(error.message));
-    await page.goto(pathToFileURL(join(dirname(path), 'reports', 'dashboard.html')).href);
+    pages = await Pages.launch();
+    page = await pages.open(pathToFileURL(join(dirname(path), 'reports', 'dashboard.html')).href);
   }, 120_000);
 
   afterAll(async () => {
-    await browser.close();
-    expect(noise).toEqual([]);
+    await pages.end();
+    expect(pages.noise).toEqual([]);
   });
 
   it('draws median and band of the buildings, and says so in words and numbers', async () => {
-    await expect.poll(() => page.locator('.chart:not([data-drawn])').count(), { timeout: 15_000 }).toBe(0);
     const section = page.locator('#periods');
     const words = await section.innerText();
     expect(words).toContain('The spectra h475 and h2475 are read from grids at each building’s own place');

@@ -5,7 +5,7 @@ import { openDatabase } from '../../src/store/database.js';
 import { PRIOR, STUDY, writeInventory } from '../bench/inventory.mjs';
 import { buildCommand, scratch, startSwaymark, swaymark } from '../support/cli.js';
 
-const ROWS = 1_200;
+const ROWS = 500;
 const REPORTS = ['dashboard.html', 'ranking.csv', 'ranking.parquet', 'rejects.csv', 'summary.md'];
 const { folder, remove } = scratch();
 

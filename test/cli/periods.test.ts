@@ -1,7 +1,8 @@
 import { readFileSync, writeFileSync } from 'node:fs';
 import { join } from 'node:path';
 import { afterAll, beforeAll, describe, expect, it } from 'vitest';
-import { buildCommand, copyDemo, scratch, swaymark, writeSmallStudy } from '../support/cli.js';
+import { buildCommand, scratch, swaymark, writeSmallStudy } from '../support/cli.js';
+import { screenedDemo } from '../support/screened-demo.js';
 
 const demo = scratch();
 const small = scratch();
@@ -9,10 +10,9 @@ const run = (...args: string[]): ReturnType<typeof swaymark> => swaymark(['perio
 const inSmall = (...args: string[]): ReturnType<typeof swaymark> =>
   swaymark(['periods', ...args], { cwd: small.folder });
 
-beforeAll(() => {
+beforeAll(async () => {
   buildCommand();
-  copyDemo(demo.folder);
-  expect(swaymark(['screen', 'study.yaml', '--output', 'out'], { cwd: demo.folder }).err).toBe('');
+  await screenedDemo(demo.folder);
   writeSmallStudy(small.folder, [
     'A5,no system,3,9,1950,,residential,300',
     'A6,,3,9,1950,timber-light-frame,residential,300',

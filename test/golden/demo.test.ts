@@ -2,17 +2,14 @@ import { readFileSync } from 'node:fs';
 import { dirname, join } from 'node:path';
 import { parse } from 'csv-parse/sync';
 import { beforeAll, describe, expect, it } from 'vitest';
-import { screenStudy } from '../../src/index.js';
 import { buildCommand } from '../support/cli.js';
-import { MADE, demoCopy } from '../support/study-folder.js';
+import { screenedDemo } from '../support/screened-demo.js';
 
 let fresh = '';
 
 beforeAll(async () => {
   buildCommand();
-  const path = demoCopy();
-  await screenStudy(path, { made: MADE });
-  fresh = join(dirname(path), 'reports');
+  fresh = join(dirname(await screenedDemo()), 'reports');
 }, 120_000);
 
 const committed = 'reports';

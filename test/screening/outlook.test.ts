@@ -1,21 +1,25 @@
 /** What the money buys and what the list hangs on, told with a run: the same as the commands find. */
+import { readFileSync, writeFileSync } from 'node:fs';
 import { dirname, join } from 'node:path';
-import { readFileSync } from 'node:fs';
 import { beforeAll, describe, expect, it } from 'vitest';
 import { parse } from 'csv-parse/sync';
 import type { PageData } from '../../src/engineering/page-contract.js';
 import { budgetStudy } from '../../src/exports/budget-study.js';
+import { withStudyDatabase } from '../../src/runs/open.js';
+import { budgetOutlook } from '../../src/screening/budget-outlook.js';
+import { pageDataOf } from '../../src/screening/page-data.js';
 import { screenStudy } from '../../src/exports/screen-study.js';
 import { sensitivityStudy } from '../../src/exports/sensitivity-study.js';
 import { renderSummary } from '../../src/reports/summary.js';
+import { screenedDemo } from '../support/screened-demo.js';
 import { MADE, demoCopy } from '../support/study-folder.js';
 
 describe('the outlook of a run', () => {
   let path = '';
   let data: PageData;
   beforeAll(async () => {
-    path = demoCopy();
-    ({ data } = await screenStudy(path, { made: MADE }));
+    path = await screenedDemo();
+    data = await withStudyDatabase(path, (db) => pageDataOf(db, 1, 'si'));
   }, 60_000);
 
   it('tells what the money of the study buys, as budget does, and what the whole list would cost', async () => {
@@ -80,9 +84,10 @@ describe('the outlook of a run', () => {
   });
 
   it('asks for a sum where neither study nor command names one', async () => {
-    const without = demoCopy({ study: (text) => text.replace('  money: 90000\n', '') });
-    const { data: page } = await screenStudy(without, { made: MADE });
-    expect(page.summary.budget?.plan).toBeNull();
+    const without = await screenedDemo();
+    writeFileSync(without, readFileSync(without, 'utf8').replace('  money: 90000\n', ''));
+    const told = await withStudyDatabase(without, (db, loaded) => budgetOutlook(db, loaded, 1, 227));
+    expect(told).toMatchObject({ plan: null, problem: null, list_cost: data.summary.budget!.list_cost });
     await expect(budgetStudy(without)).rejects.toThrow(/no sum of money/);
   });
 });

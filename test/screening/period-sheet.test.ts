@@ -5,21 +5,19 @@ import { DIRECTIONS } from '../../src/engineering/direction.js';
 import { explainBuilding } from '../../src/screening/explain.js';
 import { periodClass, periodSheet } from '../../src/screening/period-sheet.js';
 import { STRUCTURE_SPEC } from '../../src/screening/read-buildings.js';
-import { openStudyDatabase, screen } from '../../src/screening/screen.js';
+import { openStudyDatabase } from '../../src/screening/screen.js';
 import type { Database } from '../../src/store/database.js';
 import { loadStudy } from '../../src/study/load.js';
-import { MADE, demoCopy } from '../support/study-folder.js';
+import { screenedDemo } from '../support/screened-demo.js';
 
 /** Rows that know anything of their structure know one of these. */
 const STRUCTURE = Object.keys(STRUCTURE_SPEC).map((name) => `CAST(b."${name}" AS VARCHAR)`);
 
 let db: Database;
-let runId: number;
+const runId = 1;
 
 beforeAll(async () => {
-  const loaded = await loadStudy(demoCopy());
-  db = await openStudyDatabase(loaded);
-  ({ runId } = await screen(db, loaded, { made: MADE }));
+  db = await openStudyDatabase(await loadStudy(await screenedDemo()));
 }, 120_000);
 afterAll(() => {
   db.close();

@@ -10,6 +10,7 @@ import type { Database } from '../../src/store/database.js';
 import { loadStudy } from '../../src/study/load.js';
 import type { LoadedStudy } from '../../src/study/load.js';
 import { parameterFromText, rangeFromText, withParameters } from '../../src/study/parameters.js';
+import { screenedDemo } from '../support/screened-demo.js';
 import { MADE, demoCopy } from '../support/study-folder.js';
 
 const RESULTS = `SELECT building_index, ${RESULT_COLUMNS.map(({ name }) => `"${name}"`).join(', ')}
@@ -27,13 +28,13 @@ async function kept(db: Database, run: number): Promise<unknown> {
 /** A demo screened once, as run 1, whose inventory, pairs and table of chances have then gone. */
 async function screenedAndGone<T>(
   work: (db: Database, loaded: LoadedStudy) => Promise<T>,
-  change: Parameters<typeof demoCopy>[0] = {},
+  change?: Parameters<typeof demoCopy>[0],
 ): Promise<T> {
-  const path = demoCopy(change);
+  const path = change === undefined ? await screenedDemo() : demoCopy(change);
   const loaded = await loadStudy(path);
   const db = await openStudyDatabase(loaded);
   try {
-    await screen(db, loaded, { made: MADE });
+    if (change !== undefined) await screen(db, loaded, { made: MADE });
     for (const name of ['inventory.csv', 'neighbours.csv', 'system-prior.csv']) rmSync(join(dirname(path), name));
     return await work(db, loaded);
   } finally {
@@ -86,7 +87,7 @@ describe('refresh', () => {
     await screen(other, whole, { made: MADE });
     const expected = await kept(other, 1);
     other.close();
-    await screenedAndGone(async (db, loaded) => {
+    const work = async (db: Database, loaded: LoadedStudy): Promise<void> => {
       const first = await kept(db, 1);
       expect(await refreshed(db, 1, await set(loaded, ...changes))).toBe(2);
       expect(await kept(db, 2)).toEqual(expected);
@@ -95,7 +96,9 @@ describe('refresh', () => {
       expect(await kept(db, 3)).toEqual(first);
       // one inventory stands under all three
       expect(await db.value('SELECT count(*) FROM inventory')).toBe(1);
-    });
+    };
+    // screened anew, without the outlook that the shared one has
+    await screenedAndGone(work, {});
   }, 120_000);
 
   it('leaves the order of the ratio ranking when every spectral acceleration is scaled by one constant', async () => {

@@ -14,6 +14,7 @@ import { openStudyDatabase, screen } from '../../src/screening/screen.js';
 import type { ScreenOutcome } from '../../src/screening/screen.js';
 import type { Database } from '../../src/store/database.js';
 import { loadStudy } from '../../src/study/load.js';
+import { screenedDemo } from '../support/screened-demo.js';
 import { MADE, demoCopy } from '../support/study-folder.js';
 
 async function screened<T>(path: string, look: (db: Database, outcome: ScreenOutcome) => Promise<T>): Promise<T> {
@@ -26,13 +27,23 @@ async function screened<T>(path: string, look: (db: Database, outcome: ScreenOut
   }
 }
 
+/** As above of the demo as it is, which is screened once for all tests. */
+async function onDemo<T>(look: (db: Database, run: Awaited<ReturnType<typeof readRun>>) => Promise<T>): Promise<T> {
+  const db = await openStudyDatabase(await loadStudy(await screenedDemo()));
+  try {
+    return await look(db, await readRun(db, 1));
+  } finally {
+    db.close();
+  }
+}
+
 const RESULTS = `SELECT b.id, ${RESULT_COLUMNS.map(({ name }) => `r."${name}"`).join(', ')}
   FROM result r JOIN run USING (run_id) JOIN building b ON b.inventory_id = run.inventory_id AND b.building_index = r.building_index
   WHERE r.run_id = ? ORDER BY b.id`;
 
 describe('screen', () => {
   it('recomputes every demo building with a trace to the same bits as stored', { timeout: 120_000 }, async () => {
-    await screened(demoCopy(), async (db, { runId, taken }) => {
+    await onDemo(async (db, { run_id: runId, settings, inventory_id, summary }) => {
       const rows = await db.rows<{
         id: string;
         ln_priority: number | null;
@@ -40,9 +51,8 @@ describe('screen', () => {
         capacity_g: number | null;
       }>(RESULTS, [runId]);
       expect(rows.length).toBeGreaterThan(230);
-      const { settings } = await readRun(db, runId);
-      const { columns } = await readBuildings(db, taken.inventoryId, { from: 0, to: taken.buildings });
-      const read = buildingReader(columns, await readPools(db, taken.inventoryId));
+      const { columns } = await readBuildings(db, inventory_id, { from: 0, to: summary.buildings });
+      const read = buildingReader(columns, await readPools(db, inventory_id));
       const buildings = new Map(columns.id.map((id, i) => [id, read(i)]));
       const context = compileContext(settings);
       for (const { id, ln_priority, sa_g, capacity_g } of rows) {
@@ -73,7 +83,7 @@ describe('screen', () => {
   });
 
   it('accounts for every row, chances sum to the list size and the tie groups are contiguous', async () => {
-    await screened(demoCopy(), async (db, { runId, summary }) => {
+    await onDemo(async (db, { run_id: runId, summary }) => {
       expect(summary.account.reduce((sum, { rows }) => sum + rows, 0)).toBe(summary.rows_in);
       const rows = await db.rows<{
         rank: number;
@@ -96,7 +106,7 @@ describe('screen', () => {
   });
 
   it('gives the same results whatever the order of the rows', async () => {
-    const straight = await screened(demoCopy(), (db, { runId }) => db.rows(RESULTS, [runId]));
+    const straight = await onDemo((db, { run_id }) => db.rows(RESULTS, [run_id]));
     // turned round from the third row on; the two rows that share an id keep their order, because the first of them is taken
     const turned = demoCopy({
       inventory: (text) => {
@@ -152,7 +162,7 @@ describe('screen', () => {
   });
 
   it('gives buildings of equal demand one demand rank, from the first of their places to the last', async () => {
-    await screened(demoCopy(), async (db, { runId, summary }) => {
+    await onDemo(async (db, { run_id: runId, summary }) => {
       const blocks = await db.rows<{
         demand_rank: number;
         demand_rank_last: number;

@@ -16,7 +16,8 @@ import { visitsOf } from '../../src/screening/survey-outlook.js';
 import type { Database } from '../../src/store/database.js';
 import { loadStudy } from '../../src/study/load.js';
 import type { LoadedStudy } from '../../src/study/load.js';
-import { MADE, demoCopy } from '../support/study-folder.js';
+import { screenedDemo } from '../support/screened-demo.js';
+import { MADE } from '../support/study-folder.js';
 
 const EVERYTHING =
   'system,year_built,storeys_above,height_m,soft_storey,use,occupants_peak,design_base_shear_coefficient';
@@ -35,7 +36,7 @@ const CELLS: Readonly<Record<string, string>> = {
 
 // one study, screened, asked, answered, screened again: each test goes on where the one before ended
 describe('planSurvey, between answers and the next screening', () => {
-  const path = demoCopy();
+  let path = '';
   let loaded: LoadedStudy;
   let db: Database;
   let before: SurveyPlan;
@@ -50,16 +51,16 @@ describe('planSurvey, between answers and the next screening', () => {
   const plan = (run: number): Promise<SurveyPlan> =>
     planSurvey(db, run, {
       visits: visitsOf(loaded.study),
-      limits: { hours: 200, money: Infinity },
+      limits: { hours: 80, money: Infinity },
     });
   const askedAt = ({ steps }: SurveyPlan, id: string): readonly string[] => [
     ...new Set(steps.filter((step) => step.id === id).flatMap(({ asks }) => asks)),
   ];
 
   beforeAll(async () => {
+    path = await screenedDemo();
     loaded = await loadStudy(path);
     db = await openStudyDatabase(loaded);
-    await screen(db, loaded, { made: MADE });
     before = await plan(1);
     const many = before.steps.filter(({ asks }) => asks.includes('system') && asks.length > 1).map(({ id }) => id);
     [whole = '', part = ''] = [...new Set(many)];
