@@ -148,6 +148,8 @@ export interface Building {
   /** Name of the spectrum it reads, where the inventory says so itself. */
   readonly spectrum: string | null;
   readonly design_base_shear_coefficient: number;
+  /** V/W of the wind it was designed for, strength level. */
+  readonly wind_base_shear_coefficient: number;
   readonly design_level: DesignLevel | null;
   readonly capacity_sa_g: number;
   readonly structure: Structure | null;

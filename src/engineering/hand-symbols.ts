@@ -45,6 +45,7 @@ const SYMBOLS: Readonly<Record<string, string>> = {
   level_factor: 'f_level',
   strength_coefficient: 'C_s',
   design_base_shear_coefficient: 'C_d',
+  wind_coefficient: 'C_wind',
   mass_share: 'α₁',
   modifier_ms: 'M_s',
   modification_c: 'C_mod',

@@ -21,6 +21,7 @@ const SMALLEST = new Set([
   'year_built',
   'capacity_sa_g',
   'design_base_shear_coefficient',
+  'wind_base_shear_coefficient',
   'retrofit_level',
   'vs30_mps',
 ]);

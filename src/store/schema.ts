@@ -140,6 +140,7 @@ export const MIGRATIONS: readonly Migration[] = [
       `ALTER TABLE building_extra ALTER COLUMN "design_level" SET DATA TYPE ENUM ('working', 'strength', 'none')`,
     ],
   },
+  { version: 5, statements: ['ALTER TABLE building_extra ADD COLUMN "wind_base_shear_coefficient" DOUBLE'] },
 ];
 
 /**

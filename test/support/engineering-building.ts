@@ -51,6 +51,7 @@ const BLANK: Building = {
   lat: NaN,
   spectrum: null,
   design_base_shear_coefficient: NaN,
+  wind_base_shear_coefficient: NaN,
   design_level: null,
   capacity_sa_g: NaN,
   structure: null,

@@ -120,6 +120,7 @@ const RANGES: Readonly<Record<string, fc.Arbitrary<number>>> = {
   strength_coefficient: between(0.01, 1),
   reduction: between(1, 6),
   retrofit_level: between(0.3, 1.2),
+  wind_coefficient: between(0, 0.2),
   irregularity: between(0.3, 1),
   mass_share: between(0.6, 1),
   occupants_peak: between(0, 1e5),

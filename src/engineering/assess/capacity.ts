@@ -78,8 +78,14 @@ function againAtHeight(
     design_base_shear_coefficient: coefficient,
     level_factor: levelFactor,
     retrofit_level: which.retrofit_level,
+    wind_coefficient: 0,
   });
   return { strength_coefficient, overstrength, ductility, lnStrength: ln(strength_coefficient * overstrength) };
+}
+
+/** V/W of the wind it was designed for, 0 where it is not given. */
+function windOf({ wind_base_shear_coefficient: wind }: Building): number {
+  return wind > 0 ? wind : 0;
 }
 
 /** Heights kept of one design: a table in tenths of a metre has fewer. */
@@ -93,8 +99,9 @@ export function keptCapacity(
   height_m: number,
   context: AssessContext,
 ): CapacityAtHeight {
-  // few are strengthened, and what they had before counts too: nothing of theirs is kept
-  if (which.strengthened) return capacityAtHeight(building, which, direction, height_m, null, context);
+  // few are strengthened, and what they had before counts too, or have a wind of their own: nothing of theirs is kept
+  if (which.strengthened || windOf(building) > 0)
+    return capacityAtHeight(building, which, direction, height_m, null, context);
   const design = which.design[direction];
   const { dependsOn: needs, found } = design;
   if (needs === 'more') {
@@ -102,7 +109,7 @@ export function keptCapacity(
       design.last === null
         ? capacityOfCase(building, which, direction, height_m, null, context)
         : againAtHeight(building, which, direction, height_m, design.last, context);
-    return atLeastUndesigned(design.last, which, direction, context);
+    return atLeastUndesigned(design.last, building, which, direction, context);
   }
   const key = needs === 'height' ? height_m : needs === 'storeys' ? building.storeys.value : 0;
   let capacity = found.get(key);
@@ -134,6 +141,7 @@ export function capacityAtHeight(
   const of = (one: Case, step?: Trace): CapacityAtHeight =>
     atLeastUndesigned(
       capacityOfCase(building, one, direction, height_m, null, context, step),
+      building,
       one,
       direction,
       context,
@@ -166,6 +174,7 @@ function elastic({ lnStrength, ductility }: CapacityAtHeight): number {
 /** `found`, its ductility no less than gives what the system has with no design for earthquakes: a design takes nothing away [judgement]. */
 function atLeastUndesigned(
   found: CapacityAtHeight,
+  building: Building,
   which: Case,
   direction: DirectionName,
   { assumed, strength }: AssessContext,
@@ -174,7 +183,8 @@ function atLeastUndesigned(
   const { edition, strengthened } = which;
   if (edition === null || strengthened) return found;
   const system = direction === 'longitudinal' ? which.system : which.system_transverse;
-  const none = strength.constants.floor_g * assumed.overstrength * ductilityOf(system, 'none', assumed.ductility);
+  const least = Math.max(strength.constants.floor_g, windOf(building));
+  const none = least * assumed.overstrength * ductilityOf(system, 'none', assumed.ductility);
   const ductility = none / (found.strength_coefficient * found.overstrength);
   if (ductility <= found.ductility) return found;
   trace?.choice({
@@ -232,12 +242,15 @@ function capacityOfCase(
       reduction: design.reduction,
     };
   }
+  if (windOf(building) > 0)
+    trace?.value('wind_coefficient', windOf(building), 'given', 'design for wind, from the inventory');
   const strength_coefficient = apply(
     context.strength,
     {
       design_base_shear_coefficient: design.coefficient,
       level_factor: design.levelFactor,
       retrofit_level: which.retrofit_level,
+      wind_coefficient: windOf(building),
     },
     trace,
   );

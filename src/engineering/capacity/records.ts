@@ -44,6 +44,7 @@ interface StrengthInput {
   readonly design_base_shear_coefficient: number;
   readonly level_factor: number;
   readonly retrofit_level: number;
+  readonly wind_coefficient: number;
 }
 const strengthFamily: Family<StrengthInput, { readonly floor_g: number }> = {
   id: 'capacity/strength',
@@ -59,10 +60,16 @@ const strengthFamily: Family<StrengthInput, { readonly floor_g: number }> = {
       meaning: "share of its year's code a retrofit reached, else 1",
       fallback: 1,
     },
+    {
+      name: 'wind_coefficient',
+      kind: 'number',
+      meaning: 'V/W of the wind at strength level, where given',
+      fallback: 0,
+    },
   ],
-  expression: 'max(design_base_shear_coefficient * level_factor * retrofit_level, floor_g)',
-  evaluate: ({ design_base_shear_coefficient, level_factor, retrofit_level }, { floor_g }) =>
-    Math.max(design_base_shear_coefficient * level_factor * retrofit_level, floor_g),
+  expression: 'max(design_base_shear_coefficient * level_factor * retrofit_level, wind_coefficient, floor_g)',
+  evaluate: ({ design_base_shear_coefficient, level_factor, retrofit_level, wind_coefficient }, { floor_g }) =>
+    Math.max(design_base_shear_coefficient * level_factor * retrofit_level, wind_coefficient, floor_g),
 };
 
 export const STRENGTH = record({
