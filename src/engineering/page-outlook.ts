@@ -1,5 +1,5 @@
 /** What a run tells of a survey, of the money and of its assumptions. */
-import type { Unknown } from './priority/survey-value.js';
+import type { Unknown } from './priority/learnable.js';
 
 /** One visit of a survey. */
 export interface SurveyVisit {
@@ -16,7 +16,8 @@ export interface SurveyVisit {
   readonly again?: boolean;
   /** In units of the priority of the median building. */
   readonly value: number;
-  readonly value_per_cost: number;
+  /** For an hour, or for money; null where the visit costs none of what is weighed. */
+  readonly value_per_cost: number | null;
   readonly hours_so_far: number;
   /** Expected wrong places of the list once all visits to here are made. */
   readonly expected_wrong_places: number;
@@ -70,8 +71,10 @@ export interface SensitivityOutlook {
   readonly sample: { readonly every: number; readonly buildings: number } | null;
   /** Ids that stay on the list whichever of these is switched, by rank. */
   readonly always: readonly string[];
-  /** How many of the places are safe from other weights of slope, people and importance; left out where people do not count. */
+  /** How many of the places are safe from other weights of people, importance and slope; left out where people do not count. */
   readonly weights?: {
+    /** False where the slope stays as read from two levels. */
+    readonly slope?: boolean;
     readonly draws: number;
     readonly safe: number;
     readonly safe_share: number;

@@ -1,6 +1,6 @@
 /** The answers of surveys that a study holds: listed, and taken back. */
-import { UNKNOWNS } from '../engineering/priority/survey-value.js';
-import type { Unknown } from '../engineering/priority/survey-value.js';
+import { UNKNOWNS } from '../engineering/priority/learnable.js';
+import type { Unknown } from '../engineering/priority/learnable.js';
 import { UserError, showValue } from '../errors.js';
 import { ANSWERS, ANSWER_COLUMNS } from '../inventory/answers.js';
 import { answersSince, heldAnswers, markWithdrawn } from '../inventory/kept-answers.js';

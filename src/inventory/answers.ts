@@ -6,7 +6,7 @@ import { createHash } from 'node:crypto';
 import { findColumn } from '../engineering/columns.js';
 import type { InventoryColumn } from '../engineering/columns.js';
 import { findUnit } from '../engineering/units.js';
-import type { Unknown } from '../engineering/priority/survey-value.js';
+import type { Unknown } from '../engineering/priority/learnable.js';
 import { Bug } from '../errors.js';
 import type { Database } from '../store/database.js';
 import { quoteName, quoteText } from '../store/sql.js';

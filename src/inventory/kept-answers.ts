@@ -3,8 +3,8 @@
  * out; one that was withdrawn stays for the record and counts no longer.
  */
 import type { Failed } from '../engineering/priority/campaign.js';
-import type { Unknown } from '../engineering/priority/survey-value.js';
-import { UNKNOWNS } from '../engineering/priority/survey-value.js';
+import type { Unknown } from '../engineering/priority/learnable.js';
+import { UNKNOWNS } from '../engineering/priority/learnable.js';
 import { Bug } from '../errors.js';
 import type { Database } from '../store/database.js';
 import { quoteText } from '../store/sql.js';

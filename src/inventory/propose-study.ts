@@ -5,7 +5,7 @@ import { findColumn } from '../engineering/columns.js';
 import { BLANK } from '../study/inventory-schema.js';
 import { foldWord } from './cell.js';
 import { detectDecimal } from './decimal-mark.js';
-import { guessUse } from './guess-words.js';
+import { guessSystem, guessUse } from './guess-words.js';
 import { isBlank, proposeMapping } from './propose-mapping.js';
 import type { Proposal } from './propose-mapping.js';
 import { readSample } from './sample.js';
@@ -45,8 +45,7 @@ export function proposeStudy(path: string): ProposedStudy {
     ...siteLines(proposal, words),
     ...proposal.unused.map((name) => `  # not used: ${quote(name)}`),
     '',
-    ...wordLines('use', words),
-    ...wordLines('system', unknownWords(sample, proposal, 'system')),
+    ...wordLines({ use: words, system: unknownWords(sample, proposal, 'system') }),
     '',
     `hazard:  ${MARK} the design spectra of the site, and who reads which`,
     '  spectra:',
@@ -103,17 +102,23 @@ function unknownWords(sample: Sample, proposal: Proposal, column: 'use' | 'syste
   const theirs = proposal.columns.find(({ ours }) => ours === column)?.theirs;
   if (theirs === undefined) return [];
   const position = sample.header.indexOf(theirs);
+  // Spellings that the study takes for one word count as the first of them.
+  const spelling = new Map<string, string>();
   const counts = new Map<string, number>();
   for (const row of sample.rows) {
     const cell = row[position]?.trim() ?? '';
-    if (!isBlank(cell)) counts.set(cell, (counts.get(cell) ?? 0) + 1);
+    if (isBlank(cell)) continue;
+    const folded = foldWord(cell);
+    const word = spelling.get(folded) ?? cell;
+    spelling.set(folded, word);
+    counts.set(word, (counts.get(word) ?? 0) + 1);
   }
   const ours = findColumn(column)?.words ?? [];
   return [...counts]
     .filter(([word]) => !ours.includes(foldWord(word)))
     .sort(([a, n], [b, m]) => m - n || (a < b ? -1 : 1))
     .slice(0, MOST_WORDS)
-    .map(([word, rows]) => ({ theirs: word, rows, guess: column === 'use' ? guessUse(word) : undefined }));
+    .map(([word, rows]) => ({ theirs: word, rows, guess: column === 'use' ? guessUse(word) : guessSystem(word) }));
 }
 
 function siteLines(proposal: Proposal, words: readonly UnknownWord[]): string[] {
@@ -127,10 +132,12 @@ function siteLines(proposal: Proposal, words: readonly UnknownWord[]): string[] 
 }
 
 // Commented out as a whole: a guess at what a word means is for the owner to take over.
-function wordLines(column: string, words: readonly UnknownWord[]): string[] {
-  const buildings = words.filter(({ guess }) => guess !== 'no building');
-  if (buildings.length === 0) return [];
-  const line = ({ theirs, rows, guess }: UnknownWord): string =>
-    `#     ${quote(theirs)}: ${guess ?? 'unknown'}  ${MARK} ${rows} sampled rows; ${guess === undefined ? `which ${column} is it?` : `is it ${guess}?`}`;
-  return ['# words:', `#   ${column}:`, ...buildings.map(line), ''];
+function wordLines(words: Readonly<Record<string, readonly UnknownWord[]>>): string[] {
+  const lines = Object.entries(words).flatMap(([column, all]) => {
+    const line = ({ theirs, rows, guess }: UnknownWord): string =>
+      `#     ${quote(theirs)}: ${guess ?? 'unknown'}  ${MARK} ${rows} sampled rows; ${guess === undefined ? `which ${column} is it?` : `is it ${guess}?`}`;
+    const ofBuildings = all.filter(({ guess }) => guess !== 'no building');
+    return ofBuildings.length === 0 ? [] : [`#   ${column}:`, ...ofBuildings.map(line)];
+  });
+  return lines.length === 0 ? [] : ['# words:', ...lines, ''];
 }

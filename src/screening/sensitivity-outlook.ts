@@ -38,8 +38,14 @@ export async function sensitivityOutlook(
   };
 }
 
-function weightsTold({ draws, safe, safe_share, places }: WeightSpace): NonNullable<SensitivityOutlook['weights']> {
-  return { draws, safe, safe_share, places };
+function weightsTold({
+  draws,
+  slope,
+  safe,
+  safe_share,
+  places,
+}: WeightSpace): NonNullable<SensitivityOutlook['weights']> {
+  return { draws, slope: slope !== null, safe, safe_share, places };
 }
 
 /** The first switch of every assumption: what is ranked by is the study's question, not an assumption of the answer. */

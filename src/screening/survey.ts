@@ -10,8 +10,10 @@ import { knownSet, bestCampaign, withinReach } from '../engineering/priority/cam
 import type { Mixture } from '../engineering/priority/mixture.js';
 import { commonTo, rankBasis } from '../engineering/priority/rank.js';
 import type { RankBasis } from '../engineering/priority/rank.js';
-import type { Edge, Unknown } from '../engineering/priority/survey-value.js';
-import { KNOWN_CHANCE, edgeOf, mostWorth, shareOf, worthOf } from '../engineering/priority/survey-value.js';
+import type { Unknown } from '../engineering/priority/learnable.js';
+import type { Edge } from '../engineering/priority/survey-value.js';
+import { shareOf } from '../engineering/priority/learnable.js';
+import { KNOWN_CHANCE, edgeOf, mostWorth, worthOf } from '../engineering/priority/survey-value.js';
 import { seenFromEdge } from '../engineering/priority/unknowns-from-edge.js';
 import type { HazardGrids } from '../engineering/spectrum/grid.js';
 import { UserError } from '../errors.js';

@@ -1,7 +1,6 @@
 /** How the list of a kept run hangs on the weights: the share of a range of weightings in which each building is on it. */
 import { assumedWith } from '../engineering/assess/assumed.js';
 import type { AssessSettings } from '../engineering/assess/settings.js';
-import { ln } from '../engineering/numeric/elementary.js';
 import { acceptability } from '../engineering/priority/weight-space.js';
 import type { Range, WeightRanges } from '../engineering/priority/weight-space.js';
 import type { Database } from '../store/database.js';
@@ -28,10 +27,11 @@ export interface WeighedPlace {
 
 export interface WeightSpace {
   readonly draws: number;
-  /** Exponents of people and importance, and slopes, that were drawn between; one number twice: not drawn. */
+  /** Exponents of people and importance, and slopes, that were drawn between. */
   readonly people: Range;
   readonly importance: Range;
-  readonly slope: Range;
+  /** Null where the slopes are read from two levels: then each stays as read. */
+  readonly slope: Range | null;
   readonly safe_share: number;
   /** Listed buildings that are on the list in `safe_share` of the weightings or more. */
   readonly safe: number;
@@ -60,19 +60,15 @@ export async function weightSpace(
   );
   const n = rows.priority.length;
   const { peopleWeight, importanceWeight } = assumedWith(settings.assumed);
-  const slope: Range = settings.slopeSource === 'two levels' ? [USUAL_SLOPE, USUAL_SLOPE] : SLOPE;
+  const slope = settings.slopeSource === 'two levels' ? null : SLOPE;
   const ranges: WeightRanges = {
-    slope: [slope[0] / USUAL_SLOPE, slope[1] / USUAL_SLOPE],
+    slope: slope === null ? [1, 1] : [slope[0] / USUAL_SLOPE, slope[1] / USUAL_SLOPE],
     people: PEOPLE,
     importance: IMPORTANCE,
   };
   const draws = Math.max(LEAST_DRAWS, Math.min(DRAWS, Math.floor(MOST_NUMBERS / Math.max(1, n))));
   const shares = acceptability(
-    {
-      lnPriority: rows.priority,
-      lnPeople: rows.people.map((value) => ln(value)),
-      lnImportance: rows.importance.map((value) => (value > 0 ? ln(value) : 0)),
-    },
+    { lnPriority: rows.priority, people: rows.people, importance: rows.importance },
     { people: peopleWeight, importance: importanceWeight },
     ranges,
     places,

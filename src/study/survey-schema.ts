@@ -1,7 +1,7 @@
 /** The study's kinds of visit: what each costs and how surely it finds each unknown out. */
 import type { z } from 'zod';
-import { UNKNOWNS } from '../engineering/priority/survey-value.js';
-import type { Unknown } from '../engineering/priority/survey-value.js';
+import { UNKNOWNS } from '../engineering/priority/learnable.js';
+import type { Unknown } from '../engineering/priority/learnable.js';
 import { mapping, number, strict, text } from './fields.js';
 import type { Finding } from './problems.js';
 

@@ -2,19 +2,13 @@ import { readFileSync, writeFileSync } from 'node:fs';
 import { beforeAll, describe, expect, it } from 'vitest';
 import { surveyStudy } from '../../src/exports/survey-study.js';
 import { perCostWord, planSentences, visitWord } from '../../src/reports/survey/words.js';
-import { openStudyDatabase, screen } from '../../src/screening/screen.js';
-import { loadStudy } from '../../src/study/load.js';
-import { MADE, demoCopy } from '../support/study-folder.js';
+import { screenedDemo } from '../support/screened-demo.js';
 
 // No outside source for these checks: what is said is our own contract. Hours are those of the usual visits.
 let path = '';
 
 beforeAll(async () => {
-  path = demoCopy();
-  const loaded = await loadStudy(path);
-  const db = await openStudyDatabase(loaded);
-  await screen(db, loaded, { made: MADE });
-  db.close();
+  path = await screenedDemo();
 }, 60_000);
 
 describe('surveyStudy', () => {
@@ -37,6 +31,7 @@ describe('surveyStudy', () => {
     const { plan } = await surveyStudy(path, { hours: 1, money: 900, page: false });
     expect(plan.steps.length).toBeGreaterThan(0);
     expect(new Set(plan.steps.map(perCostWord))).toEqual(new Set(['–']));
+    expect(new Set(plan.steps.map(({ value_per_cost }) => value_per_cost))).toEqual(new Set([null]));
     const planned = await surveyStudy(path, { money: 900, page: false });
     expect(perCostWord(planned.plan.steps[0]!)).toMatch(/^0\.0*[1-9]/);
     const none = { ...plan, steps: [] };

@@ -1,5 +1,7 @@
+import { readFileSync } from 'node:fs';
 import { fileURLToPath } from 'node:url';
 import { describe, expect, it } from 'vitest';
+import { parse } from 'yaml';
 import { COLUMNS } from '../../src/engineering/columns.js';
 import { proposeMapping } from '../../src/inventory/propose-mapping.js';
 import { proposeStudy } from '../../src/inventory/propose-study.js';
@@ -184,5 +186,29 @@ describe('proposeStudy', () => {
     // All that is wrong with it is what the owner has to say.
     expect(problems.length).toBeGreaterThan(0);
     expect(problems.filter((key) => !/^(hazard|code_history)/.test(key))).toEqual([]);
+  });
+
+  it('maps the demo as its own study does, and guesses its words as questions', () => {
+    const path = fileURLToPath(new URL('../../data-demo/inventory.csv', import.meta.url));
+    const own = parse(readFileSync(new URL('../../data-demo/study.yaml', import.meta.url), 'utf8')) as {
+      inventory: { columns: Record<string, string | { column: string }> };
+      words: { system: Record<string, string>; use: Record<string, string> };
+    };
+    const { text, proposal } = proposeStudy(path);
+    const theirs = Object.entries(own.inventory.columns).map(([ours, one]) => [
+      ours,
+      typeof one === 'string' ? one : one.column,
+    ]);
+    const found = Object.fromEntries(proposal.columns.map((one) => [one.ours, one.theirs]));
+    // "Column feet" reads as a length
+    expect(theirs.filter(([ours, name]) => found[ours!] !== name)).toEqual([['base_fixity', 'Column feet']]);
+    const lines = text.split('\n');
+    const at = lines.indexOf('# words:');
+    const block = lines.slice(at, lines.indexOf('', at)).map((line) => line.slice(2));
+    const { words } = parse(block.join('\n')) as Pick<typeof own, 'words'>;
+    const fold = (all: Record<string, string>): Record<string, string> =>
+      Object.fromEntries(Object.entries(all).map(([word, ours]) => [word.toLowerCase(), ours]));
+    expect(fold(words.system)).toEqual(fold({ ...own.words.system, 'lift slab': 'unknown' }));
+    expect(fold(words.use)).toEqual({ ...fold(own.words.use), 'open yard': 'unknown', mixed: 'unknown' });
   });
 });

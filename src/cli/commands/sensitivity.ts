@@ -157,8 +157,8 @@ function weightLines({ weights }: Sensitivity, columns: number): string[] {
 
 function weightSentence({ draws, people, importance, slope, safe, safe_share, places }: WeightSpace): string {
   const range = ([low, high]: readonly [number, number]): string =>
-    low === high ? 'as read' : `${formatNumber(low, 2)} to ${formatNumber(high, 2)}`;
-  return `${formatCount(draws)} weightings, exponent of the people ${range(people)}, of the importance ${range(importance)}, slope ${range(slope)}, drawn evenly: ${formatCount(safe)} of the ${formatCount(places)} on the list are on it in ${formatShare(safe_share)} of them or more.`;
+    `${formatNumber(low, 2)} to ${formatNumber(high, 2)}`;
+  return `${formatCount(draws)} weightings, exponent of the people ${range(people)}, of the importance ${range(importance)}, slope ${slope === null ? 'as read' : range(slope)}, drawn evenly: ${formatCount(safe)} of the ${formatCount(places)} on the list are on it in ${formatShare(safe_share)} of them or more.`;
 }
 
 function leftLines({ not_switched }: Sensitivity, columns: number): string[] {

@@ -1,8 +1,8 @@
 /** Where the uncertainty of a building's priority comes from: shares of the variance of ln S, the largest first. */
 import type { Building } from '../building.js';
 import { mixtureMoments } from '../priority/mixture.js';
-import { shareOf } from '../priority/survey-value.js';
-import type { Unknown, Unknowns } from '../priority/survey-value.js';
+import { shareOf } from '../priority/learnable.js';
+import type { Unknown, Unknowns } from '../priority/learnable.js';
 import { casesOf } from './cases.js';
 import { slopeFor } from './context.js';
 import { peopleOf } from './people.js';

@@ -2,7 +2,7 @@
 import type { Building } from '../building.js';
 import { MixtureBuilder, MixturePool, labelOf } from '../priority/mixture.js';
 import type { Mixture } from '../priority/mixture.js';
-import type { Learnable, Unknowns } from '../priority/survey-value.js';
+import type { Learnable, Unknowns } from '../priority/learnable.js';
 import { casesOf } from './cases.js';
 import { isDesigned } from './edition-rows.js';
 import type { Case, Cases, Irregularity } from './case-memory.js';

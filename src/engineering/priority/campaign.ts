@@ -1,5 +1,6 @@
 /** The order of visits of a survey: always the one that is worth most for its cost, given the visits planned before it. */
-import type { Unknown, Worth } from './survey-value.js';
+import type { Unknown } from './learnable.js';
+import type { Worth } from './survey-value.js';
 import { valueAt, worthAt } from './survey-value.js';
 
 /** One kind of visit. */
@@ -40,7 +41,8 @@ export interface PlannedVisit {
   readonly asks: readonly Unknown[];
   /** In units of S, beyond what earlier visits to the building are worth. */
   readonly value: number;
-  readonly valuePerCost: number;
+  /** Null where the visit costs none of what is weighed. */
+  readonly valuePerCost: number | null;
   /** All visits to here. */
   readonly hours: number;
   readonly money: number;
@@ -133,7 +135,7 @@ export function planCampaign(
       visit,
       asks: asked(best, visit),
       value: value - best.value,
-      valuePerCost: ratio,
+      valuePerCost: costOf(visit, limits, cost) > 0 ? ratio : null,
       hours: limits.hours === Infinity ? sum(planned, 'hours') + visit.hours : limits.hours - left.hours,
       money: limits.money === Infinity ? sum(planned, 'money') + visit.money : limits.money - left.money,
       wrongBefore: Number.isNaN(best.wrong) ? best.candidate.worth.wrongOf(knownSet(best.candidate)) : best.wrong,

@@ -2,7 +2,7 @@
 import { NO_LABEL, labelOf } from './mixture.js';
 import { changedMixture, changesOf } from './shared.js';
 import type { Common } from './shared.js';
-import type { Learnable, Unknowns } from './survey-value.js';
+import type { Learnable, Unknowns } from './learnable.js';
 
 /**
  * `unknowns` of building i as seen from the edge of the list. What drawings tell of the table of an edition keeps no more than the

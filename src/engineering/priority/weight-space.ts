@@ -2,6 +2,7 @@
  * Which buildings stay on the list whatever weights are thought right: slope, exponent of the people and exponent of the importance drawn
  * evenly from their ranges, the order taken by medians (Lahdelma and Salminen 2001, from memory: rank acceptability over unknown weights).
  */
+import { ln } from '../numeric/elementary.js';
 import { philox } from '../numeric/philox.js';
 
 /** Evenly drawn between the two. */
@@ -18,8 +19,10 @@ export interface WeightRanges {
 export interface WeighedTerms {
   /** Median of ln S by the weights of the run. */
   readonly lnPriority: Float64Array;
-  readonly lnPeople: Float64Array;
-  readonly lnImportance: Float64Array;
+  /** People inside on average, above 0. */
+  readonly people: Float64Array;
+  /** Importance factor; what is not above 0 counts as 1. */
+  readonly importance: Float64Array;
 }
 
 /**
@@ -27,14 +30,17 @@ export interface WeighedTerms {
  * `importance` are the exponents in `lnPriority`.
  */
 export function acceptability(
-  { lnPriority, lnPeople, lnImportance }: WeighedTerms,
+  terms: WeighedTerms,
   { people, importance }: { readonly people: number; readonly importance: number },
   ranges: WeightRanges,
   places: number,
   draws: number,
   seed: number,
 ): Float64Array {
+  const { lnPriority } = terms;
   const n = lnPriority.length;
+  const lnPeople = terms.people.map((value) => ln(value));
+  const lnImportance = terms.importance.map((value) => (value > 0 ? ln(value) : 0));
   const share = new Float64Array(n);
   const most = Math.min(places, n);
   if (most === 0) return share;

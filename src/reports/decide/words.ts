@@ -61,7 +61,7 @@ export function sensitivitySentences(found: SensitivityOutlook): readonly string
     ...(first === undefined ? [] : [`What moves it most: ${first.statement.replace(/\.$/, '')}, ${first.to}: ${formatCount(first.overlap)} of ${formatCount(first.places)} stay.`]),
     ...(weights === undefined
       ? []
-      : [`With slope, people and importance weighed otherwise, all at once, ${formatCount(weights.safe)} of the ${formatCount(weights.places)} keep their place in ${formatShare(weights.safe_share)} of ${formatCount(weights.draws)} weightings or more.`]),
+      : [`With ${weights.slope === false ? '' : 'slope, '}people and importance weighed otherwise, all at once, ${formatCount(weights.safe)} of the ${formatCount(weights.places)} keep their place in ${formatShare(weights.safe_share)} of ${formatCount(weights.draws)} weightings or more.`]),
     `The command sensitivity makes all ${formatCount(of_rankings)} switches${sample === null ? '' : ' on every building'}.`,
   ];
 }

@@ -1,6 +1,6 @@
 /** A survey in words: what is asked, why, and what it does to the list. */
 import { formatCount, formatNumber, formatShare } from '../../engineering/format.js';
-import type { Unknown } from '../../engineering/priority/survey-value.js';
+import type { Unknown } from '../../engineering/priority/learnable.js';
 import type { Visit } from '../../engineering/priority/campaign.js';
 import type { SurveyOutlook, SurveyVisit } from '../../engineering/page-contract.js';
 import type { SurveyPlan } from '../../screening/survey.js';
@@ -30,8 +30,8 @@ export function reasonWord({ asks, shares, again }: Pick<SurveyVisit, 'asks' | '
 }
 
 /** Worth for an hour, or for money; a dash where the visit costs nothing of it. */
-export function perCostWord({ value, value_per_cost }: Pick<SurveyVisit, 'value' | 'value_per_cost'>): string {
-  return value_per_cost * 1e-6 > value ? '–' : formatNumber(value_per_cost, 3);
+export function perCostWord({ value_per_cost }: Pick<SurveyVisit, 'value_per_cost'>): string {
+  return value_per_cost === null ? '–' : formatNumber(value_per_cost, 3);
 }
 
 /** "street (0.4 h)", "drawings (4 h, 160 in money)". */

@@ -2,8 +2,8 @@
 import { NAMES } from '../../../src/engineering/assess/irregularity-found.js';
 import type { Building, Filled } from '../../../src/engineering/building.js';
 import type { Visit } from '../../../src/engineering/priority/campaign.js';
-import { UNKNOWNS } from '../../../src/engineering/priority/survey-value.js';
-import type { Unknown } from '../../../src/engineering/priority/survey-value.js';
+import { UNKNOWNS } from '../../../src/engineering/priority/learnable.js';
+import type { Unknown } from '../../../src/engineering/priority/learnable.js';
 import { drawsOf } from './draws.js';
 import type { Truth } from './truth.js';
 import type { World } from './world.js';

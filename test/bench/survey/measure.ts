@@ -3,7 +3,7 @@ import { planCampaign } from '../../../src/engineering/priority/campaign.js';
 import type { Candidate } from '../../../src/engineering/priority/campaign.js';
 import { rankBasis } from '../../../src/engineering/priority/rank.js';
 import { edgeOf } from '../../../src/engineering/priority/survey-value.js';
-import type { Unknowns } from '../../../src/engineering/priority/survey-value.js';
+import type { Unknowns } from '../../../src/engineering/priority/learnable.js';
 import { EVERYTHING, foundBy, laid } from './answers.js';
 import type { Found } from './answers.js';
 import { inputOf, listOf, score, unknownsIn } from './portfolio.js';

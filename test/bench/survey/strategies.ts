@@ -2,7 +2,8 @@
 import { planCampaign } from '../../../src/engineering/priority/campaign.js';
 import type { Candidate, Visit } from '../../../src/engineering/priority/campaign.js';
 import { worthOf } from '../../../src/engineering/priority/survey-value.js';
-import type { Edge, Unknowns, Worth } from '../../../src/engineering/priority/survey-value.js';
+import type { Unknowns } from '../../../src/engineering/priority/learnable.js';
+import type { Edge, Worth } from '../../../src/engineering/priority/survey-value.js';
 import { drawsOf } from './draws.js';
 import { unknownsIn } from './portfolio.js';
 import type { Portfolio } from './portfolio.js';

@@ -6,7 +6,7 @@ import { IRREGULARITY } from '../../../src/engineering/assess/settings.js';
 import { unknownsOf } from '../../../src/engineering/assess/unknowns.js';
 import type { Building } from '../../../src/engineering/building.js';
 import { mixtureMoments } from '../../../src/engineering/priority/mixture.js';
-import type { Unknowns } from '../../../src/engineering/priority/survey-value.js';
+import type { Unknowns } from '../../../src/engineering/priority/learnable.js';
 import { NO_IRREGULARITY, building, given, inferred } from '../../support/engineering-building.js';
 import { inventedPortfolio } from '../../support/engineering-portfolio.js';
 import { random } from '../../support/engineering-random.js';

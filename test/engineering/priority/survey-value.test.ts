@@ -1,15 +1,9 @@
 import { describe, expect, it } from 'vitest';
 import type { Mixture } from '../../../src/engineering/priority/mixture.js';
-import {
-  UNKNOWNS,
-  edgeOf,
-  expectedExcess,
-  mostWorth,
-  shareOf,
-  worthAt,
-  worthOf,
-} from '../../../src/engineering/priority/survey-value.js';
-import type { Edge, Learnable, Unknowns } from '../../../src/engineering/priority/survey-value.js';
+import { UNKNOWNS, shareOf } from '../../../src/engineering/priority/learnable.js';
+import { edgeOf, expectedExcess, mostWorth, worthAt, worthOf } from '../../../src/engineering/priority/survey-value.js';
+import type { Learnable, Unknowns } from '../../../src/engineering/priority/learnable.js';
+import type { Edge } from '../../../src/engineering/priority/survey-value.js';
 import { random } from '../../support/engineering-random.js';
 
 const normal = (mean: number, sd: number): Mixture => ({

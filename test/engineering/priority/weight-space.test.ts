@@ -13,7 +13,8 @@ const fixed = { slope: [1, 1], people: [1, 1], importance: [1, 1] } as const;
 describe('acceptability', () => {
   it('is the list itself where no weight is open', () => {
     const lnPriority = Float64Array.of(3, 1, 2, 5, 4);
-    const terms = { lnPriority, lnPeople: Float64Array.of(1, 2, 0, 1, 3), lnImportance: new Float64Array(5) };
+    const people = Float64Array.of(3, 7, 1, 3, 20);
+    const terms = { lnPriority, people, importance: new Float64Array(5) };
     const share = acceptability(terms, one, fixed, 2, 50, 1);
     expect(Array.from(share, (value) => Math.round(value * 1e9) / 1e9)).toEqual([0, 0, 0, 1, 1]);
   });
@@ -23,8 +24,8 @@ describe('acceptability', () => {
     // an exponent of 1/4 on
     const terms = {
       lnPriority: Float64Array.of(1, 4),
-      lnPeople: Float64Array.of(0, 4),
-      lnImportance: new Float64Array(2),
+      people: Float64Array.of(1, Math.exp(4)),
+      importance: Float64Array.of(0, 1),
     };
     const share = acceptability(terms, one, { ...fixed, people: [0, 1] }, 1, 4_000, 7);
     // three standard errors of a chance of 1/4 in 4,000 draws
