@@ -12,9 +12,6 @@ const SLOPE: Range = [1.5, 4];
 const USUAL_SLOPE = 2.5;
 
 const DRAWS = 1_000;
-/** Sorting so many numbers takes some seconds; larger inventories are drawn less often. */
-const MOST_NUMBERS = 50_000_000;
-const LEAST_DRAWS = 100;
 /** In this share of the weightings or more a place counts as safe from them [judgement]. */
 const SAFE = 0.95;
 
@@ -66,13 +63,12 @@ export async function weightSpace(
     people: PEOPLE,
     importance: IMPORTANCE,
   };
-  const draws = Math.max(LEAST_DRAWS, Math.min(DRAWS, Math.floor(MOST_NUMBERS / Math.max(1, n))));
   const shares = acceptability(
     { lnPriority: rows.priority, people: rows.people, importance: rows.importance },
     { people: peopleWeight, importance: importanceWeight },
     ranges,
     places,
-    draws,
+    DRAWS,
     seed,
   );
   const told = Array.from(shares.keys()).filter((i) => i < places || shares[i]! > 0);
@@ -84,7 +80,7 @@ export async function weightSpace(
   const all = told.map((i): WeighedPlace => ({ id: ids.get(rows.at[i]!)!, rank: rows.place[i]!, share: shares[i]! }));
   const listed = all.slice(0, Math.min(places, n));
   return {
-    draws,
+    draws: DRAWS,
     ...{ people: PEOPLE, importance: IMPORTANCE, slope, safe_share: SAFE },
     safe: listed.filter(({ share }) => share >= SAFE - 1e-9).length,
     places: listed.length,

@@ -45,6 +45,28 @@ export function cdfFrom(z: number, e: number): number {
   return z > 0 ? 1 - tail : tail;
 }
 
+/** Steps to a unit of the table, and where it ends: beyond Φ is 0 or 1 to 1e-15. */
+const STEPS = 64;
+const REACH = 8;
+let table: Float64Array | null = null;
+
+/**
+ * Φ(z) to 2e-10 absolute, in a third of the time: from a table in steps of 1/64, carried on by the first three terms of Taylor's series. For sums of very
+ * many, where that is more than enough.
+ */
+export function tabledCdf(z: number): number {
+  if (!(z > -REACH)) return 0;
+  if (z >= REACH) return 1;
+  table ??= Float64Array.from({ length: 2 * (2 * REACH * STEPS + 1) }, (_, i) => {
+    const at = (i >> 1) / STEPS - REACH;
+    return i % 2 === 0 ? normalCdf(at) : normalDensity(at);
+  });
+  const step = Math.round((z + REACH) * STEPS);
+  const at = step / STEPS - REACH;
+  const d = z - at;
+  return table[2 * step]! + table[2 * step + 1]! * d * (1 - d * (0.5 * at - (d * (at * at - 1)) / 6));
+}
+
 /**
  * z with Φ(z) = p, for 0 < p < 1, by Newton steps on Φ from a rational start (Abramowitz and Stegun 26.2.23, |error| < 4.5e-4).
  * @throws RangeError outside (0, 1).

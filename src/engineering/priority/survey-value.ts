@@ -9,8 +9,8 @@
  * closed form of an option on a lognormal).
  */
 import { exp, ln } from '../numeric/elementary.js';
-import { LEARNT_NODES, ONE_NODE } from '../numeric/nodes.js';
-import { normalCdf } from '../numeric/normal.js';
+import { LEARNT_NODES } from '../numeric/nodes.js';
+import { normalCdf, tabledCdf } from '../numeric/normal.js';
 import { learnt } from './learnable.js';
 import type { Learnt, Unknown, Unknowns } from './learnable.js';
 import { mixtureCdf } from './mixture.js';
@@ -165,31 +165,39 @@ function wrongWith(
   threshold: number,
   chance: number,
 ): number {
-  const n = weights.length;
-  const tau = variance.map(Math.sqrt);
-  const left = new Float64Array(n);
-  const weightAbove = (i: number, d: number): number =>
-    weights[i]! * (left[i]! > 0 ? normalCdf(d / left[i]!) : d > 0 ? 1 : 0);
   const all = new Float64Array(classes);
   // parts of which nothing is learnt besides their class are the same at every node
   const still = new Float64Array(classes);
-  const moving: number[] = [];
-  for (let i = 0; i < n; i += 1) {
+  const { z, weight: nodeWeight } = LEARNT_NODES;
+  // of each node and class the weight above the edge
+  let above: Float64Array | null = null;
+  for (let i = 0; i < weights.length; i += 1) {
     const at = parts.from + i;
-    all[of[i]!]! += weights[i]!;
-    left[i] = Math.sqrt(Math.max(parts.sd[at]! * parts.sd[at]! - variance[i]!, 0));
-    if (tau[i]! > 0) moving.push(i);
-    else still[of[i]!]! += weightAbove(i, parts.mean[at]! - threshold);
+    const [w, c] = [weights[i]!, of[i]!];
+    const d = parts.mean[at]! - threshold;
+    const left = Math.sqrt(Math.max(parts.sd[at]! * parts.sd[at]! - variance[i]!, 0));
+    all[c]! += w;
+    if (!(variance[i]! > 0)) {
+      still[c]! += w * sideOf(d, left);
+      continue;
+    }
+    above ??= new Float64Array(classes * z.length);
+    const tau = Math.sqrt(variance[i]!);
+    for (let j = 0, to = c; j < z.length; j += 1, to += classes) above[to]! += w * sideOf(d + tau * z[j]!, left);
   }
-  const { z, weight: nodeWeight } = moving.length > 0 ? LEARNT_NODES : ONE_NODE;
   let wrong = 0;
-  for (let j = 0; j < z.length; j += 1) {
-    const above = still.slice();
-    for (const i of moving) above[of[i]!]! += weightAbove(i, parts.mean[parts.from + i]! + tau[i]! * z[j]! - threshold);
-    for (let c = 0; c < classes; c += 1)
-      wrong += 2 * nodeWeight[j]! * Math.min((1 - chance) * above[c]!, chance * (all[c]! - above[c]!));
-  }
+  for (let j = 0; j < (above === null ? 1 : z.length); j += 1)
+    for (let c = 0; c < classes; c += 1) {
+      const over = still[c]! + (above === null ? 0 : above[j * classes + c]!);
+      wrong += 2 * (above === null ? 1 : nodeWeight[j]!) * Math.min((1 - chance) * over, chance * (all[c]! - over));
+    }
   return wrong;
+}
+
+/** Chance of a normal whose mean lies `d` above the edge to lie above it. */
+function sideOf(d: number, sd: number): number {
+  if (!(sd > 0)) return d > 0 ? 1 : 0;
+  return tabledCdf(d / sd);
 }
 
 /**

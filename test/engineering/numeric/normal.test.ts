@@ -1,6 +1,6 @@
 import fc from 'fast-check';
 import { describe, expect, it } from 'vitest';
-import { normalCdf, normalDensity, normalQuantile } from '../../../src/engineering/numeric/normal.js';
+import { normalCdf, normalDensity, normalQuantile, tabledCdf } from '../../../src/engineering/numeric/normal.js';
 
 describe('normalCdf', () => {
   // Abramowitz and Stegun, table 26.1, P(x) to 15 decimals, from memory
@@ -54,5 +54,18 @@ describe('normalQuantile', () => {
 
   it('wants a chance between 0 and 1', () => {
     for (const p of [0, 1, -1, NaN]) expect(() => normalQuantile(p)).toThrow(RangeError);
+  });
+});
+
+describe('tabledCdf', () => {
+  it('is Φ to 2e-10, at and between its nodes, in the tails and beyond', () => {
+    let worst = 0;
+    for (let i = -90_000; i <= 90_000; i += 1) {
+      const z = i / 10_007;
+      worst = Math.max(worst, Math.abs(tabledCdf(z) - normalCdf(z)));
+    }
+    expect(worst).toBeLessThan(2e-10);
+    expect(worst).toBeGreaterThan(0);
+    expect([tabledCdf(-Infinity), tabledCdf(0), tabledCdf(Infinity)]).toEqual([0, 0.5, 1]);
   });
 });
