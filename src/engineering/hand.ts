@@ -148,7 +148,9 @@ export function handSteps(trace: Trace, display: Display): readonly HandStep[] {
           title: step.question,
           symbolic: textInDisplay(step.taken, display),
           source: textInDisplay(step.because, display),
-          details: step.others.map(({ what, why }) => `not ${what}: ${textInDisplay(why, display)}`),
+          details: step.others.map(
+            ({ what, why, also }) => `${also === true ? 'also' : 'not'} ${what}: ${textInDisplay(why, display)}`,
+          ),
         };
       case 'formula':
         return formulaStep(step, display);

@@ -14,7 +14,8 @@ export interface ChoiceStep {
   readonly question: string;
   readonly taken: string;
   readonly because: string;
-  readonly others: readonly { readonly what: string; readonly why: string }[];
+  /** What was not taken and why; or, of an answer in several parts, what belongs to it `also`. */
+  readonly others: readonly { readonly what: string; readonly why: string; readonly also?: true }[];
 }
 
 /** A value that enters the calculation: given by the inventory, inferred, a default, a setting of the study. */

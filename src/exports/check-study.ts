@@ -49,7 +49,7 @@ export interface CheckedStudy {
 
 /** Nothing is ranked here: these two kinds only say what the intake found. */
 const TITLES: Readonly<Record<string, string>> = {
-  'merged-into-ranked': 'rows of buildings with a height or storeys, not yet assessed',
+  'merged-into-ranked': 'rows of buildings with a height or storeys, not yet ranked',
   'merged-into-not-ranked': 'rows of buildings that lack what an assessment needs',
 };
 

@@ -153,7 +153,8 @@ export async function planOn(
       if (found === null || found.learnable.length === 0) continue;
       const unknowns = common === undefined ? found : seenFromEdge(found, common, placeOf.get(index)!);
       candidates.push({ index, worth: worthOf(unknowns, edge), failed: failed.get(index), known: answered.get(index) });
-      shares.set(index, new Map(unknowns.learnable.map((one) => [one.unknown, shareOf(unknowns, one)])));
+      // of the building alone, as the list tells them
+      shares.set(index, new Map(found.learnable.map((one) => [one.unknown, shareOf(found, one)])));
     }
     report('weighing', range.to / count);
   }

@@ -1,7 +1,7 @@
 /** What a sensitivity run switches: every entry of the register of assumptions that can be, each to one or more other values. */
 import { ASSUMED, assumedWith } from '../engineering/assess/assumed.js';
 import type { Assumed } from '../engineering/assess/assumed.js';
-import { RANK_BY } from '../engineering/assess/settings.js';
+import { RANK_BY, STRENGTH_CHECKS } from '../engineering/assess/settings.js';
 import type { AssessSettings, RankBy, Spreads } from '../engineering/assess/settings.js';
 import type { Assumption } from '../engineering/page-contract.js';
 import type { Mark, Switch } from './switch.js';
@@ -152,6 +152,7 @@ function capacitySwitches(settings: AssessSettings): readonly Switch[] {
       to: 'σ × 1.5',
       settings: spreading(settings, ['overstrength'], 1.5),
     },
+    ...checkSwitches(settings),
     one('ductility', 'μ - 1 halved', { ductility: ductile(0.5) }),
     one('ductility', 'μ - 1 × 1.5', { ductility: ductile(1.5) }),
     one('ductility', 'μ 2.0 in every class', {
@@ -159,6 +160,22 @@ function capacitySwitches(settings: AssessSettings): readonly Switch[] {
     }),
     { assumption: 'era-spread', to: 'σ × 1.5', settings: spreading(settings, ['era', 'eraTable'], 1.5) },
     ...irregularitySwitches(settings),
+  ];
+}
+
+/** The other methods, and none: then drawings or era give the capacities of those buildings too. */
+function checkSwitches(settings: AssessSettings): readonly Switch[] {
+  const { strengthCheck } = settings;
+  if (strengthCheck === undefined) return [];
+  return [
+    ...STRENGTH_CHECKS.filter((method) => method !== strengthCheck.method).map((method): Switch => {
+      return {
+        assumption: 'strength-check',
+        to: method,
+        settings: { ...settings, strengthCheck: { ...strengthCheck, method } },
+      };
+    }),
+    { assumption: 'strength-check', to: 'σ × 1.5', settings: spreading(settings, ['strengthCheck'], 1.5) },
   ];
 }
 

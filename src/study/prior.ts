@@ -5,6 +5,7 @@ import type { SystemPriorGroup } from '../engineering/prior/system-prior.js';
 import { UserError, showValue } from '../errors.js';
 import type { Problem } from '../errors.js';
 import { suggest } from './nearest.js';
+import { delimiterOf } from './number-cells.js';
 import { readText } from './read-text.js';
 
 const HEADER = ['use', 'storeys_from', 'storeys_to', 'built_from', 'built_to', 'system', 'chance'] as const;
@@ -92,10 +93,16 @@ export function priorFromText(text: string, file = 'system-prior.csv'): readonly
 function readRecords(text: string, file: string): string[][] {
   let records: string[][];
   try {
-    records = parse(text, { bom: true, trim: true, relax_column_count: true, skip_empty_lines: false });
+    records = parse(text, {
+      bom: true,
+      delimiter: delimiterOf(/^.*/.exec(text)?.[0] ?? ''),
+      trim: true,
+      relax_column_count: true,
+      skip_empty_lines: false,
+    });
   } catch (cause) {
     if (!(cause instanceof CsvError)) throw cause;
-    throw new UserError(`not a table with commas: ${cause.message}`, { file }, { cause });
+    throw new UserError(`not a table of cells: ${cause.message}`, { file }, { cause });
   }
   const [header = [], ...rest] = records;
   if (header.join() !== HEADER.join()) {

@@ -60,6 +60,13 @@ describe('sensitivityStudy', () => {
     expect(shares).toEqual([...shares].sort((a, b) => a - b));
   });
 
+  it('switches the strength checks, by which two dozen buildings of the demo are ranked', () => {
+    const methods = found.switches.filter(({ assumption }) => assumption === 'strength-check').map(({ to }) => to);
+    expect(methods.sort()).toEqual(['asce41-13', 'japan-first-level', 'none', 'σ × 1.5']);
+    expect(effect(found, 'strength-check', 'none').tau_b).toBeLessThan(1);
+    for (const { why } of found.not_switched) expect(why).not.toContain('does not depend');
+  });
+
   it('keeps nothing and names who stays whatever is switched', async () => {
     expect(await listStudyRuns(path)).toHaveLength(1);
     expect(found.always.length + found.sometimes.length).toBe(20);

@@ -89,6 +89,7 @@ describe('ownTableFromText', () => {
     expect(ownTableFromText(text)).toEqual([
       { from_year: 1960, level: 'working', coefficient: 0.04, by_system: { 'concrete-shear-wall': 0.06 } },
     ]);
+    expect(ownTableFromText(text.replaceAll(',', ';'))).toEqual(ownTableFromText(text));
   });
 
   it('names row and column of everything it cannot read', () => {

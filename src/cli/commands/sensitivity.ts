@@ -99,7 +99,7 @@ function lines(found: Sensitivity, csv: string | undefined, columns: number): st
 }
 
 function headSentence({ run, rankings, places, always }: Sensitivity): string {
-  return `Run ${String(run)} ranked again with ${formatCount(rankings)} ${rankings === 1 ? 'assumption' : 'assumptions'} switched, one at a time: ${formatCount(always.length)} of the ${formatCount(places)} on the list stay whichever of them is switched.`;
+  return `Run ${String(run)} ranked again with ${formatCount(rankings)} ${rankings === 1 ? 'switch of an assumption' : 'switches of assumptions'}, one at a time: ${formatCount(always.length)} of the ${formatCount(places)} on the list stay whichever of them is made.`;
 }
 
 function sampleSentence({ sample, buildings, places }: Sensitivity): string {

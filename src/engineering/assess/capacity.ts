@@ -1,64 +1,17 @@
 /** Capacity of one case in one direction: assessed, from the drawings' coefficient, or from the code of its era. */
 import type { Building, DirectionName, System } from '../building.js';
 import { NOT_DESIGNED } from '../capacity/edition.js';
-import type { CodeEdition, DesignFacts, EraDesign } from '../capacity/edition.js';
-import type { CarriedId } from '../capacity/families.js';
 import { DUCTILITY_KEPT, OVERSTRENGTH_KEPT, REDUCTION_BEFORE } from '../capacity/records.js';
 import { apply } from '../formula.js';
-import { cite } from '../source.js';
-import type { Verified } from '../source.js';
 import type { Trace } from '../trace.js';
-import { detailingOf, ductilityOf, editionOf, firstReduction } from './code-history.js';
-import type { Detailing, EditionId } from './code-history.js';
+import { detailingOf, ductilityOf, editionLabel, firstReduction } from './code-history.js';
+import type { Detailing } from './code-history.js';
 import { ln } from '../numeric/elementary.js';
-import { entryOf } from './case-memory.js';
-import type { CapacityAtHeight, Case, Design } from './case-memory.js';
+import type { CapacityAtHeight, Case } from './case-memory.js';
 import type { AssessContext } from './context.js';
-import { hasNoRow, rowOf } from './edition-rows.js';
+import { rowOf } from './edition-rows.js';
+import { eraDesign } from './era-design.js';
 import type { CodeHistorySettings } from './settings.js';
-
-const MARKS: Readonly<Record<Verified, string>> = {
-  printed: 'read in print',
-  restated: 'restated',
-  memory: 'from memory',
-  judgement: 'as the study states it',
-  mechanics: 'mechanics',
-};
-
-/** What the edition asked of the system, with the edition's own period and the place's own inputs. */
-function eraDesign(edition: EditionId, facts: DesignFacts, context: AssessContext, trace?: Trace): EraDesign {
-  const history = context.settings.codeHistory!;
-  const row = editionOf(edition, history);
-  const { title, source, verified, note } = row;
-  trace?.choice({
-    question: 'Code of the era',
-    taken: title,
-    because: `${cite(source)}, ${MARKS[verified]}${note === undefined ? '' : `; ${note}`}`,
-    others: [],
-  });
-  const stated: unknown = history.editions[edition as CarriedId];
-  // an era exists only where something is stated for its edition, and that is of the type it reads
-  return (row as CodeEdition).design(facts, stated, trace);
-}
-
-/** The memory of capacities that all cases of a system, an edition and a level of retrofit share. */
-export function designOf(
-  system: System,
-  edition: EditionId | null,
-  retrofit_level: number,
-  strengthened: boolean,
-  { caseMemory, settings }: AssessContext,
-): Design {
-  const key = `${system}|${String(edition)}|${String(retrofit_level)}|${String(strengthened)}`;
-  return entryOf(caseMemory.designs, key, () => ({
-    dependsOn:
-      edition === null || hasNoRow(system, edition, settings.codeHistory)
-        ? 'nothing'
-        : editionOf(edition, settings.codeHistory!).dependsOn(system),
-    found: new Map(),
-    last: null,
-  }));
-}
 
 /** What another building's capacity was found with holds here too, but for the coefficient of editions that know the plan. */
 function againAtHeight(
@@ -148,11 +101,9 @@ export function capacityAtHeight(
       step,
     );
   if (builtTo === null) return of(which, trace);
-  const before = { ...which, edition: builtTo.edition, strengthened: false, retrofit_level: 1, builtTo: null };
-  const own = of(before);
-  const retrofit = of(which);
-  const isLess = elastic(retrofit) < elastic(own);
-  if (trace === undefined) return isLess ? own : retrofit;
+  const governs = governingCase(building, which, direction, height_m, context);
+  if (trace === undefined) return of(governs);
+  const isLess = governs !== which;
   const names = {
     own: `${builtTo.edition ?? 'no seismic design'} of its construction`,
     retrofit: `${which.edition ?? 'no seismic design'} of the retrofit`,
@@ -163,7 +114,39 @@ export function capacityAtHeight(
     because: 'the larger strength × ductility: a retrofit takes nothing away [judgement]',
     others: [{ what: isLess ? names.retrofit : names.own, why: 'asked for less' }],
   });
-  return of(isLess ? before : which, trace);
+  return of(governs, trace);
+}
+
+/** Of a strengthened building the case whose code gives its capacity: that of the retrofit, or that of its construction where it asked for more. */
+export function governingCase(
+  building: Building,
+  which: Case,
+  direction: DirectionName,
+  height_m: number,
+  context: AssessContext,
+): Case {
+  const { builtTo } = which;
+  if (builtTo === null) return which;
+  const before: Case = {
+    ...which,
+    edition: builtTo.edition,
+    label: editionLabel(builtTo.edition),
+    editionYear: builtTo.year,
+    strengthened: false,
+    retrofit_level: 1,
+    builtTo: null,
+  };
+  const worth = (one: Case): number =>
+    elastic(
+      atLeastUndesigned(
+        capacityOfCase(building, one, direction, height_m, null, context),
+        building,
+        one,
+        direction,
+        context,
+      ),
+    );
+  return worth(which) < worth(before) ? before : which;
 }
 
 /** What tells two capacities of one system apart, whatever its period. */

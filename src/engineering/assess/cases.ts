@@ -1,6 +1,6 @@
 /** The discrete unknowns of a building: system and era, each combination with its chance. */
 import type { Building, System, Use } from '../building.js';
-import { designOf } from './capacity.js';
+import { designOf } from './era-design.js';
 import { entryOf, newMap, yearsNumber } from './case-memory.js';
 import { isUndesigned } from './terms.js';
 import type { Case, Cases, Design, EraChances } from './case-memory.js';

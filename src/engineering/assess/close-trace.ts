@@ -71,10 +71,11 @@ export function closeTrace(trace: Trace, closing: Closing): void {
     trace.choice({
       question: 'Where the spread comes from',
       taken: `${largest.what}: ${formatShare(largest.share)} of the spread`,
-      because: `the largest share of the variance of ln S${largest.learnable ? ', which a visit can find out' : ', which no visit settles'}`,
+      because: `the largest share of the variance of ln S${largest.learnable ? ', which a visit can find out' : ', which no visit settles'}; unknowns that tell part of the same overlap, and may add up to more than the whole`,
       others: others
         .filter(({ share }) => share >= LEAST_SHARE)
         .map(({ what, share, learnable }) => ({
+          also: true,
           what,
           why: `${formatShare(share)}${learnable ? ', a visit can find it out' : ''}`,
         })),

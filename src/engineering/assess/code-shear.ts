@@ -2,6 +2,8 @@
  * Base shear by the code that the spectrum is of, with that code's limits: shown beside the elastic one, counted nowhere. Where the
  * program carries no record of a code's formula, or the spectrum does not state what the formula asks, the hand calculation says so.
  */
+import { ASCE7_WALL_AND_LIMIT_RECORDS } from '../period/asce7.js';
+import { PERIOD_2002 } from '../capacity/us.js';
 import type { Building, System } from '../building.js';
 import { CANADA_2005, NBC_RD_RO } from '../capacity/canada.js';
 import { INDIAN_R, INDIA_2002 } from '../capacity/india.js';
@@ -20,7 +22,7 @@ import { IS1893_SOILS } from '../spectrum/is1893.js';
 import { RT_CORNERS_S } from '../spectrum/japan.js';
 import { NZS1170_CODES } from '../spectrum/nzs1170.js';
 import { NZS1170_FACTOR_RECORDS } from '../spectrum/nzs1170-factors.js';
-import type { Trace } from '../trace.js';
+import { Trace } from '../trace.js';
 import type { AssessContext, ContextSpectrum } from './context.js';
 import { importanceOf } from './terms.js';
 
@@ -69,6 +71,7 @@ function asce7({ building, system, spectrum, period_s, trace }: ShearFacts): num
   }
   const s1_g = mapped === null ? null : Number(inputs['s1_g']);
   nearFaultWords(s1_g, trace);
+  const limited_s = withinLimit(building, system, sd1_g, period_s, trace);
   const { tl_s } = inputs;
   trace.value('reduction_r', SYSTEM_FACTORS[system].r2002, 'computed', `R of ${system}, from memory of ASCE/SEI 7`);
   return apply(
@@ -80,10 +83,27 @@ function asce7({ building, system, spectrum, period_s, trace }: ShearFacts): num
       near_fault_s1_g: s1_g !== null && s1_g >= NEAR_FAULT_FROM_G ? s1_g : 0,
       reduction_r: SYSTEM_FACTORS[system].r2002,
       importance_factor: importanceOf(building),
-      period_s,
+      period_s: limited_s,
     },
     trace,
   );
+}
+
+/** The period that the base shear of ASCE 7 may be read at: no longer than C_u T_a (12.8.2). */
+function withinLimit(building: Building, system: System, sd1_g: number, period_s: number, trace: Trace): number {
+  const height_m = building.height_m.value;
+  const within = new Trace();
+  const approximate_s = applyAny(PERIOD_2002[SYSTEM_FACTORS[system].periodClass], { height_m }, within);
+  const limit_s = applyAny(PERIOD_LIMIT, { period_s: approximate_s, sd1_g }, within);
+  if (period_s <= limit_s) return period_s;
+  for (const step of within.steps) trace.steps.push(step);
+  trace.choice({
+    question: 'Period of the base shear',
+    taken: `${formatNumber(limit_s, 4)} s`,
+    because: `ASCE 7 12.8.2: no longer than C_u T_a, however long the period that ranks, ${formatNumber(period_s, 4)} s`,
+    others: [],
+  });
+  return limit_s;
 }
 
 function nearFaultWords(s1_g: number | null, trace: Trace): void {
@@ -132,6 +152,8 @@ function en1998({ building, storeys, spectrum, period_s, context, trace }: Shear
   );
   return apply(BASE_SHEAR_EN1998, { design_sa_g, period_s, corner_period_s: spectrum.corner_s, storeys }, trace);
 }
+
+const PERIOD_LIMIT = recordOf(ASCE7_WALL_AND_LIMIT_RECORDS, 'asce7-22/period-limit/calculated');
 
 const NZ_STATIC = NZS1170_CODES[0]!.choice!.records['equivalent-static']!;
 const NZ_ACTION = recordOf(NZS1170_FACTOR_RECORDS, 'nzs1170-5-2004/base-shear/design-action');

@@ -4,7 +4,7 @@
  */
 import type { Building, DirectionName, PerDirection, System } from '../building.js';
 import { BASE_SHEAR_ELASTIC, massFactorOf } from '../demand/base-shear.js';
-import { ROOF_DISPLACEMENT, STOREY_DRIFT, driftMark } from '../demand/drift.js';
+import { MARK_NAMES, ROOF_DISPLACEMENT, STOREY_DRIFT, driftMark } from '../demand/drift.js';
 import { C1, C2, STRENGTH_RATIO, YIELD_COEFFICIENT, YIELD_OF_CHECK } from '../demand/inelastic.js';
 import { SPECTRAL_DISPLACEMENT } from '../demand/records.js';
 import { DIRECTIONS } from '../direction.js';
@@ -117,7 +117,7 @@ function demandOf(
   const { passed, marks } = driftMark(system, drift_ratio);
   trace?.value(
     'drift mark',
-    passed === null ? 'passes none' : `past ${passed}`,
+    passed === null ? `within ${MARK_NAMES[0]}` : `past ${passed}`,
     'computed',
     `published marks ${marks.map((mark) => formatDrift(mark)).join(', ')} for immediate occupancy, life safety, collapse prevention (FEMA 356 Table C1-3, from memory); a screening value, not a finding`,
   );

@@ -4,7 +4,7 @@ import type { Building, DirectionName, PerDirection } from '../building.js';
 import { HEIGHT_NODES, ONE_NODE, PERIOD_NODES } from '../numeric/nodes.js';
 import type { Nodes } from '../numeric/nodes.js';
 import { NO_LABEL, mixtureQuantile } from '../priority/mixture.js';
-import { capacityAtHeight, keptCapacity } from './capacity.js';
+import { capacityAtHeight, governingCase, keptCapacity } from './capacity.js';
 import { entryOf, newMap } from './case-memory.js';
 import type { CapacityAtHeight, Case, Cases } from './case-memory.js';
 import type { AssessContext, ContextSpectrum } from './context.js';
@@ -138,7 +138,7 @@ export function integrate(
           const byTable = a.checked === undefined && b.checked === undefined;
           const sdOfCase = byTable ? sd : sdChecked;
           // a level known from the drawings, like a strength check, rests on no table
-          const label = byTable && level === null ? which.label : NO_LABEL;
+          const label = byTable && level === null ? labelOf(building, which, height_m, context) : NO_LABEL;
           const { ductility: mu, lnStrength: lnA } = a;
           const { ductility: muB, lnStrength: lnB } = b;
           if (storey < 1) {
@@ -247,4 +247,9 @@ function percentiles(bands: readonly Band[], direction: DirectionName, scratch: 
   const mixture = scratch.period.gather(scratch.periodPool);
   const at = (q: number, z: number): number => exp(mixtureQuantile(mixture, q, z));
   return { p16_s: at(0.16, -Z84), p50_s: at(0.5, 0), p84_s: at(0.84, Z84) };
+}
+
+/** Whose table's error a capacity shares: of a strengthened building that of the code which gives it. */
+function labelOf(building: Building, which: Case, height_m: number, context: AssessContext): number {
+  return which.builtTo === null ? which.label : governingCase(building, which, 'longitudinal', height_m, context).label;
 }

@@ -22,7 +22,9 @@ export function capacityOf(
   trace?: Trace,
 ): number {
   if (building.capacity_sa_g > 0) {
+    if (trace !== undefined) showAssessed(trace);
     trace?.value('capacity_sa_g', building.capacity_sa_g, 'given', 'capacity from a finished assessment');
+    if (trace !== undefined) showCodeRatio(building, which, direction, context, trace);
     return building.capacity_sa_g * context.capacityFactor;
   }
   const { at } = strengthOf(building, which, direction, context, trace);
@@ -70,7 +72,8 @@ export function strengthOf(
   const { level } = drawingsLevels(building)[0]!;
   const height_m = building.height_m.value;
   const check = level === null ? strengthCheck(building, which, direction, height_m, context, trace) : null;
-  if (trace !== undefined) showWay(level !== null, check, trace);
+  const wanted = context.settings.strengthCheck?.method ?? 'none';
+  if (trace !== undefined) showWay(level !== null, check, wanted !== 'none', trace);
   if (trace !== undefined && levelNotStated(building)) showLevel(trace);
   if (check !== null && typeof check !== 'string') return { at: check, way: WAYS.check };
   if (level !== null)
@@ -90,7 +93,12 @@ function showCodeRatio(
   context: AssessContext,
   trace: Trace,
 ): void {
-  if (Number.isNaN(codeRatio(building, which, direction, context))) return;
+  if (context.settings.codeHistory === null) return;
+  const ratio = codeRatio(building, which, direction, context);
+  if (typeof ratio === 'string') {
+    trace.choice({ question: 'Plain code ratio', taken: 'none', because: ratio, others: [] });
+    return;
+  }
   trace.choice({
     question: 'Plain code ratio',
     taken: 'shown beside the capacity, not counted',
@@ -100,11 +108,25 @@ function showCodeRatio(
   codeRatio(building, which, direction, context, trace);
 }
 
+function showAssessed(trace: Trace): void {
+  trace.choice({
+    question: 'Way to the capacity',
+    taken: 'finished assessment',
+    because: 'the best of the four ways for which the row has what it takes',
+    others: [],
+  });
+}
+
 /** Which of the ways to a capacity was taken, and why not those before it. */
-function showWay(byDrawings: boolean, check: CapacityAtHeight | string | null, trace: Trace): void {
+function showWay(
+  byDrawings: boolean,
+  check: CapacityAtHeight | string | null,
+  checksWanted: boolean,
+  trace: Trace,
+): void {
   const assessment = { what: 'finished assessment', why: 'no assessed capacity on record' };
   const drawings = { what: WAYS.drawings, why: 'no design coefficient on record' };
-  const checkWhy = check === null ? 'nothing of the structure on record, or no check wanted by the study' : '';
+  const checkWhy = checksWanted ? 'nothing of the structure on record' : 'the study wants no check';
   const era = { what: WAYS.era, why: 'a better way comes first' };
   const byCheck = check !== null && typeof check !== 'string';
   trace.choice({

@@ -1,4 +1,5 @@
 /** The most likely case worked out at its central values: what the hand calculation shows. */
+import { governingCase } from './capacity.js';
 import type { Building, DirectionName, PerDirection, System } from '../building.js';
 import { DIRECTIONS } from '../direction.js';
 import { apply } from '../formula.js';
@@ -10,7 +11,7 @@ import { cite } from '../source.js';
 import { flagWords } from '../spectrum/flags.js';
 import { power } from '../numeric/power.js';
 import type { Trace } from '../trace.js';
-import { directionsAlike, importanceOf } from './terms.js';
+import { directionsAlike, drawingsLevels, importanceOf } from './terms.js';
 import type { Case, Cases } from './case-memory.js';
 import type { EditionId } from './code-history.js';
 import { chooseSpectrum } from './choose-spectrum.js';
@@ -61,7 +62,10 @@ export function leadingCase(
   found?: PerDirection<PeriodModel>,
 ): LeadingCase | string {
   const which = cases.list[0]!;
-  if (trace !== undefined) openTrace(building, which, choice, trace);
+  const byEra = !(building.capacity_sa_g > 0) && drawingsLevels(building)[0]!.level === null;
+  const codeOf = (direction: DirectionName): Case =>
+    byEra ? governingCase(building, which, direction, building.height_m.value, context) : which;
+  if (trace !== undefined) openTrace(building, which, codeOf('longitudinal'), choice, trace);
   const byCapacity = context.settings.rankBy !== 'demand' && !(building.capacity_sa_g > 0);
   if (byCapacity) trace?.heading('Irregularities');
   const irregularity = byCapacity ? centralFactor(building, which, context, trace) : 1;
@@ -115,7 +119,7 @@ export function leadingCase(
   if (trace !== undefined) scoreOf(building, sa_g, capacity_g, slope_k, choice.spectrum, context, trace);
   return {
     system: which.system,
-    edition: which.edition,
+    edition: codeOf(governing).edition,
     chance: which.chance,
     governing,
     directions: worked,
@@ -130,7 +134,7 @@ export function leadingCase(
   };
 }
 
-function openTrace(building: Building, which: Case, choice: SpectrumChoice, trace: Trace): void {
+function openTrace(building: Building, which: Case, code: Case, choice: SpectrumChoice, trace: Trace): void {
   trace.heading('What is known');
   const { height_m, storeys } = building;
   trace.value('storeys', storeys.value, storeys.origin, storeys.rule === '' ? 'from the inventory' : storeys.rule);
@@ -145,9 +149,9 @@ function openTrace(building: Building, which: Case, choice: SpectrumChoice, trac
   );
   trace.value(
     'code edition',
-    which.edition ?? 'no seismic design',
+    code.edition ?? 'no seismic design',
     building.years.length === 1 ? building.yearOrigin : 'inferred',
-    eraWords(building, which),
+    eraWords(building, which, code),
   );
   const { name, compiled, record } = choice.spectrum;
   trace.choice({ question: 'Spectrum', taken: name, because: choice.because, others: [] });
@@ -158,9 +162,12 @@ function openTrace(building: Building, which: Case, choice: SpectrumChoice, trac
   }
 }
 
-function eraWords(building: Building, which: Case): string {
-  if (which.strengthened)
-    return `seismic retrofit of ${String(building.year_retrofitted)}, level ${String(which.retrofit_level)} of that code`;
+function eraWords(building: Building, which: Case, code: Case): string {
+  if (which.strengthened) {
+    const level = building.retrofit_level > 0 ? '' : ', the default where the row does not say [judgement]';
+    const retrofit = `seismic retrofit of ${String(building.year_retrofitted)}, level ${String(which.retrofit_level)} of that code${level}`;
+    return code === which ? retrofit : `the code of its construction asked for more than the ${retrofit}`;
+  }
   return building.years.length === 1 ? `year ${String(building.years[0])}` : 'year not known, from like buildings';
 }
 

@@ -123,7 +123,7 @@ export function closenessOf(
     because:
       gap_m < byHeight
         ? `short by the height rule too (${formatNumber(byHeight, 3)} m)`
-        : `the height rule asks ${formatNumber(byHeight, 3)} m`,
+        : `${short ? 'though not' : 'and'} by the height rule, which asks ${formatNumber(byHeight, 3)} m`,
     others: [],
   });
   for (const what of worse)

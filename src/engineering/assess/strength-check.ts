@@ -14,6 +14,7 @@ import {
   PRIORITY_INDEX,
   STRENGTH_INDEX,
 } from '../capacity/strength-records.js';
+import { formatNumber } from '../format.js';
 import { apply } from '../formula.js';
 import { ln } from '../numeric/elementary.js';
 import { massOf, storeyHeights, storeysOf } from '../stiffness/route-mass.js';
@@ -193,7 +194,15 @@ function firstLevel({ route, areas, weight_kN, storeys }: Work, timeIndex: numbe
   const { first_m } = storeyHeights(route);
   const clear_m = first_m - (beam_depth_m > 0 ? beam_depth_m : 0);
   const depth_m = route.direction === 'longitudinal' ? column_depth_m : column_width_m;
-  const column_index = indexOf(areas.columns_m2, clear_m / depth_m > SLENDER ? 0.7 : 1);
+  const slender = clear_m / depth_m > SLENDER;
+  if (areas.columns_m2 > 0)
+    trace?.choice({
+      question: 'Stress of the columns',
+      taken: slender ? '0.7 MPa' : '1.0 MPa',
+      because: `clear height ${formatNumber(clear_m, 3)} m over depth ${formatNumber(depth_m, 3)} m is ${formatNumber(clear_m / depth_m, 3)}, ${slender ? 'above' : 'not above'} ${String(SLENDER)}; ${beam_depth_m > 0 ? 'the storey less its beam' : 'no beam is on record: the whole storey'}`,
+      others: [],
+    });
+  const column_index = indexOf(areas.columns_m2, slender ? 0.7 : 1);
   const basic_index = apply(
     BASIC_INDEX,
     { storeys, storey: 1, wall_index, column_index, column_share: wall_index > 0 ? 0.7 : 1 },

@@ -92,7 +92,7 @@ export const DRIFT_MARKS: Readonly<Record<System, Marks>> = {
   'timber-light-frame': TIMBER,
   'timber-post-and-beam': TIMBER,
 };
-const MARK_NAMES = ['immediate occupancy', 'life safety', 'collapse prevention'] as const;
+export const MARK_NAMES = ['immediate occupancy', 'life safety', 'collapse prevention'] as const;
 
 /** The last mark that a drift passes, or null; with the marks of the system. */
 export function driftMark(

@@ -57,7 +57,7 @@ export function sensitivitySentences(found: SensitivityOutlook): readonly string
   const whole = sample === null ? `the ${formatCount(places)} on the list` : `the ${formatCount(places)} that stand for the list in a sample of ${formatCount(sample.buildings)} buildings`;
   const named = always.length === 0 || always.length > MOST_NAMED ? '' : `: ${always.join(', ')}`;
   return [
-    `With ${counted(rankings, 'assumption', 'assumptions')} switched, one at a time, ${always.length === 0 ? 'none' : formatCount(always.length)} of ${whole} ${always.length === 1 ? 'stays' : 'stay'} on it whichever of these is switched${named}.`,
+    `With ${counted(rankings, 'switch of an assumption', 'switches of assumptions')} made, one at a time, ${always.length === 0 ? 'none' : formatCount(always.length)} of ${whole} ${always.length === 1 ? 'stays' : 'stay'} on it whichever of these is made${named}.`,
     ...(first === undefined ? [] : [`What moves it most: ${first.statement.replace(/\.$/, '')}, ${first.to}: ${formatCount(first.overlap)} of ${formatCount(first.places)} stay.`]),
     ...(weights === undefined
       ? []

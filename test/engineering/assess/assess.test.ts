@@ -1,7 +1,9 @@
 import { describe, expect, it } from 'vitest';
 import { assess, isRanked } from '../../../src/engineering/assess/assess.js';
 import type { Assessment } from '../../../src/engineering/assess/assess.js';
+import { EDITION_LABELS } from '../../../src/engineering/assess/code-history.js';
 import { compileContext } from '../../../src/engineering/assess/context.js';
+import { NO_IRREGULARITY_CHANCES } from '../../../src/engineering/assess/settings.js';
 import type { AssessSettings } from '../../../src/engineering/assess/settings.js';
 import type { Building } from '../../../src/engineering/building.js';
 import { handSteps } from '../../../src/engineering/hand.js';
@@ -75,6 +77,28 @@ describe('assess', () => {
       compared += 1;
     }
     expect(compared).toBeGreaterThan(10);
+  });
+
+  it('names the code that gives the capacity of a strengthened building: its construction’s where that asked for more', () => {
+    const history = { ...SETTINGS, irregularity: NO_IRREGULARITY_CHANCES };
+    const one = (retrofit_level: number) => {
+      const trace = new Trace();
+      const fields = { years: [1985], year_retrofitted: 2012, retrofit_level };
+      const result = assess(building(fields), compileContext(history), trace);
+      if (!isRanked(result)) throw new Error(result.reason);
+      const code = trace.steps.find((step) => step.kind === 'value' && step.name === 'code edition');
+      const chosen = trace.steps.find((step) => step.kind === 'choice' && step.question === 'Construction or retrofit');
+      const labels = Array.from(result.mixture.label!.slice(result.mixture.from, result.mixture.to));
+      return { edition: result.leading.edition, code, chosen, labels: [...new Set(labels)] };
+    };
+    const [slight, full] = [one(0.1), one(1)];
+    expect(slight.edition).toBe('ubc-1976');
+    expect(slight.code).toMatchObject({ value: 'ubc-1976', why: expect.stringContaining('asked for more') as string });
+    expect(slight.chosen).toMatchObject({ taken: 'ubc-1976 of its construction' });
+    expect(slight.labels).toEqual([EDITION_LABELS.indexOf('ubc-1976')]);
+    expect(full.edition).toBe('asce7-2002');
+    expect(full.code).toMatchObject({ why: 'seismic retrofit of 2012, level 1 of that code' });
+    expect(full.labels).toEqual([EDITION_LABELS.indexOf('asce7-2002')]);
   });
 
   it('gives the same numbers with a trace, and the trace ends in them', () => {

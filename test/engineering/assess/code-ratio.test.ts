@@ -10,7 +10,7 @@ import { building } from '../../support/engineering-building.js';
 import { codeHistory } from '../../support/code-histories.js';
 import { SETTINGS } from '../../support/engineering-settings.js';
 
-function ratio(history: CodeHistorySettings | null, fields: Partial<Building>): number {
+function ratio(history: CodeHistorySettings | null, fields: Partial<Building>): number | string {
   const context = compileContext({ ...SETTINGS, codeHistory: history });
   const one = building(fields);
   const cases = casesOf(one, context);
@@ -33,7 +33,28 @@ describe('codeRatio', () => {
   });
 
   it('has none without a code history', () => {
-    expect(ratio(null, {})).toBeNaN();
+    expect(ratio(null, {})).toBe('the study has no code history');
+  });
+
+  it('is of earthquakes alone, and none where today’s code builds no such system', () => {
+    const history = codeHistory('us-ubc-asce7');
+    const years = [1930];
+    const calm = ratio(history, { years });
+    expect(calm).toBeTypeOf('number');
+    expect(ratio(history, { years, wind_base_shear_coefficient: 0.3 })).toBe(calm);
+    expect(ratio(history, { years, system: 'unreinforced-masonry-wall' })).toContain(
+      'no coefficient for a new building',
+    );
+  });
+
+  it('stands beside a finished assessment too', () => {
+    const trace = new Trace();
+    assess(building({ years: [1970], capacity_sa_g: 0.3 }), compileContext(SETTINGS), trace);
+    const asked = trace.steps.map((step) => (step.kind === 'choice' ? `${step.question}: ${step.taken}` : ''));
+    expect(asked).toContain('Way to the capacity: finished assessment');
+    expect(
+      trace.steps.some((step) => step.kind === 'formula' && step.record.id === 'swaymark/capacity/code-ratio'),
+    ).toBe(true);
   });
 
   it('stands in the hand calculation and moves nothing', () => {

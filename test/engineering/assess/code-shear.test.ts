@@ -6,7 +6,7 @@ import type { AssessSettings } from '../../../src/engineering/assess/settings.js
 import type { Building, System } from '../../../src/engineering/building.js';
 import { handSteps } from '../../../src/engineering/hand.js';
 import { Trace } from '../../../src/engineering/trace.js';
-import { building } from '../../support/engineering-building.js';
+import { building, given } from '../../support/engineering-building.js';
 import { SETTINGS } from '../../support/engineering-settings.js';
 
 type Spectra = AssessSettings['spectra'];
@@ -31,6 +31,9 @@ function worked(
   return { shear, steps, choice };
 }
 
+/** So tall that no period of these tests is beyond C_u T_a. */
+const TALL = { fields: { height_m: given(250) } };
+
 describe('codeShear', () => {
   const mapped = (edition: string, ss_g: number, s1_g: number, more = {}) =>
     ({ code: `asce7-${edition}-two-period`, ss_g, s1_g, site_class: 'C', tl_s: 8, ...more }) as Spectra[string];
@@ -40,25 +43,37 @@ describe('codeShear', () => {
     const fa = edition === '16' ? 1.2 : 1;
     const fv = edition === '16' ? 1.4 : 1.3;
     expect(worked(mapped(edition, 1.5, 0.6), 0.2).shear).toBeCloseTo(((2 / 3) * fa * 1.5) / 8, 9);
-    expect(worked(mapped(edition, 1.5, 0.6), 1.2).shear).toBeCloseTo(((2 / 3) * fv * 0.6) / 1.2 / 8, 9);
+    expect(worked(mapped(edition, 1.5, 0.6), 1.2, TALL).shear).toBeCloseTo(((2 / 3) * fv * 0.6) / 1.2 / 8, 9);
     // the spectrum of the maximum considered shaking has the same base shear: it is of the design shaking
     const maximum = mapped(edition, 1.5, 0.6, { shaking: 'maximum-considered' });
     expect(worked(maximum, 0.2).shear).toBeCloseTo(((2 / 3) * fa * 1.5) / 8, 9);
   });
 
+  it('reads the base shear at no longer period than C_u T_a (12.8.2), and says so', () => {
+    // concrete moment frame of the tests: 14 m, T_a = 0.0466 × 14^0.9 = 0.501 s (table 12.8-2, metric); C_u 1.4 from S_D1 0.4 on: 0.70 s
+    const stated = { code: 'asce7-22-two-period', sds_g: 1, sd1_g: 0.6, tl_s: 8 } as Spectra[string];
+    const limit = 1.4 * 0.0466 * 14 ** 0.9;
+    const long = worked(stated, 1.145);
+    expect(long.shear).toBeCloseTo(0.6 / (8 * limit), 4);
+    expect(long.choice('Period of the base shear')!.source).toContain('12.8.2');
+    const short = worked(stated, 0.65);
+    expect(short.shear).toBeCloseTo(0.6 / (8 * 0.65), 9);
+    expect(short.choice('Period of the base shear')).toBeUndefined();
+  });
+
   it('takes S_1 of the spectrum into the floor near faults, from 0.6 g on', () => {
     // eq. 12.8-6: 0.5 × 0.9/8 = 0.05625 rules over 0.044 S_DS = 0.0528 (F_a 1.2) and 0.56 × 1.5/(4 × 8)
-    const near = worked(mapped('16', 1.5, 0.9), 4);
+    const near = worked(mapped('16', 1.5, 0.9), 4, TALL);
     expect(near.shear).toBeCloseTo((0.5 * 0.9) / 8, 12);
     expect(near.choice('Floor of the base shear near faults')!.symbolic).toBe('counts');
-    const far = worked(mapped('16', 1.5, 0.59), 4);
+    const far = worked(mapped('16', 1.5, 0.59), 4, TALL);
     expect(far.shear).toBeCloseTo(0.044 * 1.2, 12);
     expect(far.choice('Floor of the base shear near faults')).toMatchObject({ symbolic: 'does not apply' });
     expect(far.choice('Floor of the base shear near faults')!.source).toContain('S_1 = 0.5900 g');
   });
 
   it('says that the floor could not be checked where S_1 is not known, and does not print it as evaluated', () => {
-    const stated = worked({ code: 'asce7-22-two-period', sds_g: 1, sd1_g: 0.6, tl_s: 8 }, 3);
+    const stated = worked({ code: 'asce7-22-two-period', sds_g: 1, sd1_g: 0.6, tl_s: 8 }, 3, TALL);
     expect(stated.shear).toBeCloseTo(0.044, 12);
     expect(stated.choice('Floor of the base shear near faults')).toMatchObject({ symbolic: 'could not be checked' });
     const formula = stated.steps.find((step) => step.method?.startsWith('asce7-16/base-shear'))!;
