@@ -167,6 +167,8 @@ export interface PageSummary {
   readonly attributes: readonly AttributeCount[];
   readonly findings: readonly FindingCount[];
   readonly assumptions: readonly Assumption[];
+  /** What was looked at before the ranking and what was not; the first of the cautions. */
+  readonly level_of_work: string;
   readonly cautions: readonly string[];
   /** Left out where none was planned with the run. */
   readonly survey?: SurveyOutlook | null;

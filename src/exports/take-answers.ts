@@ -9,6 +9,7 @@ import type { HeldAnswer } from '../inventory/kept-answers.js';
 import { changeStudyDatabase, chosenRun } from '../runs/open.js';
 import type { Database } from '../store/database.js';
 import type { LoadedStudy } from '../study/load.js';
+import { delimiterOf } from '../study/number-cells.js';
 import { readText } from '../study/read-text.js';
 import type { Study } from '../study/schema.js';
 import { isCalendarDate } from './sheet-date.js';
@@ -44,8 +45,8 @@ interface Given extends Pick<HeldAnswer, 'id' | 'column' | 'cell' | 'visit' | 's
  * it is. Columns are those of the sheet of `survey --csv`; blank cells and dashes say nothing, `?` or `not found` that the visit looked
  * and could not find out: plans then no longer count on that kind of visit for it. What a sheet taken before has said in the same words is
  * not taken twice. All or nothing.
- * @throws UserError with every cell that cannot be read, a row without an id or with one the newest run does not hold, something not found
- * without a kind of visit that the study knows, an unknown column.
+ * @throws UserError with every cell that cannot be read, a row without an id or with one the newest run does not hold, a kind of visit that
+ * the study does not know, something not found without any, a year to come, two rows that contradict each other, an unknown column.
  * @example
  * const { answers } = await takeAnswers('study.yaml', 'field.csv', new Date());
  */
@@ -53,8 +54,7 @@ export async function takeAnswers(path: string, file: string, taken: Date): Prom
   const text = await readText(file, 'the sheet of answers');
   return changeStudyDatabase(path, async (db, loaded) => {
     const { study } = loaded;
-    const sheet = readSheet(text, file, study);
-    await refuseStrangers(db, loaded, sheet, file);
+    const sheet = readSheet(text, { file, study, known: await idsOf(db, loaded), present: taken.getUTCFullYear() });
     const { fresh: given, known } = apart(sheet, await heldAnswers(db));
     if (given.length > 0) await keepAnswers(db, given, taken);
     const answers = given.filter(({ cell }) => cell !== null);
@@ -114,7 +114,8 @@ function countColumns(given: readonly Given[]): Readonly<Record<string, number>>
   return columns;
 }
 
-function readSheet(text: string, file: string, study: Study): readonly Given[] {
+function readSheet(text: string, about: Omit<SheetRow, 'cellOf' | 'asked'>): readonly Given[] {
+  const { file, study } = about;
   const rows = recordsOf(text, file);
   const [head = []] = rows;
   const at = (name: string): number => head.indexOf(name);
@@ -132,10 +133,11 @@ function readSheet(text: string, file: string, study: Study): readonly Given[] {
   const problems: Problem[] = [];
   const given: Given[] = [];
   rows.slice(1).forEach((cells, i) => {
-    const found = readRow(i + 2, { cellOf: (name) => cells[at(name)] ?? '', asked, file, study });
+    const found = readRow(i + 2, { ...about, cellOf: (name) => cells[at(name)] ?? '', asked });
     given.push(...found.given);
     problems.push(...found.problems);
   });
+  problems.push(...contradictions(given, file, study));
   if (problems.length > 0) throw UserError.of(problems);
   if (given.length === 0)
     throw new UserError('the sheet answers nothing: every cell is blank or holds a dash', { file });
@@ -148,11 +150,37 @@ interface SheetRow {
   readonly asked: readonly string[];
   readonly file: string;
   readonly study: Study;
+  /** Ids of the buildings of the newest run. */
+  readonly known: ReadonlySet<string>;
+  /** The year in which the sheet is taken. */
+  readonly present: number;
+}
+
+/** Two rows that answer one question of a building differently: which of them holds is for whoever was there to say. */
+function contradictions(given: readonly Given[], file: string, study: Study): readonly Problem[] {
+  const first = new Map<string, Given>();
+  return given.flatMap((one) => {
+    const { row, id, column, cell } = one;
+    if (cell === null) return [];
+    const key = JSON.stringify([id, column]);
+    const other = first.get(key);
+    if (other?.cell == null) {
+      first.set(key, one);
+      return [];
+    }
+    if (readFound(column, cell, study) === readFound(column, other.cell, study)) return [];
+    return [
+      {
+        place: { file, row, columnName: column },
+        message: `${showValue(cell)} for ${showValue(id)}, of which row ${String(other.row)} says ${showValue(other.cell)}; keep the one that holds`,
+      },
+    ];
+  });
 }
 
 function readRow(
   row: number,
-  { cellOf, asked, file, study }: SheetRow,
+  { cellOf, asked, file, study, known, present }: SheetRow,
 ): { readonly given: readonly Given[]; readonly problems: readonly Problem[] } {
   const written = (name: string): string | null => {
     // a cell that was guarded against formulas comes back with its apostrophe
@@ -177,6 +205,13 @@ function readRow(
   const rest = { surveyor: about('surveyor'), surveyed_on: about('surveyed_on'), remark: about('remark') };
   const given: Given[] = [];
   const problems: Problem[] = [];
+  if (!known.has(id))
+    problems.push({
+      place: { file, row, columnName: 'id' },
+      message: `${showValue(id)} is no building of the newest run`,
+    });
+  const kinds = Object.keys(study.survey.visits).join(', ');
+  const named = about('visit');
   if (rest.surveyed_on !== null && !isCalendarDate(rest.surveyed_on))
     problems.push({
       place: { file, row, columnName: 'surveyed_on' },
@@ -188,13 +223,24 @@ function readRow(
       problems.push({ place: { file, row, columnName: column }, message: read.wrong });
       continue;
     }
-    given.push({ row, id, column, cell: read === null ? null : cell, visit: visit ?? about('visit'), ...rest });
+    const latest = Math.min(present, Number(/^\d{4}(?=[-/.])/.exec(rest.surveyed_on ?? '')?.[0] ?? present));
+    if (column === 'year_built' && typeof read === 'number' && read > latest)
+      problems.push({
+        place: { file, row, columnName: column },
+        message: `${showValue(cell)} lies after ${String(latest)}, when it was looked at; write the year in which it was built, or leave the cell blank`,
+      });
+    given.push({ row, id, column, cell: read === null ? null : cell, visit: visit ?? named, ...rest });
   }
   const missing = given.find((one) => one.cell === null);
   if (missing !== undefined && visit === undefined)
     problems.push({
       place: { file, row, columnName: 'visit' },
-      message: `${missing.column} is ${showValue(written(missing.column))}, looked for and not found, and ${missing.visit === null ? 'no kind of visit is named' : `${showValue(missing.visit)} is no kind of visit of the study`}: name the one that looked (${Object.keys(study.survey.visits).join(', ')}), or leave cells blank where nobody looked`,
+      message: `${missing.column} is ${showValue(written(missing.column))}, looked for and not found, and ${missing.visit === null ? 'no kind of visit is named' : `${showValue(missing.visit)} is no kind of visit of the study`}: name the one that looked (${kinds}), or leave cells blank where nobody looked`,
+    });
+  else if (named !== null && visit === undefined)
+    problems.push({
+      place: { file, row, columnName: 'visit' },
+      message: `${showValue(named)} is no kind of visit of the study; write one of ${kinds}, or leave the cell blank`,
     });
   return { given, problems };
 }
@@ -218,6 +264,7 @@ function recordsOf(text: string, file: string): readonly (readonly string[])[] {
   try {
     const records: string[][] = parse(text, {
       bom: true,
+      delimiter: delimiterOf(text.split(/\r\n|\r|\n/, 1)[0] ?? ''),
       relax_column_count: true,
       skip_empty_lines: false,
       max_record_size: 1 << 20,
@@ -231,24 +278,10 @@ function recordsOf(text: string, file: string): readonly (readonly string[])[] {
 }
 
 /** Answers for buildings that the newest run does not hold are a slip of the pen. */
-async function refuseStrangers(
-  db: Database,
-  loaded: LoadedStudy,
-  given: readonly Given[],
-  file: string,
-): Promise<void> {
+async function idsOf(db: Database, loaded: LoadedStudy): Promise<ReadonlySet<string>> {
   const { fingerprints } = await chosenRun(db, loaded, {});
-  const known = new Set(
-    (await db.rows<{ id: string }>('SELECT id FROM building WHERE inventory_id = ?', [fingerprints.inventory])).map(
-      ({ id }) => id,
-    ),
-  );
-  const problems = given
-    .filter(({ id }) => !known.has(id))
-    .map(({ row, id }) => ({
-      place: { file, row, columnName: 'id' },
-      message: `${showValue(id)} is no building of the newest run`,
-    }));
-  const once = [...new Map(problems.map((problem) => [problem.place.row, problem])).values()];
-  if (once.length > 0) throw UserError.of(once);
+  const rows = await db.rows<{ id: string }>('SELECT id FROM building WHERE inventory_id = ?', [
+    fingerprints.inventory,
+  ]);
+  return new Set(rows.map(({ id }) => id));
 }

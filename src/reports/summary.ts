@@ -1,7 +1,7 @@
 /** The summary: one page of Markdown that a council can read. */
 import { formatCount, formatNumber, formatShare } from '../engineering/format.js';
 import type { PageData } from '../engineering/page-contract.js';
-import { answerNotes, answerSentence, attributeTotal, decisiveAttributes, LEVEL_OF_WORK, orderSentence, slopeSentence } from './dashboard/answers.js';
+import { answerNotes, answerSentence, attributeTotal, decisiveAttributes, orderSentence, slopeSentence } from './dashboard/answers.js';
 import { capacityWords, demandPlaces, governingPeriod, listLength, numberAt } from './dashboard/reading.js';
 import { doubtWords, middleSentence, reasonTeller, tellsDoubts } from './dashboard/reasons.js';
 import { visitsTable } from './dashboard/sections/survey.js';
@@ -21,7 +21,7 @@ export function renderSummary(data: PageData): string {
   const { summary } = data;
   const parts = [
     `# ${markdownText(summary.title)}: which buildings should be assessed in detail first`,
-    `${LEVEL_OF_WORK} Run ${markdownText(summary.run)}, made ${markdownText(madeAt(summary.made))} with ${markdownText(summary.program)}.`,
+    `${markdownText(summary.level_of_work)} Run ${markdownText(summary.run)}, made ${markdownText(madeAt(summary.made))} with ${markdownText(summary.program)}.`,
     `**${answerSentence(data)}**`,
     orderSentence(data),
     ...answerNotes(data).map((note) => markdownText(note)),

@@ -262,8 +262,8 @@ function irregularityAssumptions({ irregularity }: AssessSettings): readonly Ass
   ];
 }
 
+/** Of every run; what was looked at before it stands ahead of them (level-of-work.ts). */
 export const CAUTIONS: readonly string[] = [
-  'Desk screening: no visit was made and no drawings were read.',
   'This is an order for further assessment, not a statement on the safety of any building.',
   'A low rank is not clearance.',
   'Ranks inside a tie group are not distinguishable.',

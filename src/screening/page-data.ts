@@ -20,6 +20,7 @@ import { gapsOf } from './gaps.js';
 import { gridRejects } from './grid-rejects.js';
 import { readGrids } from './kept-grids.js';
 import { STRUCTURE_SPEC, knowsStructure, readPools } from './read-buildings.js';
+import { levelOfWork, workOfOthers } from './level-of-work.js';
 import { findingCounts } from './summarise.js';
 import type { StoredSummary } from './summarise.js';
 import { pageSites } from './sites.js';
@@ -107,6 +108,7 @@ export async function pageDataOf(db: Database, runId: number, display: Display):
   const texts = (name: string): (string | null)[] => [...(read[name] as readonly (string | null)[])];
   const grids = await readGrids(db, run.settings);
   const place = { lon: read['lon'] as Float64Array, lat: read['lat'] as Float64Array };
+  const level = levelOfWork(await workOfOthers(db, run.inventory_id));
   const { made, program, title, rank_by, inventory_id, study_fingerprint, methods_fingerprint } = run;
   return {
     summary: {
@@ -125,7 +127,8 @@ export async function pageDataOf(db: Database, runId: number, display: Display):
         'SELECT not_ranked AS reason, count(*) AS count FROM result_assessed WHERE run_id = ? AND not_ranked IS NOT NULL GROUP BY 1 ORDER BY 2 DESC, 1',
         [runId],
       ),
-      cautions: CAUTIONS,
+      level_of_work: level,
+      cautions: [level, ...CAUTIONS],
     },
     settings: run.settings,
     buildings: {

@@ -8,8 +8,8 @@ import type { NumberRange } from '../engineering/formula.js';
 import { UserError, showValue } from '../errors.js';
 import type { Problem } from '../errors.js';
 import { suggest } from './nearest.js';
-import { OWN_COEFFICIENT, OWN_LEVELS, OWN_PERIOD_RANGES, OWN_REDUCTION, OWN_YEAR } from './own-table.js';
 import { delimiterOf } from './number-cells.js';
+import { OWN_COEFFICIENT, OWN_LEVELS, OWN_PERIOD_RANGES, OWN_REDUCTION, OWN_YEAR } from './own-table.js';
 import { readText } from './read-text.js';
 
 const NEEDED = ['from_year', 'coefficient', 'level'] as const;
@@ -123,14 +123,14 @@ export function ownTableFromText(text: string, file = 'eras.csv'): readonly OwnE
 function recordsOf(text: string, file: string): string[][] {
   try {
     return parse(text, {
+      delimiter: delimiterOf(text.split(/\r\n|\r|\n/, 1)[0] ?? ''),
       bom: true,
-      delimiter: delimiterOf(/^.*/.exec(text)?.[0] ?? ''),
       trim: true,
       relax_column_count: true,
       skip_empty_lines: false,
     });
   } catch (cause) {
     if (!(cause instanceof CsvError)) throw cause;
-    throw new UserError(`not a table of cells: ${cause.message}`, { file }, { cause });
+    throw new UserError(`not a table with commas, semicolons or tabs: ${cause.message}`, { file }, { cause });
   }
 }

@@ -94,15 +94,15 @@ function readRecords(text: string, file: string): string[][] {
   let records: string[][];
   try {
     records = parse(text, {
+      delimiter: delimiterOf(text.split(/\r\n|\r|\n/, 1)[0] ?? ''),
       bom: true,
-      delimiter: delimiterOf(/^.*/.exec(text)?.[0] ?? ''),
       trim: true,
       relax_column_count: true,
       skip_empty_lines: false,
     });
   } catch (cause) {
     if (!(cause instanceof CsvError)) throw cause;
-    throw new UserError(`not a table of cells: ${cause.message}`, { file }, { cause });
+    throw new UserError(`not a table with commas, semicolons or tabs: ${cause.message}`, { file }, { cause });
   }
   const [header = [], ...rest] = records;
   if (header.join() !== HEADER.join()) {

@@ -172,6 +172,7 @@ describe('takeAnswers', () => {
       const bytes = readFileSync(database);
       const checked = await checkStudy(path);
       expect(readFileSync(database).equals(bytes)).toBe(true);
+      expect(checked.account[0]?.title).toMatch(/not yet ranked$/);
       const answered = await screened(path, ['L1', 'L2']);
       expect(answered.inventory).not.toBe(before.inventory);
       expect({ attributes: checked.attributes, findings: checked.findings }).toEqual(answered.told);
@@ -273,6 +274,26 @@ describe('takeAnswers', () => {
         },
       ],
     });
+    // all faults at once: MADE lies in 2026
+    const faults =
+      'id;year_built;system;visit;surveyed_on\nX9;2050;;;\nL1;;timber-light-frame;moon;\nL1;;concrete-shear-wall;;\nL2;2025;;;2024-05-01\n';
+    for (const mark of [';', '\t', ','])
+      await expect(of(faults.replaceAll(';', mark))).rejects.toMatchObject({
+        problems: [
+          { place: { row: 2, columnName: 'id' }, message: '"X9" is no building of the newest run' },
+          { place: { row: 2, columnName: 'year_built' }, message: expect.stringContaining('after 2026') as string },
+          {
+            place: { row: 3, columnName: 'visit' },
+            message:
+              '"moon" is no kind of visit of the study; write one of desk, street, drawings, or leave the cell blank',
+          },
+          { place: { row: 5, columnName: 'year_built' }, message: expect.stringContaining('after 2024') as string },
+          {
+            place: { row: 4, columnName: 'system' },
+            message: expect.stringContaining('of which row 3 says "timber-light-frame"') as string,
+          },
+        ],
+      });
     const loaded = await loadStudy(path);
     const db = await openStudyDatabase(loaded);
     expect(await db.value('SELECT count(*) FROM survey_answer')).toBe(0);

@@ -152,6 +152,21 @@ describe('planSurvey, between answers and the next screening', () => {
   it('has nothing to say of answers that the run counts, told twice or not', { timeout: 60_000 }, async () => {
     await take(`id,visit,system\n${part},street,concrete-shear-wall\n`);
     const { runId } = await screen(db, loaded, { made: MADE });
+    // counted by hand in data-demo/inventory.csv: 10 coefficients, 6 rows with the state "assessment done"; measured periods are of rows and of records
+    const given =
+      'a design coefficient, as drawings state it for 10 buildings; a finished assessment for 6 buildings; a measured period for ';
+    const first = (await pageDataOf(db, 1, 'si')).summary;
+    const data = await pageDataOf(db, runId, 'si');
+    expect(first.level_of_work).toContain(
+      `itself visited nothing and read no drawings. What others found and it was given: ${given}`,
+    );
+    expect(data.summary.level_of_work).toContain(`it was given: answers of a survey for 3 buildings; ${given}`);
+    expect(data.summary.cautions[0]).toBe(data.summary.level_of_work);
+    for (const page of [renderSummary(data), renderDashboard(data, '').replaceAll(/<script[^]*?<\/script>/g, '')]) {
+      // in the head and with the cautions
+      expect(page.split('answers of a survey for 3 buildings')).toHaveLength(3);
+      expect(page).not.toMatch(/no building was visited|no visit was made/);
+    }
     const now = await plan(runId);
     expect([now.answered_at, now.withdrawn_at]).toEqual([0, 0]);
     expect(askedAt(now, part)).not.toContain('system');

@@ -122,4 +122,8 @@ describe('loadOwnTable', () => {
   it('says which file it looked for', async () => {
     await expect(loadOwnTable('/nowhere/eras.csv')).rejects.toThrow(/table of eras/);
   });
+
+  it('takes semicolons or tabs between the cells of the file', () => {
+    for (const mark of [';', '\t']) expect(ownTableFromText(CSV.replaceAll(',', mark))).toEqual(ownTableFromText(CSV));
+  });
 });

@@ -422,7 +422,9 @@ function summaryOf(rows: readonly Row[], results: readonly Row[], ranked: number
         source: 'invented for this example',
       },
     ],
+    level_of_work: 'Desk screening: Swaymark itself visited nothing.',
     cautions: [
+      'Desk screening: Swaymark itself visited nothing.',
       'This is an order for further assessment, not a statement about safety.',
       'A low rank is not clearance.',
       'Ranks inside a tie group cannot be told apart.',

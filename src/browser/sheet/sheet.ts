@@ -125,7 +125,7 @@ function sheetOf(
     el(
       'p',
       { class: 'quiet' },
-      'Desk screening, no visit, no drawings: an order for further assessment, not a statement about the safety of this building.',
+      'Desk screening; Swaymark itself visited nothing and read no drawings. It is an order for further assessment, not a statement about the safety of this building.',
     ),
   );
 }

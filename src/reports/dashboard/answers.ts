@@ -5,8 +5,6 @@ import { SURE } from '../../screening/summarise.js';
 import { outlookSentence } from '../survey/words.js';
 import { counted, listLength } from './reading.js';
 
-export const LEVEL_OF_WORK = 'Desk screening: no building was visited, no drawings were read.';
-
 const ORDER_OF: Readonly<Record<string, string>> = {
   people: 'how often shaking is expected to exceed what the building can take, times the people inside',
   ratio: 'how often shaking is expected to exceed what the building can take',

@@ -4,7 +4,7 @@ import type { ComponentChild } from 'preact';
 import type { PageData } from '../../../engineering/page-contract.js';
 import { madeAt } from '../../made-at.js';
 import { counted } from '../reading.js';
-import { answerNotes, answerSentence, LEVEL_OF_WORK, orderSentence } from '../answers.js';
+import { answerNotes, answerSentence, orderSentence } from '../answers.js';
 
 const CONTENTS: readonly (readonly [string, string])[] = [
   ['list', 'The list'],
@@ -37,7 +37,7 @@ export function Top({ data }: { readonly data: PageData }): ComponentChild {
     h(
       'p',
       { class: 'quiet' },
-      `${LEVEL_OF_WORK} Run ${summary.run}, made ${madeAt(summary.made)}; ${counted(summary.buildings, 'building', 'buildings')} from ${counted(summary.rows_in, 'row', 'rows')}.`,
+      `${summary.level_of_work} Run ${summary.run}, made ${madeAt(summary.made)}; ${counted(summary.buildings, 'building', 'buildings')} from ${counted(summary.rows_in, 'row', 'rows')}.`,
     ),
     h('p', { class: 'answer' }, answerSentence(data)),
     h(
@@ -48,7 +48,7 @@ export function Top({ data }: { readonly data: PageData }): ComponentChild {
         'aside',
         { class: 'careful', 'aria-labelledby': 'careful-title' },
         h('h2', { id: 'careful-title' }, 'Before you use this'),
-        h('ul', null, summary.cautions.filter((caution) => !caution.startsWith('Desk screening')).slice(0, 4).map((caution) => h('li', null, caution))),
+        h('ul', null, summary.cautions.filter((caution) => caution !== summary.level_of_work).slice(0, 4).map((caution) => h('li', null, caution))),
         h('p', { class: 'quiet' }, h('a', { href: '#cautions' }, 'All cautions')),
       ),
     ),
