@@ -42,5 +42,5 @@ export function levelOfWork({ surveyed, drawings, assessed, measured }: WorkOfOt
   ] as const;
   const parts = told.flatMap(([count, what]) => (count === 0 ? [] : [`${what} for ${buildings(count)}`]));
   const others = parts.length === 0 ? 'nothing of visits, drawings, assessments or measurements' : parts.join('; ');
-  return `${OWN_WORK} What others found and it was given: ${others}.`;
+  return `${OWN_WORK} In the records it was given: ${others}.`;
 }

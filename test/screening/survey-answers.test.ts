@@ -158,7 +158,7 @@ describe('planSurvey, between answers and the next screening', () => {
     const first = (await pageDataOf(db, 1, 'si')).summary;
     const data = await pageDataOf(db, runId, 'si');
     expect(first.level_of_work).toContain(
-      `itself visited nothing and read no drawings. What others found and it was given: ${given}`,
+      `itself visited nothing and read no drawings. In the records it was given: ${given}`,
     );
     expect(data.summary.level_of_work).toContain(`it was given: answers of a survey for 3 buildings; ${given}`);
     expect(data.summary.cautions[0]).toBe(data.summary.level_of_work);
