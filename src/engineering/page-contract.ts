@@ -25,6 +25,8 @@ export interface FindingCount {
   readonly code: string;
   readonly kind: string;
   readonly count: number;
+  /** Whose cells they are, where cells were not read. */
+  readonly column?: string;
   /** One message as an example, with its row. */
   readonly example: string;
 }

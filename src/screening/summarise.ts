@@ -101,7 +101,7 @@ export function rankingFigures(
   };
 }
 
-/** Findings of an inventory counted by code, with one example each. */
+/** Findings of an inventory counted by code, words and numbers that were not read by column too, with one example each. */
 export async function findingCounts(db: Database, inventoryId: string): Promise<readonly FindingCount[]> {
   const rows = await db.rows<{
     code: string;
@@ -113,13 +113,14 @@ export async function findingCounts(db: Database, inventoryId: string): Promise<
   }>(
     `SELECT code, kind, count(*) AS count, min("row") AS row, coalesce(arg_min(column_name, "row"), min(column_name)) AS column_name,
        coalesce(arg_min(message, "row"), min(message)) AS message
-     FROM finding WHERE inventory_id = ? GROUP BY code, kind ORDER BY kind DESC, count DESC, code`,
+     FROM finding WHERE inventory_id = ? GROUP BY code, kind, CASE WHEN kind = 'rejected-cell' THEN column_name END ORDER BY kind DESC, count DESC, code, column_name`,
     [inventoryId],
   );
   return rows.map(({ code, kind, count, row, column_name, message }) => ({
     code,
     kind,
     count,
+    ...(kind === 'rejected-cell' && column_name !== null ? { column: column_name } : {}),
     example:
       `${[row === null ? '' : `row ${String(row)}`, column_name ?? ''].filter((part) => part !== '').join(', ')}: ${message}`.replace(
         /^: /,

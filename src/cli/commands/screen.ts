@@ -4,7 +4,12 @@ import type { PageData } from '../../engineering/page-contract.js';
 import { EXIT } from '../../errors.js';
 import { screenStudy } from '../../exports/screen-study.js';
 import type { ScreenedStudy } from '../../exports/screen-study.js';
-import { answerSentence, heightUnitSentence, notRankedSentence } from '../../reports/dashboard/answers.js';
+import {
+  answerSentence,
+  heightUnitSentence,
+  notRankedSentence,
+  unreadSentence,
+} from '../../reports/dashboard/answers.js';
 import { interruptible } from '../interrupt.js';
 import { printError, printJson, printLines, terminalColumns } from '../output/print.js';
 import { progressLine } from '../output/progress.js';
@@ -86,7 +91,15 @@ function places({ summary, buildings }: PageData): readonly Place[] {
 }
 
 function asJson({ runId, data, files, rejected }: ScreenedStudy): unknown {
-  return { ...data.summary, run: runId, answer: answerSentence(data), rejected, list: places(data), files };
+  return {
+    ...data.summary,
+    run: runId,
+    answer: answerSentence(data),
+    unread: unreadSentence(data.summary),
+    rejected,
+    list: places(data),
+    files,
+  };
 }
 
 function lines({ runId, data, files, rejected }: ScreenedStudy, columns: number): string[] {
@@ -121,7 +134,7 @@ function lines({ runId, data, files, rejected }: ScreenedStudy, columns: number)
     '',
     ...wrap(clean(answerSentence(data)), columns),
     '',
-    ...[notRankedSentence(summary), heightUnitSentence(summary)].flatMap((sentence) =>
+    ...[notRankedSentence(summary), unreadSentence(summary), heightUnitSentence(summary)].flatMap((sentence) =>
       sentence === '' ? [] : [...wrap(clean(sentence), columns), ''],
     ),
     ...(rows.length === 0

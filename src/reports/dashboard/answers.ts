@@ -110,6 +110,14 @@ export function notRankedSentence({ not_ranked }: PageData['summary']): string {
   return `${counted(sum(not_ranked), 'building is', 'buildings are')} not ranked, by reason: ${named.join('; ')}${rest}.`;
 }
 
+/** How many cells of which columns were not read; empty when all were. */
+export function unreadSentence({ findings }: Pick<PageData['summary'], 'findings'>): string {
+  const counts = new Map<string, number>();
+  for (const { column, count } of findings) if (column !== undefined) counts.set(column, (counts.get(column) ?? 0) + count);
+  const told = [...counts].map(([column, count]) => `${column} (${formatCount(count)})`).join(', ');
+  return told === '' ? '' : `Cells that could not be read, by column: ${told}; they count as unknown, and each stands in rejects.csv.`;
+}
+
 /** What to write in the study when the heights look as if their unit were another; empty when they do not. */
 export function heightUnitSentence({ findings }: Pick<PageData['summary'], 'findings'>): string {
   const unit = findings.some(({ code }) => code === 'column-looks-like-feet')
@@ -136,7 +144,7 @@ export function slopeSentence({ slopes }: Pick<PageData['summary'], 'slopes'>): 
 export function answerNotes({ summary }: PageData): readonly string[] {
   const { tie_group_at_edge: edge } = summary;
   const survey = summary.survey == null ? '' : outlookSentence(summary.survey);
-  const before = [survey, heightUnitSentence(summary), notRankedSentence(summary)].filter((note) => note !== '');
+  const before = [survey, unreadSentence(summary), heightUnitSentence(summary), notRankedSentence(summary)].filter((note) => note !== '');
   const notes = [
     ...before,
     `“Sure” is a chance of at least ${formatShare(SURE)} that the building truly belongs to the list; “wrong” is a place that better knowledge would give to another building.`,

@@ -1,8 +1,14 @@
 import { describe, expect, it } from 'vitest';
-import { answerNotes, answerSentence, heightUnitSentence, notRankedSentence, slopeSentence } from '../../../src/reports/dashboard/answers.js';
+import { answerNotes, answerSentence, heightUnitSentence, notRankedSentence, slopeSentence, unreadSentence } from '../../../src/reports/dashboard/answers.js';
 import { pageData } from '../../support/page-data.js';
 
 const data = pageData({ listSize: 20 });
+
+it('names the columns whose cells were not read', () => {
+  const of = (column: string) => ({ code: 'unknown-word', kind: 'rejected-cell', count: 103, column, example: '' });
+  expect(unreadSentence({ findings: [of('torsion'), of('setback')] })).toContain('torsion (103), setback (103)');
+  expect(unreadSentence({ findings: [] })).toBe('');
+});
 const edgeNote = (from: number, to: number): string | undefined =>
   answerNotes({ ...data, summary: { ...data.summary, tie_group_at_edge: { from, to } } }).find((note) => note.includes('edge of the list'));
 
