@@ -67,7 +67,7 @@ describe('the outlook of a run', () => {
   it('stands in the summary', () => {
     const text = renderSummary(data);
     expect(text).toMatch(/## What the money buys\n\nTo assess every building on the list in detail would cost about/);
-    expect(text).toMatch(/## What the list hangs on\n\nWith \d+ assumptions switched, one at a time/);
+    expect(text).toMatch(/## What the list hangs on\n\nWith \d+ switches of assumptions made, one at a time/);
   });
 
   it('says what is wrong with a budget, and ranks all the same', async () => {

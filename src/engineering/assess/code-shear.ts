@@ -2,8 +2,6 @@
  * Base shear by the code that the spectrum is of, with that code's limits: shown beside the elastic one, counted nowhere. Where the
  * program carries no record of a code's formula, or the spectrum does not state what the formula asks, the hand calculation says so.
  */
-import { ASCE7_WALL_AND_LIMIT_RECORDS } from '../period/asce7.js';
-import { PERIOD_2002 } from '../capacity/us.js';
 import type { Building, System } from '../building.js';
 import { CANADA_2005, NBC_RD_RO } from '../capacity/canada.js';
 import { INDIAN_R, INDIA_2002 } from '../capacity/india.js';
@@ -15,6 +13,10 @@ import { TURKEY_2018, TURKISH_R, overstrengthOf } from '../capacity/turkey.js';
 import { BASE_SHEAR_ASCE7, BASE_SHEAR_EN1998, BASE_SHEAR_IMPORTANCE } from '../demand/base-shear.js';
 import { formatNumber } from '../format.js';
 import { apply, applyAny } from '../formula.js';
+import type { AnyRecord } from '../formula.js';
+import { heightFormula, periodFormula } from '../period/choose.js';
+import type { PeriodStandard } from '../period/choose.js';
+import { cite } from '../source.js';
 import { mappedDesignValues } from '../spectrum/asce7-mapped.js';
 import { ordinate } from '../spectrum/compiled.js';
 import { EN1998_DESIGN_CODES } from '../spectrum/en1998-design.js';
@@ -57,7 +59,8 @@ export function codeShear(facts: ShearFacts): number | null {
 /** S_1 from which the floor near faults counts, g (12.8.1.1). */
 const NEAR_FAULT_FROM_G = 0.6;
 
-function asce7({ building, system, spectrum, period_s, trace }: ShearFacts): number | string {
+function asce7(facts: ShearFacts): number | string {
+  const { building, system, spectrum, trace } = facts;
   const { inputs, record } = spectrum;
   const mapped = mappedDesignValues(record.id, inputs);
   const sds_g = mapped?.sds_g ?? inputs['sds_g'];
@@ -71,7 +74,7 @@ function asce7({ building, system, spectrum, period_s, trace }: ShearFacts): num
   }
   const s1_g = mapped === null ? null : Number(inputs['s1_g']);
   nearFaultWords(s1_g, trace);
-  const limited_s = withinLimit(building, system, sd1_g, period_s, trace);
+  const period_s = withinLimit(facts, 'asce7-22', () => 'calculated', { sd1_g });
   const { tl_s } = inputs;
   trace.value('reduction_r', SYSTEM_FACTORS[system].r2002, 'computed', `R of ${system}, from memory of ASCE/SEI 7`);
   return apply(
@@ -83,27 +86,39 @@ function asce7({ building, system, spectrum, period_s, trace }: ShearFacts): num
       near_fault_s1_g: s1_g !== null && s1_g >= NEAR_FAULT_FROM_G ? s1_g : 0,
       reduction_r: SYSTEM_FACTORS[system].r2002,
       importance_factor: importanceOf(building),
-      period_s: limited_s,
+      period_s,
     },
     trace,
   );
 }
 
-/** The period that the base shear of ASCE 7 may be read at: no longer than C_u T_a (12.8.2). */
-function withinLimit(building: Building, system: System, sd1_g: number, period_s: number, trace: Trace): number {
-  const height_m = building.height_m.value;
-  const within = new Trace();
-  const approximate_s = applyAny(PERIOD_2002[SYSTEM_FACTORS[system].periodClass], { height_m }, within);
-  const limit_s = applyAny(PERIOD_LIMIT, { period_s: approximate_s, sd1_g }, within);
+/** The period that a base shear may be read at: no longer than the code's own limit, a multiple of its approximate period by height. */
+function withinLimit(
+  { building, system, period_s, trace }: ShearFacts,
+  standard: PeriodStandard,
+  limitFor: (formula: AnyRecord) => string,
+  besides: Readonly<Record<string, number>> = {},
+): number {
+  const formula = heightFormula(system, standard, 'design');
+  const limit = periodFormula(`${standard}/period-limit/${limitFor(formula)}`);
+  const steps = new Trace();
+  const approximate_s = applyAny(formula, { height_m: building.height_m.value }, steps);
+  const limit_s = applyAny(limit, { period_s: approximate_s, ...besides }, steps);
   if (period_s <= limit_s) return period_s;
-  for (const step of within.steps) trace.steps.push(step);
+  for (const step of steps.steps) trace.steps.push(step);
   trace.choice({
     question: 'Period of the base shear',
     taken: `${formatNumber(limit_s, 4)} s`,
-    because: `ASCE 7 12.8.2: no longer than C_u T_a, however long the period that ranks, ${formatNumber(period_s, 4)} s`,
+    because: `${cite(limit.source)}: no longer than that, however long the period that ranks, ${formatNumber(period_s, 4)} s`,
     others: [],
   });
   return limit_s;
+}
+
+/** The limit of NBC goes with the kind of structure that its formula is for. */
+function nbcLimit({ id }: AnyRecord): string {
+  const which = id.slice(id.lastIndexOf('/') + 1);
+  return which.endsWith('moment-frame') ? 'moment-frame' : which;
 }
 
 function nearFaultWords(s1_g: number | null, trace: Trace): void {
@@ -153,8 +168,6 @@ function en1998({ building, storeys, spectrum, period_s, context, trace }: Shear
   return apply(BASE_SHEAR_EN1998, { design_sa_g, period_s, corner_period_s: spectrum.corner_s, storeys }, trace);
 }
 
-const PERIOD_LIMIT = recordOf(ASCE7_WALL_AND_LIMIT_RECORDS, 'asce7-22/period-limit/calculated');
-
 const NZ_STATIC = NZS1170_CODES[0]!.choice!.records['equivalent-static']!;
 const NZ_ACTION = recordOf(NZS1170_FACTOR_RECORDS, 'nzs1170-5-2004/base-shear/design-action');
 
@@ -170,13 +183,15 @@ function nzs1170({ system, spectrum: { inputs }, period_s, trace }: ShearFacts):
   return applyAny(NZ_ACTION, { sa_g, performance_factor, ductility, ...known, period_s }, trace);
 }
 
-function nbc({ building, system, spectrum, period_s, trace }: ShearFacts): number {
+function nbc(facts: ShearFacts): number {
+  const { building, system, spectrum, trace } = facts;
   const at = (t_s: number): number => ordinate(spectrum.compiled, t_s);
   const reduction_r = NBC_RD_RO[system];
   trace.value('reduction_r', reduction_r, 'computed', `R_d R_o of ${system}, from memory`);
   trace.value('M_v', 1, 'default', 'factor of the higher modes: nobody states it; walls of long period have more');
   if (spectrum.record.id.endsWith('log-log'))
     trace.value('S(T)', 'straight lines', 'computed', 'between 0.2, 0.5, 1 and 2 s, where the spectrum is log-log');
+  const period_s = withinLimit(facts, 'nbc-2015', nbcLimit);
   const ordinates = { s_0p2_g: at(0.2), s_0p5_g: at(0.5), s_1_g: at(1), s_2_g: at(2) };
   return withImportance(apply(CANADA_2005, { ...ordinates, reduction_r, period_s }, trace), building, trace);
 }
@@ -195,7 +210,12 @@ function withImportance(base_shear_coefficient: number, building: Building, trac
   return apply(BASE_SHEAR_IMPORTANCE, { base_shear_coefficient, importance_factor }, trace);
 }
 
-function tbdy({ system, spectrum: { inputs, compiled }, period_s, trace }: ShearFacts): number {
+function tbdy(facts: ShearFacts): number {
+  const {
+    system,
+    spectrum: { inputs, compiled },
+    trace,
+  } = facts;
   const { fs, f1 } = compiled.quantities!;
   const sds_g = Number(inputs['ss_g']) * fs!;
   const sd1_g = Number(inputs['s1_g']) * f1!;
@@ -204,6 +224,7 @@ function tbdy({ system, spectrum: { inputs, compiled }, period_s, trace }: Shear
   const reduction_r = TURKISH_R[system];
   trace.value('reduction_r', reduction_r, 'computed', `R of ${system}, from memory; importance 1`);
   const overstrength_d = overstrengthOf(reduction_r);
+  const period_s = withinLimit(facts, 'tbdy-2018', () => 'calculated');
   return apply(TURKEY_2018, { sds_g, sd1_g, reduction_r, overstrength_d, period_s }, trace);
 }
 

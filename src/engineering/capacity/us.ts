@@ -18,8 +18,7 @@ const PERIOD_1988 = {
   'eccentric-braced': recordOf(UBC_HEIGHT_PERIODS, 'ubc-1988/period/concrete-moment-frame-or-eccentric-braced'),
   other: recordOf(UBC_HEIGHT_PERIODS, 'ubc-1988/period/other'),
 };
-/** T_a of ASCE 7 by class of system. */
-export const PERIOD_2002 = {
+const PERIOD_2002 = {
   'steel-moment-frame': recordOf(ASCE7_22_PERIODS, 'asce7-22/period/steel-moment-frame'),
   'concrete-moment-frame': recordOf(ASCE7_22_PERIODS, 'asce7-22/period/concrete-moment-frame'),
   'eccentric-braced': recordOf(ASCE7_22_PERIODS, 'asce7-22/period/steel-eccentric-or-buckling-restrained'),

@@ -114,11 +114,15 @@ describe('codeShear', () => {
     // R_d R_o 6.8: (0.6 − 0.4 × 0.3)/6.8, the cap 2/3 S(0.2), the floor S(2.0)
     expect(worked(nbc, 0.7).shear).toBeCloseTo(0.070588, 6);
     expect(worked(nbc, 0.1).shear).toBeCloseTo(0.088235, 6);
-    expect(worked(nbc, 5).shear).toBeCloseTo(0.022059, 6);
-    expect(worked(nbc, 5, { fields: { importance_factor: 1.5 } }).shear).toBeCloseTo(1.5 * 0.022059, 5);
+    expect(worked(nbc, 5, TALL).shear).toBeCloseTo(0.022059, 6);
+    expect(worked(nbc, 5, { fields: { ...TALL.fields, importance_factor: 1.5 } }).shear).toBeCloseTo(1.5 * 0.022059, 5);
     expect(worked(nbc, 5).steps.some(({ title, source }) => title === 'M v' && source.includes('nobody states'))).toBe(
       true,
     );
+    // 4.1.8.11 (3)(d): moment frames no longer than 1.5 T_a, 0.075 × 14^0.75 here: S between 0.6 g at 0.5 s and 0.3 g at 1 s
+    const limit = 1.5 * 0.075 * 14 ** 0.75;
+    expect(worked(nbc, 5).shear).toBeCloseTo((0.6 - 0.6 * (limit - 0.5)) / 6.8, 6);
+    expect(worked(nbc, 5).choice('Period of the base shear')!.source).toContain('NBC 2015, 4.1.8.11');
   });
 
   it('gives the printed coefficient of IS 1893 with its importance', () => {
@@ -131,6 +135,8 @@ describe('codeShear', () => {
     // class ZB: F_S 0.9, F_1 0.8 (table 2.1, 2.2): S_DS 0.9, S_D1 0.32; R 8: 0.32/1/8 = 0.04 over 0.04 × 0.9
     const tbdy = { code: 'tbdy-2018', ss_g: 1, s1_g: 0.4, site_class: 'ZB' } as Spectra[string];
     expect(worked(tbdy, 1).shear).toBeCloseTo(0.04, 9);
+    // 4.7.3.4: no longer than 1.4 T_pA, T_pA = 0.1 × 14^0.75
+    expect(worked(tbdy, 2).shear).toBeCloseTo(0.32 / (1.4 * 0.1 * 14 ** 0.75) / 8, 6);
     // Z 1, R_t 1, D_s 0.30 of the most ductile concrete buildings (published)
     const rt = { code: 'japan-rt', zone_factor: 1, ground: 'type-2' } as Spectra[string];
     expect(worked(rt, 0.5).shear).toBeCloseTo(0.3, 9);
