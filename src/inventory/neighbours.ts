@@ -9,7 +9,7 @@ import type { Source } from './source.js';
 
 const NAMES = ['id_a', 'id_b', 'gap_m', 'floors_aligned'] as const;
 const LEFT_OUT = 'the pair is left out';
-const GAP = { name: 'gap_m', kind: 'number', title: 'Gap', limits: [0, 1000], hints: [] } as const;
+const GAP = { name: 'gap_m', kind: 'number', title: 'Gap', limits: [0, 1000] } as const;
 
 /** Opens the table, so that its bytes can enter the fingerprint of the inventory. */
 export function inspectNeighbours(path: string): Source {

@@ -6,6 +6,7 @@ import type { Unit } from '../engineering/units.js';
 import { showValue } from '../errors.js';
 import { BLANK } from '../study/inventory-schema.js';
 import { foldWord, readNumberCell } from './cell.js';
+import { hintsOf } from './column-hints.js';
 import { columnDirection, otherWay, readHeaderName, withoutDirection } from './header-name.js';
 import type { HeaderName } from './header-name.js';
 import { medianOf } from './median.js';
@@ -42,11 +43,12 @@ function score(column: InventoryColumn, { words, unit, direction, own }: HeaderN
     return own === column ? { score: OWN_NAME + Number(unit?.id === column.unit), refused: 0 } : NONE;
   if (unit !== undefined && unit.dimension !== column.dimension) return NONE;
   const wanted = columnDirection(column);
-  const hints = [...column.hints, column.title.toLowerCase(), foldWord(column.name.replaceAll('_', ' '))];
+  const hints = [...hintsOf(column), column.title.toLowerCase(), foldWord(column.name.replaceAll('_', ' '))];
   const asWritten = likeness(words, hints);
   if (wanted === undefined || direction === undefined) return { score: asWritten, refused: 0 };
   // `brace areas across` is what `brace area` is, across.
-  const shared = [...hints, ...(otherWay(column)?.hints ?? [])].map(withoutDirection);
+  const twin = otherWay(column);
+  const shared = [...hints, ...(twin === undefined ? [] : hintsOf(twin))].map(withoutDirection);
   const alike = Math.max(asWritten, likeness(withoutDirection(words), shared));
   return direction === wanted ? { score: alike, refused: 0 } : { score: 0, refused: alike };
 }
