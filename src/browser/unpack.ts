@@ -29,7 +29,7 @@ interface PackedColumns {
   readonly words: Readonly<Record<string, Packed>>;
 }
 
-interface PackedBuildings extends Pick<PageBuildings, 'shown' | 'all' | 'pools'> {
+interface PackedBuildings extends Pick<PageBuildings, 'shown' | 'all' | 'pools' | 'found'> {
   readonly inputs: PackedColumns & {
     readonly id: Packed;
     readonly structure?: PackedColumns;
@@ -84,6 +84,7 @@ export function unpackPage(json: string): LoadedPage {
       shown: rest.shown,
       all: rest.all,
       pools: rest.pools,
+      found: rest.found,
       inputs: {
         id: unpackColumn(inputs.id) as readonly string[],
         numbers: mapped(inputs.numbers, numbers) as unknown as BuildingColumns['numbers'],

@@ -4,6 +4,7 @@ import type { SpreadShare } from './assess/spread-shares.js';
 import type { BuildingColumns, YearPools } from './building-columns.js';
 import type { BudgetOutlook, SensitivityOutlook, SurveyOutlook } from './page-outlook.js';
 import type { CarriedGrid } from './spectrum/grid-carry.js';
+import type { FoundBy } from './trace.js';
 
 /** Where a portfolio's values come from, counted per attribute. */
 export interface AttributeCount {
@@ -206,6 +207,8 @@ export interface PageBuildings {
   readonly first_row: readonly number[];
   /** Every column of results.ts by its name. */
   readonly results: Readonly<Record<string, readonly (number | string | null)[]>>;
+  /** What surveys found of the buildings shown, by id; only those with answers. */
+  readonly found: Readonly<Record<string, FoundBy>>;
 }
 
 export interface PageData {

@@ -34,8 +34,24 @@ export interface HeadingStep {
 
 export type TraceStep = FormulaStep | ChoiceStep | ValueStep | HeadingStep;
 
+/** Who found out what stands in place of the owner's cell, in words by column of the inventory: `street visit of 2026-05-03`. */
+export type FoundBy = Readonly<Record<string, string>>;
+
+/** Columns by the names under which their values enter, where these differ by more than blanks. */
+const COLUMN_OF: Readonly<Record<string, string>> = {
+  storeys: 'storeys_above',
+  'code edition': 'year_built',
+  're-entrant corner': 'reentrant_corner',
+};
+
 export class Trace {
   readonly steps: TraceStep[] = [];
+  readonly #foundBy: FoundBy;
+
+  /** `foundBy`: what surveys found of the building, so that its values name their source. */
+  constructor(foundBy: FoundBy = {}) {
+    this.#foundBy = foundBy;
+  }
 
   /** Formula steps since the last heading: the same record at the same inputs is written once. */
   readonly #written = new Set<string>();
@@ -52,11 +68,18 @@ export class Trace {
   }
 
   value(name: string, value: number | string, origin: string, why: string): void {
-    this.steps.push({ kind: 'value', name, value, origin, why });
+    this.steps.push({ kind: 'value', name, value, origin, why: origin === 'given' ? this.#source(name, why) : why });
   }
 
   heading(text: string): void {
     this.#written.clear();
     this.steps.push({ kind: 'heading', text });
+  }
+
+  #source(name: string, why: string): string {
+    const column = COLUMN_OF[name] ?? name.replaceAll(' ', '_');
+    if (!Object.hasOwn(this.#foundBy, column)) return why;
+    const by = this.#foundBy[column]!;
+    return why === 'from the inventory' ? by : `${why}, ${by}`;
   }
 }

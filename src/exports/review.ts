@@ -10,6 +10,7 @@ import { Trace } from '../engineering/trace.js';
 import { findUnit } from '../engineering/units.js';
 import { UserError } from '../errors.js';
 import { explainBuilding } from '../screening/explain.js';
+import { foundBy } from '../screening/found-by.js';
 import { readGrids } from '../screening/kept-grids.js';
 import { readRun } from '../screening/page-data.js';
 import type { Database } from '../store/database.js';
@@ -71,11 +72,16 @@ export async function reviewSheet(
   const drawn = `${String(chosen.length)} of the ${String(ranked.length)} ranked buildings of run ${String(runId)}, drawn without replacement with seed ${String(seed)}; each had the same chance`;
 
   const context = compileContext(run.settings, await readGrids(db, run.settings));
+  const found = await foundBy(
+    db,
+    run.inventory_id,
+    chosen.map((one) => one.id),
+  );
   const rows: (string | number | null)[][] = [];
   for (const { id, name, rank } of chosen) {
     // Explaining first proves that the value recomputed here is the stored one.
     const { building } = await explainBuilding(db, runId, id, display);
-    const trace = new Trace();
+    const trace = new Trace(found[id]);
     if (!isRanked(assess(building, context, trace))) continue;
     rows.push(...stepRows(trace, drawn, display).map((cells, step) => [id, name, rank, step + 1, ...cells]));
   }

@@ -14,6 +14,7 @@ import { Trace } from '../engineering/trace.js';
 import { Bug, UserError, showValue } from '../errors.js';
 import type { Database } from '../store/database.js';
 import { quoteName } from '../store/sql.js';
+import { foundBy } from './found-by.js';
 import { readGrids } from './kept-grids.js';
 import { neighboursOf } from './neighbours.js';
 import { readRun } from './page-data.js';
@@ -45,7 +46,7 @@ export async function explainBuilding(db: Database, runId: number, id: string, d
   const at = found.index;
   const { columns } = await readBuildings(db, run.inventory_id, { from: at, to: at + 1 }, { places: true });
   const building = buildingAt(columns, 0, await readPools(db, run.inventory_id));
-  const trace = new Trace();
+  const trace = new Trace((await foundBy(db, run.inventory_id, [id]))[id]);
   const context = compileContext(run.settings, await readGrids(db, run.settings));
   const result = found.not_ranked === null ? assess(building, context, trace) : { id, reason: found.not_ranked };
   if (isRanked(result)) {

@@ -18,6 +18,7 @@ import type { ColumnKind } from '../store/vectors.js';
 import { CAUTIONS } from './assumptions.js';
 import { gapsOf } from './gaps.js';
 import { gridRejects } from './grid-rejects.js';
+import { foundBy } from './found-by.js';
 import { readGrids } from './kept-grids.js';
 import { STRUCTURE_SPEC, knowsStructure, readPools } from './read-buildings.js';
 import { levelOfWork, workOfOthers } from './level-of-work.js';
@@ -158,6 +159,7 @@ export async function pageDataOf(db: Database, runId: number, display: Display):
       results: Object.fromEntries(
         RESULT_COLUMNS.map(({ name, kind }) => [name, kind === 'text' ? texts(`r_${name}`) : numbers(`r_${name}`)]),
       ),
+      found: await foundBy(db, inventory_id, texts('id') as string[]),
     },
     sites,
     gaps: await gapsOf(db, run, run.summary.list_size, () => compileContext(run.settings, grids)),

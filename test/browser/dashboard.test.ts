@@ -123,6 +123,12 @@ describe('renderDashboard', () => {
       await page.locator('#make-hand').click();
       expect(await page.locator('.agrees').textContent()).toMatch(/The two are identical|not ranked/);
     }
+    // what a survey found names it, and not the owner's table
+    const [surveyed = ''] = Object.keys(data.buildings.found);
+    await page.goto(`${address}#building=${surveyed}`);
+    await page.locator('#sheet-title', { hasText: surveyed }).waitFor();
+    await page.locator('#make-hand').click();
+    expect(await page.locator('#hand').innerText()).toMatch(/height: [^\n]*m\n+street visit of 2026-05-03/i);
   });
 
   it('leads from one building of a site to the others', async () => {

@@ -6,6 +6,8 @@ import type { CheckedStudy } from '../../src/exports/check-study.js';
 import { listAnswers, withdrawAnswers } from '../../src/exports/held-answers.js';
 import { takeAnswers } from '../../src/exports/take-answers.js';
 import { fieldSheet } from '../../src/exports/survey-study.js';
+import { withStudyDatabase } from '../../src/runs/open.js';
+import { explainBuilding } from '../../src/screening/explain.js';
 import { openStudyDatabase, screen } from '../../src/screening/screen.js';
 import type { ScreenOutcome } from '../../src/screening/screen.js';
 import { findingCounts } from '../../src/screening/summarise.js';
@@ -106,6 +108,13 @@ describe('takeAnswers', () => {
       });
       expect(after.rows[1]?.['height_m']).toBeCloseTo(12.4968, 9);
       expect(after.rows[1]?.['height_m_origin']).toBe('given');
+      // the hand calculation names who found a value, in place of the owner's table
+      const { steps } = await withStudyDatabase(path, (db) => explainBuilding(db, 2, 'BH-024', 'si'));
+      const sourceOf = (title: string) => steps.find((step) => step.title === title)?.source;
+      expect(sourceOf('storeys')).toBe('street visit of 2026-12-03 by N. N.');
+      expect(sourceOf('height')).toBe('street visit of 2026-12-03 by N. N.');
+      const others = steps.filter(({ source }) => source === 'from the inventory').map(({ title }) => title);
+      expect(others).not.toContain('occupants peak');
       // what was not asked stays as it was
       expect(after.rows[0]?.['year_built']).toBe(before.rows[0]?.['year_built']);
       expect(Number(after.rows[0]?.['findings'])).toBe(Number(before.rows[0]?.['findings']) + 1);

@@ -10,6 +10,7 @@ import { RESULT_COLUMNS } from '../../src/engineering/results.js';
 import { explainBuilding } from '../../src/screening/explain.js';
 import { readRun } from '../../src/screening/page-data.js';
 import { readBuildings, readPools } from '../../src/screening/read-buildings.js';
+import { findingCounts } from '../../src/screening/summarise.js';
 import { openStudyDatabase, screen } from '../../src/screening/screen.js';
 import type { ScreenOutcome } from '../../src/screening/screen.js';
 import type { Database } from '../../src/store/database.js';
@@ -83,7 +84,7 @@ describe('screen', () => {
   });
 
   it('accounts for every row, chances sum to the list size and the tie groups are contiguous', async () => {
-    await onDemo(async (db, { run_id: runId, summary }) => {
+    await onDemo(async (db, { run_id: runId, summary, inventory_id }) => {
       expect(summary.account.reduce((sum, { rows }) => sum + rows, 0)).toBe(summary.rows_in);
       const rows = await db.rows<{
         rank: number;
@@ -96,6 +97,17 @@ describe('screen', () => {
         [runId],
       );
       expect(rows.map(({ rank }) => rank)).toEqual(rows.map((_, i) => i + 1));
+      // cells that were not read are counted column by column
+      const cells = await db.rows<{ code: string; name: string }>(
+        "SELECT code, column_name AS name FROM finding WHERE inventory_id = ? AND kind = 'rejected-cell'",
+        [inventory_id],
+      );
+      const counted = (await findingCounts(db, inventory_id)).filter(({ kind }) => kind === 'rejected-cell');
+      const keys = cells.map(({ code, name }) => `${code} ${name}`);
+      expect(new Set(keys).size).toBeGreaterThan(2);
+      expect(counted.map(({ code, column, count }) => [`${code} ${String(column)}`, count]).sort()).toEqual(
+        [...new Set(keys)].map((key) => [key, keys.filter((one) => one === key).length]).sort(),
+      );
       expect(rows.reduce((sum, { chance }) => sum + chance, 0)).toBeCloseTo(20, 6);
       rows.reduce((last, { tie_group }) => {
         expect(tie_group - last === 0 || tie_group - last === 1).toBe(true);

@@ -260,6 +260,11 @@ export function pageData({
     lat: place('lat'),
     heritage: text('heritage'),
     first_row: rows.map((row) => row['first_row'] as number),
+    found: {
+      [rows.find((row) => row['height_m_origin'] === 'given')!['id'] as string]: {
+        height_m: 'street visit of 2026-05-03',
+      },
+    },
     results: Object.fromEntries(RESULT_COLUMNS.map(({ name }) => [name, results.map((row) => row[name] ?? null)])),
   };
   return {

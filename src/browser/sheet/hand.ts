@@ -19,8 +19,9 @@ export function handMaker(p: Portfolio): (i: number) => readonly HTMLElement[] {
   let context: AssessContext | null = null;
   return (i) => {
     context ??= compileContext(p.page.settings, gridsOf(p.page.grids));
-    const trace = new Trace();
-    const result = assess(buildingAt(p.page.buildings.inputs, i, p.page.buildings.pools), context, trace);
+    const { inputs, pools, found } = p.page.buildings;
+    const trace = new Trace(found[inputs.id[i] ?? '']);
+    const result = assess(buildingAt(inputs, i, pools), context, trace);
     const steps = handSteps(trace, p.page.display);
     const list = el('ol', { class: 'hand' }, ...steps.map(stepItem));
     return [agreement(isRanked(result) ? result.lnPriority : NaN, p.number('ln_priority', i)), list];

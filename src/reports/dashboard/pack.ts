@@ -92,6 +92,7 @@ export function packPage(data: PageData): unknown {
       site: packColumn(buildings.site),
       heritage: packColumn(buildings.heritage),
       first_row: packColumn(buildings.first_row),
+      found: buildings.found,
       results: Object.fromEntries(
         RESULT_COLUMNS.map(({ name, kind }) => [
           name,
