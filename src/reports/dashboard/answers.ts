@@ -1,4 +1,5 @@
 /** Sentences computed from the data, shared by page and summary. */
+import { findColumn } from '../../engineering/columns.js';
 import { formatCount, formatNumber, formatShare } from '../../engineering/format.js';
 import type { AttributeCount, PageData, PageSummary } from '../../engineering/page-contract.js';
 import { SURE } from '../../screening/summarise.js';
@@ -114,8 +115,8 @@ export function notRankedSentence({ not_ranked }: PageData['summary']): string {
 export function unreadSentence({ findings }: Pick<PageData['summary'], 'findings'>): string {
   const counts = new Map<string, number>();
   for (const { column, count } of findings) if (column !== undefined) counts.set(column, (counts.get(column) ?? 0) + count);
-  const told = [...counts].map(([column, count]) => `${column} (${formatCount(count)})`).join(', ');
-  return told === '' ? '' : `Cells that could not be read, by column: ${told}; they count as unknown, and each stands in rejects.csv.`;
+  const told = [...counts].map(([column, count]) => `${findColumn(column)?.title ?? column} (${formatCount(count)})`).join(', ');
+  return told === '' ? '' : `Cells that could not be read, by column: ${told}. What they say counts as unknown; each stands in rejects.csv.`;
 }
 
 /** What to write in the study when the heights look as if their unit were another; empty when they do not. */
@@ -144,7 +145,7 @@ export function slopeSentence({ slopes }: Pick<PageData['summary'], 'slopes'>): 
 export function answerNotes({ summary }: PageData): readonly string[] {
   const { tie_group_at_edge: edge } = summary;
   const survey = summary.survey == null ? '' : outlookSentence(summary.survey);
-  const before = [survey, unreadSentence(summary), heightUnitSentence(summary), notRankedSentence(summary)].filter((note) => note !== '');
+  const before = [survey, heightUnitSentence(summary), notRankedSentence(summary), unreadSentence(summary)].filter((note) => note !== '');
   const notes = [
     ...before,
     `“Sure” is a chance of at least ${formatShare(SURE)} that the building truly belongs to the list; “wrong” is a place that better knowledge would give to another building.`,
