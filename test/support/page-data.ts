@@ -260,11 +260,12 @@ export function pageData({
     lat: place('lat'),
     heritage: text('heritage'),
     first_row: rows.map((row) => row['first_row'] as number),
-    found: {
-      [rows.find((row) => row['height_m_origin'] === 'given')!['id'] as string]: {
-        height_m: 'street visit of 2026-05-03',
-      },
-    },
+    found: Object.fromEntries(
+      rows
+        .filter((row) => row['height_m_origin'] === 'given')
+        .slice(0, 1)
+        .map((row) => [row['id'] as string, { height_m: 'street visit of 2026-05-03' }]),
+    ),
     results: Object.fromEntries(RESULT_COLUMNS.map(({ name }) => [name, results.map((row) => row[name] ?? null)])),
   };
   return {

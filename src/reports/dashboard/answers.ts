@@ -115,7 +115,7 @@ export function notRankedSentence({ not_ranked }: PageData['summary']): string {
 export function unreadSentence({ findings }: Pick<PageData['summary'], 'findings'>): string {
   const counts = new Map<string, number>();
   for (const { column, count } of findings) if (column !== undefined) counts.set(column, (counts.get(column) ?? 0) + count);
-  const told = [...counts].map(([column, count]) => `${findColumn(column)?.title ?? column} (${formatCount(count)})`).join(', ');
+  const told = [...counts].map(([column, count]) => `${findColumn(column)?.title ?? column} (${formatCount(count)})`).join('; ');
   return told === '' ? '' : `Cells that could not be read, by column: ${told}. What they say counts as unknown; each stands in rejects.csv.`;
 }
 

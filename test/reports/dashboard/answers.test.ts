@@ -6,7 +6,7 @@ const data = pageData({ listSize: 20 });
 
 it('names the columns whose cells were not read', () => {
   const of = (column: string) => ({ code: 'unknown-word', kind: 'rejected-cell', count: 103, column, example: '' });
-  expect(unreadSentence({ findings: [of('torsion'), of('setback')] })).toContain('Torsion (103), Setback (103)');
+  expect(unreadSentence({ findings: [of('torsion'), of('setback')] })).toContain('Torsion (103); Setback (103)');
   expect(unreadSentence({ findings: [] })).toBe('');
 });
 const edgeNote = (from: number, to: number): string | undefined =>
