@@ -9,6 +9,7 @@ import { inputChanges } from './compare-inputs.js';
 import type { FieldCount, InputChange } from './compare-inputs.js';
 import { readCompared } from './read-compared.js';
 import type { ComparedRun, ComparedSide, LeadingSide, RunOf } from './read-compared.js';
+import { studyKeyOf } from './setting-keys.js';
 
 /** A building in one of the two runs, as a list of places names it. */
 export interface OneSided {
@@ -44,7 +45,7 @@ export interface ExplainedMove {
 }
 
 export interface SettingChange {
-  /** Where it stands in the settings kept with the run. */
+  /** The study's key of it, dotted; where the study states none, that key's place. */
   readonly path: string;
   /** null where it is not there. */
   readonly before: unknown;
@@ -216,7 +217,7 @@ function explained(
 function settingChanges(a: ComparedSide, b: ComparedSide): readonly SettingChange[] {
   const of = ({ settings, entry, seed }: ComparedSide): unknown => ({ ...settings, listSize: entry.list_size, seed });
   return changesBetween(of(a), of(b)).map(({ path, from, to }) => ({
-    path: dotted(path),
+    path: dotted(studyKeyOf(path)),
     before: from ?? null,
     after: to ?? null,
   }));

@@ -83,15 +83,15 @@ const SPREAD_WORDS: Readonly<Record<keyof Spreads, string>> = {
 
 const NAMES = Object.keys(SPREADS) as (keyof Spreads)[];
 
-/** heightFormula -> height_formula */
-function keyOf(name: keyof Spreads): string {
+/** The study's key of a spread: heightFormula -> height_formula. */
+export function spreadKeyOf(name: string): string {
   return name.replace(/[A-Z]/g, (letter) => `_${letter.toLowerCase()}`);
 }
 
 export const SpreadsSchema = strict(
   Object.fromEntries(
     NAMES.map((name) => [
-      keyOf(name),
+      spreadKeyOf(name),
       name === 'editionChange_years'
         ? number({ from: 0, to: 20 })
             .default(SPREADS[name])
@@ -103,7 +103,7 @@ export const SpreadsSchema = strict(
 
 /** The register of spreads as the study states it. */
 export function spreadsOf(stated: Readonly<Record<string, number>>): Spreads {
-  return Object.fromEntries(NAMES.map((name) => [name, stated[keyOf(name)]])) as unknown as Spreads;
+  return Object.fromEntries(NAMES.map((name) => [name, stated[spreadKeyOf(name)]])) as unknown as Spreads;
 }
 
 interface Stated {

@@ -70,6 +70,7 @@ export async function withParameters(
   { leaveMissing = false }: Pick<GridReading, 'leaveMissing'> = {},
 ): Promise<LoadedStudy> {
   if (parameters.length === 0) return loaded;
+  refuseUnknownSpectra(loaded, parameters);
   let text = loaded.text;
   for (const { path, value, given = path } of parameters) text = at(given, () => setAtPath(text, path, value));
   const replace = (place: Place): Place => placeAmong(parameters, place);
@@ -86,6 +87,27 @@ export async function withParameters(
     return parameters.some((one) => concerns(one.path, key)) ? replace({ key }) : loaded.placeOf(path);
   };
   return { ...changed, study, grids, folder: loaded.folder, placeOf };
+}
+
+const OF_SPECTRUM = /^hazard\.spectra\.([^.]+)\.(.+)$/;
+
+/** A parameter of a spectrum that the study has not got is a slip of its name, unless its code is given too. */
+function refuseUnknownSpectra({ study }: LoadedStudy, parameters: readonly Parameter[]): void {
+  const known = Object.keys(study.hazard.spectra);
+  const begun = new Set(parameters.map(({ path }) => path));
+  const problems = parameters.flatMap(({ path, given = path }) => {
+    const [, name = '', rest] = OF_SPECTRUM.exec(path) ?? [];
+    if (name === '' || rest === 'code' || known.includes(name)) return [];
+    const whole = `hazard.spectra.${name}`;
+    if (begun.has(whole) || begun.has(`${whole}.code`)) return [];
+    return [
+      {
+        place: { key: given },
+        message: `the study has no spectrum ${showValue(name)}; it has ${known.join(', ')}. A new one needs its code as well: ${whole}.code=…`,
+      },
+    ];
+  });
+  if (problems.length > 0) throw UserError.of(problems);
 }
 
 function concerns(path: string, key: string): boolean {

@@ -149,7 +149,7 @@ describe('sensitivity', () => {
       JSON.parse(run('sensitivity', '--json').out) as { switches: { assumption: string }[] }
     ).switches)
       expect(out).toMatch(new RegExp(`^${assumption}  `, 'm'));
-    expect(out).toMatch(/^system-prior +none .*uniform: all alike +study +2 of 2 +1\.000$/m);
+    expect(out).toMatch(/^system-prior +none .*uniform: all alike +2 of 2 +1\.000$/m);
     expect(out).toMatch(/On the list whatever is switched|On the list, and in how many/);
     expect(out).toMatch(/^ {2}cracking: a constant/m);
     expect(existsSync(join(small.folder, 'switches.csv'))).toBe(true);

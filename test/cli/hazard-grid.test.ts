@@ -66,7 +66,7 @@ describe('a study with hazard grids, from the terminal', () => {
     expect([compared.code, compared.err]).toEqual([0, '']);
     const { settings } = JSON.parse(compared.out) as { settings: readonly { readonly path: string }[] };
     expect(settings.map(({ path: at }) => at)).toEqual(
-      expect.arrayContaining(['spectra.h475.file', 'spectra.h475.grid']),
+      expect.arrayContaining(['hazard.spectra.h475.file', 'hazard.spectra.h475.grid']),
     );
     // grids that no run reads go with the last run that did
     expect(run('runs', 'delete', '2', '--yes').code).toBe(0);

@@ -78,10 +78,10 @@ describe('compareRuns', () => {
       { study: (text) => changed(text, /(?<=design-c: .*sd1_g: )[\d.]+/, '0.50') },
       async (comparison, a, b) => {
         expectAdding(comparison);
-        expect(comparison.settings).toContainEqual({ path: 'spectra.design-c.sd1_g', before: 0.42, after: 0.5 });
+        expect(comparison.settings).toContainEqual({ path: 'hazard.spectra.design-c.sd1_g', before: 0.42, after: 0.5 });
         // the slope is read from two levels: it follows
         for (const { path } of comparison.settings)
-          expect(path).toMatch(/^(spectra\.design-c\.sd1_g|slope\.design-.)$/);
+          expect(path).toMatch(/^(hazard\.spectra\.design-c\.sd1_g|ranking\.k\.design-.)$/);
         expect(comparison.data.changed).toBe(0);
         expect(comparison.moved).toBeGreaterThan(20);
         const moved = explained(comparison).filter(({ rank, rank_before }) => rank !== rank_before);

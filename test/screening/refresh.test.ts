@@ -156,6 +156,16 @@ describe('refresh', () => {
     expect(await told('ranking.list_sise=3')).toBe(
       '--set ranking.list_sise=3: unknown key (did you mean "list_size"?)',
     );
+    expect(await told('hazard.spectra.D.sds_g=1', 'hazard.spectra.E.sd1_g=1')).toBe(
+      ['D.sds_g', 'E.sd1_g']
+        .map((key) => {
+          const name = key[0]!;
+          const known = 'design-b, design-c, design-d, rare-b, rare-c, rare-d';
+          return `--set hazard.spectra.${key}=1: the study has no spectrum "${name}"; it has ${known}. A new one needs its code as well: hazard.spectra.${name}.code=…`;
+        })
+        .join('\n'),
+    );
+    expect(await told('hazard.spectra.D.code=asce7-22-two-period', 'hazard.spectra.D.sds_g=1')).toContain('sd1_g');
     expect(await told('hazard.levels.3.title=x')).toMatch(/^--set hazard\.levels\.3\.title=x/);
     expect(await told('hazard.levels.9.title=x')).toMatch(
       /^--set hazard\.levels\.9\.title=x: hazard\.levels is a list of 2/,

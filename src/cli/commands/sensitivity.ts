@@ -75,9 +75,9 @@ function lines(found: Sensitivity, csv: string | undefined, columns: number): st
       [
         // whole: it is what --only takes
         { title: 'Assumption' },
-        { title: 'Was', shrinkTo: 5, spare: 1 },
-        { title: 'Switched to', shrinkTo: 19 },
-        { title: 'Mark' },
+        { title: 'Was', shrinkTo: 10, spare: 1 },
+        { title: 'Switched to', shrinkTo: 26 },
+        { title: 'Mark', spare: 2 },
         { title: 'Overlap', right: true },
         { title: 'Tau-b', right: true },
       ],

@@ -89,7 +89,10 @@ function softStorey(building: Building, { soft, title }: IrregularityRules): Fou
     told += 1;
     const ratio = apply(soft, { storey_stiffness_kN_per_m: list });
     if (ratio < 1)
-      return read(YES, `storey stiffness ${direction}: ${formatNumber(ratio, 3)} of the limit of ${title}`);
+      return read(
+        YES,
+        `storey stiffness ${direction}: the softest storey has ${formatNumber(ratio, 3)} of the least that ${title} lets pass (${limitWords(soft)})`,
+      );
   }
   if (told === 2) return read(NO, `storey stiffness within the limit of ${title}`);
   const first_storey_height_m = building.first_storey_height_m;
@@ -103,6 +106,11 @@ function softStorey(building: Building, { soft, title }: IrregularityRules): Fou
   if (ofFrame >= limit) return NOT_KNOWN;
   const why = `first storey ${formatNumber(first_storey_height_m, 3)} m, the others ${formatNumber(usual_storey_height_m, 3)} m: k₁/k₂ = ${formatNumber(ofFrame, 3)} of columns, ${formatNumber(ofWalls, 3)} of walls; limit ${String(limit)} (${title})`;
   return { state: YES, ofWalls: ofWalls < limit ? YES : UNKNOWN, origin: 'inferred', why };
+}
+
+function limitWords({ constants: { share_of_above, share_of_three } }: NonNullable<IrregularityRules['soft']>): string {
+  const above = `${formatShare(share_of_above)} of the storey above`;
+  return share_of_three > 0 ? `${above}, ${formatShare(share_of_three)} of the mean of the three above` : above;
 }
 
 /** Upper floors smaller than the ground floor, told from areas: found only where the difference is more than usable over built area. */
