@@ -10,7 +10,7 @@ import { knownSet, bestCampaign, withinReach } from '../engineering/priority/cam
 import type { Mixture } from '../engineering/priority/mixture.js';
 import { commonTo, rankBasis } from '../engineering/priority/rank.js';
 import type { RankBasis } from '../engineering/priority/rank.js';
-import type { Unknown } from '../engineering/priority/learnable.js';
+import type { Unknown, Unknowns } from '../engineering/priority/learnable.js';
 import type { Edge } from '../engineering/priority/survey-value.js';
 import { shareOf } from '../engineering/priority/learnable.js';
 import { KNOWN_CHANCE, edgeOf, mostWorth, worthOf } from '../engineering/priority/survey-value.js';
@@ -142,7 +142,7 @@ export async function planOn(
   const failed = await failedVisits(db, inventoryId);
   const { answered, withdrawn } = await answersSince(db, inventoryId);
   const candidates: Candidate[] = [];
-  const shares = new Map<number, ReadonlyMap<Unknown, number>>();
+  const unknownsAt = new Map<number, Unknowns>();
   for (const range of indexRanges(count, BLOCK)) {
     const wanted = chosen.filter((index) => index >= range.from && index < range.to);
     if (wanted.length === 0) continue;
@@ -153,8 +153,7 @@ export async function planOn(
       if (found === null || found.learnable.length === 0) continue;
       const unknowns = common === undefined ? found : seenFromEdge(found, common, placeOf.get(index)!);
       candidates.push({ index, worth: worthOf(unknowns, edge), failed: failed.get(index), known: answered.get(index) });
-      // of the building alone, as the list tells them
-      shares.set(index, new Map(found.learnable.map((one) => [one.unknown, shareOf(found, one)])));
+      unknownsAt.set(index, found);
     }
     report('weighing', range.to / count);
   }
@@ -168,11 +167,16 @@ export async function planOn(
   const valueOfAll = all.reduce((sum, value) => sum + value, 0);
   let wrong = expectedWrong;
   const named = await namesOf(db, inventoryId, [...new Set(planned.map(({ index }) => index))]);
+  // of the building alone, as the list tells them
+  const sharesOf = (index: number): ReadonlyMap<Unknown, number> => {
+    const found = unknownsAt.get(index)!;
+    return new Map(found.learnable.map((one) => [one.unknown, shareOf(found, one)]));
+  };
   const steps = planned.map((one, i): SurveyStep => {
     // a building wrongly in and one wrongly out are one wrong place
     wrong -= 0.5 * (one.wrongBefore - one.wrongAfter);
     const building = { ...named.get(one.index)!, rank: rankOf[one.index]! };
-    return stepOf(one, i, planned.slice(0, i), building, shares.get(one.index)!, Math.max(wrong, 0));
+    return stepOf(one, i, planned.slice(0, i), building, sharesOf(one.index), Math.max(wrong, 0));
   });
   return {
     run: runId,

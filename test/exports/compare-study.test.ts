@@ -14,7 +14,7 @@ describe('compareStudy', () => {
 
     const { comparison, page } = await compareStudy(path);
     expect([comparison.before.run, comparison.after.run]).toEqual([1, 2]);
-    expect(comparison.settings).toEqual([{ path: 'listSize', before: 20, after: 30 }]);
+    expect(comparison.settings).toEqual([{ path: 'ranking.list_size', before: 20, after: 30 }]);
     expect(comparison).toMatchObject({
       moved: 0,
       tau_b: 1,

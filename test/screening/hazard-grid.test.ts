@@ -168,7 +168,7 @@ describe('a study whose level reads a grid', () => {
         ]);
         const { settings, buildings } = await compareRuns({ db, runId: 1 }, { db, runId: 2 });
         expect(settings.map(({ path: at }) => at)).toEqual(
-          expect.arrayContaining(['spectra.h475.file', 'spectra.h475.grid']),
+          expect.arrayContaining(['hazard.spectra.h475.file', 'hazard.spectra.h475.grid']),
         );
         const moved = buildings.find(({ parts }) => parts !== null)!;
         // S_a is 1.3 times what it was

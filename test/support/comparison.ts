@@ -76,7 +76,7 @@ export function inventedComparison(count: number, listSize: number): Comparison 
   return {
     before: run(1, listSize, count),
     after: run(2, listSize, count),
-    settings: [{ path: 'spectra.design.sds_g', before: 1, after: HOSTILE_NAME }],
+    settings: [{ path: 'hazard.spectra.design.sds_g', before: 1, after: HOSTILE_NAME }],
     differs: { program: false, methods: false, study: true, inventory: true },
     list: {
       overlap: listed.filter((one) => one.listed_before).length,

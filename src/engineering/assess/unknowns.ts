@@ -48,12 +48,18 @@ export function unknownsOf(building: Building, context: AssessContext, scratch: 
   const { parts, cellOf, stateOf } = withStates(gathered(scratch.score.raw(), told), irregularity, slope_k);
   const numbered = (valueOf: (cell: Cell, state: number) => string | number): Int32Array | null => {
     const numbers = new Map<string | number, number>();
-    const values = Int32Array.from(cellOf, (cell, i) => {
-      const value = valueOf(told[cell]!, stateOf[i]!);
-      const number = numbers.get(value) ?? numbers.size;
-      numbers.set(value, number);
-      return number;
-    });
+    // the parts of a cell are many: each of its two states is asked once
+    const asked = new Int32Array(2 * told.length).fill(-1);
+    const values = new Int32Array(cellOf.length);
+    for (let i = 0; i < cellOf.length; i += 1) {
+      const at = 2 * cellOf[i]! + stateOf[i]!;
+      if (asked[at]! < 0) {
+        const value = valueOf(told[cellOf[i]!]!, stateOf[i]!);
+        asked[at] = numbers.get(value) ?? numbers.size;
+        numbers.set(value, asked[at]);
+      }
+      values[i] = asked[at]!;
+    }
     return numbers.size > 1 ? values : null;
   };
   const learnable: Learnable[] = [];
@@ -168,23 +174,24 @@ function withStates(
 ): Parted & { readonly stateOf: Int32Array } {
   if (statesRest.length === 0) return { parts, cellOf, stateOf: new Int32Array(cellOf.length) };
   const n = cellOf.length;
-  const stateOf = Int32Array.from({ length: 2 * n }, (_, at) => (at < n ? 0 : 1));
   const variance = slope_k * slope_k * varianceRest;
-  const twice = (valueOf: (i: number, state: (typeof statesRest)[number]) => number): Float64Array =>
-    Float64Array.from(stateOf, (state, at) => valueOf(at - state * n, statesRest[state]!));
-  return {
-    parts: {
-      weight: twice((i, { chance }) => parts.weight[i]! * chance),
+  const twice = { weight: new Float64Array(2 * n), mean: new Float64Array(2 * n), sd: new Float64Array(2 * n) };
+  const label = new Uint8Array(2 * n);
+  const cells = new Int32Array(2 * n);
+  const stateOf = new Int32Array(2 * n).fill(1, n);
+  label.set(parts.label);
+  label.set(parts.label, n);
+  cells.set(cellOf);
+  cells.set(cellOf, n);
+  for (const [state, { chance, ln: lnState }] of statesRest.entries())
+    for (let i = 0; i < n; i += 1) {
+      const at = state * n + i;
+      twice.weight[at] = parts.weight[i]! * chance;
       // a capacity times a factor divides S by its k-th power
-      mean: twice((i, state) => parts.mean[i]! - slope_k * state.ln),
-      sd: twice((i) => Math.sqrt(Math.max(parts.sd[i]! * parts.sd[i]! - variance, 0))),
-      label: Uint8Array.from(stateOf, (state, at) => parts.label[at - state * n]!),
-      from: 0,
-      to: 2 * n,
-    },
-    cellOf: Int32Array.from(stateOf, (state, at) => cellOf[at - state * n]!),
-    stateOf,
-  };
+      twice.mean[at] = parts.mean[i]! - slope_k * lnState;
+      twice.sd[at] = Math.sqrt(Math.max(parts.sd[i]! * parts.sd[i]! - variance, 0));
+    }
+  return { parts: { ...twice, label, from: 0, to: 2 * n }, cellOf: cells, stateOf };
 }
 
 /**

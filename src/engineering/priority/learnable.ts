@@ -32,10 +32,17 @@ export interface Learnt {
   readonly variance: Float64Array;
 }
 
-/** What learning `set` tells of `n` parts; set s holds unknown i where bit i of s is 1. */
-export function learnt(n: number, learnable: readonly Learnable[], set: number): Learnt {
-  const of = new Int32Array(n);
-  const variance = new Float64Array(n);
+/** Room for what is learnt of at least as many parts; what stood in it is lost. */
+export type LearntRoom = Pick<Learnt, 'of' | 'variance'>;
+
+export function learntRoom(n: number): LearntRoom {
+  return { of: new Int32Array(n), variance: new Float64Array(n) };
+}
+
+/** What learning `set` tells of `n` parts; set s holds unknown i where bit i of s is 1. The arrays are those of `room`. */
+export function learnt(n: number, learnable: readonly Learnable[], set: number, room = learntRoom(n)): Learnt {
+  const of = room.of.fill(0, 0, n);
+  const variance = room.variance.fill(0, 0, n);
   let classes = 1;
   const isLearnt = (bit: number): boolean => ((set >> bit) & 1) === 1;
   learnable.forEach(({ values, tau, beside }, bit) => {

@@ -11,7 +11,7 @@
 import { exp, ln } from '../numeric/elementary.js';
 import { LEARNT_NODES } from '../numeric/nodes.js';
 import { normalCdf, tabledCdf } from '../numeric/normal.js';
-import { learnt } from './learnable.js';
+import { learnt, learntRoom } from './learnable.js';
 import type { Learnt, Unknown, Unknowns } from './learnable.js';
 import { mixtureCdf } from './mixture.js';
 import type { Mixture } from './mixture.js';
@@ -97,6 +97,10 @@ export function mostWorth({ weight, mean, sd, from, to }: Mixture, { cut, unit }
   return Math.max(Math.min(enters, leaves), 0);
 }
 
+// A set takes microseconds, and a plan weighs a million of them: arrays of their own would cost as much again.
+let room = learntRoom(256);
+let sums = new Float64Array(3 * 256);
+
 /** The worth of every set of what may be learnt of a building. */
 export function worthOf({ parts, learnable }: Unknowns, { threshold, cut, chance, unit }: Edge): Worth {
   const n = parts.to - parts.from;
@@ -108,11 +112,13 @@ export function worthOf({ parts, learnable }: Unknowns, { threshold, cut, chance
   const worths = worthsOf(parts, weights, learnt(n, learnable, sets - 1), unit);
   const m = worths.reduce((sum, value) => sum + value, 0);
   const value = new Float64Array(sets);
+  if (room.of.length < n) room = learntRoom(2 * n);
   for (let set = 1; set < sets; set += 1) {
-    const { classes, of, variance } = learnt(n, learnable, set);
-    const weight = new Float64Array(classes);
-    const worth = new Float64Array(classes);
-    const spread = new Float64Array(classes);
+    const { classes, of, variance } = learnt(n, learnable, set, room);
+    if (sums.length < 3 * classes) sums = new Float64Array(6 * classes);
+    const weight = sums.subarray(0, classes).fill(0);
+    const worth = sums.subarray(classes, 2 * classes).fill(0);
+    const spread = sums.subarray(2 * classes, 3 * classes).fill(0);
     for (let i = 0; i < n; i += 1) {
       weight[of[i]!]! += weights[i]!;
       worth[of[i]!]! += worths[i]!;
