@@ -89,19 +89,10 @@ export function capacityAtHeight(
   trace?: Trace,
 ): CapacityAtHeight {
   const { builtTo } = which;
-  if (drawingsLevel !== null)
-    return capacityOfCase(building, which, direction, height_m, drawingsLevel, context, trace);
   const of = (one: Case, step?: Trace): CapacityAtHeight =>
-    atLeastUndesigned(
-      capacityOfCase(building, one, direction, height_m, null, context, step),
-      building,
-      one,
-      direction,
-      context,
-      step,
-    );
+    workedCase(building, one, direction, height_m, drawingsLevel, context, step);
   if (builtTo === null) return of(which, trace);
-  const governs = governingCase(building, which, direction, height_m, context);
+  const governs = governingCase(building, which, direction, height_m, context, drawingsLevel);
   if (trace === undefined) return of(governs);
   const isLess = governs !== which;
   const names = {
@@ -111,8 +102,11 @@ export function capacityAtHeight(
   trace.choice({
     question: 'Construction or retrofit',
     taken: isLess ? names.own : names.retrofit,
-    because: 'the larger strength × ductility: a retrofit takes nothing away [judgement]',
-    others: [{ what: isLess ? names.retrofit : names.own, why: 'asked for less' }],
+    because:
+      drawingsLevel === null
+        ? 'the larger strength × ductility: a retrofit takes nothing away [judgement]'
+        : "the larger ductility beside the drawings' coefficient: a retrofit takes nothing away [judgement]",
+    others: [{ what: isLess ? names.retrofit : names.own, why: drawingsLevel === null ? 'asked for less' : 'less' }],
   });
   return of(governs, trace);
 }
@@ -124,6 +118,7 @@ export function governingCase(
   direction: DirectionName,
   height_m: number,
   context: AssessContext,
+  drawingsLevel: number | null = null,
 ): Case {
   const { builtTo } = which;
   if (builtTo === null) return which;
@@ -136,17 +131,22 @@ export function governingCase(
     retrofit_level: 1,
     builtTo: null,
   };
-  const worth = (one: Case): number =>
-    elastic(
-      atLeastUndesigned(
-        capacityOfCase(building, one, direction, height_m, null, context),
-        building,
-        one,
-        direction,
-        context,
-      ),
-    );
+  const worth = (one: Case): number => elastic(workedCase(building, one, direction, height_m, drawingsLevel, context));
   return worth(which) < worth(before) ? before : which;
+}
+
+/** Of one case by itself: what the drawings state stands as it is, and what a code asked is worth no less than no design. */
+function workedCase(
+  building: Building,
+  which: Case,
+  direction: DirectionName,
+  height_m: number,
+  drawingsLevel: number | null,
+  context: AssessContext,
+  trace?: Trace,
+): CapacityAtHeight {
+  const found = capacityOfCase(building, which, direction, height_m, drawingsLevel, context, trace);
+  return drawingsLevel === null ? atLeastUndesigned(found, building, which, direction, context, trace) : found;
 }
 
 /** What tells two capacities of one system apart, whatever its period. */
@@ -232,7 +232,8 @@ function capacityOfCase(
     {
       design_base_shear_coefficient: design.coefficient,
       level_factor: design.levelFactor,
-      retrofit_level: which.retrofit_level,
+      // the share that a retrofit reached is of its year's code, not of what the drawings state
+      retrofit_level: drawingsLevel === null ? which.retrofit_level : 1,
       wind_coefficient: windOf(building),
     },
     trace,
@@ -273,7 +274,11 @@ function capacityOfCase(
 }
 
 /** Detailing class of a case: a retrofit makes no building one of the special systems. */
-function detailingOfCase(system: System, { edition, strengthened }: Case, history: CodeHistorySettings): Detailing {
+export function detailingOfCase(
+  system: System,
+  { edition, strengthened }: Case,
+  history: CodeHistorySettings,
+): Detailing {
   const detailing = detailingOf(system, edition, history);
   return strengthened && detailing === 'special' ? 'after' : detailing;
 }

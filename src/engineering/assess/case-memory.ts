@@ -38,7 +38,7 @@ export interface Case {
   readonly retrofit_level: number;
   /** The era is that of a seismic retrofit. */
   readonly strengthened: boolean;
-  /** Of what was strengthened, where its year is known: the likeliest edition it was built to. */
+  /** Of what was strengthened: the edition it was built to. */
   readonly builtTo: { readonly edition: EditionId | null; readonly year: number } | null;
   readonly chance: number;
   readonly design: PerDirection<Design>;

@@ -65,8 +65,8 @@ function listCases(building: Building, context: AssessContext): Cases | string {
       : context.assumed.retrofitLevel
     : 1;
   const known = building.system;
-  /** Chance by system, then by edition. */
-  const found = new Map<System, Map<EditionId | null, number>>();
+  /** By system, then by edition, of a strengthened building with what it was built to. */
+  const found = new Map<System, Map<string | null, Share>>();
   const priors = new Set<string>();
   // A building with neither a year nor neighbours that have one: every era of the place alike [judgement].
   const spread = years.length > 0 ? years : [NaN];
@@ -88,20 +88,27 @@ function listCases(building: Building, context: AssessContext): Cases | string {
         systems = group.chances;
       }
       const share = weights[at]! / (strengthened ? systemYears.length : 1);
+      const before = strengthened ? builtEditions(systemYear, context) : NOT_STRENGTHENED;
       for (const { system, chance } of systems) {
-        const byEdition = entryOf(found, system, newMap<EditionId | null, number>);
+        const byEdition = entryOf(found, system, newMap<string | null, Share>);
         for (const { era, chance: eraChance } of eraList)
-          byEdition.set(era.edition, (byEdition.get(era.edition) ?? 0) + share * chance * eraChance);
+          for (const { builtTo, chance: builtChance } of before) {
+            const { edition } = era;
+            const key = builtTo === null ? edition : `${edition ?? ''}|${builtTo.edition ?? ''}`;
+            const more = share * chance * eraChance * builtChance;
+            const old = byEdition.get(key);
+            if (old === undefined) byEdition.set(key, { edition, builtTo, chance: more });
+            else old.chance += more;
+          }
       }
     }
   }
   const design = (system: System, edition: EditionId | null): Design =>
     designOf(system, edition, level, strengthened, context);
-  const builtTo = strengthened ? editionOfYears(built, context) : null;
   const list: Case[] = [];
   for (const [system, byEdition] of found) {
     const system_transverse = building.system_transverse ?? system;
-    for (const [edition, chance] of byEdition) {
+    for (const { edition, builtTo, chance } of byEdition.values()) {
       const longitudinal = design(system, edition);
       list.push({
         system,
@@ -129,17 +136,28 @@ function listCases(building: Building, context: AssessContext): Cases | string {
   };
 }
 
-function keyOf({ system, edition }: Case): string {
-  return `${system}|${edition ?? ''}`;
+/** A case in the making. */
+interface Share {
+  readonly edition: EditionId | null;
+  readonly builtTo: Case['builtTo'];
+  chance: number;
 }
 
-/** The likeliest edition of a year that is known; null where it is not. */
-function editionOfYears(years: readonly number[], context: AssessContext): Case['builtTo'] {
-  if (years.length !== 1) return null;
-  const [first, ...others] = erasOf(years[0]!, context);
-  if (first === undefined) return null;
-  const { edition } = others.reduce((best, one) => (one.chance > best.chance ? one : best), first).era;
-  return { edition, year: edition === null ? 0 : editionOf(edition, context.settings.codeHistory!).year };
+function keyOf({ system, edition, builtTo }: Case): string {
+  return `${system}|${edition ?? ''}${builtTo === null ? '' : `|${builtTo.edition ?? ''}`}`;
+}
+
+const NOT_STRENGTHENED = [{ builtTo: null, chance: 1 }] as const;
+
+/** What a strengthened building was built to, by the year of its construction (NaN: not known). */
+function builtEditions(
+  year: number,
+  context: AssessContext,
+): readonly { readonly builtTo: Case['builtTo']; readonly chance: number }[] {
+  return erasOf(year, context).map(({ era: { edition }, chance }) => ({
+    builtTo: { edition, year: edition === null ? 0 : editionOf(edition, context.settings.codeHistory!).year },
+    chance,
+  }));
 }
 
 const UNDESIGNED: EraChances = [{ era: { edition: null, from: -Infinity, to: Infinity }, chance: 1 }];

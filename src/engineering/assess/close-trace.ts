@@ -139,7 +139,8 @@ function caseWords(
   { cases, choice, slope_k, context }: Closing,
 ): string {
   const systems = `${which.system}${which.system_transverse === which.system ? '' : ` / ${which.system_transverse}`}`;
-  const name = `${systems}, ${which.edition ?? 'no seismic design'}${level}`;
+  const built = which.builtTo === null ? '' : `, built to ${which.builtTo.edition ?? 'no seismic design'}`;
+  const name = `${systems}, ${which.edition ?? 'no seismic design'}${built}${level}`;
   const share = `chance ${formatShare(chance)}`;
   const worked = leadingCase(building, { ...cases, list: [which] }, choice, slope_k, context);
   if (typeof worked === 'string') return `${name}: ${share}`;

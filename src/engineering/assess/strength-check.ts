@@ -20,9 +20,9 @@ import { ln } from '../numeric/elementary.js';
 import { massOf, storeyHeights, storeysOf } from '../stiffness/route-mass.js';
 import type { RouteContext } from '../stiffness/route-mass.js';
 import type { Trace } from '../trace.js';
-import { massShare } from './capacity.js';
+import { detailingOfCase, governingCase, massShare } from './capacity.js';
 import type { CapacityAtHeight, Case } from './case-memory.js';
-import { detailingOf, ductilityOf } from './code-history.js';
+import { ductilityOf } from './code-history.js';
 import type { AssessContext } from './context.js';
 
 /** A strength check worked out; a text says why there is none; null where the row knows no structure, or the study wants none. */
@@ -48,8 +48,16 @@ export function strengthCheck(
   const work = { route, areas, weight_kN: mass.weight_kN, storeys: storeysOf(building) };
   if (wanted.method === 'japan-first-level') {
     const { codeHistory } = context.settings;
-    const detailing = codeHistory === null ? 'none' : detailingOf(system, which.edition, codeHistory);
-    return firstLevel(work, wanted.timeIndex, ductilityOf(system, detailing));
+    const governs = governingCase(building, which, direction, height_m, context);
+    const detailing = codeHistory === null ? 'none' : detailingOfCase(system, governs, codeHistory);
+    const ductility = ductilityOf(system, detailing, context.assumed.ductility);
+    trace?.choice({
+      question: 'Detailing and ductility',
+      taken: `μ = ${String(ductility)}`,
+      because: `${system}, ${governs.edition === null ? 'no seismic design' : `designed to ${governs.edition}`}: detailing class "${detailing}" [judgement]`,
+      others: [],
+    });
+    return firstLevel(work, wanted.timeIndex, ductility);
   }
   return averageStress(work, CHECK_EDITIONS[wanted.method]);
 }

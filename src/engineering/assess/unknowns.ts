@@ -67,7 +67,8 @@ export function unknownsOf(building: Building, context: AssessContext, scratch: 
     const takes = typeof tau === 'number' ? tau > 0 : tau.some((one) => one > 0);
     if (values !== null || takes) learnable.push({ unknown, values, tau });
   };
-  const edition = ({ which }: Cell): string => which.edition ?? '';
+  // the year of construction tells of a strengthened building what it was before
+  const edition = ({ which: { edition: now, builtTo } }: Cell): string => `${now ?? ''}|${builtTo?.edition ?? ''}`;
   if (building.system === null)
     add(
       'system',
