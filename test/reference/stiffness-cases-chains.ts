@@ -161,6 +161,23 @@ const SHAPES: readonly ReferenceCase[] = UNIFORM.flatMap(({ storeys, gamma, firs
   ];
 });
 
+/** φ₁ of two equal masses on two equal springs is (√5 - 1)/2 (golden ratio; any textbook). */
+const OF_HEIGHTS: readonly ReferenceCase[] = (
+  [
+    ['alike', [3, 3], 2 * 0.6180339887],
+    ['tall-first', [4.5, 3], Math.max(0.6180339887 / 4.5, 0.3819660113 / 3) * 7.5],
+    ['tall-top', [2.5, 10], (0.6180339887 / 2.5) * 12.5],
+  ] as const
+).map(([which, storey_heights_m, expected]) => ({
+  id: `two-storeys-drift-${which}`,
+  method: 'mechanics/drift/largest-over-mean-of-heights',
+  inputs: { masses_t: ones(2), storey_stiffness_kN_per_m: ones(2), storey_heights_m },
+  expected,
+  tolerance: 1e-8,
+  mark: 'own arithmetic',
+  source: 'φ₁ = 0.6180 of two equal masses on equal springs (textbook), each drift over its own height',
+}));
+
 const MODAL: readonly ReferenceCase[] = [
   ...[0.8795, 0.0872, 0.0242, 0.0075, 0.0016].map((expected, i): ReferenceCase => ({
     id: `SD-13-mass-${String(i + 1)}`,
@@ -348,4 +365,11 @@ const ENERGY: readonly ReferenceCase[] = [
   },
 ];
 
-export const CHAIN_CASES: readonly ReferenceCase[] = [...HALF_ROOF, ...MODES, ...SHAPES, ...MODAL, ...ENERGY];
+export const CHAIN_CASES: readonly ReferenceCase[] = [
+  ...HALF_ROOF,
+  ...MODES,
+  ...SHAPES,
+  ...OF_HEIGHTS,
+  ...MODAL,
+  ...ENERGY,
+];

@@ -11,7 +11,9 @@ import { DIRECTIONS } from '../direction.js';
 import { formatShare } from '../format.js';
 import { apply, applyAny } from '../formula.js';
 import type { AnyRecord } from '../formula.js';
-import { DRIFT_FACTOR, FIRST_STOREY_SHARE, PARTICIPATION } from '../stiffness/chain-shape.js';
+import { chainMode } from '../numeric/chain.js';
+import type { ChainInput } from '../stiffness/chain.js';
+import { DRIFT_FACTOR, DRIFT_FACTOR_OF_HEIGHTS, FIRST_STOREY_SHARE, PARTICIPATION } from '../stiffness/chain-shape.js';
 import { WALL_FRAME_RECORDS } from '../stiffness/wall-frame.js';
 import type { Trace } from '../trace.js';
 import type { Case, Cases } from './case-memory.js';
@@ -29,6 +31,14 @@ export interface DirectionDemand {
   readonly drift_ratio: number;
   /** The last published mark the drift passes; null: none. */
   readonly passed: string | null;
+  /** How the sway grows with the height; null: evenly [judgement]. */
+  readonly profile: SwayProfile | null;
+}
+
+/** Floors, bottom to top: their heights and their shares of the roof's displacement. */
+export interface SwayProfile {
+  readonly floors_m: readonly number[];
+  readonly shares: readonly number[];
 }
 
 const findShape = (id: string): AnyRecord => {
@@ -111,7 +121,7 @@ function demandOf(
     c1 = apply(C1, { strength_ratio, site_factor_a: siteFactor(building, trace), period_s }, trace);
     c2 = apply(C2, { strength_ratio, period_s }, trace);
   }
-  const { participation, drift_factor } = shapeOf(building, system, direction, storeys, context, trace);
+  const { participation, drift_factor, profile } = shapeOf(building, system, direction, storeys, context, trace);
   const roof_displacement_m = apply(ROOF_DISPLACEMENT, { sd_m, participation, c1, c2 }, trace);
   const drift_ratio = apply(STOREY_DRIFT, { roof_displacement_m, height_m, drift_factor }, trace);
   const { passed, marks } = driftMark(system, drift_ratio);
@@ -121,7 +131,7 @@ function demandOf(
     'computed',
     `published marks ${marks.map((mark) => formatDrift(mark)).join(', ')} for immediate occupancy, life safety, collapse prevention (FEMA 356 Table C1-3, from memory); a screening value, not a finding`,
   );
-  return { period_s, roof_displacement_m, drift_ratio, passed };
+  return { period_s, roof_displacement_m, drift_ratio, passed, profile };
 }
 
 /** c_y of the capacity that ranks, by whichever way that was come by. */
@@ -169,7 +179,7 @@ function shapeOf(
   storeys: number,
   context: AssessContext,
   trace?: Trace,
-): { readonly participation: number; readonly drift_factor: number } {
+): { readonly participation: number; readonly drift_factor: number; readonly profile: SwayProfile | null } {
   const given = building.storey_stiffness_kN_per_m[direction];
   const soft = softFirstStorey(building, system, context);
   const alpha = ALPHA[system];
@@ -185,6 +195,7 @@ function shapeOf(
     return {
       participation: applyAny(WALL_PARTICIPATION, ratio, trace),
       drift_factor: applyAny(WALL_DRIFT, ratio, trace),
+      profile: null,
     };
   }
   const stiffness = byList
@@ -205,12 +216,45 @@ function shapeOf(
         : soft.why,
     others: [],
   });
-  if (storeys > 1) {
-    const share = apply(FIRST_STOREY_SHARE, chain, trace);
-    trace?.value('first_storey_share', share, 'computed', 'of the roof displacement; storeys alike in height');
-  }
+  const heights_m = storeyHeightsOf(building, storeys);
+  const alike = heights_m.every((height) => height === heights_m[0]);
+  if (storeys > 1) apply(FIRST_STOREY_SHARE, chain, trace);
   return {
     participation: apply(PARTICIPATION, { ...chain, mode: 1 }, trace),
-    drift_factor: apply(DRIFT_FACTOR, chain, trace),
+    drift_factor: alike
+      ? apply(DRIFT_FACTOR, chain, trace)
+      : apply(DRIFT_FACTOR_OF_HEIGHTS, { ...chain, storey_heights_m: heights_m }, trace),
+    profile: profileOf(heights_m, chain),
   };
+}
+
+/** Storey heights, bottom to top: alike but for the first where the row has it. */
+function storeyHeightsOf(
+  { height_m: { value: height_m }, first_storey_height_m: first_m }: Building,
+  storeys: number,
+): number[] {
+  const known = storeys > 1 && first_m > 0 && first_m < height_m;
+  const upper_m = known ? (height_m - first_m) / (storeys - 1) : height_m / storeys;
+  return Array.from({ length: storeys }, (_, i) => (known && i === 0 ? first_m : upper_m));
+}
+
+function profileOf(
+  heights_m: readonly number[],
+  { masses_t, storey_stiffness_kN_per_m }: ChainInput,
+): SwayProfile | null {
+  if (heights_m.length < 2) return null;
+  let floor_m = 0;
+  const floors_m = heights_m.map((height) => (floor_m += height));
+  return { floors_m, shares: [...chainMode(masses_t, storey_stiffness_kN_per_m).shape] };
+}
+
+/** Share of the roof's displacement at a height, straight from floor to floor. */
+export function swayShareAt(profile: SwayProfile | null, roof_m: number, height_m: number): number {
+  if (height_m >= roof_m) return 1;
+  if (profile === null) return height_m / roof_m;
+  const { floors_m, shares } = profile;
+  const above = floors_m.findIndex((floor) => floor >= height_m);
+  if (above < 0) return 1;
+  const [low_m, low] = above === 0 ? [0, 0] : [floors_m[above - 1]!, shares[above - 1]!];
+  return low + ((height_m - low_m) / (floors_m[above]! - low_m)) * (shares[above]! - low);
 }

@@ -1,14 +1,15 @@
 /** Whether two buildings may strike each other: the gap between them against what both need. Flags for a reader, no part of the priority. */
 import type { Building } from '../building.js';
 import { GAP_ALIGNED, GAP_BY_HEIGHT, GAP_CORRELATION, GAP_DOUBLE_DIFFERENCE, GAP_SRSS } from '../demand/separation.js';
-import { formatNumber } from '../format.js';
+import { formatNumber, formatShare } from '../format.js';
 import { apply } from '../formula.js';
 import type { Trace } from '../trace.js';
 import { casesOf } from './cases.js';
 import { chooseSpectrum } from './choose-spectrum.js';
 import { readAt, slopeFor } from './context.js';
 import type { AssessContext } from './context.js';
-import { demandsOf } from './demands.js';
+import { demandsOf, swayShareAt } from './demands.js';
+import type { SwayProfile } from './demands.js';
 import { leadingCase } from './leading.js';
 
 /** How far a building sways: of its two directions the larger, as the row does not say which faces the neighbour. */
@@ -17,6 +18,8 @@ export interface Sway {
   readonly height_m: number;
   readonly period_s: number;
   readonly roof_displacement_m: number;
+  /** How it grows with the height; null: evenly [judgement]. */
+  readonly profile: SwayProfile | null;
   /** S_a on the plateau of its spectrum. */
   readonly plateau_g: number;
 }
@@ -30,9 +33,9 @@ export function swayOf(building: Building, context: AssessContext): Sway | null 
   const leading = leadingCase(building, cases, choice, slopeFor(context, choice.spectrum.name), context);
   if (typeof leading === 'string') return null;
   const { longitudinal: a, transverse: b } = demandsOf(building, cases, choice, leading, context);
-  const { period_s, roof_displacement_m } = a.roof_displacement_m >= b.roof_displacement_m ? a : b;
+  const { period_s, roof_displacement_m, profile } = a.roof_displacement_m >= b.roof_displacement_m ? a : b;
   const plateau_g = readAt(choice.spectrum, choice.spectrum.compiled.plateau_from_s);
-  return { id: building.id, height_m: building.height_m.value, period_s, roof_displacement_m, plateau_g };
+  return { id: building.id, height_m: building.height_m.value, period_s, roof_displacement_m, profile, plateau_g };
 }
 
 export interface Neighbour {
@@ -87,8 +90,13 @@ export function closenessOf(
   trace?: Trace,
 ): Closeness {
   const shorter_height_m = Math.min(one.height_m, other.height_m);
-  // sway taken to grow evenly with the height [judgement]
-  const at = ({ roof_displacement_m, height_m }: Sway): number => (roof_displacement_m * shorter_height_m) / height_m;
+  const shareOf = ({ profile, height_m }: Sway): number => swayShareAt(profile, height_m, shorter_height_m);
+  const at = (sway: Sway): number => sway.roof_displacement_m * shareOf(sway);
+  const words = (sway: Sway): string => {
+    if (sway.height_m <= shorter_height_m) return '';
+    const how = sway.profile === null ? 'taken to grow evenly with the height [judgement]' : 'by the shape of its sway';
+    return `: ${formatShare(shareOf(sway))} of that of its roof, ${how}`;
+  };
   const both = { displacement_1_m: at(one), displacement_2_m: at(other) };
   trace?.heading(`Gap to ${other.id} (no part of the priority)`);
   trace?.value('gap_m', gap_m, how.startsWith('given') ? 'given' : 'computed', how);
@@ -96,9 +104,9 @@ export function closenessOf(
     'displacement_1_m',
     both.displacement_1_m,
     'computed',
-    `of ${one.id} at ${formatNumber(shorter_height_m, 3)} m, the height of the shorter`,
+    `of ${one.id} at ${formatNumber(shorter_height_m, 3)} m, the height of the shorter${words(one)}`,
   );
-  trace?.value('displacement_2_m', both.displacement_2_m, 'computed', `of ${other.id} there`);
+  trace?.value('displacement_2_m', both.displacement_2_m, 'computed', `of ${other.id} there${words(other)}`);
   const aligned = floors_aligned === 'yes';
   const needed_m = apply(aligned ? GAP_ALIGNED : GAP_SRSS, both, trace);
   const periods = { damping_1: DAMPING, damping_2: DAMPING, period_1_s: one.period_s, period_2_s: other.period_s };

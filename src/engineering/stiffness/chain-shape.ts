@@ -5,7 +5,7 @@ import { chainMode, chainProperties } from '../numeric/chain.js';
 import { chainModeOf, driftFactor } from '../numeric/chain-modes.js';
 import { MODE } from './chain.js';
 import type { ChainInput, ModeInput } from './chain.js';
-import { MASSES, STIFFNESSES, mechanics } from './specs.js';
+import { HEIGHTS, MASSES, STIFFNESSES, mechanics } from './specs.js';
 import type { None } from './specs.js';
 
 const firstStoreyShare: Family<ChainInput, None> = {
@@ -29,6 +29,31 @@ const largestDrift: Family<ChainInput, None> = {
   expression: null,
   procedure: 'β₂ = largest storey drift of the first mode over the mean one, storeys of equal height',
   evaluate: ({ masses_t, storey_stiffness_kN_per_m }) => driftFactor(chainMode(masses_t, storey_stiffness_kN_per_m)),
+};
+
+interface HeightsInput extends ChainInput {
+  readonly storey_heights_m: readonly number[];
+}
+
+const largestDriftOfHeights: Family<HeightsInput, None> = {
+  ...largestDrift,
+  id: 'stiffness/drift-factor-of-heights',
+  inputs: [MASSES, STIFFNESSES, HEIGHTS],
+  procedure: 'β₂ = largest (φᵢ - φᵢ₋₁)/hᵢ × Σh, φ the shape of the first mode, 1 at the roof',
+  evaluate: ({ masses_t, storey_stiffness_kN_per_m, storey_heights_m: heights }) => {
+    const { shape } = chainMode(masses_t, storey_stiffness_kN_per_m);
+    if (heights.length !== shape.length)
+      throw new RangeError(
+        `as many storey heights as masses are needed, got ${String(heights.length)} and ${String(shape.length)}`,
+      );
+    let total = 0;
+    let largest = 0;
+    heights.forEach((height_m, i) => {
+      total += height_m;
+      largest = Math.max(largest, (shape[i]! - (i === 0 ? 0 : shape[i - 1]!)) / height_m);
+    });
+    return largest * total;
+  },
 };
 
 const participation: Family<ModeInput, None> = {
@@ -71,6 +96,15 @@ export const DRIFT_FACTOR = record({
   verified: 'mechanics',
   limits: [],
 });
+export const DRIFT_FACTOR_OF_HEIGHTS = record({
+  id: 'mechanics/drift/largest-over-mean-of-heights',
+  title: 'Largest storey drift over the mean one, storeys of their own heights',
+  family: largestDriftOfHeights,
+  constants: {},
+  source: mechanics('first mode of the shear building'),
+  verified: 'mechanics',
+  limits: [],
+});
 export const PARTICIPATION = record({
   id: 'mechanics/participation/roof',
   title: 'Roof participation of a mode',
@@ -93,6 +127,7 @@ const EFFECTIVE_SHARE = record({
 export const CHAIN_SHAPE_RECORDS: readonly AnyRecord[] = [
   FIRST_STOREY_SHARE,
   DRIFT_FACTOR,
+  DRIFT_FACTOR_OF_HEIGHTS,
   PARTICIPATION,
   EFFECTIVE_SHARE,
 ];

@@ -19,6 +19,7 @@ export const MASS = quantity('mass', 't', 'mass of a floor');
 export const STIFFNESS = quantity('stiffness', 'kN_per_m', 'lateral stiffness of a storey');
 export const MASSES = list('masses', 't', 'floor masses, bottom to top');
 export const STIFFNESSES = list('storey_stiffness', 'kN_per_m', 'storey stiffness, bottom to top');
+export const HEIGHTS = list('storey_heights', 'm', 'storey heights, bottom to top');
 export const STOREYS = plain('storeys', 'number of equal storeys');
 export const MODULUS = quantity('modulus', 'MPa', 'modulus of elasticity');
 export const STOREY_HEIGHT = quantity('storey_height', 'm', 'storey height');

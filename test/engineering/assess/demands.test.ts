@@ -4,7 +4,7 @@ import { assess, isRanked } from '../../../src/engineering/assess/assess.js';
 import { casesOf } from '../../../src/engineering/assess/cases.js';
 import { chooseSpectrum } from '../../../src/engineering/assess/choose-spectrum.js';
 import { compileContext } from '../../../src/engineering/assess/context.js';
-import { demandsOf } from '../../../src/engineering/assess/demands.js';
+import { demandsOf, swayShareAt } from '../../../src/engineering/assess/demands.js';
 import type { DirectionDemand } from '../../../src/engineering/assess/demands.js';
 import type { Building } from '../../../src/engineering/building.js';
 import { Trace } from '../../../src/engineering/trace.js';
@@ -70,6 +70,29 @@ describe('demandsOf', () => {
     const share = tall.values.get('mechanics/drift/first-storey-share')!;
     expect(share).toBeGreaterThan(0.75);
     expect(share).toBeLessThan(0.91);
+  });
+
+  it('puts the drift of a tall first storey over its own height', () => {
+    const height_m = given(13.5);
+    const { demand, values } = worked({ storeys: given(4), height_m, first_storey_height_m: 4.5, soft_storey: null });
+    // columns at (3/4.5)³ = 0.296 of those above: an eigenvalue routine gives 0.6703 of the roof's displacement
+    const share = values.get('mechanics/drift/first-storey-share')!;
+    expect(share).toBeCloseTo(0.6703, 4);
+    expect(demand.drift_ratio).toBeCloseTo((share * demand.roof_displacement_m) / 4.5, 12);
+  });
+
+  it('sways by the shape of the shear building between the floors, evenly where walls bend', () => {
+    const tall = worked({ storeys: given(4), height_m: given(13.5), first_storey_height_m: 4.5, soft_storey: null });
+    const { profile } = tall.demand;
+    expect(profile!.floors_m).toEqual([4.5, 7.5, 10.5, 13.5]);
+    const at = (height_m: number): number => swayShareAt(profile, 13.5, height_m);
+    expect([at(13.5), at(20)]).toEqual([1, 1]);
+    expect(at(4.5)).toBeCloseTo(0.6703, 4);
+    expect(at(2.25)).toBeCloseTo(0.6703 / 2, 4);
+    expect(at(6)).toBeCloseTo((at(4.5) + at(7.5)) / 2, 12);
+    const walls = worked({ system: 'concrete-shear-wall', storeys: given(8), height_m: given(27) });
+    expect(walls.demand.profile).toBeNull();
+    expect(swayShareAt(null, 27, 9)).toBeCloseTo(1 / 3, 12);
   });
 
   it('is the elastic displacement times its factors, worked by hand', () => {

@@ -13,6 +13,7 @@ const sway = (id: string, height_m: number, roof_displacement_m: number): Sway =
   height_m,
   period_s: 0.5,
   roof_displacement_m,
+  profile: null,
   plateau_g: 1,
 });
 const GAP = { gap_m: 0.12, how: 'given', floors_aligned: null } as const;
@@ -43,6 +44,16 @@ describe('closenessOf', () => {
     const found = closenessOf(sway('A', 20, 0.24), sway('B', 10, 0.09), { ...GAP, floors_aligned: 'no' });
     expect(found.needed_m).toBeCloseTo(0.15, 12);
     expect(found.worse).toHaveLength(2);
+  });
+
+  it('reads the sway of a soft first storey at the height of the shorter, and says so', () => {
+    const profile = { floors_m: [5, 20], shares: [0.7, 1] };
+    const trace = new Trace();
+    const soft = { ...sway('A', 20, 0.24), profile };
+    const found = closenessOf(soft, sway('B', 5, 0), GAP, trace);
+    expect(found.needed_m).toBeCloseTo(0.7 * 0.24, 12);
+    expect(JSON.stringify(trace.steps)).toContain('70 % of that of its roof, by the shape of its sway');
+    expect(closenessOf(sway('A', 20, 0.24), sway('B', 5, 0), GAP).needed_m).toBeCloseTo(0.06, 12);
   });
 
   it('writes its steps under a heading of its own', () => {
