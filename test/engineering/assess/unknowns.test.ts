@@ -85,6 +85,27 @@ describe('unknownsOf', () => {
     });
   });
 
+  it('keeps the law of total variance: with the system known less of the spread is left on average, by the spread of the means', () => {
+    let tried = 0;
+    for (const one of inventedPortfolio(400, random(78))) {
+      const cases = casesOf(one, context);
+      if (one.system !== null || typeof cases === 'string' || !isRanked(assess(one, context))) continue;
+      const before = assessed(one);
+      let left = 0;
+      let between = 0;
+      for (const system of new Set(cases.list.map((which) => which.system))) {
+        const chance = cases.list.reduce((sum, which) => (which.system === system ? sum + which.chance : sum), 0);
+        const known = assessed({ ...one, system });
+        left += chance * known.sd ** 2;
+        between += chance * (known.mean - before.mean) ** 2;
+      }
+      expect(left).toBeLessThanOrEqual(before.sd ** 2 * (1 + 1e-9));
+      expect(left + between).toBeCloseTo(before.sd ** 2, 7);
+      tried += 1;
+    }
+    expect(tried).toBeGreaterThan(40);
+  });
+
   it('asks nothing of a building whose facts are on record but its drawings', () => {
     const known = building({
       ...NO_IRREGULARITY,
