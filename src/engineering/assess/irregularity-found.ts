@@ -108,6 +108,11 @@ function softStorey(building: Building, { soft, title }: IrregularityRules): Fou
   return { state: YES, ofWalls: ofWalls < limit ? YES : UNKNOWN, origin: 'inferred', why };
 }
 
+/** A share to three digits: cut to whole per cent it would read like its limit. */
+function threeDigits(share: number): string {
+  return `${formatNumber(100 * share, 3)} %`;
+}
+
 function limitWords({ constants: { share_of_above, share_of_three } }: NonNullable<IrregularityRules['soft']>): string {
   const above = `${formatShare(share_of_above)} of the storey above`;
   return share_of_three > 0 ? `${above}, ${formatShare(share_of_three)} of the mean of the three above` : above;
@@ -125,7 +130,7 @@ function setback(
   return share < least
     ? read(
         YES,
-        `the floors cover ${formatShare(share)} of footprint × storeys; under ${formatShare(least)} (${title}, usable area ${String(USABLE_SHARE)} of built [judgement])`,
+        `the floors cover ${threeDigits(share)} of footprint × storeys; under ${formatShare(least)} (${title}, usable area ${String(USABLE_SHARE)} of built [judgement])`,
       )
     : NOT_KNOWN;
 }
@@ -133,11 +138,11 @@ function setback(
 function reentrant({ reentrant_projection, reentrant_area_share }: Building, rules: IrregularityRules): Found {
   const { projection, hullShare, title } = rules;
   if (projection !== null && reentrant_projection >= 0) {
-    const why = `projections beyond the corners of the footprint ${formatShare(reentrant_projection)} of the plan; limit ${formatShare(projection)} (${title})`;
+    const why = `projections beyond the corners of the footprint ${threeDigits(reentrant_projection)} of the plan; limit ${formatShare(projection)} (${title})`;
     return read(reentrant_projection > projection ? YES : NO, why);
   }
   if (hullShare !== null && reentrant_area_share >= 0) {
-    const why = `${formatShare(reentrant_area_share)} of the floor lies between footprint and hull; limit ${formatShare(hullShare)} (${title})`;
+    const why = `${threeDigits(reentrant_area_share)} of the floor lies between footprint and hull; limit ${formatShare(hullShare)} (${title})`;
     return read(reentrant_area_share > hullShare ? YES : NO, why);
   }
   return NOT_KNOWN;
@@ -156,7 +161,7 @@ function oneSided({ structure, system }: Building): Found {
     if (share > ONE_SIDED_SHARE)
       return read(
         YES,
-        `one wall ${direction} has ${formatShare(share)} of the wall area; limit ${formatShare(ONE_SIDED_SHARE)}`,
+        `one wall ${direction} has ${threeDigits(share)} of the wall area; limit ${formatShare(ONE_SIDED_SHARE)}`,
       );
   }
   return NOT_KNOWN;

@@ -137,7 +137,7 @@ describe('assess', () => {
       .join('\n');
     expect(text).toMatch(/soft storey.*not known/);
     expect(text).toMatch(/torsion.*yes/);
-    expect(text).toMatch(/projections beyond the corners of the footprint 30 % of the plan; limit 15 %/);
+    expect(text).toMatch(/projections beyond the corners of the footprint 30\.0 % of the plan; limit 15 %/);
     expect(text).toMatch(/0\.8000\^1/);
     expect(text).toMatch(/ln S higher by 0\.8917 with one; chance 23 % where a frame stands/);
   });
