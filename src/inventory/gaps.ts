@@ -1,9 +1,12 @@
 /**
  * Gaps between footprints, in metres on the ground. Neighbours are found through a grid of cells, so that the work grows with the number
  * of footprints, not with its square. Each gap is measured on a plane that touches the ground at the first of the two buildings: over
- * 200 m the scale is off by less than 200/6,371,000 × tan(latitude), 0.1 mm in a gap of a metre at 60°.
+ * 200 m the scale is off by less than 200/6,371,000 × tan(latitude), 0.1 mm in a gap of a metre at 60°. A building in the courtyard of another
+ * stands as far from it as from the courtyard's walls.
  */
-import { groundScale, readRings } from './footprint.js';
+import { groundScale } from './footprint.js';
+import { readOutlines } from './outline-text.js';
+import type { Rings } from './outline-text.js';
 import type { Point } from './plan-shape.js';
 
 export interface Gap {
@@ -50,7 +53,7 @@ export interface MeasureOptions {
 /** Work of looking a neighbour up in a cell, in walls compared. */
 const LOOK = 8;
 
-/** Every pair of footprints (WKT polygons in degrees; null: none) no further apart than `reach_m`, in order of their places. */
+/** Every pair of footprints (WKT, one polygon or several, in degrees; null: none) no further apart than `reach_m`, in order of their places. */
 export function gapsWithin(footprints: readonly (string | null)[], reach_m: number): readonly Gap[] {
   return measureGaps(footprints, reach_m).gaps;
 }
@@ -61,16 +64,13 @@ export function measureGaps(
   reach_m: number,
   { wanted = () => true, steps = Infinity }: MeasureOptions = {},
 ): Measured {
-  const rings = footprints.map((text) => (text === null ? undefined : readRings(text)?.[0]));
-  const boxes = rings.map((ring) => {
-    const box = ring === undefined ? undefined : boxOf(ring);
-    return box !== undefined && isBuilding(box) ? box : undefined;
-  });
-  const found = boxes.filter((box) => box !== undefined);
-  if (found.length < 2) return { gaps: [], complete: true, alike: 0 };
+  // Each outline of a building stands in the grid by itself: they may lie far apart.
+  const parts = footprints.map((text, of) => (text === null ? [] : partsOf(text, of)));
+  const found = parts.flat();
+  if (parts.filter((list) => list.length > 0).length < 2) return { gaps: [], complete: true, alike: 0 };
   // cells need no exact ground: one scale for all, and the reach is widened where a degree is shorter than in the middle
-  const { east_m, north_m } = groundScale(found.reduce((sum, { south }) => sum + south, 0) / found.length);
-  const cells = new Map<string, number[]>();
+  const { east_m, north_m } = groundScale(found.reduce((sum, { box }) => sum + box.south, 0) / found.length);
+  const cells = new Map<string, Part[]>();
   const cellsOf = ({ west, east, south, north }: Box, margin_m: number): readonly [number, number, number, number] => [
     Math.floor((west * east_m - margin_m) / CELL_M),
     Math.floor((east * east_m + margin_m) / CELL_M),
@@ -80,40 +80,64 @@ export function measureGaps(
   const gaps: Gap[] = [];
   let left = steps;
   let alike = 0;
-  for (let b = 0; b < boxes.length && left > 0; b += 1) {
-    const box = boxes[b];
-    if (box === undefined) continue;
-    const near = new Set<number>();
-    const stretch = MARGIN * Math.min(MOST_STRETCH, Math.max(1, east_m / groundScale(box.south).east_m));
-    const [x0, x1, y0, y1] = cellsOf(box, reach_m * stretch);
+  for (let b = 0; b < parts.length && left > 0; b += 1) {
+    const own = parts[b]!;
     const isWanted = wanted(b);
-    for (let x = x0; x <= x1; x += 1)
-      for (let y = y0; y <= y1; y += 1) {
-        const list = cells.get(`${String(x)} ${String(y)}`) ?? [];
-        left -= LOOK * (1 + list.length);
-        for (const a of list) if (isWanted || wanted(a)) near.add(a);
+    const nearest = new Map<number, number>();
+    const same = new Set<number>();
+    let broken = false;
+    for (const part of own) {
+      if (broken) break;
+      const near = new Set<Part>();
+      const stretch = MARGIN * Math.min(MOST_STRETCH, Math.max(1, east_m / groundScale(part.box.south).east_m));
+      const [x0, x1, y0, y1] = cellsOf(part.box, reach_m * stretch);
+      for (let x = x0; x <= x1; x += 1)
+        for (let y = y0; y <= y1; y += 1) {
+          const list = cells.get(`${String(x)} ${String(y)}`) ?? [];
+          left -= LOOK * (1 + list.length);
+          for (const other of list) if (isWanted || wanted(other.of)) near.add(other);
+        }
+      for (const other of near) {
+        if (footprints[other.of] === footprints[b]) {
+          same.add(other.of);
+          continue;
+        }
+        broken = left <= 0;
+        if (broken) break;
+        const { gap_m, work } = gapBetween(other.rings, part.rings, reach_m);
+        left -= work;
+        if (gap_m <= reach_m) nearest.set(other.of, Math.min(gap_m, nearest.get(other.of) ?? Infinity));
       }
-    for (const a of [...near].sort((one, other) => one - other)) {
-      if (footprints[a] === footprints[b]) {
-        alike += 1;
-        continue;
-      }
-      if (left <= 0) break;
-      const { gap_m, work } = gapBetween(rings[a]!, rings[b]!, reach_m);
-      left -= work;
-      if (gap_m <= reach_m) gaps.push({ a, b, gap_m });
     }
-    const [u0, u1, v0, v1] = cellsOf(box, 0);
-    for (let x = u0; x <= u1; x += 1)
-      for (let y = v0; y <= v1; y += 1) {
-        const key = `${String(x)} ${String(y)}`;
-        const list = cells.get(key);
-        if (list === undefined) cells.set(key, [b]);
-        else list.push(b);
-        left -= LOOK;
-      }
+    alike += same.size;
+    // Of a pair whose outlines were not all compared the nearest may be missing.
+    if (!broken) for (const [a, gap_m] of nearest) gaps.push({ a, b, gap_m });
+    for (const part of own) {
+      const [u0, u1, v0, v1] = cellsOf(part.box, 0);
+      for (let x = u0; x <= u1; x += 1)
+        for (let y = v0; y <= v1; y += 1) {
+          const key = `${String(x)} ${String(y)}`;
+          const list = cells.get(key);
+          if (list === undefined) cells.set(key, [part]);
+          else list.push(part);
+          left -= LOOK;
+        }
+    }
   }
   return { gaps: gaps.sort((one, other) => one.a - other.a || one.b - other.b), complete: left > 0, alike };
+}
+
+/** One outline of a building. */
+interface Part {
+  /** Place of the building in the list. */
+  readonly of: number;
+  readonly rings: Rings;
+  readonly box: Box;
+}
+
+function partsOf(text: string, of: number): readonly Part[] {
+  const outlines = readOutlines(text) ?? [];
+  return outlines.map((rings) => ({ of, rings, box: boxOf(rings[0]!) })).filter(({ box }) => isBuilding(box));
 }
 
 function isBuilding({ west, east, south, north }: Box): boolean {
@@ -139,29 +163,26 @@ interface Between {
   readonly work: number;
 }
 
-/** Gap between two rings in degrees; Infinity where they are further apart than `reach_m`. */
-function gapBetween(first: readonly Point[], second: readonly Point[], reach_m: number): Between {
-  const [lon, lat] = first[0]!;
+/** Gap between two outlines in degrees, courtyards open; Infinity where they are further apart than `reach_m`. */
+function gapBetween(first: Rings, second: Rings, reach_m: number): Between {
+  const [lon, lat] = first[0]![0]!;
   const { east_m, north_m } = groundScale(lat);
-  const flat = (ring: readonly Point[]): readonly Point[] =>
-    ring.map(([x, y]): Point => [(x - lon) * east_m, (y - lat) * north_m]);
+  const flat = (rings: Rings): Rings =>
+    rings.map((ring) => ring.map(([x, y]): Point => [(x - lon) * east_m, (y - lat) * north_m]));
   const a = flat(first);
   const b = flat(second);
-  const [p, q] = [boxOf(a), boxOf(b)];
-  const work = a.length + b.length;
+  const [p, q] = [boxOf(a[0]!), boxOf(b[0]!)];
+  const work = cornersOf(a) + cornersOf(b);
   if (Math.max(p.west - q.east, q.west - p.east, p.south - q.north, q.south - p.north) > reach_m)
     return { gap_m: Infinity, work };
-  if (isInside(a[0]!, b) || isInside(b[0]!, a)) return { gap_m: 0, work };
+  // Where no wall crosses another, one corner of the outer ring tells for all of them on which side of the other's walls they lie.
+  if (isBuilt(a[0]![0]!, b) || isBuilt(b[0]![0]!, a)) return { gap_m: 0, work };
   // what comes within reach lies within the other's box widened by it
   const ofA = wallsWithin(a, q, reach_m);
   const ofB = wallsWithin(b, p, reach_m);
   let least = Infinity;
-  for (const i of ofA) {
-    const a1 = a[i]!;
-    const a2 = a[(i + 1) % a.length]!;
-    for (const j of ofB) {
-      const b1 = b[j]!;
-      const b2 = b[(j + 1) % b.length]!;
+  for (const [a1, a2] of ofA)
+    for (const [b1, b2] of ofB) {
       if (isCrossing(a1, a2, b1, b2)) return { gap_m: 0, work: work + ofA.length * ofB.length };
       least = Math.min(
         least,
@@ -171,24 +192,34 @@ function gapBetween(first: readonly Point[], second: readonly Point[], reach_m: 
         toSegment(b2, a1, a2),
       );
     }
-  }
   return { gap_m: least, work: work + ofA.length * ofB.length };
 }
 
-/** Which walls of a ring, by their first corner, touch a box widened by `margin_m`. */
-function wallsWithin(ring: readonly Point[], { west, east, south, north }: Box, margin_m: number): readonly number[] {
-  const walls: number[] = [];
-  for (let i = 0; i < ring.length; i += 1) {
-    const [ax, ay] = ring[i]!;
-    const [bx, by] = ring[(i + 1) % ring.length]!;
-    if (
-      Math.max(ax, bx) >= west - margin_m &&
-      Math.min(ax, bx) <= east + margin_m &&
-      Math.max(ay, by) >= south - margin_m &&
-      Math.min(ay, by) <= north + margin_m
-    )
-      walls.push(i);
-  }
+function cornersOf(rings: Rings): number {
+  return rings.reduce((sum, ring) => sum + ring.length, 0);
+}
+
+/** The walls, those around courtyards too, that touch a box widened by `margin_m`. */
+function wallsWithin(
+  rings: Rings,
+  { west, east, south, north }: Box,
+  margin_m: number,
+): readonly (readonly [Point, Point])[] {
+  const walls: (readonly [Point, Point])[] = [];
+  for (const ring of rings)
+    for (let i = 0; i < ring.length; i += 1) {
+      const from = ring[i]!;
+      const to = ring[(i + 1) % ring.length]!;
+      const [ax, ay] = from;
+      const [bx, by] = to;
+      if (
+        Math.max(ax, bx) >= west - margin_m &&
+        Math.min(ax, bx) <= east + margin_m &&
+        Math.max(ay, by) >= south - margin_m &&
+        Math.min(ay, by) <= north + margin_m
+      )
+        walls.push([from, to]);
+    }
   return walls;
 }
 
@@ -206,6 +237,11 @@ function side([ax, ay]: Point, [bx, by]: Point, [x, y]: Point): number {
 
 function isCrossing(a1: Point, a2: Point, b1: Point, b2: Point): boolean {
   return side(a1, a2, b1) * side(a1, a2, b2) < 0 && side(b1, b2, a1) * side(b1, b2, a2) < 0;
+}
+
+/** Inside the outer ring and in no courtyard. */
+function isBuilt(point: Point, [outer, ...courtyards]: Rings): boolean {
+  return isInside(point, outer!) && !courtyards.some((ring) => isInside(point, ring));
 }
 
 function isInside([x, y]: Point, ring: readonly Point[]): boolean {

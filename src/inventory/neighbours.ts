@@ -11,12 +11,31 @@ const NAMES = ['id_a', 'id_b', 'gap_m', 'floors_aligned'] as const;
 const LEFT_OUT = 'the pair is left out';
 const GAP = { name: 'gap_m', kind: 'number', title: 'Gap', limits: [0, 1000] } as const;
 
+/** What rows of one and the same pair disagree on, and what the pair then counts with: the side on which they strike sooner [judgement]. */
+const DISAGREEMENTS = [
+  {
+    of: 'gap_m',
+    code: 'gaps-disagree',
+    told: "CAST(gap_m AS VARCHAR) || ' m'",
+    action: 'the smaller gap is taken',
+  },
+  {
+    of: 'floors_aligned',
+    code: 'floors-disagree',
+    told: 'floors_aligned',
+    action: 'the floors are taken not to be at one level',
+  },
+] as const;
+
 /** Opens the table, so that its bytes can enter the fingerprint of the inventory. */
 export function inspectNeighbours(path: string): Source {
   return inspectSource(path, 'auto');
 }
 
-/** Reads the pairs into the table `neighbour`; a pair with an id that is no building, or an unreadable gap, is a finding. */
+/**
+ * Reads the pairs into the table `neighbour`, every row of them; an id that is no building, an unreadable gap, and rows of one pair, in
+ * either order of its ids, that disagree are findings. A blank contradicts nothing.
+ */
 export async function takeInNeighbours(db: Database, source: Source, inventoryId: string): Promise<number> {
   const table = normalise(source, 'auto');
   try {
@@ -79,6 +98,7 @@ export async function takeInNeighbours(db: Database, source: Source, inventoryId
          'both must be ids of two buildings of the inventory', ?, 'note' FROM intake_pair WHERE (${good}) IS NOT TRUE`,
       [LEFT_OUT],
     );
+    await noteDisagreements(db, good);
     return await db.run(
       `INSERT INTO neighbour SELECT ?, id_a, id_b, gap_m, floors_aligned FROM intake_pair WHERE ${good} ORDER BY id_a, id_b, "row"`,
       [inventoryId],
@@ -86,4 +106,20 @@ export async function takeInNeighbours(db: Database, source: Source, inventoryId
   } finally {
     table.remove();
   }
+}
+
+/** One finding a pair and column, at the later of the rows that lie furthest apart. */
+async function noteDisagreements(db: Database, good: string): Promise<void> {
+  for (const { of, code, told, action } of DISAGREEMENTS)
+    await db.run(
+      `INSERT INTO intake_finding
+       WITH pair AS (SELECT least(id_a, id_b) AS a, greatest(id_a, id_b) AS b, first("row" ORDER BY ${of}, "row") AS low,
+           first("row" ORDER BY ${of} DESC, "row") AS high, first(${told} ORDER BY ${of}) AS one,
+           first(${told} ORDER BY ${of} DESC) AS other, count(*) AS n
+         FROM intake_pair WHERE ${good} AND ${of} IS NOT NULL GROUP BY 1, 2 HAVING count(DISTINCT ${of}) > 1)
+       SELECT greatest(low, high), NULL, ?, one || ' and ' || other, ?, a || ' and ' || b || ': row ' || low || ' says ' || one || ', row ' ||
+         high || ' says ' || other || CASE WHEN n > 2 THEN ', of ' || n || ' rows of this pair' ELSE '' END || '; keep the one that holds', ?, 'note'
+       FROM pair`,
+      [`neighbours ${of}`, code, action],
+    );
 }

@@ -21,8 +21,16 @@ export interface Plans {
 export const UNREADABLE = {
   code: 'not-a-polygon',
   column: 'footprint',
-  test: 'not a WKT POLYGON in degrees',
+  test: 'not a WKT POLYGON or MULTIPOLYGON in degrees',
   action: TREATED_AS_UNKNOWN,
+};
+
+/** Note of a building of several outlines. */
+const SEVERAL = {
+  code: 'several-outlines',
+  column: 'footprint',
+  test: 'a MULTIPOLYGON of more than one polygon',
+  action: 'the area is the sum; plan sides and re-entrant corners are read from the row alone',
 };
 
 /** Plan sides, plan area and place: as given, else from the footprint. */
@@ -51,16 +59,21 @@ export function readPlans(sizes: Sizes, notes: BuildingNotes): Plans {
     const text = sizes.footprint[at] ?? null;
     const found = text === null ? undefined : readFootprint(text);
     if (found !== undefined) {
-      fill(plans.length_m, at, found.length_m);
-      fill(plans.width_m, at, found.width_m);
+      fill(plans.length_m, at, found.shape?.length_m ?? NaN);
+      fill(plans.width_m, at, found.shape?.width_m ?? NaN);
       fill(plans.lon, at, found.lon);
       fill(plans.lat, at, found.lat);
-      fill(plans.reentrant_projection, at, found.reentrant_projection);
-      fill(plans.reentrant_area_share, at, found.reentrant_area_share);
+      fill(plans.reentrant_projection, at, found.shape?.reentrant_projection ?? NaN);
+      fill(plans.reentrant_area_share, at, found.shape?.reentrant_area_share ?? NaN);
       fill(plans.footprint_area_m2, at, found.area_m2);
+      if (found.outlines > 1) {
+        const message = `${String(found.outlines)} outlines: give the sides of the plan, or each building a row of its own`;
+        notes.add(SEVERAL, sizes.first_row[at] ?? 0, text!.slice(0, 200), message);
+      }
     } else if (text !== null) {
       plans.hasUnreadable = true;
-      const message = 'the footprint is not a polygon of longitudes and latitudes: POLYGON ((lon lat, lon lat, …))';
+      const message =
+        'the footprint is no polygon of longitudes and latitudes: POLYGON ((lon lat, lon lat, …)) or MULTIPOLYGON (((lon lat, …)), …)';
       notes.add(UNREADABLE, sizes.first_row[at] ?? 0, text.slice(0, 200), message);
     }
     plans.area_m2[at] = found?.area_m2 ?? (plans.length_m[at] ?? NaN) * (plans.width_m[at] ?? NaN);

@@ -34,7 +34,7 @@ import { openTable } from './table.js';
 import type { Table } from './table.js';
 
 /** Goes into the fingerprint: an intake that reads differently is another inventory. */
-const INTAKE_VERSION = 7;
+const INTAKE_VERSION = 8;
 
 export interface TakenIn {
   readonly inventoryId: string;

@@ -145,7 +145,7 @@ async function layNear(db: Database, number: number): Promise<void> {
   );
 }
 
-/** The measured pairs with those of the table, which stand before what outlines say. */
+/** The measured pairs with those of the table, which stand before what outlines say; of rows that disagree the least gap, and `no` before `yes`. */
 async function withGiven(
   db: Database,
   { number, inventory_id }: { readonly number: number; readonly inventory_id: string },
@@ -155,7 +155,7 @@ async function withGiven(
   const listed = 'IN (SELECT building_index FROM gap_listed)';
   const given = await db.columns(
     `SELECT least(x.building_index, y.building_index) AS a, greatest(x.building_index, y.building_index) AS b, min(n.gap_m) AS gap_m,
-       first(n.floors_aligned ORDER BY n.gap_m NULLS LAST, n.floors_aligned NULLS LAST) AS floors_aligned
+       min(n.floors_aligned) AS floors_aligned
      FROM neighbour n JOIN building_core x ON x.inventory_number = ? AND x.id = n.id_a
      JOIN building_core y ON y.inventory_number = ? AND y.id = n.id_b WHERE n.inventory_id = ?
      ${all ? '' : `AND (x.building_index ${listed} OR y.building_index ${listed})`} GROUP BY 1, 2 ORDER BY 1, 2`,

@@ -13,7 +13,7 @@ const AROUND = 0.002;
 
 export type FoundNeighbour = Neighbour & { readonly building: Building };
 
-/** Neighbours of the building at `index`, nearest first; a pair of the table stands before what footprints say. */
+/** Neighbours of the building at `index`, nearest first; a pair of the table stands before what footprints say, of its rows the least gap and `no` before `yes`. */
 export async function neighboursOf(
   db: Database,
   inventoryId: string,
@@ -21,9 +21,10 @@ export async function neighboursOf(
   id: string,
 ): Promise<readonly FoundNeighbour[]> {
   const pairs = await db.rows<{ other: number; gap_m: number | null; floors_aligned: 'yes' | 'no' | null }>(
-    `SELECT b.building_index AS other, n.gap_m, n.floors_aligned FROM neighbour n
+    `SELECT b.building_index AS other, min(n.gap_m) AS gap_m, min(n.floors_aligned) AS floors_aligned FROM neighbour n
      JOIN building b ON b.inventory_id = n.inventory_id AND b.id = CASE WHEN n.id_a = ? THEN n.id_b ELSE n.id_a END
-     WHERE n.inventory_id = ? AND (n.id_a = ? OR n.id_b = ?) ORDER BY n.gap_m NULLS LAST, other`,
+     WHERE n.inventory_id = ? AND (n.id_a = ? OR n.id_b = ?)
+     GROUP BY other ORDER BY other`,
     [id, inventoryId, id, id],
   );
   const near = await db.rows<{ building_index: number; footprint: string }>(
@@ -43,7 +44,6 @@ export async function neighboursOf(
       if (a === place || b === place) measured.set(near[a === place ? b : a]!.building_index, gap_m);
   const found = new Map<number, Neighbour>();
   for (const { other, gap_m: given, floors_aligned } of pairs) {
-    if (found.has(other)) continue;
     const gap_m = given ?? measured.get(other);
     if (gap_m === undefined) continue;
     found.set(other, {

@@ -39,7 +39,8 @@ const TABLE = [
 ].join('\n');
 // the second gap as surveyed, the third with its floors alone, one to a house across the street
 // the first is wide enough by less than the fifth, short by the height rule alone, is beyond what both sway
-const PAIRS = 'id_a,id_b,gap_m,floors_aligned\nH0,H1,0.195,\nH2,H1,0.4,yes\nH2,H3,,no\nFAR,H0,0.02,\n';
+const PAIRS =
+  'id_a,id_b,gap_m,floors_aligned\nH0,H1,0.2,\nH2,H1,0.4,yes\nH2,H3,,no\nH4,H3,0.07,yes\nH3,H4,0.09,no\nFAR,H0,0.02,\n';
 const text = SMALL_STUDY.replace('floor_area_m2: area}', 'floor_area_m2: area, footprint: outline}').replace(
   'hazard:',
   'neighbours: {file: pairs.csv}\nhazard:',
@@ -75,6 +76,8 @@ describe('the gaps of a run', () => {
     expect(told.get('H1 H2')).toMatchObject({ gap_m: 0.4, gap_from: 'given', floors_aligned: 'yes' });
     expect(told.get('FAR H0')).toMatchObject({ gap_m: 0.02, gap_from: 'given', floors_aligned: null });
     expect(told.get('H2 H3')).toMatchObject({ gap_from: 'measured', floors_aligned: 'no' });
+    // of two rows that disagree the smaller gap, and floors not at one level
+    expect(told.get('H3 H4')).toMatchObject({ gap_m: 0.07, gap_from: 'given', floors_aligned: 'no' });
     expect(told.get('H4 H5')!.gap_m).toBeCloseTo(0.05, 3);
     // FAR stands within reach of the shed, of which nothing tells how it sways
     expect(screened.data.gaps).toMatchObject({ of: 'all', first: null, complete: true, alike: 0, unknown: 1 });

@@ -310,6 +310,38 @@ describe('takeIn', () => {
     expect(intake.taken.attributes['footprint']).toEqual({ given: 1, inferred: 0, default: 0, unknown: 1 });
   });
 
+  it('takes area and place from a footprint of several outlines, and says that it tells no sides', async () => {
+    const a = '((0 0, 0.0004 0, 0.0004 0.0001, 0 0.0001, 0 0))';
+    const b = '((0.001 0, 0.0012 0, 0.0012 0.0001, 0.001 0.0001, 0.001 0))';
+    const intake = await intakeOfText(
+      `id;f;n;l\nA;MULTIPOLYGON (${a}, ${b});3;\nB;MULTIPOLYGON (${a});2;\nC;MULTIPOLYGON (${a}, ((7)));2;\nD;MULTIPOLYGON (${a}, ${b});3;50\n`,
+      { columns: { id: 'id', footprint: 'f', storeys_above: 'n', plan_length_m: 'l' } },
+    );
+    expect(building(intake, 'A')).toMatchObject({
+      plan_length_m: null,
+      plan_width_m: null,
+      reentrant_projection: null,
+      reentrant_area_share: null,
+      footprint_area_m2: expect.closeTo(1.5 * 44.53 * 11.06, 0) as number,
+      floor_area_m2: expect.closeTo(3 * 1.5 * 44.53 * 11.06, -1) as number,
+      lon: expect.closeTo((2 * 0.0002 + 0.0011) / 3, 6) as number,
+    });
+    expect(building(intake, 'B')).toMatchObject({
+      plan_length_m: expect.closeTo(44.53, 1) as number,
+      reentrant_projection: 0,
+    });
+    expect(building(intake, 'C')).toMatchObject({ footprint: null, footprint_area_m2: null });
+    expect(building(intake, 'D')).toMatchObject({ plan_length_m: 50 });
+    expect(intake.findings.map(({ code, row, id, value }) => [code, row, id, value?.slice(0, 14)])).toEqual([
+      ['several-outlines', 2, 'A', 'MULTIPOLYGON ('],
+      ['not-a-polygon', 4, 'C', 'MULTIPOLYGON ('],
+      ['several-outlines', 5, 'D', 'MULTIPOLYGON ('],
+    ]);
+    expect(intake.findings[0]!.message).toBe(
+      '2 outlines: give the sides of the plan, or each building a row of its own',
+    );
+  });
+
   it('measures re-entrant corners of footprints, and keeps what the row says of them', async () => {
     const l = 'POLYGON ((0 0, 0.0004 0, 0.0004 0.0002, 0.0002 0.0002, 0.0002 0.0004, 0 0.0004, 0 0))';
     const intake = await intakeOfText(`id;f;r\nA;${l};\nB;${l};0.07\nC;;\n`, {
@@ -339,11 +371,77 @@ describe('takeIn', () => {
       { id_a: 'B', id_b: 'A', gap_m: null, floors_aligned: 'no' },
     ]);
     expect(codes(intake)).toEqual([
+      'floors-disagree',
       'not-a-number',
       'outside-limits',
       'outside-limits',
       'unknown-neighbour',
       'unknown-word',
+    ]);
+  });
+
+  it('notes rows of one pair that disagree, in either order of the ids, and none that repeat or leave blank', async () => {
+    const file = writeTable(`${HEADER}A,3,,,,\nB,2,,,,\nC,2,,,,\nD,2,,,,\n`);
+    const pairs = writeTable(
+      [
+        'id_a,id_b,gap_m,floors_aligned',
+        'A,B,0.2,yes',
+        'B,A,0.4,no',
+        'A,C,0.1,no',
+        'A,C,0.10,No',
+        'C,A,,',
+        'B,C,0.5,',
+        'B,C,,yes',
+        'D,A,3,yes',
+        'A,D,1,',
+        'A,D,2,yes',
+        'A,NONE,1,yes',
+        'NONE,A,2,no',
+        '',
+      ].join('\n'),
+      'pairs.csv',
+    );
+    const { findings } = await intakeOf({ ...studyOf(file, { columns: COLUMNS }), neighbours: { file: pairs } });
+    expect(
+      findings
+        .filter(({ code }) => code !== 'unknown-neighbour')
+        .map(({ row, column_name, value, code, message, action, kind }) => [
+          row,
+          column_name,
+          value,
+          code,
+          message,
+          action,
+          kind,
+        ]),
+    ).toEqual([
+      [
+        3,
+        'neighbours floors_aligned',
+        'no and yes',
+        'floors-disagree',
+        'A and B: row 3 says no, row 2 says yes; keep the one that holds',
+        'the floors are taken not to be at one level',
+        'note',
+      ],
+      [
+        3,
+        'neighbours gap_m',
+        '0.2 m and 0.4 m',
+        'gaps-disagree',
+        'A and B: row 2 says 0.2 m, row 3 says 0.4 m; keep the one that holds',
+        'the smaller gap is taken',
+        'note',
+      ],
+      [
+        10,
+        'neighbours gap_m',
+        '1.0 m and 3.0 m',
+        'gaps-disagree',
+        'A and D: row 10 says 1.0 m, row 9 says 3.0 m, of 3 rows of this pair; keep the one that holds',
+        'the smaller gap is taken',
+        'note',
+      ],
     ]);
   });
 

@@ -32,4 +32,24 @@ describe('neighboursOf', () => {
     expect(found[1]!.building.lon).toBeCloseTo(27.8 / 111_320, 9);
     expect(await neighboursOf(db, inventoryId, 3, 'D')).toEqual([]);
   });
+
+  it('takes the smaller gap and floors that are not at one level where rows of a pair disagree', async () => {
+    const file = writeTable('id,n\nA,3\nB,4\nC,2\n');
+    const pairs = writeTable(
+      'id_a,id_b,gap_m,floors_aligned\nA,B,0.2,yes\nB,A,0.4,no\nC,A,0.3,\nA,C,,yes\n',
+      'pairs.csv',
+    );
+    const { db } = await intakeOf({
+      ...studyOf(file, { columns: { id: 'id', storeys_above: 'n' } }),
+      neighbours: { file: pairs },
+    });
+    const inventoryId = String(await db.value('SELECT inventory_id FROM inventory'));
+    for (const [index, id] of [
+      [0, 'A'],
+      [1, 'B'],
+    ] as const)
+      expect((await neighboursOf(db, inventoryId, index, id))[0]).toMatchObject({ gap_m: 0.2, floors_aligned: 'no' });
+    // what one row leaves blank another may tell
+    expect(await neighboursOf(db, inventoryId, 2, 'C')).toMatchObject([{ gap_m: 0.3, floors_aligned: 'yes' }]);
+  });
 });
