@@ -5,7 +5,8 @@ import type { RunChoice } from '../runs/open.js';
 import { budgetOfRun } from '../screening/budget-plan.js';
 import type { BudgetBuilding, BudgetPlan } from '../screening/budget-plan.js';
 import { csvText } from './csv-text.js';
-import { writeNamed } from './write-named.js';
+import { loadStudyAlone } from '../study/load.js';
+import { NamedFile } from './write-named.js';
 
 export interface BudgetStudyOptions extends Pick<RunChoice, 'run'> {
   /** Write the choice there as CSV. */
@@ -22,6 +23,7 @@ export interface BudgetStudyOptions extends Pick<RunChoice, 'run'> {
  * const { chosen, spent, gap } = await budgetStudy('study.yaml', 180_000);
  */
 export async function budgetStudy(path: string, money?: number, options: BudgetStudyOptions = {}): Promise<BudgetPlan> {
+  const csv = await NamedFile.claimAny(options.csv, '--csv', { study: await loadStudyAlone(path) });
   const plan = await withStudyDatabase(path, async (db, loaded) => {
     const { run } = await chosenRun(db, loaded, options);
     const sum = money ?? loaded.study.budget?.money;
@@ -29,7 +31,7 @@ export async function budgetStudy(path: string, money?: number, options: BudgetS
       throw new UserError('no sum of money: give one with --money, or as money in the budget of the study');
     return budgetOfRun(db, loaded, run, sum);
   });
-  if (options.csv !== undefined) await writeNamed(options.csv, budgetCsv(plan), '--csv');
+  await csv?.write(budgetCsv(plan));
   return plan;
 }
 

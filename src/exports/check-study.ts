@@ -20,6 +20,7 @@ import { prepareSchema, schemaState } from '../store/schema.js';
 import { loadStudy } from '../study/load.js';
 import type { LoadedStudy } from '../study/load.js';
 import { writeRejectsCsv } from './rejects.js';
+import { spareInputs } from './spare-inputs.js';
 import { prepareFolder, writeSet } from './write-set.js';
 
 export interface CheckOptions {
@@ -117,6 +118,7 @@ async function answersOf(loaded: LoadedStudy): Promise<readonly Answer[]> {
 export async function checkStudy(path: string, options: CheckOptions = {}): Promise<CheckedStudy> {
   const loaded = await loadStudy(path);
   const folder = options.output === undefined ? undefined : prepareFolder(options.output);
+  if (folder !== undefined) await spareInputs(loaded, folder, ['rejects.csv']);
   const answers = await answersOf(loaded);
   const db = await openDatabase({
     path: ':memory:',

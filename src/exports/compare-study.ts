@@ -12,6 +12,7 @@ import { databasePath } from '../screening/screen.js';
 import type { Database } from '../store/database.js';
 import { loadStudyAlone } from '../study/load.js';
 import type { LoadedStudy } from '../study/load.js';
+import { spareInputs } from './spare-inputs.js';
 import { prepareFolder, writeSet } from './write-set.js';
 
 export interface CompareStudyOptions extends CompareOptions {
@@ -53,6 +54,7 @@ export async function compareStudy(path: string, options: CompareStudyOptions = 
   if (options.page === false) return { comparison: compared, page: null };
   const folder = prepareFolder(options.output ?? resolve(loaded.folder, loaded.study.output));
   const name = pageName(compared, apart);
+  await spareInputs(loaded, folder, [name]);
   await writeSet(folder, { [name]: renderComparison(compared, readPageScript()) });
   return { comparison: compared, page: resolve(folder, name) };
 }

@@ -6,7 +6,7 @@ import { readVibrationRecord, within } from '../inventory/vibration-record.js';
 import type { RecordRequest, VibrationRecord } from '../inventory/vibration-record.js';
 import { vibrationSvg } from '../reports/vibration-chart.js';
 import { csvText } from './csv-text.js';
-import { writeNamed } from './write-named.js';
+import { NamedFile } from './write-named.js';
 
 export interface MeasureRequest extends RecordRequest, MeasureOptions {
   readonly svg?: string;
@@ -24,11 +24,13 @@ export interface MeasuredRecord {
  * @throws UserError when the file is no record, nothing stands out, or the picture cannot be written.
  */
 export async function measureFile(path: string, request: MeasureRequest): Promise<MeasuredRecord> {
+  const read = { path, name: path, what: 'the record that is measured', place: null };
+  const file = await NamedFile.claimAny(request.svg, '--svg', { study: null, reads: [read] });
   const record = readVibrationRecord(path, request);
   const measured = within(path, () => measureRecord(record.signal, request));
-  if (request.svg === undefined) return { record, measured, svg: null };
+  if (file === null) return { record, measured, svg: null };
   const svg = await vibrationSvg(measured, `${basename(path)}, ${record.channel.name}`, record.channel.unit);
-  return { record, measured, svg: await writeNamed(request.svg, svg, '--svg') };
+  return { record, measured, svg: await file.write(svg) };
 }
 
 /** The lines of an inventory that hold the measurement: header and row. A free decay is a forced vibration of small amplitude. */

@@ -18,7 +18,7 @@ import type { LoadedStudy } from '../study/load.js';
 import { withParameters } from '../study/parameters.js';
 import type { Parameter, ParameterRange } from '../study/parameters.js';
 import { rejectedShare } from './check-study.js';
-import { writeReports } from './reports.js';
+import { REPORT_FILES, writeReports } from './reports.js';
 import type { ScreenedStudy } from './screen-study.js';
 import { replaceFile } from './replace-file.js';
 import { spareInputs } from './spare-inputs.js';
@@ -85,7 +85,7 @@ export async function refreshStudy(path: string, options: RefreshStudyOptions = 
   requireDatabase(own);
   const folder =
     options.reports === false ? null : prepareFolder(options.output ?? resolve(own.folder, loaded.study.output));
-  if (folder !== null) spareInputs(own, folder);
+  if (folder !== null) await spareInputs(own, folder, REPORT_FILES);
   const db = await openStudyDatabase(own, false, folder === null ? [] : [folder]);
   try {
     options.onOpen?.(db);

@@ -6,7 +6,7 @@ import { openStudyDatabase, screen } from '../screening/screen.js';
 import type { ScreenOptions, ScreenOutcome } from '../screening/screen.js';
 import type { Database } from '../store/database.js';
 import { loadStudy } from '../study/load.js';
-import { writeReports } from './reports.js';
+import { REPORT_FILES, writeReports } from './reports.js';
 import { rejectedShare } from './check-study.js';
 import { spareInputs } from './spare-inputs.js';
 import { prepareFolder } from './write-set.js';
@@ -42,7 +42,7 @@ export interface ScreenedStudy extends ScreenOutcome {
 export async function screenStudy(path: string, options: ScreenStudyOptions = {}): Promise<ScreenedStudy> {
   const loaded = await loadStudy(path);
   const folder = prepareFolder(options.output ?? resolve(loaded.folder, loaded.study.output));
-  spareInputs(loaded, folder);
+  await spareInputs(loaded, folder, REPORT_FILES);
   const db = await openStudyDatabase(loaded, false, [folder]);
   try {
     options.onOpen?.(db);

@@ -5,7 +5,8 @@ import { sensitivityOf } from '../screening/sensitivity.js';
 import type { Sensitivity, SensitivityOptions } from '../screening/sensitivity.js';
 import type { Database } from '../store/database.js';
 import { csvText } from './csv-text.js';
-import { writeNamed } from './write-named.js';
+import { loadStudyAlone } from '../study/load.js';
+import { NamedFile } from './write-named.js';
 
 export interface SensitivityStudyOptions extends SensitivityOptions, Pick<RunChoice, 'run'> {
   /** Write the table there as CSV. */
@@ -24,12 +25,13 @@ export interface SensitivityStudyOptions extends SensitivityOptions, Pick<RunCho
  * const { switches, always } = await sensitivityStudy('study.yaml', { only: ['slope', 'system-prior'] });
  */
 export async function sensitivityStudy(path: string, options: SensitivityStudyOptions = {}): Promise<Sensitivity> {
+  const csv = await NamedFile.claimAny(options.csv, '--csv', { study: await loadStudyAlone(path) });
   const found = await withStudyDatabase(path, async (db, loaded) => {
     options.onOpen?.(db);
     const { run } = await chosenRun(db, loaded, options);
     return sensitivityOf(db, run, options);
   });
-  if (options.csv !== undefined) await writeNamed(options.csv, sensitivityCsv(found), '--csv');
+  await csv?.write(sensitivityCsv(found));
   return found;
 }
 

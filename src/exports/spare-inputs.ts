@@ -1,29 +1,21 @@
-/** Reports have fixed names: none may take the place of a table the study reads. */
-import { existsSync, realpathSync } from 'node:fs';
-import { join, resolve } from 'node:path';
+/** Reports have fixed names: none may take the place of a file that a study stands on. */
+import { join } from 'node:path';
 import { UserError } from '../errors.js';
 import type { LoadedStudy } from '../study/load.js';
-import { REPORT_FILES } from './reports.js';
+import { restAt, restsAround } from './rests.js';
 
 /**
- * Refuses to write the reports of a study into `into` (as `prepareFolder` returned it) over one of its own tables.
- * @throws UserError naming the key of the study and the file.
+ * Refuses to write the files `names` of a study into `into` (as `prepareFolder` returned it) over one that a study stands on.
+ * @throws UserError naming the key of the study, the file and what it is.
  */
-export function spareInputs({ study, folder, placeOf }: LoadedStudy, into: string): void {
-  const inputs = [
-    { path: ['inventory', 'file'], file: study.inventory.file },
-    { path: ['neighbours', 'file'], file: study.neighbours?.file },
-    { path: ['system_prior'], file: study.system_prior },
-  ];
-  for (const { path, file } of inputs) {
-    if (file === undefined) continue;
-    const whole = resolve(folder, file);
-    if (!existsSync(whole)) continue;
-    const real = realpathSync(whole);
-    if (REPORT_FILES.some((name) => join(into, name) === real))
-      throw new UserError(
-        `the reports would be written over ${file}, which the study reads; name another folder with output or --output, or give the file another name`,
-        placeOf(path),
-      );
+export async function spareInputs(loaded: LoadedStudy, into: string, names: readonly string[]): Promise<void> {
+  const rests = await restsAround(loaded, into);
+  for (const name of names) {
+    const rest = restAt(join(into, name), rests);
+    if (rest === null) continue;
+    throw new UserError(
+      `the reports would be written over ${rest.name}, ${rest.what}; name another folder with output or --output, or give the file another name`,
+      rest.place ?? { file: rest.path },
+    );
   }
 }

@@ -11,7 +11,7 @@ import type { LoadedStudy } from '../study/load.js';
 import { csvText } from './csv-text.js';
 import { readSpectrum } from './spectrum-reading.js';
 import type { SpectrumPlace } from './spectrum-reading.js';
-import { writeNamed } from './write-named.js';
+import { NamedFile } from './write-named.js';
 
 export interface SpectrumFiles {
   readonly csv?: string | undefined;
@@ -46,17 +46,19 @@ export async function writeSpectra(
   { csv, svg }: SpectrumFiles,
   place?: SpectrumPlace,
 ): Promise<readonly string[]> {
+  const table = await NamedFile.claimAny(csv, '--csv', { study: loaded });
+  const picture = await NamedFile.claimAny(svg, '--svg', { study: loaded });
   const plain = names.map((name) => readSpectrum(loaded, name, [], place));
   const drawn = drawnPeriods(plain, at);
   const written: string[] = [];
-  if (csv !== undefined) {
+  if (table !== null) {
     const periods = at.length > 0 ? [...at].sort((a, b) => a - b) : drawn;
     const columns = names.map((name) => readSpectrum(loaded, name, periods, place).ordinates.map(({ sa_g }) => sa_g));
     const head = names.length === 1 ? ['sa_g'] : names.map((name) => `${name} sa_g`);
     const rows = periods.map((period_s, i) => [period_s, ...columns.map((column) => column[i] ?? null)]);
-    written.push(await writeNamed(csv, csvText(['period_s', ...head], rows), '--csv'));
+    written.push(await table.write(csvText(['period_s', ...head], rows)));
   }
-  if (svg !== undefined) {
+  if (picture !== null) {
     if (names.length > MOST_DRAWN)
       throw new UserError(
         `one picture holds at most ${String(MOST_DRAWN)} spectra that can be told apart, got ${String(names.length)}; name those to be drawn`,
@@ -66,7 +68,7 @@ export async function writeSpectra(
       const points = readSpectrum(loaded, name, drawn, place).ordinates;
       return { name, about: title, points, plateau, corners_s, read: readSpectrum(loaded, name, at, place).ordinates };
     });
-    written.push(await writeNamed(svg, await spectraSvg(spectra), '--svg'));
+    written.push(await picture.write(await spectraSvg(spectra)));
   }
   return written;
 }
@@ -76,6 +78,7 @@ export async function drawCalculation({ method, inputs, value }: Calculation, pa
   const { compile } = method.family as Partial<Pick<SpectrumFamily<Inputs>, 'compile'>>;
   if (compile === undefined)
     throw new UserError(`${method.id} is no spectrum; --svg draws spectra, \`swaymark methods spectrum\` lists them`);
+  const file = await NamedFile.claim(path, '--svg', { study: null });
   const { period_s, ...parameters } = inputs;
   const compiled = compile(parameters);
   const at = typeof period_s === 'number' ? [period_s] : [];
@@ -97,5 +100,5 @@ export async function drawCalculation({ method, inputs, value }: Calculation, pa
       read: at.map((t) => point(t, value)),
     },
   ]);
-  return writeNamed(path, svg, '--svg');
+  return file.write(svg);
 }

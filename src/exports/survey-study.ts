@@ -15,7 +15,9 @@ import { planSurvey } from '../screening/survey.js';
 import type { SurveyPlan } from '../screening/survey.js';
 import { loadStudyAlone } from '../study/load.js';
 import { csvText } from './csv-text.js';
-import { writeNamed } from './write-named.js';
+import { SHEET_HEAD, SHEET_TAIL } from './sheet-cells.js';
+import { spareInputs } from './spare-inputs.js';
+import { NamedFile } from './write-named.js';
 import { prepareFolder, writeSet } from './write-set.js';
 
 export interface SurveyChoice {
@@ -58,6 +60,8 @@ export async function surveyStudy(
   if (hours === Infinity && money === Infinity)
     throw new UserError('a survey is planned within hours or money: say how many, for instance --hours 16');
   const limits = { hours, money };
+  const own = await loadStudyAlone(path);
+  const named = await NamedFile.claimAny(csv, '--csv', { study: own });
   const { plan, tooLarge } = await withStudyDatabase(path, async (db, loaded) => {
     const { study, file } = loaded;
     const visits = visitsOf(study);
@@ -71,11 +75,12 @@ export async function surveyStudy(
     if (tooLarge.length === visits.length) throw noneFits(visits, limits, file);
     return { plan: await planSurvey(db, runId, { visits, limits }, report), tooLarge };
   });
-  const sheet = csv === undefined ? null : await writeNamed(csv, fieldSheet(plan), '--csv');
+  const sheet = named === null ? null : await named.write(fieldSheet(plan));
   if (!page) return { plan, tooLarge, csv: sheet, page: null };
-  const { study, folder } = await loadStudyAlone(path);
+  const { study, folder } = own;
   const into = prepareFolder(output ?? resolve(folder, study.output));
   const name = `survey-${String(plan.run)}.html`;
+  await spareInputs(own, into, [name]);
   await writeSet(into, { [name]: renderSurvey(study.title, plan, readPageScript(), tooLarge) });
   return { plan, tooLarge, csv: sheet, page: resolve(into, name) };
 }
@@ -92,9 +97,6 @@ function noneFits(visits: readonly Visit[], { hours, money }: Limits, file: stri
     { file, key: 'survey.visits' },
   );
 }
-
-const HEAD = ['place', 'id', 'name', 'group', 'lon', 'lat', 'rank', 'visit', 'find out', 'because'] as const;
-const TAIL = ['surveyor', 'surveyed_on', 'remark'] as const;
 
 /**
  * The plan as a table for a tablet: a row a visit, cells of what is asked left blank, cells of what is not asked holding a dash so that
@@ -115,8 +117,8 @@ export function fieldSheet({ steps }: SurveyPlan): string {
       askedWords(step),
       reasonWord(step),
       ...ANSWER_COLUMNS.map((column) => (asked.has(column) ? null : '–')),
-      ...TAIL.map(() => null),
+      ...SHEET_TAIL.map(() => null),
     ] satisfies (string | number | null)[];
   });
-  return csvText([...HEAD, ...ANSWER_COLUMNS, ...TAIL], rows);
+  return csvText([...SHEET_HEAD, ...ANSWER_COLUMNS, ...SHEET_TAIL], rows);
 }

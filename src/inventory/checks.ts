@@ -54,6 +54,12 @@ export const CHECKS = {
     'the year of retrofit is before the year of construction',
     'the year of retrofit is treated as unknown',
   ),
+  levelNone: check(
+    'coefficient-without-design',
+    'design_level',
+    'design_level none, no design for earthquakes, beside a design coefficient above 0',
+    'the coefficient is taken and its level counts as not stated; leave the coefficient blank, or give its level',
+  ),
   yearHeap: check(
     'year-heaping',
     'year_built',

@@ -1,8 +1,11 @@
 /** The checks over single buildings, as one pass over the columns. */
+import type { Database } from '../store/database.js';
+import { quoteName } from '../store/sql.js';
 import { CHECKS, HEIGHT_PER_STOREY, SMALLEST_PLATE_M2, STOREYS_OF_UNITS } from './checks.js';
 import type { Check } from './checks.js';
 import type { BuildingNotes } from './findings.js';
 import type { Doubts } from './infer.js';
+import type { Mapping } from './header.js';
 import { medianOf } from './median.js';
 import type { Plans } from './plans.js';
 import type { Sizes } from './sizes.js';
@@ -102,6 +105,24 @@ export function findContradictions(sizes: Sizes, plans: Plans, notes: BuildingNo
     retrofitDoubted,
     ...(check === undefined ? {} : { column: { check, ratio: median } }),
   };
+}
+
+/** True in SQL of a building whose drawings are said to show no design, beside the coefficient of one [judgement: the number is the firmer]. */
+export function undesignedSql(column: (name: string) => string): string {
+  return `(${column('design_level')} = 'none' AND ${column('design_base_shear_coefficient')} > 0)`;
+}
+
+/** Notes every building whose design level and coefficient contradict each other; the level is left out when buildings are stored. */
+export async function noteUndesigned(db: Database, mapping: Mapping): Promise<void> {
+  const has = (name: string): boolean => mapping.columns.some(({ column }) => column.name === name);
+  if (!has('design_level') || !has('design_base_shear_coefficient')) return;
+  const check = CHECKS.levelNone;
+  await db.run(
+    `INSERT INTO intake_finding
+     SELECT first_row, id, ?, 'none', ?, 'no design for earthquakes, but a design base shear coefficient of ' || CAST(design_base_shear_coefficient AS VARCHAR), ?, 'note'
+     FROM intake_building WHERE ${undesignedSql(quoteName)}`,
+    [check.column, check.code, check.action],
+  );
 }
 
 function checkPlaces(sizes: Sizes, plans: Plans, notes: BuildingNotes): void {

@@ -6,6 +6,7 @@ import { CORE_COLUMNS, EXTRA_COLUMNS, FILLED_ATTRIBUTES, ORIGIN_TYPE, columnType
 import { quoteName, quoteText } from '../store/sql.js';
 import { keySql } from './cells.js';
 import type { Readings } from './cells.js';
+import { undesignedSql } from './contradictions.js';
 import type { Contradictions } from './contradictions.js';
 import type { Inferred } from './infer.js';
 import type { Mapping } from './header.js';
@@ -112,7 +113,9 @@ export async function storeBuildings(
   const cell = ({ name, sql }: { name: string; sql: string }): string =>
     name === 'year_retrofitted'
       ? `CASE WHEN ${key} NOT IN (SELECT first_row FROM intake_impossible) THEN ${sql} END`
-      : sql;
+      : name === 'design_level'
+        ? `CASE WHEN ${undesignedSql(given)} THEN NULL ELSE ${sql} END`
+        : sql;
   await db.run(
     `INSERT INTO building_extra (inventory_number, building_index, ${EXTRA_COLUMNS.map(({ name }) => quoteName(name)).join(', ')})
      SELECT ${number}, f.building_index, ${typed

@@ -12,7 +12,7 @@ import type { Attributes } from './attributes.js';
 import { makeBuildings } from './buildings.js';
 import { readOddCells } from './cells.js';
 import { CHECKS } from './checks.js';
-import { findContradictions } from './contradictions.js';
+import { findContradictions, noteUndesigned } from './contradictions.js';
 import { decideFates } from './fates.js';
 import { BuildingNotes, noteColumn, startFindings, storeFindings } from './findings.js';
 import { mapHeader } from './header.js';
@@ -130,6 +130,7 @@ async function takeTable(
     const action = `${check.action}; if ${JSON.stringify(theirs)} is in ${name}, write under inventory.columns of the study: ${entry}`;
     await noteColumn(db, { ...check, action }, shown, `the median height per storey is ${shown} m`);
   }
+  await noteUndesigned(db, mapping);
   await noteNearTwins(db, mapping);
   await notePartOf(db, mapping);
   await makeYearPools(db, mapping);

@@ -17,7 +17,7 @@ export interface ScreenOptions extends KeepOptions {
 }
 
 /** Path of a study's database. */
-export function databasePath(loaded: LoadedStudy): string {
+export function databasePath(loaded: Pick<LoadedStudy, 'folder'>): string {
   return join(loaded.folder, 'study.duckdb');
 }
 

@@ -84,7 +84,7 @@ describe('takeAnswers', () => {
       const before = await screened(path, ['BH-006', 'BH-024'], false);
       const file = sheet(
         path,
-        '\ufeffid,system,height_m,storeys_above,occupants_peak,visit,surveyor,surveyed_on\r\nBH-006,concrete shear wall,–,?,,street,N. N.,2026-12-03\r\nBH-024,–,41 ft,3,12,street,N. N.,2026-12-03\r\n',
+        '\ufeffid,system,height_m,storeys_above,occupants_peak,visit,surveyor,surveyed_on\r\nBH-006,concrete shear wall,–,?,,street,N. N.,2026-06-03\r\nBH-024,–,41 ft,3,12,street,N. N.,2026-06-03\r\n',
       );
       expect(await takeAnswers(path, file, MADE)).toEqual({
         answers: 4,
@@ -93,6 +93,7 @@ describe('takeAnswers', () => {
         not_found: { storeys_above: 1 },
         on_record: 0,
         answered_later: 0,
+        not_read: [],
       });
       const after = await screened(path, ['BH-006', 'BH-024'], false);
       expect(after.inventory).not.toBe(before.inventory);
@@ -111,8 +112,8 @@ describe('takeAnswers', () => {
       // the hand calculation names who found a value, in place of the owner's table
       const { steps } = await withStudyDatabase(path, (db) => explainBuilding(db, 2, 'BH-024', 'si'));
       const sourceOf = (title: string) => steps.find((step) => step.title === title)?.source;
-      expect(sourceOf('storeys')).toBe('street visit of 2026-12-03 by N. N.');
-      expect(sourceOf('height')).toBe('street visit of 2026-12-03 by N. N.');
+      expect(sourceOf('storeys')).toBe('street visit of 2026-06-03 by N. N.');
+      expect(sourceOf('height')).toBe('street visit of 2026-06-03 by N. N.');
       const others = steps.filter(({ source }) => source === 'from the inventory').map(({ title }) => title);
       expect(others).not.toContain('occupants peak');
       // what was not asked stays as it was
@@ -155,7 +156,7 @@ describe('takeAnswers', () => {
       const path = small();
       const before = await screened(path, ['L1', 'L2']);
       const given =
-        'id,visit,surveyor,surveyed_on,system,storeys_above,height_m,occupants_peak\nL1,street,N. N.,2026-12-03,timber-light-frame,4,?,25\nL2,street,,,concrete-shear-wall,,,\n';
+        'id,visit,surveyor,surveyed_on,system,storeys_above,height_m,occupants_peak\nL1,street,N. N.,2026-06-03,timber-light-frame,4,?,25\nL2,street,,,concrete-shear-wall,,,\n';
       await takeAnswers(path, sheet(path, given), MADE);
       await takeAnswers(path, sheet(path, 'id,visit,system\nL1,desk,concrete-shear-wall\n'), MADE);
       const stated = async (): Promise<unknown> =>
@@ -231,6 +232,7 @@ describe('takeAnswers', () => {
         not_found: { system: 2, use: 1, year_built: 1 },
         on_record: 0,
         answered_later: 0,
+        not_read: [],
       });
       const after = await screened(path, ['L1', 'L2']);
       expect({ ...after, survey: null }).toEqual({ ...before, survey: null });
@@ -309,12 +311,93 @@ describe('takeAnswers', () => {
     db.close();
   });
 
+  it(
+    'refuses headings close to ours and columns that stand twice, and tells which others it does not read',
+    { timeout: 60_000 },
+    async () => {
+      const path = small();
+      await screened(path, ['L1']);
+      const of = (text: string): Promise<unknown> => takeAnswers(path, sheet(path, text), MADE);
+      const meant = (heading: string, at: number, ours: string): object => ({
+        place: { row: 1 },
+        message: `"${heading}", column ${String(at)}, is no column of a sheet of answers (did you mean "${ours}"?); write it so, or name it otherwise where something else is meant`,
+      });
+      await expect(
+        of('id,visit,system,hight_m,storeys,Remarks\nL1,street,steel-moment-frame,12,3,x\n'),
+      ).rejects.toMatchObject({
+        problems: [
+          meant('hight_m', 4, 'height_m'),
+          meant('storeys', 5, 'storeys_above'),
+          meant('Remarks', 6, 'remark'),
+        ],
+      });
+      await expect(of('ID,system\nL1,steel-moment-frame\n')).rejects.toMatchObject({
+        problems: [meant('ID', 1, 'id')],
+      });
+      await expect(of('id,system,id,use,system\nL1,x,L1,,\n')).rejects.toMatchObject({
+        problems: [
+          { message: expect.stringMatching(/^"id" stands at the head of columns 1 and 3; keep/) as string },
+          { message: expect.stringMatching(/^"system" stands at the head of columns 2 and 5; keep/) as string },
+        ],
+      });
+      expect(await listAnswers(path)).toEqual([]);
+      // columns of the sheets that a plan writes are passed over; an owner's own, and those of an inventory that surveys do not answer, are told
+      const taken = await of(
+        'place,id,fid,name,group,lon,lat,rank,visit,find out,because, system ,storeys_below,Owner,,\n1,L1,7,A,B,1,1,1,street,x,y,steel-moment-frame,1,Town,z,\n',
+      );
+      expect(taken).toMatchObject({ columns: { system: 1 }, not_read: ['fid', 'storeys_below', 'Owner', 'column 15'] });
+    },
+  );
+
+  it(
+    'refuses a design coefficient beside drawings that show no design, and days and years to come',
+    { timeout: 60_000 },
+    async () => {
+      const path = small();
+      await screened(path, ['L1']);
+      const of = (text: string): Promise<unknown> => takeAnswers(path, sheet(path, text), MADE);
+      const head = 'id,design_base_shear_coefficient,design_level,surveyed_on,year_built\n';
+      await expect(of(`${head}L1,0.08,none,,\nL2,0.1,,,\nL2,,None,,\n`)).rejects.toMatchObject({
+        problems: [
+          {
+            place: { row: 2, columnName: 'design_level' },
+            message:
+              '"none" says that the drawings show no design for earthquakes, but row 2 gives design_base_shear_coefficient "0.08" for "L1"; keep the one that holds: leave the coefficient blank, or write working or strength',
+          },
+          {
+            place: { row: 4, columnName: 'design_level' },
+            message: expect.stringContaining('but row 3 gives') as string,
+          },
+        ],
+      });
+      // MADE is 9 o'clock UTC of 11 June 2026, when it is 12 June in no place yet but 23 o'clock of the 11th in the farthest
+      for (const day of ['2031-01-05', '2026-06-13', '13.6.2026', '2026-06-12'])
+        await expect(of(`${head}L1,0.08,working,${day},\n`), day).rejects.toMatchObject({
+          problems: [
+            {
+              place: { row: 2, columnName: 'surveyed_on' },
+              message: `"${day}" is a day to come; the sheet is taken on 2026-06-11: write the day of the visit, or leave the cell blank`,
+            },
+          ],
+        });
+      await expect(of(`${head}L1,,,2031-01-05,2030\n`)).rejects.toMatchObject({
+        problems: [
+          { place: { columnName: 'surveyed_on' } },
+          { message: expect.stringContaining('after 2026') as string },
+        ],
+      });
+      await expect(of(`${head}L1,,,3.5.2020,2022\n`)).rejects.toThrow('lies after 2020');
+      expect(await listAnswers(path)).toEqual([]);
+      expect(await of(`${head}L1,0.08,working,11/6/2026,2026\nL2,,none,2026-06-11,\n`)).toMatchObject({ answers: 4 });
+    },
+  );
+
   it('takes no sheet twice, but again what was withdrawn', { timeout: 60_000 }, async () => {
     const path = small();
     await screened(path, ['L1']);
     const take = (text: string): ReturnType<typeof takeAnswers> => takeAnswers(path, sheet(path, text), MADE);
     const head = 'id,system,year_built,use,visit,surveyor,surveyed_on\n';
-    const first = `${head}L1,concrete-shear-wall,1961,?,street,N. N.,2026-12-03\nL2,–,1970,,street,N. N.,2026-12-03\n`;
+    const first = `${head}L1,concrete-shear-wall,1961,?,street,N. N.,2026-06-03\nL2,–,1970,,street,N. N.,2026-06-03\n`;
     expect(await take(first)).toMatchObject({ answers: 3, not_found: { use: 1 }, on_record: 0 });
     expect(await take(first)).toEqual({
       answers: 0,
@@ -323,10 +406,11 @@ describe('takeAnswers', () => {
       not_found: {},
       on_record: 4,
       answered_later: 0,
+      not_read: [],
     });
     expect(await listAnswers(path)).toHaveLength(4);
     // another day is another answer, the sheet before it is old news, and a row that stands twice counts once
-    const later = `${head}L1,–,1962,,street,N. N.,2026-12-04\nL1,–,1962,,street,N. N.,2026-12-04\n`;
+    const later = `${head}L1,–,1962,,street,N. N.,2026-06-04\nL1,–,1962,,street,N. N.,2026-06-04\n`;
     expect(await take(later)).toMatchObject({ answers: 1, on_record: 1 });
     expect(await take(first)).toMatchObject({ answers: 0, on_record: 4, answered_later: 1 });
     const counting = async (): Promise<unknown> =>

@@ -245,6 +245,36 @@ describe('takeIn', () => {
     expect(building(intake, 'K')).toMatchObject({ lon: -122.1, year_retrofitted: 1990, count: 12 });
   });
 
+  it.each([undefined, 'id'])(
+    'takes a design coefficient over a level that says there is none, merged by %s',
+    async (merge_rows_by) => {
+      const columns = { id: 'id', design_base_shear_coefficient: 'c', design_level: 'l' };
+      const intake = await intakeOfText('id,c,l\nA,0.08,none\nB,,none\nC,0.1,working\nD,0.2,\n', {
+        columns,
+        ...(merge_rows_by === undefined ? {} : { merge_rows_by }),
+      });
+      expect(intake.findings.filter(({ code }) => code === 'coefficient-without-design')).toMatchObject([
+        {
+          row: 2,
+          id: 'A',
+          column_name: 'design_level',
+          value: 'none',
+          kind: 'note',
+          message: 'no design for earthquakes, but a design base shear coefficient of 0.08',
+          action:
+            'the coefficient is taken and its level counts as not stated; leave the coefficient blank, or give its level',
+        },
+      ]);
+      const kept = intake.buildings.map((one) => [one['design_base_shear_coefficient'], one['design_level']]);
+      expect(kept).toEqual([
+        [0.08, null],
+        [null, 'none'],
+        [0.1, 'working'],
+        [0.2, null],
+      ]);
+    },
+  );
+
   it('doubts storeys that only units give, or that are too few for the area', async () => {
     const columns = { id: 'id', name: 'name', storeys_above: 'n', floor_area_m2: 'a', use: 'u' };
     const units = (id: string, count: number, area: number, storeys: number): string =>

@@ -1,6 +1,8 @@
-import { relative, resolve } from 'node:path';
+import { join, relative, resolve } from 'node:path';
 import { EXIT } from '../../errors.js';
 import { reviewSheet } from '../../exports/review.js';
+import { spareReview } from '../../exports/filled-sheet.js';
+import { spareInputs } from '../../exports/spare-inputs.js';
 import { prepareFolder, writeSet } from '../../exports/write-set.js';
 import { chosenRun, withStudyDatabase } from '../../runs/open.js';
 import { findStudy } from '../find-study.js';
@@ -20,8 +22,10 @@ export async function review(options: Options): Promise<number> {
   const columns = terminalColumns();
   await withStudyDatabase(findStudy(options.study), async (db, loaded) => {
     const { run } = await chosenRun(db, loaded, options);
-    const sheet = await reviewSheet(db, run, options.sample, options.units);
     const output = prepareFolder(options.output ?? resolve(loaded.folder, loaded.study.output));
+    await spareInputs(loaded, output, ['review.csv']);
+    spareReview(join(output, 'review.csv'));
+    const sheet = await reviewSheet(db, run, options.sample, options.units);
     const [path = ''] = await writeSet(output, { 'review.csv': sheet.csv });
     printLines([
       ...wrap(`${sheet.drawn}.`, columns),

@@ -69,6 +69,7 @@ function takenSentences({
   not_found,
   on_record,
   answered_later,
+  not_read,
 }: TakenAnswers): readonly string[] {
   const missing = Object.values(not_found).reduce((sum, count) => sum + count, 0);
   const named = (counts: Readonly<Record<string, number>>): string =>
@@ -88,6 +89,9 @@ function takenSentences({
       : [
           `${counted(on_record, 'cell is', 'cells are')} on record already, with the same visit, surveyor, date and remark, and ${on_record === 1 ? 'is' : 'are'} not taken again${answered_later === 0 ? '' : `; ${String(answered_later)} of them ${answered_later === 1 ? 'was' : 'were'} answered later, and the later answer counts`}.`,
         ]),
+    ...(not_read.length === 0
+      ? []
+      : [`Not read, as they are no columns of a sheet of answers: ${clean(not_read.map(showValue).join(', '))}.`]),
     ...(answers === 0 && missing === 0 ? ['Nothing new is taken.'] : []),
     ...(answers === 0
       ? []
