@@ -26,6 +26,8 @@ import { prepareFolder, writeSet } from './write-set.js';
 export interface CheckOptions {
   /** Folder for rejects.csv; not written when left out. */
   readonly output?: string | undefined;
+  /** When it is checked: years after it are refused. Now when left out. */
+  readonly made?: Date;
   readonly onProgress?: (progress: { readonly step: string; readonly share: number }) => void;
   readonly onOpen?: (db: Database) => void;
 }
@@ -136,7 +138,7 @@ export async function checkStudy(path: string, options: CheckOptions = {}): Prom
           options.onProgress?.({ step, share: NaN });
         },
         begin,
-        answers,
+        { answers, made: options.made ?? new Date() },
       ),
     );
     const { inventoryId } = taken;

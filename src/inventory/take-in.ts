@@ -32,6 +32,7 @@ import type { Source } from './source.js';
 import { storeBuildings } from './store-buildings.js';
 import { openTable } from './table.js';
 import type { Table } from './table.js';
+import { presentYear, refusedYears, until } from './years-to-come.js';
 
 /** Goes into the fingerprint: an intake that reads differently is another inventory. */
 const INTAKE_VERSION = 8;
@@ -49,9 +50,16 @@ export interface TakenIn {
 
 export type IntakeStep = 'opening' | 'reading' | 'casting' | 'checking' | 'storing';
 
+export interface TakeInOptions {
+  /** The answers of surveys laid over it; those that the database keeps when left out. */
+  readonly answers?: readonly Answer[];
+  /** When it is taken in: years after it are refused. None is when left out. */
+  readonly made?: Date;
+}
+
 /**
  * Takes an inventory into the database, inside the caller's transaction, which `begin` begins where it has not yet; paths are
- * relative to `folder`. `found` are the answers of surveys laid over it; those that `db` keeps when left out.
+ * relative to `folder`.
  * @throws UserError when the file, its header or the mapping is at fault, or no row is a building.
  */
 export async function takeIn(
@@ -60,22 +68,31 @@ export async function takeIn(
   folder: string,
   progress: (step: IntakeStep) => void = () => undefined,
   begin: () => Promise<void> = () => Promise.resolve(),
-  found?: readonly Answer[],
+  { answers: found, made }: TakeInOptions = {},
 ): Promise<TakenIn> {
   progress('opening');
   const path = at(folder, study.inventory.file);
   const source = inspectSource(path, study.inventory.encoding);
   const pairs = study.neighbours === undefined ? undefined : inspectNeighbours(at(folder, study.neighbours.file));
   const answers = found ?? (await currentAnswers(db));
+  const year = made === undefined ? Infinity : presentYear(made);
   const inventoryId = fingerprint(source, pairs, study, answers);
-  if ((await db.value('SELECT count(*) FROM inventory WHERE inventory_id = ?', [inventoryId])) === 1)
-    return readTaken(db, inventoryId);
+  // an inventory with years to come is another one when they have come
+  const datedId = fingerprint(source, pairs, study, answers, year);
+  for (const id of [inventoryId, datedId])
+    if ((await db.value('SELECT count(*) FROM inventory WHERE inventory_id = ?', [id])) === 1) return readTaken(db, id);
 
   progress('reading');
   const table = openTable(db, source, study.inventory.delimiter);
   try {
-    const mapping = mapHeader(table.header, { ...study.inventory, file: path });
-    return await takeTable(db, study, { source, pairs, table, mapping, inventoryId, answers }, progress, begin);
+    const mapping = until(year, mapHeader(table.header, { ...study.inventory, file: path }));
+    return await takeTable(
+      db,
+      study,
+      { source, pairs, table, mapping, inventoryId, datedId, answers },
+      progress,
+      begin,
+    );
   } finally {
     table.remove();
     await dropScratch(db);
@@ -88,6 +105,8 @@ interface Parts {
   readonly table: Table;
   readonly mapping: Mapping;
   readonly inventoryId: string;
+  /** Where years are refused because they are to come. */
+  readonly datedId: string;
   readonly answers: readonly Answer[];
 }
 
@@ -98,7 +117,7 @@ async function takeTable(
   progress: (step: IntakeStep) => void,
   begin: () => Promise<void>,
 ): Promise<TakenIn> {
-  const { source, pairs, table, inventoryId, answers } = parts;
+  const { source, pairs, table, answers } = parts;
   if (table.written + table.rejects.length === 0) {
     const message = `the table has a header (${table.header.length} columns) and no rows; add a row for each building below it`;
     throw new UserError(message, { file: source.path });
@@ -112,6 +131,7 @@ async function takeTable(
   const readings = await readOddCells(db, mapping, study);
   await decideFates(db, table, mapping);
   await makeBuildings(db, mapping, readings, source.path);
+  const inventoryId = (await refusedYears(db, mapping)) ? parts.datedId : parts.inventoryId;
 
   progress('checking');
   const sizes = await readSizes(db, mapping);
@@ -170,6 +190,7 @@ function fingerprint(
   pairs: Source | undefined,
   study: IntakeStudy,
   answers: readonly Answer[],
+  year = Infinity,
 ): string {
   const found = answersFingerprint(answers);
   const {
@@ -183,6 +204,7 @@ function fingerprint(
     words: study.words,
     pairs: pairs?.hash.copy().digest('hex') ?? null,
     ...(found === null ? {} : { answers: found }),
+    ...(year === Infinity ? {} : { years_until: year }),
   });
   return source.hash.copy().update(rest, 'utf8').digest('hex').slice(0, 16);
 }

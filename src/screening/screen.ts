@@ -59,6 +59,7 @@ export async function screen(db: Database, loaded: LoadedStudy, options: ScreenO
         report(step);
       },
       begin,
+      { made: options.made },
     );
     await begin();
     return keepRun(db, loaded, first, taken, options, report);
