@@ -157,25 +157,6 @@ describe('swaymark screen', () => {
     for (const file of told.files) expect(existsSync(file)).toBe(true);
   });
 
-  it('leaves earlier runs and reports whole when it is killed, and clears up after it', async () => {
-    const reports = join(demo.folder, 'reports');
-    const before = readdirSync(reports).map((name) => [name, readFileSync(join(reports, name)).length]);
-    // moments throughout a run are in kill.test.ts
-    for (const pause of [400]) {
-      const running = startSwaymark(['screen', 'study.yaml', '--output', 'reports'], demo.folder);
-      await new Promise((resolve) => setTimeout(resolve, pause));
-      running.kill('SIGKILL');
-      await running.ended;
-      const runs = json(['runs', '--json'], demo.folder) as { run: number }[];
-      expect(runs.map(({ run }) => run)).toEqual(runs.map((_, i) => i + 1));
-      for (const [name, length] of before)
-        expect(readFileSync(join(reports, String(name))).length).toBeGreaterThan(Number(length) * 0.9);
-    }
-    writeFileSync(join(reports, '.swaymark-99999999-ranking.csv.part'), 'half');
-    expect(swaymark(['screen', 'study.yaml', '--output', 'reports'], { cwd: demo.folder }).code).toBe(0);
-    expect(readdirSync(reports).filter((name) => name.startsWith('.'))).toEqual([]);
-  }, 90_000);
-
   it('rolls back and exits with 130 when interrupted', async () => {
     const place = scratch();
     const rows = Array.from(

@@ -32,32 +32,38 @@ async function runs(): Promise<readonly { run_id: number; results: number }[]> {
 }
 
 describe('a killed run', () => {
-  it('leaves the earlier runs and reports whole, whenever it dies', { timeout: 400_000 }, async () => {
-    const started = Date.now();
-    expect(swaymark(['screen', 'study.yaml'], { cwd: folder }).code).toBe(0);
-    const whole_ms = Date.now() - started;
-    // another inventory each time, so that the whole intake is done again
-    const before = new Map(REPORTS.map((name) => [name, read(name)]));
-    for (const share of [0.3, 0.6, 0.9]) {
-      writeFileSync(
-        join(folder, 'inventory.csv'),
-        `${readFileSync(join(folder, 'inventory.csv'), 'utf8')}X${String(share)},late house,block 1,,,2,6,10,8,160,1950,,residential,C,\n`,
-      );
-      const child = startSwaymark(['screen', 'study.yaml'], folder);
-      await pause(whole_ms * share);
-      child.kill('SIGKILL');
-      const { signal } = await child.ended;
-      const kept = await runs();
-      // either it died in time and only complete runs stand, or it had finished
-      for (const { results } of kept) expect(results).toBeGreaterThanOrEqual(ROWS);
-      if (signal === 'SIGKILL' && kept.length === 1)
-        for (const name of REPORTS) expect(read(name).equals(before.get(name)!)).toBe(true);
-      // every report is whole: the page is closed, the table has its last row
-      expect(read('dashboard.html').toString('utf8').trimEnd().endsWith('</html>')).toBe(true);
-      expect(read('ranking.csv').toString('utf8').trimEnd().split('\n').length).toBeGreaterThan(ROWS);
-    }
-    expect(swaymark(['screen', 'study.yaml'], { cwd: folder }).code).toBe(0);
-    expect(readdirSync(join(folder, 'reports')).sort()).toEqual([...REPORTS].sort());
-    expect((await runs()).at(-1)?.results).toBeGreaterThanOrEqual(ROWS);
-  });
+  it(
+    'leaves the earlier runs and reports whole, whenever it dies, and what it left behind goes',
+    { timeout: 400_000 },
+    async () => {
+      const started = Date.now();
+      expect(swaymark(['screen', 'study.yaml'], { cwd: folder }).code).toBe(0);
+      const whole_ms = Date.now() - started;
+      // another inventory each time, so that the whole intake is done again
+      const before = new Map(REPORTS.map((name) => [name, read(name)]));
+      for (const share of [0.3, 0.6, 0.9]) {
+        writeFileSync(
+          join(folder, 'inventory.csv'),
+          `${readFileSync(join(folder, 'inventory.csv'), 'utf8')}X${String(share)},late house,block 1,,,2,6,10,8,160,1950,,residential,C,\n`,
+        );
+        const child = startSwaymark(['screen', 'study.yaml'], folder);
+        await pause(whole_ms * share);
+        child.kill('SIGKILL');
+        const { signal } = await child.ended;
+        const kept = await runs();
+        // either it died in time and only complete runs stand, or it had finished
+        for (const { results } of kept) expect(results).toBeGreaterThanOrEqual(ROWS);
+        if (signal === 'SIGKILL' && kept.length === 1)
+          for (const name of REPORTS) expect(read(name).equals(before.get(name)!)).toBe(true);
+        // every report is whole: the page is closed, the table has its last row
+        expect(read('dashboard.html').toString('utf8').trimEnd().endsWith('</html>')).toBe(true);
+        expect(read('ranking.csv').toString('utf8').trimEnd().split('\n').length).toBeGreaterThan(ROWS);
+      }
+      // what a run that died left half written goes with the next
+      writeFileSync(join(folder, 'reports', '.swaymark-99999999-ranking.csv.part'), 'half');
+      expect(swaymark(['screen', 'study.yaml'], { cwd: folder }).code).toBe(0);
+      expect(readdirSync(join(folder, 'reports')).sort()).toEqual([...REPORTS].sort());
+      expect((await runs()).at(-1)?.results).toBeGreaterThanOrEqual(ROWS);
+    },
+  );
 });

@@ -8,6 +8,7 @@ import { openStudyDatabase, screen } from '../../src/screening/screen.js';
 import type { Database } from '../../src/store/database.js';
 import { loadStudy } from '../../src/study/load.js';
 import { HOSTILE, scratch, writeSmallStudy } from '../support/cli.js';
+import { MADE } from '../support/study-folder.js';
 
 const place = scratch();
 const at = (name: string): string => join(place.folder, name);
@@ -24,7 +25,7 @@ beforeAll(async () => {
   ]);
   const loaded = await loadStudy(at('study.yaml'));
   db = await openStudyDatabase(loaded);
-  inventoryId = (await screen(db, loaded, { made: new Date(0) })).taken.inventoryId;
+  inventoryId = (await screen(db, loaded, { made: MADE })).taken.inventoryId;
   await writeRankingParquet(db, 1, at('ranking.parquet'));
   await writeRankingCsv(db, at('ranking.parquet'), at('si.csv'));
   await writeRankingCsv(db, at('ranking.parquet'), at('us.csv'), 'us');
