@@ -9,8 +9,8 @@ import type { YearPools } from '../engineering/building-columns.js';
 import { answerOf } from '../engineering/priority/exceedance.js';
 import type { SetAnswer, SetTask } from '../engineering/priority/exceedance.js';
 import type { Mixture } from '../engineering/priority/mixture.js';
-import { bandsOf } from '../engineering/priority/rank.js';
-import type { Bands } from '../engineering/priority/rank.js';
+import { bandsOf } from '../engineering/priority/rank-bands.js';
+import type { Bands } from '../engineering/priority/rank-bands.js';
 import type { HazardGrids } from '../engineering/spectrum/grid.js';
 import { Bug } from '../errors.js';
 import { BlockAssessor } from './assess-block.js';
@@ -62,7 +62,7 @@ export function startAssessor(threads: number): Assessor {
         ? Promise.reject(new Bug('a block before the settings'))
         : Promise.resolve(here.assess(unpackBlock(block))),
     answer: (set, of) => Promise.resolve(answerOf([set], of)),
-    bands: (mixtures, basis) => Promise.resolve(bandsOf(mixturesOf(mixtures), basis)),
+    bands: (mixtures, basis) => Promise.resolve(bandsOf(mixturesOf(mixtures), basis, basis.zone)),
     close: () => Promise.resolve(),
   };
 }

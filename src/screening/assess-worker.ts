@@ -3,8 +3,8 @@ import { parentPort } from 'node:worker_threads';
 import { compileContext } from '../engineering/assess/context.js';
 import { answerOf } from '../engineering/priority/exceedance.js';
 import type { SetAnswer } from '../engineering/priority/exceedance.js';
-import { bandsOf } from '../engineering/priority/rank.js';
-import type { Bands } from '../engineering/priority/rank.js';
+import { bandsOf } from '../engineering/priority/rank-bands.js';
+import type { Bands } from '../engineering/priority/rank-bands.js';
 import { Bug } from '../errors.js';
 import { BlockAssessor } from './assess-block.js';
 import type { BlockResult } from './assess-block.js';
@@ -18,7 +18,7 @@ let assessor: BlockAssessor | null = null;
 
 function workedOut(message: Exclude<ToThread, { kind: 'begin' }>): BlockResult | Bands | SetAnswer {
   if (message.kind === 'set') return answerOf([message.set], message.of);
-  if (message.kind === 'bands') return bandsOf(mixturesOf(message.mixtures), message.basis);
+  if (message.kind === 'bands') return bandsOf(mixturesOf(message.mixtures), message.basis, message.basis.zone);
   if (assessor === null) throw new Bug('a block before the settings');
   return assessor.assess(unpackBlock(message.block));
 }

@@ -1,6 +1,8 @@
 /** Ranks the assessed buildings: rank, chance, band and tie group as columns over the whole inventory. */
 import { basisOf, commonTo, fallingOrder, orderOf, rankAll, relativePriority } from '../engineering/priority/rank.js';
-import type { Bands, Ranking } from '../engineering/priority/rank.js';
+import type { Ranking } from '../engineering/priority/rank.js';
+import type { Bands } from '../engineering/priority/rank-bands.js';
+import { rungPlaces, rungsOf } from '../engineering/priority/rungs.js';
 import { tieGroups } from '../engineering/priority/tie-groups.js';
 import { drawShared, hasShared } from '../engineering/priority/shared.js';
 import type { SharedDraws } from '../engineering/priority/shared.js';
@@ -36,7 +38,8 @@ export async function rankInventory(
 ): Promise<Ranked> {
   const { index, id, mixtures, median, people, demand, shared } = assessed;
   const input = { id, mixtures, median, people, shared };
-  const draws = hasShared(shared) ? drawShared(mixtures, shared, listSize, seed) : null;
+  const places = rungPlaces(id.length);
+  const draws = hasShared(shared) ? drawShared(mixtures, shared, listSize, seed, places) : null;
   const common = commonTo(input, { draws });
   if (common !== undefined) seeFromEdge(assessed.flat, common);
   const found = basisBy(assessor, assessed, listSize);
@@ -47,9 +50,16 @@ export async function rankInventory(
   const { numbers, wholes, words } = columns;
   const medianOfPortfolio = n === 0 ? 0 : median[order[Math.floor((n - 1) / 2)]!]!;
   fillDemandRanks(columns, index, demand);
-  const basis = { order, mixtures, draws, ...(await found) };
-  const { curve, threshold } = basis;
-  const parts = Promise.all(assessed.flat.map((flat) => assessor.bands(flat, { curve, threshold })));
+  const { curve, threshold } = await found;
+  const edge = { curve, threshold, rungs: rungsOf(places, curve, order, mixtures, common) };
+  const basis = { order, mixtures, draws, ...edge };
+  let first = 0;
+  const parts = Promise.all(
+    assessed.flat.map((flat) => {
+      const zone = common?.shared.zone.slice(first, (first += flat.start.length - 1));
+      return assessor.bands(flat, { ...edge, zone });
+    }),
+  );
   // and again
   const groups = tieGroups(order, mixtures, common);
   const priority = numbers['priority']!;

@@ -3,7 +3,7 @@ import type { AssessSettings } from '../engineering/assess/settings.js';
 import type { YearPools } from '../engineering/building-columns.js';
 import type { SetAnswer, SetTask } from '../engineering/priority/exceedance.js';
 import type { Mixture } from '../engineering/priority/mixture.js';
-import type { Bands, RankBasis } from '../engineering/priority/rank.js';
+import type { Bands, Edge } from '../engineering/priority/rank-bands.js';
 import type { HazardGrid, HazardGrids } from '../engineering/spectrum/grid.js';
 import { Bug } from '../errors.js';
 import { coded, decoded } from './assess-block.js';
@@ -17,7 +17,10 @@ export type Packed =
   | { readonly kind: 'no numbers' | 'no texts' }
   | { readonly kind: 'record'; readonly entries: Readonly<Record<string, Packed>> };
 
-export type BandBasis = Pick<RankBasis, 'curve' | 'threshold'>;
+/** What the bands of a set of mixtures are read from, with the zones of its buildings where errors are common. */
+export interface BandBasis extends Edge {
+  readonly zone: Uint16Array | undefined;
+}
 
 export type ToThread =
   | {

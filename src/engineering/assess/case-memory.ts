@@ -65,8 +65,8 @@ export interface Irregularity {
   /** Mean and variance of ln of the factor of the others. */
   readonly lnRest: number;
   readonly varianceRest: number;
-  /** Two states of the others with their chances, as far from the mean of ln of their factor as keeps mean, variance and skewness; none where all is known. */
-  readonly statesRest: readonly { readonly chance: number; readonly ln: number }[];
+  /** States of the others with their chances: ln of their factor from the mean, and its variance within; none where all is known. */
+  readonly statesRest: readonly { readonly chance: number; readonly ln: number; readonly variance: number }[];
   /** The whole factor at its central value, without a soft or weak storey and with one. */
   readonly central: readonly [number, number];
 }

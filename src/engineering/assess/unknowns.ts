@@ -48,11 +48,12 @@ export function unknownsOf(building: Building, context: AssessContext, scratch: 
   const { parts, cellOf, stateOf } = withStates(gathered(scratch.score.raw(), told), irregularity, slope_k);
   const numbered = (valueOf: (cell: Cell, state: number) => string | number): Int32Array | null => {
     const numbers = new Map<string | number, number>();
-    // the parts of a cell are many: each of its two states is asked once
-    const asked = new Int32Array(2 * told.length).fill(-1);
+    // the parts of a cell are many: each of its states is asked once
+    const states = Math.max(1, irregularity.statesRest.length);
+    const asked = new Int32Array(states * told.length).fill(-1);
     const values = new Int32Array(cellOf.length);
     for (let i = 0; i < cellOf.length; i += 1) {
-      const at = 2 * cellOf[i]! + stateOf[i]!;
+      const at = states * cellOf[i]! + stateOf[i]!;
       if (asked[at]! < 0) {
         const value = valueOf(told[cellOf[i]!]!, stateOf[i]!);
         asked[at] = numbers.get(value) ?? numbers.size;
@@ -85,7 +86,7 @@ export function unknownsOf(building: Building, context: AssessContext, scratch: 
   if (open)
     add(
       'irregularity',
-      numbered(({ storey }, state) => 2 * storey + state),
+      numbered(({ storey }, state) => `${String(storey)} ${String(state)}`),
       0,
     );
   if (settings.rankBy === 'people') addPeople(building, context, people.sigma, learnable);
@@ -167,7 +168,7 @@ function gathered(nodes: Mixture, cells: readonly Cell[]): Parted {
   return { parts, cellOf: Int32Array.from(cellOf) };
 }
 
-/** A soft or weak storey parts the cells; the other irregularities, gathered in the spread until here, part them once more by two states. */
+/** A soft or weak storey parts the cells; the other irregularities, gathered in the spread until here, part them once more by their states. */
 function withStates(
   { parts, cellOf }: Parted,
   { statesRest, varianceRest }: Irregularity,
@@ -175,24 +176,24 @@ function withStates(
 ): Parted & { readonly stateOf: Int32Array } {
   if (statesRest.length === 0) return { parts, cellOf, stateOf: new Int32Array(cellOf.length) };
   const n = cellOf.length;
-  const variance = slope_k * slope_k * varianceRest;
-  const twice = { weight: new Float64Array(2 * n), mean: new Float64Array(2 * n), sd: new Float64Array(2 * n) };
-  const label = new Uint8Array(2 * n);
-  const cells = new Int32Array(2 * n);
-  const stateOf = new Int32Array(2 * n).fill(1, n);
-  label.set(parts.label);
-  label.set(parts.label, n);
-  cells.set(cellOf);
-  cells.set(cellOf, n);
-  for (const [state, { chance, ln: lnState }] of statesRest.entries())
+  const room = (): Float64Array => new Float64Array(statesRest.length * n);
+  const all = { weight: room(), mean: room(), sd: room(), label: new Uint8Array(statesRest.length * n) };
+  const cells = new Int32Array(statesRest.length * n);
+  const stateOf = new Int32Array(statesRest.length * n);
+  statesRest.forEach(({ chance, ln: lnState, variance }, state) => {
+    const taken = slope_k * slope_k * (varianceRest - variance);
+    const from = state * n;
+    all.label.set(parts.label, from);
+    cells.set(cellOf, from);
+    stateOf.fill(state, from, from + n);
     for (let i = 0; i < n; i += 1) {
-      const at = state * n + i;
-      twice.weight[at] = parts.weight[i]! * chance;
+      all.weight[from + i] = parts.weight[i]! * chance;
       // a capacity times a factor divides S by its k-th power
-      twice.mean[at] = parts.mean[i]! - slope_k * lnState;
-      twice.sd[at] = Math.sqrt(Math.max(parts.sd[i]! * parts.sd[i]! - variance, 0));
+      all.mean[from + i] = parts.mean[i]! - slope_k * lnState;
+      all.sd[from + i] = Math.sqrt(Math.max(parts.sd[i]! * parts.sd[i]! - taken, 0));
     }
-  return { parts: { ...twice, label, from: 0, to: 2 * n }, cellOf: cells, stateOf };
+  });
+  return { parts: { ...all, from: 0, to: all.label.length }, cellOf: cells, stateOf };
 }
 
 /**

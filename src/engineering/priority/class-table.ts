@@ -24,6 +24,8 @@ export class ClassTable {
   /** The edge with no class moved, for the one number of places that is asked for. */
   #unmoved: number | null = null;
   readonly #step: number;
+  /** Room for the sum of moved classes. */
+  #sum = new Float64Array(0);
   /** By class: the expected number of its buildings above each point. */
   readonly #above: readonly Float64Array[];
 
@@ -93,6 +95,36 @@ export class ClassTable {
     }
     // it moves no farther than the classes do
     return this.#between(places, shift, this.#unmoved + least, this.#unmoved + most);
+  }
+
+  /**
+   * The same for each of `places`, rising, into `out`, to the distance of the points of a table: the classes, moved, are summed first.
+   */
+  edges(places: Float64Array, shift: Float64Array, out: Float64Array): void {
+    let [least, most] = [Infinity, -Infinity];
+    for (const one of shift) {
+      if (one < least) least = one;
+      if (one > most) most = one;
+    }
+    const points = POINTS + Math.ceil((most - least) / this.#step) + 1;
+    if (this.#sum.length < points) this.#sum = new Float64Array(points);
+    const sum = this.#sum.fill(0, 0, points);
+    this.#above.forEach((above, c) => {
+      const moved = (shift[c]! - least) / this.#step;
+      const whole = Math.floor(moved);
+      const f = moved - whole;
+      for (let j = 0; j <= whole; j += 1) sum[j]! += above[0]!;
+      // above[i - 1] and above[i] stand on both sides of the point
+      for (let i = 1; i < POINTS; i += 1) sum[whole + i]! += above[i]! + f * (above[i - 1]! - above[i]!);
+      sum[whole + POINTS]! += f * above[POINTS - 1]!;
+    });
+    let j = points - 1;
+    places.forEach((r, rung) => {
+      while (j > 0 && sum[j]! < r) j -= 1;
+      const fall = j < points - 1 ? sum[j]! - sum[j + 1]! : 0;
+      const over = fall > 0 ? Math.min(1, Math.max(0, (sum[j]! - r) / fall)) : 0;
+      out[rung] = this.#low + least + this.#step * (j + over);
+    });
   }
 
   #between(places: number, shift: Float64Array, from: number, to: number): number {

@@ -3,13 +3,15 @@
  * Order by median; chance of belonging to the first n; rank band; tie groups; expected wrong places.
  */
 import { exp } from '../numeric/elementary.js';
-import { mixtureCdf, mixtureQuantile } from './mixture.js';
 import type { Mixture } from './mixture.js';
-import { aboveThreshold, answerOf, countAbove, countFrom, exceedance, sharedChances, threshold } from './exceedance.js';
-import type { AboveThreshold, Exceedance, SetAnswer, SetTask } from './exceedance.js';
+import { answerOf, exceedance, sharedChances, threshold } from './exceedance.js';
+import type { SetAnswer, SetTask } from './exceedance.js';
+import { bandsOf } from './rank-bands.js';
+import type { Bands, Edge } from './rank-bands.js';
 import { changedMixture, changesOf, drawShared, hasShared } from './shared.js';
 import type { Common, SharedDraws } from './shared.js';
 import { averagedChances, keptOf, wrongVariance } from './shared-chances.js';
+import { rungPlaces, rungsOf, withoutBuilding } from './rungs.js';
 import type { SharedErrors } from './shared-errors.js';
 import { SIMULATED_UNDER, simulate } from './simulate.js';
 import type { Simulated } from './simulate.js';
@@ -101,26 +103,20 @@ export function orderOf({ id, median, people }: RankInput<readonly string[] | In
 }
 
 /** What the chances and bands of every building are read from. */
-export interface RankBasis {
+export interface RankBasis extends Edge {
   readonly order: Int32Array;
   /** Distributions of ln S as seen from the edge of the list: what is common to all has no part in them. */
   readonly mixtures: readonly Mixture[];
   /** Draws of the common errors; null where there are none. */
   readonly draws: SharedDraws | null;
-  readonly curve: Exceedance;
-  /** ln S at which the list ends; -Infinity when it holds every building. */
-  readonly threshold: number;
 }
-
-/** What the bands of single buildings are read from. */
-export type Edge = Pick<RankBasis, 'curve' | 'threshold'>;
 
 /** Expected numbers above and threshold of a list of `listSize` places: yields tasks, takes the answers of all sets of mixtures to each. */
 export function* basisOf(
   mixtures: readonly Mixture[],
   count: number,
   listSize: number,
-): Generator<SetTask, Edge, readonly SetAnswer[]> {
+): Generator<SetTask, Pick<Edge, 'curve' | 'threshold'>, readonly SetAnswer[]> {
   const curve = yield* exceedance(mixtures, count);
   return { curve, threshold: listSize >= count ? -Infinity : yield* threshold(listSize, curve) };
 }
@@ -128,33 +124,16 @@ export function* basisOf(
 /** The same with the order, of all mixtures as one set; common errors are drawn with `seed`. */
 export function rankBasis(input: RankInput<readonly string[] | Int32Array>, listSize: number, seed: number): RankBasis {
   const { id, shared } = input;
-  const draws = hasShared(shared) ? drawShared(input.mixtures, shared, listSize, seed) : null;
+  const rungs = rungPlaces(id.length);
+  const draws = hasShared(shared) ? drawShared(input.mixtures, shared, listSize, seed, rungs) : null;
   const common = commonTo(input, { draws });
   const mixtures =
     common === undefined ? input.mixtures : input.mixtures.map((m, i) => changedMixture(m, changesOf(common, i)));
   const steps = basisOf(mixtures, id.length, listSize);
   let next = steps.next();
   while (next.done !== true) next = steps.next([answerOf(mixtures, next.value)]);
-  return { order: orderOf(input), mixtures, draws, ...next.value };
-}
-
-/** Chance and ends of the band of some of the buildings, in closed form; the chances still without those tied at the threshold. */
-export interface Bands extends AboveThreshold {
-  readonly rankBest: Int32Array;
-  readonly rankWorst: Int32Array;
-}
-
-/** The bands of `mixtures`, all of the buildings or some. */
-export function bandsOf(mixtures: readonly Mixture[], { curve, threshold: x }: Edge): Bands {
-  const rankBest = new Int32Array(mixtures.length);
-  const rankWorst = new Int32Array(mixtures.length);
-  mixtures.forEach((m, i) => {
-    const high = mixtureQuantile(m, 0.95, Z95, 1e-2);
-    const low = mixtureQuantile(m, 0.05, -Z95, 1e-2);
-    rankBest[i] = bandEnd(countAbove(curve, high), m, high, curve.n, AT);
-    rankWorst[i] = bandEnd(countFrom(curve, low), m, low, curve.n, -AT);
-  });
-  return { ...aboveThreshold(mixtures, x), rankBest, rankWorst };
+  const order = orderOf(input);
+  return { order, mixtures, draws, ...next.value, rungs: rungsOf(rungs, next.value.curve, order, mixtures, common) };
 }
 
 /** Ranks `input` with a list of `listSize` places (at least 1); under 200 buildings chances and bands are simulated from `seed`. */
@@ -177,7 +156,7 @@ export function rankAll(
       ? simulate(Array.from<string | number>(input.id).map(String), mixtures, listed, listSize, seed, common)
       : null;
   const { chance, rankBest, rankWorst } =
-    simulated ?? closed(bands ?? bandsOf(mixtures, basis), mixtures, listSize, common);
+    simulated ?? closed(bands ?? bandsOf(mixtures, basis, common?.shared.zone), basis, listSize, common);
   // the rank itself lies in its band, also where equal medians or few buildings would put it a place outside
   for (let i = 0; i < n; i += 1) {
     rankBest[i] = Math.min(rankBest[i]!, rank[i]!);
@@ -220,29 +199,40 @@ export function commonTo(
   return shared === undefined || draws === null ? undefined : { shared, draws };
 }
 
+/** At this many places from an end of the order a building's own chance is no matter any more. */
+const NEAR_END = 16;
+
+/** The bands with those of the first and the last buildings read from the others alone. */
+function atEnds(
+  bands: Bands,
+  { order, mixtures, curve, threshold: x, rungs }: RankBasis,
+  common: Common | undefined,
+): Bands {
+  if (rungs === null) return bands;
+  for (const i of [...order.subarray(0, NEAR_END), ...order.subarray(-NEAR_END)]) {
+    const others = withoutBuilding(rungs, mixtures[i]!, i, order.length, common);
+    const own = bandsOf([mixtures[i]!], { curve, threshold: x, rungs: others }, common?.shared.zone.subarray(i));
+    bands.rankBest[i] = own.rankBest[0]!;
+    bands.rankWorst[i] = own.rankWorst[0]!;
+  }
+  return bands;
+}
+
 function closed(
-  { rankBest, rankWorst, ...above }: Bands,
-  mixtures: readonly Mixture[],
+  bands: Bands,
+  basis: RankBasis,
   listSize: number,
   common: Common | undefined,
 ): Pick<Simulated, 'chance' | 'rankBest' | 'rankWorst'> {
+  const { rankBest, rankWorst } = atEnds(bands, basis, common);
   const n = rankBest.length;
   if (listSize >= n) return { chance: new Float64Array(n).fill(1), rankBest, rankWorst };
-  const chance = sharedChances(above, listSize);
+  const chance = sharedChances(bands, listSize);
   return {
-    chance: common === undefined ? chance : averagedChances(chance, mixtures, common, listSize),
+    chance: common === undefined ? chance : averagedChances(chance, basis.mixtures, common, listSize),
     rankBest,
     rankWorst,
   };
-}
-
-/** Where parts have no spread the best rank counts only those above, the worst those at the same place too. */
-const AT = 1e-9;
-
-/** Expected rank of a building whose ln S is x: one more than the others expected above it, of `count` with its own share. */
-function bandEnd(count: number, own: Mixture, x: number, n: number, at: number): number {
-  const others = count - (1 - mixtureCdf(own, x + at));
-  return Math.min(n, Math.max(1, Math.round(1 + others)));
 }
 
 function largestBlock(order: Int32Array, median: ArrayLike<number>): number {

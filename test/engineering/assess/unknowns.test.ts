@@ -166,7 +166,7 @@ describe('unknownsOf', () => {
     ]);
   });
 
-  it('tells a soft or weak storey apart, and two states of the other irregularities', () => {
+  it('tells a soft or weak storey apart, and three states of the other irregularities', () => {
     const blank = building({ system: 'concrete-moment-frame', years: [1958] });
     const { parts, learnable } = found(blank);
     const { values, tau } = learnable.find(({ unknown }) => unknown === 'irregularity')!;
@@ -208,12 +208,20 @@ describe('unknownsOf', () => {
       const mean = states.reduce((sum, [p, x]) => sum + p * x, 0);
       return states.reduce((sum, [p, x]) => sum + p * (x - mean) ** power, 0);
     };
-    // numbered as they come: without and with a storey in the one state, then in the other
-    const states = [0, 2].map((value) => {
-      const { chance, mean } = classMoments({ parts, learnable }, 'irregularity', value);
-      return [chance / 0.765, mean] as const;
-    });
-    for (const power of [2, 3]) expect(central(states, power)).toBeCloseTo(central(combinations, power), 10);
+    // numbered as they come: without and with a storey in one state, then in the next
+    const moments = [0, 2, 4].map((value) => classMoments({ parts, learnable }, 'irregularity', value));
+    const states = moments.map(({ chance, mean }) => [chance / 0.765, mean] as const);
+    expect(states.reduce((sum, [p]) => sum + p, 0)).toBeCloseTo(1, 12);
+    // the likeliest is none of the four, by itself
+    const none4 = others.reduce((product, [chance]) => product * (1 - chance), 1);
+    expect(Math.max(...states.map(([p]) => p))).toBeCloseTo(none4, 12);
+    // what the states do not part stays in their spread: nothing is lost
+    const within = moments.reduce((sum, { chance, sd }) => sum + (chance / 0.765) * sd * sd, 0);
+    expect(central(states, 2) + within).toBeCloseTo(none.sd * none.sd, 10);
+    // and it is little
+    expect(central(states, 2) / central(combinations, 2)).toBeGreaterThan(0.93);
+    expect(central(states, 2)).toBeLessThanOrEqual(central(combinations, 2) + 1e-12);
+    expect(central(states, 3) / central(combinations, 3)).toBeGreaterThan(0.7);
   });
 
   it('asks for no irregularity where the row answers all six, or the building is assessed', () => {

@@ -6,6 +6,7 @@ import { rankAll } from '../../../src/engineering/priority/rank.js';
 import type { RankInput, Ranking } from '../../../src/engineering/priority/rank.js';
 import type { SharedErrors } from '../../../src/engineering/priority/shared-errors.js';
 import { changedMixture } from '../../../src/engineering/priority/shared.js';
+import { bandsAgainst, countRanks } from '../../support/engineering-bands.js';
 import { normalOf, randomMixtures, rankInput } from '../../support/engineering-mixture.js';
 import { random } from '../../support/engineering-random.js';
 import { largestAbove } from '../../support/engineering-select.js';
@@ -45,6 +46,8 @@ const counting = (own: readonly Mixture[], { zones, zone }: SharedErrors): reado
 interface Drawn {
   readonly chance: Float64Array;
   readonly wrong: readonly number[];
+  /** Draws by rank, of each building. */
+  readonly ranks: readonly Uint32Array[];
 }
 
 /** `own` are the mixtures without any common error. */
@@ -55,6 +58,7 @@ function drawn(own: readonly Mixture[], shared: SharedErrors, ranking: Ranking, 
   const score = new Float64Array(n);
   const work = new Float64Array(n);
   const wrong: number[] = [];
+  const ranks = own.map(() => new Uint32Array(n + 1));
   for (let d = 0; d < DRAWS; d += 1) {
     const ofLabel = shared.labels.map(() => normal());
     const ofZone = shared.zones.map(() => normal());
@@ -72,11 +76,12 @@ function drawn(own: readonly Mixture[], shared: SharedErrors, ranking: Ranking, 
       const common = era + siteLoad * ofZone[zone]!;
       score[i] = mean[k]! + sd[k]! * normal() + common;
     }
+    countRanks(score, ranks);
     const edge = largestAbove(score, places, work);
     for (let i = 0; i < n; i += 1) if (score[i]! >= edge) inside[i]! += 1;
     wrong.push(ranking.order.subarray(0, places).reduce((sum, i) => sum + (score[i]! >= edge ? 0 : 1), 0));
   }
-  return { chance: inside.map((count) => count / DRAWS), wrong: wrong.sort((a, b) => a - b) };
+  return { chance: inside.map((count) => count / DRAWS), wrong: wrong.sort((a, b) => a - b), ranks };
 }
 
 const withShared = (own: readonly Mixture[], shared: SharedErrors): RankInput => ({
@@ -111,31 +116,36 @@ describe('errors that buildings have in common', () => {
     [600, 60, 0.9, 0.7],
     [150, 20, 0.9, 0.6],
   ])(
-    'of %i buildings with a list of %i give the chances of drawing them: loads %d and %d',
+    'of %i buildings with a list of %i give the chances and bands of drawing them: loads %d and %d',
     (count, places, era, site) => {
       const own = labelled(count, 22);
       const shared = sharedBy(count, era, site, 23);
       const ranking = rankAll(withShared(own, shared), places, 1);
-      const { chance, wrong } = drawn(own, shared, ranking, places);
+      const { chance, wrong, ranks } = drawn(own, shared, ranking, places);
+      // under 200 chances and bands are themselves drawn, 20,000 times
+      const twice = count < 200 ? Math.sqrt(1 + DRAWS / 20_000) : 1;
+      const { bandsBeyond, bandsLargest } = bandsAgainst(ranks, ranking.rankBest, ranking.rankWorst, DRAWS, twice);
       let beyond = 0;
       let largest = 0;
       chance.forEach((p, i) => {
         const gap = Math.abs(p - ranking.chance[i]!);
         largest = Math.max(largest, gap);
-        // under 200 the chances are themselves drawn, 20,000 times
-        const twice = count < 200 ? Math.sqrt(1 + DRAWS / 20_000) : 1;
         if (gap > 3 * twice * Math.max(Math.sqrt((p * (1 - p)) / DRAWS), 1 / DRAWS)) beyond += 1;
       });
       const at = (q: number): number => wrong[Math.floor(q * DRAWS)]!;
       const figures = JSON.stringify({
         beyond,
         largest,
+        bandsBeyond,
+        bandsLargest,
         range: [ranking.wrongLow, ranking.wrongHigh],
         drawn: [at(0.05), at(0.95)],
       });
       if (process.env['SWAYMARK_SHOW'] !== undefined) process.stdout.write(`${figures}\n`);
       expect(beyond, figures).toBeLessThanOrEqual(0.01 * count);
       expect(largest, figures).toBeLessThanOrEqual(0.02);
+      expect(bandsBeyond, figures).toBeLessThanOrEqual(0.01 * count);
+      expect(bandsLargest, figures).toBeLessThanOrEqual(0.02);
       expect(Math.abs(ranking.wrongLow - at(0.05)), figures).toBeLessThanOrEqual(1);
       expect(Math.abs(ranking.wrongHigh - at(0.95)), figures).toBeLessThanOrEqual(1);
     },
