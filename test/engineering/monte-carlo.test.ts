@@ -155,7 +155,7 @@ describe('assess and rankAll', () => {
         for (const row of score) {
           const edge = largestAbove(row, list, work);
           for (const i of alive) if (row[i]! >= edge) inside[i]! += 1;
-          if (done < LATER) countRanks(row, ranks);
+          if (done < LATER) countRanks(row, ranks, work);
         }
       }
       const twice = (drawn: number): number => (buildings < 200 ? Math.sqrt(1 + drawn / SIMULATED_DRAWS) : 1);

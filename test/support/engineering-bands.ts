@@ -10,10 +10,19 @@ export function offAt(end: number, q: number, counts: Uint32Array): number {
   return Math.max(0, before / draws - q, q - (before + counts[end]!) / draws);
 }
 
-/** Adds a draw of all scores to the counts by rank of each building. */
-export function countRanks(score: Float64Array, ranks: readonly Uint32Array[]): void {
-  const order = Array.from(score.keys()).sort((a, b) => score[b]! - score[a]!);
-  order.forEach((i, place) => (ranks[i]![place + 1]! += 1));
+/** Adds a draw of all scores to the counts by rank of each building; `work` is room of as many numbers. */
+export function countRanks(score: Float64Array, ranks: readonly Uint32Array[], work: Float64Array): void {
+  work.set(score);
+  work.sort();
+  score.forEach((one, i) => {
+    let [low, high] = [0, work.length];
+    while (low < high) {
+      const middle = (low + high) >> 1;
+      if (work[middle]! > one) high = middle;
+      else low = middle + 1;
+    }
+    ranks[i]![work.length - low + 1]! += 1;
+  });
 }
 
 /**

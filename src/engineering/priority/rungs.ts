@@ -45,7 +45,7 @@ export interface Rungs extends Chance {
 }
 
 /** Buildings that stand for their neighbours in the order, at each distance from its ends. */
-const EACH = 256;
+const EACH = 128;
 
 const RUNGS = 48;
 
@@ -70,9 +70,11 @@ export function rungsOf(
   const seen = Float64Array.from(places, (r) => curveAt(curve, r)).reverse();
   const x = common === undefined ? seen : common.draws.rungs.x;
   const spoken = spokesmen(order.length);
-  const above = Array.from(x, (at) =>
-    summedUp(spoken.map(({ place, weight }) => aboveOf(mixtures[order[place]!]!, order[place]!, at, common, weight))),
-  );
+  const above = Array.from(x, (at) => {
+    const sum = { count: 0, variance: 0, third: 0 };
+    for (const { place, weight } of spoken) addAbove(sum, mixtures[order[place]!]!, order[place]!, at, common, weight);
+    return sum;
+  });
   return {
     x,
     toCurve: seen.map((y, rung) => y - x[rung]!),
@@ -92,12 +94,9 @@ export function withoutBuilding(
   common: Common | undefined,
 ): Rungs {
   const above = rungs.above.map((all, rung) => {
-    const own = aboveOf(mixture, i, rungs.x[rung]!, common, 1);
-    return {
-      count: all.count - own.count,
-      variance: Math.max(0, all.variance - own.variance),
-      third: all.third - own.third,
-    };
+    const others = { ...all };
+    addAbove(others, mixture, i, rungs.x[rung]!, common, -1);
+    return { ...others, variance: Math.max(0, others.variance) };
   });
   return { ...rungs, above, ...chanceOf(rungs.x, above, n) };
 }
@@ -165,8 +164,15 @@ function spokesmen(n: number): readonly { readonly place: number; readonly weigh
   return all;
 }
 
-/** Whether building i stands above x, `times` over, for one draw of the common errors. */
-function aboveOf(mixture: Mixture, i: number, x: number, common: Common | undefined, times: number): Above {
+/** Adds to `sum` whether building i stands above x, `times` over, for one draw of the common errors. */
+function addAbove(
+  sum: { -readonly [K in keyof Above]: Above[K] },
+  mixture: Mixture,
+  i: number,
+  x: number,
+  common: Common | undefined,
+  times: number,
+): void {
   const { weight, mean, sd, from, to } = mixture;
   let above = 0;
   for (let k = from; k < to; k += 1) {
@@ -174,17 +180,10 @@ function aboveOf(mixture: Mixture, i: number, x: number, common: Common | undefi
     const gap = mean[k]! - x;
     above += weight[k]! * (own > 0 ? normalCdf(gap / own) : gap > 0 ? 1 : 0);
   }
-  const variance = above * (1 - above);
-  return { count: times * above, variance: times * variance, third: times * variance * (1 - 2 * above) };
-}
-
-function summedUp(all: readonly Above[]): Above {
-  const sum = (of: (one: Above) => number): number => all.reduce((total, one) => total + of(one), 0);
-  return {
-    count: sum(({ count }) => count),
-    variance: sum(({ variance }) => variance),
-    third: sum(({ third }) => third),
-  };
+  const variance = times * above * (1 - above);
+  sum.count += times * above;
+  sum.variance += variance;
+  sum.third += variance * (1 - 2 * above);
 }
 
 /** x with F(x) = r, from the table. */

@@ -76,7 +76,7 @@ function drawn(own: readonly Mixture[], shared: SharedErrors, ranking: Ranking, 
       const common = era + siteLoad * ofZone[zone]!;
       score[i] = mean[k]! + sd[k]! * normal() + common;
     }
-    countRanks(score, ranks);
+    countRanks(score, ranks, work);
     const edge = largestAbove(score, places, work);
     for (let i = 0; i < n; i += 1) if (score[i]! >= edge) inside[i]! += 1;
     wrong.push(ranking.order.subarray(0, places).reduce((sum, i) => sum + (score[i]! >= edge ? 0 : 1), 0));
