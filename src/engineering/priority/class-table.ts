@@ -101,6 +101,7 @@ export class ClassTable {
    * The same for each of `places`, rising, into `out`, to the distance of the points of a table: the classes, moved, are summed first.
    */
   edges(places: Float64Array, shift: Float64Array, out: Float64Array): void {
+    if (places.length === 0) return;
     let [least, most] = [Infinity, -Infinity];
     for (const one of shift) {
       if (one < least) least = one;

@@ -44,9 +44,13 @@ export interface Rungs extends Chance {
   readonly third: Float64Array | null;
 }
 
-/** Buildings that stand for their neighbours in the order, at each distance from its ends. */
+/**
+ * Up to so many places from an end of the order every building counts by itself, farther in one for so many more: there chance moves an
+ * edge by little [judgement; twice as many moved the ends of 200,000 bands by 0.2 of a place on average].
+ */
 const EACH = 128;
 
+/** Near enough to be read straight between: a factor of 1.3 to 1.9 in the odds from one to the next, for 200 to a million buildings [judgement]. */
 const RUNGS = 48;
 
 /** Lengths of lists whose edges are looked at, rising, evenly in log-odds; none where bands are simulated. */
@@ -127,7 +131,7 @@ function chanceOf(x: Float64Array, above: readonly Above[], n: number): Chance {
 
 /**
  * By how much the expected number above differs at the edge where the true number is right, `z` standard errors off: a gamma variable
- * with the variance and the skewness of the number above, by the cube of Wilson and Hilferty (1931). Exact for a Poisson number.
+ * with the variance and the skewness of the number above, by the cube of Wilson and Hilferty (1931). Of a Poisson number above it is a gamma variable.
  */
 function countOff(variance: number, third: number, z: number): number {
   const scale = variance > 0 ? third / variance : 0;

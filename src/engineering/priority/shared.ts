@@ -86,35 +86,27 @@ export function drawShared(
   }
   const errors = { shared, ofLabel, ofZone };
   const change = changeOf(errors, edge);
-  return { edge, ofLabel, ofZone, change, rungs: rungsOf(errors, table.classes, along, change) };
+  return { edge, ofLabel, ofZone, change, rungs: sharedRungs(errors, table.classes, along, change) };
 }
 
 /** Ordered from the longest list to the shortest; of zones and labels that no part has nothing is told. */
-function rungsOf(
-  { shared, ofLabel, ofZone }: Drawn,
+function sharedRungs(
+  drawn: Drawn,
   classes: readonly PartClass[],
   along: readonly Float64Array[],
   atEdge: readonly Float64Array[],
 ): SharedRungs {
   const falling = along.toReversed();
   const x = Float64Array.from(falling, mean);
-  const change = sharedArray(shared.zones.length * LABELS * x.length);
+  const change = sharedArray(drawn.shared.zones.length * LABELS * x.length);
   const third = sharedArray(change.length);
   for (const { zone, label } of classes) {
-    const { eraLoad, siteLoad } = shared.zones[zone]!;
-    const ofSite = ofZone[zone]!;
-    const era = label === NO_LABEL ? 0 : eraLoad;
-    const ofEra = label === NO_LABEL ? ofSite : ofLabel[label]!;
+    const era = label === NO_LABEL ? 0 : drawn.shared.zones[zone]!.eraLoad;
     const first = (zone * LABELS + label) * x.length;
     falling.forEach((edges, rung) => {
-      let [squares, cubes] = [0, 0];
-      for (let d = 0; d < edges.length; d += 1) {
-        const apart = edges[d]! - x[rung]! - siteLoad * ofSite[d]! - era * ofEra[d]!;
-        squares += apart * apart;
-        cubes += apart * apart * apart;
-      }
-      change[first + rung] = squares / edges.length - era * era - atEdge[zone]![label]!;
-      third[first + rung] = cubes / edges.length;
+      const { squares, cubes } = apartFrom(drawn, edges, x[rung]!, zone, label);
+      change[first + rung] = squares - era * era - atEdge[zone]![label]!;
+      third[first + rung] = cubes;
     });
   }
   return { x, change, third };
@@ -148,25 +140,37 @@ function standardDraws(name: string, seed: number): Float64Array {
 type Drawn = Pick<SharedDraws, 'ofLabel' | 'ofZone'> & { readonly shared: SharedErrors };
 
 /** Variance of an edge less common errors, less what of it the part counts already: by zone, then label. */
-function changeOf({ shared: { zones }, ofLabel, ofZone }: Drawn, edge: Float64Array): readonly Float64Array[] {
-  const draws = edge.length;
+function changeOf(drawn: Drawn, edge: Float64Array): readonly Float64Array[] {
   const middle = mean(edge);
-  return zones.map(({ eraLoad, siteLoad }, zone) => {
-    const variance = (label: number): number => {
-      let squares = 0;
-      for (let d = 0; d < draws; d += 1) {
-        const ofEra = label === NO_LABEL ? 0 : eraLoad * ofLabel[label]![d]!;
-        const apart = edge[d]! - middle - ofEra - siteLoad * ofZone[zone]![d]!;
-        squares += apart * apart;
-      }
-      return squares / draws;
-    };
+  return drawn.shared.zones.map(({ eraLoad }, zone) => {
+    const variance = (label: number): number => apartFrom(drawn, edge, middle, zone, label).squares;
     const change = new Float64Array(LABELS);
-    for (let label = 0; label < ofLabel.length; label += 1)
-      if (ofLabel[label]!.length > 0) change[label] = variance(label) - eraLoad * eraLoad;
+    drawn.ofLabel.forEach((z, label) => {
+      if (z.length > 0) change[label] = variance(label) - eraLoad * eraLoad;
+    });
     change[NO_LABEL] = variance(NO_LABEL);
     return change;
   });
+}
+
+/** Second and third central moment of an edge, whose mean is `middle`, less the errors common to a label in a zone. */
+function apartFrom(
+  { shared, ofLabel, ofZone }: Drawn,
+  edge: Float64Array,
+  middle: number,
+  zone: number,
+  label: number,
+): { readonly squares: number; readonly cubes: number } {
+  const { eraLoad, siteLoad } = shared.zones[zone]!;
+  const ofSite = ofZone[zone]!;
+  const ofEra = label === NO_LABEL ? null : ofLabel[label]!;
+  let [squares, cubes] = [0, 0];
+  for (let d = 0; d < edge.length; d += 1) {
+    const apart = edge[d]! - middle - (ofEra === null ? 0 : eraLoad * ofEra[d]!) - siteLoad * ofSite[d]!;
+    squares += apart * apart;
+    cubes += apart * apart * apart;
+  }
+  return { squares: squares / edge.length, cubes: cubes / edge.length };
 }
 
 function mean(values: Float64Array): number {

@@ -14,7 +14,15 @@ import { newScratch } from '../../../src/engineering/assess/scratch.js';
 import { NO_IRREGULARITY_CHANCES, SPREADS } from '../../../src/engineering/assess/settings.js';
 import type { AssessSettings, Spreads } from '../../../src/engineering/assess/settings.js';
 import { isChecked } from '../../../src/engineering/assess/strength-check.js';
-import type { Building, DesignLevel, Filled, System, Use, YesNo } from '../../../src/engineering/building.js';
+import type {
+  Building,
+  DesignLevel,
+  DirectionName,
+  Filled,
+  System,
+  Use,
+  YesNo,
+} from '../../../src/engineering/building.js';
 import type { CarriedId } from '../../../src/engineering/capacity/families.js';
 import { IRREGULARITY_EDITIONS } from '../../../src/engineering/irregularity/editions.js';
 import { matchPrior } from '../../../src/engineering/prior/system-prior.js';
@@ -298,15 +306,13 @@ function coefficientOf(
   if (edition === null || history === null) return null;
   const detailing = detailingOf(system, edition, history);
   const ductile = detailing === 'after' || detailing === 'special';
-  const facts = {
-    building: known,
-    direction: 'longitudinal',
-    system,
-    height_m: known.height_m.value,
-    ductile,
-  } as const;
+  const facts = { building: known, system, height_m: known.height_m.value, ductile } as const;
   const stated: unknown = history.editions[edition as CarriedId];
-  const { coefficient, levelFactor } = editionOf(edition, history).design(facts, stated as never);
+  const code = editionOf(edition, history);
+  const along = (direction: DirectionName) => code.design({ ...facts, direction }, stated as never);
+  // drawings of which one coefficient is taken down give that of the weaker direction: the shorter side, where a code goes by it
+  const [x, y] = [along('longitudinal'), along('transverse')];
+  const { coefficient, levelFactor } = x.coefficient < y.coefficient ? x : y;
   if (!(coefficient > 0)) return null;
   // a wall of the least strength is as strong on paper
   const value = Math.max(coefficient, assumed.leastCoefficient / levelFactor) * table;

@@ -151,6 +151,25 @@ describe('errors that buildings have in common', () => {
     },
   );
 
+  it('put an end of a band inside the list exactly where the chance to be on it says so', () => {
+    const own = labelled(600, 22);
+    const places = 60;
+    const ranking = rankAll(withShared(own, sharedBy(600, 0.9, 0.7, 23)), places, 1);
+    let told = 0;
+    ranking.chance.forEach((p, i) => {
+      for (const [end, q] of [
+        [ranking.rankBest[i]!, 0.05],
+        [ranking.rankWorst[i]!, 0.95],
+      ] as const) {
+        // chances and bands are worked out apart from each other: to a hundredth
+        if (Math.abs(p - q) < 0.01) continue;
+        told += 1;
+        expect(end <= places, JSON.stringify({ p, q, end })).toBe(p > q);
+      }
+    });
+    expect(told).toBeGreaterThan(1100);
+  });
+
   it('are left out where two buildings of one edition are compared', () => {
     // own arithmetic: of one edition they differ by 0.3 √2, of two by √(2 × 0.3² + 2 × 2²); the gap is 1
     const own = (second: number): readonly Mixture[] =>
