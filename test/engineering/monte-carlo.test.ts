@@ -29,7 +29,7 @@ const STRATA = 500;
 
 /** The allowance is for 10,000; fewer draws scatter more. */
 const AGREED = 10_000;
-const DRAWS = Number(process.env['SWAYMARK_MONTE_CARLO_DRAWS'] ?? 2_500);
+const DRAWS = Number(process.env['SWAYMARK_MONTE_CARLO_DRAWS'] ?? 1_500);
 /** Draws that every building takes part in, of which the bands are told; the draws of the agreement are all of them. */
 const LATER = DRAWS < AGREED ? 1_000 : DRAWS;
 /** Of the first portfolio; the agreement was for 2,000, which take some ten minutes with the draws of the agreement. */
